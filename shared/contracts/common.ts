@@ -1,0 +1,15 @@
+import { z } from 'zod';
+
+export const idSchema = z.uuid();
+/** An instant in UTC, `2026-03-09T14:02:11.000Z`. */
+export const instantSchema = z.iso.datetime();
+export const dateSchema = z.iso.date();
+
+export const personReferenceSchema = z.strictObject({ id: idSchema, name: z.string() });
+export const organisationReferenceSchema = z.strictObject({ id: idSchema, name: z.string() });
+
+export function pageOf<Item extends z.ZodType>(item: Item) {
+  return z.strictObject({ items: z.array(item), nextCursor: z.string().nullable() });
+}
+
+export type PersonReference = z.infer<typeof personReferenceSchema>;
