@@ -1,0 +1,110 @@
+import { z } from 'zod';
+import { findingSchema, sealSchema, summarySchema } from '#rules/engine/finding';
+import { dateSchema, instantSchema } from './common';
+import { endpoint } from './endpoint';
+import { noteSchema, waiverSchema } from './notes';
+import { editionReferenceSchema } from './projects';
+import { revisionParams } from './submittals';
+
+/** What a finding was in the revision before, where it moved. */
+export const movedSchema = z.strictObject({
+  key: z.string(),
+  previousOutcome: z.string(),
+  previousText: z.string().nullable(),
+  previousLimit: z.string().nullable(),
+});
+
+export const gradationPointSchema = z.strictObject({
+  /** Opening in mm. */
+  sieve: z.number(),
+  usName: z.string().nullable(),
+  passing: z.number(),
+  min: z.number().nullable(),
+  max: z.number().nullable(),
+  outcome: z.string().nullable(),
+  sheet: z.string().nullable(),
+  cell: z.string().nullable(),
+});
+
+export const checkViewSchema = z.strictObject({
+  kind: z.enum(['pre-check', 'check of record']),
+  madeAt: instantSchema,
+  /** The date that was used as the date of submission. */
+  submittedOn: dateSchema,
+  seal: sealSchema,
+  section: z.strictObject({
+    base: editionReferenceSchema,
+    layers: z.array(editionReferenceSchema),
+    state: z.string(),
+  }),
+  summary: summarySchema,
+  findings: z.array(findingSchema),
+  notes: z.array(noteSchema),
+  waivers: z.array(waiverSchema),
+  /** Findings that moved since the revision before; empty for revision 0. */
+  moved: z.array(movedSchema),
+  /** Why the check is stale, or null. */
+  stale: z.string().nullable(),
+  /** The recommendation in words: "Two required rules fail without a waiver, two are not shown." */
+  recommendation: z.string(),
+  /** True where a shipped starting point was used. */
+  startingPoint: z.boolean(),
+  /** Groups of clauses with their titles: "412.02" → "Materials". */
+  clauseTitles: z.record(z.string(), z.string()),
+  gradation: z
+    .strictObject({ maximumSizeMm: z.number().nullable(), points: z.array(gradationPointSchema) })
+    .nullable(),
+  /** The declaration that submitting would show; only for a draft. */
+  declaration: z.string().nullable(),
+});
+
+export const getCheck = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/check',
+  summary: 'The findings of a revision with notes, waivers and what moved since the revision before',
+  params: revisionParams,
+  response: checkViewSchema,
+});
+
+export const checkAgain = endpoint({
+  method: 'post',
+  path: '/api/submittals/:submittalId/revisions/:number/checks',
+  summary: 'Run a new sealed check; earlier ones are kept',
+  params: revisionParams,
+  body: z.strictObject({}),
+  response: checkViewSchema,
+  status: 201,
+  idempotent: true,
+});
+
+export const proveSeal = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/check/proof',
+  summary: 'Run the stored check again on its own record and edition and compare the seals',
+  params: revisionParams,
+  response: z.strictObject({
+    result: z.enum(['same', 'other engine version', 'different']),
+    stored: sealSchema,
+    repeated: sealSchema,
+  }),
+});
+
+export const getFindingsPdf = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/findings.pdf',
+  summary: 'The findings as a PDF',
+  params: revisionParams,
+  sends: 'application/pdf',
+});
+
+export const getFindingsWorkbook = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/findings.xlsx',
+  summary: 'The findings as a workbook',
+  params: revisionParams,
+  sends: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
+});
+
+export type CheckView = z.infer<typeof checkViewSchema>;
+export type Moved = z.infer<typeof movedSchema>;
+export type GradationPoint = z.infer<typeof gradationPointSchema>;
