@@ -1,0 +1,26 @@
+import { existsSync, rmSync } from 'node:fs';
+import { build } from 'esbuild';
+import { inRoot, root } from './lib/paths.mjs';
+
+/** Bundles our own code; packages stay where npm put them. */
+const entryPoints = {
+  main: 'server/main.ts',
+  'decode-worker': 'server/workbook/decode-worker.ts',
+};
+
+rmSync(inRoot('dist/server'), { recursive: true, force: true });
+await build({
+  absWorkingDir: root,
+  entryPoints: Object.fromEntries(
+    Object.entries(entryPoints).filter(([, source]) => existsSync(inRoot(source))),
+  ),
+  outdir: 'dist/server',
+  bundle: true,
+  splitting: true,
+  platform: 'node',
+  format: 'esm',
+  target: 'node20',
+  packages: 'external',
+  sourcemap: true,
+  logLevel: 'warning',
+});
