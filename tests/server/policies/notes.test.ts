@@ -1,0 +1,107 @@
+import { describe, expect, it } from 'vitest';
+import { mayWaive, noteAbilities, writableKinds } from '#server/policies/note-abilities';
+import { type NoteFacts, seesNote, seesWaiver } from '#server/policies/note-visibility';
+
+const agency = { organisationId: 'agency', kind: 'agency' } as const;
+const contractor = { organisationId: 'contractor', kind: 'contractor' } as const;
+const at = (day: number) => new Date(Date.UTC(2026, 2, day, 12));
+
+const note = (overrides: Partial<NoteFacts>): NoteFacts => ({
+  organisationId: 'agency',
+  side: 'agency',
+  kind: 'internal',
+  writtenAt: at(10),
+  revisionState: 'in review',
+  ...overrides,
+});
+const reply = (overrides: Partial<NoteFacts> = {}) =>
+  note({ organisationId: 'contractor', side: 'contractor', kind: 'reply', ...overrides });
+
+describe('who sees a note', () => {
+  it('keeps internal notes with the writer, on both sides and in every state', () => {
+    for (const revisionState of ['draft', 'submitted', 'in review', 'returned', 'withdrawn'] as const) {
+      expect(seesNote(contractor, note({ revisionState }), [])).toBe(false);
+      const own = note({ organisationId: 'contractor', side: 'contractor', revisionState });
+      expect(seesNote(agency, own, [{ submittedAt: at(11), leftAt: null }])).toBe(false);
+      expect(seesNote(contractor, own, [])).toBe(true);
+    }
+  });
+
+  it('shows a note to be returned once the return is sent, never before', () => {
+    expect(seesNote(contractor, note({ kind: 'to be returned' }), [])).toBe(false);
+    expect(seesNote(contractor, note({ kind: 'to be returned', revisionState: 'submitted' }), [])).toBe(
+      false,
+    );
+    expect(seesNote(contractor, note({ kind: 'to be returned', revisionState: 'withdrawn' }), [])).toBe(
+      false,
+    );
+    expect(seesNote(contractor, note({ kind: 'to be returned', revisionState: 'returned' }), [])).toBe(true);
+  });
+
+  it('shows a reply with the next submission', () => {
+    const returned = { submittedAt: at(2), leftAt: at(6) };
+    expect(seesNote(agency, reply(), [returned])).toBe(false);
+    expect(seesNote(agency, reply(), [returned, { submittedAt: null, leftAt: null }])).toBe(false);
+    expect(seesNote(agency, reply(), [returned, { submittedAt: at(10), leftAt: null }])).toBe(true);
+  });
+
+  it('shows a reply at once while the submittal is in the hands of the agency, and keeps it shown', () => {
+    expect(seesNote(agency, reply(), [{ submittedAt: at(9), leftAt: null }])).toBe(true);
+    expect(seesNote(agency, reply(), [{ submittedAt: at(9), leftAt: at(12) }])).toBe(true);
+    expect(seesNote(agency, reply(), [{ submittedAt: at(9), leftAt: at(10) }])).toBe(false);
+  });
+});
+
+describe('who sees a waiver', () => {
+  it('shows the contractor only what is to be returned, once returned', () => {
+    expect(seesWaiver(contractor, { toBeReturned: true, revisionState: 'in review' })).toBe(false);
+    expect(seesWaiver(contractor, { toBeReturned: false, revisionState: 'returned' })).toBe(false);
+    expect(seesWaiver(contractor, { toBeReturned: true, revisionState: 'returned' })).toBe(true);
+    expect(seesWaiver(agency, { toBeReturned: false, revisionState: 'in review' })).toBe(true);
+  });
+});
+
+describe('who writes which kind of note', () => {
+  it('lets the agency return notes only while the revision is in its hands', () => {
+    const may = { note: true, reply: false };
+    expect(writableKinds(agency, 'in review', may)).toEqual(['internal', 'to be returned']);
+    expect(writableKinds(agency, 'submitted', may)).toEqual(['internal', 'to be returned']);
+    expect(writableKinds(agency, 'returned', may)).toEqual(['internal']);
+    expect(writableKinds(agency, 'in review', { note: false, reply: false })).toEqual([]);
+  });
+
+  it('lets a contractor write internal notes and replies, as its abilities say', () => {
+    expect(writableKinds(contractor, 'draft', { note: true, reply: false })).toEqual(['internal']);
+    expect(writableKinds(contractor, 'returned', { note: true, reply: true })).toEqual(['internal', 'reply']);
+    expect(writableKinds(contractor, 'returned', { note: false, reply: false })).toEqual([]);
+  });
+});
+
+describe('who changes a note', () => {
+  const may = { note: true, reply: true };
+  const me = { personId: 'me', organisationId: 'agency' };
+  const own = { writerId: 'me', organisationId: 'agency', kind: 'to be returned', sent: false } as const;
+
+  it('is its writer, until it is sent', () => {
+    expect(noteAbilities(me, own, may)).toMatchObject({ change: true, remove: true });
+    expect(noteAbilities(me, { ...own, sent: true }, may)).toMatchObject({ change: false, remove: false });
+    expect(noteAbilities({ ...me, personId: 'her' }, own, may)).toMatchObject({
+      change: false,
+      remove: false,
+    });
+    expect(noteAbilities({ ...me, organisationId: 'other' }, own, may)).toMatchObject({ change: false });
+  });
+
+  it('lets the other side reply to what was returned', () => {
+    const reader = { personId: 'him', organisationId: 'contractor' };
+    expect(noteAbilities(reader, { ...own, sent: true }, may).reply).toBe(true);
+    expect(noteAbilities(reader, { ...own, sent: true }, { note: true, reply: false }).reply).toBe(false);
+    expect(noteAbilities(me, own, may).reply).toBe(false);
+  });
+});
+
+it('asks the waiver ability that belongs to the severity', () => {
+  const advisoryOnly = { waiveAdvisory: true, waiveRequired: false };
+  expect(mayWaive(advisoryOnly, 'advisory')).toBe(true);
+  expect(mayWaive(advisoryOnly, 'required')).toBe(false);
+});
