@@ -34,14 +34,19 @@ export function formatDateWithWeekday(date: string): string {
 
 /** The calendar date of an instant in a zone. */
 export function dateInZone(instant: string | Date, timeZone: string): string {
-  return new Intl.DateTimeFormat('en-CA', { timeZone, year: 'numeric', month: '2-digit', day: '2-digit' }).format(
-    new Date(instant),
-  );
+  return new Intl.DateTimeFormat('en-CA', {
+    timeZone,
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+  }).format(new Date(instant));
 }
 
 /** An instant as `9 March 2026 14:02` in a zone. */
 export function formatInstant(instant: string | Date, timeZone: string): string {
-  const time = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit' }).format(new Date(instant));
+  const time = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit' }).format(
+    new Date(instant),
+  );
   return `${formatDate(dateInZone(instant, timeZone))} ${time}`;
 }
 
