@@ -10,7 +10,9 @@ const settingsSchema = z.object({
   DATABASE_MIGRATION_URL: z
     .url({ protocol: /^mysql$/, error: 'is a mysql:// address' })
     .optional()
-    .describe('The same database as its owner: migrates at the start and renews the rights of the application.'),
+    .describe(
+      'The same database as its owner: migrates at the start and renews the rights of the application.',
+    ),
   SESSION_SECRET: z
     .string()
     .min(32, 'has at least 32 characters')
@@ -82,10 +84,12 @@ export class SettingsError extends Error {}
 export function parseSettings(environment: Record<string, string | undefined>): Settings {
   const present = Object.fromEntries(Object.entries(environment).filter(([, value]) => value !== ''));
   const parsed = settingsSchema.safeParse(present);
-  const faults = parsed.success ? [] : parsed.error.issues.map((issue) => describe(issue, present));
+  const faults = parsed.success ? [] : parsed.error.issues.map((issue) => faultOf(issue, present));
   faults.push(...missingForExternal(present, faults));
   if (!parsed.success || faults.length > 0) {
-    throw new SettingsError(['These settings cannot be used:', ...faults.map((line) => `  ${line}`)].join('\n'));
+    throw new SettingsError(
+      ['These settings cannot be used:', ...faults.map((line) => `  ${line}`)].join('\n'),
+    );
   }
   const { data } = parsed;
   const external = data.CLAUSEWAY_INSTANCE === 'external';
@@ -112,11 +116,15 @@ export function parseSettings(environment: Record<string, string | undefined>): 
 export function describeSettings(): { name: string; meaning: string; fallback: string }[] {
   return Object.entries(settingsSchema.shape).map(([name, schema]) => {
     const fallback = z.toJSONSchema(schema, { io: 'input' }).default;
-    return { name, meaning: schema.description ?? '', fallback: fallback === undefined ? '' : String(fallback) };
+    return {
+      name,
+      meaning: schema.description ?? '',
+      fallback: fallback === undefined ? '' : String(fallback),
+    };
   });
 }
 
-function describe(issue: z.core.$ZodIssue, present: Record<string, string | undefined>): string {
+function faultOf(issue: z.core.$ZodIssue, present: Record<string, string | undefined>): string {
   const name = String(issue.path[0]);
   return present[name] === undefined ? `${name} is missing` : `${name} ${issue.message}`;
 }

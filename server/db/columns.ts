@@ -1,4 +1,12 @@
-import { type AnyMySqlColumn, char, customType, datetime, foreignKey, int } from 'drizzle-orm/mysql-core';
+import {
+  type AnyMySqlColumn,
+  char,
+  customType,
+  datetime,
+  foreignKey,
+  int,
+  varchar,
+} from 'drizzle-orm/mysql-core';
 import type { z } from 'zod';
 
 /** UUIDv7 in text form: 36 ASCII bytes, so that a row found in a log can be looked up as it stands. */
@@ -14,6 +22,11 @@ export function instant<Name extends string>(name: Name) {
 /** Hexadecimal SHA-256. */
 export function sha256<Name extends string>(name: Name) {
   return char(name, { length: 64 });
+}
+
+/** One word of a closed list. */
+export function choice<Value extends string>(name: string, values: readonly Value[]) {
+  return varchar(name, { length: 30, enum: values as [Value, ...Value[]] });
 }
 
 export const longBlob = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => 'longblob' });

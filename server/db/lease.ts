@@ -1,5 +1,5 @@
-import type { RowDataPacket, ResultSetHeader, Connection } from 'mysql2/promise';
 import { setTimeout as sleep } from 'node:timers/promises';
+import type { Connection, ResultSetHeader, RowDataPacket } from 'mysql2/promise';
 
 interface LeaseOptions {
   /** What is leased: `migration`. */
@@ -33,10 +33,10 @@ export async function underLease<Result>(
     return await work();
   } finally {
     clearInterval(renewal);
-    await connection.query('UPDATE leases SET owner = NULL, lease_until = NULL WHERE name = ? AND owner = ?', [
-      name,
-      owner,
-    ]);
+    await connection.query(
+      'UPDATE leases SET owner = NULL, lease_until = NULL WHERE name = ? AND owner = ?',
+      [name, owner],
+    );
   }
 }
 

@@ -1,10 +1,20 @@
-import { boolean, date, double, index, int, mysqlTable, text, uniqueIndex, varchar } from 'drizzle-orm/mysql-core';
+import {
+  boolean,
+  date,
+  double,
+  index,
+  int,
+  mysqlTable,
+  text,
+  uniqueIndex,
+  varchar,
+} from 'drizzle-orm/mysql-core';
 import { z } from 'zod';
 import { checkResultSchema, outcomeSchema, severitySchema, summarySchema } from '#rules/engine/finding';
-import { organisationKindSchema } from '#shared/contracts/roles';
 import { noteKindSchema } from '#shared/contracts/notes';
+import { organisationKindSchema } from '#shared/contracts/roles';
 import { limits } from '#shared/limits';
-import { id, instant, json, reference, sha256, version } from '../columns';
+import { choice, id, instant, json, reference, sha256, version } from '../columns';
 import { organisations, people } from './people';
 import { revisions, submittals } from './submittals';
 
@@ -22,7 +32,7 @@ export const checks = mysqlTable(
     revisionId: id('revision_id').notNull(),
     agencyId: id('agency_id').notNull(),
     contractorId: id('contractor_id').notNull(),
-    kind: varchar('kind', { length: 20, enum: ['pre-check', 'check of record'] }).notNull(),
+    kind: choice('kind', ['pre-check', 'check of record']).notNull(),
     /** Counts up within the revision; the highest is the one that is shown. */
     number: int('number').notNull(),
     madeAt: instant('made_at').notNull(),
@@ -63,8 +73,8 @@ export const findings = mysqlTable(
     rule: varchar('rule', { length: 120 }).notNull(),
     subject: varchar('subject', { length: 160 }).notNull(),
     clause: varchar('clause', { length: 60 }),
-    severity: varchar('severity', { length: 20, enum: severitySchema.options }).notNull(),
-    outcome: varchar('outcome', { length: 20, enum: outcomeSchema.options }).notNull(),
+    severity: choice('severity', severitySchema.options).notNull(),
+    outcome: choice('outcome', outcomeSchema.options).notNull(),
     borderline: boolean('borderline').notNull(),
     /** The judged value, after the rule's own rounding, in the finding's unit. */
     rounded: double('rounded'),
@@ -88,8 +98,8 @@ export const notes = mysqlTable(
     contractorId: id('contractor_id').notNull(),
     /** The writer's organisation: an internal note stays inside it. */
     organisationId: id('organisation_id').notNull(),
-    side: varchar('side', { length: 20, enum: organisationKindSchema.options }).notNull(),
-    kind: varchar('kind', { length: 20, enum: noteKindSchema.options }).notNull(),
+    side: choice('side', organisationKindSchema.options).notNull(),
+    kind: choice('kind', noteKindSchema.options).notNull(),
     /** `ruleId~subject`; null for a note on the whole submittal or on a cell. */
     finding: varchar('finding', { length: 300 }),
     sheet: varchar('sheet', { length: 120 }),
@@ -153,8 +163,8 @@ export const replayFindings = mysqlTable(
     revisionId: id('revision_id').notNull(),
     rule: varchar('rule', { length: 120 }).notNull(),
     subject: varchar('subject', { length: 160 }).notNull(),
-    before: varchar('outcome_before', { length: 20, enum: outcomeSchema.options }),
-    after: varchar('outcome_after', { length: 20, enum: outcomeSchema.options }),
+    before: choice('outcome_before', outcomeSchema.options),
+    after: choice('outcome_after', outcomeSchema.options),
     detail: text('detail'),
   },
   (table) => [

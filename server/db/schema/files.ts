@@ -1,7 +1,7 @@
 import { boolean, index, int, mysqlTable, uniqueIndex, varchar } from 'drizzle-orm/mysql-core';
 import { z } from 'zod';
 import { cellSchema, sheetGridSchema } from '#rules/reading/cell-grid';
-import { id, instant, json, longBlob, reference, sha256 } from '../columns';
+import { choice, id, instant, json, longBlob, reference, sha256 } from '../columns';
 import { organisations, people } from './people';
 
 /** Bytes as they came or went; never changed. */
@@ -11,10 +11,7 @@ export const files = mysqlTable(
     id: id('id').primaryKey(),
     agencyId: id('agency_id').notNull(),
     contractorId: id('contractor_id').notNull(),
-    kind: varchar('kind', {
-      length: 30,
-      enum: ['workbook', 'document', 'letter', 'findings workbook'],
-    }).notNull(),
+    kind: choice('kind', ['workbook', 'document', 'letter', 'findings workbook']).notNull(),
     fileName: varchar('file_name', { length: 255 }).notNull(),
     mediaType: varchar('media_type', { length: 120 }).notNull(),
     sizeBytes: int('size_bytes').notNull(),

@@ -3,7 +3,7 @@ import { z } from 'zod';
 import { letterheadSchema } from '#shared/contracts/organisation';
 import { organisationKindSchema, waiverPolicySchema } from '#shared/contracts/roles';
 import { limits } from '#shared/limits';
-import { id, instant, json, reference, sha256, version } from '../columns';
+import { choice, id, instant, json, reference, sha256, version } from '../columns';
 
 export const people = mysqlTable(
   'people',
@@ -86,13 +86,13 @@ export const organisations = mysqlTable(
     id: id('id').primaryKey(),
     name: varchar('name', { length: limits.nameCharacters }).notNull(),
     slug: varchar('slug', { length: 160 }).notNull(),
-    kind: varchar('kind', { length: 20, enum: organisationKindSchema.options }).notNull(),
+    kind: choice('kind', organisationKindSchema.options).notNull(),
     /** IANA name; dates of an agency are dates in its zone. */
     timeZone: varchar('time_zone', { length: 64 }).notNull(),
     /** Working days from submission to the due date. */
     reviewWorkingDays: int('review_working_days').notNull(),
     /** What reviewers may waive by themselves. */
-    waiverPolicy: varchar('waiver_policy', { length: 20, enum: waiverPolicySchema.options }).notNull(),
+    waiverPolicy: choice('waiver_policy', waiverPolicySchema.options).notNull(),
     letterhead: json('letterhead', letterheadSchema).notNull(),
     logo: text('logo'),
     metadata: text('metadata'),
@@ -133,7 +133,7 @@ export const invitations = mysqlTable(
     name: varchar('name', { length: limits.nameCharacters }).notNull(),
     email: varchar('email', { length: limits.emailCharacters }).notNull(),
     role: varchar('role', { length: 200 }).notNull(),
-    status: varchar('status', { length: 20, enum: ['pending', 'accepted', 'canceled'] }).notNull(),
+    status: choice('status', ['pending', 'accepted', 'canceled']).notNull(),
     /** Of the link's token; the token itself is only in the mail. */
     tokenHash: sha256('token_hash').notNull(),
     expiresAt: instant('expires_at').notNull(),

@@ -3,7 +3,7 @@ import { z } from 'zod';
 import { dispositionSchema } from '#rules/engine/finding';
 import { recipientSchema } from '#shared/contracts/returns';
 import { limits } from '#shared/limits';
-import { id, instant, json, reference, version } from '../columns';
+import { choice, id, instant, json, reference, version } from '../columns';
 import { files } from './files';
 import { organisations, people } from './people';
 import { revisions, submittals } from './submittals';
@@ -17,8 +17,8 @@ export const returns = mysqlTable(
     revisionId: id('revision_id').notNull(),
     agencyId: id('agency_id').notNull(),
     contractorId: id('contractor_id').notNull(),
-    state: varchar('state', { length: 20, enum: ['draft', 'ready to sign', 'sent'] }).notNull(),
-    disposition: varchar('disposition', { length: 30, enum: dispositionSchema.options }).notNull(),
+    state: choice('state', ['draft', 'ready to sign', 'sent']).notNull(),
+    disposition: choice('disposition', dispositionSchema.options).notNull(),
     /** Needed where the disposition differs from the recommended one. */
     reason: varchar('reason', { length: limits.reasonCharacters }).notNull(),
     textAbove: text('text_above').notNull(),

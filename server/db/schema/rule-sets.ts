@@ -2,7 +2,7 @@ import { boolean, date, index, int, mysqlTable, text, uniqueIndex, varchar } fro
 import { z } from 'zod';
 import { mixRecordSchema } from '#rules/record';
 import { limits } from '#shared/limits';
-import { id, instant, json, reference, sha256, version } from '../columns';
+import { choice, id, instant, json, reference, sha256, version } from '../columns';
 import { organisations, people } from './people';
 
 /** A rule set as a document. Its own schema is applied by whoever judges with it: a draft may be unfinished. */
@@ -32,7 +32,7 @@ export const editionDrafts = mysqlTable(
     agencyId: id('agency_id').notNull(),
     ruleSetId: id('rule_set_id').notNull(),
     edition: varchar('edition', { length: 40 }).notNull(),
-    state: varchar('state', { length: 20, enum: ['draft', 'in review'] }).notNull(),
+    state: choice('state', ['draft', 'in review']).notNull(),
     document: json('document', ruleSetDocumentSchema).notNull(),
     /** The published edition that it started from. */
     basedOnId: id('based_on_id'),
@@ -95,7 +95,7 @@ export const editionEvents = mysqlTable(
     id: id('id').primaryKey(),
     editionId: id('edition_id').notNull(),
     agencyId: id('agency_id').notNull(),
-    kind: varchar('kind', { length: 20, enum: ['published', 'withdrawn'] }).notNull(),
+    kind: choice('kind', ['published', 'withdrawn']).notNull(),
     at: instant('at').notNull(),
     personId: id('person_id').notNull(),
     reason: text('reason'),

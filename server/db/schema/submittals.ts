@@ -5,7 +5,7 @@ import { readingResultSchema } from '#rules/reading/reading-result';
 import { documentRecordSchema, mixRecordSchema, sourceSchema } from '#rules/record';
 import { revisionStateSchema } from '#shared/contracts/submittals';
 import { limits } from '#shared/limits';
-import { id, instant, json, reference, sha256, version } from '../columns';
+import { choice, id, instant, json, reference, sha256, version } from '../columns';
 import { files } from './files';
 import { laboratories, organisations, people } from './people';
 import { projects, sections } from './projects';
@@ -45,7 +45,7 @@ export const submittals = mysqlTable(
     latestNumber: int('latest_number').notNull(),
     /** The newest approval; a newer draft does not touch it. */
     standingRevision: int('standing_revision'),
-    standingDisposition: varchar('standing_disposition', { length: 30, enum: dispositionSchema.options }),
+    standingDisposition: choice('standing_disposition', dispositionSchema.options),
     standingOn: date('standing_on', { mode: 'string' }),
     createdById: id('created_by_id').notNull(),
     createdAt: instant('created_at').notNull(),
@@ -78,8 +78,8 @@ export const revisions = mysqlTable(
     agencyId: id('agency_id').notNull(),
     contractorId: id('contractor_id').notNull(),
     number: int('number').notNull(),
-    state: varchar('state', { length: 20, enum: revisionStateSchema.options }).notNull(),
-    disposition: varchar('disposition', { length: 30, enum: dispositionSchema.options }),
+    state: choice('state', revisionStateSchema.options).notNull(),
+    disposition: choice('disposition', dispositionSchema.options),
     /** Needed where the revision follows an approval. */
     reasonForRevision: varchar('reason_for_revision', { length: limits.reasonCharacters }),
     laboratoryId: id('laboratory_id').notNull(),

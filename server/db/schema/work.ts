@@ -12,7 +12,7 @@ import {
 } from 'drizzle-orm/mysql-core';
 import { z } from 'zod';
 import { limits } from '#shared/limits';
-import { id, instant, json, longBlob, reference, sha256 } from '../columns';
+import { choice, id, instant, json, longBlob, reference, sha256 } from '../columns';
 import { files } from './files';
 import { organisations, people } from './people';
 
@@ -34,7 +34,7 @@ export const jobs = mysqlTable(
     /** The organisation that may see and cancel it. */
     organisationId: id('organisation_id').notNull(),
     kind: varchar('kind', { length: 40 }).notNull(),
-    state: varchar('state', { length: 20, enum: jobStates }).notNull(),
+    state: choice('state', jobStates).notNull(),
     /** What it is about, `revision` and its id: the page of that object watches it. */
     subjectKind: varchar('subject_kind', { length: 40 }).notNull(),
     subjectId: id('subject_id').notNull(),
@@ -82,7 +82,7 @@ export const outbox = mysqlTable(
     subject: varchar('subject', { length: 300 }).notNull(),
     text: mediumtext('text').notNull(),
     html: mediumtext('html').notNull(),
-    state: varchar('state', { length: 20, enum: ['waiting', 'sent', 'failed'] }).notNull(),
+    state: choice('state', ['waiting', 'sent', 'failed']).notNull(),
     attempts: int('attempts').notNull().default(0),
     nextAttemptAt: instant('next_attempt_at').notNull(),
     lastProblem: text('last_problem'),
@@ -162,8 +162,5 @@ export const caughtMails = mysqlTable(
     /** The message as it came over the wire. */
     source: longBlob('source').notNull(),
   },
-  (table) => [
-    index('caught_mails_at').on(table.caughtAt),
-    index('caught_mails_message').on(table.messageId),
-  ],
+  (table) => [index('caught_mails_at').on(table.caughtAt), index('caught_mails_message').on(table.messageId)],
 );

@@ -18,7 +18,9 @@ export async function ensureDebianPackages(packages) {
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   const wait = ['-o', 'DPkg::Lock::Timeout=300'];
   await runQuietly('apt-get', [...wait, 'update', '-q'], { env });
-  await runQuietly('apt-get', [...wait, 'install', '-y', '-q', '--no-install-recommends', ...missing], { env });
+  await runQuietly('apt-get', [...wait, 'install', '-y', '-q', '--no-install-recommends', ...missing], {
+    env,
+  });
 }
 
 /** Debian keeps mariadbd in /usr/sbin, which is not on everybody's path. */

@@ -6,9 +6,13 @@ import { LauncherError, runCommand } from './run-command.mjs';
 export async function ensurePackages() {
   if (packagesAreCurrent()) return;
   console.log('Installing packages …');
-  const code = await runCommand('npm', ['ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'], {
-    cwd: root,
-  });
+  const code = await runCommand(
+    'npm',
+    ['ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'],
+    {
+      cwd: root,
+    },
+  );
   if (code !== 0) throw new LauncherError('The packages could not be installed: npm ci failed, see above.');
 }
 

@@ -1,6 +1,6 @@
+import { spawn } from 'node:child_process';
 import { appendFileSync, mkdirSync, openSync } from 'node:fs';
 import path from 'node:path';
-import { spawn } from 'node:child_process';
 import { ensureDebianPackages } from './ensure-debian-packages.mjs';
 import { databaseInitStatements, databaseUrls, localSecrets } from './local-settings.mjs';
 import { inRoot, root } from './paths.mjs';

@@ -1,9 +1,9 @@
+import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import net from 'node:net';
 import os from 'node:os';
 import path from 'node:path';
-import { spawn } from 'node:child_process';
 import { findCommand } from './ensure-debian-packages.mjs';
 import { commandLineOf, freePort, isAlive, stopProcess, waitUntil } from './processes.mjs';
 import { isRoot, LauncherError, runQuietly } from './run-command.mjs';
