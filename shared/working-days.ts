@@ -1,19 +1,5 @@
 const dayMilliseconds = 86_400_000;
 
-/** The calendar date, `2026-03-09`, of an instant in an IANA time zone. */
-export function localDate(instant: Date, timeZone: string): string {
-  const parts = new Intl.DateTimeFormat('en-US', {
-    timeZone,
-    year: 'numeric',
-    month: '2-digit',
-    day: '2-digit',
-    calendar: 'gregory',
-    numberingSystem: 'latn',
-  }).formatToParts(instant);
-  const part = (type: Intl.DateTimeFormatPartTypes) => parts.find((one) => one.type === type)?.value ?? '';
-  return `${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`;
-}
-
 /** Monday to Friday; holidays are not known here. */
 export function isWorkingDay(date: string): boolean {
   const day = weekday(date);

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { endOfWeek, localDate, workingDayAfter, workingDaysBetween } from '#shared/working-days';
+import { dateInZone } from '#shared/format/dates';
+import { endOfWeek, workingDayAfter, workingDaysBetween } from '#shared/working-days';
 
 // Dates counted by hand on a calendar of 2026: 9 March 2026 is a Monday.
 describe('working days', () => {
@@ -32,16 +33,16 @@ describe('working days', () => {
   });
 });
 
-describe('the local date of an instant', () => {
+describe('day 0, the local date of an instant', () => {
   it('is the next day where the zone is ahead and the day before where it is behind', () => {
     const instant = new Date('2026-03-09T23:30:00Z');
-    expect(localDate(instant, 'UTC')).toBe('2026-03-09');
-    expect(localDate(instant, 'Pacific/Auckland')).toBe('2026-03-10');
-    expect(localDate(new Date('2026-03-09T02:00:00Z'), 'America/Denver')).toBe('2026-03-08');
+    expect(dateInZone(instant, 'UTC')).toBe('2026-03-09');
+    expect(dateInZone(instant, 'Pacific/Auckland')).toBe('2026-03-10');
+    expect(dateInZone(new Date('2026-03-09T02:00:00Z'), 'America/Denver')).toBe('2026-03-08');
   });
 
   it('follows summer time: 23:30 UTC is the next day in London after the last Sunday in March', () => {
-    expect(localDate(new Date('2026-03-28T23:30:00Z'), 'Europe/London')).toBe('2026-03-28');
-    expect(localDate(new Date('2026-03-29T23:30:00Z'), 'Europe/London')).toBe('2026-03-30');
+    expect(dateInZone(new Date('2026-03-28T23:30:00Z'), 'Europe/London')).toBe('2026-03-28');
+    expect(dateInZone(new Date('2026-03-29T23:30:00Z'), 'Europe/London')).toBe('2026-03-30');
   });
 });
