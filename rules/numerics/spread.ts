@@ -1,0 +1,46 @@
+import { mean } from './mean';
+import { cannot, known, type NumericResult } from './numeric-result';
+
+/**
+ * Sample standard deviation. s = √(Σ(x − x̄)²/(n − 1)).
+ *
+ * Source: textbook definition, n − 1 divisor, as quality-assurance specifications use it
+ * (Washington State DOT, Amendments 1-06.2(2)D5). Domain: at least two finite values.
+ *
+ * @example sampleStandardDeviation([4.2, 4.6, 3.9, 5.1, 4.4, 4.0]) // 0.44121
+ */
+export function sampleStandardDeviation(values: readonly number[]): NumericResult {
+  if (values.length < 2) return cannot('a standard deviation needs at least two values');
+  const centre = mean(values);
+  if (!centre.ok) return centre;
+  const squares = values.reduce((sum, value) => sum + (value - centre.value) ** 2, 0);
+  return known(Math.sqrt(squares / (values.length - 1)));
+}
+
+/**
+ * Range: the largest value less the smallest.
+ *
+ * Source: textbook definition. Domain: at least one finite value; of a single value it is 0.
+ *
+ * @example range([4.2, 4.6, 3.9, 5.1, 4.4, 4.0]) // 1.2
+ */
+export function range(values: readonly number[]): NumericResult {
+  if (values.length === 0) return cannot('there are no values');
+  return known(Math.max(...values) - Math.min(...values));
+}
+
+/**
+ * Coefficient of variation in percent. CV = 100·s/|x̄|.
+ *
+ * Source: textbook definition. Domain: at least two finite values whose mean is not zero.
+ *
+ * @example coefficientOfVariation([4.2, 4.6, 3.9, 5.1, 4.4, 4.0]) // 10.1041 %
+ */
+export function coefficientOfVariation(values: readonly number[]): NumericResult {
+  const deviation = sampleStandardDeviation(values);
+  if (!deviation.ok) return deviation;
+  const centre = mean(values);
+  if (!centre.ok) return centre;
+  if (centre.value === 0) return cannot('a coefficient of variation needs a mean that is not zero');
+  return known((100 * deviation.value) / Math.abs(centre.value));
+}
