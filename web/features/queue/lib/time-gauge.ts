@@ -1,4 +1,4 @@
-import { workingDaysBetween } from './working-days';
+import { workingDaysBetween } from '#shared/working-days';
 
 export const timeGaugeWidth = 150;
 /** Working days that half of the width stands for, to each side of today. */
