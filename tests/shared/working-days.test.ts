@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { dateInZone } from '#shared/format/dates';
+import { dateOfInstant } from '#shared/format/dates';
 import { endOfWeek, workingDayAfter, workingDaysBetween } from '#shared/working-days';
 
 // Dates counted by hand on a calendar of 2026: 9 March 2026 is a Monday.
@@ -35,14 +35,14 @@ describe('working days', () => {
 
 describe('day 0, the local date of an instant', () => {
   it('is the next day where the zone is ahead and the day before where it is behind', () => {
-    const instant = new Date('2026-03-09T23:30:00Z');
-    expect(dateInZone(instant, 'UTC')).toBe('2026-03-09');
-    expect(dateInZone(instant, 'Pacific/Auckland')).toBe('2026-03-10');
-    expect(dateInZone(new Date('2026-03-09T02:00:00Z'), 'America/Denver')).toBe('2026-03-08');
+    const instant = '2026-03-09T23:30:00Z';
+    expect(dateOfInstant(instant, 'UTC')).toBe('2026-03-09');
+    expect(dateOfInstant(instant, 'Pacific/Auckland')).toBe('2026-03-10');
+    expect(dateOfInstant('2026-03-09T02:00:00Z', 'America/Denver')).toBe('2026-03-08');
   });
 
   it('follows summer time: 23:30 UTC is the next day in London after the last Sunday in March', () => {
-    expect(dateInZone(new Date('2026-03-28T23:30:00Z'), 'Europe/London')).toBe('2026-03-28');
-    expect(dateInZone(new Date('2026-03-29T23:30:00Z'), 'Europe/London')).toBe('2026-03-30');
+    expect(dateOfInstant('2026-03-28T23:30:00Z', 'Europe/London')).toBe('2026-03-28');
+    expect(dateOfInstant('2026-03-29T23:30:00Z', 'Europe/London')).toBe('2026-03-30');
   });
 });
