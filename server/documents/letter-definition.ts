@@ -6,7 +6,7 @@ import type { DocumentInput, DocumentItem } from './document-input';
 import { gaugeSvg } from './gauge-svg';
 import { groupTally, introduction } from './letter-words';
 import { markSvg } from './mark-svg';
-import { pdfText } from './pdf-text';
+import { pdfRuns, pdfText } from './pdf-text';
 import { printColours } from './print-colours';
 
 const gaugeWidthPoints = 104;
@@ -162,8 +162,8 @@ export function itemTable(heading: string, tally: string, items: DocumentItem[])
       colSpan: 4,
       margin: [0, 4, 0, 2],
       text: [
-        pdfText(heading, { bold: true, fontSize: 9.5 }),
-        pdfText(`   ${tally}`, { color: printColours.ink2, fontSize: 8.5 }),
+        ...pdfRuns(heading, { bold: true, fontSize: 9.5 }),
+        ...pdfRuns(`   ${tally}`, { color: printColours.ink2, fontSize: 8.5 }),
       ],
     },
     {},

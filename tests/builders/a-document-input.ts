@@ -14,7 +14,7 @@ const seal = {
 
 /** A return of one failing finding; override what matters. */
 export function aDocumentInput(overrides: Partial<DocumentInput> = {}): DocumentInput {
-  const findings = overrides.findings ?? [aFinding()];
+  const findings = overrides.findings ?? [aFinding({ outcome: 'fail' })];
   return documentInputSchema.parse({
     kind: 'return',
     agency: {
@@ -39,7 +39,13 @@ export function aDocumentInput(overrides: Partial<DocumentInput> = {}): Document
     reason: 'The mix is close.',
     textAbove: '',
     textBelow: '',
-    to: [{ name: 'Dele Fairweather', email: 'dele.fairweather@brightwater.example', function: 'quality manager' }],
+    to: [
+      {
+        name: 'Dele Fairweather',
+        email: 'dele.fairweather@brightwater.example',
+        function: 'quality manager',
+      },
+    ],
     copies: [],
     signedBy: { name: 'Maren Halloran', function: 'signing engineer' },
     summary: {

@@ -6,7 +6,7 @@ import { describe, expect, it } from 'vitest';
 import { letterDefinition } from '#server/documents/letter-definition';
 import { renderPdf } from '#server/documents/render-pdf';
 import { aDocumentInput } from '#tests/builders/a-document-input';
-import { aFinding } from '#tests/builders/a-finding';
+import { aFinding, aLimit } from '#tests/builders/a-finding';
 
 function textOf(pdf: Buffer): string {
   const folder = mkdtempSync(join(tmpdir(), 'letter-'));
@@ -20,7 +20,7 @@ function textOf(pdf: Buffer): string {
 }
 
 const findings = [
-  aFinding({ borderline: true, precision: { value: 0.4, origin: 'agency' } }),
+  aFinding({ outcome: 'fail', borderline: true, precision: { value: 0.4, origin: 'agency' } }),
   aFinding({
     rule: 'tsr',
     clause: '412.05(a)',
@@ -38,7 +38,7 @@ const findings = [
     margin: null,
     sentence: 'Air voids are 4.6 %, 3.5 to 4.5.',
     reason: 'One specimen; two decide it.',
-    limit: { min: 3.5, max: 4.5, target: 4, tolerance: 0.5, decimals: 1, unit: '%' },
+    limit: aLimit({ min: 3.5, max: 4.5, target: 4, tolerance: 0.5, decimals: 1, unit: '%' }),
     observed: { value: 4.61, rounded: 4.6, text: '4.6', unit: '%', statistic: 'mean', count: 1 },
   }),
 ];
@@ -49,7 +49,9 @@ describe('the letter of a return', () => {
     expect(text).toContain('Carrow Valley Roads Authority');
     expect(text).toContain('CV-2031 / BW-125-S4 / r1');
     expect(text).toContain('BW-125-S4 revision 1: revise and resubmit');
-    const places = ['Put right', '412.03(b)', 'Send', '412.05(a)', 'Settle', '412.03(a)'].map((part) => text.indexOf(part));
+    const places = ['Put right', '412.03(b)', 'Send', '412.05(a)', 'Settle', '412.03(a)'].map((part) =>
+      text.indexOf(part),
+    );
     expect(places.every((place) => place > 0)).toBe(true);
     expect([...places].sort((a, b) => a - b)).toEqual(places);
   });
@@ -61,7 +63,9 @@ describe('the letter of a return', () => {
   });
 
   it('repeats the group heading and numbers its pages when it runs over', async () => {
-    const many = Array.from({ length: 60 }, (_, index) => aFinding({ rule: `rule-${index}`, clause: `412.03(${index})` }));
+    const many = Array.from({ length: 60 }, (_, index) =>
+      aFinding({ outcome: 'fail', rule: `rule-${index}`, clause: `412.03(${index})` }),
+    );
     const text = textOf(await renderPdf(letterDefinition(aDocumentInput({ findings: many }))));
     const pages = text.split('\f').filter((page) => page.trim() !== '');
     expect(pages.length).toBeGreaterThan(2);
