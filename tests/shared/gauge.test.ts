@@ -1,10 +1,13 @@
 import { describe, expect, it } from 'vitest';
+import { resolvedLimitSchema } from '#rules/engine/finding';
 import { gaugeGeometry } from '#shared/gauge';
-import { aFinding as aPlainFinding, aLimit } from '#tests/builders/a-finding';
+import { aFinding as aPlainFinding } from '#tests/builders/a-finding';
+
+const limitOf = (limit: object) => resolvedLimitSchema.parse({ min: null, max: null, unit: '%', ...limit });
 
 const aFinding = (overrides: Parameters<typeof aPlainFinding>[0] = {}) =>
   aPlainFinding({ outcome: 'fail', gauge: { span: 1.5, scale: 'linear' }, ...overrides });
-const twoSided = aLimit({ min: 0.6, max: 1.2, decimals: 1 });
+const twoSided = limitOf({ min: 0.6, max: 1.2, decimals: 1 });
 const observed = (rounded: number) => ({
   value: rounded,
   rounded,
@@ -58,7 +61,7 @@ describe('the limit gauge', () => {
       gaugeGeometry(
         aFinding({
           outcome: 'pass',
-          limit: aLimit({ oneOf }),
+          limit: limitOf({ oneOf }),
           observed: { value: null, rounded: null, text: 'A', unit: '', statistic: 'value', count: 1 },
         }),
       )?.words.map(({ text }) => text);
@@ -69,7 +72,7 @@ describe('the limit gauge', () => {
   it('draws the decades of a logarithmic scale', () => {
     const gauge = gaugeGeometry(
       aFinding({
-        limit: aLimit({ min: 0.1, decimals: 3, unit: '1/GPa' }),
+        limit: limitOf({ min: 0.1, decimals: 3, unit: '1/GPa' }),
         observed: observed(0.12),
         gauge: { span: 0.4, scale: 'log' },
       }),

@@ -3,10 +3,13 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
+import { resolvedLimitSchema } from '#rules/engine/finding';
 import { letterDefinition } from '#server/documents/letter-definition';
 import { renderPdf } from '#server/documents/render-pdf';
 import { aDocumentInput } from '#tests/builders/a-document-input';
-import { aFinding, aLimit } from '#tests/builders/a-finding';
+import { aFinding } from '#tests/builders/a-finding';
+
+const limitOf = (limit: object) => resolvedLimitSchema.parse({ min: null, max: null, unit: '%', ...limit });
 
 function textOf(pdf: Buffer): string {
   const folder = mkdtempSync(join(tmpdir(), 'letter-'));
@@ -38,7 +41,7 @@ const findings = [
     margin: null,
     sentence: 'Air voids are 4.6 %, 3.5 to 4.5.',
     reason: 'One specimen; two decide it.',
-    limit: aLimit({ min: 3.5, max: 4.5, target: 4, tolerance: 0.5, decimals: 1, unit: '%' }),
+    limit: limitOf({ min: 3.5, max: 4.5, target: 4, tolerance: 0.5, decimals: 1, unit: '%' }),
     observed: { value: 4.61, rounded: 4.6, text: '4.6', unit: '%', statistic: 'mean', count: 1 },
   }),
 ];
