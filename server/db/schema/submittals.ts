@@ -40,9 +40,9 @@ export const submittals = mysqlTable(
      * it lets the designation be used again.
      */
     activeDesignation: varchar('active_designation', { length: limits.mixDesignationCharacters }),
-    /** "12.5 mm dense-graded surface course · PG 64-22 · 12 million ESAL" */
-    description: varchar('description', { length: 300 }).notNull().default(''),
     latestNumber: int('latest_number').notNull(),
+    /** Newest change that the agency may know of: drafts do not move it. Null until the first submission. */
+    agencyUpdatedAt: instant('agency_updated_at'),
     /** The newest approval; a newer draft does not touch it. */
     standingRevision: int('standing_revision'),
     standingDisposition: choice('standing_disposition', dispositionSchema.options),
@@ -58,7 +58,7 @@ export const submittals = mysqlTable(
       table.projectId,
       table.activeDesignation,
     ),
-    index('submittals_agency_updated').on(table.agencyId, table.updatedAt, table.id),
+    index('submittals_agency_seen').on(table.agencyId, table.agencyUpdatedAt, table.id),
     index('submittals_contractor_updated').on(table.contractorId, table.updatedAt, table.id),
     index('submittals_project').on(table.projectId),
     index('submittals_section').on(table.sectionId),
@@ -88,6 +88,8 @@ export const revisions = mysqlTable(
     uploadedById: id('uploaded_by_id').notNull(),
     uploadedAt: instant('uploaded_at').notNull(),
     mappingId: id('mapping_id'),
+    /** "12.5 mm dense-graded surface course · PG 64-22 · 12 million ESAL", from this revision's record. */
+    description: varchar('description', { length: 300 }).notNull().default(''),
     doubtCount: int('doubt_count').notNull().default(0),
     /** "binder content 5.1 to 5.3 %; 14 readings changed" */
     changes: text('changes'),
