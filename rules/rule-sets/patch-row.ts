@@ -1,0 +1,90 @@
+import type { DocumentProblem } from './problem';
+import type { ResolvedTable } from './resolve';
+import type { RowPatch } from './schema';
+import { isKeyRange, type LimitTable, type TableCell } from './table';
+
+type Row = LimitTable['rows'][number];
+
+interface RowPatching {
+  tables: ResolvedTable[];
+  patch: RowPatch;
+  at: string;
+  document: string;
+  problems: DocumentProblem[];
+  cellWords: (cell: TableCell | undefined, unit: string | undefined) => string;
+}
+
+/** New cells in the one row that the patch's key names; a key that leads to no row or to several is refused. */
+export function patchRow({ tables, patch, at, document, problems, cellWords }: RowPatching): ResolvedTable[] {
+  const refuse = (place: string, detail: string, fix: string) => {
+    problems.push({ pointer: `${at}${place}`, detail: `${document} patches ${detail}`, fix });
+    return tables;
+  };
+  const table = tables.find((each) => each.id === patch.table);
+  if (!table) {
+    return refuse(
+      '/table',
+      `the table ${patch.table}, which the edition does not have.`,
+      'Correct the table id.',
+    );
+  }
+  const columns = table.columns.map((column) => column.name);
+  const stray = Object.keys(patch.set).find((name) => !columns.includes(name));
+  if (stray !== undefined) {
+    return refuse(
+      `/set/${stray}`,
+      `the column ${stray}, which the table ${table.id} does not have.`,
+      `Choose one of ${columns.join(', ')}.`,
+    );
+  }
+  const strayKey = Object.keys(patch.key).find((name) => !table.keys.includes(name));
+  if (strayKey !== undefined) {
+    return refuse(
+      `/key/${strayKey}`,
+      `by ${strayKey}, which is no key of the table ${table.id}.`,
+      `Use ${table.keys.join(', ')}.`,
+    );
+  }
+  const matching = table.rows.flatMap((row, i) => (matchesKey(row, patch.key) ? [i] : []));
+  const [index] = matching;
+  if (index === undefined || matching.length > 1) {
+    return refuse(
+      '/key',
+      `${matching.length === 0 ? 'a row that' : `${matching.length} rows at once where one row of`} the table ${table.id} ${matching.length === 0 ? 'does not have' : 'is meant'}.`,
+      `Name the row by ${table.keys.join(', ')}, written as in the table.`,
+    );
+  }
+  return tables.map((each) =>
+    each === table ? withPatch(table, index, patch.set, document, cellWords) : each,
+  );
+}
+
+function withPatch(
+  table: ResolvedTable,
+  index: number,
+  set: Row,
+  document: string,
+  cellWords: RowPatching['cellWords'],
+): ResolvedTable {
+  const row = table.rows[index] ?? {};
+  const earlier = table.rowsSupplied[index] ?? table.supplied;
+  const text = table.columns
+    .filter((column) => column.name in set)
+    .map((column) => `${column.name} ${cellWords(row[column.name], column.unit)}`)
+    .join(', ');
+  const supplied = { document, displaced: [...earlier.displaced, { document: earlier.document, text }] };
+  return {
+    ...table,
+    rows: table.rows.map((each, i) => (i === index ? { ...each, ...set } : each)),
+    rowsSupplied: table.rowsSupplied.map((each, i) => (i === index ? supplied : each)),
+  };
+}
+
+function matchesKey(row: Row, key: Row): boolean {
+  return Object.entries(key).every(([name, cell]) => sameKey(row[name], cell));
+}
+
+function sameKey(left: TableCell | undefined, right: TableCell): boolean {
+  if (isKeyRange(left) && isKeyRange(right)) return left.from === right.from && left.below === right.below;
+  return !isKeyRange(left) && !isKeyRange(right) && String(left) === String(right);
+}
