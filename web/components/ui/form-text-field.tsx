@@ -29,7 +29,7 @@ export function FormTextField<Values extends FieldValues, Output>({
             {...props}
             name={name}
             value={textOf(field.value)}
-            onChange={(text) => field.onChange(valueOf(text, { asNumber, emptyAsNull }))}
+            onChange={(text) => field.onChange(readText(text, { asNumber, emptyAsNull }))}
             onBlur={field.onBlur}
             error={fieldState.error?.message}
           />
@@ -43,7 +43,7 @@ function textOf(value: unknown): string {
   return value === null || value === undefined || Number.isNaN(value) ? '' : String(value);
 }
 
-function valueOf(
+function readText(
   text: string,
   how: { asNumber: boolean; emptyAsNull: boolean },
 ): string | number | null | undefined {
