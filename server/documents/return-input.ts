@@ -1,0 +1,107 @@
+import type { CheckResult, Disposition } from '#rules/engine/finding';
+import type { Letterhead } from '#shared/contracts/organisation';
+import type { Recipient, ReturnItem } from '#shared/contracts/returns';
+import { dateInZone } from '#shared/format/dates';
+import { type DocumentInput, documentInputSchema } from './document-input';
+
+/** What documents of a revision have in common, whether a return or a check before submission. */
+export interface RevisionFacts {
+  agency: { name: string; letterhead: Letterhead; timeZone: string };
+  contractor: string;
+  project: { number: string; title: string };
+  mixDesignation: string;
+  mixDescription: string;
+  revision: number;
+  receivedOn: string | null;
+  /** "Section 412 Dense-graded asphalt mixtures, edition 2026, with Supplement S-07" */
+  section: string;
+  startingPoint: boolean;
+  check: { madeAt: Date; result: CheckResult };
+}
+
+export interface ReturnFacts {
+  disposition: Disposition;
+  reason: string;
+  textAbove: string;
+  textBelow: string;
+  to: Recipient[];
+  copies: Recipient[];
+  enclosesWorkbook: boolean;
+  items: readonly ReturnItem[];
+  /** Notes to be returned on the whole submittal. */
+  generalNotes: string[];
+  signedBy: { name: string; function: string } | null;
+}
+
+/** The input of a return's letter and workbook: what is included, and nothing that stays internal. */
+export function returnInput(revision: RevisionFacts, facts: ReturnFacts, now: Date): DocumentInput {
+  const items = facts.items.filter(({ included }) => included);
+  return documentInputSchema.parse({
+    ...commonInput(revision, now),
+    kind: 'return',
+    disposition: facts.disposition,
+    reason: facts.reason,
+    textAbove: facts.textAbove,
+    textBelow: facts.textBelow,
+    to: facts.to,
+    copies: facts.copies,
+    signedBy: facts.signedBy,
+    waivedCount: facts.items.filter(({ waived }) => waived !== null).length,
+    items: items.map(documentItem),
+    generalNotes: facts.generalNotes,
+    enclosesWorkbook: facts.enclosesWorkbook,
+  });
+}
+
+/** The input of the findings that a contractor saves before submitting: no decision, no one's notes. */
+export function findingsInput(
+  revision: RevisionFacts,
+  items: readonly ReturnItem[],
+  now: Date,
+): DocumentInput {
+  return documentInputSchema.parse({
+    ...commonInput(revision, now),
+    kind: 'pre-check',
+    disposition: null,
+    reason: '',
+    textAbove: '',
+    textBelow: '',
+    to: [],
+    copies: [],
+    signedBy: null,
+    waivedCount: items.filter(({ waived }) => waived !== null).length,
+    items: items.map(documentItem),
+    generalNotes: [],
+    enclosesWorkbook: false,
+  });
+}
+
+function commonInput(revision: RevisionFacts, now: Date) {
+  const { agency, check } = revision;
+  return {
+    agency: { name: agency.name, letterhead: agency.letterhead },
+    contractor: revision.contractor,
+    project: revision.project,
+    mixDesignation: revision.mixDesignation,
+    mixDescription: revision.mixDescription,
+    revision: revision.revision,
+    date: dateInZone(now, agency.timeZone),
+    submittedOn: revision.receivedOn,
+    section: revision.section,
+    summary: check.result.summary,
+    findings: check.result.findings,
+    seal: check.result.seal,
+    checkedOn: dateInZone(check.madeAt, agency.timeZone),
+    startingPoint: revision.startingPoint,
+  };
+}
+
+function documentItem({
+  group,
+  finding,
+  waived,
+  notes,
+  previousText,
+}: ReturnItem): DocumentInput['items'][number] {
+  return { group, finding, waivedBecause: waived, notes, previousText };
+}
