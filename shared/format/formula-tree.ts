@@ -8,8 +8,7 @@ export type FormulaNode =
   | { kind: 'group'; of: FormulaNode }
   | { kind: 'call'; name: string; of: FormulaNode[] };
 
-const token =
-  /\s*(?:(\d+(?:\.\d+)?)|([A-Za-zµτεσΣπ%][A-Za-z0-9%_.∞]*)|([-−+*·×/∕÷^(),|√]))/uy;
+const token = /\s*(?:(\d+(?:\.\d+)?)|([A-Za-zµτεσΣπ%][A-Za-z0-9%_.∞]*)|([-−+*·×/∕÷^(),|√]))/uy;
 
 interface Tokens {
   list: string[];

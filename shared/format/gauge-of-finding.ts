@@ -33,7 +33,10 @@ export function gaugeOfFinding(
 export function marginText(finding: Pick<Finding, 'margin' | 'observed' | 'limit'>): string {
   if (finding.margin === null) return '';
   const written = finding.observed ? decimalsOf(finding.observed.text) : 0;
-  return formatSigned(finding.margin, Math.max(written, finding.observed ? 0 : (finding.limit?.decimals ?? 0)));
+  return formatSigned(
+    finding.margin,
+    Math.max(written, finding.observed ? 0 : (finding.limit?.decimals ?? 0)),
+  );
 }
 
 /** The row's own sentence with value, limits and margin, in place of the drawing. */

@@ -1,6 +1,12 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { type BaseSyntheticEvent, useState } from 'react';
-import { type DefaultValues, type FieldValues, type Path, type UseFormReturn, useForm } from 'react-hook-form';
+import {
+  type DefaultValues,
+  type FieldValues,
+  type Path,
+  type UseFormReturn,
+  useForm,
+} from 'react-hook-form';
 import type { z } from 'zod';
 import { asProblem, Problem } from './problem';
 

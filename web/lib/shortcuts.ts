@@ -81,7 +81,8 @@ function matches(shortcut: Shortcut, event: KeyboardEvent): boolean {
   return (single || shortcut.key.length > 1) && !takesKeys(event.target);
 }
 
-const takers = 'input, textarea, select, [contenteditable="true"], [role="menu"], [role="listbox"], [role="dialog"]';
+const takers =
+  'input, textarea, select, [contenteditable="true"], [role="menu"], [role="listbox"], [role="dialog"]';
 
 /** Fields, menus and lists use letters themselves, so single keys do nothing there (WCAG 2.1.4). */
 function takesKeys(target: EventTarget | null): boolean {

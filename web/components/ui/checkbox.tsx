@@ -62,9 +62,7 @@ export function CheckboxLine<Value extends string>({
               isSelected={values.includes(choice.value)}
               onChange={(selected) =>
                 onChange(
-                  selected
-                    ? [...values, choice.value]
-                    : values.filter((value) => value !== choice.value),
+                  selected ? [...values, choice.value] : values.filter((value) => value !== choice.value),
                 )
               }
             >

@@ -4,7 +4,15 @@ const widths = ['86%', '64%', '72%', '58%', '81%', '69%'];
 const longMilliseconds = 10_000;
 
 /** Rows as flat bars at real row height; nothing pulses. Says what takes long once it does. */
-export function LoadingBars({ what, rows = 3, whenLong }: { what: string; rows?: number; whenLong?: string }) {
+export function LoadingBars({
+  what,
+  rows = 3,
+  whenLong,
+}: {
+  what: string;
+  rows?: number;
+  whenLong?: string;
+}) {
   const long = useAfter(longMilliseconds);
   return (
     <div className="state" role="status">

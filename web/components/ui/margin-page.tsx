@@ -12,9 +12,11 @@ export function MarginPage({
   /** At the default text size; 292 unless a page needs another. */
   marginWidthPx?: number;
 }) {
-  const style = marginWidthPx ? ({ '--c-notes-wide': `${marginWidthPx / 14}rem` } as CSSProperties) : undefined;
+  const style = marginWidthPx
+    ? ({ '--c-notes-own': `${marginWidthPx / 14}rem` } as CSSProperties)
+    : undefined;
   return (
-    <main id="content" className="page page-margin" style={style}>
+    <main id="content" className={`page page-margin${marginWidthPx ? ' page-own-margin' : ''}`} style={style}>
       {aside === undefined ? (
         children
       ) : (

@@ -1,12 +1,12 @@
 import type { ReactNode } from 'react';
 import {
+  TextField as AriaTextField,
+  type TextFieldProps as AriaTextFieldProps,
   FieldError,
   Input,
   Label,
   Text,
   TextArea,
-  TextField as AriaTextField,
-  type TextFieldProps as AriaTextFieldProps,
 } from 'react-aria-components';
 import { FieldErrorLine } from './field';
 

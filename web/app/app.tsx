@@ -1,0 +1,18 @@
+import { QueryClientProvider } from '@tanstack/react-query';
+import { useEffect, useMemo } from 'react';
+import { RouterProvider } from 'react-router-dom';
+import { Announcer } from '../components/ui/announcer';
+import { listenForShortcuts } from '../lib/shortcuts';
+import { queryClient } from '../lib/client';
+import { createRouter } from './router';
+
+export function App() {
+  const router = useMemo(() => createRouter(), []);
+  useEffect(() => listenForShortcuts(document), []);
+  return (
+    <QueryClientProvider client={queryClient}>
+      <RouterProvider router={router} />
+      <Announcer />
+    </QueryClientProvider>
+  );
+}

@@ -1,0 +1,46 @@
+import { createBrowserRouter, type RouteObject } from 'react-router-dom';
+import { NotFoundPage } from './not-found-page';
+import { RootLayout, rootLoader } from './root-layout';
+import { RouteProblem, ShellProblem } from './route-problem';
+import { SignedInLayout, signedInLoader } from './signed-in-layout';
+
+/**
+ * One line a page. Each module is its own chunk and gives `Component` and, where it needs data, a `loader` that warms
+ * the same queries the component reads.
+ */
+const signedIn: RouteObject[] = [
+  {
+    path: 'submittals/:submittalId/r/:number',
+    lazy: () => import('../features/findings/findings-route'),
+  },
+  {
+    path: 'submittals/:submittalId/r/:number/gradation',
+    lazy: () => import('../features/gradation/gradation-route'),
+  },
+  { path: 'rule-sets', lazy: () => import('../features/rule-sets/rule-sets-route') },
+  { path: 'rule-sets/:ruleSetId/:edition', lazy: () => import('../features/rule-sets/rule-set-route') },
+];
+
+/** Pages without a session: signing in, links from mails. */
+const open: RouteObject[] = [];
+
+export function createRouter() {
+  return createBrowserRouter([
+    {
+      element: <RootLayout />,
+      loader: rootLoader,
+      errorElement: <ShellProblem />,
+      children: [
+        { errorElement: <RouteProblem />, children: open },
+        {
+          element: <SignedInLayout />,
+          loader: signedInLoader,
+          errorElement: <ShellProblem />,
+          children: [
+            { errorElement: <RouteProblem />, children: [...signedIn, { path: '*', element: <NotFoundPage /> }] },
+          ],
+        },
+      ],
+    },
+  ]);
+}

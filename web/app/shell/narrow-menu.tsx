@@ -1,0 +1,47 @@
+import { Button as AriaButton, Header, MenuSection } from 'react-aria-components';
+import type { Session } from '#shared/contracts/session';
+import { Menu, MenuItem } from '../../components/ui/menu';
+import { focusSearch } from '../../features/search/focus-search';
+import { navigationOf } from './navigation';
+import { useChooseOrganisation } from './organisation-menu';
+import { PersonMenuItems } from './person-menu-items';
+
+/** Below 760 px the head keeps the wordmark and the person's name; all else is one list. */
+export function NarrowMenu({ session }: { session: Session }) {
+  const choose = useChooseOrganisation();
+  return (
+    <span className="head-narrow">
+      <Menu label="Pages" trigger={<AriaButton className="head-menu head-menu-person">Menu</AriaButton>}>
+        <MenuSection>
+          <Header className="menu-head">
+            {session.person.name}, {session.active?.organisationName}
+          </Header>
+          {navigationOf(session).map((item) => (
+            <MenuItem key={item.to} id={item.to} href={item.to} textValue={item.label}>
+              {item.label}
+            </MenuItem>
+          ))}
+          <MenuItem id="find" textValue="Find" onAction={focusSearch}>
+            Find a mix, clause or project
+          </MenuItem>
+        </MenuSection>
+        {session.memberships.length > 1 ? (
+          <MenuSection>
+            <Header className="menu-head">Act for</Header>
+            {session.memberships.map((membership) => (
+              <MenuItem
+                key={membership.organisationId}
+                id={membership.organisationId}
+                textValue={membership.organisationName}
+                onAction={() => choose(membership.organisationId)}
+              >
+                {membership.organisationName}
+              </MenuItem>
+            ))}
+          </MenuSection>
+        ) : null}
+        <PersonMenuItems />
+      </Menu>
+    </span>
+  );
+}

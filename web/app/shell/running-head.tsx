@@ -1,0 +1,35 @@
+import { Link, NavLink } from 'react-router-dom';
+import { Wordmark } from '../../components/ui/wordmark';
+import { SearchField } from '../../features/search/components/search-field';
+import { paths } from '../../lib/paths';
+import { useSession } from '../../lib/queries/session-query';
+import { NarrowMenu } from './narrow-menu';
+import { navigationOf } from './navigation';
+import { OrganisationMenu } from './organisation-menu';
+import { PersonMenu } from './person-menu';
+import { useShellKeys } from './use-shell-keys';
+
+export function RunningHead() {
+  const session = useSession();
+  useShellKeys();
+  return (
+    <header className="running-head">
+      <Link className="wordmark" to={paths.home} aria-label="Clauseway">
+        <Wordmark />
+      </Link>
+      <nav aria-label="Main">
+        {navigationOf(session).map((item) => (
+          <NavLink key={item.to} to={item.to} end={item.to === paths.home}>
+            {item.label}
+          </NavLink>
+        ))}
+      </nav>
+      <div className="running-head-end">
+        <SearchField />
+        <OrganisationMenu session={session} />
+        <PersonMenu session={session} />
+        <NarrowMenu session={session} />
+      </div>
+    </header>
+  );
+}

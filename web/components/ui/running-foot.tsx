@@ -1,0 +1,39 @@
+import { createContext, type ReactNode, useContext } from 'react';
+import { createPortal } from 'react-dom';
+import { useRegisteredShortcuts } from '../../lib/shortcuts';
+import { Kbd } from './kbd';
+
+/** The place under every page where the shell keeps its foot. */
+export const FootPlace = createContext<HTMLElement | null>(null);
+
+/** What the page has to say in its foot: seal or draft, then cautions; its keys; on phones its first two acts. */
+export function RunningFoot({ texts, acts }: { texts: readonly ReactNode[]; acts?: ReactNode }) {
+  const place = useContext(FootPlace);
+  const keys = useRegisteredShortcuts().filter((shortcut) => shortcut.foot);
+  if (!place) return null;
+  return createPortal(
+    <div className={`running-foot${acts ? ' has-acts' : ''}`}>
+      {texts.map((text, index) => (
+        // biome-ignore lint/suspicious/noArrayIndexKey: at most three fixed lines.
+        <span key={index} className="foot-text">
+          {text}
+        </span>
+      ))}
+      {acts ? <span className="foot-acts">{acts}</span> : null}
+      <span className="foot-keys">
+        {keys.map((shortcut) => (
+          <span key={`${shortcut.key}${shortcut.label}`}>
+            <Kbd>{keyName(shortcut.key, shortcut.ctrl)}</Kbd>
+            {shortcut.label}
+          </span>
+        ))}
+      </span>
+    </div>,
+    place,
+  );
+}
+
+export function keyName(key: string, ctrl = false): string {
+  const name = key.length === 1 ? key.toUpperCase() : key;
+  return ctrl ? `Ctrl ${name}` : name;
+}

@@ -1,0 +1,11 @@
+export const searchFieldId = 'find';
+
+/** Brings the search field out where the head hides it, and puts the cursor in it. */
+export function focusSearch(): void {
+  document.querySelector('.running-head')?.classList.add('is-finding');
+  const field = document.getElementById(searchFieldId);
+  if (field instanceof HTMLInputElement) {
+    field.focus();
+    field.select();
+  }
+}

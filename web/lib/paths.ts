@@ -1,0 +1,37 @@
+/** Every address of the product is made here: pages link by these, the router matches the same patterns. */
+export const paths = {
+  home: '/',
+  signIn: '/sign-in',
+  setUp: (token: string) => `/set-up/${encodeURIComponent(token)}`,
+  invitation: (token: string) => `/invitations/${encodeURIComponent(token)}`,
+  forgotPassword: '/forgotten-password',
+  resetPassword: (token: string) => `/new-password/${encodeURIComponent(token)}`,
+  chooseOrganisation: '/organisations',
+  queue: '/queue',
+  submittals: '/submittals',
+  upload: '/submittals/new',
+  revision: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}`,
+  reading: (submittalId: string, number: number, at?: { sheet: string; cell?: string }) =>
+    `/submittals/${submittalId}/r/${number}/reading${searchOf(at)}`,
+  gradation: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/gradation`,
+  return: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/return`,
+  nextRevision: (submittalId: string) => `/submittals/${submittalId}/next`,
+  projects: '/projects',
+  newProject: '/projects/new',
+  project: (projectId: string) => `/projects/${projectId}`,
+  ruleSets: '/rule-sets',
+  ruleSet: (ruleSetId: string, edition: string, layers: readonly string[] = []) =>
+    `/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}${searchOf(
+      layers.length > 0 ? { layers: layers.join(',') } : undefined,
+    )}`,
+  people: '/people',
+  settings: '/settings',
+  caughtMail: '/caught-mail',
+} as const;
+
+function searchOf(query: Record<string, string | undefined> | undefined): string {
+  const search = new URLSearchParams();
+  for (const [name, value] of Object.entries(query ?? {})) if (value !== undefined) search.set(name, value);
+  const text = search.toString();
+  return text === '' ? '' : `?${text}`;
+}

@@ -1,0 +1,8 @@
+import { useEffect } from 'react';
+
+/** Names the page in the browser's tab and history, and for a screen reader on arrival. */
+export function usePageTitle(title: string): void {
+  useEffect(() => {
+    document.title = title === '' ? 'Clauseway' : `${title} · Clauseway`;
+  }, [title]);
+}

@@ -1,0 +1,14 @@
+import './lib/zod-without-eval';
+import './styles/main.css';
+import { StrictMode } from 'react';
+import { createRoot } from 'react-dom/client';
+import { App } from './app/app';
+
+const root = document.getElementById('root');
+if (!root) throw new Error('index.html has no element with the id "root".');
+
+createRoot(root).render(
+  <StrictMode>
+    <App />
+  </StrictMode>,
+);
