@@ -1,10 +1,13 @@
 import type { Finding } from '#rules/engine/finding';
+import { decimalsOf, formatFixed } from './format/numbers';
 
 /** Where the parts of a limit gauge stand, in px of a drawing `width` wide and 34 high. */
 export interface GaugeGeometry {
   width: number;
   lane: { x: number; width: number } | null;
   ticks: { x: number; text: string }[];
+  /** Dotted ticks: the same limits in another edition. */
+  otherTicks: number[];
   /** Thin centre line at a target. */
   middle: number | null;
   decades: { x: number; long: boolean }[];
@@ -12,6 +15,8 @@ export interface GaugeGeometry {
   dot: { x: number; shape: 'disc' | 'square' | 'diamond'; offScale: 'left' | 'right' | null } | null;
   /** Open wedge above the line: what the workbook reports. */
   reported: number | null;
+  /** Dashed from the last tested value to an extrapolated one. */
+  beyond: { from: number; to: number } | null;
   words: { x: number; text: string; observed: boolean }[];
 }
 
@@ -22,24 +27,31 @@ const lastStop = 0.75;
 const edgePx = 6;
 
 /** Null where a gauge says nothing: not applicable, no limit, no scale. */
-export function gaugeGeometry(finding: Gauged, width = 208): GaugeGeometry | null {
+export function gaugeGeometry(
+  finding: Gauged,
+  width = 208,
+  otherLimits: readonly number[] = [],
+): GaugeGeometry | null {
   const { limit } = finding;
   if (finding.outcome === 'not applicable' || limit === null) return null;
   if (limit.oneOf !== null) return categorical(finding, limit.oneOf, width);
   const scale = scaleOf(finding, width);
   if (scale === null) return null;
   const value = finding.observed?.rounded ?? null;
+  const dot = value === null ? null : dotOf(value, finding.outcome, scale.x, width);
   return {
     width,
     lane: laneOf(limit.min, limit.max, scale.x, width),
     ticks: [limit.min, limit.max].flatMap((at) =>
-      at === null ? [] : [{ x: scale.x(at), text: withDecimals(at, limit.decimals) }],
+      at === null ? [] : [{ x: scale.x(at), text: figureOf(at, limit) }],
     ),
+    otherTicks: otherLimits.map(scale.x).filter((x) => x >= 0 && x <= width),
     middle: limit.target === null ? null : scale.x(limit.target),
     decades: scale.decades,
     whisker: value === null ? null : whiskerOf(value, finding.precision?.value ?? null, scale.x, width),
-    dot: value === null ? null : dotOf(value, finding.outcome, scale.x, width),
+    dot,
     reported: reportedOf(finding, scale.x, width),
+    beyond: beyondOf(finding, scale.x, width, dot),
     words: [],
   };
 }
@@ -136,9 +148,23 @@ function dotOf(
 function reportedOf({ evidence, observed }: Gauged, x: Scale['x'], width: number): number | null {
   const judged = evidence.find((item) => item.reported !== undefined);
   if (judged?.reported === undefined || observed === null) return null;
-  if (judged.reported.value === judged.value) return null;
+  // The wedge stands only where the judged value does not round to what the workbook writes.
+  const halfDigit = 0.5 * 10 ** -decimalsOf(judged.reported.text);
+  if (Math.abs(judged.reported.value - (judged.value ?? Number.NaN)) <= halfDigit * 1.000001) return null;
   const at = x(judged.reported.value);
   return at >= 0 && at <= width ? at : null;
+}
+
+function beyondOf(
+  { evidence }: Gauged,
+  x: Scale['x'],
+  width: number,
+  dot: GaugeGeometry['dot'],
+): GaugeGeometry['beyond'] {
+  const judged = evidence[0];
+  if (judged?.origin !== 'extrapolated' || dot === null) return null;
+  const tested = judged.inputs?.findLast((input) => input.quantity === judged.quantity)?.value ?? null;
+  return tested === null ? null : { from: clip(x(tested), width), to: dot.x };
 }
 
 const mostWords = 4;
@@ -176,10 +202,23 @@ function categorical(finding: Gauged, allowed: string[], width: number): GaugeGe
             : ('square' as const),
           offScale: null,
         };
-  return { width, lane, ticks: [], middle: null, decades: [], whisker: null, dot, reported: null, words };
+  return {
+    width,
+    lane,
+    ticks: [],
+    otherTicks: [],
+    middle: null,
+    decades: [],
+    whisker: null,
+    dot,
+    reported: null,
+    beyond: null,
+    words,
+  };
 }
 
-/** The limit's own decimals, for figures; display only. */
-function withDecimals(value: number, decimals: number): string {
-  return value.toFixed(decimals).replace('-', '\u2212');
+/** The limit in its own decimals and without its unit; only the age of a document says what it counts. */
+function figureOf(at: number, { decimals, unit }: { decimals: number; unit: string }): string {
+  const figure = formatFixed(at, decimals);
+  return unit === 'months' ? `${figure} months` : figure;
 }
