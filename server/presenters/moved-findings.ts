@@ -1,4 +1,5 @@
 import { type Finding, findingKey, type ResolvedLimit } from '#rules/engine/finding';
+import { resolvedLimitWords } from '#rules/rule-sets/limit-words';
 import type { Moved } from '#shared/contracts/checks';
 
 /** Findings whose outcome, judged value or limit is not what it was in the revision before. */
@@ -32,14 +33,7 @@ function observedText({ observed }: Finding): string | null {
   return observed === null ? null : observed.text;
 }
 
-/** "at least 14.0", "0.6 to 1.2": a limit as the ledger writes it. */
-export function limitText(limit: ResolvedLimit | null): string | null {
-  if (limit === null) return null;
-  const figure = (value: number) => value.toFixed(Math.min(limit.decimals, 20));
-  const { min, max } = limit;
-  if (limit.oneOf !== null) return limit.oneOf.join(', ');
-  if (min !== null && max !== null) return `${figure(min)} to ${figure(max)}`;
-  if (min !== null) return `${limit.minExclusive ? 'more than' : 'at least'} ${figure(min)}`;
-  if (max !== null) return `${limit.maxExclusive ? 'less than' : 'at most'} ${figure(max)}`;
-  return null;
+function limitText(limit: ResolvedLimit | null): string | null {
+  const words = limit === null ? '' : resolvedLimitWords(limit);
+  return words === '' ? null : words;
 }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { mixRecordSchema } from '#rules/record';
 import { changeSummary } from '#server/presenters/change-summary';
-import { limitText, movedFindings } from '#server/presenters/moved-findings';
+import { movedFindings } from '#server/presenters/moved-findings';
 import { aFinding } from '#tests/builders/a-finding';
 import { aLimit } from '#tests/builders/a-limit';
 
@@ -29,25 +29,6 @@ describe('findings that moved since the revision before', () => {
 
   it('counts a mark of borderline that came or went as a move', () => {
     expect(movedFindings([now], [{ ...now, borderline: true }])).toHaveLength(1);
-  });
-});
-
-describe('a limit in words', () => {
-  const table: [Parameters<typeof aLimit>[0], string][] = [
-    [{ min: 14, decimals: 1 }, 'at least 14.0'],
-    [{ max: 1.2, decimals: 1 }, 'at most 1.2'],
-    [{ min: 0.6, max: 1.2, decimals: 1 }, '0.6 to 1.2'],
-    [{ min: 3, minExclusive: true }, 'more than 3'],
-    [{ max: 5, maxExclusive: true }, 'less than 5'],
-    [{ oneOf: ['PG 64-22', 'PG 70-22'] }, 'PG 64-22, PG 70-22'],
-  ];
-  it.each(table)('%o', (limit, words) => {
-    expect(limitText(aLimit(limit))).toBe(words);
-  });
-
-  it('is absent where there is no limit', () => {
-    expect(limitText(null)).toBeNull();
-    expect(limitText(aLimit())).toBeNull();
   });
 });
 
