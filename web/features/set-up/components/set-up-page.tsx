@@ -1,20 +1,22 @@
 import { useNavigate } from 'react-router-dom';
 import { setUp } from '#shared/contracts/session';
 import { limits } from '#shared/limits';
-import { paths } from '../../../app/paths';
 import { Button } from '../../../components/ui/button';
-import { FormTextField } from '../../../components/ui/form-text-field';
+import { FormText } from '../../../components/ui/form-fields';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { SectionHead } from '../../../components/ui/section-head';
 import { TimeZoneField } from '../../../components/ui/time-zone-field';
 import { useContractForm } from '../../../lib/form';
+import { paths } from '../../../lib/paths';
+import { usePageTitle } from '../../../lib/use-page-title';
 import { useSetUp, useSetUpLink } from '../api/set-up';
 
 const usualReviewDays = 10;
 
 export function SetUpPage({ token }: { token: string }) {
+  usePageTitle('Set up');
   useSetUpLink(token);
   const send = useSetUp(token);
   const navigate = useNavigate();
@@ -45,22 +47,22 @@ export function SetUpPage({ token }: { token: string }) {
       <form onSubmit={onSubmit} noValidate className="form-column">
         <SectionHead title="Agency" />
         <div className="fieldset">
-          <FormTextField control={control} name="agencyName" label="Name" autoComplete="organization" />
+          <FormText control={control} name="agencyName" label="Name" autoComplete="organization" />
           <TimeZoneField control={control} name="timeZone" />
-          <FormTextField
+          <FormText
             control={control}
             name="reviewWorkingDays"
             label="Time for a review"
             size="number"
             inputMode="numeric"
-            asNumber
+            number
             help="working days, Monday to Friday; the day of submission is day 0"
           />
         </div>
         <SectionHead title="Administrator" />
         <div className="fieldset">
-          <FormTextField control={control} name="name" label="Name" autoComplete="name" />
-          <FormTextField
+          <FormText control={control} name="name" label="Name" autoComplete="name" />
+          <FormText
             control={control}
             name="email"
             label="E-mail address"
@@ -68,7 +70,7 @@ export function SetUpPage({ token }: { token: string }) {
             inputMode="email"
             autoComplete="username"
           />
-          <FormTextField
+          <FormText
             control={control}
             name="password"
             label="Password"

@@ -1,16 +1,18 @@
 import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
-import { paths } from '../../../app/paths';
 import { Button } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
+import { paths } from '../../../lib/paths';
 import { asProblem, type Problem } from '../../../lib/problem';
 import { useSession } from '../../../lib/queries/session-query';
+import { usePageTitle } from '../../../lib/use-page-title';
 import { useChooseOrganisation } from '../api/choose-organisation';
 
 export function ChooseOrganisationPage() {
+  usePageTitle('Choose an organisation');
   const { memberships, active } = useSession();
   const choose = useChooseOrganisation();
   const navigate = useNavigate();

@@ -1,16 +1,18 @@
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { requestPasswordReset } from '#shared/contracts/session';
-import { paths } from '../../../app/paths';
 import { Button } from '../../../components/ui/button';
-import { FormTextField } from '../../../components/ui/form-text-field';
+import { FormText } from '../../../components/ui/form-fields';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { useContractForm } from '../../../lib/form';
+import { paths } from '../../../lib/paths';
+import { usePageTitle } from '../../../lib/use-page-title';
 import { askForPasswordReset } from '../api/password-resets';
 
 export function ForgottenPasswordPage() {
+  usePageTitle('Ask for a new password');
   const [sentTo, setSentTo] = useState<string | null>(null);
   const { form, problem, onSubmit } = useContractForm({
     schema: requestPasswordReset.body!,
@@ -38,7 +40,7 @@ export function ForgottenPasswordPage() {
           {problem ? <ProblemNotice problem={problem} /> : null}
           <form onSubmit={onSubmit} noValidate className="form-column">
             <div className="fieldset">
-              <FormTextField
+              <FormText
                 control={form.control}
                 name="email"
                 label="E-mail address"

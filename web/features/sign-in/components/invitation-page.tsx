@@ -1,17 +1,19 @@
 import { useNavigate } from 'react-router-dom';
 import { acceptInvitation } from '#shared/contracts/people';
 import { limits } from '#shared/limits';
-import { paths } from '../../../app/paths';
 import { Button } from '../../../components/ui/button';
 import { Field } from '../../../components/ui/field';
-import { FormTextField } from '../../../components/ui/form-text-field';
+import { FormText } from '../../../components/ui/form-fields';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { useContractForm } from '../../../lib/form';
+import { paths } from '../../../lib/paths';
+import { usePageTitle } from '../../../lib/use-page-title';
 import { useAcceptInvitation, useInvitationLink } from '../api/invitation-link';
 
 export function InvitationPage({ token }: { token: string }) {
+  usePageTitle('Invitation');
   const invitation = useInvitationLink(token);
   const accept = useAcceptInvitation(token);
   const navigate = useNavigate();
@@ -34,8 +36,8 @@ export function InvitationPage({ token }: { token: string }) {
       <form onSubmit={onSubmit} noValidate className="form-column">
         <div className="fieldset">
           <Field label="E-mail address">{invitation.email}</Field>
-          <FormTextField control={form.control} name="name" label="Your name" autoComplete="name" />
-          <FormTextField
+          <FormText control={form.control} name="name" label="Your name" autoComplete="name" />
+          <FormText
             control={form.control}
             name="password"
             label="Password"

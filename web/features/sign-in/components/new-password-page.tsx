@@ -2,16 +2,18 @@ import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { resetPassword } from '#shared/contracts/session';
 import { limits } from '#shared/limits';
-import { paths } from '../../../app/paths';
 import { Button } from '../../../components/ui/button';
-import { FormTextField } from '../../../components/ui/form-text-field';
+import { FormText } from '../../../components/ui/form-fields';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { useContractForm } from '../../../lib/form';
+import { paths } from '../../../lib/paths';
+import { usePageTitle } from '../../../lib/use-page-title';
 import { setNewPassword } from '../api/password-resets';
 
 export function NewPasswordPage({ token }: { token: string }) {
+  usePageTitle('Set a new password');
   const [isSet, setIsSet] = useState(false);
   const { form, problem, onSubmit } = useContractForm({
     schema: resetPassword.body!,
@@ -38,7 +40,7 @@ export function NewPasswordPage({ token }: { token: string }) {
           ) : null}
           <form onSubmit={onSubmit} noValidate className="form-column">
             <div className="fieldset">
-              <FormTextField
+              <FormText
                 control={form.control}
                 name="password"
                 label="New password"

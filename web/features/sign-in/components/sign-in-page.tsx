@@ -1,20 +1,22 @@
 import { useState } from 'react';
 import { Link, useNavigate, useSearchParams } from 'react-router-dom';
 import { type DemoPerson, signIn } from '#shared/contracts/session';
-import { paths } from '../../../app/paths';
 import { Button } from '../../../components/ui/button';
-import { FormTextField } from '../../../components/ui/form-text-field';
+import { FormText } from '../../../components/ui/form-fields';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { useContractForm } from '../../../lib/form';
+import { paths } from '../../../lib/paths';
 import { asProblem, type Problem } from '../../../lib/problem';
+import { usePageTitle } from '../../../lib/use-page-title';
 import { useSignInOptions } from '../api/get-sign-in-options';
 import { useSignIn } from '../api/sign-in';
 import { safeReturnAddress } from '../lib/safe-return-address';
 import { DemoPeople } from './demo-people';
 
 export function SignInPage() {
+  usePageTitle('Sign in');
   const { demoPeople, setUpNeeded } = useSignInOptions();
   const send = useSignInAndGoOn();
   const [demoProblem, setDemoProblem] = useState<Problem | null>(null);
@@ -39,7 +41,7 @@ export function SignInPage() {
       {shown ? <ProblemNotice problem={shown} /> : null}
       <form onSubmit={onSubmit} noValidate className="form-column">
         <div className="fieldset">
-          <FormTextField
+          <FormText
             control={form.control}
             name="email"
             label="E-mail address"
@@ -47,7 +49,7 @@ export function SignInPage() {
             inputMode="email"
             autoComplete="username"
           />
-          <FormTextField
+          <FormText
             control={form.control}
             name="password"
             label="Password"
@@ -73,7 +75,7 @@ function useSignInAndGoOn() {
   const [search] = useSearchParams();
   return async (given: { email: string; password: string }) => {
     const session = await signInWith(given);
-    const wanted = safeReturnAddress(search.get('to')) ?? paths.home;
+    const wanted = safeReturnAddress(search.get('next')) ?? paths.home;
     await navigate(session.active ? wanted : paths.chooseOrganisation, { replace: true });
   };
 }

@@ -1,0 +1,5 @@
+import { ChooseOrganisationPage } from './components/choose-organisation-page';
+
+export function Component() {
+  return <ChooseOrganisationPage />;
+}

@@ -1,0 +1,5 @@
+import { ForgottenPasswordPage } from './components/forgotten-password-page';
+
+export function Component() {
+  return <ForgottenPasswordPage />;
+}
