@@ -1,0 +1,152 @@
+import type { Quantity } from '../quantities/quantity';
+import { allQuantities } from '../quantities/registry';
+import { conditionsSchema } from '../record';
+import { withStandardAttributes } from '../rule-sets/attribute';
+import { withStandardDocuments } from '../rule-sets/document-types';
+import type { Cell, CellGrid, SheetGrid } from './cell-grid';
+import type { ReadingEdition } from './edition-contents';
+import { joinAttributes, joinReadings } from './join-duplicates';
+import {
+  attributePrefix,
+  documentQuantity,
+  isReference,
+  labelQuantity,
+  type Mapping,
+  type MappingRule,
+} from './mapping';
+import { labelKey } from './plain-text';
+import { readAttribute } from './read-attribute';
+import { readDocument } from './read-documents';
+import { type FindQuantity, readValues } from './read-readings';
+import { bindRule, markLabels, type RuleAtAnchor } from './read-rule';
+import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
+import type { Answer, ReadingResult } from './reading-result';
+import { SheetIndex } from './sheet-index';
+import { submittalFacts } from './submittal-facts';
+import { unreadReasons } from './unread-reason';
+import { valueCells } from './value-places';
+
+export interface ReadWorkbookInput {
+  grid: CellGrid;
+  mapping: Mapping;
+  /** Which attributes, documents and quantities there are words for. */
+  edition: ReadingEdition;
+  answers: Answer[];
+}
+
+/** Reads a decoded workbook through a mapping: every filled cell ends as read, doubted, a label or unused. */
+export function readWorkbook({ grid, mapping, edition, answers }: ReadWorkbookInput): ReadingResult {
+  const context: ReadingContext = { grid, log: createReadingLog(answers) };
+  const { log } = context;
+  const indexes = grid.sheets.map((sheet) => new SheetIndex(sheet));
+  const findQuantity = quantityFinder(edition.quantities);
+  for (const rule of mapping.rules) {
+    for (const index of indexes) {
+      if (rule.anchor.sheet === null || labelKey(rule.anchor.sheet) === labelKey(index.sheet.name)) {
+        readRule(index, rule, edition, findQuantity, context);
+      }
+    }
+  }
+  const readings = joinReadings(log);
+  const attributes = joinAttributes(log);
+  for (const index of indexes) passOverRest(index, context);
+  return {
+    record: { attributes, readings, documents: log.documents, doubts: log.doubts },
+    doubts: log.doubts,
+    unread: log.unread,
+    uses: log.uses(),
+    answered: log.answered,
+    stale: answers.filter((answer) => !log.answered.includes(answer)),
+  };
+}
+
+function readRule(
+  index: SheetIndex,
+  rule: MappingRule,
+  edition: ReadingEdition,
+  findQuantity: FindQuantity,
+  context: ReadingContext,
+): void {
+  const anchors = index.findHeader(rule.anchor.header);
+  for (const [at, anchor] of anchors.entries()) {
+    const bound = bindRule(index, rule, anchor);
+    markLabels(bound, context);
+    if (rule.quantity === labelQuantity) continue;
+    const next = anchors
+      .slice(at + 1)
+      .find(({ cell }) => cell.row > anchor.cell.row && cell.column === anchor.cell.column);
+    const cells = valueCells(index, rule, anchor, next?.cell.row ?? null);
+    if (rule.quantity === documentQuantity) {
+      for (const cell of cells) readDocument(bound, cell, withStandardDocuments(edition.documents), context);
+    } else if (!isReference(rule.quantity) && rule.quantity.startsWith(attributePrefix)) {
+      const attribute = attributeNamed(rule.quantity.slice(attributePrefix.length), edition);
+      for (const cell of cells) readAttribute(bound, cell, attribute, context);
+    } else {
+      readValues(bound, cells, findQuantity, context);
+    }
+    markUnits(bound, cells, context);
+    markKeys(bound, next?.cell.row ?? null, context);
+  }
+}
+
+function attributeNamed(name: string, edition: ReadingEdition) {
+  const known = [...withStandardAttributes(edition.attributes), ...submittalFacts];
+  return known.find((attribute) => attribute.name === name) ?? { name, type: 'text' as const };
+}
+
+function markUnits(bound: RuleAtAnchor, cells: Cell[], context: ReadingContext): void {
+  for (const cell of cells) {
+    const unitCell = bound.locators.get('unit')?.cellFor(cell);
+    if (unitCell) context.log.use(placeOf(bound.index.sheet, unitCell), 'label', 'A unit.');
+  }
+}
+
+/** Keys of rows without a value, and prepared method cells, are part of the layout and nothing to report. */
+function markKeys(bound: RuleAtAnchor, nextRow: number | null, context: ReadingContext): void {
+  const { index, anchor, rule, locators } = bound;
+  if (rule.axis === 'right') return;
+  for (const [name, locator] of locators) {
+    if (!(name in conditionsSchema.shape) && !['method', 'testedOn', 'quantity', 'unit'].includes(name))
+      continue;
+    for (const cell of index.sheet.cells) {
+      if (cell.row <= anchor.cell.row || (nextRow !== null && cell.row >= nextRow)) continue;
+      const key = locator.cellFor({ row: cell.row, column: anchor.cell.column });
+      if (key === cell) context.log.use(placeOf(index.sheet, cell), 'label', 'A key.');
+    }
+  }
+}
+
+/** Finds a quantity by id, label, symbol or any name that workbooks give it. */
+function quantityFinder(own: Quantity[]): FindQuantity {
+  const byName = new Map<string, Quantity>();
+  const known = [...own, ...allQuantities().filter(({ id }) => !own.some((each) => each.id === id))];
+  for (const quantity of known) byName.set(labelKey(quantity.id), quantity);
+  for (const quantity of known) {
+    for (const name of [quantity.label, quantity.symbol, ...quantity.aliases]) {
+      const key = labelKey(name);
+      if (!byName.has(key)) byName.set(key, quantity);
+    }
+  }
+  return (name) => byName.get(labelKey(name));
+}
+
+/** What is left over is listed, so that nothing in a workbook disappears without a word. */
+function passOverRest(index: SheetIndex, context: ReadingContext): void {
+  const { sheet } = index;
+  const hasLabels = sheet.cells.some((cell) => context.log.isUsed(placeOf(sheet, cell)));
+  const firstRow = hasLabels ? firstUsedRow(sheet, context) : 0;
+  for (const cell of sheet.cells) {
+    const place = placeOf(sheet, cell);
+    if (context.log.isUsed(place)) continue;
+    if (cell.kind === 'text' && hasLabels && cell.row <= firstRow) {
+      context.log.use(place, 'label', 'A title or label.');
+    } else if (index.isHidden(cell)) context.log.passOver(place, unreadReasons.hidden);
+    else if (cell.kind === 'text' && hasLabels) context.log.passOver(place, unreadReasons.remark);
+    else context.log.passOver(place, unreadReasons.noRule);
+  }
+}
+
+function firstUsedRow(sheet: SheetGrid, context: ReadingContext): number {
+  const used = sheet.cells.find((cell) => context.log.isUsed(placeOf(sheet, cell)));
+  return used?.row ?? 0;
+}

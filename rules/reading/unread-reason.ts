@@ -1,0 +1,14 @@
+/** Why a filled cell was not used. The list is closed: screens and letters count on these words. */
+export const unreadReasons = {
+  noRule: 'Nothing in the mapping reads this cell.',
+  remark: 'Text beside the readings.',
+  average: 'An average of specimens; it is recomputed from them.',
+  spread: 'A spread or count of specimens, not a reading.',
+  noValue: 'Says that there is no value.',
+  leftOut: 'Left out by an answer.',
+  keyInDoubt: 'What it belongs to is in doubt; answer that cell first.',
+  hidden: 'Hidden, and nothing in the mapping reads it.',
+  comment: 'Only a remark on a cell that holds nothing.',
+} as const;
+
+export type UnreadReason = (typeof unreadReasons)[keyof typeof unreadReasons];
