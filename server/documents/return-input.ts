@@ -1,7 +1,7 @@
 import type { CheckResult, Disposition } from '#rules/engine/finding';
 import type { Letterhead } from '#shared/contracts/organisation';
 import type { Recipient, ReturnItem } from '#shared/contracts/returns';
-import { dateInZone } from '#shared/format/dates';
+import { dateOfInstant } from '#shared/format/dates';
 import { type DocumentInput, documentInputSchema } from './document-input';
 
 /** What documents of a revision have in common, whether a return or a check before submission. */
@@ -85,13 +85,13 @@ function commonInput(revision: RevisionFacts, now: Date) {
     mixDesignation: revision.mixDesignation,
     mixDescription: revision.mixDescription,
     revision: revision.revision,
-    date: dateInZone(now, agency.timeZone),
+    date: dateOfInstant(now.toISOString(), agency.timeZone),
     submittedOn: revision.receivedOn,
     section: revision.section,
     summary: check.result.summary,
     findings: check.result.findings,
     seal: check.result.seal,
-    checkedOn: dateInZone(check.madeAt, agency.timeZone),
+    checkedOn: dateOfInstant(check.madeAt.toISOString(), agency.timeZone),
     startingPoint: revision.startingPoint,
   };
 }
