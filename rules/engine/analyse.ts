@@ -1,0 +1,95 @@
+import type { MixRecord } from '../record';
+import type { Analysis, AnalysisOptions, RecomputedValue } from './analysis';
+import { type AggregateNodes, aggregateOf, blendChoice } from './analysis-aggregate';
+import { designFromTrials, designPointOf, type TrialValues } from './analysis-design';
+import { designTrial, indexRecord, type RecordIndex } from './analysis-index';
+import type { AnalysisNode } from './analysis-node';
+import { attachReported, recomputedValues } from './analysis-reported';
+import { crackingOf, moistureOf } from './analysis-strength';
+import { type TrialNodes, volumetricsOf } from './analysis-volumetrics';
+
+/**
+ * Recomputes, trial by trial, every derived quantity that the trial's own raw readings give, completes the design
+ * from the trials where it has none of its own, and sets each value beside what the workbook reports.
+ */
+export function analyse(record: MixRecord, options: AnalysisOptions): Analysis {
+  const index = indexRecord(record, 'contractor');
+  const blend = blendChoice(record, index);
+  const trials = index.trials.map((trial) => trialValues(index, trial, aggregateOf(index, trial, blend)));
+  const design = trialValues(index, designTrial, aggregateOf(index, designTrial, blend));
+  const { point, computed } = designPointOf(trials, design.pb, options);
+  const fromTrials = designFromTrials(trials, design.pb, design.nodes, options);
+  const designNodes = [...design.nodes, ...fromTrials, ...(computed ? [computed] : [])];
+  const recomputed = [
+    ...blendValues(index, [design, ...trials]),
+    ...trials.flatMap((trial) => publish(trial.nodes, trial.context, index)),
+    ...publish(designNodes, [...design.context, ...fromTrials], index),
+    ...agencyValues(record),
+  ];
+  return { recomputed, designPoint: point };
+}
+
+interface Trial extends TrialValues {
+  aggregate: AggregateNodes;
+  /** Every node of the trial, inputs included, for naming causes. */
+  context: AnalysisNode[];
+}
+
+function trialValues(index: RecordIndex, trial: string, aggregate: AggregateNodes): Trial {
+  const volumetric = volumetricsOf(index, trial, aggregate);
+  const { dry, conditioned, ratio } = moistureOf(index, trial);
+  const nodes = [
+    ...derivedOf(volumetric),
+    ...volumetric.relativeDensities,
+    ...volumetric.others,
+    ...[dry, conditioned, ratio].filter((node) => node !== null),
+    ...crackingOf(index, trial),
+  ];
+  const inputs = [
+    volumetric.pb,
+    volumetric.gb,
+    volumetric.gmm,
+    aggregate.gsb,
+    aggregate.gsa,
+    aggregate.surfaceArea,
+  ].filter((node) => node !== null);
+  return { trial, pb: volumetric.pb, nodes, aggregate, context: [...inputs, ...derivedOf(volumetric)] };
+}
+
+function derivedOf(volumetric: TrialNodes): AnalysisNode[] {
+  const { gmb, gse, pba, pbe, va, vma, vfa, vbe, dust, film, recycled } = volumetric;
+  return [gmb, gse, pba, pbe, va, vma, vfa, vbe, dust, film, recycled].filter((node) => node !== null);
+}
+
+/** Reported values first: a cause may rest on how the workbook shows another value of the same trial. */
+function publish(nodes: AnalysisNode[], context: AnalysisNode[], index: RecordIndex): RecomputedValue[] {
+  for (const node of nodes) attachReported(node, index);
+  return nodes.flatMap((node) => recomputedValues(node, context, index));
+}
+
+/** What the stockpiles give for each blend, once a blend: it belongs to every trial made of it. */
+function blendValues(index: RecordIndex, trials: Trial[]): RecomputedValue[] {
+  const done = new Set<string>();
+  return trials.flatMap(({ trial, aggregate, context }) => {
+    const ownShares = aggregate.shares.some(({ at }) => at.trial !== undefined);
+    const key = `${ownShares ? trial : ''}|${aggregate.blend ?? ''}`;
+    if (done.has(key)) return [];
+    done.add(key);
+    const { gsb, gsa, absorption, surfaceArea, combinedPassing } = aggregate;
+    const nodes = [gsb, gsa, absorption, surfaceArea, ...combinedPassing.values()].filter(
+      (node) => node !== null,
+    );
+    const own = ownShares ? nodes.map((node) => ({ ...node, at: { ...node.at, trial } })) : nodes;
+    return publish(own, context, index);
+  });
+}
+
+/** The agency's own specimens, never mixed with the contractor's. */
+function agencyValues(record: MixRecord): RecomputedValue[] {
+  const index = indexRecord(record, 'agency');
+  const blend = blendChoice(record, index);
+  return [designTrial, ...index.trials].flatMap((trial) => {
+    const values = trialValues(index, trial, aggregateOf(index, trial, blend));
+    return publish(values.nodes, values.context, index);
+  });
+}

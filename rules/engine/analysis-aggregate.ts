@@ -1,0 +1,253 @@
+import { combinedAbsorption, combinedGravity } from '../calculations/combined-gravity';
+import { combinedPassing } from '../calculations/gradation';
+import { surfaceArea, surfaceAreaFactors } from '../calculations/surface-area';
+import { cannot, known, type NumericResult } from '../numerics/numeric-result';
+import type { Conditions, MixRecord, Reading } from '../record';
+import { comparable, designTrial, type RecordIndex, withoutGaps } from './analysis-index';
+import { type AnalysisNode, derivedNode, meanNode, readingNode } from './analysis-node';
+
+/** What the aggregate of one trial is: from its stockpiles where they are given, else as stated. */
+export interface AggregateNodes {
+  /** Blend that the trial is made of; null where the workbook has one or does not say which. */
+  blend: string | null;
+  shares: AnalysisNode[];
+  gsb: AnalysisNode | null;
+  gsa: AnalysisNode | null;
+  absorption: AnalysisNode | null;
+  /** Stated percent passing by sieve, else computed from the stockpiles. */
+  passing(sieveMm: number): AnalysisNode | null;
+  /** Percent passing computed from the stockpiles, by sieve. */
+  combinedPassing: Map<number, AnalysisNode>;
+  surfaceArea: AnalysisNode | null;
+}
+
+export function aggregateOf(index: RecordIndex, trial: string, blend: BlendChoice): AggregateNodes {
+  const chosen = blend.of(trial);
+  const select = (quantity: string) =>
+    chosen === 'unknown' ? [] : index.ofTrial(quantity, trial).filter(({ at }) => inBlend(at, chosen));
+  const shares = sharesOf(select('stockpile-share'));
+  const at = withoutGaps({ blend: chosen ?? undefined });
+  const combine = (quantity: string, formula: string, method: typeof combinedGravity) =>
+    combinedOf({ quantity, at, formula, shares, readings: select(quantity), method });
+  const gravity = '100/Σ(Pi/Gi)';
+  const passing = gradationOf(select);
+  const combined = combinedGradation(passing, shares, at);
+  const atSieve = (sieveMm: number) => passing.stated(sieveMm) ?? combined.get(sieveMm) ?? null;
+  return {
+    blend: chosen,
+    shares,
+    gsb:
+      combine('bulk-specific-gravity-aggregate', gravity, combinedGravity) ??
+      statedOf(select('bulk-specific-gravity-aggregate')),
+    gsa:
+      combine('apparent-specific-gravity-aggregate', gravity, combinedGravity) ??
+      statedOf(select('apparent-specific-gravity-aggregate')),
+    absorption:
+      combine('water-absorption', 'Σ(Pi·ai)/ΣPi', combinedAbsorption) ?? statedOf(select('water-absorption')),
+    passing: atSieve,
+    combinedPassing: combined,
+    surfaceArea: surfaceAreaOf(atSieve, at),
+  };
+}
+
+/** Which blend each trial is made of: a name, null for the only one, `unknown` where nothing says which. */
+export interface BlendChoice {
+  of(trial: string): string | null | 'unknown';
+}
+
+/**
+ * The workbook's blends. With several, a trial is made of the one that its own readings name, and the design of
+ * the one that the job mix names.
+ */
+export function blendChoice(record: MixRecord, index: RecordIndex): BlendChoice {
+  const shares = index.all('stockpile-share');
+  const names = new Set(shares.flatMap(({ at }) => (at.blend === undefined ? [] : [at.blend])));
+  if (names.size <= 1) return { of: () => [...names][0] ?? null };
+  const named = new Map<string, Set<string>>();
+  for (const { at } of record.readings) {
+    if (at.blend === undefined || at.trial === undefined) continue;
+    named.set(at.trial, (named.get(at.trial) ?? new Set()).add(at.blend));
+  }
+  const attribute = record.attributes.blend?.value;
+  if (typeof attribute === 'string' && names.has(attribute)) named.set(designTrial, new Set([attribute]));
+  return {
+    of: (trial) => {
+      const own = named.get(trial);
+      return own?.size === 1 ? [...own][0]! : 'unknown';
+    },
+  };
+}
+
+function inBlend(at: Conditions, blend: string | null): boolean {
+  return at.blend === undefined || at.blend === blend;
+}
+
+function sharesOf(readings: Reading[]): AnalysisNode[] {
+  const withStockpile = readings.filter(({ at }) => at.stockpile !== undefined);
+  const seen = new Set(withStockpile.map(({ at }) => at.stockpile));
+  // Two shares for one stockpile: nothing says which is meant.
+  return seen.size === withStockpile.length ? withStockpile.map((reading) => readingNode(reading, 'Pi')) : [];
+}
+
+/** The value stated for the blend as a whole. */
+function statedOf(readings: Reading[]): AnalysisNode | null {
+  const whole = comparable(readings.filter(({ at }) => at.stockpile === undefined));
+  return whole.length === 0 ? null : averaged(whole, { ...whole[0]!.at, specimen: undefined });
+}
+
+function averaged(readings: Reading[], at: Conditions): AnalysisNode | null {
+  return meanNode(
+    readings.map((reading) => readingNode(reading)),
+    withoutGaps(at),
+    { keepSpecimens: false, counted: false },
+  );
+}
+
+interface Combination {
+  quantity: string;
+  at: Conditions;
+  formula: string;
+  shares: AnalysisNode[];
+  readings: Reading[];
+  method: typeof combinedGravity;
+}
+
+/** Null where a stockpile in use has no value of its own: a mean over the others would be another blend. */
+function combinedOf({ quantity, at, formula, shares, readings, method }: Combination): AnalysisNode | null {
+  const used = shares.filter(({ value }) => value > 0);
+  if (used.length === 0) return null;
+  const values = used.map(({ at: { stockpile } }) => {
+    const own = comparable(readings.filter((reading) => reading.at.stockpile === stockpile));
+    return own.length === 0 ? null : averaged(own, { stockpile });
+  });
+  const complete = values.filter((value) => value !== null);
+  if (complete.length < used.length) return null;
+  return derivedNode({
+    quantity,
+    at,
+    formula,
+    inputs: [...used, ...complete],
+    compute: (numbers) => method(pairs(numbers)),
+  });
+}
+
+/** First half shares, second half the stockpiles' values, in the same order. */
+function pairs(numbers: number[]): { share: number; value: number }[] {
+  const half = numbers.length / 2;
+  return numbers.slice(0, half).map((share, index) => ({ share, value: numbers[half + index]! }));
+}
+
+interface Gradation {
+  /** Percent passing of the blend as stated, as passing or as retained. */
+  stated(sieveMm: number): AnalysisNode | null;
+  ofStockpile(stockpile: string, sieveMm: number): AnalysisNode | null;
+  sieves: number[];
+}
+
+function gradationOf(select: (quantity: string) => Reading[]): Gradation {
+  const stacks = new Map<string | undefined, Map<number, AnalysisNode>>();
+  const put = (node: AnalysisNode) => {
+    const stack = stacks.get(node.at.stockpile) ?? new Map<number, AnalysisNode>();
+    stacks.set(node.at.stockpile, stack);
+    if (!stack.has(node.at.sieve!)) stack.set(node.at.sieve!, node);
+  };
+  for (const node of sievedNodes(comparable(select('percent-passing')))) put(node);
+  for (const node of sievedNodes(comparable(select('cumulative-percent-retained')))) put(passingFrom(node));
+  for (const node of fromIndividual(sievedNodes(comparable(select('percent-retained'))))) put(node);
+  const at = (stockpile: string | undefined, sieveMm: number) => stacks.get(stockpile)?.get(sieveMm) ?? null;
+  const sieves = new Set([...stacks.values()].flatMap((stack) => [...stack.keys()]));
+  return {
+    stated: (sieveMm) => at(undefined, sieveMm),
+    ofStockpile: at,
+    sieves: [...sieves].sort((a, b) => b - a),
+  };
+}
+
+/** One node per stockpile and sieve, the mean where several samples were sieved. */
+function sievedNodes(readings: Reading[]): AnalysisNode[] {
+  const groups = new Map<string, Reading[]>();
+  for (const reading of readings) {
+    if (reading.at.sieve === undefined) continue;
+    const key = `${reading.at.stockpile ?? ''}|${reading.at.sieve}`;
+    const group = groups.get(key);
+    if (group) group.push(reading);
+    else groups.set(key, [reading]);
+  }
+  return [...groups.values()].flatMap(
+    (group) => averaged(group, { ...group[0]!.at, specimen: undefined }) ?? [],
+  );
+}
+
+function passingFrom(node: AnalysisNode): AnalysisNode {
+  return derivedNode({
+    quantity: 'percent-passing',
+    at: node.at,
+    formula: '100 − cumulative percent retained',
+    inputs: [node],
+    compute: ([retained]) => known(100 - retained!),
+  })!;
+}
+
+/** A stack of individual percents retained: what passes a sieve is 100 less all that stays on it and above. */
+function fromIndividual(nodes: AnalysisNode[]): AnalysisNode[] {
+  return nodes.flatMap((node) => {
+    const above = nodes.filter(
+      (other) => other.at.stockpile === node.at.stockpile && other.at.sieve! >= node.at.sieve!,
+    );
+    const passing = derivedNode({
+      quantity: 'percent-passing',
+      at: node.at,
+      formula: '100 − Σ percent retained',
+      inputs: above,
+      compute: (retained) => known(100 - retained.reduce((sum, value) => sum + value, 0)),
+    });
+    return passing ?? [];
+  });
+}
+
+function combinedGradation(
+  gradation: Gradation,
+  shares: AnalysisNode[],
+  at: Conditions,
+): Map<number, AnalysisNode> {
+  const combined = new Map<number, AnalysisNode>();
+  const used = shares.filter(({ value }) => value > 0);
+  if (used.length === 0) return combined;
+  for (const sieve of gradation.sieves) {
+    const values = used.map((share) => gradation.ofStockpile(share.at.stockpile!, sieve));
+    const complete = values.filter((value) => value !== null);
+    if (complete.length < used.length) continue;
+    const node = derivedNode({
+      quantity: 'percent-passing',
+      at: { ...at, sieve },
+      formula: 'Σ(Pi·P)/100',
+      inputs: [...used, ...complete],
+      compute: (numbers) => combinedPassing(pairs(numbers)),
+    });
+    if (node) combined.set(sieve, node);
+  }
+  return combined;
+}
+
+function surfaceAreaOf(
+  passing: (sieveMm: number) => AnalysisNode | null,
+  at: Conditions,
+): AnalysisNode | null {
+  const inputs = surfaceAreaFactors.map(([openingMm]) => passing(openingMm));
+  const complete = inputs.filter((input) => input !== null);
+  if (complete.length < inputs.length) return null;
+  return derivedNode({
+    quantity: 'surface-area',
+    at,
+    formula: '0.41 + Σ factor·P/100',
+    inputs: complete,
+    compute: (values) => surfaceAreaFrom(values),
+  });
+}
+
+function surfaceAreaFrom(values: number[]): NumericResult {
+  if (values.length !== surfaceAreaFactors.length) return cannot('a sieve is missing');
+  return surfaceArea(
+    surfaceAreaFactors.map(([openingMm], index) => ({ openingMm, passingPercent: values[index]! })),
+  );
+}

@@ -1,0 +1,204 @@
+import { bulkSpecificGravity } from '../calculations/bulk-specific-gravity';
+import { relativeDensity } from '../calculations/relative-density';
+import { known } from '../numerics/numeric-result';
+import type { Conditions, Reading } from '../record';
+import {
+  isSpecial,
+  type NamedGyrations,
+  type RecordIndex,
+  specialConditions,
+  specialKey,
+  withoutGaps,
+} from './analysis-index';
+import { type AnalysisNode, derivedNode, derivedPerSpecimen, meanNode, readingNode } from './analysis-node';
+
+/** Specimens of one trial that were compacted and tested alike. */
+export interface CompactedSet {
+  /** Gyrations at which Gmb was measured; without a statement, the design number. */
+  gyrations: NamedGyrations | number;
+  /** True for the specimens that the volumetrics rest on. */
+  volumetric: boolean;
+  at: Conditions;
+  gmb: AnalysisNode;
+}
+
+/**
+ * Gmb of a trial's specimens: from their masses where these are given, else as given.
+ *
+ * A set with another condition (the wet and dry subsets of a moisture test) stays apart from the volumetric one.
+ */
+export function compactedSets(index: RecordIndex, trial: string): CompactedSet[] {
+  const sets = new Map<string, SpecimenSet>();
+  for (const quantity of [gmb, ...Object.keys(massSymbols)]) {
+    for (const reading of index.ofTrial(quantity, trial)) addTo(sets, index, reading);
+  }
+  leaveTestedOut(sets, testedSpecimens(index, trial));
+  return [...sets.values()].flatMap((set) => {
+    const at = withoutGaps({ trial, ...set.special, gyrations: set.stated });
+    const node = gravityOf(set, at);
+    const volumetric = set.gyrations === 'design' && Object.keys(set.special).length === 0;
+    return node ? [{ gyrations: set.gyrations, volumetric, at, gmb: node }] : [];
+  });
+}
+
+/**
+ * Relative density at each number of gyrations that the set's heights reach, and at its own.
+ *
+ * Gmb belongs to the gyrations at which it was measured; heights carry it to the others.
+ */
+export function relativeDensities(
+  index: RecordIndex,
+  trial: string,
+  set: CompactedSet,
+  gmm: AnalysisNode,
+): AnalysisNode[] {
+  const heights = heightsOf(index, trial);
+  const reached = new Set([...heights.values()].flatMap((byGyrations) => [...byGyrations.keys()]));
+  const isGyratory = reached.size > 0 || set.at.gyrations !== undefined || index.gyrations.size > 0;
+  if (isGyratory) reached.add(set.gyrations);
+  return [...reached].flatMap((gyrations) => {
+    const at = withoutGaps({ ...set.at, gyrations });
+    if (gyrations === set.gyrations) return ownDensity(set, gmm, at) ?? [];
+    return densityByHeights(set, gmm, heights, gyrations, at) ?? [];
+  });
+}
+
+const gmb = 'bulk-specific-gravity-mix';
+const massSymbols = { 'mass-in-air': 'A', 'mass-saturated-surface-dry': 'B', 'mass-in-water': 'C' } as const;
+
+interface SpecimenSet {
+  gyrations: NamedGyrations | number;
+  /** Gyrations as stated; undefined where the readings are silent. */
+  stated: NamedGyrations | number | undefined;
+  special: Conditions;
+  specimens: Map<string, Record<string, Reading[]>>;
+}
+
+function addTo(sets: Map<string, SpecimenSet>, index: RecordIndex, reading: Reading): void {
+  const stated = index.gyrationsKey(reading.at.gyrations);
+  const gyrations = stated ?? 'design';
+  const key = `${gyrations}|${isSpecial(reading) ? specialKey(reading) : ''}`;
+  const set: SpecimenSet = sets.get(key) ?? {
+    gyrations,
+    stated: undefined,
+    special: specialConditions(reading),
+    specimens: new Map(),
+  };
+  sets.set(key, set);
+  set.stated ??= stated;
+  const label = reading.at.specimen ?? '';
+  const specimen = set.specimens.get(label) ?? {};
+  set.specimens.set(label, specimen);
+  specimen[reading.quantity] = [...(specimen[reading.quantity] ?? []), reading];
+}
+
+/**
+ * A specimen that was broken for its strength was compacted to other voids on purpose; where the workbook does
+ * not keep its masses apart by a condition, it is still no volumetric specimen, as long as others remain.
+ */
+function leaveTestedOut(sets: Map<string, SpecimenSet>, tested: Set<string>): void {
+  if (tested.size === 0) return;
+  for (const { special, specimens } of sets.values()) {
+    if (Object.keys(special).length > 0) continue;
+    const labels = [...specimens.keys()];
+    const isMixed =
+      [...tested].every((label) => specimens.has(label)) && labels.some((label) => !tested.has(label));
+    if (isMixed) for (const label of tested) specimens.delete(label);
+  }
+}
+
+function testedSpecimens(index: RecordIndex, trial: string): Set<string> {
+  const tests = [
+    'failure-load',
+    'tensile-strength-dry',
+    'tensile-strength-conditioned',
+    'degree-of-saturation',
+  ];
+  const labels = tests.flatMap((quantity) =>
+    index.ofTrial(quantity, trial).flatMap(({ at }) => (at.specimen === undefined ? [] : [at.specimen])),
+  );
+  return new Set(labels);
+}
+
+function gravityOf(set: SpecimenSet, at: Conditions): AnalysisNode | null {
+  const labelled = [...set.specimens].filter(([label]) => label !== '');
+  const used = labelled.length > 0 ? labelled : [...set.specimens];
+  const nodes = used.flatMap(([label, readings]) => {
+    const specimen = withoutGaps({ ...at, specimen: label === '' ? undefined : label });
+    return fromMasses(readings, specimen) ?? asGiven(readings[gmb], specimen) ?? [];
+  });
+  return meanNode(nodes, at, { keepSpecimens: true, counted: true });
+}
+
+function fromMasses(readings: Record<string, Reading[]>, at: Conditions): AnalysisNode | null {
+  const inputs = Object.entries(massSymbols).map(([quantity, symbol]) => {
+    const masses = readings[quantity] ?? [];
+    return masses.length === 1 ? readingNode(masses[0]!, symbol) : null;
+  });
+  const complete = inputs.filter((input) => input !== null);
+  if (complete.length < inputs.length) return null;
+  return derivedNode({
+    quantity: gmb,
+    at,
+    formula: 'A/(B − C)',
+    inputs: complete,
+    compute: ([A, B, C]) => bulkSpecificGravity({ A: A!, B: B!, C: C! }),
+  });
+}
+
+function asGiven(readings: Reading[] | undefined, at: Conditions): AnalysisNode | null {
+  const nodes = (readings ?? []).map((reading) => readingNode(reading));
+  return meanNode(nodes, at, { keepSpecimens: false, counted: true });
+}
+
+type Heights = Map<string, Map<NamedGyrations | number, AnalysisNode>>;
+
+/** Heights by specimen, `""` for a stack of heights that names none. */
+function heightsOf(index: RecordIndex, trial: string): Heights {
+  const heights: Heights = new Map();
+  for (const reading of index.ofTrial('specimen-height', trial)) {
+    const gyrations = index.gyrationsKey(reading.at.gyrations);
+    if (gyrations === undefined || isSpecial(reading)) continue;
+    const label = reading.at.specimen ?? '';
+    const byGyrations = heights.get(label) ?? new Map<NamedGyrations | number, AnalysisNode>();
+    heights.set(label, byGyrations);
+    if (!byGyrations.has(gyrations)) byGyrations.set(gyrations, readingNode(reading, `h,${gyrations}`));
+  }
+  return heights;
+}
+
+function ownDensity(set: CompactedSet, gmm: AnalysisNode, at: Conditions): AnalysisNode | null {
+  return derivedPerSpecimen({
+    quantity: 'relative-density',
+    at,
+    formula: '100·Gmb/Gmm',
+    inputs: [set.gmb, gmm],
+    compute: ([Gmb, Gmm]) =>
+      Gmm! > 0 ? known((100 * Gmb!) / Gmm!) : { ok: false, reason: 'Gmm must be above zero' },
+  });
+}
+
+function densityByHeights(
+  set: CompactedSet,
+  gmm: AnalysisNode,
+  heights: Heights,
+  gyrations: NamedGyrations | number,
+  at: Conditions,
+): AnalysisNode | null {
+  const specimens = set.gmb.specimens.length > 0 ? set.gmb.specimens : [set.gmb];
+  const nodes = specimens.flatMap((specimen) => {
+    const stack = heights.get(specimen.at.specimen ?? '') ?? heights.get('');
+    const reference = stack?.get(set.gyrations);
+    const height = stack?.get(gyrations);
+    if (!reference || !height) return [];
+    const node = derivedNode({
+      quantity: 'relative-density',
+      at: withoutGaps({ ...at, specimen: specimen.at.specimen }),
+      formula: `100·Gmb·${reference.symbol}/(Gmm·${height.symbol})`,
+      inputs: [specimen, gmm, reference, height],
+      compute: ([Gmb, Gmm, hRef, hN]) => relativeDensity({ Gmb: Gmb!, Gmm: Gmm!, hRef: hRef!, hN: hN! }),
+    });
+    return node ?? [];
+  });
+  return meanNode(nodes, at, { keepSpecimens: true, counted: true });
+}

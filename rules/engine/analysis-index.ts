@@ -1,0 +1,113 @@
+import { quantityById } from '../quantities/registry';
+import type { Conditions, MixRecord, Reading } from '../record';
+
+export type NamedGyrations = 'initial' | 'design' | 'maximum';
+export type Laboratory = 'contractor' | 'agency';
+
+/** The readings of one laboratory that carry a number, ready to be looked up. */
+export interface RecordIndex {
+  laboratory: Laboratory;
+  /** Readings of a quantity that belong to a trial. */
+  ofTrial(quantity: string, trial: string): Reading[];
+  /** Every reading of a quantity, whatever its trial. */
+  all(quantity: string): Reading[];
+  /** Trials that the readings name, `design` left out, in order of appearance. */
+  trials: string[];
+  /** Numbers of gyrations as stated; a name without a single stated number is missing. */
+  gyrations: Map<NamedGyrations, number>;
+  /** The name of a number of gyrations where it has one; a number without a name stays a number. */
+  gyrationsKey(gyrations: Conditions['gyrations']): NamedGyrations | number | undefined;
+}
+
+export function indexRecord(record: MixRecord, laboratory: Laboratory): RecordIndex {
+  const byQuantity = new Map<string, Reading[]>();
+  const trials = new Set<string>();
+  for (const reading of record.readings) {
+    if ((reading.at.laboratory ?? 'contractor') !== laboratory || !hasNumber(reading)) continue;
+    const known = byQuantity.get(reading.quantity);
+    if (known) known.push(reading);
+    else byQuantity.set(reading.quantity, [reading]);
+    if (reading.at.trial !== undefined) trials.add(reading.at.trial);
+  }
+  trials.delete(designTrial);
+  const all = (quantity: string) => byQuantity.get(quantity) ?? [];
+  const gyrations = statedGyrations(all);
+  const names = new Map([...gyrations].map(([name, number]) => [number, name]));
+  return {
+    laboratory,
+    all,
+    ofTrial: (quantity, trial) => belongingTo(all(quantity), quantity, trial),
+    trials: [...trials],
+    gyrations,
+    gyrationsKey: (key) => (typeof key === 'number' ? (names.get(key) ?? key) : key),
+  };
+}
+
+/** The proposed job mix formula. */
+export const designTrial = 'design';
+
+/**
+ * The readings among them that a calculation may take together: those without conditions that change the
+ * meaning of a test, else those of the only such set. Several sets: none, because nothing says which counts.
+ */
+export function comparable(readings: Reading[]): Reading[] {
+  if (!readings.some(isSpecial)) return readings;
+  const plain = readings.filter((reading) => !isSpecial(reading));
+  if (plain.length > 0) return plain;
+  const sets = new Set(readings.map(specialKey));
+  return sets.size === 1 ? readings : [];
+}
+
+/** True where a reading states a condition that makes it another test than the plain one. */
+export function isSpecial({ at }: Reading): boolean {
+  return (
+    at.variant !== undefined ||
+    at.temperature !== undefined ||
+    at.aging !== undefined ||
+    at.time !== undefined ||
+    at.stress !== undefined ||
+    at.passes !== undefined ||
+    at.frequency !== undefined
+  );
+}
+
+export function specialKey({ at }: Reading): string {
+  return [at.variant, at.temperature, at.aging, at.time, at.stress, at.passes, at.frequency].join('|');
+}
+
+/** Conditions that a computed value inherits from its special readings. */
+export function specialConditions({ at }: Reading): Conditions {
+  const { variant, temperature, aging, time, stress, passes, frequency } = at;
+  return withoutGaps({ variant, temperature, aging, time, stress, passes, frequency });
+}
+
+/** Conditions with only what is stated. */
+export function withoutGaps(at: Conditions): Conditions {
+  return Object.fromEntries(Object.entries(at).filter(([, value]) => value !== undefined));
+}
+
+/** A censored value or a qualifier without a number cannot enter a calculation. */
+function hasNumber(reading: Reading): boolean {
+  return reading.value !== null && reading.qualifier === undefined && Number.isFinite(reading.value);
+}
+
+function belongingTo(readings: Reading[], quantity: string, trial: string): Reading[] {
+  const subject = quantityById(quantity)?.subject ?? 'mix';
+  if (subject === 'mix' || subject === 'specimen') {
+    return readings.filter(({ at }) => (at.trial ?? designTrial) === trial);
+  }
+  const own = readings.filter(({ at }) => at.trial === trial);
+  return own.length > 0 ? own : readings.filter(({ at }) => at.trial === undefined);
+}
+
+function statedGyrations(all: (quantity: string) => Reading[]): Map<NamedGyrations, number> {
+  const names: NamedGyrations[] = ['initial', 'design', 'maximum'];
+  return new Map(
+    names.flatMap((name) => {
+      const readings = all(`gyrations-${name}`);
+      const design = readings.filter(({ at }) => (at.trial ?? designTrial) === designTrial);
+      const values = new Set((design.length > 0 ? design : readings).map(({ value }) => value!));
+      return values.size === 1 ? [[name, [...values][0]!] as const] : [];
+    }),
+  );
+}
