@@ -6,6 +6,8 @@ import { defineConfig } from 'vite';
 export default defineConfig({
   root: 'web',
   plugins: [react(), tailwindcss(), { ...optimizeLocales.vite({ locales: ['en-US'] }), enforce: 'pre' }],
+  // In development the API runs beside the web server; the launcher says where.
+  server: { proxy: { '/api': { target: process.env.CLAUSEWAY_API ?? 'http://127.0.0.1:4170' } } },
   build: {
     outDir: '../dist/web',
     emptyOutDir: true,

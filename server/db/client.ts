@@ -1,4 +1,6 @@
-import { drizzle, type MySql2Database } from 'drizzle-orm/mysql2';
+import type { ExtractTablesWithRelations } from 'drizzle-orm';
+import type { MySqlDatabase } from 'drizzle-orm/mysql-core';
+import { drizzle, type MySql2PreparedQueryHKT, type MySql2QueryResultHKT } from 'drizzle-orm/mysql2';
 import mysql from 'mysql2/promise';
 import * as checks from './schema/checks';
 import * as files from './schema/files';
@@ -20,10 +22,16 @@ export const schema = {
   ...work,
 };
 
-export type Database = MySql2Database<typeof schema>;
-/** Either the pool or a transaction: queries take this and the caller decides. */
-export type Queryable = Database | Parameters<Parameters<Database['transaction']>[0]>[0];
-export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0];
+/**
+ * The pool or a transaction of it: queries and commands take either and the caller decides. A transaction
+ * inside a transaction is a savepoint.
+ */
+export type Database = MySqlDatabase<
+  MySql2QueryResultHKT,
+  MySql2PreparedQueryHKT,
+  typeof schema,
+  ExtractTablesWithRelations<typeof schema>
+>;
 
 export function connect(url: string, { connections = 10 } = {}) {
   const pool = mysql.createPool({
@@ -32,8 +40,7 @@ export function connect(url: string, { connections = 10 } = {}) {
     maxIdle: connections,
     enableKeepAlive: true,
   });
-  // mysql2's pool is what the drizzle driver wraps; its callback form serves stores that want one.
-  const db = drizzle(pool, { schema, mode: 'planetscale' });
+  const db: Database = drizzle(pool, { schema, mode: 'planetscale' });
   return { db, pool, close: () => pool.end() };
 }
 

@@ -5,6 +5,8 @@ import { ensureDebianPackages } from './ensure-debian-packages.mjs';
 import { databaseInitStatements, databaseUrls, localSecrets } from './local-settings.mjs';
 import { inRoot, root } from './paths.mjs';
 import { startPrivateDatabase, stopPrivateDatabase } from './private-database.mjs';
+import { portIsFree } from './processes.mjs';
+import { LauncherError } from './run-command.mjs';
 
 /** Where the private instance keeps everything; another place makes another instance. */
 export function dataDirectory() {
@@ -12,7 +14,7 @@ export function dataDirectory() {
 }
 
 /** Starts or finds the private MariaDB and returns the settings that point to it. */
-export async function startLocalDatabase(directory) {
+export async function startLocalDatabase(directory, supervisor) {
   await ensureDebianPackages(['mariadb-server']);
   const secrets = localSecrets(directory);
   const database = await startPrivateDatabase({
@@ -20,11 +22,24 @@ export async function startLocalDatabase(directory) {
     initStatements: databaseInitStatements(secrets),
     throwaway: process.env.CLAUSEWAY_THROWAWAY === 'yes',
   });
+  supervisor.onStop(() => stopPrivateDatabase(directory));
   return {
     reused: database.reused,
-    env: { ...databaseUrls(secrets, database.socket), SESSION_SECRET: secrets.session },
-    stop: () => stopPrivateDatabase(directory),
+    env: {
+      ...databaseUrls(secrets, database.socket),
+      SESSION_SECRET: secrets.session,
+      CLAUSEWAY_DATABASE_PID_FILE: database.pidFile,
+    },
   };
+}
+
+/** A port that was asked for is used or refused; the usual one gives way to its neighbours. */
+export async function choosePort() {
+  if (process.env.PORT) return Number(process.env.PORT);
+  for (let port = 4170; port < 4180; port += 1) {
+    if (await portIsFree(port)) return port;
+  }
+  throw new LauncherError('The ports 4170 to 4179 are all in use: set PORT to a free one.');
 }
 
 /**
@@ -40,12 +55,15 @@ export function spawnServer({ command, args, env, logFile }) {
     // Ctrl-C goes to the whole group: only the launcher may hear it, so that it stops things in order.
     detached: true,
   });
+  const where = logFile ? ` Its log is ${logFile}` : '';
   const ready = new Promise((resolve, reject) => {
     child.once('error', reject);
-    child.once('exit', (code) => reject(new Error(`The server ended with ${code} before it was ready.`)));
+    child.once('exit', (code) =>
+      reject(new LauncherError(`The server ended with ${code} before it was ready.${where}`)),
+    );
     child.on('message', (message) => {
       if (message?.kind === 'ready') resolve(message);
-      if (message?.kind === 'refused') reject(new Error(message.detail));
+      if (message?.kind === 'refused') reject(new LauncherError(`${message.detail}${where}`));
     });
   });
   return { child, ready };

@@ -1,0 +1,105 @@
+import { and, asc, desc, eq, gte, lte } from 'drizzle-orm';
+import type { Cell, CellGrid, SheetGrid } from '#rules/reading/cell-grid';
+import type { Database } from '../client';
+import { cellBlocks, cellGrids } from '../schema/files';
+
+/** Rows in one block: a window of a sheet reads one or two blocks, and a block stays well below a packet. */
+const rowsPerBlock = 200;
+
+interface StoreGrid {
+  fileId: string;
+  grid: CellGrid;
+  now: Date;
+  newId: () => string;
+}
+
+/** Keeps a decoded workbook by sheet and row block; a workbook that is kept already stays as it is. */
+export async function storeGrid(db: Database, { fileId, grid, now, newId }: StoreGrid): Promise<void> {
+  const [kept] = await db
+    .select({ id: cellGrids.id })
+    .from(cellGrids)
+    .where(and(eq(cellGrids.fileId, fileId), eq(cellGrids.decoder, grid.decoder)));
+  if (kept !== undefined) return;
+  const gridId = newId();
+  await db.insert(cellGrids).values({
+    id: gridId,
+    fileId,
+    decoder: grid.decoder,
+    date1904: grid.date1904,
+    properties: grid.properties,
+    sheets: grid.sheets.map(({ cells: _, ...sheet }) => sheet),
+    createdAt: now,
+  });
+  for (const [sheet, { cells }] of grid.sheets.entries()) {
+    for (const block of blocksOf(cells)) {
+      await db.insert(cellBlocks).values({ id: newId(), gridId, sheet, ...block });
+    }
+  }
+}
+
+/** The whole grid of a workbook by the newest decoder that read it, or null. */
+export async function loadGrid(db: Database, fileId: string): Promise<CellGrid | null> {
+  const head = await gridOf(db, fileId);
+  if (head === null) return null;
+  const blocks = await db
+    .select({ sheet: cellBlocks.sheet, cells: cellBlocks.cells })
+    .from(cellBlocks)
+    .where(eq(cellBlocks.gridId, head.id))
+    .orderBy(asc(cellBlocks.sheet), asc(cellBlocks.fromRow));
+  const cells = head.sheets.map((): Cell[] => []);
+  for (const block of blocks) for (const cell of block.cells) cells[block.sheet]?.push(cell);
+  return {
+    decoder: head.decoder,
+    date1904: head.date1904,
+    properties: head.properties,
+    sheets: head.sheets.map((sheet, index) => ({ ...sheet, cells: cells[index] ?? [] })),
+  };
+}
+
+/** Rows of one sheet, both ends included; null where the workbook has no such sheet. */
+export async function loadSheet(
+  db: Database,
+  { fileId, name, from, to }: { fileId: string; name: string; from: number; to: number },
+): Promise<SheetGrid | null> {
+  const head = await gridOf(db, fileId);
+  const index = head?.sheets.findIndex((sheet) => sheet.name === name) ?? -1;
+  const sheet = head?.sheets[index];
+  if (head === null || sheet === undefined) return null;
+  const blocks = await db
+    .select({ cells: cellBlocks.cells })
+    .from(cellBlocks)
+    .where(
+      and(
+        eq(cellBlocks.gridId, head.id),
+        eq(cellBlocks.sheet, index),
+        lte(cellBlocks.fromRow, to),
+        gte(cellBlocks.toRow, from),
+      ),
+    )
+    .orderBy(asc(cellBlocks.fromRow));
+  const cells = blocks.flatMap((block) => block.cells).filter(({ row }) => row >= from && row <= to);
+  return { ...sheet, cells };
+}
+
+export async function gridOf(db: Database, fileId: string) {
+  const [head] = await db
+    .select()
+    .from(cellGrids)
+    .where(eq(cellGrids.fileId, fileId))
+    .orderBy(desc(cellGrids.createdAt), desc(cellGrids.id))
+    .limit(1);
+  return head ?? null;
+}
+
+function* blocksOf(cells: readonly Cell[]): Generator<{ fromRow: number; toRow: number; cells: Cell[] }> {
+  let block: { fromRow: number; toRow: number; cells: Cell[] } | null = null;
+  for (const cell of cells) {
+    const fromRow = Math.floor((cell.row - 1) / rowsPerBlock) * rowsPerBlock + 1;
+    if (block !== null && block.fromRow !== fromRow) yield block;
+    if (block === null || block.fromRow !== fromRow) {
+      block = { fromRow, toRow: fromRow + rowsPerBlock - 1, cells: [] };
+    }
+    block.cells.push(cell);
+  }
+  if (block !== null) yield block;
+}

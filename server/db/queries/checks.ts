@@ -1,0 +1,48 @@
+import { and, desc, eq, max } from 'drizzle-orm';
+import type { Database } from '../client';
+import { checks } from '../schema/checks';
+
+export type CheckRow = typeof checks.$inferSelect;
+
+/** The check that is shown of a revision, with its evidence document; null before the workbook is read. */
+export async function newestCheckOf(db: Database, revisionId: string): Promise<CheckRow | null> {
+  const [row] = await db
+    .select()
+    .from(checks)
+    .where(eq(checks.revisionId, revisionId))
+    .orderBy(desc(checks.number))
+    .limit(1);
+  return row ?? null;
+}
+
+/** The same without the evidence, for pages that only count. */
+export async function newestCheckHead(db: Database, revisionId: string) {
+  const [row] = await db
+    .select({
+      id: checks.id,
+      kind: checks.kind,
+      number: checks.number,
+      submittedOn: checks.submittedOn,
+      resolvedHash: checks.resolvedHash,
+      seal: checks.seal,
+      summary: checks.summary,
+    })
+    .from(checks)
+    .where(eq(checks.revisionId, revisionId))
+    .orderBy(desc(checks.number))
+    .limit(1);
+  return row ?? null;
+}
+
+export async function nextCheckNumber(db: Database, revisionId: string): Promise<number> {
+  const [row] = await db
+    .select({ number: max(checks.number) })
+    .from(checks)
+    .where(eq(checks.revisionId, revisionId));
+  return (row?.number ?? 0) + 1;
+}
+
+/** A draft keeps one pre-check; its findings go with it. */
+export async function removePreChecks(db: Database, revisionId: string): Promise<void> {
+  await db.delete(checks).where(and(eq(checks.revisionId, revisionId), eq(checks.kind, 'pre-check')));
+}

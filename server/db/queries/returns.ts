@@ -1,0 +1,138 @@
+import { and, asc, desc, eq, lt } from 'drizzle-orm';
+import type { Database } from '../client';
+import { rolesFromColumn } from '../roles-column';
+import { files } from '../schema/files';
+import { members, organisations, people } from '../schema/people';
+import { contacts, projects } from '../schema/projects';
+import { returns } from '../schema/returns';
+import { editions } from '../schema/rule-sets';
+import { revisions } from '../schema/submittals';
+import { outbox } from '../schema/work';
+import type { Reader } from './reader';
+
+export type ReturnRow = typeof returns.$inferSelect;
+
+/** The return of a revision. A contractor sees it once it is sent. */
+export async function findReturn(
+  db: Database,
+  reader: Reader,
+  revisionId: string,
+): Promise<ReturnRow | null> {
+  const own =
+    reader.kind === 'agency'
+      ? eq(returns.agencyId, reader.organisationId)
+      : and(eq(returns.contractorId, reader.organisationId), eq(returns.state, 'sent'));
+  const [row] = await db
+    .select()
+    .from(returns)
+    .where(and(eq(returns.revisionId, revisionId), own));
+  return row ?? null;
+}
+
+/** Locks the return for the act that signs it. */
+export async function lockReturn(
+  db: Database,
+  agencyId: string,
+  revisionId: string,
+): Promise<ReturnRow | null> {
+  const [row] = await db
+    .select()
+    .from(returns)
+    .where(and(eq(returns.revisionId, revisionId), eq(returns.agencyId, agencyId)))
+    .for('update');
+  return row ?? null;
+}
+
+export async function letterheadOf(db: Database, agencyId: string) {
+  const [row] = await db
+    .select({ letterhead: organisations.letterhead })
+    .from(organisations)
+    .where(eq(organisations.id, agencyId));
+  return row?.letterhead ?? null;
+}
+
+export function contactsOf(db: Database, agencyId: string, projectId: string) {
+  return db
+    .select({ name: contacts.name, function: contacts.function, email: contacts.email })
+    .from(contacts)
+    .innerJoin(projects, eq(projects.id, contacts.projectId))
+    .where(and(eq(contacts.projectId, projectId), eq(projects.agencyId, agencyId)))
+    .orderBy(asc(contacts.position));
+}
+
+/** The revision before this one that was submitted, for what moved. */
+export async function revisionBefore(db: Database, submittalId: string, number: number) {
+  const [row] = await db
+    .select({ id: revisions.id, number: revisions.number })
+    .from(revisions)
+    .where(and(eq(revisions.submittalId, submittalId), lt(revisions.number, number)))
+    .orderBy(desc(revisions.number))
+    .limit(1);
+  return row ?? null;
+}
+
+/** People of an organisation with a role, by name. */
+export async function peopleWithRole(db: Database, organisationId: string, role: string) {
+  const rows = await db
+    .select({ id: people.id, name: people.name, email: people.email, role: members.role })
+    .from(members)
+    .innerJoin(people, eq(people.id, members.personId))
+    .where(eq(members.organisationId, organisationId))
+    .orderBy(asc(people.name));
+  return rows.filter((row) => rolesFromColumn(row.role).some((one) => one === role));
+}
+
+export async function personById(db: Database, personId: string) {
+  const [row] = await db
+    .select({ id: people.id, name: people.name, email: people.email })
+    .from(people)
+    .where(eq(people.id, personId));
+  return row ?? null;
+}
+
+export function mailsOfReturn(db: Database, returnId: string) {
+  return db
+    .select({
+      recipients: outbox.recipients,
+      copies: outbox.copies,
+      state: outbox.state,
+      attempts: outbox.attempts,
+      lastProblem: outbox.lastProblem,
+      subject: outbox.subject,
+      text: outbox.text,
+    })
+    .from(outbox)
+    .where(and(eq(outbox.subjectKind, 'return'), eq(outbox.subjectId, returnId)))
+    .orderBy(asc(outbox.createdAt));
+}
+
+/** A stored file of the agency's or contractor's own. */
+export async function storedFile(db: Database, reader: Reader, fileId: string) {
+  const own =
+    reader.kind === 'agency'
+      ? eq(files.agencyId, reader.organisationId)
+      : eq(files.contractorId, reader.organisationId);
+  const [row] = await db
+    .select()
+    .from(files)
+    .where(and(eq(files.id, fileId), own));
+  return row ?? null;
+}
+
+export async function isStartingPoint(
+  db: Database,
+  agencyId: string,
+  base: { ruleSet: string; edition: string },
+) {
+  const [row] = await db
+    .select({ startingPoint: editions.startingPoint })
+    .from(editions)
+    .where(
+      and(
+        eq(editions.agencyId, agencyId),
+        eq(editions.ruleSetKey, base.ruleSet),
+        eq(editions.edition, base.edition),
+      ),
+    );
+  return row?.startingPoint ?? false;
+}
