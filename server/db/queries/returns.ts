@@ -1,6 +1,7 @@
 import { and, asc, desc, eq, lt } from 'drizzle-orm';
 import type { Database } from '../client';
 import { rolesFromColumn } from '../roles-column';
+import { notes, waivers } from '../schema/checks';
 import { files } from '../schema/files';
 import { members, organisations, people } from '../schema/people';
 import { contacts, projects } from '../schema/projects';
@@ -135,4 +136,29 @@ export async function isStartingPoint(
       ),
     );
   return row?.startingPoint ?? false;
+}
+
+/**
+ * A fingerprint of the notes and waivers that a letter would carry, so that one that changed while the letter was
+ * rendered is noticed. With `lock` it reads what is committed now, whatever the transaction has read before.
+ */
+export async function stampsOfReturned(
+  db: Database,
+  revisionId: string,
+  { lock = false } = {},
+): Promise<string> {
+  const noteStamps = db
+    .select({ id: notes.id, version: notes.version })
+    .from(notes)
+    .where(and(eq(notes.revisionId, revisionId), eq(notes.kind, 'to be returned')))
+    .orderBy(asc(notes.id));
+  const waiverStamps = db
+    .select({ id: waivers.id, version: waivers.version })
+    .from(waivers)
+    .where(eq(waivers.revisionId, revisionId))
+    .orderBy(asc(waivers.id));
+  const rows = lock
+    ? [...(await noteStamps.for('update')), ...(await waiverStamps.for('update'))]
+    : [...(await noteStamps), ...(await waiverStamps)];
+  return rows.map(({ id, version }) => `${id}:${version}`).join(' ');
 }

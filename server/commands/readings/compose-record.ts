@@ -1,0 +1,48 @@
+import type { ReadingResult } from '#rules/reading/reading-result';
+import type { DocumentRecord, MixRecord } from '#rules/record';
+import { type Scalar, withStandardAttributes } from '#rules/rule-sets/attribute';
+import { type AttributeSources, conflictDoubts } from '../../presenters/asked-attributes';
+
+export interface TypedAttribute {
+  name: string;
+  value: Scalar;
+  by: string;
+  /** Date in the agency's zone. */
+  on: string;
+}
+
+export interface RecordParts {
+  read: Pick<ReadingResult, 'record'>;
+  typed: readonly TypedAttribute[];
+  /** In place of those that were read: with their files, and with those added on the page. */
+  documents: DocumentRecord[];
+  edition: AttributeSources['edition'];
+  /** What the project states. */
+  facts: Record<string, Scalar>;
+}
+
+/** The canonical record: what was read, with what people said on the reading page laid over it. */
+export function composeRecord({ read, typed, documents, edition, facts }: RecordParts): MixRecord {
+  const { record } = read;
+  const attributes = { ...record.attributes };
+  const definitions = new Map(withStandardAttributes(edition.attributes).map((each) => [each.name, each]));
+  for (const { name, value, by, on } of typed) {
+    const unit = definitions.get(name)?.unit;
+    attributes[name] = {
+      value,
+      ...(unit === undefined ? {} : { unit }),
+      origin: 'typed',
+      typed: { by, on },
+      source: null,
+    };
+  }
+  const answered = new Set(typed.map(({ name }) => name));
+  const conflicts = conflictDoubts({
+    edition,
+    workbook: record.attributes,
+    facts,
+    typed: Object.fromEntries(typed.map(({ name, value }) => [name, value])),
+  });
+  const doubts = record.doubts.filter(({ about }) => !answered.has(about.attribute ?? ''));
+  return { attributes, readings: record.readings, documents, doubts: [...doubts, ...conflicts] };
+}
