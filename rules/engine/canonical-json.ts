@@ -1,0 +1,24 @@
+/**
+ * Canonical JSON (RFC 8785): no white space, members sorted by UTF-16 code units, numbers and strings as
+ * ECMAScript writes them. Members without a value are left out, as JSON has no way to write them.
+ *
+ * Throws on what JSON cannot hold (NaN, Infinity, a function): a seal over it would prove nothing.
+ *
+ * @example canonicalJson({ b: 1.0, a: 'x' }) // {"a":"x","b":1}
+ */
+export function canonicalJson(value: unknown): string {
+  if (value === null || typeof value === 'boolean' || typeof value === 'string') return JSON.stringify(value);
+  if (typeof value === 'number') {
+    if (!Number.isFinite(value))
+      throw new TypeError('Canonical JSON cannot hold a number that is not finite.');
+    return JSON.stringify(value);
+  }
+  if (Array.isArray(value)) return `[${value.map((each) => canonicalJson(each ?? null)).join(',')}]`;
+  if (typeof value !== 'object') throw new TypeError(`Canonical JSON cannot hold a ${typeof value}.`);
+  const members = Object.entries(value)
+    .filter(([, member]) => member !== undefined)
+    // RFC 8785, section 3.2.3: by UTF-16 code units, which is how ECMAScript compares strings.
+    .toSorted(([left], [right]) => (left < right ? -1 : left > right ? 1 : 0))
+    .map(([name, member]) => `${JSON.stringify(name)}:${canonicalJson(member)}`);
+  return `{${members.join(',')}}`;
+}

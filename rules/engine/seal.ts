@@ -1,0 +1,107 @@
+import { sha256 } from '@noble/hashes/sha2.js';
+import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
+import type { CheckContext, MixRecord } from '../record';
+import type { ResolvedEdition } from '../rule-sets/resolve';
+import { canonicalJson } from './canonical-json';
+import { ENGINE_VERSION } from './engine-version';
+import type { Evidence, Finding, Seal } from './finding';
+
+export interface SealedThings {
+  record: MixRecord;
+  edition: ResolvedEdition;
+  context: CheckContext;
+  findings: readonly Finding[];
+  engineVersion?: string;
+}
+
+/** The seal of a check: a hash of five hashes, each of canonical JSON. */
+export function sealOf({
+  record,
+  edition,
+  context,
+  findings,
+  engineVersion = ENGINE_VERSION,
+}: SealedThings): Seal {
+  const hashes = {
+    record: recordHash(record),
+    resolvedEdition: resolvedEditionHash(edition),
+    context: hashOf(context),
+    engineVersion: hashOf(engineVersion),
+    findings: hashOf(findings.map(judged)),
+  };
+  return { seal: hashOf(hashes), ...hashes, engine: engineVersion };
+}
+
+/** Who typed a value and when is kept beside the record, not in its hash. */
+export function recordHash(record: MixRecord): string {
+  return hashOf(withoutTyped(record));
+}
+
+/** Cases prove an edition; they are not part of what a record is judged by. */
+export function resolvedEditionHash(edition: ResolvedEdition): string {
+  const kept = editionHashes.get(edition);
+  if (kept !== undefined) return kept;
+  const { cases: _cases, ...judgedBy } = edition;
+  const hash = hashOf(judgedBy);
+  editionHashes.set(edition, hash);
+  return hash;
+}
+
+export function hashOf(value: unknown): string {
+  return bytesToHex(sha256(utf8ToBytes(canonicalJson(value))));
+}
+
+/** A resolved edition does not change, and many records are judged by it. */
+const editionHashes = new WeakMap<ResolvedEdition, string>();
+
+function withoutTyped(value: unknown): unknown {
+  if (Array.isArray(value)) return value.map(withoutTyped);
+  if (typeof value !== 'object' || value === null) return value;
+  return Object.fromEntries(
+    Object.entries(value)
+      .filter(([name]) => name !== 'typed')
+      .map(([name, member]) => [name, withoutTyped(member)]),
+  );
+}
+
+/** What was decided, without any sentence. */
+function judged(finding: Finding) {
+  const { rule, subject, severity, outcome, borderline, observed, limit, margin, evidence } = finding;
+  return {
+    rule,
+    subject,
+    severity,
+    outcome,
+    borderline,
+    observed: observed && {
+      value: observed.value,
+      rounded: observed.rounded,
+      unit: observed.unit,
+      statistic: observed.statistic,
+      count: observed.count,
+    },
+    limit: limit && {
+      min: limit.min,
+      max: limit.max,
+      minExclusive: limit.minExclusive,
+      maxExclusive: limit.maxExclusive,
+      target: limit.target,
+      tolerance: limit.tolerance,
+      oneOf: limit.oneOf,
+      unit: limit.unit,
+    },
+    margin,
+    evidence: evidence.map(evidenceValues),
+  };
+}
+
+function evidenceValues(evidence: Evidence): unknown {
+  return {
+    quantity: evidence.quantity,
+    value: evidence.value,
+    text: evidence.text,
+    unit: evidence.unit,
+    origin: evidence.origin,
+    inputs: evidence.inputs?.map(evidenceValues),
+  };
+}
