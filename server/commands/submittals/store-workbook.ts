@@ -9,8 +9,8 @@ import type { UploadedFile } from '../../routes/define-route';
 
 export interface NewFile {
   tenant: { agencyId: string; contractorId: string };
-  kind: 'workbook' | 'document';
-  file: UploadedFile;
+  kind: (typeof files.$inferInsert)['kind'];
+  file: Pick<UploadedFile, 'fileName' | 'bytes'>;
   mediaType: string;
   createdById: string;
 }
