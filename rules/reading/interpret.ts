@@ -71,12 +71,14 @@ function readRule(
   for (const [at, anchor] of anchors.entries()) {
     const bound = bindRule(index, rule, anchor);
     markLabels(bound, context);
-    if (rule.quantity === labelQuantity) continue;
     const next = anchors
       .slice(at + 1)
       .find(({ cell }) => cell.row > anchor.cell.row && cell.column === anchor.cell.column);
     const cells = valueCells(index, rule, anchor, next?.cell.row ?? null);
-    if (rule.quantity === documentQuantity) {
+    if (rule.quantity === labelQuantity) {
+      const furniture = rule.axis === 'right' && rule.range.most === null ? [] : cells;
+      for (const cell of furniture) context.log.use(placeOf(index.sheet, cell), 'label', 'A label.');
+    } else if (rule.quantity === documentQuantity) {
       for (const cell of cells) readDocument(bound, cell, withStandardDocuments(edition.documents), context);
     } else if (!isReference(rule.quantity) && rule.quantity.startsWith(attributePrefix)) {
       const attribute = attributeNamed(rule.quantity.slice(attributePrefix.length), edition);
@@ -95,8 +97,10 @@ function attributeNamed(name: string, edition: ReadingEdition) {
 }
 
 function markUnits(bound: RuleAtAnchor, cells: Cell[], context: ReadingContext): void {
-  for (const cell of cells) {
-    const unitCell = bound.locators.get('unit')?.cellFor(cell);
+  // Beside a label the unit stands ready before there is a value.
+  const places = bound.rule.axis === 'right' ? [bound.anchor.cell, ...cells] : cells;
+  for (const place of places) {
+    const unitCell = bound.locators.get('unit')?.cellFor(place);
     if (unitCell) context.log.use(placeOf(bound.index.sheet, unitCell), 'label', 'A unit.');
   }
 }
@@ -105,12 +109,14 @@ function markUnits(bound: RuleAtAnchor, cells: Cell[], context: ReadingContext):
 function markKeys(bound: RuleAtAnchor, nextRow: number | null, context: ReadingContext): void {
   const { index, anchor, rule, locators } = bound;
   if (rule.axis === 'right') return;
+  const lastColumn = anchor.cell.column + index.spanOf(anchor.cell).columns - 1;
   for (const [name, locator] of locators) {
     if (!(name in conditionsSchema.shape) && !['method', 'testedOn', 'quantity', 'unit'].includes(name))
       continue;
     for (const cell of index.sheet.cells) {
       if (cell.row <= anchor.cell.row || (nextRow !== null && cell.row >= nextRow)) continue;
-      const key = locator.cellFor({ row: cell.row, column: anchor.cell.column });
+      const inAnchor = cell.column >= anchor.cell.column && cell.column <= lastColumn;
+      const key = locator.cellFor({ row: cell.row, column: inAnchor ? cell.column : anchor.cell.column });
       if (key === cell) context.log.use(placeOf(index.sheet, cell), 'label', 'A key.');
     }
   }
