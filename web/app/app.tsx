@@ -2,8 +2,8 @@ import { QueryClientProvider } from '@tanstack/react-query';
 import { useEffect, useMemo } from 'react';
 import { RouterProvider } from 'react-router-dom';
 import { Announcer } from '../components/ui/announcer';
-import { listenForShortcuts } from '../lib/shortcuts';
 import { queryClient } from '../lib/client';
+import { listenForShortcuts } from '../lib/shortcuts';
 import { createRouter } from './router';
 
 export function App() {

@@ -24,7 +24,11 @@ export function RootLayout() {
 export function PageLoading() {
   return (
     <main id="content" className="page">
-      <LoadingBars what="Opening the page." rows={6} whenLong="The server is slow to answer; the page opens as soon as it does." />
+      <LoadingBars
+        what="Opening the page."
+        rows={6}
+        whenLong="The server is slow to answer; the page opens as soon as it does."
+      />
     </main>
   );
 }

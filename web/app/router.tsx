@@ -1,6 +1,6 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 import { NotFoundPage } from './not-found-page';
-import { RootLayout, rootLoader } from './root-layout';
+import { RootLayout } from './root-layout';
 import { RouteProblem, ShellProblem } from './route-problem';
 import { SignedInLayout, signedInLoader } from './signed-in-layout';
 
@@ -28,7 +28,6 @@ export function createRouter() {
   return createBrowserRouter([
     {
       element: <RootLayout />,
-      loader: rootLoader,
       errorElement: <ShellProblem />,
       children: [
         { errorElement: <RouteProblem />, children: open },
@@ -37,7 +36,10 @@ export function createRouter() {
           loader: signedInLoader,
           errorElement: <ShellProblem />,
           children: [
-            { errorElement: <RouteProblem />, children: [...signedIn, { path: '*', element: <NotFoundPage /> }] },
+            {
+              errorElement: <RouteProblem />,
+              children: [...signedIn, { path: '*', element: <NotFoundPage /> }],
+            },
           ],
         },
       ],

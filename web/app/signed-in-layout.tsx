@@ -13,7 +13,8 @@ export async function signedInLoader({ request }: { request: Request }) {
   const { pathname, search } = new URL(request.url);
   try {
     const session = await queryClient.ensureQueryData(sessionQuery());
-    if (session.active === null && pathname !== paths.chooseOrganisation) return redirect(paths.chooseOrganisation);
+    if (session.active === null && pathname !== paths.chooseOrganisation)
+      return redirect(paths.chooseOrganisation);
     return null;
   } catch (error) {
     if (error instanceof Problem && error.slug === 'not-signed-in') {

@@ -18,7 +18,9 @@ export function OrganisationMenu({ session }: { session: Session }) {
     <span className="head-organisation">
       <Menu
         label="Organisation to act for"
-        trigger={<AriaButton className="head-menu">{session.active?.organisationName ?? 'Choose'}</AriaButton>}
+        trigger={
+          <AriaButton className="head-menu">{session.active?.organisationName ?? 'Choose'}</AriaButton>
+        }
       >
         {session.memberships.map((membership) => (
           <MenuItem
@@ -29,7 +31,9 @@ export function OrganisationMenu({ session }: { session: Session }) {
           >
             {membership.organisationName}
             <small>
-              {membership.organisationId === session.active?.organisationId ? 'now' : membership.roles.join(', ')}
+              {membership.organisationId === session.active?.organisationId
+                ? 'now'
+                : membership.roles.join(', ')}
             </small>
           </MenuItem>
         ))}

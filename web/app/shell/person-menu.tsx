@@ -7,7 +7,11 @@ export function PersonMenu({ session }: { session: Session }) {
   return (
     <Menu
       label="You and this page"
-      trigger={<AriaButton className="head-menu head-menu-person head-menu-only-wide">{session.person.name}</AriaButton>}
+      trigger={
+        <AriaButton className="head-menu head-menu-person head-menu-only-wide">
+          {session.person.name}
+        </AriaButton>
+      }
     >
       <PersonMenuItems />
     </Menu>

@@ -57,7 +57,10 @@ function Scale({ geometry: { width, lane, decades, middle, ticks, otherTicks, re
         <path key={x} className="tick tick-other" d={`M${at(x)} 1V20`} />
       ))}
       {reported === null ? null : (
-        <path className="reported" d={`M${at(reported - 4)} 2.5L${at(reported)} 8.5L${at(reported + 4)} 2.5Z`} />
+        <path
+          className="reported"
+          d={`M${at(reported - 4)} 2.5L${at(reported)} 8.5L${at(reported + 4)} 2.5Z`}
+        />
       )}
     </>
   );

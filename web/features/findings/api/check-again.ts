@@ -1,0 +1,20 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { checkAgain } from '#shared/contracts/checks';
+import { announce } from '../../../lib/announce';
+import { call } from '../../../lib/api';
+import { checkQuery } from '../../../lib/queries/check-query';
+import { type RevisionParams, revisionKey } from '../../../lib/queries/revision-query';
+import { changedOutcomes } from '../lib/changed-outcomes';
+
+export function useCheckAgain(params: RevisionParams) {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => call(checkAgain, { params, body: {} }),
+    onSuccess: (check) => {
+      const before = client.getQueryData(checkQuery(params).queryKey);
+      announce(changedOutcomes(before?.findings ?? [], check.findings));
+      client.setQueryData(checkQuery(params).queryKey, check);
+      return client.invalidateQueries({ queryKey: revisionKey(params) });
+    },
+  });
+}

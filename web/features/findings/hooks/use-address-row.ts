@@ -1,0 +1,32 @@
+import { useEffect, useRef } from 'react';
+import { useLocation } from 'react-router-dom';
+import { findingKey } from '#rules/engine/finding';
+import type { useLedgerState } from './use-ledger-state';
+
+/** Follows the fragment of the address: opens its row, unfolds its group, brings it into sight and focus. */
+export function useAddressRow(state: ReturnType<typeof useLedgerState>): void {
+  const location = useLocation();
+  const latest = useRef(state);
+  latest.current = state;
+  // biome-ignore lint/correctness/useExhaustiveDependencies: only a new address moves the reader, never a changed ledger.
+  useEffect(() => {
+    const { addressed, groups, show, setUnfolded } = latest.current;
+    const byHand: unknown = location.state;
+    if (!addressed || isByHand(byHand)) return;
+    const key = findingKey(addressed);
+    const group = groups.find((each) => each.folded.some((row) => row.key === key));
+    if (group) setUnfolded(group.id, true);
+    show(key);
+    requestAnimationFrame(() => focusRow(key));
+  }, [location.key, location.hash]);
+}
+
+export function focusRow(key: string): void {
+  const button = document.querySelector<HTMLElement>(`[data-row="${CSS.escape(key)}"]`);
+  button?.focus({ preventScroll: true });
+  button?.closest('.ledger-entry')?.scrollIntoView({ block: 'center' });
+}
+
+function isByHand(state: unknown): boolean {
+  return typeof state === 'object' && state !== null && 'byHand' in state;
+}

@@ -1,0 +1,26 @@
+import type { Finding } from '#rules/engine/finding';
+
+/** The requirement with its key words set apart: the quantity or document that it is about. */
+export function requirementParts({ requirement, title }: Pick<Finding, 'requirement' | 'title'>): {
+  before: string;
+  key: string;
+  after: string;
+} {
+  const start = requirement.toLowerCase().indexOf(title.toLowerCase());
+  if (start >= 0 && start <= 3) {
+    const end = start + title.length;
+    return {
+      before: requirement.slice(0, start),
+      key: requirement.slice(start, end),
+      after: requirement.slice(end),
+    };
+  }
+  const verb = / (?:is|are|of|at|on|after|passing|has|have|does|not older) /.exec(requirement);
+  if (!verb || verb.index > 60) return { before: '', key: '', after: requirement };
+  const article = /^(?:An?|The) /.exec(requirement)?.[0] ?? '';
+  return {
+    before: article,
+    key: requirement.slice(article.length, verb.index),
+    after: requirement.slice(verb.index),
+  };
+}
