@@ -15,10 +15,12 @@ export const paths = {
     `/submittals/${submittalId}/r/${number}/reading${searchOf(at)}`,
   gradation: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/gradation`,
   return: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/return`,
+  replaceWorkbook: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/workbook`,
   nextRevision: (submittalId: string) => `/submittals/${submittalId}/next`,
   projects: '/projects',
   newProject: '/projects/new',
   project: (projectId: string) => `/projects/${projectId}`,
+  changeProject: (projectId: string) => `/projects/${projectId}/change`,
   ruleSets: '/rule-sets',
   ruleSet: (ruleSetId: string, edition: string, layers: readonly string[] = []) =>
     `/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}${searchOf(
@@ -27,6 +29,7 @@ export const paths = {
   people: '/people',
   settings: '/settings',
   caughtMail: '/caught-mail',
+  oneCaughtMail: (mailId: string) => `/caught-mail/${mailId}`,
 } as const;
 
 function searchOf(query: Record<string, string | undefined> | undefined): string {

@@ -1,0 +1,103 @@
+import { type ReactNode, useId } from 'react';
+import { Radio, RadioGroup } from 'react-aria-components';
+import { RichText } from '../../../components/ui/rich-text';
+import { choicesOf, doubtCountWords, isAt, type ReadingDoubt } from '../lib/doubt-answers';
+import type { Place } from '../lib/first-place';
+
+/** Every doubt with its letter, its cell and what the cell may mean; one answer each, which can be changed. */
+export function DoubtList({
+  doubts,
+  cursor,
+  onCursor,
+  onAnswer,
+  canAnswer,
+  excerptOf,
+}: {
+  doubts: readonly ReadingDoubt[];
+  cursor: Place;
+  onCursor: (place: Place) => void;
+  onAnswer: (doubt: ReadingDoubt, answer: string | null) => void;
+  canAnswer: boolean;
+  /** On a narrow page each doubt carries the rows around its cell. */
+  excerptOf?: (doubt: ReadingDoubt) => ReactNode;
+}) {
+  return (
+    <section aria-labelledby="in-doubt">
+      <div className="side-head">
+        <h2 id="in-doubt">In doubt</h2>
+        <span>{doubtCountWords(doubts)}</span>
+      </div>
+      {doubts.length === 0 ? (
+        <p className="small mute py-2">Every cell that was used was read with certainty.</p>
+      ) : (
+        <ol>
+          {doubts.map((doubt) => (
+            <DoubtItem
+              key={`${doubt.sheet}!${doubt.cell}!${doubt.reason}`}
+              doubt={doubt}
+              isCurrent={isAt(doubt, cursor)}
+              onCursor={() => onCursor({ sheet: doubt.sheet, cell: doubt.cell })}
+              onAnswer={(answer) => onAnswer(doubt, answer)}
+              canAnswer={canAnswer}
+              excerpt={excerptOf?.(doubt)}
+            />
+          ))}
+        </ol>
+      )}
+    </section>
+  );
+}
+
+function DoubtItem({
+  doubt,
+  isCurrent,
+  onCursor,
+  onAnswer,
+  canAnswer,
+  excerpt,
+}: {
+  doubt: ReadingDoubt;
+  isCurrent: boolean;
+  onCursor: () => void;
+  onAnswer: (answer: string | null) => void;
+  canAnswer: boolean;
+  excerpt: ReactNode;
+}) {
+  const questionId = useId();
+  return (
+    <li id={doubtId(doubt)} className={isCurrent ? 'doubt is-current' : 'doubt'}>
+      <span className="tie tie-doubt">{doubt.letter}</span>
+      <p id={questionId}>
+        <button type="button" className="cell-link" onClick={onCursor}>
+          {doubt.sheet ? `${doubt.sheet} ${doubt.cell}` : doubt.cell}
+        </button>{' '}
+        <RichText>{doubt.reason}</RichText>
+      </p>
+      {excerpt}
+      <RadioGroup
+        aria-labelledby={questionId}
+        className="doubt-choices"
+        value={doubt.answer}
+        onChange={onAnswer}
+        onFocus={onCursor}
+        isDisabled={!canAnswer}
+        orientation="horizontal"
+      >
+        {choicesOf(doubt).map(({ answer, label }) => (
+          <Radio key={answer} value={answer} className="choice choice-radio">
+            {label}
+          </Radio>
+        ))}
+      </RadioGroup>
+      {doubt.answer !== null && canAnswer ? (
+        <button type="button" className="cell-link small" onClick={() => onAnswer(null)}>
+          Take the answer back
+        </button>
+      ) : null}
+    </li>
+  );
+}
+
+export function doubtId(doubt: { sheet: string; cell: string }): string {
+  return `doubt-${encodeURIComponent(doubt.sheet)}-${doubt.cell}`;
+}

@@ -1,0 +1,80 @@
+import { Link } from 'react-router-dom';
+import type { ReadingView } from '#shared/contracts/readings';
+import { RichText } from '../../../components/ui/rich-text';
+import { paths } from '../../../lib/paths';
+import type { RevisionParams } from '../../../lib/queries/revision-query';
+import { groupUnread } from '../lib/group-unread';
+
+/** What was understood, in groups, each with its first cell. */
+export function Understood({ params, reading }: { params: RevisionParams; reading: ReadingView }) {
+  const { readings, attributes, documents } = reading.counts;
+  return (
+    <section aria-labelledby="understood">
+      <div className="side-head">
+        <h2 id="understood">Understood</h2>
+        <span>{`${count(readings, 'reading')}, ${count(attributes, 'attribute')}, ${count(documents, 'document')}`}</span>
+      </div>
+      {reading.understood.length === 0 ? (
+        <p className="small mute py-2">
+          No reading was understood. The template of the section is always read.
+        </p>
+      ) : (
+        <ul>
+          {reading.understood.map((group) => (
+            <li key={`${group.label} ${group.sheet} ${group.cell}`} className="understood">
+              <span>
+                <RichText>{group.label}</RichText>
+              </span>
+              <span className="number">{group.count}</span>
+              <CellLink params={params} sheet={group.sheet} cell={group.cell} />
+            </li>
+          ))}
+        </ul>
+      )}
+    </section>
+  );
+}
+
+/** Cells that hold something and were not used, with the reason. */
+export function NotUsed({ params, reading }: { params: RevisionParams; reading: ReadingView }) {
+  const groups = groupUnread(reading.unread);
+  return (
+    <section aria-labelledby="not-used">
+      <div className="side-head">
+        <h2 id="not-used">Not used</h2>
+        <span>{`${count(reading.unread.length, 'cell')} ${reading.unread.length === 1 ? 'holds' : 'hold'} something`}</span>
+      </div>
+      {groups.length === 0 ? (
+        <p className="small mute py-2">Every cell that holds something was used.</p>
+      ) : (
+        <ul>
+          {groups.map((group) => (
+            <li key={`${group.sheet} ${group.cell}`} className="not-used">
+              <CellLink params={params} sheet={group.sheet} cell={group.cell} />
+              <span>
+                <RichText>{group.reason}</RichText>
+                {group.text === null ? `; ${count(group.count, 'cell')}` : ` “${shortened(group.text)}”`}
+              </span>
+            </li>
+          ))}
+        </ul>
+      )}
+    </section>
+  );
+}
+
+function CellLink({ params, sheet, cell }: { params: RevisionParams; sheet: string; cell: string }) {
+  return (
+    <Link to={paths.reading(params.submittalId, params.number, { sheet, cell })} replace preventScrollReset>
+      {`${sheet} ${cell}`.trim()}
+    </Link>
+  );
+}
+
+function count(number: number, word: string): string {
+  return `${number} ${number === 1 ? word : `${word}s`}`;
+}
+
+function shortened(text: string): string {
+  return text.length > 60 ? `${text.slice(0, 57)}…` : text;
+}

@@ -1,0 +1,32 @@
+import { type LoaderFunctionArgs, type ShouldRevalidateFunctionArgs, useParams } from 'react-router-dom';
+import { queryClient } from '../../lib/client';
+import { revisionQuery } from '../../lib/queries/revision-query';
+import { readingQuery } from './api/get-reading';
+import { ReadingPage } from './components/reading-page';
+
+export async function loader({ params }: LoaderFunctionArgs) {
+  const revision = revisionOf(params);
+  await Promise.all([
+    queryClient.ensureQueryData(revisionQuery(revision)),
+    queryClient.ensureQueryData(readingQuery(revision)),
+  ]);
+  return null;
+}
+
+/** The address names the cell at the cursor; moving it asks the server for nothing new. */
+export function shouldRevalidate({
+  currentUrl,
+  nextUrl,
+  defaultShouldRevalidate,
+}: ShouldRevalidateFunctionArgs) {
+  return currentUrl.pathname === nextUrl.pathname ? false : defaultShouldRevalidate;
+}
+
+export function Component() {
+  const params = revisionOf(useParams());
+  return <ReadingPage key={`${params.submittalId} ${params.number}`} params={params} />;
+}
+
+function revisionOf(params: { submittalId?: string | undefined; number?: string | undefined }) {
+  return { submittalId: params.submittalId ?? '', number: Number(params.number) };
+}
