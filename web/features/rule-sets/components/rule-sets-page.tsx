@@ -1,0 +1,76 @@
+import { useSuspenseQuery } from '@tanstack/react-query';
+import { Link } from 'react-router-dom';
+import type { EditionListItem } from '#shared/contracts/rule-sets';
+import { cautions } from '../../../components/ui/cautions';
+import { EmptyState } from '../../../components/ui/empty-state';
+import { PlainPage } from '../../../components/ui/margin-page';
+import { PageHead } from '../../../components/ui/page-head';
+import { RunningFoot } from '../../../components/ui/running-foot';
+import { SectionHead } from '../../../components/ui/section-head';
+import { paths } from '../../../lib/paths';
+import { usePageTitle } from '../../../lib/use-page-title';
+import { ruleSetsQuery } from '../api/get-rule-sets';
+import { effectiveWords } from '../lib/edition-words';
+
+/** Rule sets with their editions; layers stand under the edition they sit over. */
+export function RuleSetsPage() {
+  usePageTitle('Rule sets');
+  const { ruleSets } = useSuspenseQuery(ruleSetsQuery()).data;
+  const startingPoint = ruleSets.some((set) => set.editions.some((edition) => edition.startingPoint));
+  return (
+    <PlainPage>
+      <PageHead title="Rule sets" rest="and their editions" />
+      {ruleSets.length === 0 ? (
+        <EmptyState title="No rule set is here yet.">
+          It stands here once an edition is published or named by a project.{' '}
+          <Link to={paths.projects}>See the projects</Link>
+        </EmptyState>
+      ) : null}
+      {ruleSets.map((set) => (
+        <section key={set.id} aria-label={set.title}>
+          <SectionHead title={set.title} about={set.agency} />
+          <EditionTable ruleSetId={set.id} editions={set.editions} />
+        </section>
+      ))}
+      <RunningFoot texts={startingPoint ? [cautions.startingPoint, cautions.contract] : [cautions.contract]} />
+    </PlainPage>
+  );
+}
+
+function EditionTable({ ruleSetId, editions }: { ruleSetId: string; editions: readonly EditionListItem[] }) {
+  return (
+    <div className="sideways">
+      <table className="table table-head-over">
+        <caption className="hidden-text">Editions of {ruleSetId}</caption>
+        <thead>
+          <tr>
+            <th scope="col">Edition</th>
+            <th scope="col">State</th>
+            <th scope="col">In effect</th>
+            <th scope="col">Sits over</th>
+            <th scope="col" className="number">
+              Rules
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {editions.map((edition) => (
+            <tr key={`${edition.ruleSet}@${edition.edition}`}>
+              <th scope="row">
+                <Link to={paths.ruleSet(edition.ruleSet, edition.edition)}>
+                  {edition.ruleSet === ruleSetId ? edition.edition : `${edition.title}, ${edition.edition}`}
+                </Link>
+              </th>
+              <td>{edition.state === 'in force' ? <b>in force</b> : edition.state}</td>
+              <td>{effectiveWords(edition)}</td>
+              <td>
+                {edition.layerOf ? `${edition.layerOf.ruleSet}, edition ${edition.layerOf.edition}` : ''}
+              </td>
+              <td className="number">{edition.rules}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
+  );
+}
