@@ -4,6 +4,7 @@ import { organization } from 'better-auth/plugins/organization';
 import type { Logger } from 'pino';
 import { limits } from '#shared/limits';
 import type { Database } from '../db/client';
+import { onlyOrganisationOf } from '../db/queries/memberships';
 import {
   accounts,
   invitations,
@@ -68,6 +69,15 @@ export function createAuth({ db, secret, publicUrl, newId, log, sendPasswordRese
       sendResetPassword: ({ user, token }) => sendPasswordReset(user, token),
     },
     rateLimit: { enabled: false },
+    databaseHooks: {
+      session: {
+        create: {
+          before: async (session) => ({
+            data: { ...session, activeOrganizationId: await onlyOrganisationOf(db, session.userId) },
+          }),
+        },
+      },
+    },
     advanced: {
       cookiePrefix: 'clauseway',
       useSecureCookies: publicUrl.startsWith('https:'),
