@@ -15,7 +15,7 @@ export const paths = {
     `/submittals/${submittalId}/r/${number}/reading${searchOf(at)}`,
   gradation: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/gradation`,
   return: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/return`,
-  replaceWorkbook: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/workbook`,
+  workbook: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/workbook`,
   nextRevision: (submittalId: string) => `/submittals/${submittalId}/next`,
   projects: '/projects',
   newProject: '/projects/new',
@@ -28,6 +28,7 @@ export const paths = {
     )}`,
   people: '/people',
   settings: '/settings',
+  laboratories: '/laboratories',
   caughtMail: '/caught-mail',
   oneCaughtMail: (mailId: string) => `/caught-mail/${mailId}`,
 } as const;

@@ -4,6 +4,7 @@ import { colourOfMark, type MarkName, wordOfMark } from './marks';
 /** Drawn on a 16 px grid, shown at 14. Beside its word it is hidden from screen readers; alone it says the word. */
 export function Mark({ name, alone = false }: { name: MarkName; alone?: boolean }) {
   return (
+    // biome-ignore lint/a11y/noSvgWithoutTitle: a mark either stands beside its word or carries it as its label.
     <svg
       className={`mark ${colourOfMark[name]}`}
       viewBox="0 0 16 16"

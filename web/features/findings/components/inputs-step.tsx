@@ -57,7 +57,7 @@ function InputList({
                 ) : (
                   `${evidenceName(input)} `
                 )}
-                {valueOf(input)} {tie ? <TieButton tie={tie} onShow={onShow} /> : null}{' '}
+                {inputValue(input)} {tie ? <TieButton tie={tie} onShow={onShow} /> : null}{' '}
                 <span className="origin">
                   {[input.origin, placeWords(input), input.method].filter(Boolean).join(', ')}
                 </span>
@@ -76,7 +76,7 @@ function InputList({
   );
 }
 
-function valueOf(input: Evidence): string {
+function inputValue(input: Evidence): string {
   if (input.value === null) return input.text ?? '';
   return withUnit(formatPlain(input.value), input.unit);
 }

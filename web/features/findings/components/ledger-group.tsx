@@ -12,19 +12,21 @@ export function LedgerGroup({ group }: { group: Group }) {
   const isUnfolded = unfolded.has(group.id);
   const shown = isUnfolded ? inOrder(group, check.findings) : group.rows;
   return (
-    <div role="rowgroup">
-      <div className="ledger-group" role="row">
-        <div role="cell">{group.section}</div>
-        <div role="cell" aria-colspan={6}>
-          <h2>{group.title}</h2>
-          {group.about ? <span className="group-tally">{group.about}</span> : null}
-        </div>
-      </div>
+    <>
+      <tbody>
+        <tr className="ledger-group">
+          <td>{group.section}</td>
+          <td colSpan={6}>
+            <h2>{group.title}</h2>
+            {group.about ? <span className="group-tally">{group.about}</span> : null}
+          </td>
+        </tr>
+      </tbody>
       {shown.map((row) => (
         <LedgerRow key={row.key} row={row} />
       ))}
       {group.folded.length > 0 ? <FoldLine group={group} isUnfolded={isUnfolded} /> : null}
-    </div>
+    </>
   );
 }
 
@@ -35,24 +37,26 @@ function FoldLine({ group, isUnfolded }: { group: Group; isUnfolded: boolean }) 
   const hasGradation = folded.some(({ finding }) => finding.kind === 'gradation');
   const count = group.rows.length > 0 ? `${folded.length} more` : String(folded.length);
   return (
-    <div className="ledger-fold" role="row">
-      <div role="cell" className="whitespace-nowrap">
-        <Mark name={applies ? 'pass' : 'na'} />
-        {count}
-      </div>
-      <div role="cell" aria-colspan={6}>
-        {isUnfolded ? null : <>{applies ? foldedPassLine(folded) : foldedNotApplicableLine(folded)} </>}
-        <Button kind="inline" onPress={() => setUnfolded(group.id, !isUnfolded)} aria-expanded={isUnfolded}>
-          {isUnfolded ? 'Fold' : 'Unfold'}
-        </Button>
-        {hasGradation ? (
-          <>
-            {', '}
-            <Link to={paths.gradation(params.submittalId, params.number)}>gradation chart</Link>
-          </>
-        ) : null}
-      </div>
-    </div>
+    <tbody>
+      <tr className="ledger-fold">
+        <td className="whitespace-nowrap">
+          <Mark name={applies ? 'pass' : 'na'} />
+          {count}
+        </td>
+        <td colSpan={6}>
+          {isUnfolded ? null : <>{applies ? foldedPassLine(folded) : foldedNotApplicableLine(folded)} </>}
+          <Button kind="inline" onPress={() => setUnfolded(group.id, !isUnfolded)} aria-expanded={isUnfolded}>
+            {isUnfolded ? 'Fold' : 'Unfold'}
+          </Button>
+          {hasGradation ? (
+            <>
+              {', '}
+              <Link to={paths.gradation(params.submittalId, params.number)}>gradation chart</Link>
+            </>
+          ) : null}
+        </td>
+      </tr>
+    </tbody>
   );
 }
 

@@ -28,9 +28,9 @@ export function LedgerRow({ row }: { row: Row }) {
     isOpen ? 'is-open' : '',
   ];
   return (
-    <div className={classes.filter((each) => each !== '').join(' ')} id={fragment} role="presentation">
-      <div className="ledger-row" role="row">
-        <div className="ledger-clause" role="rowheader">
+    <tbody className={classes.filter((each) => each !== '').join(' ')} id={fragment}>
+      <tr className="ledger-row">
+        <th className="ledger-clause" scope="row">
           <button
             type="button"
             className="clause-button"
@@ -41,33 +41,33 @@ export function LedgerRow({ row }: { row: Row }) {
           >
             <ClauseOf row={row} />
           </button>
-        </div>
+        </th>
         <Requirement row={row} />
         <Observed row={row} />
         <GaugeCell row={row} />
-        <div className="ledger-margin" role="cell">
+        <td className="ledger-margin">
           {marginText(finding)}
           <span className="margin-mark">{finding.borderline ? <Mark name="borderline" /> : null}</span>
-        </div>
-        <div className="ledger-outcome" role="cell">
+        </td>
+        <td className="ledger-outcome">
           <OutcomeWord
             outcome={finding.outcome}
             waived={row.waiver !== null && finding.outcome === 'fail'}
             qualifiers={outcomeQualifiers(finding)}
           />
-        </div>
-        <div className="ledger-notes" role="cell">
+        </td>
+        <td className="ledger-notes">
           <MarginNotes row={row} isOpen={isOpen} />
-        </div>
-      </div>
+        </td>
+      </tr>
       {isOpen ? (
-        <div role="row" id={`${fragment}-evidence`}>
-          <div role="cell" aria-colspan={7}>
+        <tr className="ledger-evidence" id={`${fragment}-evidence`}>
+          <td colSpan={7}>
             <EvidenceThread finding={finding} />
-          </div>
-        </div>
+          </td>
+        </tr>
       ) : null}
-    </div>
+    </tbody>
   );
 }
 
@@ -89,14 +89,14 @@ function ClauseOf({ row: { finding } }: { row: Row }) {
 function Requirement({ row: { finding } }: { row: Row }) {
   const { before, key, after } = requirementParts(finding);
   return (
-    <div className="ledger-sentence" role="cell">
+    <td className="ledger-sentence">
       <RichText>{before}</RichText>
       <b>
         <RichText>{key}</RichText>
       </b>
       <RichText>{after}</RichText>
       {finding.outcome === 'not applicable' ? <span className="mute"> {finding.reason}</span> : null}
-    </div>
+    </td>
   );
 }
 
@@ -107,7 +107,7 @@ function Observed({ row: { finding, moved } }: { row: Row }) {
     observed !== null && finding.outcome !== 'not shown' && finding.outcome !== 'not applicable';
   const previous = moved?.previousText ?? null;
   return (
-    <div className={`ledger-observed${words ? ' is-words' : ''}`} role="cell">
+    <td className={`ledger-observed${words ? ' is-words' : ''}`}>
       {isShown ? (
         <>
           {words ? observed.text : groupThousands(observed.text)}
@@ -120,15 +120,15 @@ function Observed({ row: { finding, moved } }: { row: Row }) {
           <del>{previous}</del>
         </span>
       ) : null}
-    </div>
+    </td>
   );
 }
 
 function GaugeCell({ row: { finding } }: { row: Row }) {
   const widthPx = useGaugeWidth();
   return (
-    <div className="ledger-gauge" role="cell">
+    <td className="ledger-gauge">
       <Gauge finding={finding} widthPx={widthPx} />
-    </div>
+    </td>
   );
 }

@@ -30,8 +30,8 @@ export function GradationAside({
         ))}
       </ul>
       <p className="small mute pt-4">
-        Fine lines are the sieves of the series; US names stand in the table. A bar is what the rule allows on its
-        sieve, a single tick leaves the other side open.
+        Fine lines are the sieves of the series; US names stand in the table. A bar is what the rule allows on
+        its sieve, a single tick leaves the other side open.
       </p>
     </>
   );

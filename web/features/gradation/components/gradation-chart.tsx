@@ -24,6 +24,7 @@ export function GradationChart({
   const geometry = gradationGeometry(points, maximumSizeMm, size);
   return (
     <figure>
+      {/* biome-ignore lint/a11y/useSemanticElements: a drawing whose points are links is a group, and SVG has no other word for it. */}
       <svg
         className="chart"
         viewBox={`0 0 ${size.widthPx} ${size.heightPx}`}

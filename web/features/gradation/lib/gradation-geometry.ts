@@ -64,8 +64,7 @@ export function gradationGeometry(
     controls: sorted
       .filter((point) => point.min !== null || point.max !== null)
       .map((point) => controlOf(point, x(point.sieve), y, frame)),
-    maximumDensity:
-      maximumSizeMm === null ? null : { x1: x(0), y1: y(0), x2: x(maximumSizeMm), y2: y(100) },
+    maximumDensity: maximumSizeMm === null ? null : { x1: x(0), y1: y(0), x2: x(maximumSizeMm), y2: y(100) },
     blend:
       line<PlacedPoint>()
         .x((each) => each.x)
@@ -113,7 +112,8 @@ function labelled(sieves: readonly { sieve: number; x: number }[]): GradationGeo
   const smallest = sieves[sieves.length - 1];
   return sieves.map(({ sieve, x }) => {
     const roomToLast = last - x >= labelRoomPx;
-    const roomToSmallest = smallest === undefined || smallest.sieve === sieve || x - smallest.x >= labelRoomPx;
+    const roomToSmallest =
+      smallest === undefined || smallest.sieve === sieve || x - smallest.x >= labelRoomPx;
     const label = roomToLast && roomToSmallest ? formatPlain(sieve) : null;
     if (label !== null) last = x;
     return { sieve, x, label };

@@ -42,7 +42,10 @@ export function LimitTable({ table, view }: { table: TableView; view: RuleSetVie
                   return column?.key ? (
                     <td key={column.name}>{cell}</td>
                   ) : (
-                    <td key={column?.name ?? index} className={`number${row.displaced ? ' changed-new' : ''}`}>
+                    <td
+                      key={column?.name ?? index}
+                      className={`number${row.displaced ? ' changed-new' : ''}`}
+                    >
                       {cell}
                     </td>
                   );

@@ -38,8 +38,8 @@ export function RuleSetAside({ view }: { view: RuleSetView }) {
       </ul>
       <h2>Proof</h2>
       <p className="small mute">
-        {countOf(view.ruleViews.length, 'rule')}, {countOf(view.caseCount, 'case')} kept with the edition. Resolved{' '}
-        <span className="font-mono">{view.hash.slice(0, 12)}</span>.
+        {countOf(view.ruleViews.length, 'rule')}, {countOf(view.caseCount, 'case')} kept with the edition.
+        Resolved <span className="font-mono">{view.hash.slice(0, 12)}</span>.
       </p>
     </>
   );

@@ -36,7 +36,9 @@ export function RuleSetPage() {
             kicker={`${view.agency} · ${view.state} · ${effectiveWords(view)}`}
             title={view.title}
             rest={`edition ${view.edition}`}
-            lede={view.layers.length > 0 ? `with ${view.layers.map((layer) => layer.title).join(' and ')}` : null}
+            lede={
+              view.layers.length > 0 ? `with ${view.layers.map((layer) => layer.title).join(' and ')}` : null
+            }
           />
           {groups.map((group) => (
             <section key={group.section} aria-label={group.section}>
@@ -61,7 +63,10 @@ export function RuleSetPage() {
 }
 
 function footTexts(view: RuleSetView): string[] {
-  const texts = [stateCaution(view.state), view.startingPoint ? (view.caution ?? cautions.startingPoint) : null];
+  const texts = [
+    stateCaution(view.state),
+    view.startingPoint ? (view.caution ?? cautions.startingPoint) : null,
+  ];
   const said = texts.filter((text) => text !== null);
   return said.length > 0 ? said : [cautions.contract];
 }

@@ -32,7 +32,9 @@ export function RuleSetsPage() {
           <EditionTable ruleSetId={set.id} editions={set.editions} />
         </section>
       ))}
-      <RunningFoot texts={startingPoint ? [cautions.startingPoint, cautions.contract] : [cautions.contract]} />
+      <RunningFoot
+        texts={startingPoint ? [cautions.startingPoint, cautions.contract] : [cautions.contract]}
+      />
     </PlainPage>
   );
 }

@@ -43,6 +43,7 @@ export function SearchField() {
     setCursor((now) => Math.min(Math.max(0, now + step), Math.max(0, results.length - 1)));
   };
   return (
+    // biome-ignore lint/a11y/noStaticElementInteractions: it only notices that the focus left the field and its list.
     <div
       className="head-search"
       ref={frame}
