@@ -9,6 +9,19 @@ import { SignedInLayout, signedInLoader } from './signed-in-layout';
  * the same queries the component reads.
  */
 const signedIn: RouteObject[] = [
+  { index: true, lazy: () => import('../features/home/home-route') },
+  { path: 'organisations', lazy: () => import('../features/sign-in/choose-organisation-route') },
+  { path: 'queue', lazy: () => import('../features/queue/queue-route') },
+  { path: 'submittals/new', lazy: () => import('../features/upload/upload-route') },
+  { path: 'submittals/:submittalId/next', lazy: () => import('../features/upload/next-revision-route') },
+  {
+    path: 'submittals/:submittalId/r/:number/workbook',
+    lazy: () => import('../features/upload/workbook-route'),
+  },
+  {
+    path: 'submittals/:submittalId/r/:number/reading',
+    lazy: () => import('../features/reading/reading-route'),
+  },
   {
     path: 'submittals/:submittalId/r/:number',
     lazy: () => import('../features/findings/findings-route'),
@@ -22,7 +35,13 @@ const signedIn: RouteObject[] = [
 ];
 
 /** Pages without a session: signing in, links from mails. */
-const open: RouteObject[] = [];
+const open: RouteObject[] = [
+  { path: 'sign-in', lazy: () => import('../features/sign-in/sign-in-route') },
+  { path: 'forgotten-password', lazy: () => import('../features/sign-in/forgotten-password-route') },
+  { path: 'new-password/:token', lazy: () => import('../features/sign-in/new-password-route') },
+  { path: 'invitations/:token', lazy: () => import('../features/sign-in/invitation-route') },
+  { path: 'set-up/:token', lazy: () => import('../features/set-up/set-up-route') },
+];
 
 export function createRouter() {
   return createBrowserRouter([

@@ -1,15 +1,21 @@
-import { type LoaderFunctionArgs, type ShouldRevalidateFunctionArgs, useParams } from 'react-router-dom';
+import {
+  type LoaderFunctionArgs,
+  redirect,
+  type ShouldRevalidateFunctionArgs,
+  useParams,
+} from 'react-router-dom';
 import { queryClient } from '../../lib/client';
+import { paths } from '../../lib/paths';
 import { revisionQuery } from '../../lib/queries/revision-query';
 import { readingQuery } from './api/get-reading';
 import { ReadingPage } from './components/reading-page';
 
+/** A workbook that is still being read, or could not be, is shown on its own page. */
 export async function loader({ params }: LoaderFunctionArgs) {
   const revision = revisionOf(params);
-  await Promise.all([
-    queryClient.ensureQueryData(revisionQuery(revision)),
-    queryClient.ensureQueryData(readingQuery(revision)),
-  ]);
+  const { job } = await queryClient.fetchQuery(revisionQuery(revision));
+  if (job && job.state !== 'done') return redirect(paths.workbook(revision.submittalId, revision.number));
+  await queryClient.ensureQueryData(readingQuery(revision));
   return null;
 }
 

@@ -7,7 +7,7 @@ export function ReplaceWorkbook({ revision }: { revision: Pick<Revision, 'submit
   return (
     <p className="small mute pt-3">
       A corrected workbook takes the place of this one and keeps the number of the revision.{' '}
-      <Link to={paths.replaceWorkbook(revision.submittalId, revision.number)}>Upload it again</Link>
+      <Link to={paths.workbook(revision.submittalId, revision.number)}>Upload it again</Link>
     </p>
   );
 }
