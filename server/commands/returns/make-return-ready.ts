@@ -12,6 +12,7 @@ import type { RequestActor } from '../../middleware/authenticate';
 import { expectVersion, expectWritten } from '../../middleware/if-match';
 import { Problem } from '../../problem';
 import { keepReturn } from './keep-return';
+import { returnAddress } from './return-address';
 import { recommended, refuseUnfinished } from './return-fields';
 
 interface MakeReady {
@@ -64,7 +65,7 @@ export async function makeReturnReady(deps: Deps, act: MakeReady): Promise<void>
         project: row.project,
         preparedBy: actor.person.name,
         disposition: fields.disposition,
-        address: `${deps.settings.publicUrl}/submittals/${row.submittal.id}/r/${row.revision.number}/return`,
+        address: returnAddress(deps.settings, row),
       }),
     });
     await writeAudit(tx, inner, {

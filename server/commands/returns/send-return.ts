@@ -14,16 +14,17 @@ import type { DocumentInput } from '../../documents/document-input';
 import { renderFindingsWorkbook } from '../../documents/findings-workbook';
 import { letterDefinition } from '../../documents/letter-definition';
 import type { LoadedRevision } from '../../documents/load-revision-documents';
+import { pdfMediaType, spreadsheetMediaType } from '../../documents/media-types';
 import { renderPdf } from '../../documents/render-pdf';
-import { returnInput } from '../../documents/return-input';
 import { enqueueMail } from '../../mail/enqueue-mail';
 import { returnMail } from '../../mail/templates/return-mail';
 import type { RequestActor } from '../../middleware/authenticate';
 import { expectVersion } from '../../middleware/if-match';
-import { returnItems } from '../../presenters/return-items';
 import { Problem } from '../../problem';
 import { storeFile } from '../submittals/store-workbook';
 import { keepReturn } from './keep-return';
+import { previewInput } from './preview-input';
+import { returnAddress } from './return-address';
 import { recommended, refuseUnfinished } from './return-fields';
 
 interface SendReturn {
@@ -43,7 +44,7 @@ export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
   const { actor, row, loaded, fields } = act;
   refuseUnfinished(fields, recommended(loaded));
   const stampsBefore = await stampsOfReturned(deps.db, row.revision.id);
-  const input = inputOf(deps, act);
+  const input = previewInput(deps, act, { name: actor.person.name, function: 'signing engineer' });
   const letter = await renderPdf(letterDefinition(input));
   const workbook = fields.findingsWorkbook ? await renderFindingsWorkbook(input) : null;
   await deps.db.transaction(async (tx) => {
@@ -53,7 +54,7 @@ export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
     const letterFileId = await storeDocument(inner, act, {
       kind: 'letter',
       fileName: `${name} letter.pdf`,
-      mediaType: 'application/pdf',
+      mediaType: pdfMediaType,
       bytes: letter,
     });
     const workbookFileId =
@@ -62,7 +63,7 @@ export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
         : await storeDocument(inner, act, {
             kind: 'findings workbook',
             fileName: `${name} findings.xlsx`,
-            mediaType: xlsx,
+            mediaType: spreadsheetMediaType,
             bytes: workbook,
           });
     const returnId = await markSent(inner, act, { input, letterFileId, workbookFileId });
@@ -74,9 +75,7 @@ export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
       submittalId: row.submittal.id,
       recipients: fields.to,
       copies: fields.copies,
-      content: returnMail(input, {
-        address: `${deps.settings.publicUrl}/submittals/${row.submittal.id}/r/${row.revision.number}/return`,
-      }),
+      content: returnMail(input, { address: returnAddress(deps.settings, row) }),
       fileIds: [letterFileId, ...(workbookFileId === null ? [] : [workbookFileId])],
     });
     await writeAudit(tx, inner, {
@@ -88,28 +87,6 @@ export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
     });
   });
   deps.wake.mail();
-}
-
-const xlsx = 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet';
-
-function inputOf(deps: Deps, { actor, loaded, fields }: SendReturn): DocumentInput {
-  const items = returnItems({ ...loaded.sources, included: new Set(fields.included) });
-  return returnInput(
-    loaded.facts,
-    {
-      disposition: fields.disposition,
-      reason: fields.reason,
-      textAbove: fields.textAbove,
-      textBelow: fields.textBelow,
-      to: fields.to,
-      copies: fields.copies,
-      enclosesWorkbook: fields.findingsWorkbook,
-      items,
-      generalNotes: loaded.generalNotes,
-      signedBy: { name: actor.person.name, function: 'signing engineer' },
-    },
-    deps.now(),
-  );
 }
 
 async function lockUnchanged(

@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, lt } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, lt } from 'drizzle-orm';
 import type { Database } from '../client';
 import { rolesFromColumn } from '../roles-column';
 import { notes, waivers } from '../schema/checks';
@@ -105,6 +105,26 @@ export function mailsOfReturn(db: Database, returnId: string) {
     .from(outbox)
     .where(and(eq(outbox.subjectKind, 'return'), eq(outbox.subjectId, returnId)))
     .orderBy(asc(outbox.createdAt));
+}
+
+/** SHA-256 of the letter and of the workbook, once both are stored with the decision. */
+export async function fileHashes(
+  db: Database,
+  kept: ReturnRow,
+): Promise<{ letter: string; workbook: string | null } | null> {
+  if (kept.letterFileId === null) return null;
+  const rows = await db
+    .select({ id: files.id, sha256: files.sha256 })
+    .from(files)
+    .where(
+      and(
+        inArray(files.id, [kept.letterFileId, kept.workbookFileId ?? kept.letterFileId]),
+        eq(files.agencyId, kept.agencyId),
+      ),
+    );
+  const hashOf = (id: string | null) => rows.find((row) => row.id === id)?.sha256 ?? null;
+  const letter = hashOf(kept.letterFileId);
+  return letter === null ? null : { letter, workbook: hashOf(kept.workbookFileId) };
 }
 
 /** A stored file of the agency's or contractor's own. */

@@ -1,0 +1,30 @@
+import { listReturnedNotes } from '#shared/contracts/returns';
+import { dateOfInstant } from '#shared/format/dates';
+import { loadReturn } from '../../commands/returns/load-return';
+import { visibleNotes } from '../../presenters/visible-notes';
+import { route } from '../define-route';
+
+/** The agency's notes that came with the return, each with the replies that the reader may see. */
+export const listReturnedNotesRoute = route(listReturnedNotes, async ({ deps, actor, params }) => {
+  const { row, loaded, abilities, kept } = await loadReturn(deps, actor, params);
+  const notes = await visibleNotes(deps.db, actor, { row, abilities });
+  const titles = new Map(
+    loaded.sources.findings.map((finding) => [`${finding.rule}~${finding.subject}`, finding]),
+  );
+  const returned = notes.filter(
+    ({ side, kind, revision }) =>
+      side === 'agency' && kind === 'to be returned' && revision === params.number,
+  );
+  return {
+    notes: returned.map((note) => {
+      const finding = note.finding === null ? undefined : titles.get(note.finding);
+      return {
+        note,
+        findingTitle: finding?.title ?? null,
+        clause: finding?.clause ?? null,
+        replies: notes.filter(({ answers }) => answers === note.id),
+      };
+    }),
+    sentOn: kept?.sentAt ? dateOfInstant(kept.sentAt.toISOString(), row.agency.timeZone) : null,
+  };
+});
