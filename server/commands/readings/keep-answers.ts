@@ -1,0 +1,78 @@
+import { and, eq } from 'drizzle-orm';
+import type { Answer } from '#rules/reading/reading-result';
+import type { Doubt } from '#rules/record';
+import type { ProblemError } from '#shared/contracts/problems';
+import type { Database } from '../../db/client';
+import { loadGrid } from '../../db/queries/cell-grids';
+import { listAnswers } from '../../db/queries/records';
+import { answers } from '../../db/schema/submittals';
+import type { Deps } from '../../deps';
+import { templateHrefOf } from '../../presenters/template-href';
+import { Problem } from '../../problem';
+import { changeDraft, type DraftChange } from './change-draft';
+import { readGrid } from './read-grid';
+
+type GivenAnswer = Omit<Answer, 'answer'> & { answer: string | null };
+
+/** Keeps answers to doubts, takes those back that are null, and reads the workbook again from its stored cells. */
+export async function keepAnswers(deps: Deps, act: DraftChange & { given: GivenAnswer[] }): Promise<void> {
+  const { row, given } = act;
+  await changeDraft(deps, act, async (tx, kept) => {
+    refuseUnknown(kept.read.doubts, given);
+    for (const answer of given) await keepAnswer(tx, deps, act, answer);
+    const grid = await loadGrid(tx, row.workbook.id);
+    if (grid === null) throw new Error(`The cells of ${row.workbook.id} are not stored.`);
+    const { read, mapping } = await readGrid(tx, {
+      grid,
+      fileName: row.workbook.fileName,
+      edition: kept.edition,
+      answers: await listAnswers(tx, row.revision.id),
+      templateHref: templateHrefOf(row.submittal),
+    });
+    return { read, mapping };
+  });
+}
+
+/** Every fault at once: a cell without a doubt, a text that has changed, an answer that was not offered. */
+function refuseUnknown(doubts: readonly Doubt[], given: readonly GivenAnswer[]): void {
+  const errors = given.flatMap(({ sheet, cell, text, answer }, index): ProblemError[] => {
+    const at = { pointer: `/answers/${index}`, sheet, cell };
+    if (answer === null) return [];
+    const doubt = doubts.find((each) => each.sheet === sheet && each.cell === cell);
+    if (doubt === undefined) return [{ ...at, detail: `${sheet} ${cell} is not in doubt.` }];
+    if (doubt.text !== text)
+      return [{ ...at, detail: `${sheet} ${cell} holds “${doubt.text}”, not “${text}”.` }];
+    const offered = doubt.alternatives.map((each) => each.answer);
+    if (offered.includes(answer)) return [];
+    return [
+      { ...at, detail: `${sheet} ${cell} cannot mean “${answer}”.`, fix: `Choose ${offered.join(', ')}.` },
+    ];
+  });
+  if (errors.length > 0) throw new Problem('invalid-input', { detail: errors[0]?.detail ?? '', errors });
+}
+
+async function keepAnswer(
+  tx: Database,
+  { newId, now }: Deps,
+  { row, actor }: DraftChange,
+  { sheet, cell, text, answer }: GivenAnswer,
+): Promise<void> {
+  const place = and(
+    eq(answers.revisionId, row.revision.id),
+    eq(answers.sheet, sheet),
+    eq(answers.cell, cell),
+  );
+  await tx.delete(answers).where(place);
+  if (answer === null) return;
+  await tx.insert(answers).values({
+    id: newId(),
+    revisionId: row.revision.id,
+    contractorId: row.revision.contractorId,
+    sheet,
+    cell,
+    text,
+    answer,
+    personId: actor.personId,
+    at: now(),
+  });
+}
