@@ -1,0 +1,7 @@
+import { getOrganisation } from '#shared/contracts/organisation';
+import { presentOrganisation } from '../../presenters/present-organisation';
+import { route } from '../define-route';
+
+export const getOrganisationRoute = route(getOrganisation, async ({ actor }) =>
+  presentOrganisation(actor.organisation, actor),
+);
