@@ -54,14 +54,14 @@ export function hashOf(value: unknown): string {
 /** A resolved edition does not change, and many records are judged by it. */
 const editionHashes = new WeakMap<ResolvedEdition, string>();
 
-function withoutTyped(value: unknown): unknown {
-  if (Array.isArray(value)) return value.map(withoutTyped);
-  if (typeof value !== 'object' || value === null) return value;
-  return Object.fromEntries(
-    Object.entries(value)
-      .filter(([name]) => name !== 'typed')
-      .map(([name, member]) => [name, withoutTyped(member)]),
-  );
+function withoutTyped(record: MixRecord): unknown {
+  return {
+    ...record,
+    attributes: Object.fromEntries(
+      Object.entries(record.attributes).map(([name, { typed: _typed, ...attribute }]) => [name, attribute]),
+    ),
+    readings: record.readings.map(({ typed: _typed, ...reading }) => reading),
+  };
 }
 
 /** What was decided, without any sentence. */

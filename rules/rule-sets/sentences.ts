@@ -185,7 +185,7 @@ function countClauses(rule: Rule, view: EditionView): string[] {
   return clauses;
 }
 
-function roundingClause(rule: Rule, view: EditionView): string {
+export function roundingClause(rule: Rule, view: EditionView): string {
   if (rule.limit.present || rule.limit.oneOf !== undefined || rule.measure.kind === 'document') return '';
   const { rounding } = rule;
   if (rounding === undefined) return 'not rounded, as no rounding is named';

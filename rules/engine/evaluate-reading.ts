@@ -1,0 +1,67 @@
+import type { Conditions } from '../record';
+import type { GradationMeasure, ReadingMeasure } from '../rule-sets/measure';
+import type { ResolvedRule } from '../rule-sets/resolve';
+import { evaluateValue } from './evaluate-value';
+import type { Finding } from './finding';
+import { matchingRows } from './look-up';
+import { makeFinding } from './make-finding';
+import { naturalOrder } from './natural-order';
+import { subjectOf } from './subject';
+import type { World } from './world';
+
+/** A `reading` rule: one finding, or one a stockpile or a sieve where the rule or the quantity asks for it. */
+export function evaluateReading(world: World, rule: ResolvedRule, measure: ReadingMeasure): Finding[] {
+  const { quantity, statistic } = measure;
+  return conditionsOfSubjects(world, measure).map((at) =>
+    evaluateValue({ world, rule, measure, quantity, statistic, at }),
+  );
+}
+
+/** A `gradation` rule: one finding a sieve of the table. No gradation at all is one finding. */
+export function evaluateGradation(world: World, rule: ResolvedRule, measure: GradationMeasure): Finding[] {
+  const at = measure.at;
+  const base = { subject: subjectOf(world, measure, at), at, quantity: PASSING };
+  const evaluated = (conditions: Conditions) =>
+    evaluateValue({ world, rule, measure, quantity: PASSING, statistic: 'mean', at: conditions });
+  const hasNone = (world.readings.get(PASSING) ?? []).length === 0;
+  if (hasNone && !world.record.doubts.some(({ about }) => about.quantity === PASSING)) {
+    return [makeFinding(world, rule, { ...base, outcome: 'not shown', reason: 'There is no gradation.' })];
+  }
+  const rows = matchingRows(world, measure.table, { sieve: undefined });
+  if (!rows.ok) return [makeFinding(world, rule, { ...base, ...rows })];
+  const sieves = [...new Set(rows.found.map(({ row }) => Number(row.sieve)))].filter((sieve) => sieve > 0);
+  if (sieves.length === 0) {
+    const reason = `${world.view.tableTitle(measure.table)} has no row for this mix.`;
+    return [makeFinding(world, rule, { ...base, outcome: 'undecided', reason })];
+  }
+  return sieves.map((sieve) => evaluated({ ...at, sieve }));
+}
+
+const PASSING = 'percent-passing';
+
+/** The conditions of each subject of a rule: every stockpile, every sieve that readings hold, or just the rule's. */
+export function conditionsOfSubjects(
+  world: World,
+  { quantity, at }: { quantity: string; at: Conditions },
+): Conditions[] {
+  const ofLaboratory = (world.readings.get(quantity) ?? []).filter(
+    (each) => (each.at.laboratory ?? 'contractor') === (at.laboratory ?? 'contractor'),
+  );
+  let subjects: Conditions[] = [at];
+  if (at.stockpile === 'each') {
+    const names = ofLaboratory.flatMap((each) =>
+      each.at.stockpile === undefined ? [] : [each.at.stockpile],
+    );
+    const stockpiles = [...new Set(names)].toSorted(naturalOrder);
+    if (stockpiles.length > 0) subjects = stockpiles.map((stockpile) => ({ ...at, stockpile }));
+  }
+  const splitsBySieve = world.view.quantity(quantity)?.conditions.includes('sieve') ?? false;
+  if (!splitsBySieve || at.sieve !== undefined) return subjects;
+  return subjects.flatMap((subject) => {
+    const matching = ofLaboratory.filter((each) => each.at.stockpile === subject.stockpile);
+    const sieves = [
+      ...new Set(matching.flatMap((each) => (each.at.sieve === undefined ? [] : [each.at.sieve]))),
+    ];
+    return sieves.length === 0 ? [subject] : sieves.map((sieve) => ({ ...subject, sieve }));
+  });
+}

@@ -1,0 +1,242 @@
+import { convert } from '../quantities/units';
+import type { Conditions } from '../record';
+import type { GradationMeasure, ReadingMeasure, Statistic } from '../rule-sets/measure';
+import type { ResolvedRule } from '../rule-sets/resolve';
+import { plural } from '../rule-sets/words';
+import { doubtAbout } from './doubts';
+import type { Finding, Observed, ResolvedLimit } from './finding';
+import { type Judgement, judge, type Rounder, rounderOf } from './judge';
+import { judgeEach } from './judge-each';
+import { makeFinding } from './make-finding';
+import { type Obstacle, undecided } from './obstacle';
+import { isBorderline, precisionOf } from './precision';
+import { againstReported } from './reported';
+import { resolveInterval, resolveLimit } from './resolve-limit';
+import { type Sample, type SampleItem, takeSample } from './sample';
+import { type Judgeable, statisticOf } from './statistic';
+import { subjectOf } from './subject';
+import type { World } from './world';
+
+export interface ValueRequest {
+  world: World;
+  rule: ResolvedRule;
+  measure: ReadingMeasure | GradationMeasure;
+  quantity: string;
+  statistic: Statistic;
+  /** Conditions of the rule with those of the subject. */
+  at: Conditions;
+}
+
+/** One finding: the value of a quantity on one subject, held against the rule's limit. */
+export function evaluateValue(request: ValueRequest): Finding {
+  const { world, rule, measure, quantity, at } = request;
+  const base = { subject: subjectOf(world, measure, at), at, quantity };
+  const taken = takeSample(world, { quantity, at, where: measure.where });
+  const limit = resolveLimit(world, rule, at);
+  const shownLimit = limit.ok ? limit.limit : null;
+  const doubt = doubtAbout(world, { quantity, at }, taken.ok ? taken.sample : null);
+  if (doubt !== null) {
+    const evidence = taken.ok ? evidenceOf(taken.sample) : [];
+    return makeFinding(world, rule, {
+      ...base,
+      outcome: 'undecided',
+      reason: doubt,
+      limit: shownLimit,
+      evidence,
+    });
+  }
+  const obstacle = taken.ok ? (limit.ok ? null : limit) : taken;
+  if (obstacle !== null || !taken.ok || !limit.ok) {
+    const found = obstacle ?? undecided('The rule could not be judged.');
+    const evidence = taken.ok ? evidenceOf(taken.sample) : [];
+    return makeFinding(world, rule, { ...base, ...found, limit: shownLimit, evidence });
+  }
+  if (rule.limit.present) return presentFinding(request, taken.sample);
+  return judgedFinding(request, taken.sample, limit.limit);
+}
+
+function presentFinding(
+  { world, rule, measure, quantity, at, statistic }: ValueRequest,
+  sample: Sample,
+): Finding {
+  const base = { subject: subjectOf(world, measure, at), at, quantity, evidence: evidenceOf(sample) };
+  const first = sample.items[0];
+  const text =
+    first?.evidence.text ?? (first?.value === null || first === undefined ? '' : String(first.value));
+  const unit = first?.value === null ? '' : (world.view.quantity(quantity)?.unit ?? '');
+  const observed: Observed = {
+    value: first?.value ?? null,
+    rounded: null,
+    text,
+    unit,
+    statistic,
+    count: sample.count,
+  };
+  const short = tooFew(measure, sample);
+  if (short) return makeFinding(world, rule, { ...base, ...short, observed });
+  return makeFinding(world, rule, { ...base, outcome: 'pass', reason: 'It is shown.', observed });
+}
+
+function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLimit): Finding {
+  const { world, rule, measure, quantity, at, statistic } = request;
+  const base = { subject: subjectOf(world, measure, at), at, quantity, limit, evidence: evidenceOf(sample) };
+  const rounding = rounderOf(world, rule, limit, at);
+  if (!rounding.ok) return makeFinding(world, rule, { ...base, ...rounding });
+  const inUnit = sampleInUnit(world, quantity, statistic, sample, limit.unit);
+  if (!inUnit.ok) return makeFinding(world, rule, { ...base, ...inUnit });
+
+  const judged = judgeSample({ ...request, sample: inUnit.sample, limit, rounder: rounding.rounder });
+  if (!judged.ok) return makeFinding(world, rule, { ...base, ...judged });
+  const { judgement, judgeable } = judged;
+  const precision = precisionOf({
+    rule,
+    quantity: world.view.quantity(quantity),
+    statistic,
+    count: sample.count,
+    unit: limit.unit,
+  });
+  const observed = observedOf(judgeable, judgement, limit.unit, statistic, sample.count);
+  const parts = { ...base, observed, roundingSentence: judgement.roundingSentence, precision };
+
+  const reported = againstReported({
+    ...request,
+    limit,
+    rounder: rounding.rounder,
+    sample,
+    outcome: judgement.outcome,
+  });
+  const short = tooFew(measure, sample);
+  if (short) return makeFinding(world, rule, { ...parts, ...short });
+  if (reported?.contradicts) {
+    return makeFinding(world, rule, { ...parts, outcome: 'undecided', reason: reported.reason });
+  }
+  const reason = [reasonOf(judgement, judgeable), judged.note, reported?.reason, originNote(sample)]
+    .filter(Boolean)
+    .join(' ');
+  return makeFinding(world, rule, {
+    ...parts,
+    outcome: judgement.outcome,
+    reason,
+    margin: judgement.margin,
+    borderline: isBorderline(judgement.margin, precision),
+  });
+}
+
+interface SampleJudging extends ValueRequest {
+  sample: Sample;
+  limit: ResolvedLimit;
+  rounder: Rounder;
+}
+
+type SampleJudgement = { ok: true; judgement: Judgement; judgeable: Judgeable; note: string } | Obstacle;
+
+/** The statistic against the limit, and each single value where the rule asks for it. */
+export function judgeSample(judging: SampleJudging): SampleJudgement {
+  const { world, measure, statistic, at, sample, limit, rounder } = judging;
+  const isReading = measure.kind === 'reading';
+  if (statistic === 'each') return judgeEach(sample, limit, rounder);
+  const within = isReading && measure.within ? resolveInterval(world, measure.within, at) : null;
+  if (within && !within.ok) return within;
+  const value = statisticOf({
+    sample,
+    statistic,
+    within: within?.interval ?? null,
+    hasMin: limit.min !== null,
+  });
+  if (!value.ok) return value;
+  const judgement = judge(value.judgeable, limit, rounder);
+  const result = { ok: true as const, judgement, judgeable: value.judgeable, note: '' };
+  if (!isReading || measure.alsoEach === undefined || judgement.outcome === 'fail') return result;
+
+  const interval = resolveInterval(world, measure.alsoEach, at);
+  if (!interval.ok) return interval;
+  const eachLimit = { ...limit, ...interval.interval, target: null, tolerance: null };
+  if (eachLimit.min === null && eachLimit.max === null) return result;
+  const each = judgeEach(sample, eachLimit, rounder);
+  if (!each.ok) return each;
+  if (each.judgement.outcome === 'pass') return result;
+  const margin = smaller(judgement.margin, each.judgement.margin);
+  const note = `${each.note} Each single value has limits of its own.`;
+  return { ...result, judgement: { ...judgement, outcome: each.judgement.outcome, margin }, note };
+}
+
+/** At least one but fewer than the rule asks for. */
+export function tooFew(measure: ReadingMeasure | GradationMeasure, sample: Sample): Obstacle | null {
+  if (
+    measure.kind !== 'reading' ||
+    measure.minimumCount === undefined ||
+    sample.count >= measure.minimumCount
+  ) {
+    return null;
+  }
+  const missing = measure.minimumCount - sample.count;
+  return undecided(
+    `There ${sample.count === 1 ? 'is' : 'are'} ${plural(sample.count, 'result')}, and the rule asks for at least ${measure.minimumCount}; ${plural(missing, 'more result')} would decide it.`,
+  );
+}
+
+export function evidenceOf(sample: Sample) {
+  return sample.items.map((item) => item.evidence);
+}
+
+function observedOf(
+  judgeable: Judgeable,
+  judgement: Judgement,
+  unit: string,
+  statistic: Statistic,
+  count: number,
+): Observed {
+  return { value: judgeable.value, rounded: judgement.rounded, text: judgement.text, unit, statistic, count };
+}
+
+/** Values in the unit that the limit is written in; a spread or a count has no unit to move. */
+function sampleInUnit(
+  world: World,
+  quantity: string,
+  statistic: Statistic,
+  sample: Sample,
+  unit: string,
+): { ok: true; sample: Sample } | Obstacle {
+  const own = world.view.quantity(quantity)?.unit ?? unit;
+  if (own === unit || statistic === 'count' || statistic === 'percent-within-limits')
+    return { ok: true, sample };
+  const items: SampleItem[] = [];
+  for (const item of sample.items) {
+    if (item.value === null) {
+      items.push(item);
+      continue;
+    }
+    const converted = convert(item.value, own, unit);
+    if (!converted.ok)
+      return undecided(`The value is in ${own} and the limit in ${unit}: ${converted.reason}.`);
+    items.push({ ...item, value: converted.value });
+  }
+  const { recomputed } = sample;
+  const mean = recomputed === null ? null : convert(recomputed.value, own, unit);
+  if (recomputed === null || mean === null) return { ok: true, sample: { ...sample, items } };
+  return mean.ok
+    ? { ok: true, sample: { ...sample, items, recomputed: { ...recomputed, value: mean.value } } }
+    : undecided(`The value is in ${own} and the limit in ${unit}: ${mean.reason}.`);
+}
+
+function reasonOf(judgement: Judgement, judgeable: Judgeable): string {
+  if (judgement.outcome === 'undecided') {
+    return `The value is only known as ${judgeable.text ?? 'a range'}, which allows both a pass and a fail.`;
+  }
+  if (judgeable.allowed !== null) {
+    return `Every value that ${judgeable.text ?? 'it'} allows is ${judgement.outcome === 'pass' ? 'inside' : 'outside'} the limit.`;
+  }
+  return judgement.outcome === 'pass' ? 'The value is inside the limit.' : 'The value is outside the limit.';
+}
+
+function originNote(sample: Sample): string {
+  if (sample.interpolated) return 'The value is interpolated between trials at the declared binder content.';
+  const isReported =
+    sample.recomputed === null && sample.items.some((item) => item.evidence.origin === 'reported');
+  return isReported ? 'The value is judged as reported.' : '';
+}
+
+function smaller(one: number | null, other: number | null): number | null {
+  if (one === null || other === null) return one ?? other;
+  return Math.min(one, other);
+}

@@ -1,0 +1,112 @@
+import { checkConsistency } from '../consistency/check-consistency';
+import type { CheckContext, MixRecord } from '../record';
+import type { ResolvedEdition } from '../rule-sets/resolve';
+import { unsettledBy } from './alternatives';
+import { analyse } from './analyse';
+import type { Analysis, RecomputedValue } from './analysis';
+import { consistencyFindings, consistencyNotChecked } from './consistency-findings';
+import { summarise } from './disposition';
+import { evaluateRule } from './evaluate-rule';
+import { type CheckResult, type Finding, findingKey, type RecomputedReading } from './finding';
+import { byClauseThenSubject } from './order';
+import { sealOf } from './seal';
+import { type World, worldOf } from './world';
+
+/**
+ * Judges a mix record by a resolved edition: findings in the order of clauses, what does not add up after them,
+ * and the seal over it all. Pure and synchronous: the same everywhere for the same engine version.
+ */
+export function evaluate(record: MixRecord, edition: ResolvedEdition, context: CheckContext): CheckResult {
+  const analysis = analysisOf(record, edition);
+  const world = settledWorld({ record, edition, context, analysis });
+  const judged = edition.rules.flatMap((rule) => evaluateRule(world, rule)).toSorted(byClauseThenSubject);
+  const findings = [...judged, ...dataFindings(world)];
+  assertUniqueKeys(findings);
+  return {
+    analysis: {
+      recomputed: analysis.recomputed.map(recomputedReading),
+      designPoint: {
+        declaredBinderContent: analysis.designPoint.declaredBinderContent,
+        computedBinderContent: analysis.designPoint.computedBinderContent,
+        targetAirVoids: analysis.designPoint.targetAirVoids,
+        fit: analysis.designPoint.fit,
+      },
+      roomToMove: null,
+      creep: [],
+    },
+    summary: summarise(findings),
+    findings,
+    seal: sealOf({ record, edition, context, findings }),
+  };
+}
+
+/** The world in which rules are judged, with the findings that unanswered doubts leave open. */
+function settledWorld(input: {
+  record: MixRecord;
+  edition: ResolvedEdition;
+  context: CheckContext;
+  analysis: Analysis;
+}): World {
+  const world = worldOf(input);
+  const { record, edition, context } = input;
+  if (!record.doubts.some(({ alternatives }) => alternatives.length > 0)) return world;
+  const unsettled = unsettledBy({
+    record,
+    findings: edition.rules.flatMap((rule) => evaluateRule(world, rule)),
+    evaluate: (other) => {
+      const otherWorld = worldOf({ record: other, edition, context, analysis: analysisOf(other, edition) });
+      return edition.rules.flatMap((rule) => evaluateRule(otherWorld, rule));
+    },
+  });
+  return worldOf({ ...input, unsettled });
+}
+
+/** The analysis with the edition's own tolerances between reported and recomputed values. */
+function analysisOf(record: MixRecord, edition: ResolvedEdition): Analysis {
+  const analysis = analyse(record, edition.designPoint);
+  const { reportedTolerance } = edition;
+  if (Object.keys(reportedTolerance).length === 0) return analysis;
+  return {
+    ...analysis,
+    recomputed: analysis.recomputed.map((value) => withTolerance(value, reportedTolerance)),
+  };
+}
+
+function withTolerance(value: RecomputedValue, tolerances: Record<string, number>): RecomputedValue {
+  const tolerance = tolerances[value.quantity];
+  if (tolerance === undefined || value.reported === null || value.reported.value === null) return value;
+  const agrees = Math.abs(value.reported.value - value.value) <= tolerance * (1 + 1e-12);
+  return { ...value, tolerance, agrees, cause: agrees ? null : value.cause };
+}
+
+function dataFindings(world: World): Finding[] {
+  try {
+    return consistencyFindings(world, checkConsistency(world.record, world.analysis));
+  } catch (error) {
+    return [consistencyNotChecked(error)];
+  }
+}
+
+function recomputedReading(value: RecomputedValue): RecomputedReading {
+  return {
+    quantity: value.quantity,
+    value: value.value,
+    unit: value.unit,
+    at: value.at,
+    origin: value.origin,
+    source: null,
+    formula: value.formula,
+    inputs: value.inputs,
+    reported: value.reported?.value ?? null,
+  };
+}
+
+function assertUniqueKeys(findings: readonly Finding[]): void {
+  const seen = new Set<string>();
+  for (const finding of findings) {
+    const key = findingKey(finding);
+    if (seen.has(key))
+      throw new Error(`Two findings have the key ${key}; a rule and a subject give one finding.`);
+    seen.add(key);
+  }
+}

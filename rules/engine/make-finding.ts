@@ -1,0 +1,85 @@
+import type { Conditions } from '../record';
+import type { ResolvedRule } from '../rule-sets/resolve';
+import { requirementSentence, resultSentence, ruleSentence } from '../rule-sets/sentences';
+import type { RuleSource } from '../rule-sets/table';
+import {
+  type Evidence,
+  type Finding,
+  findingKey,
+  type Observed,
+  type Outcome,
+  type ResolvedLimit,
+} from './finding';
+import type { UsedPrecision } from './precision';
+import type { World } from './world';
+
+export interface FindingParts {
+  subject: string;
+  /** Conditions of the subject, for the sentences. */
+  at: Conditions;
+  outcome: Outcome;
+  reason: string;
+  observed?: Observed | null;
+  limit?: ResolvedLimit | null;
+  margin?: number | null;
+  borderline?: boolean;
+  roundingSentence?: string | null;
+  precision?: UsedPrecision | null;
+  evidence?: Evidence[];
+  /** Quantity whose gauge is drawn. */
+  quantity?: string;
+  /** The date that a document's age is counted to. */
+  date?: string | null;
+}
+
+/** A finding of one rule on one subject, with its sentences. */
+export function makeFinding(world: World, rule: ResolvedRule, parts: FindingParts): Finding {
+  const { view } = world;
+  const { subject, at } = parts;
+  const doubt = world.unsettled.get(findingKey({ rule: rule.id, subject }));
+  const outcome = doubt === undefined ? parts.outcome : 'undecided';
+  const reason = doubt ?? parts.reason;
+  const observed = parts.observed ?? null;
+  const limit = parts.limit ?? null;
+  const date = parts.date ?? null;
+  const isJudged = outcome === 'pass' || outcome === 'fail';
+  return {
+    rule: rule.id,
+    clause: rule.clause,
+    title: rule.title,
+    subject,
+    severity: rule.severity,
+    outcome,
+    borderline: isJudged && (parts.borderline ?? false),
+    kind: rule.measure.kind,
+    observed,
+    limit,
+    margin: isJudged ? (parts.margin ?? null) : null,
+    ruleSentence: ruleSentence(rule, view),
+    requirement: requirementSentence({ rule, view, at, limit, date }),
+    sentence: resultSentence({ rule, view, at, limit, outcome, observed, date }),
+    reason,
+    roundingSentence: parts.roundingSentence ?? null,
+    precision: parts.precision ? { value: parts.precision.value, origin: parts.precision.origin } : null,
+    advice: rule.advice ?? null,
+    source: sourceWords(rule.source ?? null),
+    gauge: gaugeOf(world, parts.quantity, limit),
+    evidence: [...new Set(parts.evidence ?? [])],
+  };
+}
+
+/** "AASHTO M 323, Superpave Volumetric Mix Design, 2022, section 7; from memory, verify" */
+export function sourceWords(source: RuleSource | null): string | null {
+  if (source === null) return null;
+  const section = source.section ? `section ${source.section}` : null;
+  const parts = [source.number, source.title, source.edition, section].filter((part) => part);
+  const text = parts.join(', ');
+  if (source.origin !== 'memory') return text === '' ? null : text;
+  return text === '' ? 'From memory, verify' : `${text}; from memory, verify`;
+}
+
+function gaugeOf(world: World, id: string | undefined, limit: ResolvedLimit | null): Finding['gauge'] {
+  const quantity = id === undefined ? undefined : world.view.quantity(id);
+  if (!quantity || limit === null || (limit.min === null && limit.max === null)) return null;
+  return { span: quantity.gaugeSpan, scale: quantity.gaugeScale };
+}

@@ -1,0 +1,73 @@
+import { convert } from '../quantities/units';
+import type { Conditions } from '../record';
+import type { GradationMeasure, ReadingMeasure, Statistic } from '../rule-sets/measure';
+import type { ResolvedRule } from '../rule-sets/resolve';
+import { numberWords, withUnit } from '../rule-sets/words';
+import type { RecomputedValue } from './analysis';
+import type { ResolvedLimit } from './finding';
+import { judge, type Rounder } from './judge';
+import type { Sample } from './sample';
+import type { World } from './world';
+
+interface ReportedInput {
+  world: World;
+  rule: ResolvedRule;
+  measure: ReadingMeasure | GradationMeasure;
+  quantity: string;
+  statistic: Statistic;
+  at: Conditions;
+  sample: Sample;
+  limit: ResolvedLimit;
+  rounder: Rounder;
+  outcome: 'pass' | 'fail' | 'undecided';
+}
+
+/**
+ * What the workbook's own value says beside the recomputed one. Where the two differ beyond the tolerance and
+ * give different outcomes, neither stands, unless exactly one named cause explains the reported value.
+ */
+export function againstReported(input: ReportedInput): { contradicts: boolean; reason: string } | null {
+  const { sample, limit, rounder, statistic, outcome, world, quantity } = input;
+  const { recomputed } = sample;
+  const isOfMean = statistic === 'mean' || (sample.count === 1 && statistic !== 'count');
+  if (recomputed === null || recomputed.reported === null || !isOfMean) return null;
+  const { reported, agrees, cause } = recomputed;
+  if (agrees !== false || reported.value === null) return null;
+  const unit = world.view.quantity(quantity)?.unit ?? limit.unit;
+  const stated = convert(reported.value, reported.unit, unit);
+  const own = stated.ok ? convert(stated.value, unit, limit.unit) : stated;
+  if (!own.ok) return null;
+  const asReported = judge({ value: own.value, text: null, allowed: null }, limit, rounder);
+  const place = reported.source
+    ? ` (${reported.source.sheet === '' ? '' : `${reported.source.sheet} `}${reported.source.cell})`
+    : '';
+  const values = `The workbook reports ${withUnit(numberWords(own.value), limit.unit)}${place}; recomputed it is ${asWritten(input)}.`;
+  if (asReported.outcome === outcome)
+    return { contradicts: false, reason: `${values} Both give the same outcome.` };
+  world.contradicted.add(recomputedOfRecord(input));
+  if (cause !== null) {
+    return {
+      contradicts: false,
+      reason: `${values} ${subjectWords(place, reported.source)} ${cause.text}, so the recomputed value is judged.`,
+    };
+  }
+  return {
+    contradicts: true,
+    reason: `${values} The two give different outcomes, and no single cause explains the difference; correct the raw readings or the reported value.`,
+  };
+}
+
+/** The analysis' own object, also where the sample holds it in another unit. */
+function recomputedOfRecord({ world, quantity, sample }: ReportedInput): RecomputedValue {
+  const used = sample.recomputed as RecomputedValue;
+  return (world.recomputed.get(quantity) ?? []).find(({ reported }) => reported === used.reported) ?? used;
+}
+
+function subjectWords(place: string, source: { cell: string } | null): string {
+  return place === '' || source === null ? 'The reported value' : source.cell;
+}
+
+function asWritten({ sample, limit, rounder }: ReportedInput): string {
+  const value = sample.recomputed?.value ?? Number.NaN;
+  return withUnit(numberWords(value, Math.max(rounder.decimals, limit.decimals) + 2), limit.unit);
+}
