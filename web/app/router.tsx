@@ -1,6 +1,6 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 import { NotFoundPage } from './not-found-page';
-import { RootLayout } from './root-layout';
+import { PageLoading, RootLayout } from './root-layout';
 import { RouteProblem, ShellProblem } from './route-problem';
 import { SignedInLayout, signedInLoader } from './signed-in-layout';
 
@@ -47,6 +47,7 @@ export function createRouter() {
   return createBrowserRouter([
     {
       element: <RootLayout />,
+      hydrateFallbackElement: <PageLoading />,
       errorElement: <ShellProblem />,
       children: [
         { errorElement: <RouteProblem />, children: open },

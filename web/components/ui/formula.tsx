@@ -38,15 +38,15 @@ function setNode(node: FormulaNode, values: ReadonlyMap<string, ReactNode> | und
       return <>−{set(node.of)}</>;
     case 'group':
       return (
-        <span className="equation">
+        <span className="equation equation-tight">
           <span>(</span>
-          {set(node.of)}
+          <span className="equation">{set(node.of)}</span>
           <span>)</span>
         </span>
       );
     case 'call':
       return (
-        <span className="equation">
+        <span className="equation equation-tight">
           <span>{node.name === '√' ? '√(' : `${node.name}(`}</span>
           {node.of.map((argument, index) => (
             // biome-ignore lint/suspicious/noArrayIndexKey: the arguments of one printed formula do not move.

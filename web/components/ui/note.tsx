@@ -1,4 +1,4 @@
-import type { ReactNode } from 'react';
+import { Children, type ReactNode } from 'react';
 import { RichText } from './rich-text';
 
 /** Two pencils: ink is sent, graphite stays. The byline always ends in the word for which it is. */
@@ -18,12 +18,16 @@ export function Note({
   children?: ReactNode;
 }) {
   return (
-    <div className={state === 'internal' ? 'note note-internal' : 'note'}>
+    <div className={state.endsWith('internal') ? 'note note-internal' : 'note'}>
       <RichText>{text}</RichText>
       <span className="note-byline">
         {by}, {on}, {state}
       </span>
-      {children ? <span className="note-acts">{children}</span> : null}
+      {hasActs(children) ? <span className="note-acts">{children}</span> : null}
     </div>
   );
+}
+
+function hasActs(children: ReactNode): boolean {
+  return Children.toArray(children).length > 0;
 }

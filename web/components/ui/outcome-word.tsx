@@ -17,8 +17,15 @@ export function OutcomeWord({
   return (
     <span className={`outcome ${colourOfMark[mark]}`}>
       <Mark name={mark} />
-      <b>{wordOfOutcome[outcome]}</b>
-      {words.length > 0 ? <small>{words.join(', ')}</small> : null}
+      <span>
+        <b>{wordOfOutcome[outcome]}</b>
+        {words.length > 0 ? (
+          <>
+            {' '}
+            <small>{words.join(', ')}</small>
+          </>
+        ) : null}
+      </span>
     </span>
   );
 }

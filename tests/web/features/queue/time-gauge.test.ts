@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
+import { workingDaysBetween } from '#shared/working-days';
 import { dueWords } from '../../../../web/features/queue/lib/due-words';
 import { timeGaugePlaces } from '../../../../web/features/queue/lib/time-gauge';
-import { workingDaysBetween } from '#shared/working-days';
 
 // Counted on a calendar of March 2026: the 9th, 16th and 23rd are Mondays.
 describe('working days between two dates', () => {

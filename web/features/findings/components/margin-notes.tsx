@@ -19,12 +19,12 @@ export function MarginNotes({ row, isOpen }: { row: LedgerRow; isOpen: boolean }
     <>
       {row.waiver ? (
         <div className="margin-note">
-          <WaiverNote row={row} />
+          <WaiverNote row={row} isOpen={isOpen} />
         </div>
       ) : null}
       {row.notes.map((note) => (
         <div className="margin-note" key={note.id}>
-          <RecordedNote note={note} />
+          <RecordedNote note={note} withActs={isOpen} />
         </div>
       ))}
       {writing?.act === 'note' ? (
@@ -72,7 +72,7 @@ export function canWaive(
   return finding.severity === 'advisory' ? abilities.waiveAdvisory : abilities.waiveRequired;
 }
 
-function WaiverNote({ row: { waiver } }: { row: LedgerRow }) {
+function WaiverNote({ row: { waiver }, isOpen }: { row: LedgerRow; isOpen: boolean }) {
   const { params, timeZone } = useLedger();
   const remove = useRemoveWaiver(params);
   if (!waiver) return null;
@@ -83,7 +83,7 @@ function WaiverNote({ row: { waiver } }: { row: LedgerRow }) {
       on={formatInstantShort(waiver.at, timeZone)}
       state={waiver.toBeReturned ? 'to be returned' : 'internal'}
     >
-      {waiver.abilities.remove ? (
+      {isOpen && waiver.abilities.remove ? (
         <Button kind="inline" isDisabled={remove.isPending} onPress={() => remove.mutate(waiver)}>
           Take the waiver back
         </Button>

@@ -8,8 +8,8 @@ import { useRemoveNote } from '../api/change-note';
 import { useLedger } from './ledger-context';
 import { NoteForm } from './note-form';
 
-/** A kept note with what its reader may do with it. */
-export function RecordedNote({ note }: { note: NoteRecord }) {
+/** A kept note; what its reader may do with it stands under it while its row is open. */
+export function RecordedNote({ note, withActs = true }: { note: NoteRecord; withActs?: boolean }) {
   const { params, timeZone, draft, setDraft, revision } = useLedger();
   const remove = useRemoveNote(params);
   if (draft?.act === 'change' && draft.noteId === note.id) {
@@ -22,9 +22,9 @@ export function RecordedNote({ note }: { note: NoteRecord }) {
         text={note.text}
         by={note.by}
         on={formatInstantShort(note.at, timeZone)}
-        state={`${earlier}${note.kind}` === 'internal' ? 'internal' : `${earlier}${note.kind}`}
+        state={earlier + note.kind}
       >
-        {note.abilities.reply ? (
+        {withActs && note.abilities.reply ? (
           <Button
             kind="inline"
             onPress={() => setDraft({ act: 'reply', key: note.finding, answers: note.id })}
@@ -32,7 +32,7 @@ export function RecordedNote({ note }: { note: NoteRecord }) {
             Reply
           </Button>
         ) : null}
-        {note.abilities.change ? (
+        {withActs && note.abilities.change ? (
           <Button
             kind="inline"
             onPress={() => setDraft({ act: 'change', key: note.finding, noteId: note.id })}
@@ -40,7 +40,7 @@ export function RecordedNote({ note }: { note: NoteRecord }) {
             Change
           </Button>
         ) : null}
-        {note.abilities.remove ? (
+        {withActs && note.abilities.remove ? (
           <Button kind="inline" isDisabled={remove.isPending} onPress={() => remove.mutate(note)}>
             Remove
           </Button>

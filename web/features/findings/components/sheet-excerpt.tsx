@@ -43,7 +43,7 @@ export function SheetExcerpt({
                   key={each.address}
                   className={[
                     each.isNumber ? 'number' : '',
-                    each.use && each.use !== 'label' ? `use-${each.use}` : '',
+                    each.use ? `use-${each.use}` : '',
                     each.isHit ? edge : '',
                   ]
                     .filter((name) => name !== '')

@@ -28,7 +28,7 @@ export interface LedgerGroup {
 }
 
 /** A shorter run is quicker read than unfolded. */
-const fewestToFold = 4;
+const fewestToFold = 5;
 
 export function ledgerRows(check: CheckView): LedgerRow[] {
   const notes = groupBy(

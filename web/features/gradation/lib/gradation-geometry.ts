@@ -35,7 +35,7 @@ export interface GradationGeometry {
 }
 
 /** Labels of neighbouring sieves keep at least so far apart; a sieve without a label keeps its grid line. */
-const labelRoomPx = 26;
+const labelRoomPx = 36;
 
 export function gradationGeometry(
   points: readonly GradationPoint[],
@@ -104,7 +104,9 @@ function controlOf(
             : { labelX, anchor: side, labelY: low + 4 }),
         },
   ];
-  return { x, from: high, to: low, ticks: ticks.filter((tick) => tick !== null) };
+  // What every mix meets, nothing and all, is the frame itself and needs no figure.
+  const named = ticks.filter((tick) => tick !== null && tick.label !== '100' && tick.label !== '0');
+  return { x, from: high, to: low, ticks: named.filter((tick) => tick !== null) };
 }
 
 function labelled(sieves: readonly { sieve: number; x: number }[]): GradationGeometry['sieves'] {

@@ -9,7 +9,7 @@ export function letterQuery(params: RevisionParams, version: number) {
   return queryOptions({
     queryKey: [...revisionKey(params), 'letter', version],
     queryFn: ({ signal }) => fetchLetter(letterHref(params), signal),
-    staleTime: Number.POSITIVE_INFINITY,
+    staleTime: 5_000,
     gcTime: 60_000,
   });
 }

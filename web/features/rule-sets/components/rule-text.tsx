@@ -20,7 +20,9 @@ export function RuleText({ rule, tables }: { rule: RuleView; tables: readonly Ta
         <RichText>{rule.sentence}</RichText>
       </h3>
       <dl className="rule-facts">
-        <Fact name="Applies">{rule.condition ?? 'always'}</Fact>
+        <Fact name="Applies" wide>
+          {rule.condition ?? 'always'}
+        </Fact>
         <Fact name="Severity">{rule.severity}</Fact>
         <Fact name="Rounding">{rule.rounding}</Fact>
         {rule.precision ? <Fact name="Precision">{rule.precision}</Fact> : null}
@@ -35,13 +37,13 @@ export function RuleText({ rule, tables }: { rule: RuleView; tables: readonly Ta
             ))}
           </Fact>
         ) : null}
-        <Fact name="Source">
+        <Fact name="Source" wide>
           {rule.source}{' '}
           <span className={rule.sourceOrigin === 'memory' ? 'outcome-undecided' : 'origin'}>
             {originWords[rule.sourceOrigin]}
           </span>
         </Fact>
-        <Fact name="Supplied by">
+        <Fact name="Supplied by" wide>
           {rule.document}
           {rule.displaced.map((each) => (
             <span key={`${each.document}${each.text}`} className="mute">
@@ -53,7 +55,7 @@ export function RuleText({ rule, tables }: { rule: RuleView; tables: readonly Ta
           {rule.verifiedBy ? <span className="mute"> · verified by {rule.verifiedBy}</span> : null}
         </Fact>
         {rule.advice ? (
-          <Fact name="Advice">
+          <Fact name="Advice" wide>
             <RichText>{rule.advice}</RichText>
           </Fact>
         ) : null}
@@ -62,9 +64,9 @@ export function RuleText({ rule, tables }: { rule: RuleView; tables: readonly Ta
   );
 }
 
-function Fact({ name, children }: { name: string; children: React.ReactNode }) {
+function Fact({ name, wide = false, children }: { name: string; wide?: boolean; children: React.ReactNode }) {
   return (
-    <div className="rule-fact">
+    <div className={wide ? 'rule-fact rule-fact-wide' : 'rule-fact'}>
       <dt>{name}</dt>
       <dd>{children}</dd>
     </div>

@@ -14,13 +14,13 @@ import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { useContractForm } from '../../../lib/form';
 import { takeHandedOverFile } from '../../../lib/handed-over-file';
+import { onlyOne } from '../../../lib/only-one';
 import { paths } from '../../../lib/paths';
 import { asProblem } from '../../../lib/problem';
 import { useLaboratories } from '../../../lib/queries/laboratories-query';
 import { projectQuery, useProjects } from '../../../lib/queries/projects-query';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useUploadSubmittal } from '../api/upload-workbook';
-import { onlyOne } from '../lib/only-one';
 import { sectionWords } from '../lib/section-words';
 import { ChosenWorkbook } from './chosen-workbook';
 
