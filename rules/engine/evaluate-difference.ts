@@ -127,6 +127,8 @@ function reported(world: World, measure: DifferenceMeasure, at: Conditions): Pai
   if (doubt !== null) return undecided(doubt);
   if (!taken.ok) return taken;
   const { recomputed, interpolated, items } = taken.sample;
+  const ofReported = recomputed?.reported ? null : doubtAbout(world, request, null);
+  if (ofReported !== null) return undecided(ofReported);
   if (recomputed === null) {
     return notShown(`The raw readings from which ${label} could be recomputed are not given.`);
   }

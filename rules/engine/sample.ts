@@ -53,7 +53,8 @@ export function takeSample(world: World, request: SampleRequest): SampleResult {
 
 export function labelOfRequest(world: World, { quantity, at }: SampleRequest): string {
   const entry = world.view.quantity(quantity);
-  const { trial: _trial, ...rest } = at;
+  const { trial: _trial, stockpile, ...others } = at;
+  const rest = stockpile === undefined || stockpile === 'each' ? others : { ...others, stockpile };
   return entry ? quantityPhrase(entry, rest) : quantity;
 }
 

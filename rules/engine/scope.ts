@@ -25,13 +25,7 @@ export function inScope<T extends Candidate>(scope: Scope<T>): { ok: true; chose
     return notShown(`There is no reading of ${label} by the ${laboratory}'s laboratory.`);
   }
   const ofStockpile = ofLaboratory.filter(({ at }) => sameStockpile(at.stockpile, wanted.stockpile));
-  if (ofStockpile.length === 0) {
-    return notShown(
-      wanted.stockpile === undefined
-        ? `There are readings of ${label} for single stockpiles, but none for the blend.`
-        : `There is no reading of ${label} for stockpile ${wanted.stockpile}.`,
-    );
-  }
+  if (ofStockpile.length === 0) return noStockpile(scope, ofLaboratory);
   const ofTrial = belongingToTrial(scope, ofStockpile);
   if (ofTrial.length === 0) {
     const trials = [...new Set(ofStockpile.map(({ at }) => at.trial ?? 'design'))];
@@ -42,6 +36,16 @@ export function inScope<T extends Candidate>(scope: Scope<T>): { ok: true; chose
     );
   }
   return ofBlend(scope, ofTrial);
+}
+
+function noStockpile<T extends Candidate>({ label, wanted }: Scope<T>, candidates: T[]): Obstacle {
+  if (wanted.stockpile === undefined) {
+    return notShown(`There are readings of ${label} for single stockpiles, but none for the blend.`);
+  }
+  if (candidates.some(({ at }) => at.stockpile === undefined)) {
+    return undecided(`Readings of ${label} do not say which stockpile they belong to.`);
+  }
+  return notShown(`There is no reading of ${label}.`);
 }
 
 /** Whether a quantity belongs to a trial of the mix; a property of aggregate or binder belongs to every trial. */
