@@ -1,7 +1,7 @@
 import { Button as AriaButton, Header, MenuSection } from 'react-aria-components';
 import type { Session } from '#shared/contracts/session';
 import { Menu, MenuItem } from '../../components/ui/menu';
-import { focusSearch } from '../../features/search/focus-search';
+import { focusSearchAfterMenu } from '../../features/search/focus-search';
 import { navigationOf } from './navigation';
 import { useChooseOrganisation } from './organisation-menu';
 import { PersonMenuItems } from './person-menu-items';
@@ -21,7 +21,7 @@ export function NarrowMenu({ session }: { session: Session }) {
               {item.label}
             </MenuItem>
           ))}
-          <MenuItem id="find" textValue="Find" onAction={focusSearch}>
+          <MenuItem id="find" textValue="Find" onAction={focusSearchAfterMenu}>
             Find a mix, clause or project
           </MenuItem>
         </MenuSection>

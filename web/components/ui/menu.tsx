@@ -20,7 +20,7 @@ export function Menu({
   return (
     <MenuTrigger>
       {trigger}
-      <Popover className="popover" offset={6}>
+      <Popover className="popover" offset={6} placement="bottom end">
         <AriaMenu className="menu" aria-label={label}>
           {children}
         </AriaMenu>
