@@ -1,7 +1,6 @@
-import type { Summary } from '#rules/engine/finding';
 import type { RevisionListItem } from '#shared/contracts/submittals';
 import { dateOfInstant, formatDate } from '#shared/format/dates';
-import { Mark } from '../../../components/ui/mark';
+import { OutcomeTally } from '../../../components/ui/outcome-tally';
 import { SectionHead } from '../../../components/ui/section-head';
 import { useSession } from '../../../lib/queries/session-query';
 
@@ -42,7 +41,7 @@ export function History({
                 <td>{day(revision.submittedAt) ?? <span className="mute">not yet</span>}</td>
                 <td>{day(revision.returnedAt) ?? ''}</td>
                 <td className="number">{revision.workingDaysTaken ?? ''}</td>
-                <td>{revision.summary ? <Tally summary={revision.summary} /> : ''}</td>
+                <td>{revision.summary ? <OutcomeTally summary={revision.summary} /> : ''}</td>
                 <td className="mute">
                   {revision.changes ?? (revision.number === 0 ? 'first revision' : '')}
                 </td>
@@ -52,23 +51,5 @@ export function History({
         </table>
       </div>
     </section>
-  );
-}
-
-function Tally({ summary }: { summary: Summary }) {
-  const counts = [
-    { mark: 'fail' as const, count: summary.fail },
-    { mark: 'notshown' as const, count: summary.notShown },
-    { mark: 'undecided' as const, count: summary.undecided },
-  ].filter(({ count }) => count > 0);
-  if (counts.length === 0) return <>{`all ${summary.pass} pass`}</>;
-  return (
-    <span className="tally-line">
-      {counts.map(({ mark, count }) => (
-        <span key={mark}>
-          <Mark name={mark} alone /> {count}
-        </span>
-      ))}
-    </span>
   );
 }

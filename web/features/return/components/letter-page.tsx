@@ -27,7 +27,7 @@ export function LetterPage({ document, page }: { document: PDFDocumentProxy; pag
   }, [document, page]);
   return (
     <div className="letter-sheet">
-      <canvas ref={canvas} aria-hidden="true" />
+      <canvas ref={canvas} role="img" aria-label={`Page ${page} of the letter`} />
       <p className="hidden-text">{text}</p>
     </div>
   );
