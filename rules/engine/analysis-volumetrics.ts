@@ -137,24 +137,29 @@ function voidsOf(at: Conditions, gmb: AnalysisNode | null, gmm: AnalysisNode | n
   );
 }
 
-/** One value for each number of gyrations; specimens compacted to that number go before heights of others. */
+/**
+ * One value for each number of gyrations: from specimens compacted to that number, else by heights, of the
+ * volumetric specimens before others.
+ */
 function densitiesOf(
   index: RecordIndex,
   trial: string,
   sets: CompactedSet[],
   gmm: AnalysisNode,
 ): AnalysisNode[] {
-  const plain = sets.filter((set) =>
-    Object.keys(set.at).every((key) => key === 'trial' || key === 'gyrations'),
-  );
-  const all = plain.flatMap((set) => relativeDensities(index, trial, set, gmm));
-  const direct = all.filter((node) => node.formula === null || !node.inputs.some(usesHeights));
-  const covered = new Set(direct.map((node) => node.at.gyrations));
-  return [...direct, ...all.filter((node) => !direct.includes(node) && !covered.has(node.at.gyrations))];
-}
-
-function usesHeights(node: AnalysisNode): boolean {
-  return (
-    node.quantity === 'specimen-height' || node.inputs.some((input) => input.quantity === 'specimen-height')
-  );
+  const plain = sets
+    .filter((set) => Object.keys(set.at).every((key) => key === 'trial' || key === 'gyrations'))
+    .toSorted((a, b) => Number(b.volumetric) - Number(a.volumetric));
+  const found = plain.map((set) => ({ set, nodes: relativeDensities(index, trial, set, gmm) }));
+  const isOwn = (set: CompactedSet, node: AnalysisNode) => node.at.gyrations === set.gyrations;
+  const ordered = [
+    ...found.flatMap(({ set, nodes }) => nodes.filter((node) => isOwn(set, node))),
+    ...found.flatMap(({ set, nodes }) => nodes.filter((node) => !isOwn(set, node))),
+  ];
+  const first = new Map<string, AnalysisNode>();
+  for (const node of ordered) {
+    const key = String(node.at.gyrations);
+    if (!first.has(key)) first.set(key, node);
+  }
+  return [...first.values()];
 }
