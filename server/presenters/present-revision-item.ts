@@ -4,14 +4,7 @@ import type { revisions } from '../db/schema/submittals';
 
 type Row = Pick<
   typeof revisions.$inferSelect,
-  | 'number'
-  | 'state'
-  | 'disposition'
-  | 'submittedAt'
-  | 'returnedAt'
-  | 'dueOn'
-  | 'workingDaysTaken'
-  | 'changes'
+  'number' | 'state' | 'disposition' | 'submittedAt' | 'returnedAt' | 'dueOn' | 'workingDaysTaken' | 'changes'
 >;
 
 export function presentRevisionItem(revision: Row, summary: Summary | null): RevisionListItem {

@@ -64,7 +64,11 @@ export function presentRevision(parts: RevisionParts): Revision {
   };
 }
 
-export function revisionFacts({ row, job, hasCheck }: Pick<RevisionParts, 'row' | 'job' | 'hasCheck'>): RevisionFacts {
+export function revisionFacts({
+  row,
+  job,
+  hasCheck,
+}: Pick<RevisionParts, 'row' | 'job' | 'hasCheck'>): RevisionFacts {
   const { revision, submittal, agency } = row;
   return {
     state: revision.state,
@@ -112,7 +116,10 @@ function declarationOf({ revision, submittedBy }: RevisionRow): Revision['declar
 
 type RevisionColumns = typeof revisions.$inferSelect;
 
-function returnedOf({ returnedAt, disposition }: RevisionColumns, decidedBy: string | null): Revision['returned'] {
+function returnedOf(
+  { returnedAt, disposition }: RevisionColumns,
+  decidedBy: string | null,
+): Revision['returned'] {
   if (returnedAt === null || disposition === null) return null;
   return { at: returnedAt.toISOString(), disposition, by: decidedBy ?? '' };
 }

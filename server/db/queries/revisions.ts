@@ -1,10 +1,11 @@
-import { and, asc, desc, eq, inArray, max, sql } from 'drizzle-orm';
+import { and, asc, eq, max, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/mysql-core';
 import type { Database } from '../client';
 import { checks } from '../schema/checks';
 import { files } from '../schema/files';
 import { laboratories, organisations, people } from '../schema/people';
 import { projects, sections } from '../schema/projects';
+import { returns } from '../schema/returns';
 import { mixRecords, revisions, submittals } from '../schema/submittals';
 import { type Reader, revisionsOf } from './reader';
 
@@ -122,12 +123,14 @@ export async function lockSubmittal(db: Database, reader: Reader, submittalId: s
   return row ?? null;
 }
 
-export function revisionsByIds(db: Database, ids: string[]) {
-  return db
-    .select(revisionColumns)
-    .from(revisions)
-    .where(inArray(revisions.id, ids))
-    .orderBy(desc(revisions.number));
+/** Who signed the return of a revision; null before it is sent. */
+export async function nameOfDecider(db: Database, revisionId: string): Promise<string | null> {
+  const [row] = await db
+    .select({ name: people.name })
+    .from(returns)
+    .innerJoin(people, eq(people.id, returns.decidedById))
+    .where(and(eq(returns.revisionId, revisionId), eq(returns.state, 'sent')));
+  return row?.name ?? null;
 }
 
 /** What lists show of a revision. */

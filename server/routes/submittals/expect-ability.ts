@@ -19,7 +19,10 @@ export function expectAbility(revision: Revision, { ability, states, done }: Nee
       detail: `Revision ${revision.number} is ${revision.state}, so it cannot be ${done}.`,
     });
   }
-  if (revision.state === 'draft' && (revision.job?.state === 'running' || revision.job?.state === 'waiting')) {
+  if (
+    revision.state === 'draft' &&
+    (revision.job?.state === 'running' || revision.job?.state === 'waiting')
+  ) {
     throw new Problem('wrong-state', {
       detail: 'The workbook is still being read.',
       fix: 'Wait until it is read, or cancel the reading.',

@@ -15,7 +15,12 @@ export const listSubmittalsRoute = route(listSubmittals, async ({ deps, query, a
     throw new Problem('invalid-input', { detail, errors: [{ pointer: '/query/cursor', detail }] });
   }
   const wanted = q?.trim() === '' ? undefined : q?.trim();
-  const rows = await querySubmittals(deps.db, actor, { ...filter, q: wanted, after, rows: limits.pageRows + 1 });
+  const rows = await querySubmittals(deps.db, actor, {
+    ...filter,
+    q: wanted,
+    after,
+    rows: limits.pageRows + 1,
+  });
   const page = rows.slice(0, limits.pageRows);
   const drafts = page.filter(({ revision }) => revision.state === 'draft').map(({ revision }) => revision.id);
   const jobs = await newestJobsOf(deps.db, 'revision', drafts);
@@ -25,8 +30,6 @@ export const listSubmittalsRoute = route(listSubmittals, async ({ deps, query, a
     items: page.map((row) =>
       presentSubmittalItem(row, { kind: actor.kind, job: jobs.get(row.revision.id) ?? null }),
     ),
-    nextCursor: more
-      ? writeCursor({ at: last.changedAt ?? last.revision.updatedAt, id: last.id })
-      : null,
+    nextCursor: more ? writeCursor({ at: last.changedAt ?? last.revision.updatedAt, id: last.id }) : null,
   };
 });

@@ -1,10 +1,7 @@
-import { and, eq } from 'drizzle-orm';
 import type { Revision } from '#shared/contracts/submittals';
 import { newestCheckHead } from '../../db/queries/checks';
 import { newestJobOf } from '../../db/queries/jobs';
-import { findRevision, listRevisions, type RevisionRow } from '../../db/queries/revisions';
-import { people } from '../../db/schema/people';
-import { returns } from '../../db/schema/returns';
+import { findRevision, listRevisions, nameOfDecider, type RevisionRow } from '../../db/queries/revisions';
 import type { Deps } from '../../deps';
 import type { RequestActor } from '../../middleware/authenticate';
 import { presentRevision } from '../../presenters/present-revision';
@@ -16,7 +13,11 @@ export interface RevisionPlace {
 }
 
 /** A revision that the actor's organisation may see; everything else answers as absent. */
-export async function expectRevision(deps: Deps, actor: RequestActor, place: RevisionPlace): Promise<RevisionRow> {
+export async function expectRevision(
+  deps: Deps,
+  actor: RequestActor,
+  place: RevisionPlace,
+): Promise<RevisionRow> {
   const row = await findRevision(deps.db, actor, place);
   if (row === null) throw new Problem('not-found');
   return row;
@@ -32,27 +33,27 @@ export async function viewRevision(deps: Deps, actor: RequestActor, row: Revisio
     actor.kind === 'contractor'
       ? newestJobOf(deps.db, { subjectKind: 'revision', subjectId: revision.id })
       : null,
-    revision.state === 'returned' ? decider(deps, revision.id) : null,
+    revision.state === 'returned' ? nameOfDecider(deps.db, revision.id) : null,
   ]);
   return presentRevision({ row, actor, now: deps.now(), job, hasCheck: check !== null, all, decidedBy });
 }
 
 /** The same after an act: read anew, by whatever state it is in now. */
-export async function viewRevisionAt(deps: Deps, actor: RequestActor, place: RevisionPlace): Promise<Revision> {
+export async function viewRevisionAt(
+  deps: Deps,
+  actor: RequestActor,
+  place: RevisionPlace,
+): Promise<Revision> {
   return viewRevision(deps, actor, await expectRevision(deps, actor, place));
 }
 
 /** Refuses a writer who saw an older version, with the present state beside it. */
-export async function expectSeen(deps: Deps, actor: RequestActor, row: RevisionRow, version: number): Promise<void> {
+export async function expectSeen(
+  deps: Deps,
+  actor: RequestActor,
+  row: RevisionRow,
+  version: number,
+): Promise<void> {
   if (version === row.revision.version) return;
   throw new Problem('version-stale', { present: await viewRevision(deps, actor, row) });
-}
-
-async function decider(deps: Deps, revisionId: string): Promise<string | null> {
-  const [row] = await deps.db
-    .select({ name: people.name })
-    .from(returns)
-    .innerJoin(people, eq(people.id, returns.decidedById))
-    .where(and(eq(returns.revisionId, revisionId), eq(returns.state, 'sent')));
-  return row?.name ?? null;
 }

@@ -9,11 +9,14 @@ import { route } from '../define-route';
 import { expectAbility } from './expect-ability';
 import { expectRevision, expectSeen, viewRevision, viewRevisionAt } from './load-revision';
 
-export const uploadSubmittalRoute = route(uploadSubmittal, async ({ deps, body, files, actor, requestId }) => {
-  const workbook = expectWorkbook(files);
-  const place = await upload(deps, { actor, requestId, ...body, workbook });
-  return viewRevisionAt(deps, actor, place);
-});
+export const uploadSubmittalRoute = route(
+  uploadSubmittal,
+  async ({ deps, body, files, actor, requestId }) => {
+    const workbook = expectWorkbook(files);
+    const place = await upload(deps, { actor, requestId, ...body, workbook });
+    return viewRevisionAt(deps, actor, place);
+  },
+);
 
 export const startRevisionRoute = route(
   startRevision,
@@ -36,8 +39,11 @@ export const replaceWorkbookRoute = route(
   replaceWorkbook,
   async ({ deps, params, files, version, actor, requestId }) => {
     const row = await expectRevision(deps, actor, params);
-    const needed = { ability: 'replaceWorkbook', states: ['draft'], done: 'given another workbook' } as const;
-    expectAbility(await viewRevision(deps, actor, row), { ...needed, states: ['draft'] });
+    expectAbility(await viewRevision(deps, actor, row), {
+      ability: 'replaceWorkbook',
+      states: ['draft'],
+      done: 'given another workbook',
+    });
     await expectSeen(deps, actor, row, version);
     await replace(deps, { actor, requestId, row, version, workbook: expectWorkbook(files) });
     return viewRevisionAt(deps, actor, params);

@@ -1,0 +1,50 @@
+import { getReading, getSheet, keepAnswer, keepAttributes } from '#shared/contracts/readings';
+import { keepAnswers as keep } from '../../commands/readings/keep-answers';
+import { keepAttributes as keepTyped } from '../../commands/readings/keep-attributes';
+import { gridOf, loadSheet } from '../../db/queries/cell-grids';
+import { findMixRecord } from '../../db/queries/records';
+import { Problem } from '../../problem';
+import { route } from '../define-route';
+import { expectRevision } from '../submittals/load-revision';
+import { expectDraft } from './expect-draft';
+import { viewReading } from './view-reading';
+
+export const getReadingRoute = route(getReading, async ({ deps, params, actor }) =>
+  viewReading(deps, actor, await expectRevision(deps, actor, params)),
+);
+
+/** Most rows in one answer; a page asks for the window that it shows. */
+const mostRows = 2000;
+
+export const getSheetRoute = route(getSheet, async ({ deps, params, query, actor }) => {
+  const row = await expectRevision(deps, actor, params);
+  const from = query.from ?? 1;
+  const to = Math.min(query.to ?? from + mostRows - 1, from + mostRows - 1);
+  const sheet = await loadSheet(deps.db, { fileId: row.workbook.id, name: query.sheet, from, to });
+  if (sheet === null) throw noSheet(query.sheet, (await gridOf(deps.db, row.workbook.id))?.sheets ?? []);
+  const kept = await findMixRecord(deps.db, row.revision.id);
+  const shown = new Set(sheet.cells.map(({ address }) => address));
+  const uses = (kept?.reading.uses ?? []).filter((use) => use.sheet === sheet.name && shown.has(use.cell));
+  return { sheet, uses };
+});
+
+export const keepAnswerRoute = route(keepAnswer, async ({ deps, params, body, version, actor }) => {
+  const row = await expectDraft(deps, actor, params, version);
+  await keep(deps, { actor, row, given: body.answers });
+  return viewReading(deps, actor, await expectRevision(deps, actor, params));
+});
+
+export const keepAttributesRoute = route(keepAttributes, async ({ deps, params, body, version, actor }) => {
+  const row = await expectDraft(deps, actor, params, version);
+  await keepTyped(deps, { actor, row, given: body.attributes });
+  return viewReading(deps, actor, await expectRevision(deps, actor, params));
+});
+
+function noSheet(name: string, sheets: readonly { name: string }[]): Problem {
+  const detail = `The workbook has no sheet “${name}”.`;
+  const fix =
+    sheets.length === 0
+      ? 'Wait until it is read.'
+      : `Choose one of ${sheets.map((each) => each.name).join(', ')}.`;
+  return new Problem('invalid-input', { detail, fix, errors: [{ pointer: '/query/sheet', detail, fix }] });
+}
