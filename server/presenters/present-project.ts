@@ -1,0 +1,122 @@
+import type { Project, ProjectListItem, Section } from '#shared/contracts/projects';
+import { dateOfInstant, formatDate } from '#shared/format/dates';
+import type { Database } from '../db/client';
+import { type EditionRow, editionReference, listEditions } from '../db/queries/editions';
+import {
+  contactsOfProject,
+  contractorsOfProjects,
+  countMixes,
+  type ProjectRow,
+  type SectionRow,
+  sectionsOfProjects,
+} from '../db/queries/projects';
+import type { Deps } from '../deps';
+import { type Actor, preparesSubmittals } from '../policies/actor';
+import { editionState, holdsOn, layersOf, layersOn } from '../policies/edition-dates';
+import { confirmsSections, managesProjects } from '../policies/session-abilities';
+import { templateHrefOf } from './template-href';
+
+export async function presentProjectList(
+  db: Database,
+  actor: Actor,
+  rows: ProjectRow[],
+): Promise<ProjectListItem[]> {
+  const ids = rows.map(({ project }) => project.id);
+  const contractors = await contractorsOfProjects(db, actor, ids);
+  const sections = await sectionsOfProjects(db, ids);
+  const mixes = await countMixes(db, actor, ids);
+  return rows.map(({ project, agency }) => ({
+    id: project.id,
+    number: project.number,
+    title: project.title,
+    lettingOn: project.lettingOn,
+    agency: { id: agency.id, name: agency.name },
+    contractors: contractorsOf(contractors, project.id),
+    sections: sections
+      .filter(({ section }) => section.projectId === project.id)
+      .map(({ section, base, layers }) => ({
+        title: base.title,
+        edition: base.edition,
+        layers: layers.map(({ title }) => title),
+        confirmed: section.confirmedAt !== null,
+      })),
+    mixes: mixes.find(({ projectId }) => projectId === project.id)?.total ?? 0,
+  }));
+}
+
+export async function presentProject(
+  deps: Pick<Deps, 'db' | 'now'>,
+  actor: Actor,
+  { project, agency }: ProjectRow,
+): Promise<Project> {
+  const { db } = deps;
+  const sections = await sectionsOfProjects(db, [project.id]);
+  const chooses = confirmsSections(actor);
+  const editions = chooses ? await listEditions(db, project.agencyId) : [];
+  const today = dateOfInstant(deps.now().toISOString(), agency.timeZone);
+  return {
+    id: project.id,
+    number: project.number,
+    title: project.title,
+    lettingOn: project.lettingOn,
+    facts: project.facts,
+    contacts: await contactsOfProject(db, project.id),
+    agency: { id: agency.id, name: agency.name },
+    contractors: contractorsOf(await contractorsOfProjects(db, actor, [project.id]), project.id),
+    sections: sections.map(presentSection),
+    proposals: proposalsFor(project.lettingOn, { editions, sections }),
+    choices: editions
+      .filter((each) => each.layerOfKey === null && !each.withdrawn)
+      .map((base) => ({
+        base: editionReference(base),
+        layers: layersOf(base, editions).map(editionReference),
+        state: choiceState(base, { all: editions, today }),
+      })),
+    version: project.version,
+    abilities: {
+      change: managesProjects(actor),
+      confirmSections: chooses,
+      upload: preparesSubmittals(actor) && sections.some(({ section }) => section.confirmedAt !== null),
+    },
+  };
+}
+
+function presentSection({ section, base, layers, confirmedBy }: SectionRow): Section {
+  return {
+    id: section.id,
+    base: editionReference(base),
+    layers: layers.map(editionReference),
+    confirmed: section.confirmedAt !== null,
+    confirmedBy,
+    resolvedHash: section.resolvedHash,
+    version: section.version,
+    templateHref: templateHrefOf({ projectId: section.projectId, sectionId: section.id }),
+  };
+}
+
+/** What the letting date calls for and no section holds yet. It never moves a section that exists. */
+function proposalsFor(
+  lettingOn: string | null,
+  { editions, sections }: { editions: EditionRow[]; sections: SectionRow[] },
+): Project['proposals'] {
+  if (lettingOn === null) return [];
+  const taken = new Set(sections.map(({ base }) => base.ruleSetKey));
+  return editions
+    .filter((each) => each.layerOfKey === null && !taken.has(each.ruleSetKey))
+    .filter((each) => holdsOn(each, { all: editions, date: lettingOn }))
+    .map((base) => ({
+      base: editionReference(base),
+      layers: layersOn(base, { all: editions, date: lettingOn }).map(editionReference),
+      why: `Edition ${base.edition} is in force on the letting date, ${formatDate(lettingOn)}.`,
+    }));
+}
+
+function choiceState(base: EditionRow, dates: { all: EditionRow[]; today: string }) {
+  const state = editionState(base, dates);
+  // Withdrawn ones are not offered; the filter before this has left them out.
+  return state === 'withdrawn' ? 'superseded' : state;
+}
+
+function contractorsOf(rows: { projectId: string; id: string; name: string }[], projectId: string) {
+  return rows.filter((row) => row.projectId === projectId).map(({ id, name }) => ({ id, name }));
+}

@@ -1,0 +1,17 @@
+import { confirmSection as confirmEndpoint } from '#shared/contracts/projects';
+import { confirmSection } from '../../commands/projects/keep-section';
+import { allow } from '../../policies/allow';
+import { confirmsSections } from '../../policies/session-abilities';
+import { presentProject } from '../../presenters/present-project';
+import { route } from '../define-route';
+import { loadProject } from './load-project';
+
+export const confirmSectionRoute = route(
+  confirmEndpoint,
+  async ({ deps, actor, params: { projectId }, body, requestId }) => {
+    const row = await loadProject(deps, actor, projectId);
+    allow(confirmsSections(actor));
+    await confirmSection(deps, { actor, projectId, choice: body, requestId });
+    return presentProject(deps, actor, row);
+  },
+);
