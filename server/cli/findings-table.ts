@@ -1,5 +1,6 @@
 import type { CheckResult, Finding } from '#rules/engine/finding';
 import type { ReadingResult } from '#rules/reading/reading-result';
+import { marginText } from '#shared/format/margin';
 
 /** The findings as a table for a terminal, in the engine's order, with what could not be read under it. */
 export function findingsTable(check: CheckResult, reading: ReadingResult): string {
@@ -31,12 +32,12 @@ function rowOf(finding: Finding): string[] {
     finding.outcome === 'not shown' || finding.outcome === 'undecided' || finding.clause === null;
   const told =
     needsReason && finding.reason !== '' ? `${finding.sentence} ${finding.reason}` : finding.sentence;
-  return [finding.clause ?? 'does not add up', `${outcome}${advisory}`, marginText(finding.margin), told];
-}
-
-function marginText(margin: number | null): string {
-  if (margin === null) return '';
-  return margin > 0 ? `+${margin}` : String(margin).replace('-', '−');
+  return [
+    finding.clause ?? 'does not add up',
+    `${outcome}${advisory}`,
+    finding.clause === null ? '' : marginText(finding),
+    told,
+  ];
 }
 
 function table(rows: string[][]): string[] {

@@ -3,7 +3,14 @@ import { labelKey } from '#rules/reading/plain-text';
 import { matchHeader } from '#rules/reading/sheet-index';
 import { headerRow } from '#rules/reading/template-layout';
 
-export type FilledValue = string | number | Date | { formula: string; result: number } | null;
+export type FilledValue =
+  | string
+  | number
+  | Date
+  | { formula: string; result: number }
+  /** A number under a number format of its own. */
+  | { value: number; format: string }
+  | null;
 
 export interface TemplateContent {
   /** Sheet of labels: label to value. */
@@ -24,7 +31,7 @@ export interface TemplateContent {
 export function fillTemplate(workbook: ExcelJS.Workbook, content: TemplateContent): void {
   const submittal = sheetOf(workbook, 'Submittal');
   for (const [label, value] of Object.entries(content.submittal)) {
-    submittal.getCell(rowOf(submittal, label), 2).value = value;
+    setValue(submittal.getCell(rowOf(submittal, label), 2), value);
   }
   for (const [name, rows] of Object.entries(content.tables)) {
     const sheet = sheetOf(workbook, name);
@@ -35,11 +42,18 @@ export function fillTemplate(workbook: ExcelJS.Workbook, content: TemplateConten
     rows.forEach((row, at) => {
       for (const [header, value] of Object.entries(row)) {
         const cell = sheet.getCell(headerRow + (hasMethods ? 2 : 1) + at, columnOf(sheet, header));
-        cell.value = value;
+        setValue(cell, value);
       }
     });
   }
   fillGradation(sheetOf(workbook, 'Gradation'), content.gradation);
+}
+
+function setValue(cell: ExcelJS.Cell, value: FilledValue): void {
+  if (value !== null && typeof value === 'object' && 'format' in value) {
+    cell.value = value.value;
+    cell.numFmt = value.format;
+  } else cell.value = value;
 }
 
 export function sheetOf(workbook: ExcelJS.Workbook, name: string): ExcelJS.Worksheet {
@@ -73,13 +87,13 @@ function fillGradation(sheet: ExcelJS.Worksheet, gradation: TemplateContent['gra
   gradation.stockpiles.forEach(({ name, passing }, at) => {
     sheet.getCell(headerRow + 1, at + 2).value = name;
     passing.forEach((value, index) => {
-      sheet.getCell(rows[index] as number, at + 2).value = value;
+      setValue(sheet.getCell(rows[index] as number, at + 2), value);
     });
   });
   for (const [header, values] of Object.entries(gradation.columns)) {
     const column = columnOf(sheet, header);
     values.forEach((value, index) => {
-      sheet.getCell(rows[index] as number, column).value = value;
+      setValue(sheet.getCell(rows[index] as number, column), value);
     });
   }
 }

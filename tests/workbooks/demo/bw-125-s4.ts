@@ -2,7 +2,7 @@ import { type DemoDates, type DemoMix, dateBefore, specimen } from './demo-mix';
 
 /**
  * Brightwater's 12.5 mm surface mix. The dust proportion that it reports is passing 0.075 mm over total binder,
- * 5.6/5.3 = 1.06, shown as 1.1; over effective binder it is 1.26.
+ * 5.6/5.3 = 1.06; over effective binder it is 1.26.
  */
 export function brightwaterSurface(dates: DemoDates): DemoMix {
   return {
@@ -95,12 +95,6 @@ export function brightwaterSurface(dates: DemoDates): DemoMix {
           [126.1, 115.5],
         ],
         maximum: [specimen(2.42, 4713.2), specimen(2.418, 4710.8)],
-        reported: {
-          'Air voids': 4,
-          'Voids in the mineral aggregate': 14.3,
-          'Voids filled with asphalt': 72.1,
-          'Dust proportion': 1.1,
-        },
       },
       {
         trial: 'C',
@@ -123,6 +117,13 @@ export function brightwaterSurface(dates: DemoDates): DemoMix {
         ],
       },
     ],
+    // What the laboratory reports for the proposed job mix, trial B.
+    reported: {
+      'Air voids': 4,
+      'Voids in the mineral aggregate': 14.3,
+      'Voids filled with asphalt': 72.1,
+      'Dust proportion': { formula: '5.6/5.3', result: 5.6 / 5.3 },
+    },
     aggregates: [
       {
         'Sand equivalent': 54,
@@ -134,7 +135,6 @@ export function brightwaterSurface(dates: DemoDates): DemoMix {
         'Soundness loss sodium': 4,
       },
       ...[4.82, 4.95, 4.7].map((content, at) => ({
-        Stockpile: 'RAP',
         Specimen: at + 1,
         'Binder content of the reclaimed asphalt pavement': content,
       })),
@@ -241,8 +241,6 @@ export function brightwaterSurfaceMended(dates: DemoDates): DemoMix {
     stockpiles: mix.stockpiles.map((pile, at) => ({ ...pile, passing: passing[at] ?? pile.passing })),
     // 0.075 mm: 0.25·1.2 + 0.2·1.8 + 0.35·5.5 + 0.2·9.2 = 4.43.
     jobMix: [100, 96.3, 86.5, 59.2, 42.3, 29.5, 20.6, 12.4, 7.2, 4.4],
-    trials: mix.trials.map((trial) =>
-      trial.reported ? { ...trial, reported: { ...trial.reported, 'Dust proportion': 1 } } : trial,
-    ),
+    reported: { ...mix.reported, 'Dust proportion': 0.99 },
   };
 }

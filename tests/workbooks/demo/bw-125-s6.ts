@@ -14,6 +14,6 @@ export function brightwaterInDoubt(dates: DemoDates): TemplateContent {
   rowOf('A', 1)['Tested on'] = '03/04/2026';
   rowOf('D', 1)['Bulk specific gravity of the compacted mix'] = '2.40*';
   rowOf('D', 3)['Saturated surface-dry mass'] = '4721,5';
-  rowOf('B', 'mean')['Voids filled with asphalt'] = 0.721;
+  rowOf('design', 'mean')['Voids filled with asphalt'] = { value: 0.721, format: '0.000' };
   return { ...content, tables: { ...content.tables, Trials: trials } };
 }

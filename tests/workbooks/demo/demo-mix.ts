@@ -43,6 +43,8 @@ export interface DemoMix {
   stockpiles: DemoStockpile[];
   jobMix: FilledValue[];
   trials: DemoTrial[];
+  /** Reported for the proposed job mix where no trial of that name was made. */
+  reported?: Record<string, FilledValue>;
   aggregates: Record<string, FilledValue>[];
   moisture: { subset: 'dry' | 'conditioned'; loads: number[]; voids: number[]; saturation: number[] }[];
   performance: Record<string, FilledValue>[];
@@ -76,7 +78,10 @@ export function contentOf(mix: DemoMix): TemplateContent {
         'Apparent specific gravity of the aggregate': pile.gsa,
         'Water absorption of the aggregate': pile.absorption,
       })),
-      Trials: mix.trials.flatMap((trial) => trialRows(trial, mix.testedOn)),
+      Trials: [
+        ...mix.trials.flatMap((trial) => trialRows(trial, mix.testedOn)),
+        ...(mix.reported ? [{ Trial: 'design', Specimen: 'mean', ...mix.reported }] : []),
+      ],
       Aggregates: [
         ...mix.aggregates,
         ...mix.stockpiles.map((pile) => ({

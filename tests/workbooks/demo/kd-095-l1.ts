@@ -24,6 +24,7 @@ export function kestrelSurface(dates: DemoDates): DemoMix {
       'Compaction temperature': 136,
       'Reclaimed asphalt pavement content by mass of mix': 0,
       'Reclaimed asphalt shingle content by mass of mix': 0,
+      'Recycled binder ratio as reported': 0,
     },
     sievesMm: [12.5, 9.5, 4.75, 2.36, 1.18, 0.6, 0.3, 0.15, 0.075],
     stockpiles: [
@@ -65,7 +66,7 @@ export function kestrelSurface(dates: DemoDates): DemoMix {
         specimens: [specimen(2.354, 4702.4), specimen(2.356, 4705.1)],
       },
       {
-        trial: 'B',
+        trial: 'design',
         binderContent: 5.9,
         // Gse is 94.1/(100/2.463 − 5.9/1.026) = 2.700 in every trial.
         gmm: [2.464, 2.462],
@@ -87,7 +88,7 @@ export function kestrelSurface(dates: DemoDates): DemoMix {
         trial: 'C',
         binderContent: 6.4,
         gmm: [2.445, 2.444],
-        specimens: [specimen(2.373, 4711.5), specimen(2.375, 4708.6)],
+        specimens: [specimen(2.373, 4711.5), specimen(2.375, 4714.3)],
       },
     ],
     aggregates: [

@@ -76,7 +76,7 @@ export function tollhouseBinder(dates: DemoDates): DemoMix {
         specimens: [specimen(2.388, 4735.2), specimen(2.391, 4731.7)],
       },
       {
-        trial: 'B',
+        trial: 'design',
         binderContent: 4.6,
         // Va = 100·(2.5225 − 2.4013)/2.5225 = 4.80.
         gmm: [2.523, 2.522],
@@ -112,7 +112,6 @@ export function tollhouseBinder(dates: DemoDates): DemoMix {
         'Soundness loss sodium': 5,
       },
       ...[4.61, 4.72, 4.55].map((content, at) => ({
-        Stockpile: 'RAP',
         Specimen: at + 1,
         'Binder content of the reclaimed asphalt pavement': content,
       })),
@@ -156,7 +155,7 @@ export function tollhouseBinderMended(dates: DemoDates): DemoMix {
         specimens: [specimen(2.406, 4736.8), specimen(2.409, 4733.5)],
       },
       {
-        trial: 'B',
+        trial: 'design',
         binderContent: 4.8,
         // Va = 100·(2.515 − 2.4143)/2.515 = 4.00.
         gmm: [2.516, 2.514],
@@ -190,6 +189,6 @@ export function tollhouseBinderMended(dates: DemoDates): DemoMix {
     ],
     performance: performanceRows({ rut: [6.9, 7.3], flexibility: [10.4, 9.8, 10.9, 10.1], cracking: [] }),
     documents: documentRows(dates),
-    testedOn: dateBefore(dates.submittedOn, 9),
+    testedOn: dateBefore(dates.submittedOn, 19),
   };
 }
