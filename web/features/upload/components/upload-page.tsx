@@ -19,9 +19,9 @@ import { paths } from '../../../lib/paths';
 import { asProblem } from '../../../lib/problem';
 import { useLaboratories } from '../../../lib/queries/laboratories-query';
 import { projectQuery, useProjects } from '../../../lib/queries/projects-query';
+import { sectionWords } from '../../../lib/section-words';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useUploadSubmittal } from '../api/upload-workbook';
-import { sectionWords } from '../lib/section-words';
 import { ChosenWorkbook } from './chosen-workbook';
 
 export function UploadPage({ projectId }: { projectId: string | null }) {
