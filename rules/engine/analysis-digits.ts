@@ -6,7 +6,7 @@ export function displayedUnit(reading: Reading): number {
   const value = reading.value ?? 0;
   const written = reading.source ? writtenNumber(reading.source.text, value) : null;
   if (written === null) return 10 ** -decimalsOf(value);
-  return written.unit * scaleOf(value, written.value);
+  return written.unit * scaleOf(value, written);
 }
 
 /** Half a unit of the last displayed digit: how far the number behind the display may lie from it. */
@@ -46,9 +46,8 @@ function lastDigit(form: string): number {
 }
 
 /** A cell in psi displays digits of psi: its last digit is worth more or less in the canonical unit. */
-function scaleOf(value: number, written: number): number {
-  if (written === 0 || value === 0) return 1;
-  const scale = Math.abs(value / written);
-  // Within a per cent the two differ by display rounding only, not by unit.
-  return Math.abs(scale - 1) < 0.01 ? 1 : scale;
+function scaleOf(value: number, written: Written): number {
+  const isRoundedOnly = Math.abs(value - written.value) <= (written.unit / 2) * (1 + 1e-9);
+  if (isRoundedOnly || written.value === 0 || value === 0) return 1;
+  return Math.abs(value / written.value);
 }

@@ -3,8 +3,8 @@ import type { Conditions } from '#rules/record';
 import { analysisOf, computed, reading, reported, trialReadings } from './analysis-record';
 
 const stockpile = (name: string, share: number, gsb: number, at: Conditions = {}) => [
-  reading('stockpile-share', share, { ...at, stockpile: name }),
-  reading('bulk-specific-gravity-aggregate', gsb, { stockpile: name }),
+  reading('stockpile-share', share, { ...at, stockpile: name }, { text: share.toFixed(1) }),
+  reading('bulk-specific-gravity-aggregate', gsb, { stockpile: name }, { text: gsb.toFixed(3) }),
 ];
 
 describe('a blend of stockpiles', () => {

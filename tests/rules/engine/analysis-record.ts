@@ -61,7 +61,7 @@ export function computed(analysis: Analysis, quantity: string, at: Conditions): 
  */
 export function trialReadings(trial: string): Reading[] {
   return [
-    reading('binder-content', 5.3, { trial }),
+    reading('binder-content', 5.3, { trial }, { text: '5.30' }),
     reading('maximum-specific-gravity', 2.492, { trial }),
     reading('bulk-specific-gravity-mix', 2.39, { trial, specimen: '1' }, { text: '2.390' }),
     reading('bulk-specific-gravity-mix', 2.394, { trial, specimen: '2' }),
