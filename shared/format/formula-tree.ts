@@ -6,6 +6,7 @@ export type FormulaNode =
   | { kind: 'fraction'; over: FormulaNode; under: FormulaNode }
   | { kind: 'negative'; of: FormulaNode }
   | { kind: 'group'; of: FormulaNode }
+  | { kind: 'absolute'; of: FormulaNode }
   | { kind: 'call'; name: string; of: FormulaNode[] };
 
 const token = /\s*(?:(\d+(?:\.\d+)?)|([A-Za-zµτεσΣπ%][A-Za-z0-9%_.∞]*)|([-−+*·×/∕÷^(),|√]))/uy;
@@ -107,12 +108,20 @@ function atom(tokens: Tokens): FormulaNode | null {
     const of = atom(tokens);
     return of && { kind: 'call', name: '√', of: [bare(of)] };
   }
+  if (text === '|') return absolute(tokens);
   if (text === '(') {
     const of = sum(tokens);
     return of && closes(tokens) ? { kind: 'group', of } : null;
   }
   if (!/^[A-Za-zµτεσΣπ%]/u.test(text)) return null;
   return tokens.list[tokens.at] === '(' ? callOf(tokens, text) : { kind: 'symbol', name: text };
+}
+
+function absolute(tokens: Tokens): FormulaNode | null {
+  const of = sum(tokens);
+  if (!of || tokens.list[tokens.at] !== '|') return null;
+  tokens.at += 1;
+  return { kind: 'absolute', of };
 }
 
 function callOf(tokens: Tokens, name: string): FormulaNode | null {

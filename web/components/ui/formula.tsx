@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { type FormulaNode, parseFormula } from '#shared/format/formula-tree';
 import { QuantitySymbol } from './quantity-symbol';
+import { RichText } from './rich-text';
 
 /** A formula set as printed, with fractions; a text that is none is shown as it is written. */
 export function Formula({
@@ -12,7 +13,7 @@ export function Formula({
   values?: ReadonlyMap<string, ReactNode>;
 }) {
   const tree = parseFormula(children);
-  if (!tree) return <span className="font-mono">{children}</span>;
+  if (!tree) return <RichText>{children}</RichText>;
   return <span className="equation">{setNode(tree, values)}</span>;
 }
 
@@ -42,6 +43,14 @@ function setNode(node: FormulaNode, values: ReadonlyMap<string, ReactNode> | und
           <span>(</span>
           <span className="equation">{set(node.of)}</span>
           <span>)</span>
+        </span>
+      );
+    case 'absolute':
+      return (
+        <span className="equation equation-tight">
+          <span>|</span>
+          <span className="equation">{set(node.of)}</span>
+          <span>|</span>
         </span>
       );
     case 'call':

@@ -1,0 +1,81 @@
+import { describe, expect, it } from 'vitest';
+import { clauseParts, sectionOfClause } from '#shared/format/clause';
+import { findByFragment, findingFragment, slug } from '#shared/format/finding-key';
+import { gaugeText, marginText } from '#shared/format/margin';
+import { splitSymbols, symbolParts } from '#shared/format/symbols';
+import { formatBytes, formatQuantity, unitWord, withUnit } from '#shared/format/units';
+import { aFinding } from '#tests/builders/a-finding';
+
+describe('units', () => {
+  it('stand after their number with a space; a ratio has none', () => {
+    expect(withUnit('5.6', '%')).toBe('5.6 %');
+    expect(withUnit('1000', 's')).toBe('1,000 s');
+    expect(withUnit('1.3', '1')).toBe('1.3');
+    expect(unitWord('1')).toBe('');
+    expect(formatQuantity(4.4340000001, '%')).toBe('4.434 %');
+  });
+
+  it('give the size of a file in the words of its reader', () => {
+    expect(formatBytes(512)).toBe('512 bytes');
+    expect(formatBytes(184_000)).toBe('184 kB');
+    expect(formatBytes(1_240_000)).toBe('1.2 MB');
+  });
+});
+
+describe('trade symbols', () => {
+  it('have an upright subscript, acronyms none', () => {
+    expect(symbolParts('Pbe')).toEqual({ base: 'P', sub: 'be' });
+    expect(symbolParts('Gmm')).toEqual({ base: 'G', sub: 'mm' });
+    expect(symbolParts('P0.075')).toEqual({ base: 'P', sub: '0.075' });
+    expect(symbolParts('VMA')).toEqual({ base: 'VMA', sub: '' });
+    expect(symbolParts('t')).toEqual({ base: 't', sub: '' });
+  });
+
+  it('are found in a sentence without touching its words', () => {
+    expect(splitSymbols('bring Pbe up; Pbest stays')).toEqual([
+      { kind: 'text', text: 'bring ' },
+      { kind: 'symbol', base: 'P', sub: 'be' },
+      { kind: 'text', text: ' up; Pbest stays' },
+    ]);
+  });
+});
+
+describe('clauses and addresses', () => {
+  it('hang the letter from its section', () => {
+    expect(clauseParts('412.03(d)')).toEqual({ section: '412.03', letter: '(d)' });
+    expect(clauseParts('412')).toEqual({ section: '412', letter: '' });
+    expect(sectionOfClause(null)).toBeNull();
+  });
+
+  it('name a finding by rule and subject', () => {
+    expect(findingFragment({ rule: 'control-points', subject: '12.5 mm' })).toBe('control-points~12.5-mm');
+    expect(slug('consistency/Reported value')).toBe('consistency-reported-value');
+  });
+
+  it('lead from a clause to its first finding, and from nothing nowhere', () => {
+    const first = aFinding({ subject: 'stockpile A' });
+    const second = aFinding({ subject: 'stockpile B' });
+    expect(findByFragment([first, second], '#412.03(b)')).toBe(first);
+    expect(findByFragment([first, second], '#412.03%28b%29')).toBe(first);
+    expect(findByFragment([first, second], '#vma~stockpile-b')).toBe(second);
+    expect(findByFragment([first, second], '')).toBeNull();
+    expect(findByFragment([first, second], '#%')).toBeNull();
+  });
+});
+
+describe('the margin', () => {
+  it('has the decimals of the value that was judged', () => {
+    expect(marginText(aFinding())).toBe('−0.1');
+    expect(marginText(aFinding({ margin: 0 }))).toBe('0.0');
+  });
+
+  it('is empty where the finding has none', () => {
+    expect(marginText(aFinding({ outcome: 'not shown', observed: null, margin: null }))).toBe('');
+  });
+
+  it('ends the words that stand for the gauge', () => {
+    expect(gaugeText(aFinding())).toBe(
+      'Voids in the mineral aggregate are 13.9 %, at least 14.0. Margin −0.1.',
+    );
+  });
+});
