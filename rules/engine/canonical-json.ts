@@ -15,10 +15,16 @@ export function canonicalJson(value: unknown): string {
   }
   if (Array.isArray(value)) return `[${value.map((each) => canonicalJson(each ?? null)).join(',')}]`;
   if (typeof value !== 'object') throw new TypeError(`Canonical JSON cannot hold a ${typeof value}.`);
-  const members = Object.entries(value)
-    .filter(([, member]) => member !== undefined)
-    // RFC 8785, section 3.2.3: by UTF-16 code units, which is how ECMAScript compares strings.
-    .toSorted(([left], [right]) => (left < right ? -1 : left > right ? 1 : 0))
-    .map(([name, member]) => `${JSON.stringify(name)}:${canonicalJson(member)}`);
-  return `{${members.join(',')}}`;
+  return membersJson(value as Record<string, unknown>);
+}
+
+/** RFC 8785, section 3.2.3: sorted by UTF-16 code units, which is how sort() compares strings. */
+function membersJson(value: Record<string, unknown>): string {
+  let json = '';
+  for (const name of Object.keys(value).sort()) {
+    const member = value[name];
+    if (member !== undefined)
+      json += `${json === '' ? '' : ','}${JSON.stringify(name)}:${canonicalJson(member)}`;
+  }
+  return `{${json}}`;
 }

@@ -2,9 +2,10 @@ import { convert } from '../quantities/units';
 import { matchValue } from '../rule-sets/match-value';
 import type { AttributeMeasure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
-import { orList, withUnit } from '../rule-sets/words';
+import { orList } from '../rule-sets/words';
 import { attributeEvidence, attributeFact, attributeText } from './attribute-fact';
 import { satisfies } from './decide';
+import { distanceWords } from './distance-words';
 import type { Finding, Observed, ResolvedLimit } from './finding';
 import { judge, rounderOf } from './judge';
 import { makeFinding } from './make-finding';
@@ -99,11 +100,10 @@ function ofNumber(
     statistic: 'value',
     count: 1,
   };
-  const where = judgement.outcome === 'pass' ? 'inside' : 'outside';
   return makeFinding(world, rule, {
     ...base,
     outcome: judgement.outcome,
-    reason: `${withUnit(judgement.text, limit.unit)} is ${where} the limit.`,
+    reason: distanceWords(judgement, limit),
     observed,
     limit,
     margin: judgement.margin,

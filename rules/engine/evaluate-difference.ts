@@ -3,6 +3,7 @@ import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import type { DifferenceMeasure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
+import { distanceWords } from './distance-words';
 import { doubtAbout } from './doubts';
 import { conditionsOfSubjects } from './evaluate-reading';
 import type { Evidence, Finding, Observed } from './finding';
@@ -75,7 +76,7 @@ function ofSubject(world: World, rule: ResolvedRule, measure: DifferenceMeasure,
   return makeFinding(world, rule, {
     ...base,
     outcome: judgement.outcome,
-    reason: `The difference is ${judgement.outcome === 'pass' ? 'inside' : 'outside'} the limit.`,
+    reason: distanceWords(judgement, limit.limit),
     observed,
     limit: limit.limit,
     margin: judgement.margin,

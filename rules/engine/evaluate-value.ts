@@ -3,6 +3,7 @@ import type { Conditions } from '../record';
 import type { GradationMeasure, ReadingMeasure, Statistic } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
 import { plural } from '../rule-sets/words';
+import { distanceWords } from './distance-words';
 import { doubtAbout } from './doubts';
 import type { Finding, Observed, ResolvedLimit } from './finding';
 import { type Judgement, judge, type Rounder, rounderOf } from './judge';
@@ -110,7 +111,7 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   if (reported?.contradicts) {
     return makeFinding(world, rule, { ...parts, outcome: 'undecided', reason: reported.reason });
   }
-  const reason = [reasonOf(judgement, judgeable), judged.note, reported?.reason, originNote(sample)]
+  const reason = [reasonOf(judgement, judgeable, limit), judged.note, reported?.reason, originNote(sample)]
     .filter(Boolean)
     .join(' ');
   return makeFinding(world, rule, {
@@ -219,14 +220,14 @@ function sampleInUnit(
     : undecided(`The value is in ${own} and the limit in ${unit}: ${mean.reason}.`);
 }
 
-function reasonOf(judgement: Judgement, judgeable: Judgeable): string {
+function reasonOf(judgement: Judgement, judgeable: Judgeable, limit: ResolvedLimit): string {
   if (judgement.outcome === 'undecided') {
     return `The value is only known as ${judgeable.text ?? 'a range'}, which allows both a pass and a fail.`;
   }
   if (judgeable.allowed !== null) {
     return `Every value that ${judgeable.text ?? 'it'} allows is ${judgement.outcome === 'pass' ? 'inside' : 'outside'} the limit.`;
   }
-  return judgement.outcome === 'pass' ? 'The value is inside the limit.' : 'The value is outside the limit.';
+  return distanceWords(judgement, limit);
 }
 
 function originNote(sample: Sample): string {

@@ -42,6 +42,7 @@ export function makeFinding(world: World, rule: ResolvedRule, parts: FindingPart
   const observed = parts.observed ?? null;
   const limit = parts.limit ?? null;
   const date = parts.date ?? null;
+  const fixed = fixedWords(world, rule);
   const isJudged = outcome === 'pass' || outcome === 'fail';
   return {
     rule: rule.id,
@@ -55,18 +56,29 @@ export function makeFinding(world: World, rule: ResolvedRule, parts: FindingPart
     observed,
     limit,
     margin: isJudged ? (parts.margin ?? null) : null,
-    ruleSentence: ruleSentence(rule, view),
+    ruleSentence: fixed.sentence,
     requirement: requirementSentence({ rule, view, at, limit, date }),
     sentence: resultSentence({ rule, view, at, limit, outcome, observed, date }),
     reason,
     roundingSentence: parts.roundingSentence ?? null,
     precision: parts.precision ? { value: parts.precision.value, origin: parts.precision.origin } : null,
     advice: rule.advice ?? null,
-    source: sourceWords(rule.source ?? null),
+    source: fixed.source,
     gauge: gaugeOf(world, parts.quantity, limit),
     evidence: [...new Set(parts.evidence ?? [])],
   };
 }
+
+/** What a rule says whatever the mix is: put into words once a rule. */
+function fixedWords(world: World, rule: ResolvedRule): { sentence: string; source: string | null } {
+  const kept = wordsOfRules.get(rule);
+  if (kept) return kept;
+  const words = { sentence: ruleSentence(rule, world.view), source: sourceWords(rule.source ?? null) };
+  wordsOfRules.set(rule, words);
+  return words;
+}
+
+const wordsOfRules = new WeakMap<ResolvedRule, { sentence: string; source: string | null }>();
 
 /** "AASHTO M 323, Superpave Volumetric Mix Design, 2022, section 7; from memory, verify" */
 export function sourceWords(source: RuleSource | null): string | null {

@@ -58,12 +58,17 @@ export function labelOfRequest(world: World, { quantity, at }: SampleRequest): s
   return entry ? quantityPhrase(entry, rest) : quantity;
 }
 
+/** Without conditions: the reason names the one that is not met. */
+function bareLabel(world: World, { quantity }: SampleRequest): string {
+  return world.view.quantity(quantity)?.label ?? quantity;
+}
+
 function takeRecomputed(world: World, request: SampleRequest): SampleResult | null {
   const candidates = world.recomputed.get(request.quantity) ?? [];
   const isDesignGradation = request.quantity === 'percent-passing' && request.at.stockpile === undefined;
   // The job-mix gradation is what the workbook states; the recomputed blend is only compared with it.
   if (candidates.length === 0 || isDesignGradation) return null;
-  const label = labelOfRequest(world, request);
+  const label = bareLabel(world, request);
   const scope = { world, quantity: request.quantity, label, wanted: request.at, candidates };
   const inside = inScope(scope);
   if (!inside.ok) return inside;
@@ -98,7 +103,7 @@ function sampleOfSpecimens(values: RecomputedValue[]): Sample {
 function sampleOfRecomputed(value: RecomputedValue): Sample {
   const evidence = evidenceOfRecomputed(value);
   const interpolated = value.origin === 'interpolated';
-  const base = { qualifier: null, interpolated, recomputed: value };
+  const base = { interpolated, recomputed: value };
   if (interpolated || value.specimens.length === 0) {
     const item: SampleItem = { specimen: null, value: value.value, qualifier: null, at: value.at, evidence };
     return {
@@ -146,7 +151,7 @@ export function evidenceOfRecomputed(value: RecomputedValue): Evidence {
 
 function takeReadings(world: World, request: SampleRequest): SampleResult {
   const candidates = world.readings.get(request.quantity) ?? [];
-  const label = labelOfRequest(world, request);
+  const label = bareLabel(world, request);
   const inside = inScope({ world, quantity: request.quantity, label, wanted: request.at, candidates });
   if (!inside.ok) return inside;
   const isDerived = world.view.quantity(request.quantity)?.kind === 'derived';
