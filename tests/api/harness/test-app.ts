@@ -31,6 +31,9 @@ export async function startTestApp(overrides: Partial<Settings> = {}): Promise<T
     },
   };
   const woken = { jobs: 0, mail: 0 };
+  const count = (what: 'jobs' | 'mail') => {
+    woken[what] += 1;
+  };
   const settings: Settings = {
     ...parseSettings({
       DATABASE_URL: database.applicationUrl,
@@ -49,7 +52,7 @@ export async function startTestApp(overrides: Partial<Settings> = {}): Promise<T
     log: createLog(settings.logLevel),
     pool,
     now: () => clock.now,
-    wake: { jobs: () => void (woken.jobs += 1), mail: () => void (woken.mail += 1) },
+    wake: { jobs: () => count('jobs'), mail: () => count('mail') },
   });
   return {
     app: createApp({ deps }),
