@@ -5,7 +5,8 @@ import { type Locator, locate } from './locate-reference';
 import { type ConditionName, isReference, type MappingRule } from './mapping';
 import { understandDate } from './parse-date';
 import { placeOf, type ReadingContext } from './reading-log';
-import { doubtOf } from './settled';
+import { averageOf } from './row-role';
+import { certain, doubtOf } from './settled';
 import type { HeaderMatch, SheetIndex } from './sheet-index';
 import { keyWords, understandCondition } from './understand-condition';
 
@@ -74,7 +75,9 @@ function readKey(bound: RuleAtAnchor, name: ConditionName, cell: Cell, context: 
   if (name === 'specimen' && index.spanOf(cell).rows > 1 && rule.axis === 'down')
     return { state: 'blank' } as const;
   const about = typeof rule.quantity === 'string' ? { quantity: rule.quantity } : {};
-  const understood = understandCondition(name, keyCell, locator.header?.unit ?? null, rule.decimal ?? '.');
+  const understood =
+    averageKey(bound, locator, name, cell) ??
+    understandCondition(name, keyCell, locator.header?.unit ?? null, rule.decimal ?? '.');
   if (understood.state === 'blank') {
     if (!locator.required) return { state: 'blank' } as const;
     const empty = {
@@ -94,6 +97,14 @@ function readKey(bound: RuleAtAnchor, name: ConditionName, cell: Cell, context: 
   return settled;
 }
 
+/** "Mean A" is trial A, and "Mean" the trial of the rows above it. */
+function averageKey(bound: RuleAtAnchor, locator: Locator, name: ConditionName, cell: Cell) {
+  const named = averageOf(locator.cellFor(cell)?.text ?? '');
+  if (named === null) return null;
+  const trial = named === '' ? keyAbove(bound, locator, name, cell) : named;
+  return trial === null || name === 'specimen' ? null : certain(trial);
+}
+
 /** The nearest key above an empty one in its own column of keys. */
 function keyAbove(
   bound: RuleAtAnchor,
@@ -102,8 +113,9 @@ function keyAbove(
   cell: Cell,
 ): string | number | null {
   for (let row = cell.row - 1; row > bound.anchor.cell.row; row -= 1) {
-    const above = understandCondition(name, locator.cellFor({ row, column: cell.column }), null, '.');
-    if (above.state === 'value') return above.value;
+    const keyCell = locator.cellFor({ row, column: cell.column });
+    const above = understandCondition(name, keyCell, null, '.');
+    if (averageOf(keyCell?.text ?? '') === null && above.state === 'value') return above.value;
   }
   return null;
 }

@@ -13,3 +13,9 @@ export function rowRole(keyTexts: string[]): RowRole {
   if (texts.some((text) => spread.test(text) && !/\d/.test(text))) return 'spread';
   return 'specimen';
 }
+
+/** What a key names besides saying that its row is an average: `A` in "Mean A"; null where it is no average. */
+export function averageOf(text: string): string | null {
+  const plain = plainText(text);
+  return average.test(plain) ? plain.replace(average, '').replace(/^\s*(?:of|trial|[-:,])*\s*/i, '') : null;
+}
