@@ -13,5 +13,5 @@ export function changedOutcomes(before: readonly Finding[], after: readonly Find
     .slice(0, 5)
     .map((finding) => `${finding.clause ?? finding.title} ${finding.outcome}`)
     .join(', ');
-  return `Checked again. ${countOf(changed.length, 'outcome')} changed: ${said}.`;
+  return `Checked again. Changed: ${countOf(changed.length, 'outcome')}, ${said}.`;
 }
