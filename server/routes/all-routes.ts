@@ -21,6 +21,7 @@ import { confirmSectionRoute } from './projects/confirm-section';
 import { getProjectRoute } from './projects/get-project';
 import { getSectionTemplateRoute } from './projects/get-section-template';
 import { listProjectsRoute } from './projects/list-projects';
+import { returnRoutes } from './returns/return-routes';
 import { chooseOrganisationRoute } from './session/choose-organisation';
 import { getSessionRoute } from './session/get-session';
 import { getSignInOptionsRoute } from './session/get-sign-in-options';
@@ -42,6 +43,7 @@ export function allRoutes(settings: Settings): Route[] {
     ...[listLaboratoriesRoute, addLaboratoryRoute],
     ...[listProjectsRoute, getProjectRoute, addProjectRoute, changeProjectRoute],
     ...[confirmSectionRoute, changeSectionRoute, getSectionTemplateRoute],
+    ...returnRoutes,
     ...(settings.smtpUrl === null ? caughtMailRoutes : []),
   ];
 }
