@@ -1,5 +1,6 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 import { NotFoundPage } from './not-found-page';
+import { EitherLayout, eitherLoader, OpenLayout } from './open-layout';
 import { PageLoading, RootLayout } from './root-layout';
 import { RouteProblem, ShellProblem } from './route-problem';
 import { SignedInLayout, signedInLoader } from './signed-in-layout';
@@ -12,6 +13,7 @@ const signedIn: RouteObject[] = [
   { index: true, lazy: () => import('../features/home/home-route') },
   { path: 'organisations', lazy: () => import('../features/sign-in/choose-organisation-route') },
   { path: 'queue', lazy: () => import('../features/queue/queue-route') },
+  { path: 'submittals', lazy: () => import('../features/submittals/submittals-route') },
   { path: 'submittals/new', lazy: () => import('../features/upload/upload-route') },
   { path: 'submittals/:submittalId/next', lazy: () => import('../features/upload/next-revision-route') },
   {
@@ -30,6 +32,17 @@ const signedIn: RouteObject[] = [
     path: 'submittals/:submittalId/r/:number/gradation',
     lazy: () => import('../features/gradation/gradation-route'),
   },
+  {
+    path: 'submittals/:submittalId/r/:number/return',
+    lazy: () => import('../features/return/return-route'),
+  },
+  { path: 'projects', lazy: () => import('../features/projects/projects-route') },
+  { path: 'projects/new', lazy: () => import('../features/projects/new-project-route') },
+  { path: 'projects/:projectId', lazy: () => import('../features/projects/project-route') },
+  { path: 'projects/:projectId/change', lazy: () => import('../features/projects/change-project-route') },
+  { path: 'people', lazy: () => import('../features/people/people-route') },
+  { path: 'settings', lazy: () => import('../features/settings/settings-route') },
+  { path: 'laboratories', lazy: () => import('../features/settings/laboratories-route') },
   { path: 'rule-sets', lazy: () => import('../features/rule-sets/rule-sets-route') },
   { path: 'rule-sets/:ruleSetId/:edition', lazy: () => import('../features/rule-sets/rule-set-route') },
 ];
@@ -43,6 +56,12 @@ const open: RouteObject[] = [
   { path: 'set-up/:token', lazy: () => import('../features/set-up/set-up-route') },
 ];
 
+/** Mail caught on loopback: read by people who are invited and have no sign-in yet, too. */
+const either: RouteObject[] = [
+  { path: 'caught-mail', lazy: () => import('../features/caught-mail/caught-mail-route') },
+  { path: 'caught-mail/:mailId', lazy: () => import('../features/caught-mail/caught-mail-route') },
+];
+
 export function createRouter() {
   return createBrowserRouter([
     {
@@ -50,7 +69,13 @@ export function createRouter() {
       hydrateFallbackElement: <PageLoading />,
       errorElement: <ShellProblem />,
       children: [
-        { errorElement: <RouteProblem />, children: open },
+        { element: <OpenLayout />, children: [{ errorElement: <RouteProblem />, children: open }] },
+        {
+          element: <EitherLayout />,
+          loader: eitherLoader,
+          errorElement: <ShellProblem />,
+          children: [{ errorElement: <RouteProblem />, children: either }],
+        },
         {
           element: <SignedInLayout />,
           loader: signedInLoader,

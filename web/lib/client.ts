@@ -10,7 +10,14 @@ export const queryClient = createQueryClient({
   },
 });
 
-const openPages = ['/sign-in', '/set-up/', '/invitations/', '/forgotten-password', '/new-password/'];
+const openPages = [
+  '/sign-in',
+  '/set-up/',
+  '/invitations/',
+  '/forgotten-password',
+  '/new-password/',
+  '/caught-mail',
+];
 
 function isOpenPage(pathname: string): boolean {
   return openPages.some((page) => pathname.startsWith(page));

@@ -16,6 +16,7 @@ export function navigationOf(session: Session): NavigationItem[] {
     { label: 'Submittals', to: paths.submittals },
     { label: 'Projects', to: paths.projects },
     { label: 'Rule sets', to: paths.ruleSets },
+    active.kind === 'contractor' && { label: 'Laboratories', to: paths.laboratories },
     abilities.managePeople && { label: 'People', to: paths.people },
     abilities.manageOrganisation && active.kind === 'agency' && { label: 'Settings', to: paths.settings },
     abilities.seeCaughtMail && { label: 'Caught mail', to: paths.caughtMail },

@@ -37,7 +37,7 @@ export function ProjectsPage() {
           )}
         </EmptyState>
       ) : (
-        <table className="table table-head-over project-table">
+        <table className="table table-head-over table-stacked project-table">
           <caption className="hidden-text">Projects with their sections</caption>
           <thead>
             <tr>

@@ -88,7 +88,7 @@ function MailStates({ sent, timeZone }: { sent: Sent; timeZone: string }) {
   return (
     <section>
       <SectionHead title="Mail" about={`handed over ${formatInstant(sent.at, timeZone)}`} />
-      <table className="table">
+      <table className="table table-stacked">
         <thead>
           <tr>
             <th scope="col">To</th>

@@ -38,7 +38,7 @@ export function ChooseOrganisationPage() {
           Ask an administrator of your agency or firm to invite you.
         </EmptyState>
       ) : (
-        <table className="table table-head-over form-column">
+        <table className="table table-head-over table-stacked form-column">
           <thead>
             <tr>
               <th scope="col">Organisation</th>
