@@ -8,7 +8,6 @@ import { makeSetUpLink } from './commands/make-set-up-link';
 import { createDeps } from './create-deps';
 import { checkDatabase } from './db/check-database';
 import { connect } from './db/client';
-import { migrate } from './db/migrate';
 import { listDemoPeople } from './db/queries/demo-sign-ins';
 import type { Deps, Wake } from './deps';
 import { parseSettings, type Settings, SettingsError } from './env';
@@ -19,6 +18,7 @@ import { createLog } from './log';
 import { startMailCatcher } from './mail/mail-catcher';
 import { createOutboxSender } from './mail/outbox-sender';
 import { createMailTransport } from './mail/transport';
+import { prepareDatabase } from './prepare-database';
 import { createWorkbookPool } from './workbook/pool';
 
 z.config({ jitless: true });
@@ -61,16 +61,6 @@ async function main(): Promise<void> {
     setUpLink,
     demoPeople: await listDemoPeople(deps.db),
     demoWorkbooks: demoWorkbooksOf(settings),
-  });
-}
-
-async function prepareDatabase(settings: Settings, owner: string): Promise<void> {
-  if (!settings.migrationUrl) return;
-  await migrate({
-    ownerUrl: settings.migrationUrl,
-    applicationUrl: settings.databaseUrl,
-    folder: path.resolve('drizzle'),
-    owner,
   });
 }
 
