@@ -1,0 +1,89 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { interpolate } from '#rules/numerics/interpolate';
+import { leastSquares, polynomialAt } from '#rules/numerics/least-squares';
+import { fallingRoot, rootsAtTarget } from '#rules/numerics/roots-at-target';
+
+// Trial points and their parabola by numpy (reference record MAR-07).
+const contents = [4, 4.5, 5, 5.5, 6];
+const voids = [6.4, 5.1, 3.9, 2.9, 2.1];
+
+describe('least squares', () => {
+  it('finds the parabola of the worked example', () => {
+    const fit = leastSquares(contents, voids, 2);
+    expect(fit.ok && fit.coefficients[0]).toBeCloseTo(23.28, 6);
+    expect(fit.ok && fit.coefficients[1]).toBeCloseTo(-5.588571, 6);
+    expect(fit.ok && fit.coefficients[2]).toBeCloseTo(0.342857, 6);
+  });
+
+  it('recovers a known parabola whatever the order of its points', () => {
+    const coefficient = fc.double({ min: -20, max: 20, noNaN: true });
+    fc.assert(
+      fc.property(coefficient, coefficient, coefficient, (c0, c1, c2) => {
+        const x = [6, 4, 5.5, 4.5, 5];
+        const fit = leastSquares(
+          x,
+          x.map((place) => polynomialAt([c0, c1, c2], place)),
+          2,
+        );
+        expect(fit.ok && polynomialAt(fit.coefficients, 4.75)).toBeCloseTo(
+          polynomialAt([c0, c1, c2], 4.75),
+          7,
+        );
+        expect(fit.ok && Math.max(...fit.residuals.map(Math.abs))).toBeLessThan(1e-8);
+      }),
+    );
+  });
+
+  it.each([
+    ['fewer places than coefficients', [4, 4, 5], [1, 2, 3], 2],
+    ['uneven lists', [4, 5], [1], 1],
+    ['what is no number', [4, 5], [1, Number.NaN], 1],
+  ] as const)('says why it cannot: %s', (_, x, y, degree) => {
+    expect(leastSquares(x, y, degree)).toEqual({ ok: false, reason: expect.stringMatching(/\w/) });
+  });
+
+  it('fits a straight line to two points exactly', () => {
+    const fit = leastSquares([1, 3], [2, 6], 1);
+    // y = 2·x.
+    for (const x of [1, 2, 3]) expect(fit.ok && polynomialAt(fit.coefficients, x)).toBeCloseTo(2 * x, 9);
+  });
+});
+
+describe('interpolation', () => {
+  it('goes along the line between the neighbours, and takes a given place as it is', () => {
+    expect(interpolate([5, 4.5], [3.9, 5.1], 4.75)).toEqual({ ok: true, value: 4.5 });
+    expect(interpolate([4.5, 5], [5.1, 3.9], 5)).toEqual({ ok: true, value: 3.9 });
+    expect(interpolate([5, 5], [3.9, 4.1], 5)).toEqual({ ok: true, value: 4 });
+  });
+
+  it('never goes beyond the points', () => {
+    expect(interpolate([4.5, 5], [5.1, 3.9], 5.01).ok).toBe(false);
+    expect(interpolate([4.5, 5], [5.1, 3.9], 4.49).ok).toBe(false);
+    expect(interpolate([], [], 5).ok).toBe(false);
+  });
+});
+
+describe('roots at a target', () => {
+  const parabola = [23.28, -5.588571428571, 0.342857142857];
+
+  it('finds the place of the worked example', () => {
+    const roots = rootsAtTarget(parabola, 4, 4, 6);
+    expect(roots).toHaveLength(1);
+    expect(roots[0]).toBeCloseTo(4.95795, 5);
+  });
+
+  it('includes both ends of the range and nothing beyond', () => {
+    // x² − 10·x + 24 is zero at 4 and 6.
+    expect(rootsAtTarget([24, -10, 1], 0, 4, 6)).toEqual([4, 6]);
+    expect(rootsAtTarget([24, -10, 1], 0, 4.1, 5.9)).toEqual([]);
+    expect(fallingRoot([24, -10, 1], [4, 6])).toBe(4);
+    expect(fallingRoot([24, -10, 1], [6])).toBeNull();
+  });
+
+  it('has none where the curve misses the target or is constant', () => {
+    expect(rootsAtTarget([25, -10, 1], -1, 0, 10)).toEqual([]);
+    expect(rootsAtTarget([4, 0, 0], 4, 0, 10)).toEqual([]);
+    expect(rootsAtTarget([8, -2, 0], 4, 0, 10)).toEqual([2]);
+  });
+});

@@ -1,0 +1,133 @@
+import { describe, expect, it } from 'vitest';
+import { quantitySchema } from '#rules/quantities/quantity';
+import { allQuantities, quantityById } from '#rules/quantities/registry';
+import { convert, normaliseUnit } from '#rules/quantities/units';
+
+/** The ids that rule sets, mappings and records rely on. */
+const fixedIds = [
+  'binder-content',
+  'design-binder-content',
+  'binder-specific-gravity',
+  'maximum-specific-gravity',
+  'bulk-specific-gravity-mix',
+  'bulk-specific-gravity-aggregate',
+  'apparent-specific-gravity-aggregate',
+  'effective-specific-gravity-aggregate',
+  'water-absorption',
+  'stockpile-share',
+  'percent-passing',
+  'percent-retained',
+  'cumulative-percent-retained',
+  'air-voids',
+  'voids-in-mineral-aggregate',
+  'voids-filled-with-asphalt',
+  'absorbed-binder',
+  'effective-binder-content',
+  'effective-binder-volume',
+  'dust-proportion',
+  'film-thickness',
+  'relative-density',
+  'field-density',
+  'gyrations-initial',
+  'gyrations-design',
+  'gyrations-maximum',
+  'mass-in-air',
+  'mass-in-water',
+  'mass-saturated-surface-dry',
+  'bulk-density-mix',
+  'maximum-density-mix',
+  'specimen-height',
+  'specimen-diameter',
+  'specimen-thickness',
+  'failure-load',
+  'degree-of-saturation',
+  'horizontal-deformation',
+  'vertical-deformation',
+  'fracture-energy',
+  'coarse-aggregate-angularity-one-face',
+  'coarse-aggregate-angularity-two-faces',
+  'fine-aggregate-angularity',
+  'flat-and-elongated',
+  'sand-equivalent',
+  'abrasion-loss',
+  'soundness-loss',
+  'deleterious-materials',
+  'rap-content',
+  'rap-binder-content',
+  'ras-content',
+  'recycled-binder-ratio',
+  'tensile-strength-dry',
+  'tensile-strength-conditioned',
+  'tensile-strength-ratio',
+  'wheel-track-rut-depth',
+  'stripping-inflection-point',
+  'cracking-tolerance-index',
+  'flexibility-index',
+  'dynamic-modulus',
+  'flow-number',
+  'marshall-stability',
+  'marshall-flow',
+  'draindown',
+  'mixing-temperature',
+  'compaction-temperature',
+  'creep-strain',
+  'creep-compliance',
+];
+
+it.each(fixedIds)('knows %s', (id) => {
+  expect(quantityById(id)?.id).toBe(id);
+});
+
+it('knows no id that it does not have', () => {
+  expect(quantityById('no-such-quantity')).toBeUndefined();
+  expect(quantityById('constructor')).toBeUndefined();
+});
+
+it('has each id and each symbol once', () => {
+  const ids = allQuantities().map(({ id }) => id);
+  const symbols = allQuantities().map(({ symbol }) => symbol);
+  expect(new Set(ids).size).toBe(ids.length);
+  expect(new Set(symbols).size).toBe(symbols.length);
+});
+
+describe.each(allQuantities())('$id', (quantity) => {
+  it('has units that are known and convert to its own', () => {
+    for (const unit of quantity.acceptedUnits) {
+      expect(normaliseUnit(unit)).toBe(unit);
+      expect(convert(1, unit, quantity.unit)).toMatchObject({ ok: true });
+    }
+    expect(quantity.acceptedUnits).toContain(quantity.unit);
+  });
+
+  it('can say how it is derived if it is, and has a label that can open a sentence', () => {
+    expect(quantity.kind === 'derived').toBe(quantity.derivation !== null);
+    expect(quantity.label).toBe(quantity.label.trim());
+    expect(quantity.label.endsWith('.')).toBe(false);
+  });
+
+  it('says that a precision recalled from memory is', () => {
+    expect(['read', 'derived', 'memory', 'agency', undefined]).toContain(quantity.methodPrecision?.origin);
+    if (quantity.methodPrecision) expect(quantity.methodPrecision.source.length).toBeGreaterThan(0);
+  });
+});
+
+it('fills in what a declared quantity leaves out', () => {
+  const declared = quantitySchema.parse({
+    id: 'texture-depth',
+    symbol: 'MTD',
+    label: 'mean texture depth',
+    unit: 'mm',
+  });
+  expect(declared).toMatchObject({
+    kind: 'measured',
+    subject: 'mix',
+    gaugeScale: 'linear',
+    conditions: [],
+    plural: false,
+  });
+});
+
+it('refuses a plausible range that is turned round', () => {
+  const entry = { id: 'x', symbol: 'x', label: 'x', unit: '1', plausible: { min: 2, max: 1 } };
+  expect(quantitySchema.safeParse(entry).success).toBe(false);
+});
