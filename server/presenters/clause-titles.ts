@@ -1,6 +1,7 @@
 import { quantityById } from '#rules/quantities/registry';
 import type { Measure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
+import { clauseParts } from '#shared/format/clause';
 
 /**
  * A heading for each group of clauses, "412.03" → "Voids and density". An edition names its rules, not its groups, so
@@ -9,17 +10,12 @@ import type { Rule } from '#rules/rule-sets/schema';
 export function clauseTitles(rules: readonly Pick<Rule, 'clause' | 'measure'>[]): Record<string, string> {
   const groups = new Map<string, Map<string, number>>();
   for (const { clause, measure } of rules) {
-    const counts = groups.get(clauseGroup(clause)) ?? new Map<string, number>();
+    const counts = groups.get(clauseParts(clause).section) ?? new Map<string, number>();
     const title = titleOf(measure);
     counts.set(title, (counts.get(title) ?? 0) + 1);
-    groups.set(clauseGroup(clause), counts);
+    groups.set(clauseParts(clause).section, counts);
   }
   return Object.fromEntries([...groups].map(([group, counts]) => [group, mostFrequent(counts)]));
-}
-
-/** "412.03(b)" → "412.03" */
-export function clauseGroup(clause: string): string {
-  return clause.replace(/\(.*$/, '');
 }
 
 function mostFrequent(counts: ReadonlyMap<string, number>): string {

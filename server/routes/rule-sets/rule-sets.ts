@@ -1,0 +1,80 @@
+import { startingPointCaution } from '#rules/sets/shipped-rule-sets';
+import { getRuleSet, getRuleSetTemplate, listRuleSets } from '#shared/contracts/rule-sets';
+import { dateOfInstant } from '#shared/format/dates';
+import { keepResolvedEdition } from '../../commands/projects/resolve-section';
+import { editionReference } from '../../db/queries/editions';
+import { type AgencyRuleSets, visibleRuleSets } from '../../db/queries/rule-sets';
+import type { Deps } from '../../deps';
+import { layersOf } from '../../policies/edition-dates';
+import { presentEdition } from '../../presenters/present-edition';
+import { ruleSetContents } from '../../presenters/rule-set-view';
+import { writeTemplate } from '../../workbook/write-template';
+import { route } from '../define-route';
+import { layerName, loadRuleSet } from './load-rule-set';
+
+export const listRuleSetsRoute = route(listRuleSets, async ({ deps, actor }) => {
+  const agencies = await visibleRuleSets(deps.db, actor);
+  return { ruleSets: agencies.flatMap((each) => ruleSetsOf(deps, each)) };
+});
+
+function ruleSetsOf(deps: Deps, { agency, editions }: AgencyRuleSets) {
+  const today = dateOfInstant(deps.now().toISOString(), agency.timeZone);
+  const keys = [...new Set(editions.map(({ ruleSetKey }) => ruleSetKey))];
+  return keys.map((id) => {
+    const own = editions.filter(({ ruleSetKey }) => ruleSetKey === id);
+    return {
+      id,
+      title: own.at(-1)?.title ?? id,
+      agency: agency.name,
+      editions: own.map((edition) => presentEdition(edition, { all: editions, today })),
+    };
+  });
+}
+
+export const getRuleSetRoute = route(getRuleSet, async ({ deps, actor, params, query }) => {
+  const loaded = await loadRuleSet(deps, actor, { ...params, layers: query.layers });
+  const { agency, edition, all, layers, base, resolved, hash } = loaded;
+  const today = dateOfInstant(deps.now().toISOString(), agency.timeZone);
+  const others = all.filter((each) => each.ruleSetKey === edition.ruleSetKey && each.id !== edition.id);
+  const over = layersOver(edition, all);
+  return {
+    ...presentEdition(edition, { all, today }),
+    agency: agency.name,
+    layers: layers.map(editionReference),
+    availableLayers: over.map(editionReference),
+    otherEditions: others.map((each) => presentEdition(each, { all, today })),
+    ...ruleSetContents(resolved, base),
+    caseCount: resolved.cases.length,
+    hash,
+    templateHref: templateHref(params, layers.map(layerName)),
+    caution: edition.startingPoint ? startingPointCaution : null,
+  };
+});
+
+export const getRuleSetTemplateRoute = route(getRuleSetTemplate, async ({ deps, actor, params, query }) => {
+  const { edition, resolved } = await loadRuleSet(deps, actor, { ...params, layers: query.layers });
+  // A filled-in template names this edition by its hash, so it has to be found again.
+  const editionHash = await keepResolvedEdition(deps.db, deps, resolved);
+  return {
+    bytes: await writeTemplate(resolved, { editionHash }),
+    mediaType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
+    fileName: `${edition.ruleSetKey} ${edition.edition} template.xlsx`,
+  };
+});
+
+function layersOver(edition: AgencyRuleSets['editions'][number], all: AgencyRuleSets['editions']) {
+  const dated = all.flatMap((each) =>
+    each.effectiveFrom === null || each.draftState !== null
+      ? []
+      : [{ ...each, effectiveFrom: each.effectiveFrom }],
+  );
+  return layersOf({ ...edition, effectiveFrom: edition.effectiveFrom ?? '' }, dated);
+}
+
+function templateHref(
+  { ruleSetId, edition }: { ruleSetId: string; edition: string },
+  layers: string[],
+): string {
+  const path = `/api/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}/template.xlsx`;
+  return layers.length === 0 ? path : `${path}?layers=${encodeURIComponent(layers.join(','))}`;
+}
