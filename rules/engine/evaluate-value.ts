@@ -187,7 +187,9 @@ function observedOf(
   statistic: Statistic,
   count: number,
 ): Observed {
-  return { value: judgeable.value, rounded: judgement.rounded, text: judgement.text, unit, statistic, count };
+  const { text } = judgement;
+  if (judgeable.isWord) return { value: null, rounded: null, text, unit: '', statistic, count };
+  return { value: judgeable.value, rounded: judgement.rounded, text, unit, statistic, count };
 }
 
 /** Values in the unit that the limit is written in; a spread or a count has no unit to move. */

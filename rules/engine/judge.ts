@@ -26,7 +26,8 @@ export interface Judgement {
   text: string;
   /** Signed distance to the nearest limit; null where the value is censored. */
   margin: number | null;
-  roundingSentence: string;
+  /** Null where there is no number to round. */
+  roundingSentence: string | null;
 }
 
 /** How a rule rounds: its method and step for this mix. */
@@ -63,22 +64,17 @@ export function rounderOf(
 
 /** The value after the rule's own rounding, held against the limit. */
 export function judge(judgeable: Judgeable, limit: ResolvedLimit, rounder: Rounder): Judgement {
-  const { value, text, allowed } = judgeable;
+  const { value, text, allowed, isWord = false } = judgeable;
   const rounded = roundTo({ value, ...rounder });
   const written = writeRounded(rounded, rounder);
-  const sentence = roundingSentence({ value, rounded, ...rounder });
+  const sentence = isWord ? null : roundingSentence({ value, rounded, ...rounder });
   if (allowed !== null) {
     const outcome = outcomeOfInterval(allowed, limit, rounder);
     return { outcome, rounded, text: text ?? written, margin: null, roundingSentence: sentence };
   }
   const outcome = satisfies(conditionOf(limit), rounded) ? 'pass' : 'fail';
-  return {
-    outcome,
-    rounded,
-    text: text ?? written,
-    margin: marginOf(rounded, limit),
-    roundingSentence: sentence,
-  };
+  const margin = isWord ? null : marginOf(rounded, limit);
+  return { outcome, rounded, text: text ?? written, margin, roundingSentence: sentence };
 }
 
 /** Signed distance to the nearest limit, positive inside, in decimal arithmetic. */

@@ -12,6 +12,8 @@ export interface Judgeable {
   value: number;
   /** How the workbook states it where it is not a plain number: `<0.1`, `non-plastic`. */
   text: string | null;
+  /** True for a result without a number: `value` only stands in for it. */
+  isWord?: boolean;
   /** Open at both ends; null for a plain number. */
   allowed: { low: number; high: number } | null;
 }
@@ -55,12 +57,12 @@ export function judgeableOf(item: SampleItem, hasMin: boolean): Judgeable {
   if (qualifier === 'none' || qualifier === 'non-plastic' || value === null) {
     // Nothing found in so many passes: it may come at any number beyond them.
     if (item.at.passes !== undefined) {
-      return { value: item.at.passes, text, allowed: { low: item.at.passes, high: Infinity } };
+      return { value: item.at.passes, text, isWord: true, allowed: { low: item.at.passes, high: Infinity } };
     }
     // "None" is no amount at all against a most; against a least it has no number to be held to.
     return hasMin
-      ? { value: 0, text, allowed: { low: -Infinity, high: Infinity } }
-      : { value: 0, text, allowed: null };
+      ? { value: 0, text, isWord: true, allowed: { low: -Infinity, high: Infinity } }
+      : { value: 0, text, isWord: true, allowed: null };
   }
   return { value, text: null, allowed: null };
 }
