@@ -1,6 +1,7 @@
 import type { Database } from '../db/client';
 import type { Deps } from '../deps';
 import type { JobRow } from './job-leases';
+import { readWorkbookJob } from './read-workbook';
 
 export interface JobContext {
   deps: Deps;
@@ -19,4 +20,4 @@ export interface JobContext {
 export type JobHandler = (context: JobContext) => Promise<void>;
 
 /** By kind of job. A handler may run again after a crash: it finds its own traces or overwrites them. */
-export const jobHandlers: Record<string, JobHandler> = {};
+export const jobHandlers: Record<string, JobHandler> = { read: readWorkbookJob };

@@ -1,0 +1,34 @@
+import { checkAgainRoute, getCheckRoute, proveSealRoute } from '../checks/checks';
+import type { Route } from '../define-route';
+import {
+  addDocumentRoute,
+  attachFileRoute,
+  getDocumentFileRoute,
+  getDocumentTypesRoute,
+  removeDocumentRoute,
+} from '../documents/documents';
+import { cancelJobRoute } from '../jobs/cancel-job';
+import { changeNoteRoute, removeNoteRoute, writeNoteRoute } from '../notes/notes';
+import { getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute } from '../readings/readings';
+import { removeWaiverRoute, waiveRoute } from '../waivers/waivers';
+import {
+  giveBackRevisionRoute,
+  submitRevisionRoute,
+  takeRevisionRoute,
+  withdrawRevisionRoute,
+} from './change-state';
+import { getRevisionRoute, getSubmittalRoute } from './get-revision';
+import { getWorkbookRoute } from './get-workbook';
+import { listSubmittalsRoute } from './list-submittals';
+import { replaceWorkbookRoute, startRevisionRoute, uploadSubmittalRoute } from './upload-workbook';
+
+/** A submittal from its upload to what both sides write on it; returns have their own list. */
+export const submittalRoutes: Route[] = [
+  ...[listSubmittalsRoute, uploadSubmittalRoute, getSubmittalRoute, getRevisionRoute],
+  ...[startRevisionRoute, replaceWorkbookRoute, getWorkbookRoute, cancelJobRoute],
+  ...[getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute],
+  ...[addDocumentRoute, attachFileRoute, removeDocumentRoute, getDocumentFileRoute, getDocumentTypesRoute],
+  ...[getCheckRoute, checkAgainRoute, proveSealRoute],
+  ...[submitRevisionRoute, withdrawRevisionRoute, takeRevisionRoute, giveBackRevisionRoute],
+  ...[writeNoteRoute, changeNoteRoute, removeNoteRoute, waiveRoute, removeWaiverRoute],
+];
