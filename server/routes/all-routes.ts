@@ -1,25 +1,15 @@
 import type { Settings } from '../env';
 import { caughtMailRoutes } from './caught-mail/caught-mail-routes';
-import { checkAgainRoute, getCheckRoute, proveSealRoute } from './checks/checks';
 import { addContractorRoute } from './contractors/add-contractor';
 import { listContractorsRoute } from './contractors/list-contractors';
 import type { Route } from './define-route';
-import {
-  addDocumentRoute,
-  attachFileRoute,
-  getDocumentFileRoute,
-  getDocumentTypesRoute,
-  removeDocumentRoute,
-} from './documents/documents';
 import { getHomeRoute } from './home/home';
 import { acceptInvitationRoute } from './invitations/accept-invitation';
 import { getInvitationRoute } from './invitations/get-invitation';
 import { invitePersonRoute } from './invitations/invite-person';
 import { withdrawInvitationRoute } from './invitations/withdraw-invitation';
-import { cancelJobRoute } from './jobs/cancel-job';
 import { addLaboratoryRoute } from './laboratories/add-laboratory';
 import { listLaboratoriesRoute } from './laboratories/list-laboratories';
-import { changeNoteRoute, removeNoteRoute, writeNoteRoute } from './notes/notes';
 import { changeOrganisationRoute } from './organisation/change-organisation';
 import { getOrganisationRoute } from './organisation/get-organisation';
 import { changePersonRoute } from './people/change-person';
@@ -33,7 +23,6 @@ import { getProjectRoute } from './projects/get-project';
 import { getSectionTemplateRoute } from './projects/get-section-template';
 import { listProjectsRoute } from './projects/list-projects';
 import { getQueueItemRoute, getQueueRoute } from './queue/queue';
-import { getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute } from './readings/readings';
 import { returnRoutes } from './returns/return-routes';
 import { getRuleSetRoute, getRuleSetTemplateRoute, listRuleSetsRoute } from './rule-sets/rule-sets';
 import { searchRoute } from './search/search';
@@ -46,18 +35,7 @@ import { signInRoute } from './session/sign-in';
 import { signOutRoute } from './session/sign-out';
 import { getSetUpRoute } from './set-up/get-set-up';
 import { setUpRoute } from './set-up/set-up';
-import {
-  giveBackRevisionRoute,
-  submitRevisionRoute,
-  takeRevisionRoute,
-  withdrawRevisionRoute,
-} from './submittals/change-state';
-import { getRevisionRoute, getSubmittalRoute } from './submittals/get-revision';
-import { getWorkbookRoute } from './submittals/get-workbook';
-import { listSubmittalsRoute } from './submittals/list-submittals';
 import { submittalRoutes } from './submittals/submittal-routes';
-import { replaceWorkbookRoute, startRevisionRoute, uploadSubmittalRoute } from './submittals/upload-workbook';
-import { removeWaiverRoute, waiveRoute } from './waivers/waivers';
 
 /** Everything that the API answers, by resource. A new route is added here and nowhere else. */
 export function allRoutes(settings: Settings): Route[] {
@@ -73,17 +51,6 @@ export function allRoutes(settings: Settings): Route[] {
     ...[listRuleSetsRoute, getRuleSetTemplateRoute, getRuleSetRoute],
     ...[getHomeRoute, getQueueRoute, getQueueItemRoute, searchRoute],
     ...submittalRoutes,
-    ...[cancelJobRoute],
-    ...[waiveRoute, removeWaiverRoute],
-    ...[getCheckRoute, checkAgainRoute, proveSealRoute],
-    ...[writeNoteRoute, changeNoteRoute, removeNoteRoute],
-    ...[getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute],
-    ...[getRevisionRoute, getSubmittalRoute],
-    ...[uploadSubmittalRoute, startRevisionRoute, replaceWorkbookRoute],
-    ...[submitRevisionRoute, withdrawRevisionRoute, takeRevisionRoute, giveBackRevisionRoute],
-    ...[listSubmittalsRoute],
-    ...[getWorkbookRoute],
-    ...[addDocumentRoute, attachFileRoute, removeDocumentRoute, getDocumentFileRoute, getDocumentTypesRoute],
     ...returnRoutes,
     ...(settings.smtpUrl === null ? caughtMailRoutes : []),
   ];
