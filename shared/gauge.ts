@@ -1,5 +1,5 @@
 import type { Finding } from '#rules/engine/finding';
-import { decimalsOf, formatFixed } from './format/numbers';
+import { decimalsOf, formatFixed, groupThousands } from './format/numbers';
 
 /** Where the parts of a limit gauge stand, in px of a drawing `width` wide and 34 high. */
 export interface GaugeGeometry {
@@ -219,6 +219,6 @@ function categorical(finding: Gauged, allowed: string[], width: number): GaugeGe
 
 /** The limit in its own decimals and without its unit; only the age of a document says what it counts. */
 function figureOf(at: number, { decimals, unit }: { decimals: number; unit: string }): string {
-  const figure = formatFixed(at, decimals);
+  const figure = groupThousands(formatFixed(at, decimals));
   return unit === 'months' ? `${figure} months` : figure;
 }

@@ -31,7 +31,7 @@ export function formatPlain(value: number, significantDigits = 6): string {
 
 /** Thousands with a comma from 1,000 in sentences; decimals stay as they are. */
 export function groupThousands(text: string): string {
-  return text.replace(/^([−-]?)(\d{4,})/, (_, sign: string, whole: string) => {
+  return text.replace(/^([−+-]?)(\d{4,})/, (_, sign: string, whole: string) => {
     return sign + whole.replace(/\B(?=(\d{3})+$)/g, ',');
   });
 }

@@ -7,7 +7,7 @@ export interface SymbolParts {
 export type TextPart = { kind: 'text'; text: string } | ({ kind: 'symbol' } & SymbolParts);
 
 const acronym = /^[A-Z]{2,}$/;
-const withSubscript = /^([A-Za-zτεσµ])_?\{?([a-z]{1,4}|\d+(?:\.\d+)?|[a-z]+\d+|∞)?\}?$/u;
+const withSubscript = /^([A-Za-zτεσµ])_?\{?([a-z]{1,4}|\d+(?:\.\d+)?|[a-z]+\d+|[a-z]+,[a-z]+|∞)?\}?$/u;
 
 export function symbolParts(symbol: string): SymbolParts {
   if (acronym.test(symbol)) return { base: symbol, sub: '' };

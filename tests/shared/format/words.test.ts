@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { clauseParts, sectionOfClause } from '#shared/format/clause';
 import { findByFragment, findingFragment, slug } from '#shared/format/finding-key';
-import { gaugeText, marginText } from '#shared/format/margin';
+import { gaugeText, marginText, observedText } from '#shared/format/margin';
 import { splitSymbols, symbolParts } from '#shared/format/symbols';
 import { formatBytes, formatQuantity, unitWord, withUnit } from '#shared/format/units';
 import { aFinding } from '#tests/builders/a-finding';
@@ -77,5 +77,13 @@ describe('the margin', () => {
     expect(gaugeText(aFinding())).toBe(
       'Voids in the mineral aggregate are 13.9 %, at least 14.0. Margin −0.1.',
     );
+  });
+});
+
+describe('a value that no rule rounds', () => {
+  it('is shown without the idle digits of its calculation', () => {
+    expect(observedText({ text: '1.0566037735849056', value: 1.0566037735849056 })).toBe('1.0566');
+    expect(observedText({ text: '14.30', value: 14.3 })).toBe('14.30');
+    expect(observedText({ text: 'PG 64-22', value: null })).toBe('PG 64-22');
   });
 });

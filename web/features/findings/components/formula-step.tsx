@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import type { Evidence, Finding } from '#rules/engine/finding';
+import { parseFormula } from '#shared/format/formula-tree';
 import { formatPlain } from '#shared/format/numbers';
 import { unitWord } from '#shared/format/units';
 import { Formula } from '../../../components/ui/formula';
@@ -48,6 +49,8 @@ export function FormulaWithValues({
     );
   }
   const unit = unitWord(evidence.unit);
+  // Words such as "mean of 3" have no places in which values could stand.
+  const isSet = parseFormula(evidence.formula ?? '') !== null;
   return (
     <span className="equation">
       {evidence.symbol ? (
@@ -56,7 +59,7 @@ export function FormulaWithValues({
         </>
       ) : null}
       <Formula>{evidence.formula ?? ''}</Formula>
-      {values.size > 0 ? (
+      {values.size > 0 && isSet ? (
         <>
           {' '}
           = <Formula values={values}>{evidence.formula ?? ''}</Formula>

@@ -34,7 +34,7 @@ function FoldLine({ group, isUnfolded }: { group: Group; isUnfolded: boolean }) 
   const { setUnfolded, params } = useLedger();
   const { folded } = group;
   const applies = folded[0]?.finding.outcome !== 'not applicable';
-  const hasGradation = folded.some(({ finding }) => finding.kind === 'gradation');
+  const hasGradation = applies && folded.some(({ finding }) => finding.kind === 'gradation');
   const count = group.rows.length > 0 ? `${folded.length} more` : String(folded.length);
   return (
     <tbody>

@@ -1,6 +1,6 @@
 import { clauseParts } from '#shared/format/clause';
 import { findingFragment } from '#shared/format/finding-key';
-import { marginText } from '#shared/format/margin';
+import { marginText, observedText } from '#shared/format/margin';
 import { groupThousands } from '#shared/format/numbers';
 import { unitWord } from '#shared/format/units';
 import { Gauge } from '../../../components/ui/gauge';
@@ -21,6 +21,8 @@ export function LedgerRow({ row }: { row: Row }) {
   const { finding } = row;
   const isOpen = open.has(row.key);
   const fragment = findingFragment(finding);
+  // A document's date has no gauge and takes its room.
+  const isWide = finding.kind === 'document' && isWords(finding);
   const classes = [
     'ledger-entry',
     finding.outcome === 'fail' ? 'outcome-fail-row' : '',
@@ -43,10 +45,10 @@ export function LedgerRow({ row }: { row: Row }) {
           </button>
         </th>
         <Requirement row={row} />
-        <Observed row={row} />
-        <GaugeCell row={row} />
+        <Observed row={row} isWide={isWide} />
+        {isWide ? null : <GaugeCell row={row} />}
         <td className="ledger-margin">
-          {marginText(finding)}
+          {groupThousands(marginText(finding))}
           <span className="margin-mark">{finding.borderline ? <Mark name="borderline" /> : null}</span>
         </td>
         <td className="ledger-outcome">
@@ -87,7 +89,10 @@ function ClauseOf({ row: { finding } }: { row: Row }) {
 }
 
 function Requirement({ row: { finding } }: { row: Row }) {
-  const { before, key, after } = requirementParts(finding);
+  const { before, key, after } =
+    finding.clause === null
+      ? { before: '', key: `${finding.title}. `, after: finding.sentence }
+      : requirementParts(finding);
   return (
     <td className="ledger-sentence">
       <RichText>{before}</RichText>
@@ -100,17 +105,20 @@ function Requirement({ row: { finding } }: { row: Row }) {
   );
 }
 
-function Observed({ row: { finding, moved } }: { row: Row }) {
+function Observed({ row: { finding, moved }, isWide }: { row: Row; isWide: boolean }) {
   const { observed } = finding;
   const words = isWords(finding);
   const isShown =
     observed !== null && finding.outcome !== 'not shown' && finding.outcome !== 'not applicable';
   const previous = moved?.previousText ?? null;
   return (
-    <td className={`ledger-observed${words ? ' is-words' : ''}`}>
+    <td
+      className={`ledger-observed${words ? ' is-words' : ''}${isWide ? ' is-wide' : ''}`}
+      colSpan={isWide ? 2 : undefined}
+    >
       {isShown ? (
         <>
-          {words ? observed.text : groupThousands(observed.text)}
+          {words ? observed.text : groupThousands(observedText(observed))}
           {words ? null : <span className="unit-slot">{unitWord(observed.unit)}</span>}
         </>
       ) : null}

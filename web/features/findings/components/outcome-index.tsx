@@ -88,7 +88,7 @@ function TallyLine({
 function ClauseLinks({ rows }: { rows: readonly LedgerRow[] }) {
   const named = new Map<string, LedgerRow>();
   for (const row of rows) {
-    const name = row.finding.clause ?? lowerFirst(row.finding.title);
+    const name = row.finding.clause ?? `${row.finding.subject}: ${lowerFirst(row.finding.title)}`;
     if (!named.has(name)) named.set(name, row);
   }
   const shown = [...named].slice(0, mostNamed);

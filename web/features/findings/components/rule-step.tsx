@@ -3,6 +3,7 @@ import type { Finding } from '#rules/engine/finding';
 import { slug } from '#shared/format/finding-key';
 import { RichText } from '../../../components/ui/rich-text';
 import { paths } from '../../../lib/paths';
+import { wordsOfName } from '../lib/evidence-words';
 import { useLedger } from './ledger-context';
 
 /** The rule in general terms, the table and row that gave this mix its limit, and what a layer displaced. */
@@ -45,5 +46,5 @@ export function RuleStep({ finding }: { finding: Finding }) {
 function rowWords(row: Record<string, string> | null): string {
   const keys = Object.entries(row ?? {});
   if (keys.length === 0) return '';
-  return `For ${keys.map(([name, value]) => `${name} ${value}`).join(', ')} `;
+  return `For ${keys.map(([name, value]) => `${wordsOfName(name)} ${value}`).join(', ')} `;
 }

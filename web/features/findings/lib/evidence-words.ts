@@ -4,7 +4,15 @@ import { formatSieve } from '#shared/format/units';
 
 /** A quantity's id as people say it: the registry's ids are the trade's words with hyphens. */
 export function evidenceName(evidence: Pick<Evidence, 'quantity'>): string {
-  return evidence.quantity.replace(/-/g, ' ');
+  return wordsOfName(evidence.quantity);
+}
+
+/** `designTraffic` and `air-voids` as words; the registry's and an edition's names are the trade's own. */
+export function wordsOfName(name: string): string {
+  return name
+    .replace(/-/g, ' ')
+    .replace(/([a-z])([A-Z])/g, '$1 $2')
+    .toLowerCase();
 }
 
 /** Where and under which conditions a value was taken: "trial B, specimen 2", "12.5 mm". */

@@ -12,7 +12,7 @@ export function foldedPassLine(rows: readonly LedgerRow[]): string {
   const who =
     sieves && letters.length === 1
       ? `${letters[0]} passes on ${listOf(findings.map((finding) => finding.subject))}`
-      : `${letters.join(' ')} pass with room`;
+      : `${letters.join(' ')} pass${findings.some(({ margin }) => margin === 0) ? '' : ' with room'}`;
   const closest = closestOf(findings);
   if (!closest) return `${who}.`;
   const name =
@@ -33,7 +33,8 @@ export function closestOf(findings: readonly Finding[]): Finding | null {
   let best: { finding: Finding; share: number } | null = null;
   for (const finding of findings) {
     const room = roomOf(finding);
-    if (finding.margin === null || room === null) continue;
+    // On the limit and still not borderline: the rule asks for exactly this, so it is not close to anything.
+    if (!finding.margin || room === null) continue;
     const share = Math.abs(finding.margin) / room;
     if (!best || share < best.share) best = { finding, share };
   }

@@ -10,23 +10,33 @@ export interface Tie {
   text: string;
 }
 
-const mostTies = 12;
+/** The alphabet; a value that rests on more cells names the rest in its workings. */
+const mostTies = 26;
 
 /** Letters in the order in which the thread names the cells: inputs first, then what the workbook reports. */
 export function tiesOf(finding: Finding): Tie[] {
-  const ties: Tie[] = [];
-  const add = (source: Source | null | undefined) => {
-    if (!source || source.cell === '' || ties.length >= mostTies) return;
-    if (ties.some((tie) => tie.sheet === source.sheet && tie.cell === source.cell)) return;
-    ties.push({ ...source, letter: String.fromCharCode(97 + ties.length) });
-  };
+  const sources: Source[] = [];
   const walk = (evidence: Evidence) => {
     for (const input of evidence.inputs ?? []) walk(input);
-    add(evidence.source);
-    add(evidence.reported?.source);
+    if (evidence.source) sources.push(evidence.source);
   };
   for (const evidence of finding.evidence) walk(evidence);
-  return ties;
+  const reported = finding.evidence.flatMap((evidence) => evidence.reported?.source ?? []);
+  const own = distinct(sources.filter(hasCell)).slice(0, mostTies - Math.min(reported.length, 4));
+  return distinct([...own, ...reported.filter(hasCell)])
+    .slice(0, mostTies)
+    .map((source, index) => ({ ...source, letter: String.fromCharCode(97 + index) }));
+}
+
+function hasCell(source: Source): boolean {
+  return source.cell !== '';
+}
+
+function distinct(sources: readonly Source[]): Source[] {
+  return sources.filter(
+    (source, index) =>
+      sources.findIndex((other) => other.sheet === source.sheet && other.cell === source.cell) === index,
+  );
 }
 
 export function tieOf(ties: readonly Tie[], source: Source | null | undefined): Tie | null {
