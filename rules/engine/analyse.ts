@@ -1,6 +1,6 @@
 import type { MixRecord } from '../record';
 import type { Analysis, AnalysisOptions, RecomputedValue } from './analysis';
-import { type AggregateNodes, aggregateOf, blendChoice } from './analysis-aggregate';
+import { type AggregateNodes, aggregates, blendChoice } from './analysis-aggregate';
 import { designFromTrials, designPointOf, type TrialValues } from './analysis-design';
 import { designTrial, indexRecord, type RecordIndex } from './analysis-index';
 import type { AnalysisNode } from './analysis-node';
@@ -14,9 +14,9 @@ import { type TrialNodes, volumetricsOf } from './analysis-volumetrics';
  */
 export function analyse(record: MixRecord, options: AnalysisOptions): Analysis {
   const index = indexRecord(record, 'contractor');
-  const blend = blendChoice(record, index);
-  const trials = index.trials.map((trial) => trialValues(index, trial, aggregateOf(index, trial, blend)));
-  const design = trialValues(index, designTrial, aggregateOf(index, designTrial, blend));
+  const aggregateOf = aggregates(index, blendChoice(record, index));
+  const trials = index.trials.map((trial) => trialValues(index, trial, aggregateOf(trial)));
+  const design = trialValues(index, designTrial, aggregateOf(designTrial));
   const { point, computed } = designPointOf(trials, design.pb, options);
   const fromTrials = designFromTrials(trials, design.pb, design.nodes, options);
   const designNodes = [...design.nodes, ...fromTrials, ...(computed ? [computed] : [])];
@@ -87,9 +87,9 @@ function blendValues(index: RecordIndex, trials: Trial[]): RecomputedValue[] {
 /** The agency's own specimens, never mixed with the contractor's. */
 function agencyValues(record: MixRecord): RecomputedValue[] {
   const index = indexRecord(record, 'agency');
-  const blend = blendChoice(record, index);
+  const aggregateOf = aggregates(index, blendChoice(record, index));
   return [designTrial, ...index.trials].flatMap((trial) => {
-    const values = trialValues(index, trial, aggregateOf(index, trial, blend));
+    const values = trialValues(index, trial, aggregateOf(trial));
     return publish(values.nodes, values.context, index);
   });
 }

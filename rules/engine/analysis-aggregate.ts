@@ -21,7 +21,32 @@ export interface AggregateNodes {
   surfaceArea: AnalysisNode | null;
 }
 
-export function aggregateOf(index: RecordIndex, trial: string, blend: BlendChoice): AggregateNodes {
+/** The aggregate of each trial; trials that state none of their own share one. */
+export function aggregates(index: RecordIndex, blend: BlendChoice): (trial: string) => AggregateNodes {
+  const owners = new Set(
+    aggregateQuantities.flatMap((quantity) => index.all(quantity).map(({ at }) => at.trial ?? '')),
+  );
+  const shared = new Map<string, AggregateNodes>();
+  return (trial) => {
+    if (owners.has(trial)) return aggregateOf(index, trial, blend);
+    const key = blend.of(trial) ?? '';
+    const known = shared.get(key) ?? aggregateOf(index, trial, blend);
+    shared.set(key, known);
+    return known;
+  };
+}
+
+const aggregateQuantities = [
+  'stockpile-share',
+  'bulk-specific-gravity-aggregate',
+  'apparent-specific-gravity-aggregate',
+  'water-absorption',
+  'percent-passing',
+  'percent-retained',
+  'cumulative-percent-retained',
+];
+
+function aggregateOf(index: RecordIndex, trial: string, blend: BlendChoice): AggregateNodes {
   const chosen = blend.of(trial);
   const select = (quantity: string) =>
     chosen === 'unknown' ? [] : index.ofTrial(quantity, trial).filter(({ at }) => inBlend(at, chosen));

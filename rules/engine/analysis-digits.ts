@@ -3,10 +3,11 @@ import type { Reading } from '../record';
 
 /** How a reading is displayed: the unit of its last digit, in the reading's own canonical unit. */
 export function displayedUnit(reading: Reading): number {
-  const value = reading.value ?? 0;
-  const written = reading.source ? writtenNumber(reading.source.text, value) : null;
-  if (written === null) return 10 ** -decimalsOf(value);
-  return written.unit * scaleOf(value, written);
+  const known = units.get(reading);
+  if (known !== undefined) return known;
+  const unit = unitOf(reading);
+  units.set(reading, unit);
+  return unit;
 }
 
 /** Half a unit of the last displayed digit: how far the number behind the display may lie from it. */
@@ -20,6 +21,16 @@ export function showsAs(value: number, reading: Reading): boolean {
   const unit = displayedUnit(reading);
   const shown = Math.round(reading.value / unit) * unit;
   return Math.abs(value - shown) <= (unit / 2) * (1 + 1e-9);
+}
+
+/** Asked for many times within one analysis, once for every value that rests on the reading. */
+const units = new WeakMap<Reading, number>();
+
+function unitOf(reading: Reading): number {
+  const value = reading.value ?? 0;
+  const written = reading.source ? writtenNumber(reading.source.text, value) : null;
+  if (written === null) return 10 ** -decimalsOf(value);
+  return written.unit * scaleOf(value, written);
 }
 
 interface Written {

@@ -21,6 +21,7 @@ export interface RecordIndex {
 
 export function indexRecord(record: MixRecord, laboratory: Laboratory): RecordIndex {
   const byQuantity = new Map<string, Reading[]>();
+  const byTrial = new Map<string, Reading[]>();
   const trials = new Set<string>();
   for (const reading of record.readings) {
     if ((reading.at.laboratory ?? 'contractor') !== laboratory || !hasNumber(reading)) continue;
@@ -36,7 +37,14 @@ export function indexRecord(record: MixRecord, laboratory: Laboratory): RecordIn
   return {
     laboratory,
     all,
-    ofTrial: (quantity, trial) => belongingTo(all(quantity), quantity, trial),
+    ofTrial: (quantity, trial) => {
+      const key = `${quantity}|${trial}`;
+      const known = byTrial.get(key);
+      if (known) return known;
+      const readings = belongingTo(all(quantity), quantity, trial);
+      byTrial.set(key, readings);
+      return readings;
+    },
     trials: [...trials],
     gyrations,
     gyrationsKey: (key) => (typeof key === 'number' ? (names.get(key) ?? key) : key),
@@ -96,6 +104,20 @@ function belongingTo(readings: Reading[], quantity: string, trial: string): Read
   if (subject === 'mix' || subject === 'specimen') {
     return readings.filter(({ at }) => (at.trial ?? designTrial) === trial);
   }
+  // A job-mix gradation of the design does not displace the gradations of its stockpiles.
+  return [
+    ...ownOrCommon(
+      readings.filter(({ at }) => at.stockpile === undefined),
+      trial,
+    ),
+    ...ownOrCommon(
+      readings.filter(({ at }) => at.stockpile !== undefined),
+      trial,
+    ),
+  ];
+}
+
+function ownOrCommon(readings: Reading[], trial: string): Reading[] {
   const own = readings.filter(({ at }) => at.trial === trial);
   return own.length > 0 ? own : readings.filter(({ at }) => at.trial === undefined);
 }

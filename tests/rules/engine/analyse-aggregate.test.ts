@@ -100,6 +100,20 @@ describe('a blend of stockpiles', () => {
   });
 });
 
+it('combines the stockpiles beside a stated job-mix gradation, and compares with that', () => {
+  const analysis = analysisOf([
+    ...stockpile('coarse', 50, 2.6),
+    ...stockpile('fine', 50, 2.8),
+    reading('percent-passing', 40, { stockpile: 'coarse', sieve: 4.75 }),
+    reading('percent-passing', 90, { stockpile: 'fine', sieve: 4.75 }),
+    reading('percent-passing', 64.5, { sieve: 4.75 }),
+    reading('percent-passing', 66, { trial: 'design', sieve: 4.75 }),
+  ]);
+  const blend = computed(analysis, 'percent-passing', { sieve: 4.75 });
+  expect(blend?.value).toBe(65);
+  expect(blend?.reported?.value).toBe(66);
+});
+
 describe('several blends', () => {
   const blends = [
     ...stockpile('coarse', 60, 2.6, { blend: '1' }),
