@@ -2,7 +2,7 @@ import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import type { CheckContext, MixRecord } from '../record';
 import type { ResolvedEdition } from '../rule-sets/resolve';
-import { canonicalJson } from './canonical-json';
+import { canonicalText } from './canonical-text';
 import { ENGINE_VERSION } from './engine-version';
 import type { Evidence, Finding, Seal } from './finding';
 
@@ -48,7 +48,7 @@ export function resolvedEditionHash(edition: ResolvedEdition): string {
 }
 
 export function hashOf(value: unknown): string {
-  return bytesToHex(sha256(utf8ToBytes(canonicalJson(value))));
+  return bytesToHex(sha256(utf8ToBytes(canonicalText(value))));
 }
 
 /** A resolved edition does not change, and many records are judged by it. */

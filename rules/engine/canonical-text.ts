@@ -4,16 +4,16 @@
  *
  * Throws on what JSON cannot hold (NaN, Infinity, a function): a seal over it would prove nothing.
  *
- * @example canonicalJson({ b: 1.0, a: 'x' }) // {"a":"x","b":1}
+ * @example canonicalText({ b: 1.0, a: 'x' }) // {"a":"x","b":1}
  */
-export function canonicalJson(value: unknown): string {
+export function canonicalText(value: unknown): string {
   if (value === null || typeof value === 'boolean' || typeof value === 'string') return JSON.stringify(value);
   if (typeof value === 'number') {
     if (!Number.isFinite(value))
       throw new TypeError('Canonical JSON cannot hold a number that is not finite.');
     return JSON.stringify(value);
   }
-  if (Array.isArray(value)) return `[${value.map((each) => canonicalJson(each ?? null)).join(',')}]`;
+  if (Array.isArray(value)) return `[${value.map((each) => canonicalText(each ?? null)).join(',')}]`;
   if (typeof value !== 'object') throw new TypeError(`Canonical JSON cannot hold a ${typeof value}.`);
   return membersJson(value as Record<string, unknown>);
 }
@@ -24,7 +24,7 @@ function membersJson(value: Record<string, unknown>): string {
   for (const name of Object.keys(value).sort()) {
     const member = value[name];
     if (member !== undefined)
-      json += `${json === '' ? '' : ','}${JSON.stringify(name)}:${canonicalJson(member)}`;
+      json += `${json === '' ? '' : ','}${JSON.stringify(name)}:${canonicalText(member)}`;
   }
   return `{${json}}`;
 }
