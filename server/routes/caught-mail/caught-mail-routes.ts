@@ -3,19 +3,19 @@ import { getCaughtMail, getCaughtMailFile, listCaughtMail } from '#shared/contra
 import { findCaughtMail, listCaughtMails } from '../../db/queries/caught-mails';
 import { presentCaughtMail, presentCaughtMailItem } from '../../presenters/present-caught-mail';
 import { Problem } from '../../problem';
-import { route } from '../define-route';
+import { openRoute } from '../define-route';
 
-/** Registered only where mail is caught: everybody who is signed in there may read all of it. */
+/** Registered only where mail is caught, and open there: links in mails are for people who cannot sign in yet. */
 export const caughtMailRoutes = [
-  route(listCaughtMail, async ({ deps }) => ({
+  openRoute(listCaughtMail, async ({ deps }) => ({
     mails: (await listCaughtMails(deps.db)).map(presentCaughtMailItem),
   })),
-  route(getCaughtMail, async ({ deps, params }) => {
+  openRoute(getCaughtMail, async ({ deps, params }) => {
     const mail = await findCaughtMail(deps.db, params.mailId);
     if (!mail) throw new Problem('not-found');
     return presentCaughtMail(mail);
   }),
-  route(getCaughtMailFile, async ({ deps, params }) => {
+  openRoute(getCaughtMailFile, async ({ deps, params }) => {
     const mail = await findCaughtMail(deps.db, params.mailId);
     if (!mail) throw new Problem('not-found');
     const file = (await simpleParser(mail.source)).attachments[params.index];
