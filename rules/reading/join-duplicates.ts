@@ -27,8 +27,14 @@ function distinctOf(group: TakenReading[]): TakenReading[] {
   const distinct: TakenReading[] = [];
   for (const taken of group) {
     const at = distinct.findIndex((known) => agree(known, taken));
-    if (at < 0) distinct.push(taken);
-    else if (decimalsOf(taken.place) > decimalsOf((distinct[at] as TakenReading).place)) distinct[at] = taken;
+    const known = distinct[at];
+    if (!known) distinct.push(taken);
+    else if (
+      known.reading.value !== taken.reading.value &&
+      decimalsOf(taken.place) > decimalsOf(known.place)
+    ) {
+      distinct[at] = taken;
+    }
   }
   return distinct;
 }

@@ -1,56 +1,6 @@
-import { evaluate } from '#rules/engine/evaluate';
-import type { CheckResult } from '#rules/engine/finding';
-import { readWorkbook } from '#rules/reading/interpret';
-import type { ReadingResult } from '#rules/reading/reading-result';
-import type { AttributeValue, MixRecord } from '#rules/record';
-import { parseCheckArguments } from './check-arguments';
-import { findingsTable } from './findings-table';
-import { InputFault } from './input-fault';
-import { loadAttributes, loadEdition, loadGrid, loadMapping } from './load-check-inputs';
+import { runCheck } from './run-check';
 
-/** The engine from the command line: a workbook and rule sets in, findings out; no server and no database. */
-async function main(argv: string[]): Promise<number> {
-  const given = parseCheckArguments(argv);
-  const edition = await loadEdition(given.rules, given.layers);
-  const attributes = await loadAttributes(given.attributes, edition);
-  const grid = await loadGrid(given.workbook);
-  const mapping = await loadMapping(given.mapping, grid, edition, given.workbook);
-  const reading = withAttributes(readWorkbook({ grid, mapping, edition, answers: [] }), attributes);
-  const context = { submittedOn: given.submittedOn, lettingOn: given.lettingOn, facts: {} };
-  const check = evaluate(reading.record, edition, context);
-  process.stdout.write(`${given.json ? asJson(reading, check) : findingsTable(check, reading)}\n`);
-  return hasOpenRequirement(check) ? 1 : 0;
-}
-
-/** Attributes that are given win without a word, so no doubt about one of them remains. */
-function withAttributes(reading: ReadingResult, attributes: Record<string, AttributeValue>): ReadingResult {
-  const doubts = reading.doubts.filter(
-    ({ about }) => about.attribute === undefined || !(about.attribute in attributes),
-  );
-  const record: MixRecord = {
-    ...reading.record,
-    attributes: { ...reading.record.attributes, ...attributes },
-    doubts,
-  };
-  return { ...reading, record, doubts };
-}
-
-function asJson({ record, unread, doubts }: ReadingResult, check: CheckResult): string {
-  const { analysis, summary, findings, seal } = check;
-  return JSON.stringify({ record, reading: { unread, doubts }, analysis, summary, findings, seal }, null, 2);
-}
-
-function hasOpenRequirement({ findings }: CheckResult): boolean {
-  return findings.some(
-    ({ severity, outcome }) =>
-      severity === 'required' && (outcome === 'fail' || outcome === 'not shown' || outcome === 'undecided'),
-  );
-}
-
-try {
-  process.exitCode = await main(process.argv.slice(2));
-} catch (error) {
-  const line = error instanceof InputFault ? error.message : `The check broke off: ${String(error)}`;
-  process.stderr.write(`${line.replace(/\s*\n\s*/g, ' ')}\n`);
-  process.exitCode = 2;
-}
+process.exitCode = await runCheck(process.argv.slice(2), {
+  out: (text) => process.stdout.write(text),
+  err: (text) => process.stderr.write(text),
+});
