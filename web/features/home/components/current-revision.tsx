@@ -56,16 +56,17 @@ function LookRow({ entry, address }: { entry: CurrentFinding; address: string })
   const hasValue = finding.observed !== null && finding.outcome !== 'not shown';
   return (
     <li className="look-row">
-      <span className="look-clause">
-        <Link className="plain" to={`${address}#${findingFragment(finding)}`}>
-          {finding.clause ?? 'adds up'}
-        </Link>
-      </span>
+      <span className="look-clause">{finding.clause ?? ''}</span>
       <span className="look-title">
-        <b>{finding.title}</b> {limitOf(entry)}
+        <Link className="plain" to={`${address}#${findingFragment(finding)}`}>
+          <b>{finding.title}</b>
+        </Link>{' '}
+        {limitOf(entry)}
         <span className="look-was">{wasText(entry)}</span>
       </span>
-      <b className="look-value number">{hasValue ? finding.observed?.text : ''}</b>
+      <b className="look-value number" title={finding.observed?.text}>
+        {hasValue ? finding.observed?.text : ''}
+      </b>
       <span className="look-gauge">
         <Gauge finding={finding} widthPx={132} />
       </span>

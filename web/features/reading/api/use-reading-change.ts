@@ -10,6 +10,8 @@ import { readingQuery } from './get-reading';
 export function useReadingChange<Change>(
   params: RevisionParams,
   change: (given: Change, present: ReadingView) => Promise<ReadingView>,
+  /** How the page shows the change at once, while the server reads and checks again. */
+  foreseen: (given: Change, present: ReadingView) => ReadingView = (_, present) => present,
 ) {
   const client = useQueryClient();
   const options = readingQuery(params);
@@ -17,6 +19,9 @@ export function useReadingChange<Change>(
     mutationFn: async (given: Change) => change(given, await client.ensureQueryData(options)),
     // One after the other: each change sends the version that the one before it brought.
     scope: { id: JSON.stringify(options.queryKey) },
+    onMutate: (given: Change) => {
+      client.setQueryData(options.queryKey, (present) => present && foreseen(given, present));
+    },
     onSuccess: (reading) => {
       client.setQueryData(options.queryKey, reading);
       void client.invalidateQueries({

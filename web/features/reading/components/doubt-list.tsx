@@ -36,6 +36,7 @@ export function DoubtList({
               key={`${doubt.sheet}!${doubt.cell}!${doubt.reason}`}
               doubt={doubt}
               isCurrent={isAt(doubt, cursor)}
+              cursorSheet={cursor.sheet}
               onCursor={() => onCursor({ sheet: doubt.sheet, cell: doubt.cell })}
               onAnswer={(answer) => onAnswer(doubt, answer)}
               canAnswer={canAnswer}
@@ -51,6 +52,7 @@ export function DoubtList({
 function DoubtItem({
   doubt,
   isCurrent,
+  cursorSheet,
   onCursor,
   onAnswer,
   canAnswer,
@@ -58,6 +60,7 @@ function DoubtItem({
 }: {
   doubt: ReadingDoubt;
   isCurrent: boolean;
+  cursorSheet: string;
   onCursor: () => void;
   onAnswer: (answer: string | null) => void;
   canAnswer: boolean;
@@ -69,9 +72,9 @@ function DoubtItem({
       <span className="tie tie-doubt">{doubt.letter}</span>
       <p id={questionId}>
         <button type="button" className="cell-link" onClick={onCursor}>
-          {doubt.sheet ? `${doubt.sheet} ${doubt.cell}` : doubt.cell}
+          {doubt.sheet === cursorSheet || doubt.sheet === '' ? doubt.cell : `${doubt.sheet} ${doubt.cell}`}
         </button>{' '}
-        <RichText>{doubt.reason}</RichText>
+        <RichText>{withoutCell(doubt)}</RichText>
       </p>
       {excerpt}
       <RadioGroup
@@ -96,6 +99,11 @@ function DoubtItem({
       ) : null}
     </li>
   );
+}
+
+/** The cell stands before the reason already, as what leads to it. */
+function withoutCell({ cell, reason }: Pick<ReadingDoubt, 'cell' | 'reason'>): string {
+  return reason.startsWith(`${cell} `) ? reason.slice(cell.length + 1) : reason;
 }
 
 export function doubtId(doubt: { sheet: string; cell: string }): string {

@@ -1,13 +1,20 @@
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { ReadingView } from '#shared/contracts/readings';
+import { Button } from '../../../components/ui/button';
 import { RichText } from '../../../components/ui/rich-text';
 import { paths } from '../../../lib/paths';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { groupUnread } from '../lib/group-unread';
 
+const kindsAtFirst = 6;
+
 /** What was understood, in groups, each with its first cell. */
 export function Understood({ params, reading }: { params: RevisionParams; reading: ReadingView }) {
   const { readings, attributes, documents } = reading.counts;
+  const [showsAll, setShowsAll] = useState(false);
+  const shown = showsAll ? reading.understood : reading.understood.slice(0, kindsAtFirst);
+  const hidden = reading.understood.length - shown.length;
   return (
     <section aria-labelledby="understood">
       <div className="side-head">
@@ -20,7 +27,7 @@ export function Understood({ params, reading }: { params: RevisionParams; readin
         </p>
       ) : (
         <ul>
-          {reading.understood.map((group) => (
+          {shown.map((group) => (
             <li key={`${group.label} ${group.sheet} ${group.cell}`} className="understood">
               <span>
                 <RichText>{group.label}</RichText>
@@ -31,6 +38,11 @@ export function Understood({ params, reading }: { params: RevisionParams; readin
           ))}
         </ul>
       )}
+      {hidden > 0 ? (
+        <Button kind="text" onPress={() => setShowsAll(true)}>
+          {`Show ${count(hidden, 'more kind')}`}
+        </Button>
+      ) : null}
     </section>
   );
 }

@@ -1,4 +1,4 @@
-import { Link, useNavigate } from 'react-router-dom';
+import { useNavigate } from 'react-router-dom';
 import type { ReadingView } from '#shared/contracts/readings';
 import { LinkButton } from '../../../components/ui/button';
 import { MarginPage } from '../../../components/ui/margin-page';
@@ -78,6 +78,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
         onKeep={(name, value) => attributes.mutate({ [name]: value })}
         canAnswer={reading.abilities.answer}
       />
+      <Onward params={params} reading={reading} laboratory={revision.laboratory.name} />
     </>
   );
   const lists = (
@@ -85,7 +86,6 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       <Understood params={params} reading={reading} />
       <NotUsed params={params} reading={reading} />
       <DocumentList params={params} reading={reading} />
-      <Onward params={params} reading={reading} laboratory={revision.laboratory.name} />
       {revision.abilities.replaceWorkbook ? <ReplaceWorkbook revision={revision} /> : null}
     </>
   );
@@ -146,8 +146,7 @@ function Onward({
         See the findings
       </LinkButton>
       <span className="small mute">
-        {doubtsLeftWords(reading.doubts)} Answers hold for this revision of {laboratory}.{' '}
-        <Link to={paths.submittals}>All submittals</Link>
+        {doubtsLeftWords(reading.doubts)} Read for {laboratory}.
       </span>
     </div>
   );

@@ -13,7 +13,6 @@ import { ColumnHeads, numbersBetween, SheetRow } from './sheet-rows';
 
 const rowRem = 26 / 14;
 const rowNumberRem = 36 / 14;
-const fewestColumns = 8;
 const fewestRows = 12;
 
 /** A sheet in place with its own letters and numbers. Only the rows in sight are drawn, so a long sheet stays fast. */
@@ -36,7 +35,8 @@ export function SheetGridView({
   const idPrefix = `${useId()}-`;
   const { sheet } = rows;
   const rowCount = Math.max(sheet?.rowCount ?? 0, fewestRows);
-  const columnCount = Math.max(sheet?.columnCount ?? 0, fewestColumns);
+  const widths = columnWidths(sheet ?? { columnCount: 0, columnWidths: {} });
+  const columnCount = widths.length;
   const merged = useMemo(
     () =>
       mergedCells(sheet?.merges ?? [], {
@@ -49,7 +49,6 @@ export function SheetGridView({
   useCursorInSight(scroller, cursor, rowPx);
   if (!sheet) return <WithoutSheet rows={rows} name={cursor.sheet} />;
 
-  const widths = columnWidths({ columnCount, columnWidths: sheet.columnWidths });
   const last = Math.min(shown.last, rowCount);
   const first = Math.min(shown.first, last);
   const onKeyDown = (event: KeyboardEvent) => {

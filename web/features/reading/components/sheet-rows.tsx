@@ -93,7 +93,13 @@ function SheetCell({
     // biome-ignore lint/a11y/useKeyWithClickEvents: the grid takes the keys and moves the cursor from cell to cell.
     <td
       id={`${drawing.idPrefix}${address}`}
-      className={classOf({ cell, use: drawing.uses.get(address), letter, isSelected })}
+      className={classOf({
+        cell,
+        use: drawing.uses.get(address),
+        letter,
+        isSelected,
+        runsOn: runsOn(address, drawing),
+      })}
       {...(span
         ? { rowSpan: Math.min(span.rows, rowsLeft), colSpan: Math.min(span.columns, columnsLeft) }
         : {})}
@@ -110,15 +116,25 @@ function classOf(options: {
   use: CellUse | undefined;
   letter: string | undefined;
   isSelected: boolean;
+  runsOn: boolean;
 }): string | undefined {
-  const { cell, use, letter, isSelected } = options;
+  const { cell, use, letter, isSelected, runsOn } = options;
   const classes = [
     cell?.kind === 'number' || cell?.kind === 'date' ? 'number' : '',
     letter ? 'use-doubt' : classOfUse(use),
     cell?.bold ? 'is-bold' : '',
     isSelected ? 'is-selected' : '',
+    runsOn ? 'runs-on' : '',
   ].filter((name) => name !== '');
   return classes.length > 0 ? classes.join(' ') : undefined;
+}
+
+/** As in any sheet, a text runs on over empty cells to its right. */
+function runsOn(address: string, { cells, merged }: SheetDrawing): boolean {
+  const cell = cells.get(address);
+  if (cell?.kind !== 'text' || merged.spans.has(address)) return false;
+  const next = addressOf({ row: cell.row, column: cell.column + 1 });
+  return !cells.has(next) && !merged.covered.has(next);
 }
 
 function classOfUse(use: CellUse | undefined): string {
