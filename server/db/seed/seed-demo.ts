@@ -5,6 +5,7 @@ import { demoOrganisations } from './demo-people';
 import { seedOrganisations } from './seed-organisations';
 import { seedProjects } from './seed-projects';
 import { seedRuleSets } from './seed-rule-sets';
+import { seedSubmittals } from './seed-submittals';
 import { writeDemoWorkbooks } from './write-demo-workbooks';
 
 /** Makes the demo where it is missing: all rows or none, the same ones each time. */
@@ -20,6 +21,8 @@ export async function seedDemo(deps: Deps): Promise<{ seeded: boolean }> {
     await seedOrganisations(tx);
     await seedRuleSets(tx);
     await seedProjects(tx);
+    await seedSubmittals({ ...deps, db: tx });
   });
+  deps.wake.mail();
   return { seeded: true };
 }
