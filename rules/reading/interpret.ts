@@ -1,6 +1,5 @@
 import type { Quantity } from '../quantities/quantity';
 import { allQuantities } from '../quantities/registry';
-import { conditionsSchema } from '../record';
 import { withStandardAttributes } from '../rule-sets/attribute';
 import { withStandardDocuments } from '../rule-sets/document-types';
 import type { Cell, CellGrid, SheetGrid } from './cell-grid';
@@ -23,6 +22,7 @@ import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
 import type { Answer, ReadingResult } from './reading-result';
 import { SheetIndex } from './sheet-index';
 import { submittalFacts } from './submittal-facts';
+import { understandCondition } from './understand-condition';
 import { unreadReasons } from './unread-reason';
 import { valueCells } from './value-places';
 
@@ -105,21 +105,26 @@ function markUnits(bound: RuleAtAnchor, cells: Cell[], context: ReadingContext):
   }
 }
 
-/** Keys of rows without a value, and prepared method cells, are part of the layout and nothing to report. */
+/** Prepared keys are part of the layout and nothing to report: sieves without a result, method rows, column heads. */
 function markKeys(bound: RuleAtAnchor, nextRow: number | null, context: ReadingContext): void {
   const { index, anchor, rule, locators } = bound;
   if (rule.axis === 'right') return;
-  const lastColumn = anchor.cell.column + index.spanOf(anchor.cell).columns - 1;
+  const span = index.spanOf(anchor.cell);
+  const firstRow = anchor.cell.row + span.rows + (rule.axis === 'cross' ? 1 : 0) + rule.range.skip;
   for (const [name, locator] of locators) {
-    if (!(name in conditionsSchema.shape) && !['method', 'testedOn', 'quantity', 'unit'].includes(name))
-      continue;
     for (const cell of index.sheet.cells) {
       if (cell.row <= anchor.cell.row || (nextRow !== null && cell.row >= nextRow)) continue;
-      const inAnchor = cell.column >= anchor.cell.column && cell.column <= lastColumn;
+      const inAnchor = cell.column >= anchor.cell.column && cell.column < anchor.cell.column + span.columns;
       const key = locator.cellFor({ row: cell.row, column: inAnchor ? cell.column : anchor.cell.column });
-      if (key === cell) context.log.use(placeOf(index.sheet, cell), 'label', 'A key.');
+      if (key !== cell || !isPrepared(name, cell, firstRow)) continue;
+      context.log.use(placeOf(index.sheet, cell), 'label', 'A key.');
     }
   }
+}
+
+function isPrepared(name: string, cell: Cell, firstRow: number): boolean {
+  if (cell.row < firstRow) return true;
+  return name === 'sieve' && understandCondition('sieve', cell, null, '.').state === 'value';
 }
 
 /** Finds a quantity by id, label, symbol or any name that workbooks give it. */

@@ -3,7 +3,7 @@ import { convert, normaliseUnit } from '../quantities/units';
 import type { Conditions, Reading } from '../record';
 import type { Cell } from './cell-grid';
 import { isReference } from './mapping';
-import { keysOf, keyTexts, type RuleAtAnchor } from './read-rule';
+import { keyCells, keysOf, type RuleAtAnchor } from './read-rule';
 import { type Place, placeOf, type ReadingContext } from './reading-log';
 import { rowRole } from './row-role';
 import { doubtOf } from './settled';
@@ -20,22 +20,49 @@ export function readValues(
   findQuantity: FindQuantity,
   context: ReadingContext,
 ): void {
+  const fractions = fractionColumns(cells);
   for (const cell of cells) {
     const quantity = quantityOf(bound, cell, findQuantity, context);
-    if (quantity) readValue(bound, cell, quantity, context);
+    if (quantity) readValue(bound, cell, { quantity, inFractions: fractions.has(cell.column) }, context);
   }
 }
 
-function readValue(bound: RuleAtAnchor, cell: Cell, quantity: Quantity, context: ReadingContext): void {
+/**
+ * Columns whose values all lie between 0 and 1: a gradation written that way is in fractions of one, since what
+ * passes the coarsest sieve is the whole.
+ */
+function fractionColumns(cells: Cell[]): Set<number> {
+  const columns = new Map<number, number[]>();
+  for (const cell of cells) {
+    if (cell.kind === 'number')
+      columns.set(cell.column, [...(columns.get(cell.column) ?? []), Number(cell.value)]);
+  }
+  const inFractions = [...columns].filter(
+    ([, values]) => values.length >= 3 && Math.max(...values) === 1 && Math.min(...values) >= 0,
+  );
+  return new Set(inFractions.map(([column]) => column));
+}
+
+function readValue(
+  bound: RuleAtAnchor,
+  cell: Cell,
+  { quantity, inFractions }: { quantity: Quantity; inFractions: boolean },
+  context: ReadingContext,
+): void {
   const { index } = bound;
   const { log } = context;
   const place = placeOf(index.sheet, cell);
-  const role = rowRole(keyTexts(bound, cell));
+  const role = rowRole(keyCells(bound, cell).map(({ text }) => text));
   if (role === 'spread' || (role === 'average' && quantity.kind === 'measured')) {
     log.passOver(place, role === 'spread' ? unreadReasons.spread : unreadReasons.average);
+    for (const key of keyCells(bound, cell))
+      log.use(placeOf(index.sheet, key), 'label', 'A row of averages or spreads.');
     return;
   }
-  const understood = understandNumber(cell, expectation(bound, cell, quantity));
+  const understood = understandNumber(cell, {
+    ...expectation(bound, cell, quantity),
+    inFractions: inFractions && quantity.id === 'percent-passing',
+  });
   if (understood.state === 'blank') return;
   if (understood.state === 'none') {
     log.passOver(place, unreadReasons.noValue);
@@ -57,7 +84,12 @@ function readValue(bound: RuleAtAnchor, cell: Cell, quantity: Quantity, context:
   const hidden = index.isHidden(cell) ? ' · hidden in the workbook' : '';
   const elsewhere =
     cell.formula !== null && /\[\d+\]|\[[^\]]+\.xls/i.test(cell.formula) ? ' · from another workbook' : '';
-  log.readings.push({ reading, place, taken: `${readingInWords(reading, quantity)}${hidden}${elsewhere}` });
+  const remark = cell.comment === null ? '' : ` · remark: ${cell.comment}`;
+  log.readings.push({
+    reading,
+    place,
+    taken: `${readingInWords(reading, quantity)}${hidden}${elsewhere}${remark}`,
+  });
 }
 
 /** A binder content is set for a trial, so it is no specimen's own; an average has no specimen. */

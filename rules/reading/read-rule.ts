@@ -139,9 +139,10 @@ function testedOnOf(bound: RuleAtAnchor, cell: Cell, context: ReadingContext): s
   return settled.state === 'value' ? settled.value : null;
 }
 
-export function keyTexts(bound: RuleAtAnchor, cell: Cell): string[] {
+/** The cells in words that say whose a row is. */
+export function keyCells(bound: RuleAtAnchor, cell: Cell): Cell[] {
   return ['specimen', 'trial', 'stockpile', 'sieve'].flatMap((name) => {
     const key = bound.locators.get(name)?.cellFor(cell);
-    return key?.kind === 'text' ? [key.text] : [];
+    return key?.kind === 'text' ? [key] : [];
   });
 }

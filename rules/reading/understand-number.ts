@@ -15,12 +15,14 @@ export interface NumberValue {
 }
 
 export interface NumberExpectation {
-  quantity: Pick<Quantity, 'id' | 'symbol' | 'label' | 'unit' | 'acceptedUnits' | 'plausible'>;
+  quantity: Pick<Quantity, 'id' | 'symbol' | 'label' | 'unit' | 'acceptedUnits' | 'plausible' | 'decimals'>;
   /** Unit from the header or the mapping; null where neither states one. */
   unit: string | null;
   /** A unit that the header states and that is not known. */
   unknownUnit: string | null;
   decimal: '.' | ',';
+  /** The values beside it are fractions of one where percentages belong. */
+  inFractions?: boolean;
 }
 
 /** A cell as a number in the quantity's canonical unit, or why it cannot be taken with certainty. */
@@ -46,7 +48,12 @@ export function understandNumber(cell: Cell | null, expected: NumberExpectation)
 function fromStoredNumber(cell: Cell, expected: NumberExpectation): Understood<NumberValue> {
   const { quantity } = expected;
   const formatUnit = unitOfFormat(cell.format);
-  if (!isPercent(cell.format)) return inUnit(cell.value, undefined, formatUnit, expected);
+  if (!isPercent(cell.format)) {
+    const looksLikeFraction =
+      formatUnit === null && (expected.inFractions === true || isOddFraction(cell, quantity));
+    if (looksLikeFraction) return fractionDoubt(cell, expected);
+    return inUnit(cell.value, undefined, formatUnit, expected);
+  }
   if (quantity.unit === '1') return inUnit(cell.value, undefined, '1', expected);
   if (quantity.unit !== '%') {
     return doubtOf(
@@ -59,6 +66,20 @@ function fromStoredNumber(cell: Cell, expected: NumberExpectation): Understood<N
   return doubtOf(`shows ${cell.text}; read as it stands it would be ${cell.value} %`, [
     alternative(Number(cell.value), undefined, expected),
     alternative(Number(scaled), undefined, expected),
+  ]);
+}
+
+/** A percentage that is reported in whole numbers and stands as 0.97: as likely 97 % as a hundredth of that. */
+function isOddFraction(cell: Cell, quantity: NumberExpectation['quantity']): boolean {
+  const value = Number(cell.value);
+  return quantity.unit === '%' && quantity.decimals === 0 && value > 0 && value < 1;
+}
+
+function fractionDoubt(cell: Cell, expected: NumberExpectation): Understood<NumberValue> {
+  const times100 = new Decimal(cell.value).times(100).toNumber();
+  return doubtOf(`says ${cell.value} where a percentage belongs; it may be a fraction of one`, [
+    alternative(times100, undefined, expected),
+    alternative(Number(cell.value), undefined, expected),
   ]);
 }
 

@@ -232,6 +232,14 @@ describe('a table with a quantity in each column', () => {
     );
   });
 
+  it('keeps the remark on a cell with what it was taken for, and lists notes under the table', () => {
+    const remarked = { kind: 'number', value: '2.371', text: '2.371', comment: 'edge chip' } as const;
+    const noted = { ...cells, D6: remarked, B14: '* caliper volume, specimen would not seal' };
+    const { uses, unread } = read({ Trials: { cells: noted } }, rules.slice(0, 1));
+    expect(uses.find(({ cell }) => cell === 'D6')?.taken).toMatch(/remark: edge chip/);
+    expect(unread.find(({ cell }) => cell === 'B14')?.reason).toBe('Text beside the readings.');
+  });
+
   it('says that a value comes from another workbook', () => {
     const linked = {
       kind: 'number',
@@ -379,6 +387,14 @@ describe('a gradation with stockpiles in columns', () => {
     const { doubts, unread } = read({ Gradation: sheet }, rules);
     expect(doubts).toMatchObject([{ cell: 'A8', about: { quantity: 'percent-passing' } }]);
     expect(unread).toMatchObject([{ cell: 'B8' }]);
+  });
+
+  it('doubts a whole column that is written in fractions of one', () => {
+    const fractions = { ...cells, C6: 1, C7: 0.078, A9: '0.3 mm', C9: 0.2 };
+    const { doubts } = read({ Gradation: { ...sheet, cells: fractions } }, rules);
+    expect(
+      doubts.filter(({ cell }) => cell.startsWith('C')).map(({ alternatives }) => alternatives[0]?.answer),
+    ).toEqual(['100 %', '7.8 %', '20 %']);
   });
 
   it('doubts a column that no stockpile is named over', () => {

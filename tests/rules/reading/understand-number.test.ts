@@ -41,6 +41,14 @@ describe('a cell as the value of a quantity', () => {
     });
   });
 
+  it('doubts a fraction also where it is plausible, if the quantity is reported in whole percent', () => {
+    expect(understand('coarse-aggregate-angularity-one-face', 0.97)).toMatchObject({
+      state: 'doubt',
+      alternatives: [{ answer: '97 %' }, { answer: '0.97 %' }],
+    });
+    expect(understand('deleterious-materials', 0.4)).toEqual(sure(0.4));
+  });
+
   it('doubts a percentage that was entered as a whole number into a percent format', () => {
     const cell = { kind: 'number', value: '4.5', text: '450%', format: '0%' } as const;
     expect(understand('air-voids', cell)).toMatchObject({
