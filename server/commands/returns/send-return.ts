@@ -1,6 +1,6 @@
 import { and, eq } from 'drizzle-orm';
 import type { Disposition } from '#rules/engine/finding';
-import type { ReturnFields } from '#shared/contracts/returns';
+import type { Recipient, ReturnFields } from '#shared/contracts/returns';
 import { dateOfInstant } from '#shared/format/dates';
 import { workingDaysBetween } from '#shared/working-days';
 import { findReturn, lockReturn, stampsOfReturned } from '../../db/queries/returns';
@@ -73,8 +73,8 @@ export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
       kind: 'return',
       subject: { kind: 'return', id: returnId },
       submittalId: row.submittal.id,
-      recipients: fields.to,
-      copies: fields.copies,
+      recipients: fields.to.map(mailAddress),
+      copies: fields.copies.map(mailAddress),
       content: returnMail(input, { address: returnAddress(deps.settings, row) }),
       fileIds: [letterFileId, ...(workbookFileId === null ? [] : [workbookFileId])],
     });
@@ -193,6 +193,10 @@ async function decide(deps: Deps, { row, fields }: SendReturn): Promise<void> {
     .update(waivers)
     .set({ sentAt: now })
     .where(and(eq(waivers.revisionId, row.revision.id), eq(waivers.toBeReturned, true)));
+}
+
+function mailAddress({ name, email }: Recipient): { name: string; email: string } {
+  return { name, email };
 }
 
 function isApproval(disposition: Disposition): boolean {
