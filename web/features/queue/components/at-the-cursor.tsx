@@ -99,12 +99,12 @@ function Details({ detail }: { detail: Detail }) {
 }
 
 function CursorFinding({ finding, waived }: { finding: Finding; waived: boolean }) {
-  const brief = findingBrief(finding);
+  const { title, rest } = findingBrief(finding);
   return (
     <li className="cursor-finding">
       <Mark name={waived ? 'waived' : markOfOutcome[finding.outcome]} alone />
       <span>
-        <b>{finding.title}</b> {brief}
+        {title ? <b>{title}</b> : null} {rest}
         {waived ? ', waived' : null}
       </span>
     </li>

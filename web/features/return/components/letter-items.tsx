@@ -85,8 +85,7 @@ function LetterItem({
 }) {
   const { finding } = item;
   const address = `${paths.revision(params.submittalId, params.number)}#${findingFragment(finding)}`;
-  const brief =
-    item.waived === null ? findingBrief(finding) : `${findingBrief(finding)}, waived: ${item.waived}`;
+  const { title, rest } = findingBrief(finding);
   return (
     <li className="letter-item">
       <Checkbox
@@ -99,7 +98,8 @@ function LetterItem({
         {finding.clause ?? ''}
       </Link>
       <span>
-        {finding.title} {brief}{' '}
+        {title} {rest}
+        {item.waived === null ? '' : `, waived: ${item.waived}`}{' '}
         {item.notes.map((note) => (
           <span key={note} className="letter-note">
             <RichText>{note}</RichText>
