@@ -2,6 +2,7 @@ import type { MixRecord } from '../record';
 import type { Analysis, AnalysisOptions, RecomputedValue } from './analysis';
 import { type AggregateNodes, aggregates, blendChoice } from './analysis-aggregate';
 import { designFromTrials, designPointOf, type TrialValues } from './analysis-design';
+import { fieldVoidsOf } from './analysis-field';
 import { designTrial, indexRecord, type RecordIndex } from './analysis-index';
 import type { AnalysisNode } from './analysis-node';
 import { attachReported, recomputedValues } from './analysis-reported';
@@ -44,6 +45,7 @@ function trialValues(index: RecordIndex, trial: string, aggregate: AggregateNode
     ...volumetric.others,
     ...[dry, conditioned, ratio].filter((node) => node !== null),
     ...crackingOf(index, trial),
+    ...fieldVoidsOf(index, trial, volumetric.va),
   ];
   const inputs = [
     volumetric.pb,
@@ -52,6 +54,7 @@ function trialValues(index: RecordIndex, trial: string, aggregate: AggregateNode
     aggregate.gsb,
     aggregate.gsa,
     aggregate.surfaceArea,
+    aggregate.passing(0.075),
   ].filter((node) => node !== null);
   return { trial, pb: volumetric.pb, nodes, aggregate, context: [...inputs, ...derivedOf(volumetric)] };
 }
@@ -75,10 +78,9 @@ function blendValues(index: RecordIndex, trials: Trial[]): RecomputedValue[] {
     const key = `${ownShares ? trial : ''}|${aggregate.blend ?? ''}`;
     if (done.has(key)) return [];
     done.add(key);
-    const { gsb, gsa, absorption, surfaceArea, combinedPassing } = aggregate;
-    const nodes = [gsb, gsa, absorption, surfaceArea, ...combinedPassing.values()].filter(
-      (node) => node !== null,
-    );
+    const { gsb, gsa, absorption, surfaceArea, combinedPassing, finenessModuli } = aggregate;
+    const combined = [gsb, gsa, absorption, surfaceArea].filter((node) => node !== null);
+    const nodes = [...combined, ...combinedPassing.values(), ...finenessModuli];
     const own = ownShares ? nodes.map((node) => ({ ...node, at: { ...node.at, trial } })) : nodes;
     return publish(own, context, index);
   });

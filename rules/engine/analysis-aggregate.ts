@@ -1,5 +1,5 @@
 import { combinedAbsorption, combinedGravity } from '../calculations/combined-gravity';
-import { combinedPassing } from '../calculations/gradation';
+import { combinedPassing, finenessModulus } from '../calculations/gradation';
 import { surfaceArea, surfaceAreaFactors } from '../calculations/surface-area';
 import { cannot, known, type NumericResult } from '../numerics/numeric-result';
 import type { Conditions, MixRecord, Reading } from '../record';
@@ -19,6 +19,8 @@ export interface AggregateNodes {
   /** Percent passing computed from the stockpiles, by sieve. */
   combinedPassing: Map<number, AnalysisNode>;
   surfaceArea: AnalysisNode | null;
+  /** Of each stockpile, and of the blend, for which the workbook states one. */
+  finenessModuli: AnalysisNode[];
 }
 
 /** The aggregate of each trial; trials that state none of their own share one. */
@@ -72,6 +74,7 @@ function aggregateOf(index: RecordIndex, trial: string, blend: BlendChoice): Agg
     passing: atSieve,
     combinedPassing: combined,
     surfaceArea: surfaceAreaOf(atSieve, at),
+    finenessModuli: select('fineness-modulus').flatMap((stated) => finenessOf(stated, passing, at) ?? []),
   };
 }
 
@@ -167,6 +170,8 @@ interface Gradation {
   stated(sieveMm: number): AnalysisNode | null;
   ofStockpile(stockpile: string, sieveMm: number): AnalysisNode | null;
   sieves: number[];
+  /** All sieves of a stockpile, or of the blend as stated. */
+  stack(stockpile: string | undefined): AnalysisNode[];
 }
 
 function gradationOf(select: (quantity: string) => Reading[]): Gradation {
@@ -184,6 +189,7 @@ function gradationOf(select: (quantity: string) => Reading[]): Gradation {
   return {
     stated: (sieveMm) => at(undefined, sieveMm),
     ofStockpile: at,
+    stack: (stockpile) => [...(stacks.get(stockpile)?.values() ?? [])],
     sieves: [...sieves].sort((a, b) => b - a),
   };
 }
@@ -252,6 +258,19 @@ function combinedGradation(
     if (node) combined.set(sieve, node);
   }
   return combined;
+}
+
+function finenessOf(stated: Reading, gradation: Gradation, at: Conditions): AnalysisNode | null {
+  const inputs = gradation.stack(stated.at.stockpile);
+  const openings = inputs.map((input) => input.at.sieve!);
+  return derivedNode({
+    quantity: 'fineness-modulus',
+    at: withoutGaps({ ...at, stockpile: stated.at.stockpile }),
+    formula: 'Σ cumulative percent retained/100',
+    inputs,
+    compute: (values) =>
+      finenessModulus(openings.map((openingMm, index) => ({ openingMm, passingPercent: values[index]! }))),
+  });
 }
 
 function surfaceAreaOf(

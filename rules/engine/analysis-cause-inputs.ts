@@ -9,15 +9,17 @@ import type { AnalysisNode } from './analysis-node';
  */
 export function causeInputsOf(node: AnalysisNode, trialNodes: AnalysisNode[]): CauseInputs {
   const values = new Map<string, number>();
-  collect(node, values);
+  // What an interpolated value rests on belongs to other trials: only its own trial's values say anything.
+  const isInterpolated = node.origin === 'interpolated';
+  if (!isInterpolated) collect(node, values);
   const inTrial = new Map(trialNodes.map((other) => [other.quantity, other]));
   const get = (symbol: string, quantity?: string) =>
     values.get(symbol) ?? (quantity ? inTrial.get(quantity)?.value : undefined) ?? Number.NaN;
-  const gsb =
-    findNode(node, 'bulk-specific-gravity-aggregate') ?? inTrial.get('bulk-specific-gravity-aggregate');
-  const gsa =
-    findNode(node, 'apparent-specific-gravity-aggregate') ??
-    inTrial.get('apparent-specific-gravity-aggregate');
+  const ofBlend = (quantity: string) =>
+    (isInterpolated ? undefined : findNode(node, quantity)) ?? inTrial.get(quantity);
+  const gsb = ofBlend('bulk-specific-gravity-aggregate');
+  const gsa = ofBlend('apparent-specific-gravity-aggregate');
+  const fines = trialNodes.find(({ quantity, at }) => quantity === 'percent-passing' && at.sieve === 0.075);
   const va = inTrial.get('air-voids');
   const vma = inTrial.get('voids-in-mineral-aggregate');
   return {
@@ -32,7 +34,7 @@ export function causeInputsOf(node: AnalysisNode, trialNodes: AnalysisNode[]): C
     Pbe: get('Pbe', 'effective-binder-content'),
     Va: get('Va', 'air-voids'),
     VMA: get('VMA', 'voids-in-mineral-aggregate'),
-    P0075: get('P0.075'),
+    P0075: values.get('P0.075') ?? fines?.value ?? Number.NaN,
     SA: get('SA', 'surface-area'),
     GsbArithmetic: weightedMean(gsb),
     GsaArithmetic: weightedMean(gsa),

@@ -1,4 +1,4 @@
-import { bulkSpecificGravity } from '../calculations/bulk-specific-gravity';
+import { bulkSpecificGravity, specimenAbsorption } from '../calculations/bulk-specific-gravity';
 import { relativeDensity } from '../calculations/relative-density';
 import { known } from '../numerics/numeric-result';
 import type { Conditions, Reading } from '../record';
@@ -20,6 +20,8 @@ export interface CompactedSet {
   volumetric: boolean;
   at: Conditions;
   gmb: AnalysisNode;
+  /** Water that the specimens took up; null where no masses are given. */
+  absorption: AnalysisNode | null;
 }
 
 /**
@@ -37,7 +39,8 @@ export function compactedSets(index: RecordIndex, trial: string): CompactedSet[]
     const at = withoutGaps({ trial, ...set.special, gyrations: set.stated });
     const node = gravityOf(set, at);
     const volumetric = set.gyrations === 'design' && Object.keys(set.special).length === 0;
-    return node ? [{ gyrations: set.gyrations, volumetric, at, gmb: node }] : [];
+    if (!node) return [];
+    return [{ gyrations: set.gyrations, volumetric, at, gmb: node, absorption: absorptionOf(set, at) }];
   });
 }
 
@@ -131,19 +134,41 @@ function gravityOf(set: SpecimenSet, at: Conditions): AnalysisNode | null {
 }
 
 function fromMasses(readings: Record<string, Reading[]>, at: Conditions): AnalysisNode | null {
+  const inputs = massesOf(readings);
+  if (inputs === null) return null;
+  return derivedNode({
+    quantity: gmb,
+    at,
+    formula: 'A/(B − C)',
+    inputs,
+    compute: ([A, B, C]) => bulkSpecificGravity({ A: A!, B: B!, C: C! }),
+  });
+}
+
+function absorptionOf(set: SpecimenSet, at: Conditions): AnalysisNode | null {
+  const nodes = [...set.specimens].flatMap(([label, readings]) => {
+    const inputs = massesOf(readings);
+    if (inputs === null) return [];
+    const node = derivedNode({
+      quantity: 'specimen-absorption',
+      at: withoutGaps({ ...at, specimen: label === '' ? undefined : label }),
+      formula: '100·(B − A)/(B − C)',
+      inputs,
+      compute: ([A, B, C]) => specimenAbsorption({ A: A!, B: B!, C: C! }),
+    });
+    return node ?? [];
+  });
+  return meanNode(nodes, at, { keepSpecimens: true, counted: true });
+}
+
+/** A, B and C of one specimen; null unless each is there once. */
+function massesOf(readings: Record<string, Reading[]>): AnalysisNode[] | null {
   const inputs = Object.entries(massSymbols).map(([quantity, symbol]) => {
     const masses = readings[quantity] ?? [];
     return masses.length === 1 ? readingNode(masses[0]!, symbol) : null;
   });
   const complete = inputs.filter((input) => input !== null);
-  if (complete.length < inputs.length) return null;
-  return derivedNode({
-    quantity: gmb,
-    at,
-    formula: 'A/(B − C)',
-    inputs: complete,
-    compute: ([A, B, C]) => bulkSpecificGravity({ A: A!, B: B!, C: C! }),
-  });
+  return complete.length === inputs.length ? complete : null;
 }
 
 function asGiven(readings: Reading[] | undefined, at: Conditions): AnalysisNode | null {

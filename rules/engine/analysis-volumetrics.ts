@@ -35,7 +35,7 @@ export interface TrialNodes {
   film: AnalysisNode | null;
   recycled: AnalysisNode | null;
   relativeDensities: AnalysisNode[];
-  /** Specimens outside the volumetric set: their gravity and air voids. */
+  /** Water taken up by all specimens; gravity and air voids of those outside the volumetric set. */
   others: AnalysisNode[];
 }
 
@@ -96,9 +96,7 @@ export function volumetricsOf(index: RecordIndex, trial: string, aggregate: Aggr
     film,
     recycled: recycledOf(index, trial, pb),
     relativeDensities: gmm === null ? [] : densitiesOf(index, trial, sets, gmm),
-    others: sets
-      .filter((set) => !set.volumetric)
-      .flatMap((set) => [set.gmb, voidsOf(set.at, set.gmb, gmm) ?? []].flat()),
+    others: sets.flatMap((set) => otherValues(set, gmm)),
   };
 }
 
@@ -135,6 +133,14 @@ function voidsOf(at: Conditions, gmb: AnalysisNode | null, gmm: AnalysisNode | n
   return derive(at, 'air-voids', '100·(Gmm − Gmb)/Gmm', [gmm, gmb], (x) =>
     airVoids({ Gmm: x[0]!, Gmb: x[1]! }),
   );
+}
+
+function otherValues(
+  { at, gmb, volumetric, absorption }: CompactedSet,
+  gmm: AnalysisNode | null,
+): AnalysisNode[] {
+  const apart = volumetric ? [] : [gmb, voidsOf(at, gmb, gmm)];
+  return [absorption, ...apart].filter((node) => node !== null);
 }
 
 /**

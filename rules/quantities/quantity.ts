@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { conditionsSchema } from '../record';
 
-export const methodPrecisionSchema = z.strictObject({
+const methodPrecisionSchema = z.strictObject({
   /** In the quantity's canonical unit. */
   singleOperatorStandardDeviation: z.number().positive(),
   source: z.string(),
@@ -53,4 +53,3 @@ export const quantitySchema = z.strictObject({
 export type Quantity = z.infer<typeof quantitySchema>;
 /** As written in the registry and in rule sets: what has a default may be left out. */
 export type QuantityInput = z.input<typeof quantitySchema>;
-export type MethodPrecision = z.infer<typeof methodPrecisionSchema>;

@@ -246,6 +246,23 @@ export const volumetricQuantities: QuantityInput[] = [
     methods: ['AASHTO T 355', 'AASHTO T 166'],
     aliases: ['in-place density', 'core density', 'percent compaction', 'roadway density', 'mat density'],
     subject: 'specimen',
+    // Percent of what, its variant says: `maximum` for Gmm, `laboratory` for the density of laboratory specimens.
+  },
+  {
+    id: 'in-place-air-voids',
+    symbol: 'Va,field',
+    label: 'in-place air voids',
+    plural: true,
+    unit: '%',
+    acceptedUnits: ['%'],
+    decimals: 1,
+    plausible: { min: -1, max: 25 },
+    gaugeSpan: 2,
+    aliases: ['field air voids', 'in-place voids', 'roadway air voids'],
+    kind: 'derived',
+    derivation: '100 − %Gmm, or 100 − C·(100 − Va)/100 from laboratory density',
+    subject: 'specimen',
+    source: 'Texas DOT, Pavement Manual, section 8.2; against laboratory density an identity',
   },
   {
     id: 'gyrations-initial',

@@ -114,6 +114,23 @@ it('combines the stockpiles beside a stated job-mix gradation, and compares with
   expect(blend?.reported?.value).toBe(66);
 });
 
+it('recomputes a stated fineness modulus from the stockpile it is stated for', () => {
+  const passing = [100, 98, 80, 60, 40, 20, 5];
+  const sand = [9.5, 4.75, 2.36, 1.18, 0.6, 0.3, 0.15].map((sieve, place) =>
+    reading(
+      'percent-passing',
+      passing[place]!,
+      { stockpile: 'sand', sieve },
+      { text: passing[place]!.toFixed(1) },
+    ),
+  );
+  const analysis = analysisOf([...sand, reported('fineness-modulus', 2.5, { stockpile: 'sand' }, '2.50')]);
+  // (0 + 2 + 20 + 40 + 60 + 80 + 95)/100 = 2.97.
+  const modulus = computed(analysis, 'fineness-modulus', { stockpile: 'sand' });
+  expect(modulus?.value).toBe(2.97);
+  expect(modulus?.agrees).toBe(false);
+});
+
 describe('several blends', () => {
   const blends = [
     ...stockpile('coarse', 60, 2.6, { blend: '1' }),

@@ -205,6 +205,25 @@ describe('named causes', () => {
     expect(ratio?.cause?.id).toBe('recycled-by-mass-of-aggregate');
   });
 
+  it("explains an interpolated value by its own trial's numbers only", () => {
+    // Gse is the same 2.70705 at both contents: Gmm = 100/(Ps/Gse + Pb/Gb).
+    const trialAt = (trial: string, binder: number) => [
+      reading('binder-content', binder, { trial }, { text: binder.toFixed(3) }),
+      reading('maximum-specific-gravity', 100 / ((100 - binder) / 2.70705 + binder / 1.03), { trial }),
+    ];
+    const analysis = analysisOf([
+      ...trialAt('A', 5),
+      ...trialAt('B', 6),
+      ...aggregateReadings(),
+      reading('binder-content', 5.5, {}, { text: '5.50' }),
+      // 5.0/5.5 over total binder; over effective binder (about 4.59) it is 1.09.
+      reported('dust-proportion', 0.91),
+    ]);
+    const dust = computed(analysis, 'dust-proportion', { trial: 'design' });
+    expect(dust).toMatchObject({ origin: 'interpolated', agrees: false });
+    expect(dust?.cause?.id).toBe('dust-over-total-binder');
+  });
+
   it('names none where nothing known gives the reported digits', () => {
     const found = valueWith('air-voids', reported('air-voids', 3.1, { trial: 'B' }));
     expect(found).toMatchObject({ agrees: false, cause: null });

@@ -282,3 +282,31 @@ describe('recycled binder ratio', () => {
     expect(computed(analysis, 'recycled-binder-ratio', { trial: 'design' })).toBeUndefined();
   });
 });
+
+describe('field density', () => {
+  it('gives in-place voids by what it is a percentage of, and none where that is not said', () => {
+    const analysis = analysisOf([
+      reading('maximum-specific-gravity', 2.5),
+      reading('bulk-specific-gravity-mix', 2.4),
+      reading('field-density', 92, { variant: 'maximum', specimen: 'core 1' }),
+      reading('field-density', 98, { variant: 'laboratory', specimen: 'core 2' }),
+      reading('field-density', 95, { specimen: 'core 3' }),
+    ]);
+    const voids = (variant: string) =>
+      computed(analysis, 'in-place-air-voids', { trial: 'design', variant })?.value;
+    // 100 − 92; 100 − 98·(100 − 4)/100 (reference records DEN-01, DEN-04a).
+    expect(voids('maximum')).toBe(8);
+    expect(voids('laboratory')).toBe(5.92);
+    expect(analysis.recomputed.filter(({ quantity }) => quantity === 'in-place-air-voids')).toHaveLength(2);
+  });
+});
+
+it('states the water that each specimen took up', () => {
+  const analysis = analysisOf([
+    reading('mass-in-air', 4835.2, { trial: 'B', specimen: '1' }),
+    reading('mass-saturated-surface-dry', 4841.6, { trial: 'B', specimen: '1' }),
+    reading('mass-in-water', 2820, { trial: 'B', specimen: '1' }),
+  ]);
+  // 100·6.4/2021.6 = 0.31658.
+  expect(computed(analysis, 'specimen-absorption', { trial: 'B' })?.value).toBeCloseTo(0.31658, 5);
+});
