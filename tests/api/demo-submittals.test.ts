@@ -40,6 +40,7 @@ async function standings(name: string) {
 describe('the submittals of the demo', () => {
   it('show the agency one of each state that it may see', async () => {
     expect(await standings('Ines Tordoff')).toEqual([
+      'CV-2022 TA-190-B2 0 in review ',
       'CV-2031 BW-125-S4 1 in review ',
       'CV-2031 KD-095-L1 0 submitted ',
       'CV-2034 KD-095-L1 0 returned approved',
@@ -52,7 +53,10 @@ describe('the submittals of the demo', () => {
       'CV-2031 BW-125-S4 1 in review ',
       'CV-2034 BW-125-S6 0 draft ',
     ]);
-    expect(await standings('Bram Ostler')).toEqual(['CV-2034 TA-190-B2 1 draft ']);
+    expect(await standings('Bram Ostler')).toEqual([
+      'CV-2022 TA-190-B2 0 in review ',
+      'CV-2034 TA-190-B2 1 draft ',
+    ]);
   });
 
   it('fill the home of a contractor with what the agency wrote and the last letter', async () => {
@@ -70,9 +74,9 @@ describe('the submittals of the demo', () => {
     expect(body.submittals).toHaveLength(2);
   });
 
-  it('put one unassigned, one with Ines Tordoff and one with a contractor into the queue', async () => {
+  it('put one unassigned, two with Ines Tordoff and one with a contractor into the queue', async () => {
     const { body } = await (await as('Ines Tordoff')).get('/api/queue').expect(200);
-    expect(body.counts).toMatchObject({ everyone: 2, mine: 1, unassigned: 1, withContractors: 1, late: 0 });
+    expect(body.counts).toMatchObject({ everyone: 3, mine: 2, unassigned: 1, withContractors: 1, late: 0 });
   });
 
   it('have a draft with doubts and a revision in review that moved', async () => {

@@ -6,7 +6,7 @@ import type { Deps } from '../../deps';
 import { newestCheckOf } from '../queries/checks';
 import { demoId } from './demo-id';
 import { demoProjects } from './seed-projects';
-import { type DemoDesk, demoDesk } from './submittals-desk';
+import { type DemoDesk, type DemoPlace, demoDesk } from './submittals-desk';
 
 /**
  * One submittal for each state worth looking at, made by the acts of the product itself, some working days before
@@ -32,6 +32,7 @@ export async function seedSubmittals(deps: Deps): Promise<void> {
   await approved(desk, day);
   await returnedWithDraft(desk, day);
   await inReview(desk, day);
+  await underWay(desk, day);
   await unassigned(desk, day);
   await inDoubt(desk, new Date(deps.now().getTime() - 40 * 60_000).toISOString());
 }
@@ -123,26 +124,52 @@ async function inReview(desk: DemoDesk, day: Day): Promise<void> {
     kind: 'to be returned',
     text: 'Thank you for correcting the dust proportion.',
   });
-  await waiveFirstAdvisory(desk, day(1, '10:30'), second);
 }
 
-/** The agency lets its reviewers waive what is advisory; whether this revision has such a fail is for the check to say. */
-async function waiveFirstAdvisory(
-  desk: DemoDesk,
-  at: string,
-  place: { submittalId: string; number: number; revisionId: string },
-): Promise<void> {
-  const check = await newestCheckOf(desk.db, place.revisionId);
-  const fail = check?.result.findings.find(
-    ({ outcome, severity, kind }) => outcome === 'fail' && severity === 'advisory' && kind !== 'consistency',
-  );
-  if (fail === undefined) return;
-  await desk.waive(at, {
+/** A mix with much to put right, half way through its review. */
+async function underWay(desk: DemoDesk, day: Day): Promise<void> {
+  const place = await desk.upload(day(5), {
+    by: 'Nia Corrie',
+    project: 'CV-2022',
+    mixDesignation: 'TA-190-B2',
+    workbook: 'TA-190-B2 r0.xlsx',
+  });
+  await desk.submit(day(5, '12:15'), { by: 'Bram Ostler', place });
+  await desk.take(day(4), { by: 'Ines Tordoff', place });
+  const [required, advisory] = await Promise.all([
+    firstFail(desk, place, 'required'),
+    firstFail(desk, place, 'advisory'),
+  ]);
+  await desk.note(day(1, '14:05'), {
     by: 'Ines Tordoff',
     place,
-    finding: findingKey(fail),
+    finding: required,
+    kind: 'to be returned',
+    text: 'Please show with the next revision how this is met at the plant, not only in the laboratory.',
+  });
+  await desk.note(day(1, '14:10'), {
+    by: 'Ines Tordoff',
+    place,
+    finding: null,
+    kind: 'internal',
+    text: 'The same mix came back on CV-2034. Decide both alike.',
+  });
+  await desk.waive(day(1, '14:20'), {
+    by: 'Ines Tordoff',
+    place,
+    finding: advisory,
     reason: 'Within what the last three productions of this plant have shown to perform.',
   });
+}
+
+/** Which findings fail is for the check to say, and a demo without one would be no demo. */
+async function firstFail(desk: DemoDesk, place: DemoPlace, wanted: 'required' | 'advisory'): Promise<string> {
+  const check = await newestCheckOf(desk.db, place.revisionId);
+  const fail = check?.result.findings.find(
+    ({ outcome, severity, kind }) => outcome === 'fail' && severity === wanted && kind !== 'consistency',
+  );
+  if (fail === undefined) throw new Error(`The demo's revision has no ${wanted} finding that fails.`);
+  return findingKey(fail);
 }
 
 async function unassigned(desk: DemoDesk, day: Day): Promise<void> {
