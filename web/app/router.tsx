@@ -1,9 +1,8 @@
 import { createBrowserRouter, type RouteObject } from 'react-router-dom';
 import { NotFoundPage } from './not-found-page';
-import { EitherLayout, eitherLoader, OpenLayout } from './open-layout';
+import { OpenLayout } from './open-layout';
 import { PageLoading, RootLayout } from './root-layout';
 import { RouteProblem, ShellProblem } from './route-problem';
-import { SignedInLayout, signedInLoader } from './signed-in-layout';
 
 /**
  * One line a page. Each module is its own chunk and gives `Component` and, where it needs data, a `loader` that warms
@@ -71,14 +70,12 @@ export function createRouter() {
       children: [
         { element: <OpenLayout />, children: [{ errorElement: <RouteProblem />, children: open }] },
         {
-          element: <EitherLayout />,
-          loader: eitherLoader,
+          lazy: () => import('./either-layout'),
           errorElement: <ShellProblem />,
           children: [{ errorElement: <RouteProblem />, children: either }],
         },
         {
-          element: <SignedInLayout />,
-          loader: signedInLoader,
+          lazy: () => import('./signed-in-layout'),
           errorElement: <ShellProblem />,
           children: [
             {

@@ -1,15 +1,15 @@
-import { Suspense } from 'react';
+import { lazy, Suspense } from 'react';
 import { Outlet, redirect } from 'react-router-dom';
 import { queryClient } from '../lib/client';
 import { paths } from '../lib/paths';
 import { Problem } from '../lib/problem';
 import { sessionQuery } from '../lib/queries/session-query';
 import { PageLoading } from './root-layout';
-import { KeyList } from './shell/key-list';
+import { useKeyListOpen } from './shell/key-list-state';
 import { RunningHead } from './shell/running-head';
 
 /** Nobody signed in goes to the sign-in page and comes back; without an organisation one is chosen first. */
-export async function signedInLoader({ request }: { request: Request }) {
+export async function loader({ request }: { request: Request }) {
   const { pathname, search } = new URL(request.url);
   try {
     const session = await queryClient.ensureQueryData(sessionQuery());
@@ -26,16 +26,25 @@ export async function signedInLoader({ request }: { request: Request }) {
 }
 
 export function SignedInLayout() {
+  const keyListOpen = useKeyListOpen();
   return (
     <>
       <a className="skip-link" href="#content">
         To the page
       </a>
       <RunningHead />
-      <KeyList />
+      {keyListOpen ? (
+        <Suspense fallback={null}>
+          <KeyList />
+        </Suspense>
+      ) : null}
       <Suspense fallback={<PageLoading />}>
         <Outlet />
       </Suspense>
     </>
   );
 }
+
+export { SignedInLayout as Component };
+
+const KeyList = lazy(() => import('./shell/key-list').then((module) => ({ default: module.KeyList })));

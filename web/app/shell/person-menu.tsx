@@ -6,12 +6,9 @@ import { PersonMenuItems } from './person-menu-items';
 export function PersonMenu({ session }: { session: Session }) {
   return (
     <Menu
+      defaultOpen
       label="You and this page"
-      trigger={
-        <AriaButton className="head-menu head-menu-person head-menu-only-wide">
-          {session.person.name}
-        </AriaButton>
-      }
+      trigger={<AriaButton className="head-menu head-menu-person">{session.person.name}</AriaButton>}
     >
       <PersonMenuItems />
     </Menu>

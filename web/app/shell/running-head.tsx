@@ -3,10 +3,8 @@ import { Wordmark } from '../../components/ui/wordmark';
 import { SearchField } from '../../features/search/components/search-field';
 import { paths } from '../../lib/paths';
 import { useSession } from '../../lib/queries/session-query';
-import { NarrowMenu } from './narrow-menu';
+import { HeadMenus } from './head-menus';
 import { navigationOf } from './navigation';
-import { OrganisationMenu } from './organisation-menu';
-import { PersonMenu } from './person-menu';
 import { useShellKeys } from './use-shell-keys';
 
 export function RunningHead() {
@@ -26,9 +24,7 @@ export function RunningHead() {
       </nav>
       <div className="running-head-end">
         <SearchField />
-        <OrganisationMenu session={session} />
-        <PersonMenu session={session} />
-        <NarrowMenu session={session} />
+        <HeadMenus session={session} />
       </div>
     </header>
   );

@@ -1,10 +1,10 @@
 import { type Control, Controller, type FieldPath, type FieldValues } from 'react-hook-form';
 import { Checkbox, CheckboxLine } from './checkbox';
 import { RadioLine } from './radio-line';
-import { type Choice, SelectField } from './select-field';
+import type { Choice } from './select-field';
 import { TextField, type TextFieldProps } from './text-field';
 
-interface Bound<Values extends FieldValues, Output> {
+export interface Bound<Values extends FieldValues, Output> {
   control: Control<Values, unknown, Output>;
   name: FieldPath<Values>;
 }
@@ -29,27 +29,6 @@ export function FormText<Values extends FieldValues, Output>({
           onBlur={field.onBlur}
           error={fieldState.error?.message}
           {...(number ? { inputMode: 'decimal', size: props.size ?? 'number' } : {})}
-        />
-      )}
-    />
-  );
-}
-
-export function FormSelect<Values extends FieldValues, Output, Value extends string>({
-  control,
-  name,
-  ...props
-}: Bound<Values, Output> & { label: string; choices: readonly Choice<Value>[]; help?: string }) {
-  return (
-    <Controller
-      control={control}
-      name={name}
-      render={({ field, fieldState }) => (
-        <SelectField
-          {...props}
-          value={field.value ?? null}
-          onChange={field.onChange}
-          error={fieldState.error?.message}
         />
       )}
     />

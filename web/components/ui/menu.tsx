@@ -11,14 +11,17 @@ import {
 export function Menu({
   trigger,
   label,
+  defaultOpen = false,
   children,
 }: {
   trigger: ReactNode;
   label: string;
+  /** True where the menu arrives only once it was asked for. */
+  defaultOpen?: boolean;
   children: ReactNode;
 }) {
   return (
-    <MenuTrigger>
+    <MenuTrigger defaultOpen={defaultOpen}>
       {trigger}
       <Popover className="popover" offset={6} placement="bottom end">
         <AriaMenu className="menu" aria-label={label}>

@@ -24,7 +24,9 @@ export function SheetExcerpt({
         <caption className="hidden-text">Rows around cell {cell} as uploaded</caption>
         <thead>
           <tr>
-            <th className="row-number" aria-label="Row" />
+            <th className="row-number">
+              <span className="hidden-text">Row</span>
+            </th>
             {columns.map((column) => (
               <th key={column.name} scope="col" className={column.isLabel ? undefined : 'value-column'}>
                 {column.name}
