@@ -4,6 +4,7 @@ import {
   type ConsistencyInput,
   type ConsistencyObservation,
   computedValues,
+  isOfOwnTrial,
   type Known,
   knownReading,
   knownValue,
@@ -17,7 +18,9 @@ const gravityAllowance = 0.005;
 /** Gsb ≤ Gse ≤ Gsa: no aggregate can break this order (AASHTO R 35; from memory, verify). */
 export function checkAggregateGravities(input: ConsistencyInput): ConsistencyObservation[] {
   return [
-    ...computedValues(input, effective).flatMap((gse) => againstBlend(input, knownValue(gse))),
+    ...computedValues(input, effective)
+      .filter(isOfOwnTrial)
+      .flatMap((gse) => againstBlend(input, knownValue(gse))),
     ...bulkAgainstApparent(input),
     ...statedNegativeAbsorption(input),
   ];

@@ -1,4 +1,4 @@
-import { quantityById } from '../quantities/registry';
+import { allQuantities, quantityById } from '../quantities/registry';
 import type { Reading } from '../record';
 import { numberWords, unitSuffix } from '../rule-sets/words';
 import {
@@ -9,10 +9,7 @@ import {
   subjectOf,
 } from './consistency-observation';
 
-/**
- * Measured with enough digits that two specimens hardly ever agree in all of them. Dimensions, binder contents and
- * whole-number results do so by nature and are left alone.
- */
+/** Measured with so many digits that even two specimens hardly ever agree in all of them. */
 const sensitiveQuantities = new Set([
   'mass-in-air',
   'mass-in-water',
@@ -25,31 +22,55 @@ const sensitiveQuantities = new Set([
   'fracture-energy',
 ]);
 
-/** Replicates that are the same to the last digit look copied. */
+/** The same for every specimen by nature, or one result that is written beside each. */
+const commonQuantities = new Set([
+  'binder-content',
+  'maximum-specific-gravity',
+  'specimen-diameter',
+  'specimen-thickness',
+  'specimen-height',
+  'mixing-temperature',
+  'compaction-temperature',
+]);
+
+/** Replicates that are the same to the last digit look copied: two of a sensitive quantity, three of another. */
 export function checkReplicates({ index }: ConsistencyInput): ConsistencyObservation[] {
-  return [...sensitiveQuantities].flatMap((quantity) =>
-    [...alike(index.all(quantity)).values()].flatMap((readings) => {
-      const specimens = new Set(readings.map(({ at }) => at.specimen));
-      const [first] = readings;
-      if (!first || specimens.size < 2 || readings.some(({ value }) => value !== first.value)) return [];
-      const { specimen: _specimen, ...at } = first.at;
-      const label = quantityById(quantity)?.label ?? quantity;
-      return {
-        name: 'identical-replicates',
-        subject: subjectOf(quantity, at),
-        severity: 'advisory' as const,
-        outcome: 'fail' as const,
-        observed: first.value,
-        limit: null,
-        unit: first.unit,
-        sentence: `All ${specimens.size} specimens${placeOf(at)} have the same ${label}, ${numberWords(first.value!)}${unitSuffix(first.unit)}.`,
-        reason: 'Separate specimens hardly ever agree in every digit; a value may have been copied.',
-        evidence: readings.map((reading) => knownReading(reading).evidence),
-        quantity,
-        at,
-      };
-    }),
-  );
+  return allQuantities()
+    .filter(
+      ({ id, kind }) => sensitiveQuantities.has(id) || (kind === 'measured' && !commonQuantities.has(id)),
+    )
+    .flatMap(({ id }) =>
+      [...alike(index.all(id)).values()].flatMap((readings) => observed(id, readings) ?? []),
+    );
+}
+
+function observed(quantity: string, readings: Reading[]): ConsistencyObservation | null {
+  const specimens = new Set(readings.map(({ at }) => at.specimen)).size;
+  const [first] = readings;
+  if (!first || readings.some(({ value }) => value !== first.value)) return null;
+  if (specimens < (sensitiveQuantities.has(quantity) ? 2 : 3) || !readings.every(hasManyDigits)) return null;
+  const { specimen: _specimen, ...at } = first.at;
+  const label = quantityById(quantity)?.label ?? quantity;
+  return {
+    name: 'identical-replicates',
+    subject: subjectOf(quantity, at),
+    severity: 'advisory',
+    outcome: 'fail',
+    observed: first.value,
+    limit: null,
+    unit: first.unit,
+    sentence: `All ${specimens} specimens${placeOf(at)} have the same ${label}, ${numberWords(first.value!)}${unitSuffix(first.unit)}.`,
+    reason: 'Separate specimens hardly ever agree in every digit; a value may have been copied.',
+    evidence: readings.map((reading) => knownReading(reading).evidence),
+    quantity,
+    at,
+  };
+}
+
+/** Whole percentages and round numbers agree by chance: fewer than three significant digits say nothing. */
+function hasManyDigits({ value, source }: Reading): boolean {
+  const digits = (source?.text ?? String(value)).replace(/[^0-9]/g, '').replace(/^0+/, '');
+  return digits.length >= 3;
 }
 
 function alike(readings: Reading[]): Map<string, Reading[]> {

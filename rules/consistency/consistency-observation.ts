@@ -67,10 +67,16 @@ export function computedValues({ analysis }: ConsistencyInput, quantity: string)
   );
 }
 
+/** False for a value of the design that was taken from trials: what is wrong with it is wrong with them. */
+export function isOfOwnTrial({ origin, at, inputs }: RecomputedValue): boolean {
+  const trials = inputs.map((input) => input.at?.trial).filter((trial) => trial !== undefined);
+  return origin !== 'interpolated' && trials.every((trial) => trial === at.trial);
+}
+
 /** Computed where the analysis could, else as the workbook states it, for trials without a computed one. */
 export function computedOrStated(input: ConsistencyInput, quantity: string): Known[] {
   const computed = computedValues(input, quantity);
   const covered = new Set(computed.map(({ at }) => at.trial ?? 'design'));
   const stated = input.index.all(quantity).filter(({ at }) => !covered.has(at.trial ?? 'design'));
-  return [...computed.map(knownValue), ...stated.map(knownReading)];
+  return [...computed.filter(isOfOwnTrial).map(knownValue), ...stated.map(knownReading)];
 }

@@ -40,6 +40,16 @@ describe('gravities of the aggregate (the trial has Gse 2.707)', () => {
     expect(names(withGravity('apparent-specific-gravity-aggregate', gsa))).toContain(expected);
   });
 
+  it('blames the trial, not the design that takes its values', () => {
+    const found = observe([
+      ...withGravity('bulk-specific-gravity-aggregate', 2.72),
+      reading('binder-content', 5.3),
+    ]);
+    expect(found.map(({ subject }) => subject)).toEqual([
+      'effective specific gravity of the aggregate of trial B',
+    ]);
+  });
+
   it('names quantity and trial', () => {
     const [found] = observe(withGravity('bulk-specific-gravity-aggregate', 2.72));
     expect(found).toMatchObject({
@@ -241,6 +251,17 @@ describe('suspicious data', () => {
     expect(
       names([...same, reading('bulk-specific-gravity-mix', 2.393, { trial: 'B', specimen: '4' })]),
     ).toEqual([]);
+  });
+
+  it('two equal rut depths say nothing, three do, and whole percentages never', () => {
+    const ruts = (count: number) =>
+      Array.from({ length: count }, (_, place) =>
+        reading('wheel-track-rut-depth', 10.4, { specimen: String(place), passes: 20000 }),
+      );
+    const saturations = ['1', '2', '3'].map((specimen) => reading('degree-of-saturation', 75, { specimen }));
+    expect(names(ruts(2))).toEqual([]);
+    expect(names(ruts(3))).toEqual(['identical-replicates advisory']);
+    expect(names(saturations)).toEqual([]);
   });
 
   it('dimensions and binder contents agree by nature', () => {
