@@ -10,6 +10,14 @@ import type { World } from './world';
 
 /** An attribute of the mix: the record's, else what the project states; a doubt is never a value. */
 export function attributeFact(world: World, name: string): Fact {
+  const kept = world.facts.get(name);
+  if (kept) return kept;
+  const fact = resolveAttribute(world, name);
+  world.facts.set(name, fact);
+  return fact;
+}
+
+function resolveAttribute(world: World, name: string): Fact {
   const attribute = world.view.attribute(name);
   const label = uncapitalised(world.view.attributeLabel(name));
   if (attribute === undefined) return { kind: 'missing', reason: `${label} is not known to this edition` };

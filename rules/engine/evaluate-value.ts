@@ -86,7 +86,8 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   const inUnit = sampleInUnit(world, quantity, statistic, sample, limit.unit);
   if (!inUnit.ok) return makeFinding(world, rule, { ...base, ...inUnit });
 
-  const judged = judgeSample({ ...request, sample: inUnit.sample, limit, rounder: rounding.rounder });
+  const { rounder } = rounding;
+  const judged = judgeSample({ world, measure, statistic, at, sample: inUnit.sample, limit, rounder });
   if (!judged.ok) return makeFinding(world, rule, { ...base, ...judged });
   const { judgement, judgeable } = judged;
   const precision = precisionOf({
@@ -99,13 +100,8 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   const observed = observedOf(judgeable, judgement, limit.unit, statistic, sample.count);
   const parts = { ...base, observed, roundingSentence: judgement.roundingSentence, precision };
 
-  const reported = againstReported({
-    ...request,
-    limit,
-    rounder: rounding.rounder,
-    sample,
-    outcome: judgement.outcome,
-  });
+  const { outcome } = judgement;
+  const reported = againstReported({ world, quantity, statistic, sample, limit, rounder, outcome });
   const short = tooFew(measure, sample);
   if (short) return makeFinding(world, rule, { ...parts, ...short });
   if (reported?.contradicts) {
@@ -116,14 +112,18 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
     .join(' ');
   return makeFinding(world, rule, {
     ...parts,
-    outcome: judgement.outcome,
+    outcome,
     reason,
     margin: judgement.margin,
     borderline: isBorderline(judgement.margin, precision),
   });
 }
 
-interface SampleJudging extends ValueRequest {
+interface SampleJudging {
+  world: World;
+  measure: ReadingMeasure | GradationMeasure;
+  statistic: Statistic;
+  at: Conditions;
   sample: Sample;
   limit: ResolvedLimit;
   rounder: Rounder;
@@ -132,7 +132,7 @@ interface SampleJudging extends ValueRequest {
 type SampleJudgement = { ok: true; judgement: Judgement; judgeable: Judgeable; note: string } | Obstacle;
 
 /** The statistic against the limit, and each single value where the rule asks for it. */
-export function judgeSample(judging: SampleJudging): SampleJudgement {
+function judgeSample(judging: SampleJudging): SampleJudgement {
   const { world, measure, statistic, at, sample, limit, rounder } = judging;
   const isReading = measure.kind === 'reading';
   if (statistic === 'each') return judgeEach(sample, limit, rounder);
@@ -162,7 +162,7 @@ export function judgeSample(judging: SampleJudging): SampleJudgement {
 }
 
 /** At least one but fewer than the rule asks for. */
-export function tooFew(measure: ReadingMeasure | GradationMeasure, sample: Sample): Obstacle | null {
+function tooFew(measure: ReadingMeasure | GradationMeasure, sample: Sample): Obstacle | null {
   if (
     measure.kind !== 'reading' ||
     measure.minimumCount === undefined ||
@@ -176,7 +176,7 @@ export function tooFew(measure: ReadingMeasure | GradationMeasure, sample: Sampl
   );
 }
 
-export function evidenceOf(sample: Sample) {
+function evidenceOf(sample: Sample) {
   return sample.items.map((item) => item.evidence);
 }
 

@@ -8,7 +8,6 @@ import { type LimitCondition, satisfies } from './decide';
 import type { ResolvedLimit } from './finding';
 import { findRow, numberOfCell } from './look-up';
 import { type Obstacle, undecided } from './obstacle';
-import type { ResolvedInterval } from './resolve-limit';
 import type { Judgeable } from './statistic';
 import type { World } from './world';
 
@@ -47,7 +46,7 @@ export function rounderOf(
   }
   const { to } = rounding;
   if (to === 'limit') {
-    const step = new Decimal(10).pow(-limit.decimals).toNumber();
+    const step = Number(`1e-${limit.decimals}`);
     return { ok: true, rounder: { method, to: step, decimals: limit.decimals, stated: true } };
   }
   if (typeof to !== 'object') {
@@ -86,19 +85,24 @@ export function marginOf(value: number, limit: Pick<ResolvedLimit, 'min' | 'max'
   return Math.min(above, below);
 }
 
-/** Whether a rounded value lies in an interval of single values. */
-export function isInside(judgeable: Judgeable, interval: ResolvedInterval, rounder: Rounder): boolean | null {
-  const limit = { ...interval, oneOf: null };
-  if (judgeable.allowed === null)
-    return satisfies(conditionOf(limit), roundTo({ value: judgeable.value, ...rounder }));
-  const outcome = outcomeOfInterval(judgeable.allowed, limit, rounder);
-  return outcome === 'undecided' ? null : outcome === 'pass';
-}
-
 type Ends = Pick<ResolvedLimit, 'min' | 'max' | 'minExclusive' | 'maxExclusive'>;
 
 /** The limit as a condition that the rules engine decides. */
 function conditionOf(limit: Ends): LimitCondition {
+  const key = `${limit.min} ${limit.minExclusive} ${limit.max} ${limit.maxExclusive}`;
+  const kept = conditions.get(key);
+  if (kept) return kept;
+  const condition = newCondition(limit);
+  if (conditions.size >= KEPT_CONDITIONS) conditions.clear();
+  conditions.set(key, condition);
+  return condition;
+}
+
+/** The rules engine reads a condition once; limits come again with every mix. */
+const KEPT_CONDITIONS = 2000;
+const conditions = new Map<string, LimitCondition>();
+
+function newCondition(limit: Ends): LimitCondition {
   const all: LimitCondition['all'] = [];
   if (limit.min !== null) {
     all.push({ fact: 'judged', operator: limit.minExclusive ? 'moreThan' : 'atLeast', value: limit.min });

@@ -37,7 +37,7 @@ export function matchingRows(
   tableId: string,
   at: { sieve: number | undefined },
 ): { ok: true; found: FoundRow[] } | Obstacle {
-  const table = world.edition.tables.find((each) => each.id === tableId);
+  const table = world.tables.get(tableId);
   if (!table) return undecided(`The table ${tableId} is not part of the edition.`);
   const values = new Map<string, number | string | boolean>();
   for (const key of table.keys) {

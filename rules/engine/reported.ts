@@ -1,7 +1,5 @@
 import { convert } from '../quantities/units';
-import type { Conditions } from '../record';
-import type { GradationMeasure, ReadingMeasure, Statistic } from '../rule-sets/measure';
-import type { ResolvedRule } from '../rule-sets/resolve';
+import type { Statistic } from '../rule-sets/measure';
 import { numberWords, withUnit } from '../rule-sets/words';
 import type { RecomputedValue } from './analysis';
 import type { ResolvedLimit } from './finding';
@@ -11,11 +9,8 @@ import type { World } from './world';
 
 interface ReportedInput {
   world: World;
-  rule: ResolvedRule;
-  measure: ReadingMeasure | GradationMeasure;
   quantity: string;
   statistic: Statistic;
-  at: Conditions;
   sample: Sample;
   limit: ResolvedLimit;
   rounder: Rounder;

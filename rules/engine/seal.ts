@@ -91,17 +91,11 @@ function judged(finding: Finding) {
       unit: limit.unit,
     },
     margin,
-    evidence: evidence.map(evidenceValues),
+    evidence: evidence.map((each) => ({ ...valuesOf(each), inputs: each.inputs?.map(valuesOf) })),
   };
 }
 
-function evidenceValues(evidence: Evidence): unknown {
-  return {
-    quantity: evidence.quantity,
-    value: evidence.value,
-    text: evidence.text,
-    unit: evidence.unit,
-    origin: evidence.origin,
-    inputs: evidence.inputs?.map(evidenceValues),
-  };
+/** Inputs of inputs follow from the record and the engine, which have hashes of their own. */
+function valuesOf({ quantity, value, text, unit, origin }: Evidence) {
+  return { quantity, value, text, unit, origin };
 }

@@ -2,8 +2,9 @@ import { convert } from '../quantities/units';
 import type { CheckContext, Conditions, MixRecord, Reading } from '../record';
 import type { EditionView } from '../rule-sets/edition-view';
 import { viewOf } from '../rule-sets/edition-view';
-import type { ResolvedEdition } from '../rule-sets/resolve';
+import type { ResolvedEdition, ResolvedTable } from '../rule-sets/resolve';
 import type { Analysis, RecomputedValue } from './analysis';
+import type { Fact } from './decide';
 
 /** A reading as the engine uses it: in the canonical unit, or with the reason why it cannot be used. */
 export interface UsableReading {
@@ -24,6 +25,9 @@ export interface World {
   recomputed: Map<string, RecomputedValue[]>;
   /** The blend that the job mix names, `several` where it does not say which of several. */
   designBlend: string | null | 'several';
+  tables: ReadonlyMap<string, ResolvedTable>;
+  /** Attributes as far as they have been asked for. */
+  facts: Map<string, Fact>;
   /** Findings that an unanswered doubt could turn, by key, each with the reason. */
   unsettled: ReadonlyMap<string, string>;
   /** Filled while rules are judged: computed values whose reported counterpart has another outcome. */
@@ -51,6 +55,8 @@ export function worldOf(input: {
     readings,
     recomputed,
     designBlend: designBlendOf(input.record),
+    tables: new Map(input.edition.tables.map((table) => [table.id, table])),
+    facts: new Map(),
     contradicted: new Set(),
   };
 }

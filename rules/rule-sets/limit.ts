@@ -99,5 +99,3 @@ export type Bound = z.infer<typeof boundSchema>;
 export type TableReference = z.infer<typeof tableReferenceSchema>;
 export type QuantityReference = z.infer<typeof quantityReferenceSchema>;
 export type Limit = z.infer<typeof limitSchema>;
-export type Interval = z.infer<typeof intervalSchema>;
-export type Rounding = z.infer<typeof roundingSchema>;

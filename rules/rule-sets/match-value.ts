@@ -2,6 +2,19 @@ import type { AttributeDefinition, Scalar } from './attribute';
 
 /** Text without case, spaces, hyphens and the words course, layer and mix, for comparing. */
 export function normaliseText(text: string): string {
+  const kept = normalised.get(text);
+  if (kept !== undefined) return kept;
+  const result = withoutFiller(text);
+  // Attribute values and table keys come again and again; a stream of free text must not pile up.
+  if (normalised.size >= KEPT_TEXTS) normalised.clear();
+  normalised.set(text, result);
+  return result;
+}
+
+const KEPT_TEXTS = 2000;
+const normalised = new Map<string, string>();
+
+function withoutFiller(text: string): string {
   const lower = text.toLowerCase().replace(/[‐-―−]/g, '-');
   const withoutWords = lower.replace(/\b(course|layer|mix)\b/g, '');
   const bare = withoutWords.replace(/[\s\-_]+/g, '');
@@ -24,9 +37,10 @@ export function matchValue(attribute: AttributeDefinition, stated: Scalar): Scal
 }
 
 export function sameValue(left: Scalar, right: Scalar): boolean {
+  if (left === right) return true;
   if (typeof left === 'string' && typeof right === 'string')
     return normaliseText(left) === normaliseText(right);
-  return left === right;
+  return false;
 }
 
 function readAs(type: AttributeDefinition['type'], stated: Scalar): Scalar | null {

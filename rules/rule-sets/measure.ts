@@ -122,4 +122,3 @@ export type GradationMeasure = z.infer<typeof gradationMeasureSchema>;
 export type DifferenceMeasure = z.infer<typeof differenceMeasureSchema>;
 export type AttributeMeasure = z.infer<typeof attributeMeasureSchema>;
 export type DocumentMeasure = z.infer<typeof documentMeasureSchema>;
-export type Precision = z.infer<typeof precisionSchema>;

@@ -17,7 +17,7 @@ import {
   withUnit,
 } from './words';
 
-export { cellWords, tableWords } from './limit-words';
+export { cellWords } from './limit-words';
 export { conditionClause, conditionSentence } from './when-words';
 
 /** The rule in general terms, naming its table, with how it counts, rounds and when it applies. */

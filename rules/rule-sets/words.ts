@@ -10,10 +10,20 @@ export interface PhraseOptions {
 
 /** A number as sentences write it: U+2212 for minus, commas from 1,000. */
 export function numberWords(value: number | string, decimals?: number): string {
-  const text = typeof value === 'string' ? value : formatDecimals(value, decimals ?? decimalsOf(value));
+  const text = typeof value === 'string' ? value : written(value, decimals ?? decimalsOf(value));
   const [whole = '', fraction] = text.replace('-', '').split('.');
   const grouped = whole.length > 3 ? whole.replace(/\B(?=(\d{3})+$)/g, ',') : whole;
   return `${text.startsWith('-') ? '−' : ''}${grouped}${fraction === undefined ? '' : `.${fraction}`}`;
+}
+
+/** With so many decimals; zeros are put behind without arithmetic where nothing has to be rounded. */
+function written(value: number, decimals: number): string {
+  const text = String(value);
+  const point = text.indexOf('.');
+  const given = point < 0 ? 0 : text.length - point - 1;
+  if (given > decimals || text.includes('e')) return formatDecimals(value, decimals);
+  if (decimals === 0) return text;
+  return `${text}${point < 0 ? '.' : ''}${'0'.repeat(decimals - given)}`;
 }
 
 /** A computed number with as many digits as a reader needs, and never one that hides on which side it lies. */
