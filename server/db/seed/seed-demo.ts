@@ -10,7 +10,7 @@ import { writeDemoWorkbooks } from './write-demo-workbooks';
 
 /** Makes the demo where it is missing: all rows or none, the same ones each time. */
 export async function seedDemo(deps: Deps): Promise<{ seeded: boolean }> {
-  await writeDemoWorkbooks(deps.settings.dataDirectory);
+  await writeDemoWorkbooks(deps.settings.dataDirectory, deps.now());
   const [present] = await deps.db
     .select({ id: organisations.id })
     .from(organisations)
