@@ -56,11 +56,15 @@ export function useReturnDraft(params: RevisionParams, view: ReturnView) {
     let timer: ReturnType<typeof setTimeout> | undefined;
     const subscription = form.watch(() => {
       clearTimeout(timer);
-      timer = setTimeout(() => void latestKeep.current(), restMilliseconds);
+      timer = setTimeout(() => {
+        timer = undefined;
+        void latestKeep.current();
+      }, restMilliseconds);
     });
     return () => {
-      clearTimeout(timer);
       subscription.unsubscribe();
+      if (timer === undefined) return;
+      clearTimeout(timer);
       void latestKeep.current();
     };
   }, [form, canChange]);
