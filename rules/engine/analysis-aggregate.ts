@@ -3,7 +3,7 @@ import { combinedPassing, finenessModulus } from '../calculations/gradation';
 import { surfaceArea, surfaceAreaFactors } from '../calculations/surface-area';
 import { cannot, known, type NumericResult } from '../numerics/numeric-result';
 import type { Conditions, MixRecord, Reading } from '../record';
-import { comparable, designTrial, type RecordIndex, withoutGaps } from './analysis-index';
+import { comparable, type RecordIndex, withoutGaps } from './analysis-index';
 import { type AnalysisNode, derivedNode, meanNode, readingNode } from './analysis-node';
 
 /** What the aggregate of one trial is: from its stockpiles where they are given, else as stated. */
@@ -96,8 +96,6 @@ export function blendChoice(record: MixRecord, index: RecordIndex): BlendChoice 
     if (at.blend === undefined || at.trial === undefined) continue;
     named.set(at.trial, (named.get(at.trial) ?? new Set()).add(at.blend));
   }
-  const attribute = record.attributes.blend?.value;
-  if (typeof attribute === 'string' && names.has(attribute)) named.set(designTrial, new Set([attribute]));
   return {
     of: (trial) => {
       const own = named.get(trial);

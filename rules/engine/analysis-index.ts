@@ -1,4 +1,5 @@
 import { quantityById } from '../quantities/registry';
+import { convert } from '../quantities/units';
 import type { Conditions, MixRecord, Reading } from '../record';
 
 export type NamedGyrations = 'initial' | 'design' | 'maximum';
@@ -23,8 +24,10 @@ export function indexRecord(record: MixRecord, laboratory: Laboratory): RecordIn
   const byQuantity = new Map<string, Reading[]>();
   const byTrial = new Map<string, Reading[]>();
   const trials = new Set<string>();
-  for (const reading of record.readings) {
-    if ((reading.at.laboratory ?? 'contractor') !== laboratory || !hasNumber(reading)) continue;
+  for (const stated of record.readings) {
+    if ((stated.at.laboratory ?? 'contractor') !== laboratory || !hasNumber(stated)) continue;
+    const reading = inCanonicalUnit(stated);
+    if (reading === null) continue;
     const known = byQuantity.get(reading.quantity);
     if (known) known.push(reading);
     else byQuantity.set(reading.quantity, [reading]);
@@ -97,6 +100,14 @@ export function withoutGaps(at: Conditions): Conditions {
 /** A censored value or a qualifier without a number cannot enter a calculation. */
 function hasNumber(reading: Reading): boolean {
   return reading.value !== null && reading.qualifier === undefined && Number.isFinite(reading.value);
+}
+
+/** Records are read in canonical units; one written by hand may not be. A unit of another kind is no number here. */
+function inCanonicalUnit(reading: Reading): Reading | null {
+  const unit = quantityById(reading.quantity)?.unit;
+  if (unit === undefined || unit === reading.unit) return reading;
+  const converted = convert(reading.value!, reading.unit, unit);
+  return converted.ok ? { ...reading, value: converted.value, unit, origin: 'converted' } : null;
 }
 
 function belongingTo(readings: Reading[], quantity: string, trial: string): Reading[] {

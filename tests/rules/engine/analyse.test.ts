@@ -78,6 +78,23 @@ describe('one trial from its own raw readings', () => {
     expect(derivedOnly.recomputed.filter(({ at }) => at.trial !== undefined)).toEqual([]);
   });
 
+  it('converts a reading that is in another unit of its kind, and takes none of another kind', () => {
+    const inches = { ...reading('specimen-diameter', 4, {}), unit: 'in' };
+    const strength = (diameter: typeof inches) =>
+      computed(
+        analysisOf([
+          reading('failure-load', 11.2, { specimen: '1', variant: 'dry' }),
+          reading('specimen-thickness', 63.4, { specimen: '1', variant: 'dry' }),
+          diameter,
+        ]),
+        'tensile-strength-dry',
+        { trial: 'design' },
+      );
+    // 4 in is 101.6 mm: 1106.92 kPa (reference record MAR-12).
+    expect(strength(inches)?.value).toBeCloseTo(1106.92, 2);
+    expect(strength({ ...inches, unit: '%' })).toBeUndefined();
+  });
+
   it('takes no number from a censored reading', () => {
     const readings = trialReadings('B').map((each) =>
       each.quantity === 'maximum-specific-gravity' ? { ...each, qualifier: '>' as const } : each,
