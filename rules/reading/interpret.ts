@@ -111,11 +111,15 @@ function markKeys(bound: RuleAtAnchor, nextRow: number | null, context: ReadingC
   if (rule.axis === 'right') return;
   const span = index.spanOf(anchor.cell);
   const firstRow = anchor.cell.row + span.rows + (rule.axis === 'cross' ? 1 : 0) + rule.range.skip;
+  const columns = Array.from({ length: span.columns }, (_, at) => anchor.cell.column + at);
   for (const [name, locator] of locators) {
-    for (const cell of index.sheet.cells) {
+    const own = locator.header ? [locator.header.cell.column] : columns;
+    for (const cell of own.flatMap((column) => index.columnCells(column))) {
       if (cell.row <= anchor.cell.row || (nextRow !== null && cell.row >= nextRow)) continue;
-      const inAnchor = cell.column >= anchor.cell.column && cell.column < anchor.cell.column + span.columns;
-      const key = locator.cellFor({ row: cell.row, column: inAnchor ? cell.column : anchor.cell.column });
+      const key = locator.cellFor({
+        row: cell.row,
+        column: locator.header ? anchor.cell.column : cell.column,
+      });
       if (key !== cell || !isPrepared(name, cell, firstRow)) continue;
       context.log.use(placeOf(index.sheet, cell), 'label', 'A key.');
     }

@@ -48,6 +48,7 @@ export type Settled<T> = { state: 'value'; value: T } | { state: 'blank' | 'none
 export function createReadingLog(answers: Answer[]): ReadingLog {
   const uses = new Map<string, CellUse>();
   const answerAt = new Map(answers.map((answer) => [placeKey(answer), answer]));
+  const passedOver = new Set<string>();
   const rank = { label: 0, unused: 1, read: 2, doubt: 3 } as const;
   const log: ReadingLog = {
     readings: [],
@@ -63,7 +64,8 @@ export function createReadingLog(answers: Answer[]): ReadingLog {
     },
     isUsed: (place) => uses.has(placeKey(place)),
     passOver(place, reason) {
-      if (log.unread.some((entry) => placeKey(entry) === placeKey(place))) return;
+      if (passedOver.has(placeKey(place))) return;
+      passedOver.add(placeKey(place));
       log.unread.push({ ...place, reason });
       log.use(place, 'unused', reason);
     },

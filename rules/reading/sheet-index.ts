@@ -15,10 +15,29 @@ export interface HeaderMatch {
 export class SheetIndex {
   private readonly byPlace = new Map<number, Cell>();
   private readonly spans = new Map<string, { rows: number; columns: number }>();
+  private readonly byColumn = new Map<number, Cell[]>();
+  /** Text cells with the form in which labels are compared, made once: every rule asks for it. */
+  private readonly texts: { cell: Cell; key: string }[] = [];
+  private readonly headers = new Map<string, HeaderMatch[]>();
+  private readonly hiddenRows: Set<number>;
+  private readonly hiddenColumns: Set<number>;
 
   constructor(readonly sheet: SheetGrid) {
-    for (const cell of sheet.cells) this.byPlace.set(placeKey(cell.row, cell.column), cell);
+    for (const cell of sheet.cells) {
+      this.byPlace.set(placeKey(cell.row, cell.column), cell);
+      const column = this.byColumn.get(cell.column);
+      if (column) column.push(cell);
+      else this.byColumn.set(cell.column, [cell]);
+      if (cell.kind === 'text') this.texts.push({ cell, key: labelKey(cell.text) });
+    }
     for (const merge of sheet.merges) this.addMerge(merge);
+    this.hiddenRows = new Set(sheet.hiddenRows);
+    this.hiddenColumns = new Set(sheet.hiddenColumns);
+  }
+
+  /** The filled cells of a column, from the top. */
+  columnCells(column: number): Cell[] {
+    return this.byColumn.get(column) ?? [];
   }
 
   cellAt(row: number, column: number): Cell | null {
@@ -31,19 +50,22 @@ export class SheetIndex {
   }
 
   isHidden(cell: Cell): boolean {
-    const { hidden, hiddenRows, hiddenColumns } = this.sheet;
-    return hidden || hiddenRows.includes(cell.row) || hiddenColumns.includes(cell.column);
+    return this.sheet.hidden || this.hiddenRows.has(cell.row) || this.hiddenColumns.has(cell.column);
   }
 
   /** All cells that carry the header's lowest text under its upper ones, in reading order. */
   findHeader(header: string[]): HeaderMatch[] {
-    const lowest = header.at(-1) ?? '';
-    return this.sheet.cells.flatMap((cell) => {
-      if (cell.kind !== 'text') return [];
-      const match = matchHeader(cell.text, lowest);
-      if (!match || !this.standsUnder(cell, header.slice(0, -1))) return [];
-      return [{ cell, ...match }];
+    const asked = header.join('\u0000');
+    const known = this.headers.get(asked);
+    if (known) return known;
+    const wanted = labelKey(header.at(-1) ?? '');
+    const found = this.texts.flatMap(({ cell, key }) => {
+      if (!key.startsWith(wanted)) return [];
+      const match = matchKeys(cell.text, key, wanted);
+      return match && this.standsUnder(cell, header.slice(0, -1)) ? [{ cell, ...match }] : [];
     });
+    this.headers.set(asked, found);
+    return found;
   }
 
   private standsUnder(cell: Cell, upper: string[]): boolean {
@@ -82,8 +104,14 @@ export function matchHeader(
   text: string,
   name: string,
 ): { unit: string | null; unknownUnit: string | null } | null {
-  const key = labelKey(text);
-  const wanted = labelKey(name);
+  return matchKeys(text, labelKey(text), labelKey(name));
+}
+
+function matchKeys(
+  text: string,
+  key: string,
+  wanted: string,
+): { unit: string | null; unknownUnit: string | null } | null {
   if (key === wanted) return { unit: null, unknownUnit: null };
   if (!key.startsWith(wanted)) return null;
   const plain = plainText(text).replace(/\s*:$/, '');

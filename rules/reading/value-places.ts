@@ -26,7 +26,9 @@ export function valueCells(
 
 /** A merged cell counts once, at its own place. */
 function cellsBetween(index: SheetIndex, top: number, bottom: number, left: number, right: number): Cell[] {
-  return index.sheet.cells.filter(
-    (cell) => cell.row >= top && cell.row <= bottom && cell.column >= left && cell.column <= right,
-  );
+  const cells: Cell[] = [];
+  for (let column = left; column <= right; column += 1) {
+    cells.push(...index.columnCells(column).filter((cell) => cell.row >= top && cell.row <= bottom));
+  }
+  return cells.sort((a, b) => a.row - b.row || a.column - b.column);
 }

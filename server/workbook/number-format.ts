@@ -48,6 +48,18 @@ export const builtInFormats: Record<number, string> = {
 };
 
 export function isDateFormat(format: string): boolean {
+  const known = dateFormats.get(format);
+  if (known !== undefined) return known;
+  const found = showsDate(format);
+  // A workbook has few formats and many cells; what one file invents must not stay for ever.
+  if (dateFormats.size > 500) dateFormats.clear();
+  dateFormats.set(format, found);
+  return found;
+}
+
+const dateFormats = new Map<string, boolean>([['General', false]]);
+
+function showsDate(format: string): boolean {
   const bare = bareFormat(format.split(';')[0] ?? '');
   return /[dmyhs]/i.test(bare) && !/general/i.test(bare) && !/[0#?]/.test(bare.replace(/s\.0+/gi, ''));
 }
@@ -58,6 +70,8 @@ export function isPercentFormat(format: string | null): boolean {
 
 /** A stored number as the spreadsheet shows it, as far as its format decides that. */
 export function formatNumber(stored: string, format: string): string {
+  // The General format shows up to eleven characters as they are stored.
+  if (format === 'General' && /^-?\d{1,9}(?:\.\d+)?$/.test(stored) && stored.length <= 11) return stored;
   const value = new Decimal(stored);
   const sections = splitSections(format);
   const usesNegative = value.isNegative() && sections.length > 1;
