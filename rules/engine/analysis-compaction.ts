@@ -1,6 +1,4 @@
 import { bulkSpecificGravity, specimenAbsorption } from '../calculations/bulk-specific-gravity';
-import { relativeDensity } from '../calculations/relative-density';
-import { known } from '../numerics/numeric-result';
 import type { Conditions, Reading } from '../record';
 import {
   isSpecial,
@@ -10,7 +8,7 @@ import {
   specialKey,
   withoutGaps,
 } from './analysis-index';
-import { type AnalysisNode, derivedNode, derivedPerSpecimen, meanNode, readingNode } from './analysis-node';
+import { type AnalysisNode, derivedNode, meanNode, readingNode } from './analysis-node';
 
 /** Specimens of one trial that were compacted and tested alike. */
 export interface CompactedSet {
@@ -41,28 +39,6 @@ export function compactedSets(index: RecordIndex, trial: string): CompactedSet[]
     const volumetric = set.gyrations === 'design' && Object.keys(set.special).length === 0;
     if (!node) return [];
     return [{ gyrations: set.gyrations, volumetric, at, gmb: node, absorption: absorptionOf(set, at) }];
-  });
-}
-
-/**
- * Relative density at each number of gyrations that the set's heights reach, and at its own.
- *
- * Gmb belongs to the gyrations at which it was measured; heights carry it to the others.
- */
-export function relativeDensities(
-  index: RecordIndex,
-  trial: string,
-  set: CompactedSet,
-  gmm: AnalysisNode,
-): AnalysisNode[] {
-  const heights = heightsOf(index, trial);
-  const reached = new Set([...heights.values()].flatMap((byGyrations) => [...byGyrations.keys()]));
-  const isGyratory = reached.size > 0 || set.at.gyrations !== undefined || index.gyrations.size > 0;
-  if (isGyratory) reached.add(set.gyrations);
-  return [...reached].flatMap((gyrations) => {
-    const at = withoutGaps({ ...set.at, gyrations });
-    if (gyrations === set.gyrations) return ownDensity(set, gmm, at) ?? [];
-    return densityByHeights(set, gmm, heights, gyrations, at) ?? [];
   });
 }
 
@@ -174,56 +150,4 @@ function massesOf(readings: Record<string, Reading[]>): AnalysisNode[] | null {
 function asGiven(readings: Reading[] | undefined, at: Conditions): AnalysisNode | null {
   const nodes = (readings ?? []).map((reading) => readingNode(reading));
   return meanNode(nodes, at, { keepSpecimens: false, counted: true });
-}
-
-type Heights = Map<string, Map<NamedGyrations | number, AnalysisNode>>;
-
-/** Heights by specimen, `""` for a stack of heights that names none. */
-function heightsOf(index: RecordIndex, trial: string): Heights {
-  const heights: Heights = new Map();
-  for (const reading of index.ofTrial('specimen-height', trial)) {
-    const gyrations = index.gyrationsKey(reading.at.gyrations);
-    if (gyrations === undefined || isSpecial(reading)) continue;
-    const label = reading.at.specimen ?? '';
-    const byGyrations = heights.get(label) ?? new Map<NamedGyrations | number, AnalysisNode>();
-    heights.set(label, byGyrations);
-    if (!byGyrations.has(gyrations)) byGyrations.set(gyrations, readingNode(reading, `h,${gyrations}`));
-  }
-  return heights;
-}
-
-function ownDensity(set: CompactedSet, gmm: AnalysisNode, at: Conditions): AnalysisNode | null {
-  return derivedPerSpecimen({
-    quantity: 'relative-density',
-    at,
-    formula: '100·Gmb/Gmm',
-    inputs: [set.gmb, gmm],
-    compute: ([Gmb, Gmm]) =>
-      Gmm! > 0 ? known((100 * Gmb!) / Gmm!) : { ok: false, reason: 'Gmm must be above zero' },
-  });
-}
-
-function densityByHeights(
-  set: CompactedSet,
-  gmm: AnalysisNode,
-  heights: Heights,
-  gyrations: NamedGyrations | number,
-  at: Conditions,
-): AnalysisNode | null {
-  const specimens = set.gmb.specimens.length > 0 ? set.gmb.specimens : [set.gmb];
-  const nodes = specimens.flatMap((specimen) => {
-    const stack = heights.get(specimen.at.specimen ?? '') ?? heights.get('');
-    const reference = stack?.get(set.gyrations);
-    const height = stack?.get(gyrations);
-    if (!reference || !height) return [];
-    const node = derivedNode({
-      quantity: 'relative-density',
-      at: withoutGaps({ ...at, specimen: specimen.at.specimen }),
-      formula: `100·Gmb·${reference.symbol}/(Gmm·${height.symbol})`,
-      inputs: [specimen, gmm, reference, height],
-      compute: ([Gmb, Gmm, hRef, hN]) => relativeDensity({ Gmb: Gmb!, Gmm: Gmm!, hRef: hRef!, hN: hN! }),
-    });
-    return node ?? [];
-  });
-  return meanNode(nodes, at, { keepSpecimens: true, counted: true });
 }

@@ -5,7 +5,8 @@ import { causeInputsOf } from './analysis-cause-inputs';
 import { causeOf } from './analysis-causes';
 import { halfDisplayedUnit } from './analysis-digits';
 import { designTrial, isSpecial, type RecordIndex, specialKey, withoutGaps } from './analysis-index';
-import { type AnalysisNode, evidenceOf, propagatedHalfUnits } from './analysis-node';
+import { type AnalysisNode, evidenceOf } from './analysis-node';
+import { propagatedHalfUnits } from './analysis-slopes';
 
 /** Finds what the workbook itself states for a computed value and keeps it with the value. */
 export function attachReported(node: AnalysisNode, index: RecordIndex): void {

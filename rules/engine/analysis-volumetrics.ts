@@ -11,10 +11,11 @@ import {
 } from '../calculations/volumetrics';
 import type { Conditions } from '../record';
 import type { AggregateNodes } from './analysis-aggregate';
-import { type CompactedSet, compactedSets, relativeDensities } from './analysis-compaction';
+import { type CompactedSet, compactedSets } from './analysis-compaction';
 import { comparable, type RecordIndex } from './analysis-index';
 import { type AnalysisNode, derivedPerSpecimen, meanNode, readingNode } from './analysis-node';
 import { recycledOf } from './analysis-recycled';
+import { densitiesOf } from './analysis-relative-density';
 
 /** Everything that one trial's own raw readings give. What they do not give is null. */
 export interface TrialNodes {
@@ -141,31 +142,4 @@ function otherValues(
 ): AnalysisNode[] {
   const apart = volumetric ? [] : [gmb, voidsOf(at, gmb, gmm)];
   return [absorption, ...apart].filter((node) => node !== null);
-}
-
-/**
- * One value for each number of gyrations: from specimens compacted to that number, else by heights, of the
- * volumetric specimens before others.
- */
-function densitiesOf(
-  index: RecordIndex,
-  trial: string,
-  sets: CompactedSet[],
-  gmm: AnalysisNode,
-): AnalysisNode[] {
-  const plain = sets
-    .filter((set) => Object.keys(set.at).every((key) => key === 'trial' || key === 'gyrations'))
-    .toSorted((a, b) => Number(b.volumetric) - Number(a.volumetric));
-  const found = plain.map((set) => ({ set, nodes: relativeDensities(index, trial, set, gmm) }));
-  const isOwn = (set: CompactedSet, node: AnalysisNode) => node.at.gyrations === set.gyrations;
-  const ordered = [
-    ...found.flatMap(({ set, nodes }) => nodes.filter((node) => isOwn(set, node))),
-    ...found.flatMap(({ set, nodes }) => nodes.filter((node) => !isOwn(set, node))),
-  ];
-  const first = new Map<string, AnalysisNode>();
-  for (const node of ordered) {
-    const key = String(node.at.gyrations);
-    if (!first.has(key)) first.set(key, node);
-  }
-  return [...first.values()];
 }

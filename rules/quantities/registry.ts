@@ -1,5 +1,6 @@
 import { aggregateQuantities } from './aggregate-quantities';
 import { binderQuantities } from './binder-quantities';
+import { compactionQuantities } from './compaction-quantities';
 import { creepQuantities } from './creep-quantities';
 import { gradationQuantities } from './gradation-quantities';
 import { massQuantities } from './mass-quantities';
@@ -20,6 +21,7 @@ export function allQuantities(): Quantity[] {
 
 const quantities: Quantity[] = [
   ...volumetricQuantities,
+  ...compactionQuantities,
   ...massQuantities,
   ...aggregateQuantities,
   ...gradationQuantities,
