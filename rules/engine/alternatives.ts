@@ -63,5 +63,5 @@ function conditionsKey({ at }: Reading): string {
 function reasonOf(doubt: Doubt, alternative: Alternative, outcome: Finding['outcome'] | undefined): string {
   const sheet = doubt.sheet === '' ? '' : `${doubt.sheet} `;
   const then = outcome === undefined ? 'this finding would not be made' : `this would be ${outcome}`;
-  return `${sheet}${doubt.cell} was not read with certainty (${doubt.reason}); read as "${alternative.label}", ${then}.`;
+  return `${sheet}${doubt.cell} was not read with certainty (${doubt.reason.replace(/\.$/, '')}); read as "${alternative.label}", ${then}.`;
 }

@@ -25,7 +25,10 @@ function resolveAttribute(world: World, name: string): Fact {
   if (stated === null) {
     const doubt = world.record.doubts.find((each) => isAbout(each, name));
     if (!doubt) return { kind: 'missing', reason: `${label} is missing` };
-    return { kind: 'doubtful', reason: `${label} is in doubt${placeWords(doubt)}: ${doubt.reason}` };
+    return {
+      kind: 'doubtful',
+      reason: `${label} is in doubt${placeWords(doubt)}: ${doubt.reason.replace(/\.$/, '')}`,
+    };
   }
   const inUnit = typeof stated.value === 'number' ? inAttributeUnit(stated, attribute.unit) : stated.value;
   const value = inUnit === null ? null : matchValue(attribute, inUnit);

@@ -1,4 +1,5 @@
 import type { ConsistencyObservation } from '../consistency/consistency-observation';
+import { roundTo } from '../numerics/round';
 import { resolvedLimitWords } from '../rule-sets/limit-words';
 import { capitalised, numberWords, withUnit } from '../rule-sets/words';
 import type { Finding, ResolvedLimit } from './finding';
@@ -44,25 +45,20 @@ function findingOf(world: World, observation: ConsistencyObservation): Finding {
   const decimals = entry?.decimals ?? 2;
   const limit = limitOf(observation, decimals);
   const changesOutcome = name === REPORTED_DIFFERS && isContradicted(world, observation);
-  const words = limit === null ? '' : resolvedLimitWords({ ...limit, ...roundedEnds(limit, decimals + 1) });
+  const ends = limit === null ? null : { ...limit, ...roundedEnds(limit, decimals + 1) };
+  const words = ends === null ? '' : resolvedLimitWords(ends);
+  const rounded = observed === null ? null : roundedTo(observed, decimals + 1);
   return {
     ...base(name, subject),
     title: capitalised(name.replaceAll('-', ' ')),
     severity: changesOutcome ? 'required' : observation.severity,
     outcome,
     observed:
-      observed === null
+      rounded === null
         ? null
-        : {
-            value: observed,
-            rounded: observed,
-            text: numberWords(observed),
-            unit,
-            statistic: 'value',
-            count: 1,
-          },
+        : { value: observed, rounded, text: numberWords(rounded), unit, statistic: 'value', count: 1 },
     limit,
-    margin: observed === null || limit === null ? null : marginOf(observed, limit),
+    margin: rounded === null || ends === null ? null : marginOf(rounded, ends),
     requirement: words === '' ? observation.reason : `${capitalised(subject)}: ${withUnit(words, unit)}.`,
     sentence: observation.sentence,
     reason: changesOutcome
@@ -107,8 +103,12 @@ function limitOf({ limit, unit }: ConsistencyObservation, decimals: number): Res
 }
 
 function roundedEnds(limit: ResolvedLimit, decimals: number): { min: number | null; max: number | null } {
-  const round = (value: number | null) => (value === null ? null : Number(value.toFixed(decimals)));
+  const round = (value: number | null) => (value === null ? null : roundedTo(value, decimals));
   return { min: round(limit.min), max: round(limit.max) };
+}
+
+function roundedTo(value: number, decimals: number): number {
+  return roundTo({ value, to: Number(`1e-${decimals}`), method: 'rounding' });
 }
 
 function isContradicted(world: World, { quantity, at }: ConsistencyObservation): boolean {

@@ -58,7 +58,7 @@ const DUST_SIEVE_MM = 0.075;
 export function doubtWords(world: World, doubt: Doubt, quantity: string): string {
   const label = world.view.quantity(quantity)?.label ?? quantity;
   const sheet = doubt.sheet === '' ? '' : `${doubt.sheet} `;
-  return `A cell with ${label} (${sheet}${doubt.cell}) was not read with certainty: ${doubt.reason}.`;
+  return `A cell with ${label} (${sheet}${doubt.cell}) was not read with certainty: ${doubt.reason.replace(/\.$/, '')}.`;
 }
 
 /** What the cell may be a reading of. */

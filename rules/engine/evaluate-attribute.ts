@@ -64,8 +64,8 @@ function ofList(
     satisfies({ all: [{ fact: 'judged', operator: 'oneOf', value: allowed }] }, fact.value);
   const words = attribute ? allowed.map((each) => attributeText(world, measure.attribute, each)) : written;
   const reason = isAllowed
-    ? `${base.observed.text} is among the allowed values.`
-    : `${base.observed.text} is not among the allowed values: ${orList(words)}.`;
+    ? `${capitalise(base.observed.text)} is among the allowed values.`
+    : `${capitalise(base.observed.text)} is not among the allowed values: ${orList(words)}.`;
   return makeFinding(world, rule, {
     ...base,
     outcome: isAllowed ? 'pass' : 'fail',

@@ -74,7 +74,7 @@ function absent(world: World, measure: DocumentMeasure, label: string, ofType: D
   if (doubt) {
     const sheet = doubt.sheet === '' ? '' : `${doubt.sheet} `;
     return undecided(
-      `A cell with the ${label.toLowerCase()} (${sheet}${doubt.cell}) was not read with certainty: ${doubt.reason}.`,
+      `A cell with the ${label.toLowerCase()} (${sheet}${doubt.cell}) was not read with certainty: ${doubt.reason.replace(/\.$/, '')}.`,
     );
   }
   if (ofType.length > 0) return notShown('It is stated, but not enclosed.');

@@ -2,7 +2,7 @@ import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import type { GradationMeasure, ReadingMeasure, Statistic } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
-import { plural } from '../rule-sets/words';
+import { censoredWords, plural } from '../rule-sets/words';
 import { distanceWords } from './distance-words';
 import { doubtAbout } from './doubts';
 import type { Finding, Observed, ResolvedLimit } from './finding';
@@ -224,10 +224,10 @@ function sampleInUnit(
 
 function reasonOf(judgement: Judgement, judgeable: Judgeable, limit: ResolvedLimit): string {
   if (judgement.outcome === 'undecided') {
-    return `The value is only known as ${judgeable.text ?? 'a range'}, which allows both a pass and a fail.`;
+    return `The value is only known as ${censoredWords(judgeable.text ?? 'a range')}, which allows both a pass and a fail.`;
   }
   if (judgeable.allowed !== null) {
-    return `Every value that ${judgeable.text ?? 'it'} allows is ${judgement.outcome === 'pass' ? 'inside' : 'outside'} the limit.`;
+    return `Every value that ${censoredWords(judgeable.text ?? 'it')} allows is ${judgement.outcome === 'pass' ? 'inside' : 'outside'} the limit.`;
   }
   return distanceWords(judgement, limit);
 }

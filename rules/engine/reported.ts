@@ -1,6 +1,6 @@
 import { convert } from '../quantities/units';
 import type { Statistic } from '../rule-sets/measure';
-import { numberWords, withUnit } from '../rule-sets/words';
+import { computedWords, withUnit } from '../rule-sets/words';
 import type { RecomputedValue } from './analysis';
 import type { ResolvedLimit } from './finding';
 import { judge, type Rounder } from './judge';
@@ -36,7 +36,7 @@ export function againstReported(input: ReportedInput): { contradicts: boolean; r
   const place = reported.source
     ? ` (${reported.source.sheet === '' ? '' : `${reported.source.sheet} `}${reported.source.cell})`
     : '';
-  const values = `The workbook reports ${withUnit(numberWords(own.value), limit.unit)}${place}; recomputed it is ${asWritten(input)}.`;
+  const values = `The workbook reports ${withUnit(inDecimals(own.value, limit, rounder), limit.unit)}${place}; recomputed it is ${asWritten(input)}.`;
   if (asReported.outcome === outcome)
     return { contradicts: false, reason: `${values} Both give the same outcome.` };
   world.contradicted.add(recomputedOfRecord(input));
@@ -64,5 +64,9 @@ function subjectWords(place: string, source: { cell: string } | null): string {
 
 function asWritten({ sample, limit, rounder }: ReportedInput): string {
   const value = sample.recomputed?.value ?? Number.NaN;
-  return withUnit(numberWords(value, Math.max(rounder.decimals, limit.decimals) + 2), limit.unit);
+  return withUnit(inDecimals(value, limit, rounder), limit.unit);
+}
+
+function inDecimals(value: number, limit: ResolvedLimit, rounder: Rounder): string {
+  return computedWords(value, Math.max(rounder.decimals, limit.decimals));
 }

@@ -3,6 +3,7 @@ import { trimmedMean } from '../numerics/mean';
 import { percentWithinLimits } from '../numerics/percent-within-limits';
 import { range, sampleStandardDeviation } from '../numerics/spread';
 import type { Statistic } from '../rule-sets/measure';
+import { numberWords } from '../rule-sets/words';
 import { type Obstacle, undecided } from './obstacle';
 import type { ResolvedInterval } from './resolve-limit';
 import type { Sample, SampleItem } from './sample';
@@ -51,7 +52,7 @@ export function statisticOf(request: StatisticRequest): { ok: true; judgeable: J
 /** One value of a sample on its own, as `each` and `alsoEach` judge it. */
 export function judgeableOf(item: SampleItem, hasMin: boolean): Judgeable {
   const { value, qualifier } = item;
-  const text = item.evidence.text ?? qualifier ?? null;
+  const text = censored(item) ?? item.evidence.text ?? qualifier ?? null;
   if (qualifier === '<' && value !== null) return { value, text, allowed: { low: -Infinity, high: value } };
   if (qualifier === '>' && value !== null) return { value, text, allowed: { low: value, high: Infinity } };
   if (qualifier === 'none' || qualifier === 'non-plastic' || value === null) {
@@ -65,6 +66,11 @@ export function judgeableOf(item: SampleItem, hasMin: boolean): Judgeable {
       : { value: 0, text, isWord: true, allowed: null };
   }
   return { value, text: null, allowed: null };
+}
+
+function censored({ value, qualifier }: SampleItem): string | null {
+  if (value === null || (qualifier !== '<' && qualifier !== '>')) return null;
+  return `${qualifier}${numberWords(value)}`;
 }
 
 /** The mean in decimal arithmetic; the value itself where there is only one, untouched. */
@@ -128,7 +134,7 @@ function ofCensored(
   const high = combine(judgeables.map((each) => each.allowed?.high ?? each.value));
   const value = combine(judgeables.map((each) => each.value));
   if (low === high) return plain(value);
-  return { ok: true, judgeable: { value, text: `with ${textOf(judgeables)}`, allowed: { low, high } } };
+  return { ok: true, judgeable: { value, text: censoredText(low, high), allowed: { low, high } } };
 }
 
 const SINGLE = new Set<Statistic>(['mean', 'min', 'max', 'each']);
@@ -138,6 +144,13 @@ const COMBINE = {
   min: (values: number[]) => Math.min(...values),
   max: (values: number[]) => Math.max(...values),
 };
+
+/** As a workbook would state it: `>20,000`. */
+function censoredText(low: number, high: number): string {
+  if (high === Infinity && low !== -Infinity) return `>${numberWords(low)}`;
+  if (low === -Infinity && high !== Infinity) return `<${numberWords(high)}`;
+  return 'a value without bounds';
+}
 
 function textOf(judgeables: Judgeable[]): string {
   return judgeables.find((each) => each.text !== null)?.text ?? '';

@@ -1,5 +1,5 @@
 import type { Observed, Outcome, ResolvedLimit } from '../engine/finding';
-import type { RoundingMethod } from '../numerics/round';
+import { decimalsOf, type RoundingMethod } from '../numerics/round';
 import type { Conditions } from '../record';
 import { measuredUnit } from './check-rule';
 import type { EditionView } from './edition-view';
@@ -9,6 +9,7 @@ import type { Rule } from './schema';
 import { conditionSentence } from './when-words';
 import {
   capitalised,
+  censoredWords,
   computedWords,
   dateWords,
   numberWords,
@@ -55,7 +56,7 @@ export function resultSentence({ rule, view, at, limit, outcome, observed, date 
   const suffix = limit && !rule.limit.present ? `, ${limitAfter(limit, observed === null)}` : '';
   if (outcome === 'not shown') return `${label} ${isShown} not shown${suffix}.`;
   if (observed === null) return `${label} ${isShown} not decided${suffix}.`;
-  return `${label} ${verb} ${withUnit(observed.text, observed.unit)}${suffix}.`;
+  return `${label} ${verb} ${withUnit(censoredWords(observed.text), observed.unit)}${suffix}.`;
 }
 
 /** How the statistic was rounded: "13.94 becomes 13.9: ASTM E29, rounding method, to 0.1." */
@@ -72,9 +73,10 @@ export function roundingSentence(input: {
     const reason = stated
       ? 'ASTM E29, absolute method'
       : 'the rule names no rounding, so the absolute method applies';
-    return `${computedWords(value, decimals)} is not rounded: ${reason}.`;
+    return `${numberWords(value, Math.max(decimals, Math.min(6, decimalsOf(value))))} is not rounded: ${reason}.`;
   }
-  const change = `${computedWords(value, decimals)} becomes ${numberWords(rounded, decimals)}`;
+  const verb = value === rounded ? 'stays' : 'becomes';
+  const change = `${computedWords(value, decimals)} ${verb} ${numberWords(rounded, decimals)}`;
   return `${change}: ${METHOD_WORDS[method]} ${numberWords(to)}.`;
 }
 

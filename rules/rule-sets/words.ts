@@ -36,6 +36,11 @@ export function computedWords(value: number, decimals: number): string {
   return numberWords(value);
 }
 
+/** `>20,000` and `<0.1` in words: "more than 20,000", "less than 0.1". */
+export function censoredWords(text: string): string {
+  return text.replace(/^>/, 'more than ').replace(/^</, 'less than ');
+}
+
 /** " %", " kPa", or nothing for a number without a unit. */
 export function unitSuffix(unit: string): string {
   return unit === '1' || unit === '' ? '' : ` ${unit}`;

@@ -45,7 +45,7 @@ describe('a derived quantity', () => {
   it('is undecided where the reported value differs and comes to another outcome', () => {
     const finding = findingOf(airVoids([...raw, reported(4.6, '4.6')]));
     expect(finding).toMatchObject({ outcome: 'undecided', margin: null, borderline: false });
-    expect(finding.reason).toContain('The workbook reports 4.6 % (Summary C6); recomputed it is 4.000 %.');
+    expect(finding.reason).toContain('The workbook reports 4.6 % (Summary C6); recomputed it is 4.0 %.');
   });
 
   it('does not call a difference within its displayed digits a contradiction', () => {

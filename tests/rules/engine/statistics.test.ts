@@ -262,8 +262,8 @@ describe('censored values and results without a number', () => {
     expect(check('<', 4, { min: 4 }, extra).outcome).toBe('undecided');
   });
 
-  it('shows the value as the workbook states it', () => {
-    expect(check('<', 4, { max: 4 }).sentence).toBe('Plasticity index is <4, at most 4.');
+  it('says in words what the workbook states', () => {
+    expect(check('<', 4, { max: 4 }).sentence).toBe('Plasticity index is less than 4, at most 4.');
     expect(check('non-plastic', null, { max: 4 }).sentence).toBe(
       'Plasticity index is non-plastic, at most 4.',
     );
