@@ -1,7 +1,10 @@
+import { eq } from 'drizzle-orm';
 import type { Pool } from 'mysql2/promise';
 import type { Logger } from 'pino';
 import { createAuth } from './auth/create-auth';
 import { connectionOptions, type Database } from './db/client';
+import { demoSignIns } from './db/schema/people';
+import { writeAudit } from './db/write-audit';
 import { type Deps, newId, newToken, type Wake } from './deps';
 import type { Settings } from './env';
 import { enqueueMail } from './mail/enqueue-mail';
@@ -49,6 +52,14 @@ export function createDeps({
           }),
         });
         wake.mail();
+      },
+      async afterPasswordReset(personId) {
+        await db.transaction(async (tx) => {
+          // The sign-in page must not show a password that no longer holds.
+          await tx.delete(demoSignIns).where(eq(demoSignIns.personId, personId));
+          const subject = { kind: 'person', id: personId };
+          await writeAudit(tx, basics, { actor: null, act: 'password reset', subject, requestId: null });
+        });
       },
     }),
   };

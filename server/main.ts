@@ -11,6 +11,7 @@ import { connect } from './db/client';
 import { listDemoPeople } from './db/queries/demo-sign-ins';
 import type { Deps, Wake } from './deps';
 import { parseSettings, type Settings, SettingsError } from './env';
+import { createHousekeeping } from './jobs/housekeeping';
 import { jobHandlers } from './jobs/job-handlers';
 import { createJobRunner } from './jobs/job-runner';
 import { listen } from './listen';
@@ -81,6 +82,9 @@ async function startWork(deps: Deps, owner: string) {
   const runner = createJobRunner({ deps, handlers: jobHandlers, owner });
   stops.push(runner.stop);
   runner.start();
+  const housekeeping = createHousekeeping(deps);
+  stops.push(housekeeping.stop);
+  housekeeping.start();
   return { jobs: runner.wake, mail: sender.wake };
 }
 

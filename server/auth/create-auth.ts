@@ -25,6 +25,8 @@ interface AuthOptions {
   log: Logger;
   /** Writes the mail with the link; never tells whether the address is known. */
   sendPasswordReset(person: { id: string; name: string; email: string }, token: string): Promise<void>;
+  /** After the new password stands and every session of the person has ended. */
+  afterPasswordReset(personId: string): Promise<void>;
 }
 
 /** Only this header says where a request came from, and only our own middleware writes it. */
@@ -36,7 +38,8 @@ const resetLinkSeconds = 3600;
  * Sessions, passwords and resets. Its own HTTP routes are not mounted: ours call it, so that one check of
  * origins and one set of rate limits hold for everything.
  */
-export function createAuth({ db, secret, publicUrl, newId, log, sendPasswordReset }: AuthOptions) {
+export function createAuth(options: AuthOptions) {
+  const { db, secret, publicUrl, newId, log } = options;
   const adapter = drizzleAdapter(db, {
     provider: 'mysql',
     schema: { people, sessions, accounts, verifications, organisations, members, invitations },
@@ -47,7 +50,7 @@ export function createAuth({ db, secret, publicUrl, newId, log, sendPasswordRese
     secret,
     telemetry: { enabled: false },
     logger: { log: (level, message) => log[level === 'debug' ? 'debug' : level](`sign-in: ${message}`) },
-    database: (options: BetterAuthOptions) => hashSessionTokens(adapter(options)),
+    database: (given: BetterAuthOptions) => hashSessionTokens(adapter(given)),
     user: { modelName: 'people' },
     session: {
       modelName: 'sessions',
@@ -66,7 +69,8 @@ export function createAuth({ db, secret, publicUrl, newId, log, sendPasswordRese
       password: { hash: hashPassword, verify: verifyPassword },
       revokeSessionsOnPasswordReset: true,
       resetPasswordTokenExpiresIn: resetLinkSeconds,
-      sendResetPassword: ({ user, token }) => sendPasswordReset(user, token),
+      sendResetPassword: ({ user, token }) => options.sendPasswordReset(user, token),
+      onPasswordReset: ({ user }) => options.afterPasswordReset(user.id),
     },
     rateLimit: { enabled: false },
     databaseHooks: {

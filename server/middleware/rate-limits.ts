@@ -9,7 +9,7 @@ const windows = {
   signInByAddress: { points: 60, seconds: 15 * 60 },
   /** Links that are mailed to somebody who is not signed in. */
   resetByEmail: { points: 5, seconds: 60 * 60 },
-  openByAddress: { points: 120, seconds: 15 * 60 },
+  openByAddress: { points: 300, seconds: 15 * 60 },
   /** Writes of one person. */
   writes: { points: 600, seconds: 5 * 60 },
 } as const;
@@ -39,7 +39,7 @@ export function createRateLimits(pool: Pool, database: string): RateLimits {
         keyPrefix: name,
         points,
         duration: seconds,
-        // A timer of its own would outlive a closed pool; the job runner clears old rows.
+        // A timer of its own would outlive a closed pool; housekeeping clears old rows.
         clearExpiredByTimeout: false,
       }),
     ]),

@@ -1,10 +1,12 @@
 import { mkdtempSync, readdirSync, rmSync } from 'node:fs';
 import os from 'node:os';
 import path from 'node:path';
+import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { people } from '#server/db/schema/people';
+import { outbox } from '#server/db/schema/work';
 import { demoPassword, demoPeople } from '#server/db/seed/demo-people';
 import { seedDemo } from '#server/db/seed/seed-demo';
-import { people } from '#server/db/schema/people';
 import { browser, startTestApp, type TestApp } from './harness/test-app';
 
 let test: TestApp;
@@ -53,6 +55,17 @@ describe('the demo', () => {
     }
   });
 
+  it('no longer shows a password that its person has changed', async () => {
+    const email = 'tove.hallam@kestrel-dale.example';
+    const tove = browser(test.app);
+    await tove.post('/api/password-resets').send({ email }).expect(204);
+    const [mail] = await test.deps.db.select().from(outbox).where(eq(outbox.kind, 'password reset'));
+    const token = /new-password\/([^\s"<]+)/.exec(mail?.text ?? '')?.[1] ?? '';
+    await tove.post(`/api/password-resets/${token}`).send({ password: 'a word of my own' }).expect(204);
+    const { body } = await tove.get('/api/sign-in-options');
+    expect(JSON.stringify(body)).not.toContain(email);
+  });
+
   it('is made once: seeding again changes nothing', async () => {
     const before = await test.deps.db.select().from(people);
     expect(await seedDemo(test.deps)).toEqual({ seeded: false });
@@ -67,7 +80,11 @@ describe('the demo', () => {
     const { body } = await dele.get('/api/projects').expect(200);
     const hollin = body.projects.find(({ number }: { number: string }) => number === 'CV-2031');
     expect(hollin.sections).toEqual([
-      expect.objectContaining({ edition: '2026', layers: [expect.stringContaining('S-07')], confirmed: true }),
+      expect.objectContaining({
+        edition: '2026',
+        layers: [expect.stringContaining('S-07')],
+        confirmed: true,
+      }),
     ]);
     expect(body.projects.map(({ number }: { number: string }) => number)).not.toContain('CV-2027');
   });
