@@ -84,6 +84,7 @@ describe('counting doubts', () => {
   it('counts cells and answers', () => {
     expect(doubtCountWords(three)).toBe('3 cells, 1 answered');
     expect(doubtCountWords([aDoubt({})])).toBe('1 cell');
+    expect(doubtCountWords([])).toBe('none');
   });
 
   it('says how many are left', () => {

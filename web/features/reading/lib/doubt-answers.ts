@@ -45,6 +45,7 @@ export function openDoubts(doubts: readonly ReadingDoubt[]): number {
 
 /** "4 cells, 3 answered" */
 export function doubtCountWords(doubts: readonly ReadingDoubt[]): string {
+  if (doubts.length === 0) return 'none';
   const cells = `${doubts.length} ${doubts.length === 1 ? 'cell' : 'cells'}`;
   const answered = doubts.length - openDoubts(doubts);
   return answered === 0 ? cells : `${cells}, ${answered} answered`;
