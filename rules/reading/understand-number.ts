@@ -150,9 +150,13 @@ function inUnit(
   const unit = cellUnit ?? expected.unit ?? quantity.unit;
   const result = convert(Number(digits), unit, quantity.unit);
   if (!result.ok) {
-    return doubtOf(`is stated in ${unit}, which is no unit of ${quantity.label}`, [
-      alternative(Number(digits), qualifier, expected),
-    ]);
+    const meant = [Number(digits), ratioOrPercent(digits, unit, quantity.unit)].filter(
+      (value) => value !== null && isPlausible(value, quantity),
+    );
+    return doubtOf(
+      `is stated in ${unit}, which is no unit of ${quantity.label}`,
+      meant.flatMap((value) => (value === null ? [] : [alternative(value, qualifier, expected)])),
+    );
   }
   const { value } = result;
   const converted = normaliseUnit(unit) !== normaliseUnit(quantity.unit);
@@ -160,6 +164,13 @@ function inUnit(
     return certain({ value, converted, ...(qualifier ? { qualifier } : {}) });
   }
   return implausible(value, digits, unit, expected);
+}
+
+/** A ratio given as a percentage, or the reverse: what it would be on the quantity's own scale. */
+function ratioOrPercent(digits: string, unit: string, canonical: string): number | null {
+  const value = new Decimal(digits);
+  if (unit === '%' && canonical === '1') return value.div(100).toNumber();
+  return unit === '1' && canonical === '%' ? value.times(100).toNumber() : null;
 }
 
 function implausible(

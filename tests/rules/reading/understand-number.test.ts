@@ -137,6 +137,24 @@ describe('a cell as the value of a quantity', () => {
     });
   });
 
+  it('offers a ratio that is given in percent on its own scale, and the reverse', () => {
+    expect(understand('recycled-binder-ratio', '18 %')).toMatchObject({
+      state: 'doubt',
+      alternatives: [{ answer: '0.18', value: { value: 0.18 } }],
+    });
+    expect(understand('tensile-strength-ratio', 0.87, { unit: '1' })).toMatchObject({
+      state: 'doubt',
+      alternatives: [{ answer: '87 %', value: { value: 87 } }],
+    });
+  });
+
+  it('doubts a density where a gravity belongs, and offers nothing that cannot be', () => {
+    expect(understand('maximum-specific-gravity', '2486 kg/m³')).toMatchObject({
+      state: 'doubt',
+      alternatives: [],
+    });
+  });
+
   it('doubts a value under a unit that nobody knows, and a unit of another kind', () => {
     expect(understand('mass-in-air', 4700, { unknownUnit: 'stone' })).toMatchObject({
       state: 'doubt',
