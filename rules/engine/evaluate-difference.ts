@@ -121,7 +121,7 @@ function laboratories(world: World, measure: DifferenceMeasure, at: Conditions):
 }
 
 function reported(world: World, measure: DifferenceMeasure, at: Conditions): Pair | Obstacle {
-  const request: SampleRequest = { quantity: measure.quantity, at, where: measure.where };
+  const request: SampleRequest = { quantity: measure.quantity, at, where: measure.where, toCompare: true };
   const label = labelOfRequest(world, request);
   const taken = takeSample(world, request);
   const doubt = doubtAbout(world, request, taken.ok ? taken.sample : null);

@@ -35,6 +35,8 @@ export interface SampleRequest {
   /** Conditions of the rule and of its subject. */
   at: Conditions;
   where?: Where[] | undefined;
+  /** True where the recomputed value itself is asked for, to be compared with the stated one. */
+  toCompare?: boolean;
 }
 
 export type SampleResult = { ok: true; sample: Sample } | Obstacle;
@@ -45,10 +47,21 @@ export type SampleResult = { ok: true; sample: Sample } | Obstacle;
  */
 export function takeSample(world: World, request: SampleRequest): SampleResult {
   const recomputed = takeRecomputed(world, request);
-  if (recomputed?.ok) return filtered(world, request, recomputed.sample);
   const read = takeReadings(world, request);
+  if (read.ok && statedCounts(world, request, recomputed)) return filtered(world, request, read.sample);
+  if (recomputed?.ok) return filtered(world, request, recomputed.sample);
   if (read.ok) return filtered(world, request, read.sample);
   return recomputed?.outcome === 'undecided' ? recomputed : read;
+}
+
+/**
+ * A measured property of the blend counts as stated and is only else computed from the stockpiles. Where the two
+ * contradict each other the computed one is taken, so that both are looked at.
+ */
+function statedCounts(world: World, request: SampleRequest, recomputed: SampleResult | null): boolean {
+  const quantity = world.view.quantity(request.quantity);
+  if (request.toCompare || quantity?.kind === 'derived' || quantity?.subject !== 'aggregate') return false;
+  return !(recomputed?.ok && recomputed.sample.recomputed?.agrees === false);
 }
 
 export function labelOfRequest(world: World, { quantity, at }: SampleRequest): string {
@@ -65,7 +78,8 @@ function bareLabel(world: World, { quantity }: SampleRequest): string {
 
 function takeRecomputed(world: World, request: SampleRequest): SampleResult | null {
   const candidates = world.recomputed.get(request.quantity) ?? [];
-  const isDesignGradation = request.quantity === 'percent-passing' && request.at.stockpile === undefined;
+  const isDesignGradation =
+    request.quantity === 'percent-passing' && request.at.stockpile === undefined && !request.toCompare;
   // The job-mix gradation is what the workbook states; the recomputed blend is only compared with it.
   if (candidates.length === 0 || isDesignGradation) return null;
   const label = bareLabel(world, request);

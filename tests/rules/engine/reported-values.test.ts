@@ -88,6 +88,41 @@ describe('a derived quantity', () => {
   });
 });
 
+describe('a measured property of the blend', () => {
+  const stockpile = (name: string, share: number, absorption: number) => [
+    aReading({ quantity: 'stockpile-share', value: share, at: { stockpile: name } }),
+    aReading({
+      quantity: 'water-absorption',
+      value: absorption,
+      at: { stockpile: name },
+      source: cell('D9', absorption.toFixed(2)),
+    }),
+  ];
+  /** (50·1.0 + 50·2.0)/100 = 1.5 % by the arithmetic mean of shares. */
+  const stockpiles = [...stockpile('Coarse', 50, 1), ...stockpile('Fine', 50, 2)];
+  const stated = (value: number, text: string) =>
+    aReading({ quantity: 'water-absorption', value, at: {}, source: cell('D4', text) });
+  const check = (readings: Reading[]) =>
+    findingOf({
+      rule: { measure: { kind: 'reading', quantity: 'water-absorption' }, limit: { max: '1.7' } },
+      record: { readings },
+    });
+
+  it('counts as stated where it is stated', () => {
+    const finding = check([...stockpiles, stated(1.52, '1.5')]);
+    expect(finding).toMatchObject({ outcome: 'pass', observed: { value: 1.52 } });
+    expect(finding.evidence[0]?.source?.cell).toBe('D4');
+  });
+
+  it('is else recomputed from the stockpiles', () => {
+    expect(check(stockpiles)).toMatchObject({ outcome: 'pass', observed: { value: 1.5 } });
+  });
+
+  it('is undecided where the stated value contradicts the stockpiles and the outcome', () => {
+    expect(check([...stockpiles, stated(1.9, '1.9')]).outcome).toBe('undecided');
+  });
+});
+
 describe('a difference with exactly one named cause', () => {
   /**
    * Invented mix: Pb 5.0, Gb 1.030, Gmm 2.500, Gsb 2.650, P0.075 5.0.
