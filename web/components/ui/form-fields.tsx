@@ -1,5 +1,5 @@
 import { type Control, Controller, type FieldPath, type FieldValues } from 'react-hook-form';
-import { Checkbox, CheckboxLine } from './checkbox';
+import { CheckboxLine } from './checkbox';
 import { RadioLine } from './radio-line';
 import type { Choice } from './select-field';
 import { TextField, type TextFieldProps } from './text-field';
@@ -56,28 +56,6 @@ export function FormRadioLine<Values extends FieldValues, Output, Value extends 
           onChange={field.onChange}
           error={fieldState.error?.message}
         />
-      )}
-    />
-  );
-}
-
-export function FormCheckbox<Values extends FieldValues, Output>({
-  control,
-  name,
-  children,
-}: Bound<Values, Output> & { children: React.ReactNode }) {
-  return (
-    <Controller
-      control={control}
-      name={name}
-      render={({ field, fieldState }) => (
-        <Checkbox
-          isSelected={field.value === true}
-          onChange={field.onChange}
-          error={fieldState.error?.message}
-        >
-          {children}
-        </Checkbox>
       )}
     />
   );

@@ -2,7 +2,13 @@ import { describe, expect, it } from 'vitest';
 import type { Evidence } from '#rules/engine/finding';
 import { type SheetGrid, sheetGridSchema } from '#rules/reading/cell-grid';
 import { aFinding } from '#tests/builders/a-finding';
-import { columnName, columnOf, excerptOf, rowsAround } from '../../../../web/features/findings/lib/excerpt';
+import {
+  columnName,
+  columnOf,
+  excerptOf,
+  rowsAround,
+  rowsToAsk,
+} from '../../../../web/features/findings/lib/excerpt';
 import { mainTie, type Tie, tiesOf } from '../../../../web/features/findings/lib/ties';
 
 const tie = (letter: string, cell: string, sheet = 'Summary'): Tie => ({ letter, sheet, cell, text: '' });
@@ -30,11 +36,27 @@ const grid = (cells: ReturnType<typeof cellAt>[]): SheetGrid =>
 describe('the sheet in place', () => {
   it('shows six rows that hold the cell and the inputs above it', () => {
     const ties = [tie('a', 'H23'), tie('b', 'H19'), tie('c', 'H24')];
-    expect(rowsAround(tie('c', 'H24'), ties)).toEqual({ from: 19, to: 24 });
+    expect(rowsAround(grid([]), tie('c', 'H24'), ties)).toEqual([19, 20, 21, 22, 23, 24]);
   });
 
   it('never starts above the first row', () => {
-    expect(rowsAround(tie('a', 'B1'), [tie('a', 'B1')]).from).toBe(1);
+    expect(rowsAround(grid([]), tie('a', 'B1'), [tie('a', 'B1')])[0]).toBe(1);
+    expect(rowsToAsk(tie('a', 'B1'))).toEqual({ from: 1, to: 7 });
+  });
+
+  it('keeps the head of the column over the rows of a long table', () => {
+    const sheet = grid([
+      cellAt('V3', 'Elsewhere', 'text'),
+      cellAt('V6', 'Dust proportion', 'text'),
+      cellAt('V7', 'ratio', 'text'),
+    ]);
+    expect(rowsAround(sheet, tie('a', 'V20'), [tie('a', 'V20')])).toEqual([6, 19, 20, 21, 22, 23]);
+  });
+
+  it('never puts a head in place of the cell or of a tied one', () => {
+    const sheet = grid([cellAt('H1', 'Value', 'text')]);
+    const ties = [tie('a', 'H15'), tie('b', 'H20')];
+    expect(rowsAround(sheet, tie('b', 'H20'), ties)).toEqual([15, 16, 17, 18, 19, 20]);
   });
 
   it('keeps the label of the row in sight with the cell, under its own column letters', () => {
@@ -45,7 +67,7 @@ describe('the sheet in place', () => {
       uses: [{ sheet: 'Summary', cell: 'H24', use: 'read', taken: 'Dust proportion' }],
       tie: chosen,
       ties: [chosen],
-      rows: { from: 23, to: 24 },
+      rows: [23, 24],
     });
     expect(excerpt.columns.map((column) => column.name)).toEqual(['A', 'G', 'H']);
     const hit = excerpt.rows[1]?.cells.find((cell) => cell.address === 'H24');

@@ -163,6 +163,20 @@ describe('the findings page', () => {
     expect(request?.body).toMatchObject({ accepted: true, seal: aCheckView().seal.seal });
   });
 
+  it('withdraws only with a reason', async () => {
+    const { sent } = await open({
+      abilities: { withdraw: true },
+      answers: { [`POST ${base}/withdrawal`]: aRevision({ state: 'withdrawn' }) },
+    });
+    fireEvent.click(screen.getByText('Withdraw'));
+    fireEvent.click(screen.getByText('Withdraw revision 1'));
+    expect(screen.getByText('Say why.')).toBeTruthy();
+    fireEvent.change(screen.getByLabelText('Why it is withdrawn'), { target: { value: 'Wrong binder.' } });
+    fireEvent.click(screen.getByText('Withdraw revision 1'));
+    await waitFor(() => expect(sent.some((request) => request.method === 'POST')).toBe(true));
+    expect(sent.find((request) => request.method === 'POST')?.body).toEqual({ reason: 'Wrong binder.' });
+  });
+
   it('keeps the note and says what to do where it could not be kept', async () => {
     const { stop } = await open({
       abilities: { note: true },

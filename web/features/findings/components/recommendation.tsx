@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { formatDate, formatDayAndMonth } from '#shared/format/dates';
 import { countOf } from '#shared/format/numbers';
@@ -8,6 +9,7 @@ import { asProblem } from '../../../lib/problem';
 import { useGiveBackRevision, useTakeRevision } from '../api/take-revision';
 import { useLedger } from './ledger-context';
 import { SubmittalNotes } from './submittal-notes';
+import { WithdrawForm } from './withdraw-form';
 
 /** What the findings come to, the clock, and the one act that is next. */
 export function Recommendation() {
@@ -59,6 +61,7 @@ function Acts() {
   const take = useTakeRevision(params, revision.version);
   const giveBack = useGiveBackRevision(params, revision.version);
   const decides = abilities.prepareReturn || abilities.sendReturn;
+  const [withdrawing, setWithdrawing] = useState(false);
   const problem = take.error ?? giveBack.error;
   const before = revision.revisions.find((each) => each.number === revision.number - 1);
   return (
@@ -98,10 +101,16 @@ function Acts() {
             Give back
           </Button>
         ) : null}
+        {abilities.withdraw && !withdrawing ? (
+          <Button kind="text" onPress={() => setWithdrawing(true)}>
+            Withdraw
+          </Button>
+        ) : null}
         {before ? (
           <Link to={paths.revision(params.submittalId, before.number)}>See r{before.number}</Link>
         ) : null}
       </div>
+      {withdrawing && abilities.withdraw ? <WithdrawForm onLeave={() => setWithdrawing(false)} /> : null}
       {problem ? <ProblemNotice problem={asProblem(problem)} /> : null}
     </>
   );

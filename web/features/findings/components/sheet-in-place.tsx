@@ -6,7 +6,7 @@ import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { paths } from '../../../lib/paths';
 import { asProblem } from '../../../lib/problem';
 import { sheetQuery } from '../../../lib/queries/sheet-query';
-import { excerptOf, rowsAround } from '../lib/excerpt';
+import { excerptOf, rowsAround, rowsToAsk } from '../lib/excerpt';
 import type { Tie } from '../lib/ties';
 import { useLedger } from './ledger-context';
 import { SheetExcerpt } from './sheet-excerpt';
@@ -14,15 +14,20 @@ import { SheetExcerpt } from './sheet-excerpt';
 /** Six rows of the sheet as uploaded, around the cell. */
 export function SheetInPlace({ tie, ties, outcome }: { tie: Tie; ties: readonly Tie[]; outcome: Outcome }) {
   const { params, revision } = useLedger();
-  const rows = rowsAround(tie, ties);
-  const query = useQuery(sheetQuery({ ...params, sheet: tie.sheet, ...rows }));
+  const query = useQuery(sheetQuery({ ...params, sheet: tie.sheet, ...rowsToAsk(tie) }));
   return (
     <div className="sheet-in-place">
       {query.isPending ? <LoadingBars what="Opening the sheet." rows={6} /> : null}
       {query.isError ? <ProblemNotice problem={asProblem(query.error)} /> : null}
       {query.data ? (
         <SheetExcerpt
-          excerpt={excerptOf({ sheet: query.data.sheet, uses: query.data.uses, tie, ties, rows })}
+          excerpt={excerptOf({
+            sheet: query.data.sheet,
+            uses: query.data.uses,
+            tie,
+            ties,
+            rows: rowsAround(query.data.sheet, tie, ties),
+          })}
           cell={tie.cell}
           outcome={outcome}
         />

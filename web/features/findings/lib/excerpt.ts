@@ -5,16 +5,42 @@ import type { Tie } from './ties';
 const rowsShown = 6;
 const mostColumns = 4;
 
-/** The rows to ask for: six that hold the cell and as many of the other ties above it as fit. */
-export function rowsAround(tie: Tie, ties: readonly Tie[]): { from: number; to: number } {
+/** How far above a cell the heads of its column are looked for. */
+const headRows = 60;
+
+/** The rows to ask for: those that may be shown around the cell, and where the head of its column may stand. */
+export function rowsToAsk(tie: Tie): { from: number; to: number } {
+  const row = rowOf(tie.cell);
+  return { from: Math.max(1, row - headRows), to: row + rowsShown };
+}
+
+/** Six rows that hold the cell and as many of the other ties above it as fit; the head of its column on top. */
+export function rowsAround(sheet: SheetGrid, tie: Tie, ties: readonly Tie[]): number[] {
   const row = rowOf(tie.cell);
   const others = ties.filter((each) => each.sheet === tie.sheet).map((each) => rowOf(each.cell));
-  let best = { from: Math.max(1, row - 2), held: 0 };
+  const held = (from: number) => others.filter((other) => other >= from && other < from + rowsShown).length;
+  let best = Math.max(1, row - 2);
   for (let from = Math.max(1, row - rowsShown + 1); from <= row; from += 1) {
-    const held = others.filter((other) => other >= from && other < from + rowsShown).length;
-    if (held > best.held) best = { from, held };
+    if (held(from) > held(best)) best = from;
   }
-  return { from: best.from, to: best.from + rowsShown - 1 };
+  const rows = Array.from({ length: rowsShown }, (_, index) => best + index);
+  const head = headRowOf(sheet, tie, best);
+  const [first] = rows;
+  return head === null || first === row || others.includes(first ?? 0) ? rows : [head, ...rows.slice(1)];
+}
+
+/** The top of the words that stand nearest above the shown rows in the cell's own column. */
+function headRowOf(sheet: SheetGrid, tie: Tie, from: number): number | null {
+  const column = columnOf(tie.cell);
+  const words = new Set(
+    sheet.cells
+      .filter((cell) => cell.column === column && cell.kind === 'text' && cell.row < from)
+      .map((cell) => cell.row),
+  );
+  if (words.size === 0) return null;
+  let top = Math.max(...words);
+  while (words.has(top - 1)) top -= 1;
+  return top;
 }
 
 export interface ExcerptCell {
@@ -38,17 +64,16 @@ export function excerptOf(options: {
   uses: readonly CellUse[];
   tie: Tie;
   ties: readonly Tie[];
-  rows: { from: number; to: number };
+  rows: readonly number[];
 }): Excerpt {
   const { sheet, tie, rows } = options;
   const cells = new Map(sheet.cells.map((cell) => [cell.address, cell]));
   const uses = new Map(options.uses.filter((use) => use.sheet === tie.sheet).map((use) => [use.cell, use]));
   const here = options.ties.filter((each) => each.sheet === tie.sheet);
   const columns = columnsAround(sheet, tie.cell, here, rows);
-  const numbers = Array.from({ length: rows.to - rows.from + 1 }, (_, index) => rows.from + index);
   return {
     columns,
-    rows: numbers.map((row) => ({
+    rows: rows.map((row) => ({
       number: row,
       cells: columns.map(({ name }) => {
         const address = `${name}${row}`;
@@ -74,16 +99,14 @@ function columnsAround(
   sheet: SheetGrid,
   cell: string,
   ties: readonly Tie[],
-  rows: { from: number; to: number },
+  rows: readonly number[],
 ): Excerpt['columns'] {
   const at = columnOf(cell);
-  const inRows = sheet.cells.filter((each) => each.row >= rows.from && each.row <= rows.to);
+  const inRows = sheet.cells.filter((each) => rows.includes(each.row));
   const label = inRows
     .filter((each) => each.kind === 'text' && each.column < at)
     .sort((one, other) => one.column - other.column)[0]?.column;
-  const tied = ties
-    .filter((tie) => rowOf(tie.cell) >= rows.from && rowOf(tie.cell) <= rows.to)
-    .map((tie) => columnOf(tie.cell));
+  const tied = ties.filter((tie) => rows.includes(rowOf(tie.cell))).map((tie) => columnOf(tie.cell));
   const wanted = [at, ...(label === undefined ? [] : [label]), ...tied, at - 1, at + 1];
   const chosen = new Set<number>();
   for (const column of wanted) {

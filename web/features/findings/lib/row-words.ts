@@ -1,5 +1,4 @@
 import type { Finding } from '#rules/engine/finding';
-import { sectionOfClause } from '#shared/format/clause';
 
 const markedOrigins = new Set(['fitted', 'interpolated', 'extrapolated', 'converted', 'typed']);
 
@@ -16,11 +15,6 @@ export function outcomeQualifiers(finding: Finding): string[] {
 /** How a row is named in a heading or a button: its clause, or its title where it has none. */
 export function nameOfFinding(finding: Pick<Finding, 'clause' | 'title' | 'subject'>): string {
   return finding.clause ?? finding.title;
-}
-
-/** "412" of `412.03(d)`: the letters of an index need their section only where they differ. */
-export function sectionNumber(finding: Finding): string {
-  return sectionOfClause(finding.clause) ?? '';
 }
 
 /** Words stand in the observed column as they are; a number leaves its unit a slot of its own. */
