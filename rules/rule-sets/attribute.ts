@@ -2,11 +2,13 @@ import { z } from 'zod';
 
 const scalarSchema = z.union([z.number(), z.string(), z.boolean()]);
 
-/** A property of the mix that rules branch on, as an edition declares it. */
+const typeSchema = z.enum(['number', 'text', 'boolean', 'date']);
+
+/** A property of the mix that rules branch on. */
 export const attributeSchema = z.strictObject({
   name: z.string().min(1),
   label: z.string().optional(),
-  type: z.enum(['number', 'text', 'boolean', 'date']).default('text'),
+  type: typeSchema,
   unit: z.string().optional(),
   /** Other labels under which workbooks state it. */
   aliases: z.array(z.string()).optional(),
@@ -25,8 +27,29 @@ export const attributeSchema = z.strictObject({
     .optional(),
 });
 
+/** As an edition declares it: a type left out is the standard attribute's, else that of the values, else text. */
+export const declaredAttributeSchema = attributeSchema
+  .extend({ type: typeSchema.optional() })
+  .transform((declared) => ({
+    ...standardOf(declared.name),
+    ...declared,
+    type: declared.type ?? standardOf(declared.name)?.type ?? typeOfValues(declared.values),
+  }));
+
 export type AttributeDefinition = z.infer<typeof attributeSchema>;
 export type Scalar = z.infer<typeof scalarSchema>;
+
+function standardOf(name: string): AttributeDefinition | undefined {
+  return STANDARD_ATTRIBUTES.find((standard) => standard.name === name);
+}
+
+function typeOfValues(values: AttributeDefinition['values']): AttributeDefinition['type'] {
+  const kinds = new Set(
+    (values ?? []).map((entry) => typeof (typeof entry === 'object' ? entry.value : entry)),
+  );
+  const [only] = kinds;
+  return kinds.size === 1 && (only === 'number' || only === 'boolean') ? only : 'text';
+}
 
 /** The attributes that every edition knows without declaring them. */
 export const STANDARD_ATTRIBUTES: AttributeDefinition[] = [

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { outcomeSchema, severitySchema } from '../engine/finding';
 import { quantitySchema } from '../quantities/quantity';
 import { mixRecordSchema } from '../record';
-import { attributeSchema } from './attribute';
+import { declaredAttributeSchema } from './attribute';
 import { checkEdition, duplicates } from './check-edition';
 import { documentTypeSchema } from './document-types';
 
@@ -70,7 +70,10 @@ const headFields = {
   title: z.string().min(1),
   agency: z.string().min(1),
   edition: z.string().min(1),
-  effective: z.strictObject({ from: z.iso.date().nullable(), to: z.iso.date().nullable() }),
+  effective: z.strictObject({
+    from: z.iso.date().nullable().default(null),
+    to: z.iso.date().nullable().default(null),
+  }),
 };
 
 const extensionFields = {
@@ -86,7 +89,7 @@ export const ruleSetSchema = z.strictObject({
   layerOf: z.null(),
   designPoint: designPointSchema.default({ targetAirVoids: 4, fit: 'quadratic' }),
   roomToMove: z.array(z.string()).default([]),
-  attributes: z.array(attributeSchema).default([]),
+  attributes: z.array(declaredAttributeSchema).default([]),
   tables: z.array(tableSchema).default([]),
   ...extensionFields,
   rules: z.array(ruleSchema),
@@ -95,7 +98,7 @@ export const ruleSetSchema = z.strictObject({
 const contentSchema = z.strictObject({
   rules: z.array(ruleSchema).default([]),
   tables: z.array(tableSchema).default([]),
-  attributes: z.array(attributeSchema).default([]),
+  attributes: z.array(declaredAttributeSchema).default([]),
 });
 
 const removalSchema = z.strictObject({

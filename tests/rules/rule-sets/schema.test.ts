@@ -30,6 +30,18 @@ describe('a rule set', () => {
   });
 
   it.each([
+    ['a standard attribute', { name: 'nominalMaximumSize', values: [9.5] }, { type: 'number', unit: 'mm' }],
+    ['numbers', { name: 'lifts', values: [1, 2] }, { type: 'number' }],
+    ['yes or no', { name: 'lime', values: [true, false] }, { type: 'boolean' }],
+    ['nothing', { name: 'note' }, { type: 'text' }],
+    ['itself', { name: 'note', type: 'date' }, { type: 'date' }],
+  ] as const)('takes the type of an attribute from %s', (_, attribute, expected) => {
+    const parsed = parseRuleSet({ ...aRuleSet(), attributes: [attribute] });
+    if (!parsed.ok || parsed.ruleSet.layerOf !== null) throw new Error('expected a base edition');
+    expect(parsed.ruleSet.attributes[0]).toMatchObject(expected);
+  });
+
+  it.each([
     ['reading', { kind: 'reading', quantity: 'air-voids' }, { max: 5 }],
     ['gradation', { kind: 'gradation', table: 'sieves' }, { max: { table: 'sieves', column: 'max' } }],
     ['creep-compliance', { kind: 'creep-compliance', temperature: -10, time: 100 }, { max: 0.5 }],
