@@ -94,7 +94,12 @@ export function specialConditions({ at }: Reading): Conditions {
 
 /** Conditions with only what is stated. */
 export function withoutGaps(at: Conditions): Conditions {
-  return Object.fromEntries(Object.entries(at).filter(([, value]) => value !== undefined));
+  const stated = { ...at };
+  for (const key in stated) {
+    const name = key as keyof Conditions;
+    if (stated[name] === undefined) delete stated[name];
+  }
+  return stated;
 }
 
 /** A censored value or a qualifier without a number cannot enter a calculation. */

@@ -57,9 +57,8 @@ function recomputedValue(
   ofSpecimens: RecomputedValue[],
 ): RecomputedValue {
   const { reported } = node;
-  const tolerance = reported === null ? null : halfUnitOfReported(reported) + propagatedHalfUnits(node);
-  const agrees =
-    reported === null || tolerance === null ? null : isWithin(node.value, reported.value!, tolerance);
+  const allowed = reported === null ? null : toleranceOf(node, reported);
+  const agrees = reported === null || allowed === null ? null : allowed.includes();
   const laboratory = index.laboratory === 'agency' ? ('agency' as const) : undefined;
   return {
     quantity: node.quantity,
@@ -73,7 +72,9 @@ function recomputedValue(
     count: node.count ?? 1,
     specimens: node.specimens.map(({ at, value }) => ({ specimen: at.specimen ?? '', value })),
     reported,
-    tolerance,
+    get tolerance() {
+      return allowed === null ? null : allowed.tolerance();
+    },
     agrees,
     cause: agrees === false ? causeFor(node, reported!, trialNodes, ofSpecimens) : null,
   };
@@ -116,8 +117,28 @@ function meanOfReported(readings: Reading[]): Reading | null {
   return reading;
 }
 
-function isWithin(value: number, reported: number, tolerance: number): boolean {
-  return Math.abs(value - reported) <= tolerance * (1 + 1e-9) + 1e-12;
+interface Tolerance {
+  tolerance(): number;
+  includes(): boolean;
+}
+
+/**
+ * The slopes behind a tolerance are the dearest part of an analysis. Most reported values agree within half of
+ * their own last digit already, so the rest is worked out only where it decides or where somebody asks.
+ */
+function toleranceOf(node: AnalysisNode, reported: Reading): Tolerance {
+  const own = halfUnitOfReported(reported);
+  const difference = Math.abs(node.value - reported.value!);
+  let known: number | null = null;
+  const tolerance = () => {
+    known ??= own + propagatedHalfUnits(node);
+    return known;
+  };
+  return { tolerance, includes: () => isWithin(difference, own) || isWithin(difference, tolerance()) };
+}
+
+function isWithin(difference: number, tolerance: number): boolean {
+  return difference <= tolerance * (1 + 1e-9) + 1e-12;
 }
 
 /** One reading, or several that say the same. Several that differ are a doubt of the reader's, not a statement. */
