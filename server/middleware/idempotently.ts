@@ -6,6 +6,11 @@ import { Problem } from '../problem';
 import type { RawExchange } from '../routes/define-route';
 
 const leaseSeconds = 60;
+/**
+ * The whole act is one transaction. By MariaDB's default it would go on seeing the rows as they were at its first
+ * read, so that a look after taking a lock would miss what others wrote in between.
+ */
+const readCommitted = { isolationLevel: 'read committed' } as const;
 const keyPattern = /^[\x21-\x7e]{8,120}$/;
 
 interface Act {
@@ -40,7 +45,7 @@ export async function idempotently({ raw, scope, run }: Act): Promise<unknown> {
         .set({ status: 200, response: result, owner: null, leaseUntil: null })
         .where(and(ofScope(claim), eq(idempotencyKeys.owner, claim.owner)));
       return result;
-    });
+    }, readCommitted);
     for (const name of woken) deps.wake[name]();
     return response;
   } catch (error) {
