@@ -78,7 +78,13 @@ function matches(shortcut: Shortcut, event: KeyboardEvent): boolean {
   if (shortcut.ctrl) return withCtrl && event.key === shortcut.key;
   if (withCtrl || event.key.toLowerCase() !== shortcut.key.toLowerCase()) return false;
   if (event.shiftKey && /^[a-z]$/i.test(event.key)) return false;
+  if (event.key === 'Enter' && followsItself(event.target)) return false;
   return (single || shortcut.key.length > 1) && !takesKeys(event.target);
+}
+
+/** Enter on a focused link or button is that link's or button's own. */
+function followsItself(target: EventTarget | null): boolean {
+  return target instanceof Element && target.closest('a[href], button, summary, [role="button"]') !== null;
 }
 
 const takers =
