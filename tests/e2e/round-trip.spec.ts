@@ -1,0 +1,194 @@
+import { execFileSync } from 'node:child_process';
+import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { expect, type Page, test } from '@playwright/test';
+import exceljs from 'exceljs';
+import { demoWorkbooks } from '../workbooks/demo/write-demo-workbooks';
+import { asPerson, expectAccessible, expectNoSidewaysScroll } from './support';
+
+const mix = 'BW-125-J1';
+const internalWord = 'Tollhouse sent last year’s report; ask quietly.';
+const returnedWord = 'The ratio divides by total binder. Please correct V20.';
+
+async function workbook(name: string): Promise<{ name: string; mimeType: string; buffer: Buffer }> {
+  const today = new Date().toISOString().slice(0, 10);
+  const found = (await demoWorkbooks({ submittedOn: today, lettingOn: '2026-01-14' })).find(
+    (each) => each.name === name,
+  );
+  if (found === undefined) throw new Error(`The demo has no workbook ${name}.`);
+  return {
+    name,
+    mimeType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
+    buffer: found.bytes,
+  };
+}
+
+/** Opens the row of a clause and writes a note on it. */
+async function writeNote(
+  page: Page,
+  { clause, text, kind }: { clause: string; text: string; kind: string },
+): Promise<void> {
+  const row = page.getByRole('button', { name: clause, exact: true });
+  if ((await row.getAttribute('aria-expanded')) !== 'true') await row.click();
+  await page.getByRole('button', { name: `Write a note on ${clause}` }).click();
+  await page.getByRole('textbox', { name: `Note on ${clause}` }).fill(text);
+  await page.getByRole('radio', { name: kind }).check({ force: true });
+  await page.getByRole('button', { name: 'Keep the note' }).click();
+  await expect(page.getByText(text)).toBeVisible();
+}
+
+test('a mix design goes from upload to approval, with a return and a revision in between', async ({
+  browser,
+}) => {
+  test.setTimeout(420_000);
+
+  const manager = await asPerson(browser, 'Dele Fairweather');
+  await expectAccessible(manager);
+  await manager.goto('/submittals/new');
+  await manager.getByRole('radio', { name: /CV-2031/ }).check({ force: true });
+  await manager.getByRole('textbox', { name: 'Mix designation' }).fill(mix);
+  await manager.locator('input[type=file]').setInputFiles(await workbook('BW-125-S4 r0.xlsx'));
+  await expectAccessible(manager);
+  await manager.getByRole('button', { name: 'Upload and read' }).click();
+  await manager.waitForURL(/\/r\/0\/reading/, { timeout: 60_000 });
+  await expect(manager.getByRole('heading', { name: /How the workbook was read/ })).toBeVisible();
+  await expectAccessible(manager);
+  await expectNoSidewaysScroll(manager);
+
+  const findings = manager.url().replace(/\/reading.*/, '');
+  await manager.goto(findings);
+  await expect(manager.getByRole('heading', { name: new RegExp(mix) })).toBeVisible();
+  await manager.getByRole('button', { name: '412.03(d)', exact: true }).click();
+  await expect(manager.getByText('divides by total, not effective, binder').first()).toBeVisible();
+  await expectAccessible(manager);
+  await manager.goto(`${findings}/gradation`);
+  await expect(manager.getByRole('img', { name: /gradation/i }).first()).toBeVisible();
+  await expectAccessible(manager);
+
+  await manager.goto(findings);
+  await manager.getByText(/I declare this/).click();
+  await manager.getByRole('button', { name: 'Submit revision 0' }).last().click();
+  await expect(manager.getByText(/Received/).first()).toBeVisible();
+
+  const reviewer = await asPerson(browser, 'Ines Tordoff');
+  await expect(reviewer.getByText(mix).first()).toBeVisible();
+  await expectAccessible(reviewer);
+  await reviewer.goto(findings);
+  await reviewer.getByRole('button', { name: 'Take for review' }).click();
+  await expect(reviewer.getByRole('button', { name: 'Give back' })).toBeVisible();
+  await writeNote(reviewer, { clause: '412.03(d)', text: returnedWord, kind: 'to be returned' });
+  await writeNote(reviewer, { clause: '412.03(b)', text: internalWord, kind: 'internal' });
+  await expectAccessible(reviewer);
+  await reviewer.goto(`${findings}/return`);
+  await expect(reviewer.getByRole('radio', { name: 'revise and resubmit' })).toBeChecked();
+  await expect(reviewer.getByText(/page 1 of/)).toBeVisible({ timeout: 60_000 });
+  await expectAccessible(reviewer);
+  await reviewer.getByRole('button', { name: /Send to Mairi Halloran/ }).click();
+  await expect(reviewer.getByText(/Ready to sign/).first()).toBeVisible();
+
+  const engineer = await asPerson(browser, 'Mairi Halloran');
+  await engineer.goto(findings);
+  await engineer.getByRole('button', { name: '412.03(d)', exact: true }).click();
+  await engineer.getByRole('button', { name: /^Waive 412\.03\(d\)/ }).click();
+  await engineer
+    .getByRole('textbox', { name: /reason/i })
+    .fill('Accepted for this lot after a look at the baghouse return.');
+  await engineer
+    .getByRole('button', { name: /^Waive/ })
+    .last()
+    .click();
+  await expect(engineer.getByText('waived').first()).toBeVisible();
+  await engineer.goto(`${findings}/return`);
+  await engineer.getByRole('button', { name: /Sign and send/ }).click();
+  await expect(engineer.getByText(/^Sent/).first()).toBeVisible({ timeout: 60_000 });
+
+  await expect
+    .poll(
+      async () =>
+        (await caughtSubjects(engineer)).some(
+          (subject) => subject.includes(mix) && subject.includes('revise'),
+        ),
+      { timeout: 60_000 },
+    )
+    .toBe(true);
+  const { text, files } = await caughtMail(
+    engineer,
+    (subject) => subject.includes(mix) && subject.includes('revise'),
+  );
+  expect(text).toContain(returnedWord);
+  expect(files.map(({ name }) => name)).toEqual([
+    `CV-2031 ${mix} r0 letter.pdf`,
+    `CV-2031 ${mix} r0 findings.xlsx`,
+  ]);
+  const [letter = '', cells = ''] = await Promise.all([
+    letterText(engineer, files[0]?.href),
+    cellTexts(engineer, files[1]?.href),
+  ]);
+  for (const told of [text, letter, cells]) {
+    expect(told.replace(/\s+/g, ' ')).toContain(returnedWord);
+    expect(told.replace(/\s+/g, ' ')).not.toContain(internalWord);
+  }
+
+  await manager.goto(`${findings}/return`);
+  await expect(manager.getByText(returnedWord).first()).toBeVisible();
+  await expect(manager.getByText(internalWord)).toHaveCount(0);
+  await expectAccessible(manager);
+  await manager.getByRole('link', { name: 'Upload revision 1' }).click();
+  await manager.locator('input[type=file]').setInputFiles(await workbook('BW-125-S4 r1.xlsx'));
+  await manager.getByRole('button', { name: /Upload and read/ }).click();
+  await manager.waitForURL(/\/r\/1\/reading/, { timeout: 60_000 });
+  const second = manager.url().replace(/\/reading.*/, '');
+  await manager.goto(second);
+  await manager.getByText(/I declare this/).click();
+  await manager.getByRole('button', { name: 'Submit revision 1' }).last().click();
+  await expect(manager.getByText(/Received/).first()).toBeVisible();
+
+  await reviewer.goto(second);
+  await reviewer.getByRole('button', { name: 'Take for review' }).click();
+  await expect(reviewer.getByRole('button', { name: 'Give back' })).toBeVisible();
+  await engineer.goto(`${second}/return`);
+  await engineer.getByRole('radio', { name: 'approved as noted' }).check({ force: true });
+  await engineer
+    .getByRole('textbox', { name: 'Reason' })
+    .fill('What was asked for is mended; the rest is advisory.');
+  await engineer.getByRole('button', { name: /Sign and send/ }).click();
+  await expect(engineer.getByText(/^Sent/).first()).toBeVisible({ timeout: 60_000 });
+  await manager.goto(second);
+  await expect(manager.getByText(/approved as noted/).first()).toBeVisible();
+});
+
+async function caughtSubjects(page: Page): Promise<string[]> {
+  const { mails } = await (await page.request.get('/api/caught-mail')).json();
+  return mails.map(({ subject }: { subject: string }) => subject);
+}
+
+interface CaughtMail {
+  text: string;
+  files: { name: string; href: string }[];
+}
+
+async function caughtMail(page: Page, wanted: (subject: string) => boolean): Promise<CaughtMail> {
+  const { mails } = await (await page.request.get('/api/caught-mail')).json();
+  const { id } = mails.find(({ subject }: { subject: string }) => wanted(subject));
+  return (await page.request.get(`/api/caught-mail/${id}`)).json();
+}
+
+async function letterText(page: Page, href = ''): Promise<string> {
+  const folder = await mkdtemp(join(tmpdir(), 'letter-'));
+  try {
+    const file = join(folder, 'letter.pdf');
+    await writeFile(file, await (await page.request.get(href)).body());
+    return execFileSync('pdftotext', ['-layout', file, '-'], { encoding: 'utf8' });
+  } finally {
+    await rm(folder, { recursive: true });
+  }
+}
+
+async function cellTexts(page: Page, href = ''): Promise<string> {
+  const workbook = new exceljs.Workbook();
+  await workbook.xlsx.load(new Uint8Array(await (await page.request.get(href)).body()).buffer);
+  const texts: string[] = [];
+  workbook.eachSheet((sheet) => sheet.eachRow((row) => row.eachCell((cell) => texts.push(cell.text))));
+  return texts.join(' ');
+}
