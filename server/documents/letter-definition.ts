@@ -43,7 +43,7 @@ export function pageFrame(input: DocumentInput): Omit<TDocumentDefinitions, 'con
   const reference = `${input.project.number} / ${input.mixDesignation} / r${input.revision}`;
   return {
     pageSize: 'A4',
-    pageMargins: [56, 56, 56, 64],
+    pageMargins: [56, 56, 56, 88],
     info: { title: `${reference}, ${input.disposition ?? 'findings'}`, author: input.agency.name },
     defaultStyle: { font: 'NotoSans', fontSize: 9, lineHeight: 1.15, color: printColours.ink },
     header: (page) =>
