@@ -50,7 +50,7 @@ export const gradationQuantities: QuantityInput[] = [
   },
   {
     id: 'stockpile-share',
-    symbol: 'Pi',
+    symbol: 'Pagg',
     label: 'stockpile share',
     unit: '%',
     acceptedUnits: ['%'],

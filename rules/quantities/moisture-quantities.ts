@@ -66,7 +66,7 @@ export const moistureQuantities: QuantityInput[] = [
     gaugeSpan: 2,
     conditions: ['specimen'],
     methods: ['AASHTO T 283', 'ASTM D6931'],
-    aliases: ['maximum load', 'peak load', 'load', 'max load', 'P'],
+    aliases: ['maximum load', 'peak load', 'load', 'max load'],
     subject: 'specimen',
     source: moisture,
   },

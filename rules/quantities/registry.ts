@@ -1,9 +1,13 @@
+import { additiveQuantities } from './additive-quantities';
 import { aggregateQuantities } from './aggregate-quantities';
+import { aggregateTestQuantities } from './aggregate-test-quantities';
 import { binderQuantities } from './binder-quantities';
+import { binderTestQuantities } from './binder-test-quantities';
 import { compactionQuantities } from './compaction-quantities';
 import { creepQuantities } from './creep-quantities';
 import { gradationQuantities } from './gradation-quantities';
 import { massQuantities } from './mass-quantities';
+import { mixTestQuantities } from './mix-test-quantities';
 import { moistureQuantities } from './moisture-quantities';
 import { performanceQuantities } from './performance-quantities';
 import { type Quantity, quantitySchema } from './quantity';
@@ -30,6 +34,10 @@ const quantities: Quantity[] = [
   ...performanceQuantities,
   ...recycledQuantities,
   ...creepQuantities,
+  ...binderTestQuantities,
+  ...mixTestQuantities,
+  ...aggregateTestQuantities,
+  ...additiveQuantities,
 ].map((entry) => {
   const quantity = quantitySchema.parse(entry);
   return quantity.acceptedUnits.length > 0 ? quantity : { ...quantity, acceptedUnits: [quantity.unit] };

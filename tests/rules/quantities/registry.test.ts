@@ -90,6 +90,17 @@ it('has each id and each symbol once', () => {
   expect(new Set(symbols).size).toBe(symbols.length);
 });
 
+it('gives no name to two quantities, whatever its case and punctuation', () => {
+  const owners = new Map<string, Set<string>>();
+  for (const { id, label, symbol, aliases } of allQuantities()) {
+    for (const name of [label, symbol, ...aliases]) {
+      const key = name.toLowerCase().replace(/[\s\-–_.,()]/g, '');
+      owners.set(key, (owners.get(key) ?? new Set()).add(id));
+    }
+  }
+  expect([...owners].filter(([, ids]) => ids.size > 1).map(([name]) => name)).toEqual([]);
+});
+
 describe.each(allQuantities())('$id', (quantity) => {
   it('has units that are known and convert to its own', () => {
     for (const unit of quantity.acceptedUnits) {
