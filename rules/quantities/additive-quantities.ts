@@ -103,7 +103,7 @@ export const additiveQuantities: QuantityInput[] = [
   },
   {
     id: 'conditioning-time',
-    symbol: 'tage',
+    symbol: 'hage',
     label: 'loose-mix conditioning time',
     unit: 'h',
     acceptedUnits: ['h', 'min'],
