@@ -11,5 +11,3 @@ export const organisationReferenceSchema = z.strictObject({ id: idSchema, name: 
 export function pageOf<Item extends z.ZodType>(item: Item) {
   return z.strictObject({ items: z.array(item), nextCursor: z.string().nullable() });
 }
-
-export type PersonReference = z.infer<typeof personReferenceSchema>;

@@ -86,4 +86,3 @@ export const addContractor = endpoint({
 
 export type Letterhead = z.infer<typeof letterheadSchema>;
 export type Organisation = z.infer<typeof organisationSchema>;
-export type Contractor = z.infer<typeof contractorSchema>;

@@ -160,5 +160,4 @@ export const getSectionTemplate = endpoint({
 export type ProjectListItem = z.infer<typeof projectListItemSchema>;
 export type Project = z.infer<typeof projectSchema>;
 export type Section = z.infer<typeof sectionSchema>;
-export type Contact = z.infer<typeof contactSchema>;
 export type EditionReference = z.infer<typeof editionReferenceSchema>;

@@ -47,7 +47,7 @@ export function aDocumentInput(overrides: Partial<DocumentInput> = {}): Document
       },
     ],
     copies: [],
-    signedBy: { name: 'Maren Halloran', function: 'signing engineer' },
+    signedBy: { name: 'Mairi Halloran', function: 'signing engineer' },
     summary: {
       pass: 24,
       fail: 3,

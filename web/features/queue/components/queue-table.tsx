@@ -79,7 +79,6 @@ function QueueRow({
   onCursor: () => void;
 }) {
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: J and K move the cursor; the link in the row takes the focus.
     <tr
       id={rowId(item)}
       className={isCursor ? 'queue-row is-cursor' : 'queue-row'}

@@ -90,7 +90,6 @@ function SheetCell({
   const letter = drawing.letters.get(address);
   const isSelected = drawing.selected === address;
   return (
-    // biome-ignore lint/a11y/useKeyWithClickEvents: the grid takes the keys and moves the cursor from cell to cell.
     <td
       id={`${drawing.idPrefix}${address}`}
       className={classOf({
