@@ -11,7 +11,7 @@ export function RunningFoot({ texts, acts }: { texts: readonly ReactNode[]; acts
   const place = useContext(FootPlace);
   const keys = useRegisteredShortcuts().filter((shortcut) => shortcut.foot);
   if (!place) return null;
-  return createPortal(
+  const foot = createPortal(
     <div className={`running-foot${acts ? ' has-acts' : ''}`}>
       {texts.map((text, index) => (
         // biome-ignore lint/suspicious/noArrayIndexKey: at most three fixed lines.
@@ -30,6 +30,24 @@ export function RunningFoot({ texts, acts }: { texts: readonly ReactNode[]; acts
       </span>
     </div>,
     place,
+  );
+  return (
+    <>
+      {acts ? <CautionsInPage texts={texts} /> : null}
+      {foot}
+    </>
+  );
+}
+
+/** On phones the foot has room for acts only, and its words stand at the end of the page. */
+function CautionsInPage({ texts }: { texts: readonly ReactNode[] }) {
+  return (
+    <div className="page-cautions">
+      {texts.map((text, index) => (
+        // biome-ignore lint/suspicious/noArrayIndexKey: at most three fixed lines.
+        <p key={index}>{text}</p>
+      ))}
+    </div>
   );
 }
 

@@ -59,8 +59,8 @@ export function FindingsOfCheck({ params, revision }: { params: RevisionParams; 
         ) : null}
         <LedgerTools order={state.order} />
         <Ledger groups={state.groups} />
+        <FindingsFoot />
       </MarginPage>
-      <FindingsFoot />
     </LedgerContext>
   );
 }

@@ -15,12 +15,16 @@ export function requirementParts({ requirement, title }: Pick<Finding, 'requirem
       after: requirement.slice(end),
     };
   }
-  const verb = / (?:is|are|of|at|on|after|passing|has|have|does|not older) /.exec(requirement);
-  if (!verb || verb.index > 60) return { before: '', key: '', after: requirement };
+  const end = keyEnd.exec(requirement);
+  if (!end || end.index > mostKeyCharacters) return { before: '', key: '', after: requirement };
   const article = /^(?:An?|The) /.exec(requirement)?.[0] ?? '';
   return {
     before: article,
-    key: requirement.slice(article.length, verb.index),
-    after: requirement.slice(verb.index),
+    key: requirement.slice(article.length, end.index),
+    after: requirement.slice(end.index),
   };
 }
+
+/** Where the quantity's name ends and its conditions or its limit begin. */
+const keyEnd = /, | (?:is|are|differ|has|have|at|after|on|of stockpile|not older) /;
+const mostKeyCharacters = 60;

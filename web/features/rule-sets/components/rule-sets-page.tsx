@@ -16,6 +16,7 @@ import { effectiveWords } from '../lib/edition-words';
 export function RuleSetsPage() {
   usePageTitle('Rule sets');
   const { ruleSets } = useSuspenseQuery(ruleSetsQuery()).data;
+  const titles = new Map(ruleSets.map((set) => [set.id, set.title]));
   const startingPoint = ruleSets.some((set) => set.editions.some((edition) => edition.startingPoint));
   return (
     <PlainPage>
@@ -29,7 +30,7 @@ export function RuleSetsPage() {
       {ruleSets.map((set) => (
         <section key={set.id} aria-label={set.title}>
           <SectionHead title={set.title} about={set.agency} />
-          <EditionTable ruleSetId={set.id} editions={set.editions} />
+          <EditionTable ruleSetId={set.id} editions={set.editions} titles={titles} />
         </section>
       ))}
       <RunningFoot
@@ -39,10 +40,18 @@ export function RuleSetsPage() {
   );
 }
 
-function EditionTable({ ruleSetId, editions }: { ruleSetId: string; editions: readonly EditionListItem[] }) {
+function EditionTable({
+  ruleSetId,
+  editions,
+  titles,
+}: {
+  ruleSetId: string;
+  editions: readonly EditionListItem[];
+  titles: ReadonlyMap<string, string>;
+}) {
   return (
     <div className="sideways">
-      <table className="table table-head-over">
+      <table className="table table-head-over edition-table">
         <caption className="hidden-text">Editions of {ruleSetId}</caption>
         <thead>
           <tr>
@@ -56,7 +65,7 @@ function EditionTable({ ruleSetId, editions }: { ruleSetId: string; editions: re
           </tr>
         </thead>
         <tbody>
-          {editions.map((edition) => (
+          {newestFirst(editions).map((edition) => (
             <tr key={`${edition.ruleSet}@${edition.edition}`}>
               <th scope="row">
                 <Link to={paths.ruleSet(edition.ruleSet, edition.edition)}>
@@ -66,7 +75,9 @@ function EditionTable({ ruleSetId, editions }: { ruleSetId: string; editions: re
               <td>{edition.state === 'in force' ? <b>in force</b> : edition.state}</td>
               <td>{effectiveWords(edition)}</td>
               <td>
-                {edition.layerOf ? `${edition.layerOf.ruleSet}, edition ${edition.layerOf.edition}` : ''}
+                {edition.layerOf
+                  ? `${titles.get(edition.layerOf.ruleSet) ?? edition.layerOf.ruleSet}, edition ${edition.layerOf.edition}`
+                  : ''}
               </td>
               <td className="number">{edition.rules}</td>
             </tr>
@@ -75,4 +86,9 @@ function EditionTable({ ruleSetId, editions }: { ruleSetId: string; editions: re
       </table>
     </div>
   );
+}
+
+/** A draft without a date stands before everything that has one. */
+function newestFirst(editions: readonly EditionListItem[]): EditionListItem[] {
+  return [...editions].sort((one, other) => (other.from ?? '9999').localeCompare(one.from ?? '9999'));
 }

@@ -39,9 +39,11 @@ export function RuleText({ rule, tables }: { rule: RuleView; tables: readonly Ta
         ) : null}
         <Fact name="Source" wide>
           {rule.source}{' '}
-          <span className={rule.sourceOrigin === 'memory' ? 'outcome-undecided' : 'origin'}>
-            {originWords[rule.sourceOrigin]}
-          </span>
+          {rule.source.includes(originWords[rule.sourceOrigin]) ? null : (
+            <span className={rule.sourceOrigin === 'memory' ? 'outcome-undecided' : 'origin'}>
+              {originWords[rule.sourceOrigin]}
+            </span>
+          )}
         </Fact>
         <Fact name="Supplied by" wide>
           {rule.document}
