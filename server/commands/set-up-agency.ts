@@ -7,6 +7,7 @@ import { Problem } from '../problem';
 import { hashToken } from './make-set-up-link';
 import { isTimeZone, newOrganisation } from './organisation/new-organisation';
 import { createPerson } from './people/create-person';
+import { publishStartingPoints } from './rule-sets/publish-starting-points';
 
 interface SetUp {
   token: string;
@@ -59,6 +60,14 @@ export async function setUpAgency(deps: Deps, setUp: SetUp): Promise<void> {
       personId,
       role: 'administrator',
       createdAt: deps.now(),
+    });
+    await publishStartingPoints(tx, {
+      agencyId: organisationId,
+      agencyName: setUp.agencyName,
+      idOf: () => deps.newId(),
+      publishedById: personId,
+      secondAuthorId: personId,
+      publishedAt: () => deps.now(),
     });
     await writeAudit(tx, deps, {
       actor: { organisationId, personId },
