@@ -2,7 +2,7 @@ import { existsSync, readFileSync } from 'node:fs';
 import net from 'node:net';
 import path from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
-import { type Launched, makeInstance } from './harness/launcher';
+import { type Launched, makeInstance, untilReady } from './harness/launcher';
 import { eventually } from './harness/waiting';
 
 const patienceMs = 150_000;
@@ -28,12 +28,7 @@ function freePort(): Promise<number> {
 
 async function startEmpty(): Promise<Launched> {
   const launched = instance.launch('start.mjs', [], { PORT: String(port), DEMO: 'no' });
-  let exited: number | null | undefined;
-  void launched.exitCode.then((code) => {
-    exited = code;
-  });
-  await eventually(() => launched.output().includes('Ctrl-C') || exited !== undefined, patienceMs);
-  expect(exited, launched.output()).toBeUndefined();
+  await untilReady(launched, patienceMs);
   return launched;
 }
 

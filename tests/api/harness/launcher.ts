@@ -57,6 +57,16 @@ function launch(script: string, args: string[], env: Record<string, string>): La
   };
 }
 
+/** Waits until the product says that it is ready; a start that fails shows what it printed. */
+export async function untilReady(launched: Launched, timeoutMs: number): Promise<void> {
+  let ended = false;
+  void launched.exitCode.then(() => {
+    ended = true;
+  });
+  await eventually(() => ended || launched.output().includes('Ctrl-C'), timeoutMs);
+  if (ended) throw new Error(`The product did not start:\n${launched.output()}`);
+}
+
 /** The server carries the directory in its environment, the database in its arguments. */
 function processesOn(directory: string): { pid: number; command: string }[] {
   return readdirSync('/proc')
