@@ -21,7 +21,7 @@ const maximumSocketPathBytes = 107;
  */
 export async function startPrivateDatabase({ directory, initStatements, throwaway = false }) {
   const files = databaseFiles(directory);
-  mkdirSync(directory, { recursive: true, mode: 0o700 });
+  mkdirSync(files.temporary, { recursive: true, mode: 0o700 });
   if (await answers(files.socket)) return { ...files, reused: true };
   await install(files.data);
   writeFileSync(files.init, `${initStatements.join('\n')}\n`, { mode: 0o600 });
@@ -54,6 +54,8 @@ export function databaseFiles(directory) {
     pidFile: path.join(directory, 'mariadb.pid'),
     log: path.join(directory, 'mariadb.log'),
     init: path.join(directory, 'mariadb-init.sql'),
+    // Its own: at its start a MariaDB clears the temporary tables that it finds, also those of another that runs.
+    temporary: path.join(directory, 'mariadb-tmp'),
   };
 }
 
@@ -92,6 +94,7 @@ function serverArguments({ files, port, throwaway }) {
   return [
     '--no-defaults',
     `--datadir=${files.data}`,
+    `--tmpdir=${files.temporary}`,
     `--socket=${files.socket}`,
     `--pid-file=${files.pidFile}`,
     `--log-error=${files.log}`,
