@@ -26,7 +26,7 @@ export type SubmittalRow = Awaited<ReturnType<typeof listSubmittals>>[number];
  */
 export async function listSubmittals(db: Database, reader: Reader, filter: SubmittalFilter) {
   const { state, project, q, after, rows } = filter;
-  return preparedFor(db, reader, filter).execute({
+  const found = await preparedFor(db, reader, filter).execute({
     organisationId: reader.organisationId,
     rows,
     ...(state === undefined ? {} : { state }),
@@ -34,12 +34,27 @@ export async function listSubmittals(db: Database, reader: Reader, filter: Submi
     ...(q === undefined ? {} : { pattern: `%${escapeLike(q)}%` }),
     ...(after === undefined ? {} : { at: after.at, id: after.id }),
   });
+  return found.map(complete);
+}
+
+type Found = Awaited<ReturnType<Prepared['execute']>>[number];
+
+/** The joins are outer for the optimizer's sake only: every submittal has all of these. */
+function complete({ revision, project, contractor: builder, agency: judge, ...row }: Found) {
+  if (revision === null || project === null || builder === null || judge === null) {
+    throw new Error(`Submittal ${row.id} lacks its revision, project or organisations.`);
+  }
+  return { ...row, revision, project, contractor: builder, agency: judge };
 }
 
 const contractor = alias(organisations, 'contractor');
 const agency = alias(organisations, 'agency');
 const latest = alias(revisions, 'latest');
 
+/**
+ * Outer joins keep the order of the joins: from an inner one the optimizer starts at the few projects and sorts every
+ * submittal of the agency for one page.
+ */
 function build(db: Database, reader: Reader, filter: SubmittalFilter) {
   const changedAt = reader.kind === 'agency' ? submittals.agencyUpdatedAt : submittals.updatedAt;
   const conditions: (SQL | undefined)[] = [
@@ -74,14 +89,14 @@ function build(db: Database, reader: Reader, filter: SubmittalFilter) {
       summary: checks.summary,
     })
     .from(submittals)
-    .innerJoin(latest, and(eq(latest.submittalId, submittals.id), eq(latest.number, submittals.latestNumber)))
-    .innerJoin(
+    .leftJoin(latest, and(eq(latest.submittalId, submittals.id), eq(latest.number, submittals.latestNumber)))
+    .leftJoin(
       revisions,
       and(eq(revisions.submittalId, submittals.id), eq(revisions.number, visibleNumber(reader))),
     )
-    .innerJoin(projects, eq(projects.id, submittals.projectId))
-    .innerJoin(contractor, eq(contractor.id, submittals.contractorId))
-    .innerJoin(agency, eq(agency.id, submittals.agencyId))
+    .leftJoin(projects, eq(projects.id, submittals.projectId))
+    .leftJoin(contractor, eq(contractor.id, submittals.contractorId))
+    .leftJoin(agency, eq(agency.id, submittals.agencyId))
     .leftJoin(checks, and(eq(checks.revisionId, revisions.id), eq(checks.number, newestCheck)))
     .where(and(...conditions))
     .orderBy(desc(changedAt), desc(submittals.id))
