@@ -16,7 +16,7 @@ export function ProblemNotice({
   return (
     <div className="problem-notice" role="alert">
       <p>
-        <b>{problem.title}.</b> {problem.detail === problem.title ? null : problem.detail}
+        <b>{problem.title}.</b> {isSaidElsewhere(problem) ? null : problem.detail}
       </p>
       {problem.errors.length > 0 ? (
         <ul>
@@ -34,6 +34,13 @@ export function ProblemNotice({
       {children}
       {problem.requestId ? <p className="small faint">Request {problem.requestId}</p> : null}
     </div>
+  );
+}
+
+/** A detail that only repeats the title or one of the listed faults. */
+function isSaidElsewhere({ title, detail, errors }: Problem): boolean {
+  return [title, ...errors.map((error) => error.detail)].some(
+    (said) => said.replace(/\.$/, '') === detail.replace(/\.$/, ''),
   );
 }
 

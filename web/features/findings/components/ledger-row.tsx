@@ -75,7 +75,12 @@ export function LedgerRow({ row }: { row: Row }) {
 
 function ClauseOf({ row: { finding } }: { row: Row }) {
   if (finding.clause === null) {
-    return <span className="hidden-text">Open {finding.title}</span>;
+    return (
+      <>
+        <i>check</i>
+        <span className="hidden-text">: {finding.title}</span>
+      </>
+    );
   }
   const { section, letter } = clauseParts(finding.clause);
   return letter === '' ? (

@@ -10,6 +10,7 @@ import { asProblem } from '../../../lib/problem';
 import { useSession } from '../../../lib/queries/session-query';
 import { useChangeNote } from '../api/change-note';
 import { useWriteNote } from '../api/write-note';
+import { returnToRow } from '../hooks/use-address-row';
 import { useLedger } from './ledger-context';
 
 const kinds = {
@@ -44,6 +45,10 @@ export function NoteForm({
   const write = useWriteNote(params);
   const rewrite = useChangeNote(params);
   const problem = write.error ?? rewrite.error;
+  const leave = () => {
+    setDraft(null);
+    returnToRow(finding);
+  };
   const keep = () => {
     if (text.trim() === '') {
       setMissing(true);
@@ -51,7 +56,7 @@ export function NoteForm({
     }
     const onSuccess = () => {
       announce('The note is kept.');
-      setDraft(null);
+      leave();
     };
     if (change) rewrite.mutate({ note: change, kind, text }, { onSuccess });
     else write.mutate({ finding, kind, text, answers: answers?.id ?? null }, { onSuccess });
@@ -62,7 +67,7 @@ export function NoteForm({
       className="note-form"
       onKeyDown={(event) => {
         if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) keep();
-        if (event.key === 'Escape') setDraft(null);
+        if (event.key === 'Escape') leave();
       }}
     >
       <TextAreaField
@@ -85,7 +90,7 @@ export function NoteForm({
         <Button onPress={keep} isDisabled={write.isPending || rewrite.isPending} keyHint="Ctrl Enter">
           Keep the note
         </Button>
-        <Button kind="text" onPress={() => setDraft(null)}>
+        <Button kind="text" onPress={leave}>
           Leave it
         </Button>
       </div>

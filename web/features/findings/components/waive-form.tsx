@@ -7,6 +7,7 @@ import { TextAreaField } from '../../../components/ui/text-field';
 import { announce } from '../../../lib/announce';
 import { asProblem } from '../../../lib/problem';
 import { useWaive } from '../api/waive';
+import { returnToRow } from '../hooks/use-address-row';
 import type { LedgerRow } from '../lib/ledger';
 import { nameOfFinding } from '../lib/row-words';
 import { useLedger } from './ledger-context';
@@ -19,6 +20,10 @@ export function WaiveForm({ row }: { row: LedgerRow }) {
   const [missing, setMissing] = useState(false);
   const waive = useWaive(params);
   const name = nameOfFinding(row.finding);
+  const leave = () => {
+    setDraft(null);
+    returnToRow(row.key);
+  };
   const keep = () => {
     if (reason.trim() === '') {
       setMissing(true);
@@ -29,7 +34,7 @@ export function WaiveForm({ row }: { row: LedgerRow }) {
       {
         onSuccess: () => {
           announce(`${name} is waived. It stays fail.`);
-          setDraft(null);
+          leave();
         },
       },
     );
@@ -40,7 +45,7 @@ export function WaiveForm({ row }: { row: LedgerRow }) {
       className="note-form"
       onKeyDown={(event) => {
         if (event.key === 'Enter' && (event.ctrlKey || event.metaKey)) keep();
-        if (event.key === 'Escape') setDraft(null);
+        if (event.key === 'Escape') leave();
       }}
     >
       <TextAreaField
@@ -67,7 +72,7 @@ export function WaiveForm({ row }: { row: LedgerRow }) {
         <Button onPress={keep} isDisabled={waive.isPending} keyHint="Ctrl Enter">
           Waive {name}
         </Button>
-        <Button kind="text" onPress={() => setDraft(null)}>
+        <Button kind="text" onPress={leave}>
           Leave it
         </Button>
       </div>

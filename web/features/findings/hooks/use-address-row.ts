@@ -27,6 +27,14 @@ export function focusRow(key: string): void {
   button?.closest('.ledger-entry')?.scrollIntoView({ block: 'center' });
 }
 
+/** After something was written in the margin: back to its row, without moving the page. */
+export function returnToRow(key: string | null): void {
+  if (key === null) return;
+  requestAnimationFrame(() => {
+    document.querySelector<HTMLElement>(`[data-row="${CSS.escape(key)}"]`)?.focus({ preventScroll: true });
+  });
+}
+
 function isByHand(state: unknown): boolean {
   return typeof state === 'object' && state !== null && 'byHand' in state;
 }
