@@ -7,7 +7,7 @@ import { laboratories, organisations, people } from '../schema/people';
 import { projects, sections } from '../schema/projects';
 import { returns } from '../schema/returns';
 import { mixRecords, revisions, submittals } from '../schema/submittals';
-import { type Reader, revisionsOf } from './reader';
+import { type Reader, revisionsOf, submittalsOf } from './reader';
 
 const contractor = alias(organisations, 'contractor');
 const agency = alias(organisations, 'agency');
@@ -111,14 +111,10 @@ export async function lockRevision(db: Database, revisionId: string) {
 
 /** Locks a submittal, so that only one revision of it is started at a time. */
 export async function lockSubmittal(db: Database, reader: Reader, submittalId: string) {
-  const own =
-    reader.kind === 'agency'
-      ? eq(submittals.agencyId, reader.organisationId)
-      : eq(submittals.contractorId, reader.organisationId);
   const [row] = await db
     .select()
     .from(submittals)
-    .where(and(eq(submittals.id, submittalId), own))
+    .where(and(eq(submittals.id, submittalId), submittalsOf(reader)))
     .for('update');
   return row ?? null;
 }
