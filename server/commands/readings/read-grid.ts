@@ -9,6 +9,7 @@ import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import type { Database } from '../../db/client';
 import { findResolvedEdition } from '../../db/resolved-edition';
 import { Problem } from '../../problem';
+import { trimUnread } from './trim-unread';
 
 interface ReadGrid {
   grid: CellGrid;
@@ -45,7 +46,7 @@ export async function readGrid(
   const read =
     answers.length === 0 ? unanswered : readWorkbook({ grid, mapping: document, edition, answers });
   return {
-    read: { ...read, doubts: everyDoubt(unanswered.doubts, read.doubts) },
+    read: trimUnread({ ...read, doubts: everyDoubt(unanswered.doubts, read.doubts) }),
     mapping: { name: `Template of ${made.title}, edition ${made.edition}`.slice(0, 200), document },
   };
 }
