@@ -5,6 +5,7 @@ import { cellBlocks, cellGrids } from '../schema/files';
 
 /** Rows in one block: a window of a sheet reads one or two blocks, and a block stays well below a packet. */
 const rowsPerBlock = 200;
+const cellsPerBlock = 20_000;
 
 interface StoreGrid {
   fileId: string;
@@ -91,14 +92,23 @@ export async function gridOf(db: Database, fileId: string) {
   return head ?? null;
 }
 
-function* blocksOf(cells: readonly Cell[]): Generator<{ fromRow: number; toRow: number; cells: Cell[] }> {
-  let block: { fromRow: number; toRow: number; cells: Cell[] } | null = null;
+interface CellBlock {
+  fromRow: number;
+  toRow: number;
+  cells: Cell[];
+}
+
+/** Whole rows, at most so many, and no further row once a wide sheet has filled the block. */
+export function* blocksOf(cells: readonly Cell[]): Generator<CellBlock> {
+  let block: CellBlock | null = null;
   for (const cell of cells) {
-    const fromRow = Math.floor((cell.row - 1) / rowsPerBlock) * rowsPerBlock + 1;
-    if (block !== null && block.fromRow !== fromRow) yield block;
-    if (block === null || block.fromRow !== fromRow) {
-      block = { fromRow, toRow: fromRow + rowsPerBlock - 1, cells: [] };
-    }
+    const ends =
+      block !== null &&
+      cell.row !== block.toRow &&
+      (cell.row >= block.fromRow + rowsPerBlock || block.cells.length >= cellsPerBlock);
+    if (block !== null && ends) yield block;
+    if (block === null || ends) block = { fromRow: cell.row, toRow: cell.row, cells: [] };
+    block.toRow = cell.row;
     block.cells.push(cell);
   }
   if (block !== null) yield block;
