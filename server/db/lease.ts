@@ -1,5 +1,5 @@
 import { setTimeout as sleep } from 'node:timers/promises';
-import type { Connection, ResultSetHeader, RowDataPacket } from 'mysql2/promise';
+import type { Connection, ResultSetHeader } from 'mysql2/promise';
 
 interface LeaseOptions {
   /** What is leased: `migration`. */
@@ -59,9 +59,4 @@ export async function claimLease(
     [owner, leaseSeconds, name, owner],
   );
   return result.affectedRows === 1;
-}
-
-export async function leaseOwner(connection: Connection, name: string): Promise<string | null> {
-  const [rows] = await connection.query<RowDataPacket[]>('SELECT owner FROM leases WHERE name = ?', [name]);
-  return (rows[0]?.owner as string | null | undefined) ?? null;
 }

@@ -1,4 +1,4 @@
-import { existsSync, rmSync } from 'node:fs';
+import { existsSync } from 'node:fs';
 import { build } from 'esbuild';
 import { inRoot, root } from './lib/paths.mjs';
 
@@ -8,13 +8,12 @@ const entryPoints = {
   'decode-worker': 'server/workbook/decode-worker.ts',
 };
 
-rmSync(inRoot('dist/server'), { recursive: true, force: true });
 await build({
   absWorkingDir: root,
   entryPoints: Object.fromEntries(
     Object.entries(entryPoints).filter(([, source]) => existsSync(inRoot(source))),
   ),
-  outdir: 'dist/server',
+  outdir: process.argv[2] ?? inRoot('dist/server'),
   bundle: true,
   splitting: true,
   platform: 'node',

@@ -1,39 +1,55 @@
 import { createHash } from 'node:crypto';
-import { existsSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
+import { underBuildLock } from './build-lock.mjs';
 import { inRoot, root } from './paths.mjs';
 import { LauncherError, runQuietly } from './run-command.mjs';
 
 const shared = ['shared', 'rules', 'package-lock.json', 'tsconfig.json'];
 
+const targets = [
+  {
+    name: 'web',
+    sources: ['web', 'vite.config.ts', 'tailwind.config.ts', ...shared],
+    result: 'index.html',
+    args: (outDir) => ['node_modules/vite/bin/vite.js', 'build', '--outDir', outDir],
+  },
+  {
+    name: 'server',
+    sources: ['server', 'tests/builders', 'tests/workbooks', ...shared],
+    result: 'main.js',
+    args: (outDir) => ['server/scripts/build-server.mjs', outDir],
+  },
+];
+
 /** Builds web and server where their sources have changed since the last build. */
 export async function buildWhenStale({ log = console.log } = {}) {
-  await Promise.all([
-    step({
-      name: 'web',
-      sources: ['web', 'vite.config.ts', 'tailwind.config.ts', ...shared],
-      result: 'dist/web/index.html',
-      build: () => runQuietly(process.execPath, ['node_modules/vite/bin/vite.js', 'build'], { cwd: root }),
-      log,
-    }),
-    step({
-      name: 'server',
-      sources: ['server', 'tests/builders', 'tests/workbooks', ...shared],
-      result: 'dist/server/main.js',
-      build: () => runQuietly(process.execPath, ['server/scripts/build-server.mjs'], { cwd: root }),
-      log,
-    }),
-  ]);
+  if (targets.every((target) => isFresh(target))) return;
+  await underBuildLock(() =>
+    Promise.all(targets.filter((target) => !isFresh(target)).map((target) => build(target, log))),
+  );
 }
 
-async function step({ name, sources, result, build, log }) {
-  const stamp = inRoot('dist', `${name}.sources`);
-  const wanted = hashSources(sources);
-  if (existsSync(inRoot(result)) && existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted) return;
+/** Beside the old one, which stays in place until the new one is whole. */
+async function build({ name, sources, result, args }, log) {
   log(`Building ${name} …`);
-  await build();
-  if (!existsSync(inRoot(result))) throw new LauncherError(`The ${name} build left no ${result}.`);
-  writeFileSync(stamp, wanted);
+  const wanted = hashSources(sources);
+  const next = inRoot('dist', `${name}.next`);
+  rmSync(next, { recursive: true, force: true });
+  await runQuietly(process.execPath, args(next), { cwd: root });
+  if (!existsSync(path.join(next, result))) throw new LauncherError(`The ${name} build made no ${result}.`);
+  rmSync(inRoot('dist', name), { recursive: true, force: true });
+  renameSync(next, inRoot('dist', name));
+  writeFileSync(stampOf(name), wanted);
+}
+
+function isFresh({ name, sources, result }) {
+  if (!existsSync(inRoot('dist', name, result)) || !existsSync(stampOf(name))) return false;
+  return readFileSync(stampOf(name), 'utf8') === hashSources(sources);
+}
+
+function stampOf(name) {
+  return inRoot('dist', `${name}.sources`);
 }
 
 /** By content: a clone gives every file the time of the clone. */
