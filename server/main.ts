@@ -9,6 +9,7 @@ import { createDeps } from './create-deps';
 import { checkDatabase } from './db/check-database';
 import { connect } from './db/client';
 import { listDemoPeople } from './db/queries/demo-sign-ins';
+import { demoWorkbookFolder, demoWorkbooksAreWritten } from './db/seed/demo-workbook-folder';
 import type { Deps, Wake } from './deps';
 import { parseSettings, type Settings, SettingsError } from './env';
 import { createHousekeeping } from './jobs/housekeeping';
@@ -16,7 +17,6 @@ import { jobHandlers } from './jobs/job-handlers';
 import { createJobRunner } from './jobs/job-runner';
 import { listen } from './listen';
 import { createLog } from './log';
-import { startMailCatcher } from './mail/mail-catcher';
 import { createOutboxSender } from './mail/outbox-sender';
 import { createMailTransport } from './mail/transport';
 import { prepareDatabase } from './prepare-database';
@@ -40,6 +40,7 @@ async function main(): Promise<void> {
   const log = createLog(settings.logLevel);
   stopWhenAsked(log);
   const owner = randomUUID();
+  await databaseIsUp();
   await prepareDatabase(settings, owner);
   const connection = connect(settings.databaseUrl);
   stops.push(connection.close);
@@ -65,6 +66,16 @@ async function main(): Promise<void> {
   });
 }
 
+/** The launcher starts us beside the private database, so that loading and its start overlap, and says when it is up. */
+async function databaseIsUp(): Promise<void> {
+  if (process.env.CLAUSEWAY_DATABASE_STARTS !== 'yes') return;
+  await new Promise<void>((resolve) => {
+    process.on('message', (message) => {
+      if (message === 'database is up') resolve();
+    });
+  });
+}
+
 /** Loaded only where it is wanted: the demo brings its workbooks along. */
 async function seed(deps: Deps): Promise<void> {
   const { seedDemo } = await import('./db/seed/seed-demo');
@@ -73,7 +84,7 @@ async function seed(deps: Deps): Promise<void> {
 
 async function startWork(deps: Deps, owner: string) {
   const { settings } = deps;
-  const catcher = settings.smtpUrl === null ? await startMailCatcher(deps) : null;
+  const catcher = settings.smtpUrl === null ? await catchMail(deps) : null;
   if (catcher) stops.push(catcher.close);
   const transport = createMailTransport(settings.smtpUrl ?? catcher?.url ?? '');
   const sender = createOutboxSender({ deps, transport, owner });
@@ -88,6 +99,12 @@ async function startWork(deps: Deps, owner: string) {
   return { jobs: runner.wake, mail: sender.wake };
 }
 
+/** A mail server is part of development and demo only. */
+async function catchMail(deps: Deps) {
+  const { startMailCatcher } = await import('./mail/mail-catcher');
+  return startMailCatcher(deps);
+}
+
 async function serve(deps: Deps): Promise<string> {
   const { settings } = deps;
   const app = createApp({ deps, webDirectory: path.resolve('dist/web') });
@@ -96,9 +113,8 @@ async function serve(deps: Deps): Promise<string> {
   return settings.publicUrl;
 }
 
-function demoWorkbooksOf(settings: Settings): string | null {
-  const folder = path.resolve(settings.dataDirectory, 'demo-workbooks');
-  return settings.seedDemo && existsSync(folder) ? folder : null;
+function demoWorkbooksOf({ seedDemo, dataDirectory }: Settings): string | null {
+  return seedDemo && demoWorkbooksAreWritten(dataDirectory) ? demoWorkbookFolder(dataDirectory) : null;
 }
 
 /** A signal, or the launcher's end of the channel closing because it was killed. */

@@ -1,4 +1,4 @@
-import exceljs from 'exceljs';
+import type exceljs from 'exceljs';
 import type { Finding } from '#rules/engine/finding';
 import { findingKey } from '#rules/engine/finding';
 import { formatDate } from '#shared/format/dates';
@@ -30,7 +30,9 @@ const columns = [
 
 /** Every finding as a row, with numbers as numbers. Text that a spreadsheet could run is neutralised. */
 export async function renderFindingsWorkbook(input: DocumentInput): Promise<Buffer> {
-  const workbook = new exceljs.Workbook();
+  // Large, and needed by few requests: loaded by the first of them.
+  const { default: library } = await import('exceljs');
+  const workbook = new library.Workbook();
   workbook.creator = neutralise(input.agency.name);
   addSummary(workbook, input);
   addFindings(workbook, input);

@@ -4,7 +4,7 @@ import { jobs } from '../db/schema/work';
 
 export type JobRow = typeof jobs.$inferSelect;
 
-export const leaseSeconds = 30;
+const leaseSeconds = 15;
 const leaseEnd = sql`utc_timestamp(3) + interval ${leaseSeconds} second`;
 /** Waiting, or left behind by a server that has not renewed its lease. */
 const claimable = or(

@@ -5,7 +5,7 @@ import type { Deps } from '../deps';
 import { Problem } from '../problem';
 import type { RawExchange } from '../routes/define-route';
 
-const leaseSeconds = 60;
+const leaseSeconds = 20;
 /**
  * The whole act is one transaction. By MariaDB's default it would go on seeing the rows as they were at its first
  * read, so that a look after taking a lock would miss what others wrote in between.
@@ -40,10 +40,12 @@ export async function idempotently({ raw, scope, run }: Act): Promise<unknown> {
         wake: { jobs: () => woken.add('jobs'), mail: () => woken.add('mail') },
       };
       const result = await run({ ...raw, deps: inner });
-      await tx
+      const [kept] = await tx
         .update(idempotencyKeys)
         .set({ status: 200, response: result, owner: null, leaseUntil: null })
         .where(and(ofScope(claim), eq(idempotencyKeys.owner, claim.owner)));
+      // Slower than its lease, and a repeat has taken over: one of the two acts may stand, and it is not this one.
+      if (kept.affectedRows !== 1) throw stillRunning();
       return result;
     }, readCommitted);
     for (const name of woken) deps.wake[name]();
@@ -88,7 +90,11 @@ async function claimKey(deps: Deps, claim: Claim): Promise<{ response: unknown }
     .set({ owner: claim.owner, leaseUntil: lease })
     .where(and(ofScope(claim), sql`${idempotencyKeys.leaseUntil} < utc_timestamp(3)`));
   if (takenOver[0].affectedRows === 1) return null;
-  throw new Problem('wrong-state', {
+  throw stillRunning();
+}
+
+function stillRunning(): Problem {
+  return new Problem('wrong-state', {
     detail: 'The same request is still being carried out.',
     fix: 'Wait a few seconds, then send it again with the same key.',
     retryAfterSeconds: 2,

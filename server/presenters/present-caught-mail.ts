@@ -1,4 +1,3 @@
-import { simpleParser } from 'mailparser';
 import type { z } from 'zod';
 import type { CaughtMail, caughtMailListItemSchema } from '#shared/contracts/caught-mail';
 import type { CaughtMailRow } from '../db/queries/caught-mails';
@@ -16,6 +15,7 @@ export function presentCaughtMailItem(row: CaughtMailRow): z.infer<typeof caught
 
 /** Parsed from the message as it came over the wire, as a mail program would. */
 export async function presentCaughtMail(row: CaughtMailRow & { source: Buffer }): Promise<CaughtMail> {
+  const { simpleParser } = await import('mailparser');
   const parsed = await simpleParser(row.source);
   return {
     ...presentCaughtMailItem(row),

@@ -3,7 +3,7 @@ import path from 'node:path';
 import { ensurePackages } from './lib/ensure-packages.mjs';
 import { holdInstance } from './lib/hold-instance.mjs';
 import { readInstance } from './lib/instance-lock.mjs';
-import { dataDirectory, startLocalDatabase } from './lib/local-instance.mjs';
+import { dataDirectory, localDatabaseEnv, startLocalDatabase } from './lib/local-instance.mjs';
 import { inRoot, root } from './lib/paths.mjs';
 import { stopPrivateDatabase } from './lib/private-database.mjs';
 import { LauncherError, runCommand } from './lib/run-command.mjs';
@@ -57,8 +57,8 @@ async function seed() {
 
 async function seedPrivate(directory) {
   await ensurePackages();
-  const database = await supervisor.begin(() => startLocalDatabase(directory, supervisor));
-  await runSeed({ ...database.env, CLAUSEWAY_INSTANCE: 'private', CLAUSEWAY_DATA: directory });
+  await supervisor.begin(() => startLocalDatabase(directory, supervisor));
+  await runSeed({ ...localDatabaseEnv(directory), CLAUSEWAY_INSTANCE: 'private', CLAUSEWAY_DATA: directory });
 }
 
 async function runSeed(env) {

@@ -3,7 +3,13 @@ import { watch } from 'node:fs';
 import path from 'node:path';
 import { ensurePackages } from './lib/ensure-packages.mjs';
 import { holdInstance } from './lib/hold-instance.mjs';
-import { choosePort, dataDirectory, spawnServer, startLocalDatabase } from './lib/local-instance.mjs';
+import {
+  choosePort,
+  dataDirectory,
+  localDatabaseEnv,
+  spawnServer,
+  startLocalDatabase,
+} from './lib/local-instance.mjs';
 import { inRoot, root } from './lib/paths.mjs';
 import { printWelcome } from './lib/print-welcome.mjs';
 import { freePort, stopProcess } from './lib/processes.mjs';
@@ -16,14 +22,14 @@ await supervisor.run(async () => {
   const lock = await holdInstance(supervisor, directory);
   if (!lock) return;
   await ensurePackages();
-  const database = await supervisor.begin(() => startLocalDatabase(directory, supervisor));
+  await supervisor.begin(() => startLocalDatabase(directory, supervisor));
   const webPort = await choosePort();
   const apiPort = await freePort();
   const logFile = path.join(directory, 'server.log');
   const server = keepServerFresh({
     logFile,
     env: {
-      ...database.env,
+      ...localDatabaseEnv(directory),
       NODE_ENV: 'development',
       PORT: String(apiPort),
       PUBLIC_URL: `http://127.0.0.1:${webPort}`,

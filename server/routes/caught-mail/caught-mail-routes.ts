@@ -1,4 +1,3 @@
-import { simpleParser } from 'mailparser';
 import { getCaughtMail, getCaughtMailFile, listCaughtMail } from '#shared/contracts/caught-mail';
 import { findCaughtMail, listCaughtMails } from '../../db/queries/caught-mails';
 import { presentCaughtMail, presentCaughtMailItem } from '../../presenters/present-caught-mail';
@@ -18,6 +17,7 @@ export const caughtMailRoutes = [
   openRoute(getCaughtMailFile, async ({ deps, params }) => {
     const mail = await findCaughtMail(deps.db, params.mailId);
     if (!mail) throw new Problem('not-found');
+    const { simpleParser } = await import('mailparser');
     const file = (await simpleParser(mail.source)).attachments[params.index];
     if (!file) throw new Problem('not-found');
     return {

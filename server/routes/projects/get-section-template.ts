@@ -2,7 +2,6 @@ import { getSectionTemplate } from '#shared/contracts/projects';
 import { sectionsOfProjects } from '../../db/queries/projects';
 import { loadResolvedEdition } from '../../db/resolved-edition';
 import { Problem } from '../../problem';
-import { writeTemplate } from '../../workbook/write-template';
 import { route } from '../define-route';
 import { loadProject } from './load-project';
 
@@ -15,6 +14,7 @@ export const getSectionTemplateRoute = route(
     if (!found) throw new Problem('not-found');
     const { resolvedHash } = found.section;
     const edition = await loadResolvedEdition(deps.db, resolvedHash);
+    const { writeTemplate } = await import('../../workbook/write-template');
     return {
       bytes: await writeTemplate(edition, { editionHash: resolvedHash, projectFacts: project.facts }),
       mediaType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',

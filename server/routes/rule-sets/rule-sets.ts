@@ -8,7 +8,6 @@ import type { Deps } from '../../deps';
 import { layersOf } from '../../policies/edition-dates';
 import { presentEdition } from '../../presenters/present-edition';
 import { ruleSetContents } from '../../presenters/rule-set-view';
-import { writeTemplate } from '../../workbook/write-template';
 import { route } from '../define-route';
 import { layerName, loadRuleSet } from './load-rule-set';
 
@@ -56,7 +55,7 @@ export const getRuleSetTemplateRoute = route(getRuleSetTemplate, async ({ deps, 
   // A filled-in template names this edition by its hash, so it has to be found again.
   const editionHash = await keepResolvedEdition(deps.db, deps, resolved);
   return {
-    bytes: await writeTemplate(resolved, { editionHash }),
+    bytes: await (await import('../../workbook/write-template')).writeTemplate(resolved, { editionHash }),
     mediaType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
     fileName: `${edition.ruleSetKey} ${edition.edition} template.xlsx`,
   };

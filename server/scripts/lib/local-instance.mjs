@@ -4,7 +4,7 @@ import path from 'node:path';
 import { ensureDebianPackages } from './ensure-debian-packages.mjs';
 import { databaseInitStatements, databaseUrls, localSecrets } from './local-settings.mjs';
 import { inRoot, root } from './paths.mjs';
-import { startPrivateDatabase, stopPrivateDatabase } from './private-database.mjs';
+import { databaseFiles, startPrivateDatabase, stopPrivateDatabase } from './private-database.mjs';
 import { portIsFree } from './processes.mjs';
 import { LauncherError } from './run-command.mjs';
 
@@ -13,23 +13,26 @@ export function dataDirectory() {
   return process.env.CLAUSEWAY_DATA ? path.resolve(process.env.CLAUSEWAY_DATA) : inRoot('.data');
 }
 
-/** Starts or finds the private MariaDB and returns the settings that point to it. */
+/** Starts or finds the private MariaDB. */
 export async function startLocalDatabase(directory, supervisor) {
   await ensureDebianPackages(['mariadb-server']);
   const secrets = localSecrets(directory);
-  const database = await startPrivateDatabase({
+  await startPrivateDatabase({
     directory,
     initStatements: databaseInitStatements(secrets),
     throwaway: process.env.CLAUSEWAY_THROWAWAY === 'yes',
   });
   supervisor.onStop(() => stopPrivateDatabase(directory));
+}
+
+/** The settings that point a server to the private MariaDB of a directory, whether or not it is up yet. */
+export function localDatabaseEnv(directory) {
+  const secrets = localSecrets(directory);
+  const { socket, pidFile } = databaseFiles(directory);
   return {
-    reused: database.reused,
-    env: {
-      ...databaseUrls(secrets, database.socket),
-      SESSION_SECRET: secrets.session,
-      CLAUSEWAY_DATABASE_PID_FILE: database.pidFile,
-    },
+    ...databaseUrls(secrets, socket),
+    SESSION_SECRET: secrets.session,
+    CLAUSEWAY_DATABASE_PID_FILE: pidFile,
   };
 }
 

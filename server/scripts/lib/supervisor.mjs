@@ -52,11 +52,3 @@ export function createSupervisor() {
     },
   };
 }
-
-/** All or the first failure, but never before everything has settled: a half-started thing is then known. */
-export async function allSettledOrThrow(promises) {
-  const results = await Promise.allSettled(promises);
-  const failed = results.find((result) => result.status === 'rejected');
-  if (failed) throw failed.reason;
-  return results.map((result) => result.value);
-}
