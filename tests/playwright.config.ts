@@ -1,4 +1,5 @@
 import { defineConfig } from '@playwright/test';
+import { demoPort, emptyPort } from './e2e/instances';
 
 const flags = [
   '--headless',
@@ -10,10 +11,6 @@ const flags = [
   '--disable-component-update',
   '--disable-sync',
 ];
-
-/** Two fresh instances of the product: one with the demo, one that has had no first day yet. */
-export const demoPort = 4190;
-export const emptyPort = 4191;
 
 const instance = (port: number, { demo }: { demo: boolean }) => ({
   command: 'node server/scripts/throwaway-instance.mjs',
@@ -36,6 +33,7 @@ export default defineConfig({
     launchOptions: { executablePath: '/usr/bin/chromium', args: flags },
     viewport: { width: 1440, height: 900 },
     trace: 'retain-on-failure',
+    actionTimeout: 15_000,
   },
   projects: [
     { name: 'demo', testIgnore: '**/first-day.spec.ts' },

@@ -86,7 +86,7 @@ export function sourceWords(source: RuleSource | null): string | null {
   const section = source.section ? `section ${source.section}` : null;
   const parts = [source.number, source.title, source.edition, section].filter((part) => part);
   const text = parts.join(', ');
-  if (source.origin !== 'memory') return text === '' ? null : text;
+  if (source.origin !== 'memory' || text.includes('from memory')) return text === '' ? null : text;
   return text === '' ? 'From memory, verify' : `${text}; from memory, verify`;
 }
 

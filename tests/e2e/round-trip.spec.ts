@@ -1,26 +1,22 @@
 import { execFileSync } from 'node:child_process';
-import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import { mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { expect, type Page, test } from '@playwright/test';
 import exceljs from 'exceljs';
-import { demoWorkbooks } from '../workbooks/demo/write-demo-workbooks';
+import { demoPort, instanceDirectory } from './instances';
 import { asPerson, expectAccessible, expectNoSidewaysScroll } from './support';
 
 const mix = 'BW-125-J1';
 const internalWord = 'Tollhouse sent last year’s report; ask quietly.';
 const returnedWord = 'The ratio divides by total binder. Please correct V20.';
 
+/** As the start wrote it for people to upload by hand. */
 async function workbook(name: string): Promise<{ name: string; mimeType: string; buffer: Buffer }> {
-  const today = new Date().toISOString().slice(0, 10);
-  const found = (await demoWorkbooks({ submittedOn: today, lettingOn: '2026-01-14' })).find(
-    (each) => each.name === name,
-  );
-  if (found === undefined) throw new Error(`The demo has no workbook ${name}.`);
   return {
     name,
     mimeType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
-    buffer: found.bytes,
+    buffer: await readFile(join(instanceDirectory(demoPort), 'demo-workbooks', name)),
   };
 }
 
@@ -63,7 +59,7 @@ test('a mix design goes from upload to approval, with a return and a revision in
   await expect(manager.getByText('divides by total, not effective, binder').first()).toBeVisible();
   await expectAccessible(manager);
   await manager.goto(`${findings}/gradation`);
-  await expect(manager.getByRole('img', { name: /gradation/i }).first()).toBeVisible();
+  await expect(manager.getByRole('figure').first()).toBeVisible();
   await expectAccessible(manager);
 
   await manager.goto(findings);

@@ -3,6 +3,7 @@ import { useEffect, useMemo } from 'react';
 import { RouterProvider } from 'react-router-dom';
 import { Announcer } from '../components/ui/announcer';
 import { queryClient } from '../lib/client';
+import { reportFault } from '../lib/problem';
 import { listenForShortcuts } from '../lib/shortcuts';
 import { createRouter } from './router';
 
@@ -11,7 +12,7 @@ export function App() {
   useEffect(() => listenForShortcuts(document), []);
   return (
     <QueryClientProvider client={queryClient}>
-      <RouterProvider router={router} />
+      <RouterProvider router={router} onError={reportFault} />
       <Announcer />
     </QueryClientProvider>
   );

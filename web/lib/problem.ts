@@ -62,3 +62,8 @@ export function asProblem(error: unknown): Problem {
     requestId: null,
   });
 }
+
+/** A problem that the page shows with its remedy is no fault of the page; anything else is. */
+export function reportFault(error: unknown): void {
+  if (!(error instanceof Problem)) reportError(error);
+}

@@ -94,9 +94,13 @@ function LetterItem({
         isDisabled={!canChange}
         onChange={onInclude}
       />
-      <Link className="plain letter-clause" to={address}>
-        {finding.clause ?? ''}
-      </Link>
+      {finding.clause === null ? (
+        <span className="letter-clause" />
+      ) : (
+        <Link className="plain letter-clause" to={address}>
+          {finding.clause}
+        </Link>
+      )}
       <span>
         {title} {rest}
         {item.waived === null ? '' : `, waived: ${item.waived}`}{' '}
