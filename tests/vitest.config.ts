@@ -7,6 +7,8 @@ export default defineConfig({
   root,
   plugins: [react()],
   test: {
+    // By default one core would stay idle, of the two that every machine for this has.
+    maxWorkers: 2,
     projects: [
       {
         extends: true,
