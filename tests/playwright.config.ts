@@ -34,6 +34,7 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     trace: 'retain-on-failure',
     actionTimeout: 15_000,
+    navigationTimeout: 30_000,
   },
   projects: [
     { name: 'demo', testIgnore: '**/first-day.spec.ts' },
