@@ -40,20 +40,14 @@ test('an empty database gets its agency, people, contractor, project and section
     .getByRole('textbox', { name: 'E-mail address', exact: true })
     .fill('piers.holt@mere-fen.example');
   await administrator.getByText('reviewer', { exact: true }).last().click();
-  await administrator
-    .getByRole('button', { name: /^Invite/ })
-    .first()
-    .click();
+  await administrator.getByRole('button', { name: 'Send the invitation' }).first().click();
   await expect(administrator.getByText('piers.holt@mere-fen.example')).toBeVisible();
   await administrator.getByRole('textbox', { name: 'Name of the firm' }).fill('Staithe Surfacing');
   await administrator.getByRole('textbox', { name: 'Administrator', exact: true }).fill('Nell Rowan');
   await administrator
     .getByRole('textbox', { name: /Administrator.s e-mail/ })
     .fill('nell.rowan@staithe.example');
-  await administrator
-    .getByRole('button', { name: /contractor/i })
-    .last()
-    .click();
+  await administrator.getByRole('button', { name: 'Add the contractor' }).last().click();
   await expect(administrator.getByText('Staithe Surfacing').first()).toBeVisible();
 
   await administrator.goto('/projects/new');

@@ -25,7 +25,7 @@ function SectionItem({ project, section }: { project: Project; section: Section 
     <li className="project-section">
       <p>
         <b>
-          <Link className="plain" to={paths.ruleSet(base.ruleSet, base.edition, layers.map(editionKey))}>
+          <Link className="plain inline-block py-1" to={paths.ruleSet(base.ruleSet, base.edition, layers.map(editionKey))}>
             {base.title}, edition {base.edition}
           </Link>
         </b>
@@ -36,7 +36,7 @@ function SectionItem({ project, section }: { project: Project; section: Section 
           {layers.map((layer) => (
             <li key={editionKey(layer)}>
               with{' '}
-              <Link className="plain" to={paths.ruleSet(layer.ruleSet, layer.edition)}>
+              <Link className="plain inline-block py-1" to={paths.ruleSet(layer.ruleSet, layer.edition)}>
                 {layer.title}, edition {layer.edition}
               </Link>
             </li>
