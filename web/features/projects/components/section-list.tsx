@@ -25,7 +25,10 @@ function SectionItem({ project, section }: { project: Project; section: Section 
     <li className="project-section">
       <p>
         <b>
-          <Link className="plain inline-block py-1" to={paths.ruleSet(base.ruleSet, base.edition, layers.map(editionKey))}>
+          <Link
+            className="plain inline-block py-1"
+            to={paths.ruleSet(base.ruleSet, base.edition, layers.map(editionKey))}
+          >
             {base.title}, edition {base.edition}
           </Link>
         </b>
