@@ -1,10 +1,10 @@
 import type exceljs from 'exceljs';
 import type { Finding } from '#rules/engine/finding';
 import { findingKey } from '#rules/engine/finding';
+import { cautionsFor } from '#shared/cautions';
 import { formatDate } from '#shared/format/dates';
 import { mayLeaveOut, nextActHeadings, nextActOf } from '#shared/next-acts';
 import { neutralise } from '../workbook/neutralise';
-import { cautionsFor } from './cautions';
 import type { DocumentInput } from './document-input';
 
 const columns = [

@@ -1,7 +1,7 @@
 import type { Content, TableCell, TDocumentDefinitions } from 'pdfmake/interfaces';
+import { cautionsFor } from '#shared/cautions';
 import { formatDate } from '#shared/format/dates';
 import { nextActHeadings, nextActs } from '#shared/next-acts';
-import { cautionsFor } from './cautions';
 import type { DocumentInput, DocumentItem } from './document-input';
 import { gaugeSvg } from './gauge-svg';
 import { groupTally, introduction } from './letter-words';

@@ -90,8 +90,6 @@ export const ruleSetViewSchema = editionListItemSchema.extend({
   caseCount: z.number().int(),
   hash: z.string(),
   templateHref: z.string(),
-  /** Caution shown with a shipped starting point. */
-  caution: z.string().nullable(),
 });
 
 const editionParams = z.strictObject({ ruleSetId: z.string().max(80), edition: z.string().max(40) });

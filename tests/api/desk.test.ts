@@ -196,7 +196,7 @@ describe('rule sets', () => {
     expect(table?.columns.some(({ key }) => key)).toBe(true);
     expect(table?.rows.every(({ cells }) => cells.length === table.columns.length)).toBe(true);
     expect(edition.ruleViews.every(({ source }) => source !== '')).toBe(true);
-    expect(edition.caution).toMatch(/Starting point/);
+    expect(edition.startingPoint).toBe(true);
   });
 
   it('apply the chosen layers: added, displaced and removed rules are named with their document', async () => {

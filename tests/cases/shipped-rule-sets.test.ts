@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { isTableReference } from '#rules/rule-sets/bounds-of';
 import { layerSchema, type Rule, type RuleSet, ruleSetSchema } from '#rules/rule-sets/schema';
 import type { LimitTable, RuleSource } from '#rules/rule-sets/table';
-import { shippedRuleSets, startingPointCaution } from '#rules/sets/shipped-rule-sets';
+import { shippedRuleSets } from '#rules/sets/shipped-rule-sets';
 
 const editions = new Map(['2024', '2026', '2027'].map((edition) => [edition, editionOf(edition)] as const));
 const supplement = layerSchema.parse(documentOf('cvra-412-s07-2026.json'));
@@ -142,10 +142,6 @@ describe('Supplement S-07', () => {
       expect(source).toMatchObject({ number: 'CVRA S-07', origin: 'agency' });
     }
   });
-});
-
-it('calls every shipped rule set a starting point', () => {
-  expect(startingPointCaution).toMatch(/^Starting point: /);
 });
 
 function documentOf(file: string): unknown {

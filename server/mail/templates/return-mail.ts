@@ -1,5 +1,5 @@
+import { cautionsFor } from '#shared/cautions';
 import { type NextAct, nextActHeadings, nextActs } from '#shared/next-acts';
-import { cautionsFor } from '../../documents/cautions';
 import type { DocumentInput, DocumentItem } from '../../documents/document-input';
 import { introduction } from '../../documents/letter-words';
 import { type MailContent, mailContent } from './mail-content';

@@ -1,4 +1,3 @@
-import { startingPointCaution } from '#rules/sets/shipped-rule-sets';
 import { getRuleSet, getRuleSetTemplate, listRuleSets } from '#shared/contracts/rule-sets';
 import { dateOfInstant } from '#shared/format/dates';
 import { keepResolvedEdition } from '../../commands/projects/resolve-section';
@@ -46,7 +45,6 @@ export const getRuleSetRoute = route(getRuleSet, async ({ deps, actor, params, q
     caseCount: resolved.cases.length,
     hash,
     templateHref: templateHref(params, layers.map(layerName)),
-    caution: edition.startingPoint ? startingPointCaution : null,
   };
 });
 

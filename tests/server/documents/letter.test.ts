@@ -79,7 +79,7 @@ describe('the letter of a return', () => {
   it('says the cautions and that the rule set is a starting point', async () => {
     const text = textOf(await renderPdf(letterDefinition(aDocumentInput({ findings })))).replace(/\s+/g, ' ');
     expect(text).toContain('Findings assist a qualified person and decide nothing by themselves.');
-    expect(text).toContain('The contract documents and local codes govern.');
-    expect(text).toContain('starting point');
+    expect(text).toContain('The contract documents and local codes govern;');
+    expect(text).toContain('Starting point: check every limit');
   });
 });

@@ -50,6 +50,7 @@ describe('a form over a contract', () => {
     fireEvent.click(screen.getByText('Keep'));
     await waitFor(() => expect(screen.getByText('Enter a name.')).toBeTruthy());
     expect(screen.getByLabelText('Name').getAttribute('aria-invalid')).toBe('true');
+    expect(document.activeElement).toBe(screen.getByLabelText('Name'));
     expect(sent).toEqual([]);
   });
 

@@ -1,16 +1,7 @@
 import type { ReactNode } from 'react';
-import {
-  Button,
-  ComboBox,
-  FieldError,
-  Input,
-  Label,
-  ListBox,
-  ListBoxItem,
-  Popover,
-  Text,
-} from 'react-aria-components';
-import { FieldErrorLine } from './field';
+import { Button, ComboBox, Input, ListBox, ListBoxItem, Popover } from 'react-aria-components';
+import type { FocusRef } from './field';
+import { FieldFrame } from './field-frame';
 
 /** One of many choices, found by typing a part of it. */
 export function ComboField({
@@ -22,6 +13,7 @@ export function ComboField({
   onBlur,
   help,
   error,
+  focusRef,
 }: {
   label: string;
   name: string;
@@ -31,6 +23,7 @@ export function ComboField({
   onBlur?: () => void;
   help?: ReactNode;
   error?: string | undefined;
+  focusRef?: FocusRef;
 }) {
   return (
     <ComboBox
@@ -44,25 +37,16 @@ export function ComboField({
       isInvalid={error !== undefined}
       menuTrigger="input"
     >
-      <Label className="field-label">{label}</Label>
-      <div className="field-control">
+      <FieldFrame label={label} help={help} error={error}>
         <span className="combo">
-          <Input className="input input-middle" name={name} />
+          <Input ref={focusRef} className="input input-middle" name={name} />
           <Button className="combo-button">
             <svg className="select-arrow" viewBox="0 0 8 5" aria-hidden="true">
               <path d="M0 0H8L4 5Z" fill="currentColor" />
             </svg>
           </Button>
         </span>
-        {help ? (
-          <Text slot="description" className="field-help">
-            {help}
-          </Text>
-        ) : null}
-        <FieldError className="field-error-slot">
-          {error === undefined ? null : <FieldErrorLine>{error}</FieldErrorLine>}
-        </FieldError>
-      </div>
+      </FieldFrame>
       <Popover className="popover" offset={2}>
         <ListBox className="list-box">
           {choices.map((choice) => (

@@ -26,3 +26,17 @@ export function FieldErrorLine({ children }: { children: ReactNode }) {
     </span>
   );
 }
+
+/** Where a form puts the focus when this field is the first in error. */
+export type FocusRef = (target: { focus: () => void } | null) => void;
+
+/** For a control that is a group: its chosen or first part takes the focus. */
+export function focusWithin(focusRef: FocusRef | undefined): (element: HTMLElement | null) => void {
+  return (element) =>
+    focusRef?.(
+      element && {
+        focus: () =>
+          element.querySelector<HTMLElement>('input:checked, input:not([type=hidden]), button')?.focus(),
+      },
+    );
+}

@@ -29,6 +29,7 @@ export function FormChoice<Values extends FieldValues, Output>({
           choices,
           value,
           onChange: field.onChange,
+          focusRef: field.ref,
           error: fieldState.error ? wanted(value, label, fieldState.error.message) : undefined,
           ...(help ? { help } : {}),
         };

@@ -27,6 +27,7 @@ export function FormText<Values extends FieldValues, Output>({
           value={field.value === null || field.value === undefined ? '' : String(field.value)}
           onChange={(text) => field.onChange(number ? numberOf(text) : text)}
           onBlur={field.onBlur}
+          focusRef={field.ref}
           error={fieldState.error?.message}
           {...(number ? { inputMode: 'decimal', size: props.size ?? 'number' } : {})}
         />
@@ -54,6 +55,7 @@ export function FormRadioLine<Values extends FieldValues, Output, Value extends 
           {...props}
           value={field.value ?? null}
           onChange={field.onChange}
+          focusRef={field.ref}
           error={fieldState.error?.message}
         />
       )}

@@ -17,6 +17,7 @@ export function FormSelect<Values extends FieldValues, Output, Value extends str
           {...props}
           value={field.value ?? null}
           onChange={field.onChange}
+          focusRef={field.ref}
           error={fieldState.error?.message}
         />
       )}

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
-import { FieldError, Label, Radio, RadioGroup, Text } from 'react-aria-components';
-import { FieldErrorLine } from './field';
+import { Radio, RadioGroup } from 'react-aria-components';
+import { type FocusRef, focusWithin } from './field';
+import { FieldFrame } from './field-frame';
 import type { Choice } from './select-field';
 
 /** Up to four choices, all in sight. */
@@ -14,6 +15,7 @@ export function RadioLine<Value extends string>({
   hideLabel = false,
   column = false,
   isDisabled = false,
+  focusRef,
 }: {
   label: string;
   choices: readonly Choice<Value>[];
@@ -25,9 +27,11 @@ export function RadioLine<Value extends string>({
   /** One under the other, where the words are long. */
   column?: boolean;
   isDisabled?: boolean;
+  focusRef?: FocusRef;
 }) {
   return (
     <RadioGroup
+      ref={focusWithin(focusRef)}
       className={hideLabel ? 'field-bare' : 'field'}
       value={value}
       onChange={(key) => {
@@ -38,8 +42,7 @@ export function RadioLine<Value extends string>({
       isDisabled={isDisabled}
       orientation={column ? 'vertical' : 'horizontal'}
     >
-      <Label className={hideLabel ? 'hidden-text' : 'field-label'}>{label}</Label>
-      <div className="field-control">
+      <FieldFrame label={label} hideLabel={hideLabel} help={help} error={error}>
         <div className={column ? 'choice-column' : 'choice-line'}>
           {choices.map((choice) => (
             <Radio key={choice.value} value={choice.value} className="choice choice-radio">
@@ -48,15 +51,7 @@ export function RadioLine<Value extends string>({
             </Radio>
           ))}
         </div>
-        {help ? (
-          <Text slot="description" className="field-help">
-            {help}
-          </Text>
-        ) : null}
-        <FieldError className="field-error-slot">
-          {error === undefined ? null : <FieldErrorLine>{error}</FieldErrorLine>}
-        </FieldError>
-      </div>
+      </FieldFrame>
     </RadioGroup>
   );
 }

@@ -2,15 +2,13 @@ import type { ReactNode } from 'react';
 import {
   Select as AriaSelect,
   Button,
-  FieldError,
-  Label,
   ListBox,
   ListBoxItem,
   Popover,
   SelectValue,
-  Text,
 } from 'react-aria-components';
-import { FieldErrorLine } from './field';
+import { type FocusRef, focusWithin } from './field';
+import { FieldFrame } from './field-frame';
 
 export interface Choice<Value extends string> {
   value: Value;
@@ -29,6 +27,7 @@ export function SelectField<Value extends string>({
   placeholder = 'choose',
   hideLabel = false,
   isDisabled = false,
+  focusRef,
 }: {
   label: string;
   choices: readonly Choice<Value>[];
@@ -39,9 +38,11 @@ export function SelectField<Value extends string>({
   placeholder?: string;
   hideLabel?: boolean;
   isDisabled?: boolean;
+  focusRef?: FocusRef;
 }) {
   return (
     <AriaSelect
+      ref={focusWithin(focusRef)}
       className={hideLabel ? 'field-bare' : 'field'}
       placeholder={placeholder}
       value={value}
@@ -52,23 +53,14 @@ export function SelectField<Value extends string>({
       isInvalid={error !== undefined}
       isDisabled={isDisabled}
     >
-      <Label className={hideLabel ? 'hidden-text' : 'field-label'}>{label}</Label>
-      <div className="field-control">
+      <FieldFrame label={label} hideLabel={hideLabel} help={help} error={error}>
         <Button className="select-button">
           <SelectValue />
           <svg className="select-arrow" viewBox="0 0 8 5" aria-hidden="true">
             <path d="M0 0H8L4 5Z" fill="currentColor" />
           </svg>
         </Button>
-        {help ? (
-          <Text slot="description" className="field-help">
-            {help}
-          </Text>
-        ) : null}
-        <FieldError className="field-error-slot">
-          {error === undefined ? null : <FieldErrorLine>{error}</FieldErrorLine>}
-        </FieldError>
-      </div>
+      </FieldFrame>
       <Popover className="popover" offset={2}>
         <ListBox className="list-box" items={choices}>
           {(choice) => (

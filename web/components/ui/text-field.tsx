@@ -2,13 +2,11 @@ import type { ReactNode } from 'react';
 import {
   TextField as AriaTextField,
   type TextFieldProps as AriaTextFieldProps,
-  FieldError,
   Input,
-  Label,
-  Text,
   TextArea,
 } from 'react-aria-components';
-import { FieldErrorLine } from './field';
+import type { FocusRef } from './field';
+import { FieldFrame } from './field-frame';
 
 export interface TextFieldProps extends Omit<AriaTextFieldProps, 'children' | 'className' | 'isInvalid'> {
   label: string;
@@ -22,6 +20,7 @@ export interface TextFieldProps extends Omit<AriaTextFieldProps, 'children' | 'c
   inputMode?: 'decimal' | 'numeric' | 'email' | 'text';
   /** True in a table or beside other words that already name it for the eye. */
   hideLabel?: boolean;
+  focusRef?: FocusRef;
 }
 
 export function TextField({
@@ -33,28 +32,25 @@ export function TextField({
   rows,
   inputMode,
   hideLabel = false,
+  focusRef,
   ...props
 }: TextFieldProps) {
   const control =
     rows === undefined ? (
-      <Input className={`input input-${size}`} placeholder={placeholder} inputMode={inputMode} />
+      <Input
+        ref={focusRef}
+        className={`input input-${size}`}
+        placeholder={placeholder}
+        inputMode={inputMode}
+      />
     ) : (
-      <TextArea className="input" rows={rows} placeholder={placeholder} />
+      <TextArea ref={focusRef} className="input" rows={rows} placeholder={placeholder} />
     );
   return (
     <AriaTextField {...props} isInvalid={error !== undefined} className={hideLabel ? 'field-bare' : 'field'}>
-      <Label className={hideLabel ? 'hidden-text' : 'field-label'}>{label}</Label>
-      <div className="field-control">
+      <FieldFrame label={label} hideLabel={hideLabel} help={help} error={error}>
         {control}
-        {help ? (
-          <Text slot="description" className="field-help">
-            {help}
-          </Text>
-        ) : null}
-        <FieldError className="field-error-slot">
-          {error === undefined ? null : <FieldErrorLine>{error}</FieldErrorLine>}
-        </FieldError>
-      </div>
+      </FieldFrame>
     </AriaTextField>
   );
 }

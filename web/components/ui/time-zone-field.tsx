@@ -21,6 +21,7 @@ export function TimeZoneField<Values extends FieldValues, Output>({
           value={String(field.value ?? '')}
           onChange={field.onChange}
           onBlur={field.onBlur}
+          focusRef={field.ref}
           error={fieldState.error?.message}
           help="type a part of it; dates and the review clock follow it"
         />

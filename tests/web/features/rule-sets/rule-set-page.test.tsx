@@ -63,7 +63,6 @@ function aView(overrides: Partial<RuleSetView> = {}): RuleSetView {
     caseCount: 12,
     hash: 'a'.repeat(64),
     templateHref: '/api/rule-sets/cvra-412/2026/template.xlsx',
-    caution: 'Starting point: check every limit.',
     ...overrides,
   });
 }

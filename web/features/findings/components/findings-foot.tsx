@@ -1,6 +1,6 @@
+import { cautions } from '#shared/cautions';
 import { formatInstant } from '#shared/format/dates';
 import { Button, LinkButton } from '../../../components/ui/button';
-import { cautions } from '../../../components/ui/cautions';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { paths } from '../../../lib/paths';
 import { useProveSeal } from '../api/prove-seal';

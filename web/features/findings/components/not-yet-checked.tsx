@@ -1,6 +1,6 @@
 import { Link } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { Revision } from '#shared/contracts/submittals';
-import { cautions } from '../../../components/ui/cautions';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { LoadingBars } from '../../../components/ui/loading-bars';
 import { PlainPage } from '../../../components/ui/margin-page';

@@ -1,8 +1,8 @@
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import { findingFragment } from '#shared/format/finding-key';
 import { Button } from '../../../components/ui/button';
-import { cautions } from '../../../components/ui/cautions';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';

@@ -1,8 +1,8 @@
 import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import { formatDateWithWeekday } from '#shared/format/dates';
 import { LinkButton } from '../../../components/ui/button';
-import { cautions } from '../../../components/ui/cautions';
 import { FileDrop } from '../../../components/ui/file-drop';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';

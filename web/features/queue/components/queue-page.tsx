@@ -1,8 +1,8 @@
 import { useRef, useState } from 'react';
 import { useNavigate } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { QueueItem } from '#shared/contracts/queue';
 import { formatDateWithWeekday } from '#shared/format/dates';
-import { cautions } from '../../../components/ui/cautions';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';

@@ -1,9 +1,9 @@
 import { Link } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import { getReturnWorkbook, type ReturnView } from '#shared/contracts/returns';
 import type { Revision } from '#shared/contracts/submittals';
 import { dateOfInstant, formatDate, formatInstant } from '#shared/format/dates';
 import { LinkButton } from '../../../components/ui/button';
-import { cautions } from '../../../components/ui/cautions';
 import { Mark } from '../../../components/ui/mark';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';

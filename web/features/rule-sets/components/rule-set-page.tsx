@@ -1,8 +1,8 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { useLocation, useParams, useSearchParams } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { RuleSetView } from '#shared/contracts/rule-sets';
-import { cautions } from '../../../components/ui/cautions';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { SectionHead } from '../../../components/ui/section-head';
@@ -63,10 +63,7 @@ export function RuleSetPage() {
 }
 
 function footTexts(view: RuleSetView): string[] {
-  const texts = [
-    stateCaution(view.state),
-    view.startingPoint ? (view.caution ?? cautions.startingPoint) : null,
-  ];
+  const texts = [stateCaution(view.state), view.startingPoint ? cautions.startingPoint : null];
   const said = texts.filter((text) => text !== null);
   return said.length > 0 ? said : [cautions.contract];
 }

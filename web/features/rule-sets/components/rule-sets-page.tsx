@@ -1,7 +1,7 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { Link } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { EditionListItem } from '#shared/contracts/rule-sets';
-import { cautions } from '../../../components/ui/cautions';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';

@@ -1,8 +1,8 @@
 import { Link } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { SubmittalListItem } from '#shared/contracts/submittals';
 import { formatDateShort, formatInstantShort } from '#shared/format/dates';
 import { Button, LinkButton } from '../../../components/ui/button';
-import { cautions } from '../../../components/ui/cautions';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { OutcomeTally } from '../../../components/ui/outcome-tally';
