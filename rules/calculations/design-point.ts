@@ -22,15 +22,48 @@ export interface TrialPoint {
  * @example propertyAt([[4, 14.9], [4.5, 14.6], [5, 14.5], [5.5, 14.7], [6, 15.1]], 4.95795, 'quadratic') // 14.5138
  */
 export function propertyAt(points: readonly TrialPoint[], Pb: number, method: FitMethod): NumericResult {
+  const curve = propertyCurve(points, method);
+  if (!curve.ok) return curve;
+  if (Pb < curve.from || Pb > curve.to) return cannot('the binder content lies beyond the trials');
+  return curve.at(Pb);
+}
+
+/** A property over all tested binder contents. */
+export interface PropertyCurve {
+  ok: true;
+  method: FitMethod;
+  /** Least and greatest tested content, %. */
+  from: number;
+  to: number;
+  /** Contents at which the property may stop rising or falling, in rising order; between two it does neither. */
+  turns: number[];
+  at(Pb: number): NumericResult;
+}
+
+/**
+ * The curve that `propertyAt` reads: fitted once, to be read at many binder contents between `from` and `to`.
+ *
+ * @example propertyCurve([[4, 14.9], [4.5, 14.6], [5, 14.5], [5.5, 14.7], [6, 15.1]], 'quadratic').turns // [4.9]
+ */
+export function propertyCurve(
+  points: readonly TrialPoint[],
+  method: FitMethod,
+): PropertyCurve | { ok: false; reason: string } {
   const contents = points.map((point) => point.Pb);
   const values = points.map((point) => point.value);
   if (new Set(contents).size < 2) return cannot('there are fewer than two trial binder contents');
-  if (Pb < Math.min(...contents) || Pb > Math.max(...contents)) {
-    return cannot('the binder content lies beyond the trials');
+  const ends = { from: Math.min(...contents), to: Math.max(...contents) };
+  if (!isQuadratic(contents, method)) {
+    const turns = [...new Set(contents)].filter((Pb) => Pb > ends.from && Pb < ends.to).sort((a, b) => a - b);
+    return { ok: true, method: 'linear', ...ends, turns, at: (Pb) => interpolate(contents, values, Pb) };
   }
-  if (!isQuadratic(contents, method)) return interpolate(contents, values, Pb);
   const fit = leastSquares(contents, values, 2);
-  return fit.ok ? known(polynomialAt(fit.coefficients, Pb)) : fit;
+  if (!fit.ok) return fit;
+  const [, slope = 0, curve = 0] = fit.coefficients;
+  const turn = -slope / (2 * curve);
+  const turns = turn > ends.from && turn < ends.to ? [turn] : [];
+  const at = (Pb: number) => known(polynomialAt(fit.coefficients, Pb));
+  return { ok: true, method: 'quadratic', ...ends, turns, at };
 }
 
 /**

@@ -1,7 +1,7 @@
 import type { MixRecord } from '../record';
 import type { Analysis, AnalysisOptions, RecomputedValue } from './analysis';
 import { type AggregateNodes, aggregates, blendChoice } from './analysis-aggregate';
-import { designFromTrials, designPointOf, type TrialValues } from './analysis-design';
+import { designFromTrials, designPointOf, type TrialValues, testedContents } from './analysis-design';
 import { fieldVoidsOf } from './analysis-field';
 import { designTrial, indexRecord, type RecordIndex } from './analysis-index';
 import type { AnalysisNode } from './analysis-node';
@@ -27,7 +27,7 @@ export function analyse(record: MixRecord, options: AnalysisOptions): Analysis {
     ...publish(designNodes, [...design.context, ...fromTrials], index),
     ...agencyValues(record),
   ];
-  return { recomputed, designPoint: point };
+  return { recomputed, designPoint: point, testedContents: testedContents(trials, design) };
 }
 
 interface Trial extends TrialValues {

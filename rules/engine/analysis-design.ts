@@ -1,7 +1,7 @@
 import Decimal from 'decimal.js';
 import { designBinderContent, isQuadratic, propertyAt, type TrialPoint } from '../calculations/design-point';
 import { quantityById } from '../quantities/registry';
-import type { AnalysisOptions, DesignPoint } from './analysis';
+import type { AnalysisOptions, DesignPoint, TestedContent } from './analysis';
 import { designTrial } from './analysis-index';
 import { type AnalysisNode, derivedNode } from './analysis-node';
 
@@ -16,7 +16,7 @@ export interface TrialValues {
 const sameContentPercent = 0.05;
 
 /** Smooth in binder content, so that a fit over trials means something. */
-const fittedQuantities = new Set([
+export const fittedQuantities: ReadonlySet<string> = new Set([
   'effective-specific-gravity-aggregate',
   'absorbed-binder',
   'effective-binder-content',
@@ -80,6 +80,20 @@ export function designFromTrials(
     const missing = !own.some((node) => node.quantity === quantity);
     return missing ? (fitted(trials, quantity, declared, options) ?? []) : [];
   });
+}
+
+/**
+ * Where values at another binder content can be read from. The design counts where it was compacted itself at a
+ * content that no trial stands for; else its readings would weigh twice.
+ */
+export function testedContents(trials: TrialValues[], design: TrialValues): TestedContent[] {
+  const ownDesign = design.pb !== null && trialAt(trials, design.pb) === null ? [design] : [];
+  return [...trials, ...ownDesign]
+    .flatMap(({ trial, pb, nodes }): TestedContent[] => {
+      const values = nodes.filter((node) => fittedQuantities.has(node.quantity) && isPlain(node));
+      return pb === null || values.length === 0 ? [] : [{ trial, binderContent: pb, values }];
+    })
+    .toSorted((a, b) => a.binderContent.value - b.binderContent.value);
 }
 
 function fitted(

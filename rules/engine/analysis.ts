@@ -1,4 +1,5 @@
 import type { Conditions, Reading } from '../record';
+import type { AnalysisNode } from './analysis-node';
 import type { Evidence } from './finding';
 
 /** A named mistake that reproduces a reported value to its displayed digits. */
@@ -45,9 +46,18 @@ export interface DesignPoint {
   trial: string | null;
 }
 
+/** A tested binder content with what its own raw readings give. */
+export interface TestedContent {
+  trial: string;
+  binderContent: AnalysisNode;
+  values: AnalysisNode[];
+}
+
 export interface Analysis {
   recomputed: RecomputedValue[];
   designPoint: DesignPoint;
+  /** In rising order of binder content; the design among them where it was tested itself. */
+  testedContents: TestedContent[];
 }
 
 export interface AnalysisOptions {

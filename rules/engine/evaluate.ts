@@ -9,6 +9,7 @@ import { summarise } from './disposition';
 import { evaluateRule } from './evaluate-rule';
 import { type CheckResult, type Finding, findingKey, type RecomputedReading } from './finding';
 import { byClauseThenSubject } from './order';
+import { roomToMove } from './room-to-move';
 import { sealOf } from './seal';
 import { type World, worldOf } from './world';
 
@@ -31,7 +32,7 @@ export function evaluate(record: MixRecord, edition: ResolvedEdition, context: C
         targetAirVoids: analysis.designPoint.targetAirVoids,
         fit: analysis.designPoint.fit,
       },
-      roomToMove: null,
+      roomToMove: roomToMove(world),
       creep: [],
     },
     summary: summarise(findings),

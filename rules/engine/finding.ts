@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { conditionsSchema, originSchema, readingSchema, sourceSchema } from '../record';
+import { roomToMoveSchema } from './room';
 
 export const outcomeSchema = z.enum(['pass', 'fail', 'not shown', 'undecided', 'not applicable']);
 export const severitySchema = z.enum(['required', 'advisory']);
@@ -155,7 +156,8 @@ export const checkResultSchema = z.strictObject({
         fit: z.string(),
       })
       .nullable(),
-    roomToMove: z.null(),
+    /** Null where the edition chose no rules for it, and in checks by engines that did not compute it. */
+    roomToMove: roomToMoveSchema.nullable(),
     creep: z.array(z.never()),
   }),
   summary: summarySchema,

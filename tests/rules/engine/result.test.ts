@@ -26,6 +26,7 @@ const nothingComputed: Analysis = {
     fit: 'quadratic',
     trial: null,
   },
+  testedContents: [],
 };
 
 describe('the recommended disposition', () => {
