@@ -49,10 +49,10 @@ function FoldLine({ group, isUnfolded }: { group: Group; isUnfolded: boolean }) 
             {isUnfolded ? 'Fold' : 'Unfold'}
           </Button>
           {hasGradation ? (
-            <>
+            <span className="fold-chart">
               {', '}
               <Link to={paths.gradation(params.submittalId, params.number)}>gradation chart</Link>
-            </>
+            </span>
           ) : null}
         </td>
       </tr>
