@@ -4,10 +4,13 @@ import { layerSchema, type Rule, type RuleSet, ruleSetSchema } from '#rules/rule
 import type { LimitTable, RuleSource } from '#rules/rule-sets/table';
 import { shippedRuleSets } from '#rules/sets/shipped-rule-sets';
 
-const editions = new Map(['2024', '2026', '2027'].map((edition) => [edition, editionOf(edition)] as const));
+const sections = [
+  ...['2024', '2026', '2027'].map((edition) => ({ section: '412', edition, base: editionOf(edition) })),
+  { section: '421', edition: '2026', base: ruleSetSchema.parse(documentOf('cvra-421-2026.json')) },
+];
 const supplement = layerSchema.parse(documentOf('cvra-412-s07-2026.json'));
 
-describe.each([...editions])('Section 412, edition %s', (_, edition) => {
+describe.each(sections)('Section $section, edition $edition', ({ section, base: edition }) => {
   it('has at least 45 rules, at most eight of them on documents and ten or more keyed by a table', () => {
     expect(edition.rules.length).toBeGreaterThanOrEqual(45);
     expect(edition.rules.filter((rule) => rule.measure.kind === 'document').length).toBeLessThanOrEqual(8);
@@ -17,7 +20,8 @@ describe.each([...editions])('Section 412, edition %s', (_, edition) => {
   it('gives each clause to one rule', () => {
     const clauses = edition.rules.map((rule) => rule.clause);
     expect(clauses.filter((clause, i) => clauses.indexOf(clause) !== i)).toEqual([]);
-    for (const clause of clauses) expect(clause).toMatch(/^412\.0[2-9]\([a-z]\)$/);
+    for (const clause of clauses) expect(clause).toMatch(/^\d{3}\.0[2-9]\([a-z]\)$/);
+    expect(new Set(clauses.map((clause) => clause.slice(0, 3)))).toEqual(new Set([section]));
   });
 
   it('names the origin of every rule and every table', () => {
@@ -108,6 +112,116 @@ describe('published figures in edition 2026', () => {
   });
 });
 
+describe('published figures in Section 421', () => {
+  const edition = ruleSetSchema.parse(documentOf('cvra-421-2026.json'));
+
+  it('keeps the gradation bands as printed', () => {
+    // UFGS 02749, Hot-Mix Asphalt (HMA) for Airfields, Table 2, p. 14 (read). Per sieve, coarse to fine from 1 in to
+    // No. 200: least and most passing of gradations 1, 2 and 3.
+    const printed: Record<number, ([number, number] | null)[]> = {
+      25: [[100, 100], null, null],
+      19: [[76, 96], [100, 100], null],
+      12.5: [
+        [68, 88],
+        [76, 96],
+        [100, 100],
+      ],
+      9.5: [
+        [60, 82],
+        [69, 89],
+        [76, 96],
+      ],
+      4.75: [
+        [45, 67],
+        [53, 73],
+        [58, 78],
+      ],
+      2.36: [
+        [32, 54],
+        [38, 60],
+        [40, 60],
+      ],
+      1.18: [
+        [22, 44],
+        [26, 48],
+        [28, 48],
+      ],
+      0.6: [
+        [15, 35],
+        [18, 38],
+        [18, 38],
+      ],
+      0.3: [
+        [9, 25],
+        [11, 27],
+        [11, 27],
+      ],
+      0.15: [
+        [6, 18],
+        [6, 18],
+        [6, 18],
+      ],
+      0.075: [
+        [3, 6],
+        [3, 6],
+        [3, 6],
+      ],
+    };
+    const expected = Object.entries(printed).flatMap(([sieve, bands]) =>
+      bands.flatMap((band, i) => (band ? [[i + 1, Number(sieve), ...band]] : [])),
+    );
+    const rows = tableOf(edition, 'gradation-bands').rows.map((row) => [
+      row.gradationNumber,
+      row.sieve,
+      Number(row.min),
+      Number(row.max),
+    ]);
+    expect(new Set(rows.map(String))).toEqual(new Set(expected.map(String)));
+  });
+
+  it('keeps the action limits of stability and flow as printed', () => {
+    // UFGS 02749, Table 6, p. 29 (read): lb and hundredths of an inch, average of the last four and individual.
+    const columns = [
+      'stabilityMean',
+      'stabilityEach',
+      'flowMeanMin',
+      'flowMeanMax',
+      'flowEachMin',
+      'flowEachMax',
+    ];
+    const rows = tableOf(edition, 'marshall').rows.map((row) => [
+      row.compactionBlows,
+      ...columns.map((column) => Number(row[column])),
+    ]);
+    expect(rows).toEqual([
+      [50, 1350, 950, 9, 17, 8, 18],
+      [75, 2150, 1760, 9, 15, 8, 16],
+    ]);
+  });
+
+  it('keeps the blows by tire pressure as printed', () => {
+    // UFC 3-250-03 (2001), Table 2-5 (read): below 100 psi 50 blows, from 100 to below 230 psi 75 blows.
+    expect(tableOf(edition, 'blows').rows).toEqual([
+      { tirePressure: { below: 100 }, blows: '50' },
+      { tirePressure: { from: 100, below: 230 }, blows: '75' },
+    ]);
+  });
+
+  it('keeps the voids of the worked example as printed', () => {
+    // UFC 3-250-03 (2001), Table 2-9 (read): voids of the total mix 3 to 5 %, voids filled 70 to 80 %.
+    expect(limitOf(edition, 'air-voids')).toEqual({ min: '3', max: '5' });
+    expect(limitOf(edition, 'vfa')).toEqual({ min: '70', max: '80' });
+  });
+
+  it('keeps the rut depth as printed, the limit itself excluded', () => {
+    // Virginia Asphalt, Fall/Winter 2019, p. 23, on AC 150/5370-10H (read): less than 10 mm at 4,000 passes.
+    expect(limitOf(edition, 'rut-depth')).toEqual({ max: '10', exclusive: true });
+    expect(edition.rules.find(({ id }) => id === 'rut-depth')?.measure).toMatchObject({
+      at: { passes: 4000 },
+    });
+  });
+});
+
 describe('the editions side by side', () => {
   it('run on without a gap from 2024 to 2026', () => {
     expect(editionOf('2024').effective).toEqual({ from: '2024-01-01', to: '2025-12-31' });
@@ -152,6 +266,10 @@ function editionOf(edition: string): RuleSet {
   return ruleSetSchema.parse(
     documentOf(edition === '2027' ? 'cvra-412-2027-draft.json' : `cvra-412-${edition}.json`),
   );
+}
+
+function limitOf(edition: RuleSet, id: string): Rule['limit'] | undefined {
+  return edition.rules.find((rule) => rule.id === id)?.limit;
 }
 
 function tableOf(edition: RuleSet, id: string): LimitTable {

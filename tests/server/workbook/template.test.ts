@@ -58,8 +58,9 @@ async function readBack(bytes: Buffer, edition: ResolvedEdition) {
 }
 
 /** Something that may stand in the middle of the plausible range. */
-function plausibleValue(id: string | null): number {
-  const quantity = id === null ? undefined : quantityById(id);
+function plausibleValue(id: string | null, edition: ResolvedEdition): number {
+  const own = edition.quantities.find((quantity) => quantity.id === id);
+  const quantity = own ?? (id === null ? undefined : quantityById(id));
   if (!quantity) return 1;
   const { min, max } = quantity.plausible;
   return Number((min + (max - min) * 0.4).toFixed(quantity.decimals));
@@ -90,10 +91,14 @@ function plausibleKey(column: TemplateColumn, row: number): string | number {
   return own[column.names ?? ''] ?? 'any';
 }
 
-function fillSheet(sheet: ExcelJS.Worksheet, part: TemplateSheet): void {
+function fillSheet(sheet: ExcelJS.Worksheet, part: TemplateSheet, edition: ResolvedEdition): void {
   if (part.kind === 'labels') {
     part.entries.forEach(({ quantity, list, unit }, at) => {
-      const value = quantity.startsWith('attribute:') ? (unit ? 12.5 : 'any') : plausibleValue(quantity);
+      const value = quantity.startsWith('attribute:')
+        ? unit
+          ? 12.5
+          : 'any'
+        : plausibleValue(quantity, edition);
       sheet.getCell(headerRow + 1 + at, 2).value = list[1] ?? value;
     });
   } else if (part.kind === 'gradation') {
@@ -103,16 +108,16 @@ function fillSheet(sheet: ExcelJS.Worksheet, part: TemplateSheet): void {
         sheet.getCell(headerRow + 2 + at, column).value = 100 - 5 * at;
       });
     }
-  } else fillTable(sheet, part);
+  } else fillTable(sheet, part, edition);
 }
 
-function fillTable(sheet: ExcelJS.Worksheet, part: TemplateTable): void {
+function fillTable(sheet: ExcelJS.Worksheet, part: TemplateTable, edition: ResolvedEdition): void {
   for (let row = 0; row < 2; row += 1) {
     part.columns.forEach((column, at) => {
       const cell = sheet.getCell(headerRow + (part.hasMethods ? 2 : 1) + row, at + 1);
       cell.value =
         column.role === 'value'
-          ? plausibleValue(column.quantity) + (column.quantity === null ? row + 11 : 0)
+          ? plausibleValue(column.quantity, edition) + (column.quantity === null ? row + 11 : 0)
           : plausibleKey(column, row);
     });
   }
@@ -180,7 +185,9 @@ describe.each(editions)('the template of %s', (_, edition) => {
   it('reads back filled in every place without a doubt', async () => {
     const workbook = buildTemplate(edition, { editionHash });
     const { sheets } = templateLayout(edition);
-    for (const part of sheets) fillSheet(workbook.getWorksheet(part.name) as ExcelJS.Worksheet, part);
+    for (const part of sheets) {
+      fillSheet(workbook.getWorksheet(part.name) as ExcelJS.Worksheet, part, edition);
+    }
     const { reading } = await readBack(await finishTemplate(workbook, editionHash), edition);
     expect(reading.doubts).toEqual([]);
     expect(reading.unread).toEqual([]);
