@@ -5,6 +5,7 @@ import { applicabilityOf } from './applicability';
 import { evaluateAttribute } from './evaluate-attribute';
 import { evaluateDifference } from './evaluate-difference';
 import { evaluateDocument } from './evaluate-document';
+import { evaluateFormula } from './evaluate-formula';
 import { evaluateGradation, evaluateReading } from './evaluate-reading';
 import type { Finding } from './finding';
 import { makeFinding } from './make-finding';
@@ -37,8 +38,9 @@ function measured(world: World, rule: ResolvedRule, measure: Measure): Finding[]
       return evaluateAttribute(world, rule, measure);
     case 'document':
       return evaluateDocument(world, rule, measure);
-    case 'creep-compliance':
-    case 'formula': {
+    case 'formula':
+      return evaluateFormula(world, rule, measure);
+    case 'creep-compliance': {
       const reason = `Rules of the kind ${measure.kind} are not computed by this version of the engine.`;
       return [makeFinding(world, rule, { ...wholeRule(world, rule), outcome: 'undecided', reason })];
     }

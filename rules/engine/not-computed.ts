@@ -10,4 +10,4 @@ export function kindsNotComputed(
     .map((rule) => ({ rule: rule.id, kind: rule.measure.kind }));
 }
 
-const NOT_COMPUTED = new Set<Measure['kind']>(['creep-compliance', 'formula']);
+const NOT_COMPUTED = new Set<Measure['kind']>(['creep-compliance']);

@@ -1,5 +1,6 @@
 import { sieveLabel } from '../quantities/sieves';
 import type { Conditions } from '../record';
+import { readFormula } from '../rule-sets/formula';
 import type { Measure } from '../rule-sets/measure';
 import { isPerTrial } from './scope';
 import type { World } from './world';
@@ -17,7 +18,11 @@ export function subjectOf(world: World, measure: Measure, at: Conditions): strin
 function isOfDesign(world: World, measure: Measure, at: Conditions): boolean {
   if (at.stockpile !== undefined) return false;
   if (measure.kind === 'gradation') return (at.trial ?? 'design') === 'design';
-  if (measure.kind !== 'reading' && measure.kind !== 'difference') return false;
+  if (measure.kind !== 'reading' && measure.kind !== 'difference' && measure.kind !== 'formula') return false;
   if (at.trial !== undefined) return at.trial === 'design';
+  if (measure.kind === 'formula') {
+    const formula = readFormula(measure.expression, world.view);
+    return formula.ok && formula.formula.symbols.some(({ quantity }) => isPerTrial(world, quantity));
+  }
   return isPerTrial(world, measure.quantity);
 }

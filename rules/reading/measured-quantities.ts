@@ -1,4 +1,6 @@
 import type { Conditions } from '../record';
+import { viewOf } from '../rule-sets/edition-view';
+import { readFormula } from '../rule-sets/formula';
 import { comparisonsOf } from '../rule-sets/when';
 import type { ReadingEdition } from './edition-contents';
 
@@ -37,7 +39,12 @@ export function measuredQuantities(edition: ReadingEdition): MeasuredQuantity[] 
           at: { temperature: measure.temperature, time: measure.time },
         });
         break;
-      case 'formula':
+      case 'formula': {
+        const formula = readFormula(measure.expression, viewOf(edition));
+        for (const { quantity, sieve } of formula.ok ? formula.formula.symbols : [])
+          found.push({ quantity, at: sieve === null ? measure.at : { ...measure.at, sieve } });
+        break;
+      }
       case 'attribute':
       case 'document':
         break;

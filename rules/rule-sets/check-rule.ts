@@ -1,8 +1,10 @@
-import { convert } from '../quantities/units';
+import { convert, normaliseUnit } from '../quantities/units';
 import { boundsOf, isQuantityReference, isTableReference } from './bounds-of';
 import { checkLimits } from './check-limits';
 import { checkWhen } from './check-when';
 import type { EditionView } from './edition-view';
+import { readFormula } from './formula';
+import type { FormulaMeasure } from './measure';
 import type { DocumentProblem } from './problem';
 import type { Rule } from './schema';
 
@@ -41,6 +43,7 @@ function checkMeasure(rule: Rule, view: EditionView, report: ReportFault): void 
       'Declare it among the documents, or correct its name.',
     );
   }
+  if (measure.kind === 'formula') checkFormula(measure, view, report);
   if (measure.kind === 'gradation') {
     const table = view.table(measure.table);
     if (!table) unknownTable(measure.table, '/measure/table', report);
@@ -63,6 +66,30 @@ function checkMeasure(rule: Rule, view: EditionView, report: ReportFault): void 
         'Give within: { min, max } with the statistic percent-within-limits, and only with it.',
       );
     }
+  }
+}
+
+function checkFormula(measure: FormulaMeasure, view: EditionView, report: ReportFault): void {
+  const result = readFormula(measure.expression, view);
+  if (!result.ok) {
+    report('/measure/expression', `in the formula "${measure.expression}", ${result.detail}`, result.fix);
+    return;
+  }
+  for (const { symbol, quantity, sieve } of result.formula.symbols) {
+    const isBySieve = view.quantity(quantity)?.conditions.includes('sieve') ?? false;
+    if (!isBySieve || sieve !== null || measure.at.sieve !== undefined) continue;
+    report(
+      '/measure/expression',
+      `in the formula "${measure.expression}", ${symbol} does not say at which sieve.`,
+      `Write the opening in mm behind it, such as ${symbol}0.075, or name the sieve in at.`,
+    );
+  }
+  if (measure.unit !== undefined && normaliseUnit(measure.unit) === null) {
+    report(
+      '/measure/unit',
+      `the unit ${measure.unit} is not known.`,
+      'Give a unit of the registry, such as %.',
+    );
   }
 }
 
@@ -141,6 +168,7 @@ export function measuredUnit(rule: Rule, view: EditionView): string | null {
     if (measure.statistic === 'percent-within-limits') return '%';
     return view.quantity(measure.quantity)?.unit ?? null;
   }
+  if (measure.kind === 'formula') return measure.unit ?? '1';
   return measure.kind === 'difference' ? (view.quantity(measure.quantity)?.unit ?? null) : null;
 }
 

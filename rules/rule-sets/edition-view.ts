@@ -1,5 +1,5 @@
 import type { Quantity } from '../quantities/quantity';
-import { quantityById } from '../quantities/registry';
+import { allQuantities, quantityById } from '../quantities/registry';
 import { type AttributeDefinition, attributeLabel, withStandardAttributes } from './attribute';
 import { type DocumentType, withStandardDocuments } from './document-types';
 import type { Rule, RuleSetCase } from './schema';
@@ -24,6 +24,8 @@ export interface EditionView {
   table(id: string): LimitTable | undefined;
   tableTitle(id: string): string;
   quantity(id: string): Quantity | undefined;
+  /** Ids of the quantities that a trade symbol stands for, the edition's own among them. */
+  readonly symbols: ReadonlyMap<string, readonly string[]>;
   document(type: string): DocumentType | undefined;
   rule(id: string): Rule | undefined;
 }
@@ -38,6 +40,7 @@ export function viewOf(
   const quantities = byKey(edition.quantities, (each) => each.id);
   const documents = byKey(withStandardDocuments(edition.documents), (each) => each.type);
   const rules = byKey(edition.rules, (each) => each.id);
+  let symbols: EditionView['symbols'] | null = null;
   const view: EditionView = {
     attribute: (name) => attributes.get(name),
     attributeLabel: (name) => {
@@ -47,6 +50,10 @@ export function viewOf(
     table: (id) => tables.get(id),
     tableTitle: (id) => tables.get(id)?.title ?? id,
     quantity: (id) => quantities.get(id) ?? quantityById(id),
+    get symbols() {
+      symbols ??= symbolsOf(edition.quantities);
+      return symbols;
+    },
     document: (type) => documents.get(type),
     rule: (id) => rules.get(id),
   };
@@ -56,6 +63,14 @@ export function viewOf(
 
 /** An edition does not change once it is parsed, so its look-ups are built once. */
 const views = new WeakMap<object, EditionView>();
+
+function symbolsOf(own: Quantity[]): Map<string, string[]> {
+  const symbols = new Map<string, string[]>();
+  for (const { id, symbol } of [...own, ...allQuantities()]) {
+    symbols.set(symbol, [...new Set([...(symbols.get(symbol) ?? []), id])]);
+  }
+  return symbols;
+}
 
 function byKey<T>(entries: T[], key: (entry: T) => string): Map<string, T> {
   return new Map(entries.map((entry) => [key(entry), entry]));

@@ -119,6 +119,7 @@ export type Where = z.infer<typeof whereSchema>;
 export type Measure = z.infer<typeof measureSchema>;
 export type ReadingMeasure = z.infer<typeof readingMeasureSchema>;
 export type GradationMeasure = z.infer<typeof gradationMeasureSchema>;
+export type FormulaMeasure = z.infer<typeof formulaMeasureSchema>;
 export type DifferenceMeasure = z.infer<typeof differenceMeasureSchema>;
 export type AttributeMeasure = z.infer<typeof attributeMeasureSchema>;
 export type DocumentMeasure = z.infer<typeof documentMeasureSchema>;

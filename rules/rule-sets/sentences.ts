@@ -3,14 +3,16 @@ import { decimalsOf, type RoundingMethod } from '../numerics/round';
 import type { Conditions } from '../record';
 import { measuredUnit } from './check-rule';
 import type { EditionView } from './edition-view';
+import { readFormula } from './formula';
 import { generalLimitWords, intervalWords, resolvedLimitWords } from './limit-words';
-import type { Measure, Statistic } from './measure';
+import type { FormulaMeasure, Measure, Statistic } from './measure';
 import type { Rule } from './schema';
 import { conditionSentence } from './when-words';
 import {
   capitalised,
   censoredWords,
   computedWords,
+  conditionWords,
   dateWords,
   numberWords,
   plural,
@@ -129,13 +131,30 @@ function labelOf(measure: Measure, at: Conditions, view: EditionView, count?: nu
     case 'creep-compliance':
       return phrase('creep-compliance', { temperature: measure.temperature, time: measure.time }, view);
     case 'formula':
-      return measure.expression;
+      return formulaWords(measure, at, view);
   }
 }
 
 function phrase(id: string, at: Conditions, view: EditionView): string {
   const quantity = view.quantity(id);
   return quantity ? quantityPhrase(quantity, at, { opening: true }) : capitalised(id);
+}
+
+/** "Gse − Gsb", "Gsa − Gsb of stockpile Bin 1" */
+function formulaWords(measure: FormulaMeasure, at: Conditions, view: EditionView): string {
+  const formula = readFormula(measure.expression, view);
+  return `${formula.ok ? formula.formula.text : measure.expression}${conditionWords(at)}`;
+}
+
+/** What each symbol stands for: "Gse is effective specific gravity of the aggregate". */
+function symbolClauses(measure: FormulaMeasure, view: EditionView): string[] {
+  const formula = readFormula(measure.expression, view);
+  if (!formula.ok) return [];
+  return formula.formula.symbols.map(({ symbol, quantity, sieve }) => {
+    const entry = view.quantity(quantity);
+    const name = entry ? quantityPhrase(entry, sieve === null ? {} : { sieve }) : quantity;
+    return `${symbol} is ${name}`;
+  });
 }
 
 function statisticWords(statistic: Statistic, count: number | undefined): string {
@@ -179,6 +198,7 @@ function countClauses(rule: Rule, view: EditionView): string[] {
     if (measure.within)
       clauses.push(`the limits to be within are ${intervalWords(measure.within, unit, view)}`);
   }
+  if (measure.kind === 'formula') clauses.push(...symbolClauses(measure, view));
   for (const where of measure.where ?? []) {
     const quantity = view.quantity(where.quantity);
     const name = quantity ? quantityPhrase(quantity, where.at) : where.quantity;
