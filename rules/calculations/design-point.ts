@@ -43,7 +43,7 @@ export interface PropertyCurve {
 /**
  * The curve that `propertyAt` reads: fitted once, to be read at many binder contents between `from` and `to`.
  *
- * @example propertyCurve([[4, 14.9], [4.5, 14.6], [5, 14.5], [5.5, 14.7], [6, 15.1]], 'quadratic').turns // [4.9]
+ * @example propertyCurve([[4, 14.9], [4.5, 14.6], [5, 14.5], [5.5, 14.7], [6, 15.1]], 'quadratic').turns // [4.89706]
  */
 export function propertyCurve(
   points: readonly TrialPoint[],

@@ -1,3 +1,4 @@
+import type { ResolvedRule } from '../rule-sets/resolve';
 import { andList, capitalised, uncapitalised } from '../rule-sets/words';
 import type { RoomOfRule, RoomStretch, RoomToMove } from './room';
 import { roomOfRule } from './room-of-rule';
@@ -14,7 +15,7 @@ export function roomToMove(world: World): RoomToMove | null {
   );
   if (chosen.length === 0) return null;
   const declared = world.analysis.designPoint.declaredBinderContent;
-  const rules = chosen.map((rule) => roomOfRule(world, rule));
+  const rules = chosen.map((rule) => guarded(world, rule));
   const base = {
     declaredBinderContent: declared,
     trials: world.analysis.testedContents.map(({ trial, binderContent }) => ({
@@ -44,6 +45,26 @@ export function roomToMove(world: World): RoomToMove | null {
     excluding: [],
     reason: null,
   };
+}
+
+/** An error of ours leaves the rule without an answer and says so. */
+function guarded(world: World, rule: ResolvedRule): RoomOfRule {
+  try {
+    return roomOfRule(world, rule);
+  } catch (error) {
+    const detail = error instanceof Error ? error.message : String(error);
+    return {
+      rule: rule.id,
+      clause: rule.clause,
+      title: rule.title,
+      state: 'not computed',
+      reason: `An internal error occurred while this rule was followed along the binder content: ${detail}`,
+      limitWords: '',
+      fit: null,
+      trials: null,
+      holds: [],
+    };
+  }
 }
 
 /** Every rule without an answer, once for each reason. */

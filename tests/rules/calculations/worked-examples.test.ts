@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { bulkSpecificGravity, specimenAbsorption } from '#rules/calculations/bulk-specific-gravity';
 import { combinedAbsorption, combinedGravity } from '#rules/calculations/combined-gravity';
 import { crackingToleranceIndex, flexibilityIndex } from '#rules/calculations/cracking-indices';
-import { designBinderContent, propertyAt } from '#rules/calculations/design-point';
+import { designBinderContent, propertyAt, propertyCurve } from '#rules/calculations/design-point';
 import {
   combinedPassing,
   finenessModulus,
@@ -171,6 +171,15 @@ describe('edges', () => {
   it('a declared content at the outermost trial is not beyond the trials', () => {
     expect(propertyAt(trials, 4, 'linear')).toEqual({ ok: true, value: 6.4 });
     expect(propertyAt(trials, 6, 'quadratic').ok).toBe(true);
+  });
+
+  it('a curve over trials turns at the foot of its parabola, on a line at the trials between the ends', () => {
+    const vma = [14.9, 14.6, 14.5, 14.7, 15.1].map((value, place) => ({ Pb: 4 + place / 2, value }));
+    // Least squares (numpy): 26.16 − 4.757143·Pb + 0.485714·Pb², flat at 4.757143/(2·0.485714).
+    const parabola = propertyCurve(vma, 'quadratic');
+    expect(parabola.ok && parabola.turns).toEqual([expect.closeTo(4.89706, 5)]);
+    const line = propertyCurve(vma, 'linear');
+    expect(line.ok && line.turns).toEqual([4.5, 5, 5.5]);
   });
 
   it('impossible data comes out as the impossible number', () => {
