@@ -1,0 +1,325 @@
+import { covarianceFactor, covarianceOf, deviationAlong } from '../numerics/covariance-factor';
+import {
+  COARSE,
+  type FitProblem,
+  type LeastSquaresFit,
+  levenbergMarquardt,
+} from '../numerics/levenberg-marquardt';
+import { known, unusable } from '../numerics/numeric-result';
+import { twoSidedT } from '../numerics/student-t';
+import { decadesBeyond } from './creep-compliance';
+import { type CreepModel, type CreepModelName, creepModel, type PointSpan, storedModel } from './creep-model';
+import { creepStarts, type LnPoint } from './creep-starts';
+
+export interface FittedParameter {
+  symbol: string;
+  unit: string;
+  value: number;
+  /** Two-sided interval at 95 %; null where the points set no bound. */
+  low: number | null;
+  high: number | null;
+  /** False where no tested point holds it: its interval is wider than a factor of two, or it ended on a bound. */
+  held: boolean;
+}
+
+/** A fitted creep curve, as plain data: everything that its value and band at any time are computed from. */
+export interface CreepFit {
+  model: CreepModelName;
+  parameters: FittedParameter[];
+  /** Natural logarithms of what was fitted, in the model's own order; see `creep-model`. */
+  lnParameters: number[];
+  /** Of the logarithms. */
+  covariance: number[][];
+  /** F of covariance = F·Fᵀ, from which bands are computed. */
+  covarianceFactor: number[][];
+  retardationTimes: number[];
+  lnCentre: number;
+  degreesOfFreedom: number;
+  /** Standard deviation of the points about the curve, in ln D. */
+  residualDeviation: number;
+  /** ln D of a point − ln D of the curve, in the order of the points given. */
+  residuals: number[];
+  /** Share of the variation of ln D that the curve explains. */
+  rSquared: number;
+  converged: boolean;
+  iterations: number;
+  starts: number;
+  /** Starts that led to this minimum. */
+  startsAgreeing: number;
+  /** First and last tested loading time, s. */
+  window: { from: number; to: number };
+  pointCount: number;
+  timeCount: number;
+  /** Of the sigmoid: n above 1. */
+  steep: boolean;
+  /** How far τ lies beyond the tested times, decades; null for models without it. */
+  tauDecadesBeyond: number | null;
+  /** Why the fit may not be used, or null. */
+  rejected: string | null;
+}
+
+export type CreepFitResult = { ok: true; fit: CreepFit } | { ok: false; reason: string };
+
+/**
+ * Fits a creep model to points, in ln D, all points together.
+ *
+ * Least squares of ln D by Levenberg–Marquardt from several starts, in the logarithms of the parameters. The
+ * variance is that of the residuals, never less than that of readings good to 0.1 %, because points that lie on a
+ * curve exactly are still no more certain than readings are. A fit that does not converge or whose R² in ln D is
+ * below 0.98 is returned with the reason why it is rejected.
+ *
+ * Source: methods in `levenberg-marquardt` and `covariance-factor`; the limit of 0.98 is this product's own.
+ * Domain: times and compliances above zero; more points than parameters, at as many different times as parameters.
+ *
+ * @example fitCreep('sigmoid', points at 1 to 100 s of D0 0.045, D∞ 1.2, τ 900 s, n 0.55) // those parameters
+ */
+export function fitCreep(model: CreepModelName, points: readonly { t: number; D: number }[]): CreepFitResult {
+  for (const { t, D } of points) {
+    const fault = unusable({ 'a loading time': t, 'a compliance': D }, 'positive');
+    if (fault) return { ok: false, reason: fault };
+  }
+  const lnPoints = points.map(({ t, D }) => ({ lnTime: Math.log(t), lnD: Math.log(D) }));
+  // The same sums whatever the order of the points: rounding must not depend on it.
+  const order = lnPoints.map((_, i) => i).toSorted((a, b) => byTime(lnPoints[a]!, lnPoints[b]!));
+  const ordered = order.map((i) => lnPoints[i]!);
+  const span = spanOf(ordered);
+  const curve = creepModel(model, span);
+  const lacking = lackingPoints(curve, ordered.length, span.timeCount);
+  if (lacking) return { ok: false, reason: lacking };
+  const { best, starts, agreeing } = bestOf(curve, ordered, span);
+  const residuals = new Array<number>(points.length).fill(0);
+  order.forEach((place, i) => {
+    residuals[place] = settled(-best.residuals[i]!);
+  });
+  return { ok: true, fit: described(curve, best, { ordered, residuals, starts, agreeing, points }) };
+}
+
+/** ln D of a fit at a loading time, with half the width of its band, both in ln D. */
+export function lnBandAt(
+  fit: BandSource,
+  time: number,
+  confidence: number,
+): { ok: true; lnD: number; halfWidth: number } | { ok: false; reason: string } {
+  const fault = unusable({ 'the loading time': time }, 'positive');
+  if (fault) return { ok: false, reason: fault };
+  const quantile = twoSidedT(confidence, fit.degreesOfFreedom);
+  if (!quantile.ok) return quantile;
+  const gradient = new Float64Array(fit.lnParameters.length);
+  const lnD = storedModel(fit).lnCompliance(fit.lnParameters, Math.log(time), gradient);
+  return { ok: true, lnD, halfWidth: quantile.value * deviationAlong(fit.covarianceFactor, gradient) };
+}
+
+export type BandSource = Pick<
+  CreepFit,
+  'model' | 'lnParameters' | 'covarianceFactor' | 'retardationTimes' | 'lnCentre' | 'degreesOfFreedom'
+>;
+
+/** Values of a curve at one time, 1/GPa; a bound that leaves the range of sensible numbers is null. */
+export interface CreepBand {
+  estimate: number;
+  lower: number | null;
+  upper: number | null;
+}
+
+/**
+ * The fitted mean curve at a loading time with its two-sided confidence band, 1/GPa. exp(ln D ± t·√(gᵀ·C·g)).
+ *
+ * Symbols: g gradient of ln D in the fitted parameters, C their covariance, t the quantile at (1 + confidence)/2 for
+ * the degrees of freedom of the fit.
+ * Source: textbook linearisation. Domain: time above zero, confidence between 0 and 1.
+ *
+ * @example creepBandAt(fit of exact points of D0 0.045, D∞ 1.2, τ 900, n 0.55, 100, 0.95).estimate // 0.3106168
+ */
+export function creepBandAt(
+  fit: BandSource,
+  time: number,
+  confidence: number,
+): { ok: true; band: CreepBand } | { ok: false; reason: string } {
+  const band = lnBandAt(fit, time, confidence);
+  if (!band.ok) return band;
+  const estimate = known(Math.exp(band.lnD));
+  if (!estimate.ok) return estimate;
+  return {
+    ok: true,
+    band: {
+      estimate: estimate.value,
+      lower: expOrNull(band.lnD - band.halfWidth),
+      upper: expOrNull(band.lnD + band.halfWidth),
+    },
+  };
+}
+
+/** Least R² in ln D of a fit that may be used. */
+export const LEAST_R_SQUARED = 0.98;
+
+/** Readings are not taken as better than this, in ln D; common practice, no source. */
+const LEAST_DEVIATION = 0.001;
+/** In ln: a factor of a million either way is no bound. */
+const WIDEST_HALF = 6 * Math.LN10;
+const DESCRIBED_CONFIDENCE = 0.95;
+/** Sums of squares that differ by less than this, in proportion, are on the way to the same minimum. */
+const SAME_MINIMUM = 0.05;
+/** What is left of a perfect fit before its end: far below any reading's own noise. */
+const SMALLEST_SUM = 1e-8;
+
+function lackingPoints(model: CreepModel, pointCount: number, timeCount: number): string | null {
+  const { parameterCount } = model;
+  if (pointCount <= parameterCount) {
+    return `a curve with ${parameterCount} parameters needs more than ${parameterCount} points, and there ${pointCount === 1 ? 'is' : 'are'} ${pointCount}`;
+  }
+  if (timeCount < parameterCount) {
+    return `a curve with ${parameterCount} parameters needs at least ${parameterCount} different loading times, and there ${timeCount === 1 ? 'is' : 'are'} ${timeCount}`;
+  }
+  return null;
+}
+
+/** Every start roughly, then the best of them to the end; another one only where that does not converge. */
+function bestOf(
+  model: CreepModel,
+  points: readonly LnPoint[],
+  span: PointSpan,
+): { best: LeastSquaresFit; starts: number; agreeing: number } {
+  const problem = problemOf(model, points);
+  const rough = creepStarts(model, points, span)
+    .map((start) => levenbergMarquardt(problem, start, COARSE))
+    .toSorted((a, b) => a.sumOfSquares - b.sumOfSquares);
+  const least = rough[0]!.sumOfSquares;
+  const good = rough.filter(({ sumOfSquares }) => sumOfSquares <= least * (1 + SAME_MINIMUM) + SMALLEST_SUM);
+  let best = levenbergMarquardt(problem, rough[0]!.parameters);
+  for (const { parameters } of good.slice(1)) {
+    if (best.converged) break;
+    best = levenbergMarquardt(problem, parameters);
+  }
+  return { best, starts: rough.length, agreeing: good.length };
+}
+
+function problemOf(model: CreepModel, points: readonly LnPoint[]): FitProblem {
+  const { parameterCount, lower, upper } = model;
+  return {
+    parameterCount,
+    residualCount: points.length,
+    lower,
+    upper,
+    evaluate(parameters, residuals, jacobian) {
+      for (let i = 0; i < points.length; i += 1) {
+        const { lnTime, lnD } = points[i]!;
+        residuals[i] = model.lnCompliance(parameters, lnTime, jacobian, i * parameterCount) - lnD;
+      }
+    },
+  };
+}
+
+function described(
+  model: CreepModel,
+  best: LeastSquaresFit,
+  context: {
+    ordered: readonly LnPoint[];
+    residuals: number[];
+    starts: number;
+    agreeing: number;
+    points: readonly { t: number; D: number }[];
+  },
+): CreepFit {
+  const { ordered, points } = context;
+  const degreesOfFreedom = ordered.length - model.parameterCount;
+  const deviation = Math.max(Math.sqrt(best.sumOfSquares / degreesOfFreedom), LEAST_DEVIATION);
+  const factor = covarianceFactor(best.jacobian, model.parameterCount, deviation ** 2);
+  const rSquared = explained(ordered, best.sumOfSquares);
+  const parameters = publishedParameters(model, best, factor, degreesOfFreedom);
+  const times = points.map(({ t }) => t);
+  const window = { from: Math.min(...times), to: Math.max(...times) };
+  const tau = parameters.find(({ symbol }) => symbol === 'τ')?.value;
+  const beyond = tau === undefined ? null : decadesBeyond(tau, window);
+  return {
+    model: model.name,
+    parameters,
+    lnParameters: best.parameters.map(settled),
+    covariance: covarianceOf(factor).map((row) => row.map(settled)),
+    covarianceFactor: factor.map((row) => row.map(settled)),
+    retardationTimes: model.retardationTimes.map(settled),
+    lnCentre: model.lnCentre,
+    degreesOfFreedom,
+    residualDeviation: settled(Math.sqrt(best.sumOfSquares / degreesOfFreedom)),
+    residuals: context.residuals,
+    rSquared,
+    converged: best.converged,
+    iterations: best.iterations,
+    starts: context.starts,
+    startsAgreeing: context.agreeing,
+    window,
+    pointCount: points.length,
+    timeCount: new Set(times).size,
+    steep: model.name === 'sigmoid' && (parameters[3]?.value ?? 0) > 1,
+    tauDecadesBeyond: beyond?.ok ? beyond.value : null,
+    rejected: rejection(best.converged, rSquared),
+  };
+}
+
+function rejection(converged: boolean, rSquared: number): string | null {
+  if (!converged) return 'the fit does not converge';
+  if (rSquared >= LEAST_R_SQUARED) return null;
+  return `R² in ln D is ${rSquared.toFixed(3).replace('-', '−')}, below ${LEAST_R_SQUARED}`;
+}
+
+function publishedParameters(
+  model: CreepModel,
+  best: LeastSquaresFit,
+  factor: readonly (readonly number[])[],
+  degreesOfFreedom: number,
+): FittedParameter[] {
+  const quantile = twoSidedT(DESCRIBED_CONFIDENCE, degreesOfFreedom);
+  const t = quantile.ok ? quantile.value : Number.POSITIVE_INFINITY;
+  return model.published(best.parameters).map(({ symbol, unit, value, gradient }) => {
+    const half = t * deviationAlong(factor, gradient);
+    const isBounded = half <= WIDEST_HALF;
+    const rests = gradient.some((share, i) => Math.abs(share) > 0.5 && best.atBound[i]);
+    return {
+      symbol,
+      unit,
+      value: settled(value),
+      low: isBounded ? settled(value * Math.exp(-half)) : null,
+      high: isBounded ? settled(value * Math.exp(half)) : null,
+      held: half <= Math.LN2 && !rests,
+    };
+  });
+}
+
+/** Points that hardly differ leave nothing to explain: then only a fit through all of them counts as one. */
+function explained(points: readonly LnPoint[], left: number): number {
+  const average = points.reduce((sum, { lnD }) => sum + lnD, 0) / points.length;
+  const total = points.reduce((sum, { lnD }) => sum + (lnD - average) ** 2, 0);
+  const noise = points.length * 1e-12;
+  if (total <= noise) return left <= noise ? 1 : 0;
+  return settled(1 - left / total);
+}
+
+function spanOf(ordered: readonly LnPoint[]): PointSpan {
+  let [lnLeast, lnMost] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
+  for (const { lnD } of ordered) {
+    lnLeast = Math.min(lnLeast, lnD);
+    lnMost = Math.max(lnMost, lnD);
+  }
+  return {
+    lnFrom: ordered[0]?.lnTime ?? 0,
+    lnTo: ordered.at(-1)?.lnTime ?? 0,
+    lnLeast,
+    lnMost,
+    timeCount: new Set(ordered.map(({ lnTime }) => lnTime)).size,
+  };
+}
+
+function byTime(a: LnPoint, b: LnPoint): number {
+  return a.lnTime - b.lnTime || a.lnD - b.lnD;
+}
+
+function expOrNull(ln: number): number | null {
+  const bounded = Math.abs(ln) < 30 * Math.LN10 ? known(Math.exp(ln)) : null;
+  return bounded?.ok ? bounded.value : null;
+}
+
+/** As every numeric result: 12 significant digits, so that every engine comes to the same number. */
+function settled(value: number): number {
+  const result = known(value);
+  if (!result.ok) throw new Error('A fit gave no finite number.');
+  return result.value;
+}
