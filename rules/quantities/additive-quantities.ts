@@ -24,7 +24,7 @@ export const additiveQuantities: QuantityInput[] = [
     decimals: 3,
     plausible: { min: 2.2, max: 2.9 },
     gaugeSpan: 0.05,
-    methods: ['AASHTO T 209'],
+    methods: ['AASHTO T 209', 'ASTM D2041', 'EN 12697-5'],
     aliases: ['RAP Gmm'],
     subject: 'aggregate',
   },
@@ -110,7 +110,7 @@ export const additiveQuantities: QuantityInput[] = [
     decimals: 1,
     plausible: { min: 0, max: 240 },
     gaugeSpan: 2,
-    methods: ['AASHTO R 30'],
+    methods: ['AASHTO R 30', 'EN 12697-52'],
     aliases: ['short-term aging time', 'oven aging time'],
   },
   {
@@ -122,7 +122,7 @@ export const additiveQuantities: QuantityInput[] = [
     decimals: 0,
     plausible: { min: 40, max: 180 },
     gaugeSpan: 10,
-    methods: ['AASHTO R 30'],
+    methods: ['AASHTO R 30', 'EN 12697-52'],
     aliases: ['short-term aging temperature', 'oven aging temperature'],
   },
 ];

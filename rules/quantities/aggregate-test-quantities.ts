@@ -11,7 +11,7 @@ export const aggregateTestQuantities: QuantityInput[] = [
     decimals: 3,
     plausible: { min: 2, max: 3.7 },
     gaugeSpan: 0.05,
-    methods: ['AASHTO T 84', 'AASHTO T 85'],
+    methods: ['AASHTO T 84', 'AASHTO T 85', 'ASTM C127', 'ASTM C128', 'EN 1097-6'],
     aliases: ['bulk specific gravity (SSD)', 'SSD specific gravity'],
     subject: 'aggregate',
   },

@@ -93,6 +93,7 @@ export const gradationQuantities: QuantityInput[] = [
     decimals: 2,
     plausible: { min: 0.5, max: 9 },
     gaugeSpan: 0.4,
+    methods: ['ASTM C136'],
     aliases: ['FM', 'fineness'],
     kind: 'derived',
     derivation: 'Σ cumulative percent retained/100',

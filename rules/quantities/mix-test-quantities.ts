@@ -11,7 +11,7 @@ export const mixTestQuantities: QuantityInput[] = [
     decimals: 2,
     plausible: { min: -1.5, max: 3 },
     gaugeSpan: 0.5,
-    methods: ['AASHTO T 308', 'ASTM D6307'],
+    methods: ['AASHTO T 308', 'ASTM D6307', 'EN 12697-39'],
     aliases: ['ignition oven correction', 'correction factor (ignition)'],
   },
   {
@@ -23,7 +23,7 @@ export const mixTestQuantities: QuantityInput[] = [
     decimals: 2,
     plausible: { min: 0, max: 4 },
     gaugeSpan: 0.3,
-    methods: ['AASHTO T 329'],
+    methods: ['AASHTO T 329', 'EN 12697-14'],
     aliases: ['moisture content of mix', 'mix moisture'],
   },
   {
@@ -99,6 +99,7 @@ export const mixTestQuantities: QuantityInput[] = [
     decimals: 1,
     plausible: { min: 0.1, max: 25 },
     gaugeSpan: 3,
+    conditions: ['passes'],
     methods: ['AASHTO T 340'],
     aliases: ['APA rut depth', 'loaded wheel rut'],
   },
@@ -249,6 +250,7 @@ export const mixTestQuantities: QuantityInput[] = [
     decimals: 0,
     plausible: { min: 0, max: 100000 },
     gaugeSpan: 50,
+    methods: ['EN 12697-19'],
     aliases: ['field permeability', 'laboratory permeability'],
     subject: 'specimen',
   },

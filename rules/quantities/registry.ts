@@ -10,6 +10,7 @@ import { massQuantities } from './mass-quantities';
 import { mixTestQuantities } from './mix-test-quantities';
 import { moistureQuantities } from './moisture-quantities';
 import { performanceQuantities } from './performance-quantities';
+import { productionQuantities } from './production-quantities';
 import { type Quantity, quantitySchema } from './quantity';
 import { recycledQuantities } from './recycled-quantities';
 import { volumetricQuantities } from './volumetric-quantities';
@@ -38,6 +39,7 @@ const quantities: Quantity[] = [
   ...mixTestQuantities,
   ...aggregateTestQuantities,
   ...additiveQuantities,
+  ...productionQuantities,
 ].map((entry) => {
   const quantity = quantitySchema.parse(entry);
   return quantity.acceptedUnits.length > 0 ? quantity : { ...quantity, acceptedUnits: [quantity.unit] };

@@ -83,6 +83,10 @@ it('knows no id that it does not have', () => {
   expect(quantityById('constructor')).toBeUndefined();
 });
 
+it('holds at least 140 quantities', () => {
+  expect(allQuantities().length).toBeGreaterThanOrEqual(140);
+});
+
 it('has each id and each symbol once', () => {
   const ids = allQuantities().map(({ id }) => id);
   const symbols = allQuantities().map(({ symbol }) => symbol);
@@ -114,6 +118,17 @@ describe.each(allQuantities())('$id', (quantity) => {
     expect(quantity.kind === 'derived').toBe(quantity.derivation !== null);
     expect(quantity.label).toBe(quantity.label.trim());
     expect(quantity.label.endsWith('.')).toBe(false);
+  });
+
+  it('has a plausible range of its own, and names a source where it is derived', () => {
+    expect(quantity.plausible.max - quantity.plausible.min).toBeLessThan(1e11);
+    if (quantity.kind === 'derived') expect(quantity.source).not.toContain('no source');
+  });
+
+  it('names test methods by their standard, each once', () => {
+    expect(new Set(quantity.methods).size).toBe(quantity.methods.length);
+    for (const method of quantity.methods)
+      expect(method).toMatch(/^(AASHTO (T|R|M|TP)|ASTM [CD]|EN|ISO) ?\d/);
   });
 
   it('says that a precision recalled from memory is', () => {
