@@ -89,9 +89,10 @@ export function fitCreep(model: CreepModelName, points: readonly { t: number; D:
   const { best, starts, agreeing } = bestOf(curve, ordered, span);
   const residuals = new Array<number>(points.length).fill(0);
   order.forEach((place, i) => {
-    residuals[place] = settled(-best.residuals[i]!);
+    residuals[place] = -best.residuals[i]!;
   });
-  return { ok: true, fit: described(curve, best, { ordered, residuals, starts, agreeing, points }) };
+  const fit = describeFit({ model: curve, best, points, residuals, starts, startsAgreeing: agreeing });
+  return { ok: true, fit };
 }
 
 /** ln D of a fit at a loading time, with half the width of its band, both in ln D. */
@@ -209,22 +210,23 @@ function problemOf(model: CreepModel, points: readonly LnPoint[]): FitProblem {
   };
 }
 
-function described(
-  model: CreepModel,
-  best: LeastSquaresFit,
-  context: {
-    ordered: readonly LnPoint[];
-    residuals: number[];
-    starts: number;
-    agreeing: number;
-    points: readonly { t: number; D: number }[];
-  },
-): CreepFit {
-  const { ordered, points } = context;
-  const degreesOfFreedom = ordered.length - model.parameterCount;
-  const deviation = Math.max(Math.sqrt(best.sumOfSquares / degreesOfFreedom), LEAST_DEVIATION);
-  const factor = covarianceFactor(best.jacobian, model.parameterCount, deviation ** 2);
-  const rSquared = explained(ordered, best.sumOfSquares);
+/** What a solved problem says: `best` may hold more parameters than the model, its own first. */
+export function describeFit(input: {
+  model: CreepModel;
+  best: LeastSquaresFit;
+  /** Times and compliances in the order in which residuals are told. */
+  points: readonly { t: number; D: number }[];
+  residuals: number[];
+  starts: number;
+  startsAgreeing: number;
+}): CreepFit {
+  const { model, best, points } = input;
+  const solvedFor = best.parameters.length;
+  const degreesOfFreedom = points.length - solvedFor;
+  const deviation = Math.sqrt(best.sumOfSquares / degreesOfFreedom);
+  const variance = Math.max(deviation, LEAST_DEVIATION) ** 2;
+  const factor = covarianceFactor(best.jacobian, solvedFor, variance).slice(0, model.parameterCount);
+  const rSquared = explained(points, best.sumOfSquares);
   const parameters = publishedParameters(model, best, factor, degreesOfFreedom);
   const times = points.map(({ t }) => t);
   const window = { from: Math.min(...times), to: Math.max(...times) };
@@ -233,19 +235,19 @@ function described(
   return {
     model: model.name,
     parameters,
-    lnParameters: best.parameters.map(settled),
+    lnParameters: best.parameters.slice(0, model.parameterCount).map(settled),
     covariance: covarianceOf(factor).map((row) => row.map(settled)),
     covarianceFactor: factor.map((row) => row.map(settled)),
     retardationTimes: model.retardationTimes.map(settled),
     lnCentre: model.lnCentre,
     degreesOfFreedom,
-    residualDeviation: settled(Math.sqrt(best.sumOfSquares / degreesOfFreedom)),
-    residuals: context.residuals,
+    residualDeviation: settled(deviation),
+    residuals: input.residuals.map(settled),
     rSquared,
     converged: best.converged,
     iterations: best.iterations,
-    starts: context.starts,
-    startsAgreeing: context.agreeing,
+    starts: input.starts,
+    startsAgreeing: input.startsAgreeing,
     window,
     pointCount: points.length,
     timeCount: new Set(times).size,
@@ -285,15 +287,17 @@ function publishedParameters(
 }
 
 /** Points that hardly differ leave nothing to explain: then only a fit through all of them counts as one. */
-function explained(points: readonly LnPoint[], left: number): number {
-  const average = points.reduce((sum, { lnD }) => sum + lnD, 0) / points.length;
-  const total = points.reduce((sum, { lnD }) => sum + (lnD - average) ** 2, 0);
+function explained(points: readonly { D: number }[], left: number): number {
+  // In order of size: the sums must not depend on the order in which points are given.
+  const logs = points.map(({ D }) => Math.log(D)).toSorted((a, b) => a - b);
+  const average = logs.reduce((sum, lnD) => sum + lnD, 0) / logs.length;
+  const total = logs.reduce((sum, lnD) => sum + (lnD - average) ** 2, 0);
   const noise = points.length * 1e-12;
   if (total <= noise) return left <= noise ? 1 : 0;
   return settled(1 - left / total);
 }
 
-function spanOf(ordered: readonly LnPoint[]): PointSpan {
+export function spanOf(ordered: readonly LnPoint[]): PointSpan {
   let [lnLeast, lnMost] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
   for (const { lnD } of ordered) {
     lnLeast = Math.min(lnLeast, lnD);
