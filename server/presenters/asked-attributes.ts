@@ -32,7 +32,7 @@ export function askedAttributes({ edition, workbook, facts, typed }: AttributeSo
     if (stated === undefined && project === undefined) {
       return [ask(attribute, 'Neither the workbook nor the project states it.', typed)];
     }
-    return conflict === null ? [] : [ask(attribute, conflict, typed, [stated?.value, project])];
+    return conflict === null ? [] : [ask(attribute, conflict, typed, [stated?.value, meantBy(attribute, project)])];
   });
 }
 
@@ -91,10 +91,15 @@ function conflictOf(
   project: Scalar | undefined,
 ): string | null {
   if (stated === undefined || project === undefined) return null;
-  const meant = matchValue(attribute, project) ?? project;
-  if (sameValue(meant, stated.value)) return null;
+  if (sameValue(meantBy(attribute, project), stated.value)) return null;
   const unit = attribute.unit === undefined ? '' : ` ${attribute.unit}`;
   return `The workbook says ${stated.value}${unit}, the project says ${project}${unit}.`;
+}
+
+/** A project's fact in the edition's own words, so that it can be chosen and compared. */
+function meantBy(attribute: AttributeDefinition, project: Scalar | undefined): Scalar {
+  const fact = project ?? '';
+  return matchValue(attribute, fact) ?? fact;
 }
 
 function ask(

@@ -1,7 +1,8 @@
 import type { ReadingResult } from '#rules/reading/reading-result';
 import type { DocumentRecord, MixRecord } from '#rules/record';
 import { type Scalar, withStandardAttributes } from '#rules/rule-sets/attribute';
-import { type AttributeSources, conflictDoubts } from '../../presenters/asked-attributes';
+import { sameValue } from '#rules/rule-sets/match-value';
+import { type AttributeSources, askedAttributes, conflictDoubts } from '../../presenters/asked-attributes';
 
 export interface TypedAttribute {
   name: string;
@@ -22,8 +23,9 @@ export interface RecordParts {
 }
 
 /** The canonical record: what was read, with what people said on the reading page laid over it. */
-export function composeRecord({ read, typed, documents, edition, facts }: RecordParts): MixRecord {
+export function composeRecord({ read, documents, edition, facts, ...parts }: RecordParts): MixRecord {
   const { record } = read;
+  const typed = stillAsked(parts.typed, { edition, workbook: record.attributes, facts });
   const attributes = { ...record.attributes };
   const definitions = new Map(withStandardAttributes(edition.attributes).map((each) => [each.name, each]));
   for (const { name, value, by, on } of typed) {
@@ -45,4 +47,19 @@ export function composeRecord({ read, typed, documents, edition, facts }: Record
   });
   const doubts = record.doubts.filter(({ about }) => !answered.has(about.attribute ?? ''));
   return { attributes, readings: record.readings, documents, doubts: [...doubts, ...conflicts] };
+}
+
+/**
+ * What was typed outlives the workbook it was typed beside. It holds only while the page would still ask for it, and
+ * only among what may be answered: a replaced workbook that states another value is not overruled by an old answer.
+ */
+function stillAsked(
+  typed: readonly TypedAttribute[],
+  sources: Omit<AttributeSources, 'typed'>,
+): TypedAttribute[] {
+  const asked = new Map(askedAttributes({ ...sources, typed: {} }).map((each) => [each.name, each]));
+  return typed.filter(({ name, value }) => {
+    const choices = asked.get(name)?.values;
+    return choices !== undefined && (choices.length === 0 || choices.some((each) => sameValue(each, value)));
+  });
 }

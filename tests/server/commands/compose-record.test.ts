@@ -18,7 +18,12 @@ const edition = ruleSetSchema.parse({
       clause: '412.03(a)',
       title: 'Air voids',
       severity: 'required',
-      when: { all: [{ fact: 'designTraffic', operator: 'lessThan', value: 30 }] },
+      when: {
+        all: [
+          { fact: 'designTraffic', operator: 'lessThan', value: 30 },
+          { fact: 'course', operator: 'equal', value: 'surface' },
+        ],
+      },
       measure: { kind: 'reading', quantity: 'air-voids' },
       limit: { min: 3, max: 5 },
     },
@@ -55,8 +60,8 @@ const parts = (overrides: Partial<RecordParts> = {}): RecordParts => ({
 const typedTraffic = { name: 'designTraffic', value: 30, by: 'Sorcha Lund', on: '2026-03-09' };
 
 describe('the canonical record', () => {
-  it('takes what was typed in place of what was read, with who and when', () => {
-    const { attributes } = composeRecord(parts({ typed: [typedTraffic] }));
+  it('takes what was typed for what nobody states, with who and when', () => {
+    const { attributes } = composeRecord(parts({ read: read({ attributes: {} }), typed: [typedTraffic] }));
     expect(attributes.designTraffic).toEqual({
       value: 30,
       unit: 'million ESAL',
@@ -64,6 +69,19 @@ describe('the canonical record', () => {
       typed: { by: 'Sorcha Lund', on: '2026-03-09' },
       source: null,
     });
+  });
+
+  it('lets a replaced workbook that states a value win over what was typed before it did', () => {
+    const { attributes, doubts } = composeRecord(parts({ typed: [typedTraffic] }));
+    expect(attributes.designTraffic).toMatchObject({ value: 12, origin: 'reported' });
+    expect(doubts.map(({ cell }) => cell)).toEqual(['C2', 'B9']);
+  });
+
+  it('asks again where the workbook changed after somebody said which of two values holds', () => {
+    const old = { ...typedTraffic, value: 3 };
+    const { attributes, doubts } = composeRecord(parts({ facts: { designTraffic: 30 }, typed: [old] }));
+    expect(attributes.designTraffic?.value).toBe(12);
+    expect(doubts.at(-1)).toMatchObject({ about: { attribute: 'designTraffic' } });
   });
 
   it('leaves a doubt about an attribute behind once it is typed, and no other', () => {
