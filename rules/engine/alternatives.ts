@@ -1,5 +1,7 @@
 import type { Doubt, MixRecord, Reading } from '../record';
+import { answerWords } from './doubts';
 import { type Finding, findingKey } from './finding';
+import { type Obstacle, undecided } from './obstacle';
 
 type Alternative = Doubt['alternatives'][number];
 
@@ -11,8 +13,8 @@ export function unsettledBy(input: {
   record: MixRecord;
   findings: readonly Finding[];
   evaluate: (record: MixRecord) => readonly Finding[];
-}): Map<string, string> {
-  const unsettled = new Map<string, string>();
+}): Map<string, Obstacle> {
+  const unsettled = new Map<string, Obstacle>();
   for (const doubt of input.record.doubts) {
     for (const alternative of doubt.alternatives) {
       if (!isMeaning(alternative)) continue;
@@ -22,7 +24,7 @@ export function unsettledBy(input: {
         const key = findingKey(finding);
         const outcome = outcomes.get(key);
         if (outcome === finding.outcome || finding.outcome === 'undecided' || unsettled.has(key)) continue;
-        unsettled.set(key, reasonOf(doubt, alternative, outcome));
+        unsettled.set(key, undecided(reasonOf(doubt, alternative, outcome), answerWords(doubt)));
       }
     }
   }

@@ -10,7 +10,12 @@ import type { World } from './world';
 
 export type Applicability =
   | { kind: 'applies' }
-  | { kind: 'not applicable' | 'undecided'; reason: string; evidence: Evidence[] };
+  | {
+      kind: 'not applicable' | 'undecided';
+      reason: string;
+      wouldDecide?: string | undefined;
+      evidence: Evidence[];
+    };
 
 /** Whether a rule applies to this mix. Not knowing is never taken for not applying. */
 export function applicabilityOf(world: World, rule: ResolvedRule): Applicability {
@@ -35,7 +40,10 @@ export function applicabilityOf(world: World, rule: ResolvedRule): Applicability
       comparisons.map(factOf).flatMap((fact) => (fact.kind === 'value' ? [] : [fact.reason])),
     );
     const reason = `Whether this rule applies is not known: ${[...unknown].join('; ')}.`;
-    return { kind: 'undecided', reason, evidence };
+    const acts = comparisons
+      .map(factOf)
+      .flatMap((fact) => ('wouldDecide' in fact ? (fact.wouldDecide ?? []) : []));
+    return { kind: 'undecided', reason, wouldDecide: [...new Set(acts)].join(' ') || undefined, evidence };
   }
   const known = new Set(
     comparisons.flatMap((comparison) => factWords(world, comparison, factOf(comparison))),
@@ -55,8 +63,9 @@ function resolveFact(world: World, leaf: LeafComparison): Fact {
   const value = quantityValue(world, params.quantity, params.at);
   if (value.ok) return { kind: 'value', value: value.value };
   const label = factLabel(leaf as Comparison, world.view);
-  if (value.outcome === 'not shown') return { kind: 'missing', reason: `${label} is missing` };
-  return { kind: 'doubtful', reason: value.reason.replace(/\.$/, '') };
+  if (value.outcome === 'not shown')
+    return { kind: 'missing', reason: `${label} is missing`, wouldDecide: `State ${label}.` };
+  return { kind: 'doubtful', reason: value.reason.replace(/\.$/, ''), wouldDecide: value.wouldDecide };
 }
 
 function factWords(world: World, comparison: Comparison, fact: Fact): string[] {

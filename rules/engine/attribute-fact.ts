@@ -5,6 +5,7 @@ import { matchValue, sameValue } from '../rule-sets/match-value';
 import { allowedLabel } from '../rule-sets/when-words';
 import { numberWords, uncapitalised, withUnit } from '../rule-sets/words';
 import type { Fact } from './decide';
+import { answerWords } from './doubts';
 import type { Evidence } from './finding';
 import type { World } from './world';
 
@@ -24,10 +25,11 @@ function resolveAttribute(world: World, name: string): Fact {
   const stated = statedValue(world, name);
   if (stated === null) {
     const doubt = world.record.doubts.find((each) => isAbout(each, name));
-    if (!doubt) return { kind: 'missing', reason: `${label} is missing` };
+    if (!doubt) return { kind: 'missing', reason: `${label} is missing`, wouldDecide: `State the ${label}.` };
     return {
       kind: 'doubtful',
       reason: `${label} is in doubt${placeWords(doubt)}: ${doubt.reason.replace(/\.$/, '')}`,
+      wouldDecide: answerWords(doubt),
     };
   }
   const inUnit = typeof stated.value === 'number' ? inAttributeUnit(stated, attribute.unit) : stated.value;
@@ -36,6 +38,7 @@ function resolveAttribute(world: World, name: string): Fact {
     return {
       kind: 'doubtful',
       reason: `${label} is stated as ${stated.value}, which is not one of the values that the edition knows`,
+      wouldDecide: `State the ${label} as one of the values that the edition knows.`,
     };
   }
   return { kind: 'value', value };

@@ -79,6 +79,7 @@ function base(name: string, subject: string) {
     kind: 'consistency',
     borderline: false,
     ruleSentence: 'Built-in check: data that cannot be, or that contradict each other, are reported.',
+    wouldDecide: null,
     roundingSentence: null,
     precision: null,
     advice: null,

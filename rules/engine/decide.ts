@@ -6,8 +6,8 @@ import type { Comparison, Condition } from '../rule-sets/when';
 /** What a condition compares. Only a clean value ever reaches an operator. */
 export type Fact =
   | { kind: 'value'; value: Scalar }
-  | { kind: 'missing'; reason: string }
-  | { kind: 'doubtful'; reason: string };
+  | { kind: 'missing'; reason: string; wouldDecide?: string | undefined }
+  | { kind: 'doubtful'; reason: string; wouldDecide?: string | undefined };
 
 export type Truth = 'true' | 'false' | 'unknown';
 

@@ -2,6 +2,7 @@ import type { Quantity } from '../quantities/quantity';
 import { allQuantities } from '../quantities/registry';
 import type { Conditions, Doubt } from '../record';
 import type { Evidence } from './finding';
+import { type Obstacle, undecided } from './obstacle';
 import type { Sample, SampleRequest } from './sample';
 import { isPerTrial } from './scope';
 import type { World } from './world';
@@ -10,7 +11,7 @@ import type { World } from './world';
  * Why a value is doubtful, or null: an unanswered doubt about it, or about what it is derived from, at conditions
  * for which no sure reading exists.
  */
-export function doubtAbout(world: World, request: SampleRequest, sample: Sample | null): string | null {
+export function doubtAbout(world: World, request: SampleRequest, sample: Sample | null): Obstacle | null {
   if (world.record.doubts.length === 0) return null;
   const concerned = concernedBy(world, request, sample);
   const trials = trialsOf(request, sample);
@@ -19,7 +20,7 @@ export function doubtAbout(world: World, request: SampleRequest, sample: Sample 
       const isConcerned = concerned.some(
         ({ quantity, at }) => quantity === subject.quantity && couldBe(world, subject, at, trials),
       );
-      if (isConcerned && !hasSureReading(world, subject)) return doubtWords(world, doubt, subject.quantity);
+      if (isConcerned && !hasSureReading(world, subject)) return undecided(doubtWords(world, doubt, subject.quantity), answerWords(doubt));
     }
   }
   return null;
@@ -54,6 +55,11 @@ function concernedBy(world: World, request: SampleRequest, sample: Sample | null
 
 /** The one sieve that a derived quantity rests on, in mm. */
 const DUST_SIEVE_MM = 0.075;
+
+/** "Answer the doubt at Trials E9." */
+export function answerWords({ sheet, cell }: Pick<Doubt, 'sheet' | 'cell'>): string {
+  return `Answer the doubt at ${sheet === '' ? '' : `${sheet} `}${cell}.`;
+}
 
 export function doubtWords(world: World, doubt: Doubt, quantity: string): string {
   const label = world.view.quantity(quantity)?.label ?? quantity;

@@ -22,7 +22,13 @@ export function evaluateAttribute(world: World, rule: ResolvedRule, measure: Att
   if (fact.kind !== 'value') {
     const outcome = fact.kind === 'missing' ? 'not shown' : 'undecided';
     return [
-      makeFinding(world, rule, { ...base, outcome, reason: `${capitalise(fact.reason)}.`, limit: shown }),
+      makeFinding(world, rule, {
+        ...base,
+        outcome,
+        reason: `${capitalise(fact.reason)}.`,
+        wouldDecide: fact.wouldDecide,
+        limit: shown,
+      }),
     ];
   }
   if (!limit.ok) return [makeFinding(world, rule, { ...base, ...limit })];

@@ -9,7 +9,7 @@ import { conditionsOfSubjects } from './evaluate-reading';
 import type { Evidence, Finding, Observed } from './finding';
 import { judge, rounderOf } from './judge';
 import { makeFinding } from './make-finding';
-import { notShown, type Obstacle, undecided } from './obstacle';
+import { COMPACT_WORDS, notShown, type Obstacle, undecided } from './obstacle';
 import { isBorderline, precisionOf } from './precision';
 import { resolveLimit } from './resolve-limit';
 import { evidenceOfRecomputed, labelOfRequest, type SampleRequest, takeSample } from './sample';
@@ -99,7 +99,7 @@ function laboratories(world: World, measure: DifferenceMeasure, at: Conditions):
     };
     const taken = takeSample(world, request);
     const doubt = doubtAbout(world, request, taken.ok ? taken.sample : null);
-    if (doubt !== null) return undecided(doubt);
+    if (doubt !== null) return doubt;
     if (!taken.ok) return taken;
     const value = statisticOf({
       sample: taken.sample,
@@ -109,7 +109,10 @@ function laboratories(world: World, measure: DifferenceMeasure, at: Conditions):
     });
     if (!value.ok) return value;
     if (value.judgeable.allowed !== null || value.judgeable.text !== null) {
-      return undecided(`A value by the ${laboratory} is only known as ${value.judgeable.text ?? 'a range'}.`);
+      return undecided(
+        `A value by the ${laboratory} is only known as ${value.judgeable.text ?? 'a range'}.`,
+        `Give the ${laboratory}'s result as a number.`,
+      );
     }
     values.push(value.judgeable.value);
     evidence.push(...taken.sample.items.map((item) => item.evidence));
@@ -125,15 +128,16 @@ function reported(world: World, measure: DifferenceMeasure, at: Conditions): Pai
   const label = labelOfRequest(world, request);
   const taken = takeSample(world, request);
   const doubt = doubtAbout(world, request, taken.ok ? taken.sample : null);
-  if (doubt !== null) return undecided(doubt);
+  if (doubt !== null) return doubt;
   if (!taken.ok) return taken;
   const { recomputed, interpolated, items } = taken.sample;
   const ofReported = recomputed?.reported ? null : doubtAbout(world, request, null);
-  if (ofReported !== null) return undecided(ofReported);
+  if (ofReported !== null) return ofReported;
   if (recomputed === null) {
     return notShown(`The raw readings from which ${label} could be recomputed are not given.`);
   }
-  if (interpolated) return undecided(`The value of ${label} is interpolated between trials, not recomputed.`);
+  if (interpolated)
+    return undecided(`The value of ${label} is interpolated between trials, not recomputed.`, COMPACT_WORDS);
   if (recomputed.reported === null || recomputed.reported.value === null) {
     return notShown(`The workbook reports no value of ${label}.`);
   }

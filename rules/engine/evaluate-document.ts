@@ -3,6 +3,7 @@ import type { DocumentMeasure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
 import { dateWords, plural } from '../rule-sets/words';
 import { addMonths } from './calendar';
+import { answerWords } from './doubts';
 import type { Evidence, Finding, Observed } from './finding';
 import { makeFinding } from './make-finding';
 import { notShown, type Obstacle, undecided } from './obstacle';
@@ -29,6 +30,7 @@ export function evaluateDocument(world: World, rule: ResolvedRule, measure: Docu
       at: {},
       outcome: verdict.outcome,
       reason: verdict.reason,
+      wouldDecide: 'wouldDecide' in verdict ? verdict.wouldDecide : undefined,
       observed: newest === null ? null : observedOf(newest, matching.length),
       limit: limit.ok ? limit.limit : null,
       evidence: matching.map(evidenceOf),
@@ -52,16 +54,24 @@ function verdictOn(world: World, measure: DocumentMeasure, label: string, found:
   if (date === null) {
     return undecided(
       `Its age is not known: the ${measure.on === 'letting' ? 'letting date' : 'date of submission'} is not given.`,
+      `Give the ${measure.on === 'letting' ? 'letting date' : 'date of submission'}.`,
     );
   }
-  if (newest.date === null) return undecided('It is stated without a date.');
+  if (newest.date === null)
+    return undecided('It is stated without a date.', `State the date of the ${label.toLowerCase()}.`);
   if (newest.date > date) {
-    return undecided(`It is dated ${dateWords(newest.date)}, later than ${dateWords(date)}.`);
+    return undecided(
+      `It is dated ${dateWords(newest.date)}, later than ${dateWords(date)}.`,
+      `Correct its date, or enclose one dated no later than ${dateWords(date)}.`,
+    );
   }
   const verdict = ageVerdict(newest, newest.date, date, measure.maximumAgeMonths);
   const hasUndated = matching.some((document) => document.date === null);
   if (verdict.outcome === 'fail' && hasUndated) {
-    return undecided(`${verdict.reason} Another one is stated without a date and may be newer.`);
+    return undecided(
+      `${verdict.reason} Another one is stated without a date and may be newer.`,
+      'State the date of the other one.',
+    );
   }
   return verdict;
 }
@@ -75,6 +85,7 @@ function absent(world: World, measure: DocumentMeasure, label: string, ofType: D
     const sheet = doubt.sheet === '' ? '' : `${doubt.sheet} `;
     return undecided(
       `A cell with the ${label.toLowerCase()} (${sheet}${doubt.cell}) was not read with certainty: ${doubt.reason.replace(/\.$/, '')}.`,
+      answerWords(doubt),
     );
   }
   if (ofType.length > 0) return notShown('It is stated, but not enclosed.');

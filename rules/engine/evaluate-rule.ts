@@ -17,8 +17,10 @@ export function evaluateRule(world: World, rule: ResolvedRule): Finding[] {
   try {
     const applicability = applicabilityOf(world, rule);
     if (applicability.kind === 'applies') return measured(world, rule, rule.measure);
-    const { kind, reason, evidence } = applicability;
-    return [makeFinding(world, rule, { ...wholeRule(world, rule), outcome: kind, reason, evidence })];
+    const { kind, reason, wouldDecide, evidence } = applicability;
+    return [
+      makeFinding(world, rule, { ...wholeRule(world, rule), outcome: kind, reason, wouldDecide, evidence }),
+    ];
   } catch (error) {
     const detail = error instanceof Error ? error.message : String(error);
     const reason = `An internal error occurred while this rule was evaluated, so nothing is decided: ${detail}`;

@@ -40,8 +40,7 @@ export function evaluateValue(request: ValueRequest): Finding {
     const evidence = taken.ok ? evidenceOf(taken.sample) : [];
     return makeFinding(world, rule, {
       ...base,
-      outcome: 'undecided',
-      reason: doubt,
+      ...doubt,
       limit: shownLimit,
       evidence,
     });
@@ -105,7 +104,12 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   const short = tooFew(measure, sample);
   if (short) return makeFinding(world, rule, { ...parts, ...short });
   if (reported?.contradicts) {
-    return makeFinding(world, rule, { ...parts, outcome: 'undecided', reason: reported.reason });
+    return makeFinding(world, rule, {
+      ...parts,
+      outcome: 'undecided',
+      reason: reported.reason,
+      wouldDecide: reported.wouldDecide,
+    });
   }
   const reason = [reasonOf(judgement, judgeable, limit), judged.note, reported?.reason, originNote(sample)]
     .filter(Boolean)
@@ -173,6 +177,7 @@ function tooFew(measure: ReadingMeasure | GradationMeasure, sample: Sample): Obs
   const missing = measure.minimumCount - sample.count;
   return undecided(
     `There ${sample.count === 1 ? 'is' : 'are'} ${plural(sample.count, 'result')}, and the rule asks for at least ${measure.minimumCount}; ${plural(missing, 'more result')} would decide it.`,
+    `Add ${plural(missing, 'more result')} of the same kind.`,
   );
 }
 

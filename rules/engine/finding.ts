@@ -103,6 +103,8 @@ export const findingSchema = z.strictObject({
   sentence: z.string(),
   /** Why the outcome is what it is: what is missing, what is doubtful, which condition is false, what would decide it. */
   reason: z.string(),
+  /** Of an undecided finding: the act that would decide it. Null in checks by engines that did not say. */
+  wouldDecide: z.string().nullable().default(null),
   /** How the statistic was rounded, in words: "13.94 becomes 13.9: ASTM E29, rounding method, to 0.1". */
   roundingSentence: z.string().nullable(),
   /** ± precision used for borderline; null where there is none, and its origin in words. */

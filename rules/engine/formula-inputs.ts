@@ -51,7 +51,7 @@ function inputOf(
   const request = hasSpecimens ? { ...plain, where: measure.where } : plain;
   const taken = hasSpecimens ? takeSample(world, request) : whole;
   const doubt = doubtAbout(world, request, taken.ok ? taken.sample : null);
-  if (doubt !== null) return undecided(doubt);
+  if (doubt !== null) return doubt;
   if (!taken.ok) return taken;
   const statistic = statisticOf({ sample: taken.sample, statistic: 'mean', within: null, hasMin: true });
   if (!statistic.ok) return statistic;

@@ -1,7 +1,7 @@
 import { plural } from '../rule-sets/words';
 import type { ResolvedLimit } from './finding';
 import { type Judgement, judge, type Rounder } from './judge';
-import { type Obstacle, undecided } from './obstacle';
+import { COMPACT_WORDS, type Obstacle, SINGLE_WORDS, undecided } from './obstacle';
 import type { Sample } from './sample';
 import { type Judgeable, judgeableOf } from './statistic';
 
@@ -14,10 +14,11 @@ export function judgeEach(
   if (sample.interpolated) {
     return undecided(
       'The value is interpolated between trials, so the values of single specimens are not known.',
+      COMPACT_WORDS,
     );
   }
   if (sample.meanOnly && sample.count > 1) {
-    return undecided('Only the mean is known, not the values of the single specimens.');
+    return undecided('Only the mean is known, not the values of the single specimens.', SINGLE_WORDS);
   }
   const judged = sample.items.map((item) => {
     const judgeable = judgeableOf(item, limit.min !== null);

@@ -28,7 +28,8 @@ export function findRow(
   if (found && others.length === 0) return { ok: true, found };
   const title = world.view.tableTitle(tableId);
   if (found) return undecided(`Several rows of ${title} match this mix.`);
-  return undecided(`${title} has no row for ${keyWords(world, tableId, at)}.`);
+  const words = keyWords(world, tableId, at);
+  return undecided(`${title} has no row for ${words}.`, `Correct ${words}, or have a row added to ${title}.`);
 }
 
 /** Rows that match the attributes; without a sieve given, of every sieve. */
@@ -47,7 +48,10 @@ export function matchingRows(
     }
     const fact = attributeFact(world, key);
     if (fact.kind !== 'value')
-      return undecided(`Which row of ${table.title ?? table.id} applies is not known: ${fact.reason}.`);
+      return undecided(
+        `Which row of ${table.title ?? table.id} applies is not known: ${fact.reason}.`,
+        fact.wouldDecide,
+      );
     values.set(key, fact.value);
   }
   const found = table.rows.flatMap((row, i): FoundRow[] => {

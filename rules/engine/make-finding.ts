@@ -19,6 +19,8 @@ export interface FindingParts {
   at: Conditions;
   outcome: Outcome;
   reason: string;
+  /** What would decide it, where it is undecided. */
+  wouldDecide?: string | undefined;
   observed?: Observed | null;
   limit?: ResolvedLimit | null;
   margin?: number | null;
@@ -38,7 +40,8 @@ export function makeFinding(world: World, rule: ResolvedRule, parts: FindingPart
   const { subject, at } = parts;
   const doubt = world.unsettled.get(findingKey({ rule: rule.id, subject }));
   const outcome = doubt === undefined ? parts.outcome : 'undecided';
-  const reason = doubt ?? parts.reason;
+  const reason = doubt?.reason ?? parts.reason;
+  const wouldDecide = doubt === undefined ? parts.wouldDecide : doubt.wouldDecide;
   const observed = parts.observed ?? null;
   const limit = parts.limit ?? null;
   const date = parts.date ?? null;
@@ -60,6 +63,7 @@ export function makeFinding(world: World, rule: ResolvedRule, parts: FindingPart
     requirement: requirementSentence({ rule, view, at, limit, date }),
     sentence: resultSentence({ rule, view, at, limit, outcome, observed, date }),
     reason,
+    wouldDecide: outcome === 'undecided' ? (wouldDecide ?? null) : null,
     roundingSentence: parts.roundingSentence ?? null,
     precision: parts.precision ? { value: parts.precision.value, origin: parts.precision.origin } : null,
     advice: rule.advice ?? null,

@@ -5,14 +5,22 @@ export interface Obstacle {
   ok: false;
   outcome: Extract<Outcome, 'not shown' | 'undecided' | 'not applicable'>;
   reason: string;
+  /** What would decide it, as an act: "State the design traffic." */
+  wouldDecide?: string | undefined;
 }
+
+/** What gives single specimens, or values of its own, at a content that no trial has. */
+export const COMPACT_WORDS = 'Compact and test specimens at the declared binder content.';
+
+export const SINGLE_WORDS = 'State the value of each specimen.';
+export const NUMBER_WORDS = 'Give the result as a number.';
 
 export function notShown(reason: string): Obstacle {
   return { ok: false, outcome: 'not shown', reason };
 }
 
-export function undecided(reason: string): Obstacle {
-  return { ok: false, outcome: 'undecided', reason };
+export function undecided(reason: string, wouldDecide?: string): Obstacle {
+  return { ok: false, outcome: 'undecided', reason, wouldDecide };
 }
 
 export function notApplicable(reason: string): Obstacle {

@@ -14,7 +14,7 @@ export function quantityValue(
   const request = { quantity, at };
   const result = takeSample(world, request);
   const doubt = doubtAbout(world, request, result.ok ? result.sample : null);
-  if (doubt) return undecided(doubt);
+  if (doubt) return doubt;
   if (!result.ok) return result;
   const { items } = result.sample;
   const censored = items.find((item) => item.value === null || item.qualifier !== null);

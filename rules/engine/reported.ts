@@ -21,7 +21,9 @@ interface ReportedInput {
  * What the workbook's own value says beside the recomputed one. Where the two differ beyond the tolerance and
  * give different outcomes, neither stands, unless exactly one named cause explains the reported value.
  */
-export function againstReported(input: ReportedInput): { contradicts: boolean; reason: string } | null {
+export function againstReported(
+  input: ReportedInput,
+): { contradicts: boolean; reason: string; wouldDecide?: string } | null {
   const { sample, limit, rounder, statistic, outcome, world, quantity } = input;
   const { recomputed } = sample;
   const isOfMean = statistic === 'mean' || (sample.count === 1 && statistic !== 'count');
@@ -49,6 +51,7 @@ export function againstReported(input: ReportedInput): { contradicts: boolean; r
   return {
     contradicts: true,
     reason: `${values} The two give different outcomes, and no single cause explains the difference; correct the raw readings or the reported value.`,
+    wouldDecide: `Correct the raw readings, or the reported value${place}, so that the two agree.`,
   };
 }
 

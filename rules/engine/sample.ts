@@ -93,7 +93,7 @@ function takeRecomputed(world: World, request: SampleRequest): SampleResult | nu
   );
   const [value, ...others] = whole;
   if (others.length > 0)
-    return undecided(`There are several values of ${label}, and nothing says which one counts.`);
+    return undecided(`There are several values of ${label}, and nothing says which one counts.`, `Leave one value of ${label}, or say what tells them apart.`);
   return { ok: true, sample: value ? sampleOfRecomputed(value) : sampleOfSpecimens(selected.chosen) };
 }
 
@@ -174,7 +174,7 @@ function takeReadings(world: World, request: SampleRequest): SampleResult {
   if (!selected.ok) return selected;
   const faulty = selected.chosen.find((each) => each.fault !== null);
   if (faulty)
-    return undecided(`A reading of ${label}${placeWords(faulty.reading)} cannot be used: ${faulty.fault}.`);
+    return undecided(`A reading of ${label}${placeWords(faulty.reading)} cannot be used: ${faulty.fault}.`, 'Give it as a number in a unit of that quantity.');
   const labelled = selected.chosen.filter(({ at }) => at.specimen !== undefined);
   // A value without a specimen beside values with one is their stated mean, not one more of them.
   return replicates(labelled.length > 0 ? labelled : selected.chosen, label);
@@ -190,6 +190,7 @@ function replicates(readings: UsableReading[], label: string): SampleResult {
       const of = key === '' ? '' : ` of specimen ${key}`;
       return undecided(
         `Two readings of ${label}${of} disagree${placeWords(earlier.reading)}${placeWords(each.reading, ' and')}; label replicates as specimens, or correct one.`,
+        'Correct one of the two, or label them as specimens.',
       );
     }
   }

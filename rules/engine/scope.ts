@@ -43,7 +43,10 @@ function noStockpile<T extends Candidate>({ label, wanted }: Scope<T>, candidate
     return notShown(`There are readings of ${label} for single stockpiles, but none for the blend.`);
   }
   if (candidates.some(({ at }) => at.stockpile === undefined)) {
-    return undecided(`Readings of ${label} do not say which stockpile they belong to.`);
+    return undecided(
+      `Readings of ${label} do not say which stockpile they belong to.`,
+      'State the stockpile of each.',
+    );
   }
   return notShown(`There is no reading of ${label}.`);
 }
@@ -80,6 +83,7 @@ function ofBlend<T extends Candidate>(
   if (ofDesign.length > 0) return { ok: true, chosen: ofDesign };
   return undecided(
     `Readings of ${label} belong to blends ${orList([...blends])}, and the job mix does not name the one it uses.`,
+    'Name the blend of the job mix.',
   );
 }
 

@@ -63,11 +63,15 @@ function selectNamed<T extends Candidate>(
   if (matches.includes('unresolved')) {
     return undecided(
       `Readings of ${label} are at a number of gyrations, and which number the ${wanted[selector]} gyrations are is not stated.`,
+      `State the ${wanted[selector]} number of gyrations.`,
     );
   }
   if (chosen.length > 0) return { ok: true, chosen };
   if (candidates.some((each) => each.at[selector] === undefined)) {
-    return undecided(`Readings of ${label} do not say whether they were obtained ${asked}.`);
+    return undecided(
+      `Readings of ${label} do not say whether they were obtained ${asked}.`,
+      `State ${CONDITION_WORDS[selector]} of each reading of ${label}.`,
+    );
   }
   const others = [
     ...new Set(candidates.map((each) => conditionWords({ [selector]: each.at[selector] }).trim())),
@@ -91,6 +95,7 @@ function leaveUnnamed<T extends Candidate>(
   if (areAlike) return { ok: true, chosen: candidates };
   return undecided(
     `Readings of ${label} differ in ${SELECTOR_WORDS[selector]}, and the rule does not say which one counts.`,
+    `Leave only the readings of ${label} of the test that is meant, or have the rule name ${CONDITION_WORDS[selector]}.`,
   );
 }
 
@@ -126,6 +131,19 @@ function sameGyrations(world: World, wanted: unknown, stated: unknown): Match {
   if (resolved === null) return 'unresolved';
   return resolved === number ? 'same' : 'other';
 }
+
+const CONDITION_WORDS: Record<Selector, string> = {
+  sieve: 'the sieve',
+  variant: 'the form of the test',
+  gyrations: 'the number of gyrations',
+  temperature: 'the temperature',
+  time: 'the loading time',
+  stress: 'the stress',
+  passes: 'the number of passes',
+  frequency: 'the frequency',
+  aging: 'the aging',
+  specimen: 'the specimen',
+};
 
 const SELECTOR_WORDS: Record<Selector, string> = {
   sieve: 'sieve',

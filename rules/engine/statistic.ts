@@ -4,7 +4,7 @@ import { percentWithinLimits } from '../numerics/percent-within-limits';
 import { range, sampleStandardDeviation } from '../numerics/spread';
 import type { Statistic } from '../rule-sets/measure';
 import { numberWords } from '../rule-sets/words';
-import { type Obstacle, undecided } from './obstacle';
+import { COMPACT_WORDS, NUMBER_WORDS, type Obstacle, SINGLE_WORDS, undecided } from './obstacle';
 import type { ResolvedInterval } from './resolve-limit';
 import type { Sample, SampleItem } from './sample';
 
@@ -35,10 +35,11 @@ export function statisticOf(request: StatisticRequest): { ok: true; judgeable: J
   if (sample.interpolated && statistic !== 'mean') {
     return undecided(
       'The value is interpolated between trials, so the values of single specimens are not known.',
+      COMPACT_WORDS,
     );
   }
   if (sample.meanOnly && statistic !== 'mean' && !single) {
-    return undecided('Only the mean is known, not the values of the single specimens.');
+    return undecided('Only the mean is known, not the values of the single specimens.', SINGLE_WORDS);
   }
   const judgeables = sample.items.map((item) => judgeableOf(item, request.hasMin));
   if (judgeables.some((each) => each.allowed !== null || each.text !== null))
@@ -104,7 +105,9 @@ function ofNumbers(
     case 'each':
       return plain(last);
     case 'range':
-      return sorted.length < 2 ? undecided('A range needs at least two values.') : numeric(range(sorted));
+      return sorted.length < 2
+        ? undecided('A range needs at least two values.', 'Add the value of a second specimen.')
+        : numeric(range(sorted));
     case 'standard-deviation':
       return numeric(sampleStandardDeviation(sorted));
     case 'trimmed-mean':
@@ -127,6 +130,7 @@ function ofCensored(
   if (statistic !== 'mean' && statistic !== 'min' && statistic !== 'max') {
     return undecided(
       `A ${statistic.replaceAll('-', ' ')} cannot be taken over a value that is only known as ${textOf(judgeables)}.`,
+      NUMBER_WORDS,
     );
   }
   const combine = COMBINE[statistic];

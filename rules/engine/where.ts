@@ -19,7 +19,7 @@ export function applyWhere(
     const met: SampleItem[] = [];
     for (const item of items) {
       const value = valueOfSpecimen(world, where, request, item);
-      if (value === null) return undecided(unknownReason(world, where, item));
+      if (value === null) return undecided(unknownReason(world, where, item), stateWords(world, where));
       const { min, max, minExclusive, maxExclusive } = interval.interval;
       const isAbove = min === null || (minExclusive ? value > min : value >= min);
       const isBelow = max === null || (maxExclusive ? value < max : value <= max);
@@ -66,6 +66,11 @@ function valueOfSpecimen(
     if (values.size === 1 && only !== undefined) return only;
   }
   return null;
+}
+
+function stateWords(world: World, where: Where): string {
+  const quantity = world.view.quantity(where.quantity);
+  return `State ${quantity ? quantityPhrase(quantity, where.at) : where.quantity} of each specimen.`;
 }
 
 function unknownReason(world: World, where: Where, item: SampleItem): string {

@@ -5,6 +5,7 @@ import { viewOf } from '../rule-sets/edition-view';
 import type { ResolvedEdition, ResolvedTable } from '../rule-sets/resolve';
 import type { Analysis, RecomputedValue } from './analysis';
 import type { Fact } from './decide';
+import type { Obstacle } from './obstacle';
 
 /** A reading as the engine uses it: in the canonical unit, or with the reason why it cannot be used. */
 export interface UsableReading {
@@ -29,7 +30,7 @@ export interface World {
   /** Attributes as far as they have been asked for. */
   facts: Map<string, Fact>;
   /** Findings that an unanswered doubt could turn, by key, each with the reason. */
-  unsettled: ReadonlyMap<string, string>;
+  unsettled: ReadonlyMap<string, Obstacle>;
   /** Filled while rules are judged: computed values whose reported counterpart has another outcome. */
   contradicted: Set<RecomputedValue>;
 }
@@ -39,7 +40,7 @@ export function worldOf(input: {
   edition: ResolvedEdition;
   context: CheckContext;
   analysis: Analysis;
-  unsettled?: ReadonlyMap<string, string>;
+  unsettled?: ReadonlyMap<string, Obstacle>;
 }): World {
   const view = viewOf(input.edition);
   const readings = new Map<string, UsableReading[]>();
