@@ -1,13 +1,12 @@
 import { sourceWords } from '#rules/engine/make-finding';
-import { quantityById } from '#rules/quantities/registry';
-import { viewOf } from '#rules/rule-sets/edition-view';
+import { type EditionView, viewOf } from '#rules/rule-sets/edition-view';
 import type { ResolvedEdition, ResolvedRule, ResolvedTable } from '#rules/rule-sets/resolve';
 import type { Rule } from '#rules/rule-sets/schema';
 import { cellWords, conditionClause, roundingClause, ruleSentence } from '#rules/rule-sets/sentences';
 import { capitalised, numberWords, withUnit } from '#rules/rule-sets/words';
 import type { RuleSetView, RuleView, TableView } from '#shared/contracts/rule-sets';
 
-type Contents = Pick<RuleSetView, 'ruleViews' | 'removed' | 'tables'>;
+type Contents = Pick<RuleSetView, 'ruleViews' | 'removed' | 'tables' | 'quantities'>;
 
 /** Every rule of a resolved edition as a sentence, with its tables and what layers displaced. */
 export function ruleSetContents(edition: ResolvedEdition, base: ResolvedEdition): Contents {
@@ -24,6 +23,7 @@ export function ruleSetContents(edition: ResolvedEdition, base: ResolvedEdition)
       ...tableView(table, edition),
       usedBy: ruleViews.filter((rule) => rule.tables.includes(table.id)).map(({ id }) => id),
     })),
+    quantities: edition.quantities,
   };
 }
 
@@ -38,7 +38,7 @@ function ruleView(rule: ResolvedRule, edition: ResolvedEdition): RuleView {
     sentence: ruleSentence(rule, view),
     condition: rule.when === undefined ? null : `where ${conditionClause(rule.when, view)}`,
     rounding: roundingClause(rule, view) || 'nothing to round',
-    precision: precisionWords(rule),
+    precision: precisionWords(rule, view),
     minimumCount: measure.kind === 'reading' ? (measure.minimumCount ?? null) : null,
     advice: rule.advice ?? null,
     source: sourceWords(rule.source ?? null) ?? supplied.document,
@@ -51,9 +51,9 @@ function ruleView(rule: ResolvedRule, edition: ResolvedEdition): RuleView {
   };
 }
 
-function precisionWords({ precision, measure }: Rule): string | null {
+function precisionWords({ precision, measure }: Rule, view: EditionView): string | null {
   if (precision === undefined) return null;
-  const unit = measure.kind === 'reading' ? (quantityById(measure.quantity)?.unit ?? '') : '';
+  const unit = measure.kind === 'reading' ? (view.quantity(measure.quantity)?.unit ?? '') : '';
   const source = precision.source == null ? '' : `, ${precision.source}`;
   return `± ${withUnit(numberWords(precision.value), unit)}${source}`;
 }

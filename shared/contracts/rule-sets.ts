@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { severitySchema } from '#rules/engine/finding';
+import { quantitySchema } from '#rules/quantities/quantity';
 import { dateSchema } from './common';
 import { endpoint } from './endpoint';
 import { editionReferenceSchema } from './projects';
@@ -87,6 +88,8 @@ export const ruleSetViewSchema = editionListItemSchema.extend({
     z.strictObject({ id: z.string(), clause: z.string(), title: z.string(), document: z.string() }),
   ),
   tables: z.array(tableViewSchema),
+  /** Those that the edition declares itself, beside the registry's. */
+  quantities: z.array(quantitySchema).default([]),
   caseCount: z.number().int(),
   hash: z.string(),
   templateHref: z.string(),

@@ -42,6 +42,7 @@ const signedIn: RouteObject[] = [
   { path: 'people', lazy: () => import('../features/people/people-route') },
   { path: 'settings', lazy: () => import('../features/settings/settings-route') },
   { path: 'laboratories', lazy: () => import('../features/settings/laboratories-route') },
+  { path: 'quantities', lazy: () => import('../features/quantities/quantities-route') },
   { path: 'rule-sets', lazy: () => import('../features/rule-sets/rule-sets-route') },
   { path: 'rule-sets/:ruleSetId/:edition', lazy: () => import('../features/rule-sets/rule-set-route') },
 ];

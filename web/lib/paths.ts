@@ -26,6 +26,8 @@ export const paths = {
     `/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}${searchOf(
       layers.length > 0 ? { layers: layers.join(',') } : undefined,
     )}`,
+  quantities: '/quantities',
+  quantity: (id: string) => `/quantities#${encodeURIComponent(id)}`,
   people: '/people',
   settings: '/settings',
   laboratories: '/laboratories',

@@ -60,6 +60,9 @@ function aView(overrides: Partial<RuleSetView> = {}): RuleSetView {
         usedBy: ['vma'],
       },
     ],
+    quantities: [
+      { id: 'joint-density', symbol: 'JD', label: 'joint density', unit: '%', methods: ['AASHTO T 166'] },
+    ],
     caseCount: 12,
     hash: 'a'.repeat(64),
     templateHref: '/api/rule-sets/cvra-412/2026/template.xlsx',
@@ -102,6 +105,15 @@ describe('an edition as it reads', () => {
     const table = screen.getByRole('link', { name: 'Table 412-2, minimum VMA' });
     expect(table.getAttribute('href')).toContain('#table-vma-min');
     expect(screen.getByRole('link', { name: '412.03(b)' }).getAttribute('href')).toContain('#rule-vma');
+  });
+
+  it('shows the quantities that it declares itself, and leads to all others', async () => {
+    await open();
+    const own = within(screen.getByRole('table', { name: 'Quantities of Section 412' }));
+    expect(own.getByRole('rowheader').textContent).toContain('Joint density');
+    expect(own.getByText('AASHTO T 166')).toBeTruthy();
+    const all = screen.getByRole('link', { name: 'What each quantity means' });
+    expect(all.getAttribute('href')).toBe('/quantities');
   });
 
   it('offers the template and the other editions with their state', async () => {

@@ -18,6 +18,11 @@ export function RuleSetAside({ view }: { view: RuleSetView }) {
         </a>
       </p>
       <p className="small mute">A workbook with a place for every reading that these rules ask for.</p>
+      <h2>Quantities</h2>
+      <p>
+        <Link to={paths.quantities}>What each quantity means</Link>
+      </p>
+      <p className="small mute">Unit, plausible range, test methods and formula, for every rule set.</p>
       <h2>Editions</h2>
       <ul>
         {[view, ...view.otherEditions]

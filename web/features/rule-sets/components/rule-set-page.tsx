@@ -4,6 +4,7 @@ import { useLocation, useParams, useSearchParams } from 'react-router-dom';
 import { cautions } from '#shared/cautions';
 import type { RuleSetView } from '#shared/contracts/rule-sets';
 import { PageHead } from '../../../components/ui/page-head';
+import { QuantityTable } from '../../../components/ui/quantity-table';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { SectionHead } from '../../../components/ui/section-head';
 import { useShortcuts } from '../../../lib/shortcuts';
@@ -52,6 +53,18 @@ export function RuleSetPage() {
           {view.tables.map((table) => (
             <LimitTable key={table.id} table={table} view={view} />
           ))}
+          {view.quantities.length > 0 ? (
+            <>
+              <SectionHead
+                title="Quantities"
+                about="that this rule set declares, beside those of every rule set"
+              />
+              <QuantityTable
+                caption={`Quantities of ${view.title}`}
+                rows={view.quantities.map((quantity) => ({ quantity }))}
+              />
+            </>
+          ) : null}
         </div>
         <aside className="page-aside">
           <RuleSetAside view={view} />

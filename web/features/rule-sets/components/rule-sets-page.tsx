@@ -20,7 +20,11 @@ export function RuleSetsPage() {
   const startingPoint = ruleSets.some((set) => set.editions.some((edition) => edition.startingPoint));
   return (
     <PlainPage>
-      <PageHead title="Rule sets" rest="and their editions" />
+      <PageHead title="Rule sets" rest="and their editions">
+        <p className="pt-2">
+          <Link to={paths.quantities}>Quantities that rules can ask for</Link>
+        </p>
+      </PageHead>
       {ruleSets.length === 0 ? (
         <EmptyState title="No rule set is here yet.">
           It stands here once an edition is published or named by a project.{' '}

@@ -1,0 +1,31 @@
+import { describe, expect, it } from 'vitest';
+import { ruleSetContents } from '#server/presenters/rule-set-view';
+import { anEdition, aRule } from '#tests/builders/a-rule-set';
+
+const jointDensity = { id: 'joint-density', symbol: 'JD', label: 'joint density', unit: '%' };
+
+describe('an edition as its page shows it', () => {
+  it('hands over the quantities that it declares, completed by their defaults', () => {
+    const edition = anEdition({ quantities: [jointDensity] });
+    const { quantities } = ruleSetContents(edition, edition);
+    expect(quantities).toMatchObject([{ ...jointDensity, methods: [], derivation: null }]);
+  });
+
+  it('says a precision of such a quantity in its unit', () => {
+    const edition = anEdition({
+      quantities: [jointDensity],
+      rules: [
+        aRule({
+          measure: { kind: 'reading', quantity: 'joint-density' },
+          precision: { value: '0.6', source: null, origin: 'agency' },
+        }),
+      ],
+    });
+    expect(ruleSetContents(edition, edition).ruleViews[0]?.precision).toBe('± 0.6 %');
+  });
+
+  it('has none where the edition declares none', () => {
+    const edition = anEdition();
+    expect(ruleSetContents(edition, edition).quantities).toEqual([]);
+  });
+});

@@ -1,0 +1,1 @@
+export { QuantitiesPage as Component } from './components/quantities-page';
