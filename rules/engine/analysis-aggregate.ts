@@ -21,6 +21,8 @@ export interface AggregateNodes {
   absorption: AnalysisNode | null;
   /** Stated percent passing by sieve, else computed from the stockpiles. */
   passing(sieveMm: number): AnalysisNode | null;
+  /** Percent passing of blend and stockpiles that the workbook states as retained. */
+  passingFromRetained: AnalysisNode[];
   /** Percent passing computed from the stockpiles, by sieve. */
   combinedPassing: Map<number, AnalysisNode>;
   surfaceArea: AnalysisNode | null;
@@ -77,6 +79,7 @@ function aggregateOf(index: RecordIndex, trial: string, blend: BlendChoice): Agg
     absorption:
       combine('water-absorption', 'Σ(Pi·ai)/ΣPi', combinedAbsorption) ?? statedOf(select('water-absorption')),
     passing: atSieve,
+    passingFromRetained: passing.fromRetained,
     combinedPassing: combined,
     surfaceArea: surfaceAreaOf(atSieve, at),
     finenessModuli: select('fineness-modulus').flatMap((stated) => finenessOf(stated, passing, at) ?? []),

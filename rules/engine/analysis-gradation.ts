@@ -13,6 +13,8 @@ export interface Gradation {
   sieves: number[];
   /** All sieves of a stockpile, or of the blend as stated. */
   stack(stockpile: string | undefined): AnalysisNode[];
+  /** What was stated as retained, as percent passing. */
+  fromRetained: AnalysisNode[];
 }
 
 export function gradationOf(select: (quantity: string) => Reading[]): Gradation {
@@ -31,9 +33,15 @@ export function gradationOf(select: (quantity: string) => Reading[]): Gradation 
     stated: (sieveMm) => at(undefined, sieveMm),
     ofStockpile: at,
     stack: (stockpile) => [...(stacks.get(stockpile)?.values() ?? [])],
+    fromRetained: [...stacks.values()].flatMap((stack) =>
+      [...stack.values()].filter(({ formula }) => formula?.startsWith(FROM_RETAINED)),
+    ),
     sieves: [...sieves].sort((a, b) => b - a),
   };
 }
+
+/** How percent passing follows from what is retained, alone or with all that stays above. */
+const FROM_RETAINED = '100 − ';
 
 /** One node per stockpile and sieve, the mean where several samples were sieved. */
 function sievedNodes(readings: Reading[]): AnalysisNode[] {
@@ -54,7 +62,8 @@ function passingFrom(node: AnalysisNode): AnalysisNode {
   return derivedNode({
     quantity: 'percent-passing',
     at: node.at,
-    formula: '100 − cumulative percent retained',
+    formula: `${FROM_RETAINED}CR`,
+    origin: 'converted',
     inputs: [node],
     compute: ([retained]) => known(100 - retained!),
   })!;
@@ -69,7 +78,8 @@ function fromIndividual(nodes: AnalysisNode[]): AnalysisNode[] {
     const passing = derivedNode({
       quantity: 'percent-passing',
       at: node.at,
-      formula: '100 − Σ percent retained',
+      formula: `${FROM_RETAINED}ΣR`,
+      origin: 'converted',
       inputs: above,
       compute: (retained) => known(100 - retained.reduce((sum, value) => sum + value, 0)),
     });

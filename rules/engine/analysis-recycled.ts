@@ -9,7 +9,7 @@ export function recycledOf(index: RecordIndex, trial: string, pb: AnalysisNode |
   const materials = ['rap', 'ras'].map((material) => pairsOf(index, trial, material));
   if (materials.includes('incomplete')) return null;
   const pairs = materials.filter((material) => material !== 'incomplete').flat();
-  if (pairs.length === 0) return null;
+  if (pairs.length === 0) return noneOf(index, trial, pb);
   const terms = pairs.map(({ content, binder }) => `${content.symbol}·${binder.symbol}`);
   return derivedNode({
     quantity: 'recycled-binder-ratio',
@@ -17,6 +17,26 @@ export function recycledOf(index: RecordIndex, trial: string, pb: AnalysisNode |
     formula: `(${terms.join(' + ')})/(100·Pb)`,
     inputs: [...pairs.flatMap(({ content, binder }) => [content, binder]), pb],
     compute: (values) => recycledBinderRatio(materialsOf(values.slice(0, -1)), values.at(-1)!),
+  });
+}
+
+/** Contents that are all stated as zero bring no binder, whatever the binder content of the material. */
+function noneOf(index: RecordIndex, trial: string, pb: AnalysisNode): AnalysisNode | null {
+  const contents = ['rap', 'ras'].flatMap((material) => {
+    const readings = index.ofTrial(`${material}-content`, trial).filter((reading) => !isSpecial(reading));
+    return average(readings) ?? [];
+  });
+  if (contents.length === 0) return null;
+  return derivedNode({
+    quantity: 'recycled-binder-ratio',
+    at: { trial },
+    formula: `(${contents.map(({ symbol }) => symbol).join(' + ')})/Pb`,
+    inputs: [...contents, pb],
+    compute: (values) =>
+      recycledBinderRatio(
+        values.slice(0, -1).map((contentPercent) => ({ contentPercent, binderPercent: 0 })),
+        values.at(-1)!,
+      ),
   });
 }
 

@@ -4,17 +4,14 @@ import type { Expression, FormulaFunction, Operator } from '../rule-sets/formula
 
 /**
  * The value of a formula, in decimal arithmetic, so that 2.651 − 2.648 is 0.003 and not a hair below a limit.
- * Where a root, a logarithm or an exponential is taken the result is kept to 12 significant digits.
  *
  * It cannot be had where it divides by zero, leaves the domain of a function or grows beyond every number.
  */
 export function computeFormula(expression: Expression, values: ReadonlyMap<string, number>): NumericResult {
   try {
     const value = numberOf(expression, values);
-    if (!value.isFinite()) return cannot('the formula gives no number');
-    const kept = isTranscendental(expression) ? value.toSignificantDigits(12) : value;
-    const number = kept.toNumber();
-    return Number.isFinite(number) ? known(number + 0) : cannot('the formula gives a number without bounds');
+    const number = value.toNumber();
+    return Number.isFinite(number) ? known(number) : cannot('the formula gives a number without bounds');
   } catch (error) {
     if (error instanceof NoValue) return cannot(error.message);
     throw error;
@@ -98,24 +95,6 @@ function called(name: FormulaFunction, operands: Decimal[]): Decimal {
       return name === 'ln' ? value.ln() : value.log(10);
   }
 }
-
-function isTranscendental(expression: Expression): boolean {
-  if (expression.kind === 'number' || expression.kind === 'name') return false;
-  const own =
-    expression.kind === 'call'
-      ? TRANSCENDENTAL.has(expression.name)
-      : expression.operator === 'pow' && !isWholeNumber(expression.operands[1]);
-  return own || expression.operands.some(isTranscendental);
-}
-
-function isWholeNumber(exponent: Expression | undefined): boolean {
-  if (exponent?.kind === 'operation' && exponent.operator === 'unaryMinus') {
-    return isWholeNumber(exponent.operands[0]);
-  }
-  return exponent?.kind === 'number' && Number.isInteger(Number(exponent.written));
-}
-
-const TRANSCENDENTAL = new Set<FormulaFunction>(['sqrt', 'exp', 'ln', 'log10']);
 
 const Exact = Decimal.clone({ precision: 40 });
 const zero = new Exact(0);

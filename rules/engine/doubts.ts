@@ -5,6 +5,7 @@ import type { Evidence } from './finding';
 import { type Obstacle, undecided } from './obstacle';
 import type { Sample, SampleRequest } from './sample';
 import { isPerTrial } from './scope';
+import { allowanceOf } from './select';
 import type { World } from './world';
 
 /**
@@ -18,9 +19,13 @@ export function doubtAbout(world: World, request: SampleRequest, sample: Sample 
   for (const doubt of world.record.doubts) {
     for (const subject of subjectsOf(doubt)) {
       const isConcerned = concerned.some(
-        ({ quantity, at }) => quantity === subject.quantity && couldBe(world, subject, at, trials),
+        ({ quantity, at, fromSieve = 0 }) =>
+          quantity === subject.quantity &&
+          (subject.at.sieve ?? fromSieve) >= fromSieve &&
+          couldBe(world, subject, at, trials),
       );
-      if (isConcerned && !hasSureReading(world, subject)) return undecided(doubtWords(world, doubt, subject.quantity), answerWords(doubt));
+      if (isConcerned && !hasSureReading(world, subject))
+        return undecided(doubtWords(world, doubt, subject.quantity), answerWords(doubt));
     }
   }
   return null;
@@ -29,6 +34,8 @@ export function doubtAbout(world: World, request: SampleRequest, sample: Sample 
 interface Subject {
   quantity: string;
   at: Conditions;
+  /** mm; of what is retained on sieves, the finest that counts. */
+  fromSieve?: number;
 }
 
 /** A value that was read stands on its own; what was, or could have been, computed stands on its inputs too. */
@@ -38,9 +45,9 @@ function concernedBy(world: World, request: SampleRequest, sample: Sample | null
     const laboratory = request.at.laboratory === undefined ? {} : { laboratory: request.at.laboratory };
     const inputs = [...inputsOf(world, request.quantity)].map((quantity) => ({
       quantity,
-      at: quantity === 'percent-passing' ? { ...laboratory, sieve: DUST_SIEVE_MM } : laboratory,
+      at: quantity === PASSING ? { ...laboratory, sieve: DUST_SIEVE_MM } : laboratory,
     }));
-    return [own, ...inputs];
+    return [own, ...(request.quantity === PASSING ? retainedBehind(request.at) : []), ...inputs];
   }
   if (sample.recomputed === null) return [own];
   const inputs: Subject[] = [];
@@ -50,8 +57,20 @@ function concernedBy(world: World, request: SampleRequest, sample: Sample | null
     evidence.inputs?.forEach(visit);
   };
   sample.recomputed.inputs.forEach(visit);
-  return inputs;
+  const isPassing = sample.recomputed.quantity === PASSING && sample.recomputed.origin === 'converted';
+  return isPassing ? [...inputs, ...retainedBehind(sample.recomputed.at)] : inputs;
 }
+
+/** What percent passing follows from where a gradation is stated as retained: all that stays on it and above. */
+function retainedBehind({ sieve, ...at }: Conditions): Subject[] {
+  const { specimen: _specimen, trial: _trial, ...material } = at;
+  return [
+    { quantity: 'cumulative-percent-retained', at: sieve === undefined ? material : { ...material, sieve } },
+    { quantity: 'percent-retained', at: material, ...(sieve === undefined ? {} : { fromSieve: sieve }) },
+  ];
+}
+
+const PASSING = 'percent-passing';
 
 /** The one sieve that a derived quantity rests on, in mm. */
 const DUST_SIEVE_MM = 0.075;
@@ -84,14 +103,20 @@ function couldBe(world: World, doubted: Subject, wanted: Conditions, trials: Set
   const belongsToTrial = isPerTrial(world, doubted.quantity)
     ? trials.has(trial ?? 'design')
     : trial === undefined || trials.has(trial);
-  return belongsToTrial && TEST_CONDITIONS.every((name) => agree(doubted.at[name], wanted[name]));
+  return belongsToTrial && TEST_CONDITIONS.every((name) => agree(name, doubted.at[name], wanted[name]));
 }
 
-function agree(doubted: string | number | undefined, wanted: string | number | undefined): boolean {
+function agree(
+  name: (typeof TEST_CONDITIONS)[number],
+  doubted: string | number | undefined,
+  wanted: string | number | undefined,
+): boolean {
   if (doubted === undefined || wanted === undefined) return true;
   // A name and a number of gyrations may be the same: not knowing counts as a doubt.
   if (typeof doubted !== typeof wanted) return true;
-  if (typeof doubted === 'number' && typeof wanted === 'number') return Math.abs(doubted - wanted) <= 0.5;
+  if (typeof doubted === 'number' && typeof wanted === 'number') {
+    return Math.abs(doubted - wanted) <= allowanceOf(name, wanted);
+  }
   return doubted === wanted;
 }
 
@@ -147,7 +172,8 @@ function inputsOf(world: World, id: string): Set<string> {
 
 const inputsByQuantity = new Map<string, Set<string>>();
 
-function namedInFormula(quantity: Quantity): string[] {
+/** The quantities whose symbols stand in the registry's formula of a derived one. */
+export function namedInFormula(quantity: Quantity): string[] {
   const formula = quantity.derivation ?? '';
   const symbols = new Set(formula.match(/%?[A-Za-z][A-Za-z0-9,.]*/g) ?? []);
   if (symbols.has('Ps')) symbols.add('Pb');

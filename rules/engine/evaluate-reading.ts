@@ -1,6 +1,7 @@
-import type { Conditions } from '../record';
+import type { Conditions, Doubt } from '../record';
 import type { GradationMeasure, ReadingMeasure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
+import { subjectsOf } from './doubts';
 import { evaluateValue } from './evaluate-value';
 import type { Finding } from './finding';
 import { matchingRows } from './look-up';
@@ -23,8 +24,8 @@ export function evaluateGradation(world: World, rule: ResolvedRule, measure: Gra
   const base = { subject: subjectOf(world, measure, at), at, quantity: PASSING };
   const evaluated = (conditions: Conditions) =>
     evaluateValue({ world, rule, measure, quantity: PASSING, statistic: 'mean', at: conditions });
-  const hasNone = (world.readings.get(PASSING) ?? []).length === 0;
-  if (hasNone && !world.record.doubts.some(({ about }) => about.quantity === PASSING)) {
+  const hasNone = conditionsOf(world, PASSING).length === 0;
+  if (hasNone && !world.record.doubts.some((doubt) => isAboutGradation(doubt))) {
     return [makeFinding(world, rule, { ...base, outcome: 'not shown', reason: 'There is no gradation.' })];
   }
   const rows = matchingRows(world, measure.table, { sieve: undefined });
@@ -39,29 +40,47 @@ export function evaluateGradation(world: World, rule: ResolvedRule, measure: Gra
 
 const PASSING = 'percent-passing';
 
+function isAboutGradation(doubt: Doubt): boolean {
+  return subjectsOf(doubt).some(({ quantity }) => GRADATION.has(quantity));
+}
+
+const GRADATION = new Set([PASSING, 'percent-retained', 'cumulative-percent-retained']);
+
+/** Conditions of all that there is of a quantity: readings, and percent passing that was stated as retained. */
+function conditionsOf(world: World, quantity: string): Conditions[] {
+  const read = (world.readings.get(quantity) ?? []).map(({ at }) => at);
+  const converted = (world.recomputed.get(quantity) ?? []).filter(({ origin }) => origin === 'converted');
+  return converted.length === 0 ? read : [...read, ...converted.map(({ at }) => at)];
+}
+
 /** The conditions of each subject of a rule: every stockpile, every sieve that readings hold, or just the rule's. */
 export function conditionsOfSubjects(
   world: World,
   { quantity, at }: { quantity: string; at: Conditions },
 ): Conditions[] {
-  const ofLaboratory = (world.readings.get(quantity) ?? []).filter(
-    (each) => (each.at.laboratory ?? 'contractor') === (at.laboratory ?? 'contractor'),
+  const ofLaboratory = conditionsOf(world, quantity).filter(
+    ({ laboratory = 'contractor' }) => laboratory === (at.laboratory ?? 'contractor'),
   );
   let subjects: Conditions[] = [at];
   if (at.stockpile === 'each') {
-    const names = ofLaboratory.flatMap((each) =>
-      each.at.stockpile === undefined ? [] : [each.at.stockpile],
-    );
+    const names = ofLaboratory.flatMap(({ stockpile }) => (stockpile === undefined ? [] : [stockpile]));
     const stockpiles = [...new Set(names)].toSorted(naturalOrder);
     if (stockpiles.length > 0) subjects = stockpiles.map((stockpile) => ({ ...at, stockpile }));
   }
   const splitsBySieve = world.view.quantity(quantity)?.conditions.includes('sieve') ?? false;
   if (!splitsBySieve || at.sieve !== undefined) return subjects;
   return subjects.flatMap((subject) => {
-    const matching = ofLaboratory.filter((each) => each.at.stockpile === subject.stockpile);
-    const sieves = [
-      ...new Set(matching.flatMap((each) => (each.at.sieve === undefined ? [] : [each.at.sieve]))),
-    ];
+    const matching = ofTrial(
+      ofLaboratory.filter(({ stockpile }) => stockpile === subject.stockpile),
+      at.trial,
+    );
+    const sieves = [...new Set(matching.flatMap(({ sieve }) => (sieve === undefined ? [] : [sieve])))];
     return sieves.length === 0 ? [subject] : sieves.map((sieve) => ({ ...subject, sieve }));
   });
+}
+
+/** Sieves of another trial are no subjects of this one, unless there are none but those. */
+function ofTrial(conditions: Conditions[], trial = 'design'): Conditions[] {
+  const own = conditions.filter((each) => each.trial === undefined || each.trial === trial);
+  return own.length > 0 ? own : conditions;
 }

@@ -3,6 +3,7 @@ import type { Where } from '../rule-sets/measure';
 import { quantityPhrase } from '../rule-sets/words';
 import type { RecomputedValue } from './analysis';
 import type { Evidence } from './finding';
+import { missingForComputing } from './missing-inputs';
 import { notShown, type Obstacle, undecided } from './obstacle';
 import { inScope } from './scope';
 import { select } from './select';
@@ -46,6 +47,13 @@ export type SampleResult = { ok: true; sample: Sample } | Obstacle;
  * analysis could; else the readings as they are.
  */
 export function takeSample(world: World, request: SampleRequest): SampleResult {
+  const taken = chooseSample(world, request);
+  if (taken.ok || taken.outcome !== 'not shown') return taken;
+  const missing = missingForComputing(world, request, (other) => chooseSample(world, other).ok);
+  return missing === null ? taken : { ...taken, reason: `${taken.reason} ${missing}` };
+}
+
+function chooseSample(world: World, request: SampleRequest): SampleResult {
   const recomputed = takeRecomputed(world, request);
   const read = takeReadings(world, request);
   if (read.ok && statedCounts(world, request, recomputed)) return filtered(world, request, read.sample);
@@ -77,11 +85,13 @@ function bareLabel(world: World, { quantity }: SampleRequest): string {
 }
 
 function takeRecomputed(world: World, request: SampleRequest): SampleResult | null {
-  const candidates = world.recomputed.get(request.quantity) ?? [];
+  const all = world.recomputed.get(request.quantity) ?? [];
   const isDesignGradation =
     request.quantity === 'percent-passing' && request.at.stockpile === undefined && !request.toCompare;
-  // The job-mix gradation is what the workbook states; the recomputed blend is only compared with it.
-  if (candidates.length === 0 || isDesignGradation) return null;
+  // The job-mix gradation is what the workbook states, as passing or as retained; the blend recomputed from the
+  // stockpiles is only compared with it.
+  const candidates = isDesignGradation ? all.filter(({ origin }) => origin === 'converted') : all;
+  if (candidates.length === 0) return null;
   const label = bareLabel(world, request);
   const scope = { world, quantity: request.quantity, label, wanted: request.at, candidates };
   const inside = inScope(scope);
@@ -93,7 +103,10 @@ function takeRecomputed(world: World, request: SampleRequest): SampleResult | nu
   );
   const [value, ...others] = whole;
   if (others.length > 0)
-    return undecided(`There are several values of ${label}, and nothing says which one counts.`, `Leave one value of ${label}, or say what tells them apart.`);
+    return undecided(
+      `There are several values of ${label}, and nothing says which one counts.`,
+      `Leave one value of ${label}, or say what tells them apart.`,
+    );
   return { ok: true, sample: value ? sampleOfRecomputed(value) : sampleOfSpecimens(selected.chosen) };
 }
 
@@ -174,7 +187,10 @@ function takeReadings(world: World, request: SampleRequest): SampleResult {
   if (!selected.ok) return selected;
   const faulty = selected.chosen.find((each) => each.fault !== null);
   if (faulty)
-    return undecided(`A reading of ${label}${placeWords(faulty.reading)} cannot be used: ${faulty.fault}.`, 'Give it as a number in a unit of that quantity.');
+    return undecided(
+      `A reading of ${label}${placeWords(faulty.reading)} cannot be used: ${faulty.fault}.`,
+      'Give it as a number in a unit of that quantity.',
+    );
   const labelled = selected.chosen.filter(({ at }) => at.specimen !== undefined);
   // A value without a specimen beside values with one is their stated mean, not one more of them.
   return replicates(labelled.length > 0 ? labelled : selected.chosen, label);

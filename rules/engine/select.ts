@@ -110,13 +110,13 @@ function sameCondition(
   if (wanted === undefined || stated === undefined) return 'other';
   if (selector === 'gyrations') return sameGyrations(world, wanted, stated);
   if (typeof wanted === 'number' && typeof stated === 'number') {
-    return Math.abs(wanted - stated) <= allowance(selector, wanted) ? 'same' : 'other';
+    return Math.abs(wanted - stated) <= allowanceOf(selector, wanted) ? 'same' : 'other';
   }
   return String(wanted).trim().toLowerCase() === String(stated).trim().toLowerCase() ? 'same' : 'other';
 }
 
 /** Temperatures match within 0.5 °C, loading times within 1 %; a whisker more, for binary arithmetic. */
-function allowance(selector: Selector, wanted: number): number {
+export function allowanceOf(selector: Selector, wanted: number): number {
   if (selector === 'temperature') return 0.5 + 1e-9;
   if (selector === 'time') return Math.abs(wanted) * (0.01 + 1e-12);
   return 0;

@@ -17,7 +17,7 @@ export function generalLimitWords(limit: Limit, unit: string, view: EditionView)
   if (limit.oneOf !== undefined) {
     return isTableReference(limit.oneOf)
       ? `as listed in ${tableWords(limit.oneOf.table, view)}`
-      : orList(limit.oneOf.map(allowedWords));
+      : oneOfWords(limit.oneOf.map(allowedWords));
   }
   if (limit.target !== undefined && limit.tolerance !== undefined) {
     const target = boundWords(limit.target, view);
@@ -27,6 +27,11 @@ export function generalLimitWords(limit: Limit, unit: string, view: EditionView)
     return `within ${withUnit(boundWords(limit.tolerance, view), unit)} of ${target}`;
   }
   return intervalWords(limit, unit, view);
+}
+
+/** "PG 64-22", and of several "one of PG 64-22 or PG 70-22". */
+export function oneOfWords(allowed: readonly string[]): string {
+  return allowed.length > 1 ? `one of ${orList(allowed)}` : orList(allowed);
 }
 
 /** "at least 14.0 %", "3.5 to 4.5 %", "within the limits in Control points by sieve". */

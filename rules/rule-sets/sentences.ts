@@ -4,7 +4,7 @@ import type { Conditions } from '../record';
 import { measuredUnit } from './check-rule';
 import type { EditionView } from './edition-view';
 import { readFormula } from './formula';
-import { generalLimitWords, intervalWords, resolvedLimitWords } from './limit-words';
+import { generalLimitWords, intervalWords, oneOfWords, resolvedLimitWords } from './limit-words';
 import type { FormulaMeasure, Measure, Statistic } from './measure';
 import type { Rule } from './schema';
 import { conditionSentence } from './when-words';
@@ -42,7 +42,7 @@ export function requirementSentence({ rule, view, at, limit, date }: Requirement
   if (rule.measure.kind === 'document') return `${label} ${documentClause(rule.measure, date ?? null)}.`;
   if (limit === null) return `${label} ${limitClause(rule, view)}.`;
   if (rule.limit.present) return `${label} ${verb} shown.`;
-  const words = resolvedLimitWords(limit).replace(/^allowed /, '');
+  const words = limit.oneOf === null ? resolvedLimitWords(limit) : oneOfWords(limit.oneOf);
   if (rule.measure.kind === 'difference') return `${label} differ by ${withUnit(words, limit.unit)}.`;
   return `${label} ${verb} ${withUnit(words, limit.oneOf ? '' : limit.unit)}.`;
 }
