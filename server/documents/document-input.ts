@@ -16,7 +16,7 @@ export const documentItemSchema = z.strictObject({
 });
 
 export const documentInputSchema = z.strictObject({
-  kind: z.enum(['return', 'pre-check']),
+  kind: z.enum(['return', 'pre-check', 'check of record']),
   agency: z.strictObject({ name: z.string(), letterhead: letterheadSchema }),
   contractor: z.string(),
   project: z.strictObject({ number: z.string(), title: z.string() }),

@@ -16,11 +16,19 @@ export function introduction(input: DocumentInput): string {
     counted(summary.notApplicable, 'does not apply', 'do not apply'),
   ]);
   const subject = `the mix design for ${project.number}, ${project.title}, against ${section}`;
-  const opening =
-    input.kind === 'return'
-      ? `We have reviewed ${subject}${input.submittedOn === null ? '' : `, submitted on ${formatDate(input.submittedOn)}`}.`
-      : `This is a check of ${subject}, made before submission; the agency's own check decides.`;
-  return `${opening} Of ${total} findings, ${counts}.`;
+  return `${openingOf(input, subject)} Of ${total} findings, ${counts}.`;
+}
+
+function openingOf({ kind, submittedOn }: DocumentInput, subject: string): string {
+  const submitted = submittedOn === null ? '' : `, submitted on ${formatDate(submittedOn)}`;
+  switch (kind) {
+    case 'return':
+      return `We have reviewed ${subject}${submitted}.`;
+    case 'check of record':
+      return `This is the check of record of ${subject}${submitted}; what the agency decides stands in its return.`;
+    case 'pre-check':
+      return `This is a check of ${subject}, made before submission; the agency's own check decides.`;
+  }
 }
 
 const tallyWords: Record<NextAct, [one: string, many: string]> = {

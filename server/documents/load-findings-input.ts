@@ -17,9 +17,7 @@ export async function loadFindingsInput(
   const row = await findRevision(deps.db, actor, params);
   if (row === null) throw new Problem('not-found');
   const { facts, sources } = await loadRevisionDocuments(deps.db, actor, row);
-  const waivers = sources.waivers.filter(({ toBeReturned }) =>
-    seesWaiver({ kind: 'contractor' }, { toBeReturned, revisionState: row.revision.state }),
-  );
+  const waivers = sources.waivers.filter((waiver) => seesWaiver({ kind: 'contractor' }, waiver));
   return findingsInput(
     facts,
     returnItems({ ...sources, notes: [], waivers, included: new Set() }),

@@ -50,7 +50,7 @@ export async function loadRevisionDocuments(
       receivedOn: row.revision.receivedOn,
       section: sectionWords(row.revision.section),
       startingPoint,
-      check: { madeAt: check.madeAt, result: check.result },
+      check: { kind: check.kind, madeAt: check.madeAt, result: check.result },
     },
     sources: {
       findings: check.result.findings,

@@ -16,7 +16,7 @@ export interface RevisionFacts {
   /** "Section 412 Dense-graded asphalt mixtures, edition 2026, with Supplement S-07" */
   section: string;
   startingPoint: boolean;
-  check: { madeAt: Date; result: CheckResult };
+  check: { kind: 'pre-check' | 'check of record'; madeAt: Date; result: CheckResult };
 }
 
 export interface ReturnFacts {
@@ -53,7 +53,7 @@ export function returnInput(revision: RevisionFacts, facts: ReturnFacts, now: Da
   });
 }
 
-/** The input of the findings that a contractor saves before submitting: no decision, no one's notes. */
+/** The input of the findings as either side saves them at any time: no decision, no one's notes. */
 export function findingsInput(
   revision: RevisionFacts,
   items: readonly ReturnItem[],
@@ -61,7 +61,7 @@ export function findingsInput(
 ): DocumentInput {
   return documentInputSchema.parse({
     ...commonInput(revision, now),
-    kind: 'pre-check',
+    kind: revision.check.kind,
     disposition: null,
     reason: '',
     textAbove: '',

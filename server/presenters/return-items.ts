@@ -5,7 +5,7 @@ import { mayLeaveOut, nextActOf, nextActs } from '#shared/next-acts';
 
 export interface ReturnSources {
   findings: readonly Finding[];
-  waivers: readonly { finding: string; reason: string; toBeReturned: boolean }[];
+  waivers: readonly { finding: string; reason: string; toBeReturned: boolean; sentAt: Date | null }[];
   /** Notes to be returned, and only those. */
   notes: readonly { finding: string | null; text: string }[];
   /** Keys of the optional items that go with it. */

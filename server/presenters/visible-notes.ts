@@ -1,13 +1,11 @@
-import { asc, eq } from 'drizzle-orm';
 import type { Note, Waiver } from '#shared/contracts/notes';
 import type { Revision } from '#shared/contracts/submittals';
 import type { Database } from '../db/client';
 import { listNotes, listWaivers, type NoteRow, type WaiverRow } from '../db/queries/notes';
 import type { RevisionRow } from '../db/queries/revisions';
-import { revisions } from '../db/schema/submittals';
 import type { Actor } from '../policies/actor';
 import { noteAbilities } from '../policies/note-abilities';
-import { type NoteFacts, type RevisionSpan, seesNote, seesWaiver } from '../policies/note-visibility';
+import { seesNote, seesWaiver } from '../policies/note-visibility';
 
 interface Of {
   row: Pick<RevisionRow, 'submittal' | 'revision'>;
@@ -16,31 +14,13 @@ interface Of {
 
 /** Every note of a submittal that the actor may see, oldest first. */
 export async function visibleNotes(db: Database, actor: Actor, { row, abilities }: Of): Promise<Note[]> {
-  const spans = await revisionSpans(db, row.submittal.id);
   const all = await listNotes(db, actor, row.submittal.id);
-  return all
-    .filter((each) => seesNote(actor, factsOf(each), spans))
-    .map((each) => presentNote(each, actor, spans, abilities));
-}
-
-/** When each revision was in the agency's hands. */
-export async function revisionSpans(db: Database, submittalId: string): Promise<RevisionSpan[]> {
-  const rows = await db
-    .select({
-      submittedAt: revisions.submittedAt,
-      returnedAt: revisions.returnedAt,
-      withdrawnAt: revisions.withdrawnAt,
-    })
-    .from(revisions)
-    .where(eq(revisions.submittalId, submittalId))
-    .orderBy(asc(revisions.number));
-  return rows.map((row) => ({ submittedAt: row.submittedAt, leftAt: row.returnedAt ?? row.withdrawnAt }));
+  return all.filter((each) => seesNote(actor, each.note)).map((each) => presentNote(each, actor, abilities));
 }
 
 export function presentNote(
   row: Pick<NoteRow, 'note' | 'by' | 'revision'>,
   actor: Actor,
-  spans: readonly RevisionSpan[],
   abilities: Pick<Revision['abilities'], 'note' | 'reply'>,
 ): Note {
   const { note, by, revision } = row;
@@ -61,30 +41,18 @@ export function presentNote(
         writerId: note.personId,
         organisationId: note.organisationId,
         kind: note.kind,
-        sent: isSent(row, spans),
+        sent: note.sentAt !== null,
       },
       abilities,
     ),
   };
 }
 
-/** True once the other side could read it. */
-export function isSent(row: Pick<NoteRow, 'note' | 'revision'>, spans: readonly RevisionSpan[]): boolean {
-  const { agencyId, contractorId, side } = row.note;
-  const other =
-    side === 'agency'
-      ? ({ organisationId: contractorId, kind: 'contractor' } as const)
-      : ({ organisationId: agencyId, kind: 'agency' } as const);
-  return seesNote(other, factsOf(row), spans);
-}
-
 /** Waivers of a revision that the actor may see. */
 export async function visibleWaivers(db: Database, actor: Actor, { row, abilities }: Of): Promise<Waiver[]> {
   const all = await listWaivers(db, actor, row.revision.id);
   return all
-    .filter(({ waiver, revision }) =>
-      seesWaiver(actor, { toBeReturned: waiver.toBeReturned, revisionState: revision.state }),
-    )
+    .filter(({ waiver }) => seesWaiver(actor, waiver))
     .map((each) => presentWaiver(each, actor, abilities));
 }
 
@@ -103,15 +71,5 @@ export function presentWaiver(
     at: waiver.createdAt.toISOString(),
     version: waiver.version,
     abilities: { remove: revision.state === 'in review' && (own || abilities.waiveRequired) },
-  };
-}
-
-function factsOf({ note, revision }: Pick<NoteRow, 'note' | 'revision'>): NoteFacts {
-  return {
-    organisationId: note.organisationId,
-    side: note.side,
-    kind: note.kind,
-    writtenAt: note.createdAt,
-    revisionState: revision.state,
   };
 }

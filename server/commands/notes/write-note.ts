@@ -1,7 +1,7 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, isNull } from 'drizzle-orm';
 import { findingKey } from '#rules/engine/finding';
 import type { NoteKind } from '#shared/contracts/notes';
-import type { Revision } from '#shared/contracts/submittals';
+import type { Revision, RevisionState } from '#shared/contracts/submittals';
 import type { Database } from '../../db/client';
 import { newestCheckOf } from '../../db/queries/checks';
 import { findOwnNote } from '../../db/queries/notes';
@@ -37,7 +37,6 @@ export async function writeNote(deps: Deps, note: NewNote): Promise<string> {
     if (finding !== null) await expectFinding(tx, revision.id, finding);
     if (note.answers !== null) await expectAnswerable(tx, row, note.answers);
     const now = deps.now();
-    const atOnce = kind === 'reply' && (locked.state === 'submitted' || locked.state === 'in review');
     await tx.insert(notes).values({
       id,
       submittalId: submittal.id,
@@ -53,7 +52,7 @@ export async function writeNote(deps: Deps, note: NewNote): Promise<string> {
       personId: actor.personId,
       createdAt: now,
       updatedAt: now,
-      sentAt: atOnce ? now : null,
+      sentAt: sentAtOnce(kind, locked.state) ? now : null,
     });
     await writeAudit(tx, deps, {
       actor,
@@ -70,6 +69,7 @@ interface NoteChange {
   actor: Actor;
   requestId: string;
   noteId: string;
+  revisionId: string;
   version: number;
   /** Kinds that the writer may give it now. */
   writable: NoteKind[];
@@ -81,10 +81,14 @@ export async function changeNote(deps: Deps, change: NoteChange): Promise<void> 
   const { actor, noteId, version, kind, text } = change;
   if (!change.writable.includes(kind)) throw refusal(change.writable);
   await deps.db.transaction(async (tx) => {
+    const locked = await lockRevision(tx, change.revisionId);
+    if (locked === null) throw new Problem('not-found');
+    const now = deps.now();
+    const sentAt = sentAtOnce(kind, locked.state) ? now : null;
     expectWritten(
       await tx
         .update(notes)
-        .set({ kind, text, updatedAt: deps.now(), version: version + 1 })
+        .set({ kind, text, sentAt, updatedAt: now, version: version + 1 })
         .where(ofWriter(change)),
     );
     await writeAudit(tx, deps, {
@@ -112,12 +116,18 @@ export async function removeNote(
   });
 }
 
+/** While the agency has the revision, a reply has nothing to wait for. */
+function sentAtOnce(kind: NoteKind, state: RevisionState): boolean {
+  return kind === 'reply' && (state === 'submitted' || state === 'in review');
+}
+
 function ofWriter({ noteId, actor, version }: Pick<NoteChange, 'noteId' | 'actor' | 'version'>) {
   return and(
     eq(notes.id, noteId),
     eq(notes.organisationId, actor.organisationId),
     eq(notes.personId, actor.personId),
     eq(notes.version, version),
+    isNull(notes.sentAt),
   );
 }
 

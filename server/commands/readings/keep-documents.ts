@@ -56,5 +56,12 @@ function fieldsOf({ type, issuer, reference, date, validTo }: Omit<DocumentRecor
 }
 
 function sameDocument(one: DocumentRecord, other: DocumentRecord): boolean {
-  return one.type === other.type && one.reference === other.reference && one.issuer === other.issuer;
+  // A renewed certificate is another document: the old file is not its enclosure.
+  return (
+    one.type === other.type &&
+    one.reference === other.reference &&
+    one.issuer === other.issuer &&
+    one.date === other.date &&
+    one.validTo === other.validTo
+  );
 }

@@ -1,7 +1,8 @@
-import { eq } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import type { Database } from '../../db/client';
 import { lockRevision, type RevisionRow } from '../../db/queries/revisions';
 import { people } from '../../db/schema/people';
+import { returns } from '../../db/schema/returns';
 import { revisions, submittals } from '../../db/schema/submittals';
 import { writeAudit } from '../../db/write-audit';
 import type { Deps } from '../../deps';
@@ -28,8 +29,9 @@ export async function takeRevision(deps: Deps, act: Act): Promise<void> {
 }
 
 export async function giveBackRevision(deps: Deps, act: Act): Promise<void> {
-  await changing(deps, act, 'revision given back', async (_tx, present) => {
+  await changing(deps, act, 'revision given back', async (tx, present) => {
     if (present.state !== 'in review') throw wrongState(present, 'given back');
+    await takeFromSigner(tx, present.id);
     return { state: 'submitted' as const, takenById: null, takenAt: null };
   });
 }
@@ -39,6 +41,7 @@ export async function withdrawRevision(deps: Deps, act: Act & { reason: string }
   await changing(deps, act, 'revision withdrawn', async (tx, present, now) => {
     if (present.state !== 'submitted' && present.state !== 'in review')
       throw wrongState(present, 'withdrawn');
+    await takeFromSigner(tx, present.id);
     if (present.number === 0) {
       await tx
         .update(submittals)
@@ -80,6 +83,14 @@ async function changing(
       requestId,
     });
   });
+}
+
+/** A return that waits for its signature was prepared by whoever held the revision: it waits no longer. */
+async function takeFromSigner(tx: Database, revisionId: string): Promise<void> {
+  await tx
+    .update(returns)
+    .set({ state: 'draft', signingEngineerId: null, version: sql`${returns.version} + 1` })
+    .where(and(eq(returns.revisionId, revisionId), eq(returns.state, 'ready to sign')));
 }
 
 function wrongState({ state }: Present, done: string): Problem {

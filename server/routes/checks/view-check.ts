@@ -71,7 +71,11 @@ async function previousCheck(deps: Deps, { revision }: RevisionRow): Promise<Che
   return before === null ? null : newestCheckOf(deps.db, before.id);
 }
 
-function staleness(deps: Deps, { revision, section, agency }: RevisionRow, check: CheckRow): string | null {
+function staleness(
+  deps: Deps,
+  { revision, section, agency, project }: RevisionRow,
+  check: CheckRow,
+): string | null {
   return checkStale({
     kind: check.kind,
     state: revision.state,
@@ -79,6 +83,8 @@ function staleness(deps: Deps, { revision, section, agency }: RevisionRow, check
     today: dateOfInstant(deps.now().toISOString(), agency.timeZone),
     resolvedHash: check.resolvedHash,
     sectionHash: section.resolvedHash,
+    judgedWith: check.context,
+    project,
     stored: check.stale,
   });
 }

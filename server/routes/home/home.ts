@@ -51,7 +51,7 @@ async function fromAgency(deps: Deps, actor: RequestActor): Promise<Home['fromAg
   const clauses = await clausesOf(deps.db, [...new Set(rows.map(({ revision }) => revision.id))]);
   const mayReply = { note: false, reply: hasRole(actor, 'quality manager') };
   return rows.map((row) => ({
-    ...presentNote(row, actor, [], mayReply),
+    ...presentNote(row, actor, mayReply),
     submittalId: row.note.submittalId,
     mixDesignation: row.mixDesignation,
     clause: clauses.get(`${row.revision.id} ${row.note.finding}`) ?? null,

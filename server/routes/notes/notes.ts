@@ -8,7 +8,7 @@ import { findOwnNote } from '../../db/queries/notes';
 import type { Deps } from '../../deps';
 import type { RequestActor } from '../../middleware/authenticate';
 import { writableKinds } from '../../policies/note-abilities';
-import { presentNote, revisionSpans } from '../../presenters/visible-notes';
+import { presentNote } from '../../presenters/visible-notes';
 import { Problem } from '../../problem';
 import { route } from '../define-route';
 import { expectRevision, viewRevision } from '../submittals/load-revision';
@@ -23,11 +23,12 @@ export const writeNoteRoute = route(writeNote, async ({ deps, params, body, acto
 export const changeNoteRoute = route(
   changeNote,
   async ({ deps, params: { noteId }, body, version, actor, requestId }) => {
-    const { view, revision } = await expectChangeable(deps, actor, noteId, version);
+    const { view, revision, note } = await expectChangeable(deps, actor, noteId, version);
     await change(deps, {
       actor,
       requestId,
       noteId,
+      revisionId: note.note.revisionId,
       version: view.version,
       writable: writableKinds(actor, revision.state, revision.abilities),
       ...body,
@@ -51,8 +52,7 @@ async function expectNote(deps: Deps, actor: RequestActor, noteId: string) {
   if (note === null) throw new Problem('not-found');
   const place = { submittalId: note.submittalId, number: note.revision.number };
   const revision = await viewRevision(deps, actor, await expectRevision(deps, actor, place));
-  const spans = await revisionSpans(deps.db, note.submittalId);
-  return { view: presentNote(note, actor, spans, revision.abilities), revision, note };
+  return { view: presentNote(note, actor, revision.abilities), revision, note };
 }
 
 async function expectChangeable(deps: Deps, actor: RequestActor, noteId: string, version: number) {

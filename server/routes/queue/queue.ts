@@ -79,9 +79,14 @@ function entriesOf(rows: readonly QueueRow[], desk: ReturnType<typeof deskOf>): 
   });
 }
 
-/** Ready, and meant for this signing engineer or for whichever comes first. */
-function isToSign({ returnState, signingEngineerId }: QueueRow, actor: RequestActor): boolean {
-  if (returnState !== 'ready to sign' || !actor.roles.includes('signing engineer')) return false;
+/** In review, ready, and meant for this signing engineer or for whichever comes first. */
+function isToSign({ revision, returnState, signingEngineerId }: QueueRow, actor: RequestActor): boolean {
+  if (
+    revision.state !== 'in review' ||
+    returnState !== 'ready to sign' ||
+    !actor.roles.includes('signing engineer')
+  )
+    return false;
   return signingEngineerId === null || signingEngineerId === actor.personId;
 }
 

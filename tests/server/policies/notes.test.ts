@@ -4,60 +4,39 @@ import { type NoteFacts, seesNote, seesWaiver } from '#server/policies/note-visi
 
 const agency = { organisationId: 'agency', kind: 'agency' } as const;
 const contractor = { organisationId: 'contractor', kind: 'contractor' } as const;
-const at = (day: number) => new Date(Date.UTC(2026, 2, day, 12));
+const sentAt = new Date(Date.UTC(2026, 2, 10, 12));
 
 const note = (overrides: Partial<NoteFacts>): NoteFacts => ({
   organisationId: 'agency',
-  side: 'agency',
   kind: 'internal',
-  writtenAt: at(10),
-  revisionState: 'in review',
+  sentAt: null,
   ...overrides,
 });
-const reply = (overrides: Partial<NoteFacts> = {}) =>
-  note({ organisationId: 'contractor', side: 'contractor', kind: 'reply', ...overrides });
 
 describe('who sees a note', () => {
-  it('keeps internal notes with the writer, on both sides and in every state', () => {
-    for (const revisionState of ['draft', 'submitted', 'in review', 'returned', 'withdrawn'] as const) {
-      expect(seesNote(contractor, note({ revisionState }), [])).toBe(false);
-      const own = note({ organisationId: 'contractor', side: 'contractor', revisionState });
-      expect(seesNote(agency, own, [{ submittedAt: at(11), leftAt: null }])).toBe(false);
-      expect(seesNote(contractor, own, [])).toBe(true);
+  it('keeps internal notes with the writer on both sides, whatever was sent', () => {
+    for (const when of [null, sentAt]) {
+      expect(seesNote(contractor, note({ sentAt: when }))).toBe(false);
+      expect(seesNote(agency, note({ organisationId: 'contractor', sentAt: when }))).toBe(false);
+      expect(seesNote(contractor, note({ organisationId: 'contractor', sentAt: when }))).toBe(true);
     }
   });
 
-  it('shows a note to be returned once the return is sent, never before', () => {
-    expect(seesNote(contractor, note({ kind: 'to be returned' }), [])).toBe(false);
-    expect(seesNote(contractor, note({ kind: 'to be returned', revisionState: 'submitted' }), [])).toBe(
-      false,
-    );
-    expect(seesNote(contractor, note({ kind: 'to be returned', revisionState: 'withdrawn' }), [])).toBe(
-      false,
-    );
-    expect(seesNote(contractor, note({ kind: 'to be returned', revisionState: 'returned' }), [])).toBe(true);
-  });
-
-  it('shows a reply with the next submission', () => {
-    const returned = { submittedAt: at(2), leftAt: at(6) };
-    expect(seesNote(agency, reply(), [returned])).toBe(false);
-    expect(seesNote(agency, reply(), [returned, { submittedAt: null, leftAt: null }])).toBe(false);
-    expect(seesNote(agency, reply(), [returned, { submittedAt: at(10), leftAt: null }])).toBe(true);
-  });
-
-  it('shows a reply at once while the submittal is in the hands of the agency, and keeps it shown', () => {
-    expect(seesNote(agency, reply(), [{ submittedAt: at(9), leftAt: null }])).toBe(true);
-    expect(seesNote(agency, reply(), [{ submittedAt: at(9), leftAt: at(12) }])).toBe(true);
-    expect(seesNote(agency, reply(), [{ submittedAt: at(9), leftAt: at(10) }])).toBe(false);
+  it('shows a note to be returned and a reply once it is sent, never before', () => {
+    expect(seesNote(contractor, note({ kind: 'to be returned' }))).toBe(false);
+    expect(seesNote(contractor, note({ kind: 'to be returned', sentAt }))).toBe(true);
+    const reply = { organisationId: 'contractor', kind: 'reply' } as const;
+    expect(seesNote(agency, note(reply))).toBe(false);
+    expect(seesNote(agency, note({ ...reply, sentAt }))).toBe(true);
   });
 });
 
 describe('who sees a waiver', () => {
-  it('shows the contractor only what is to be returned, once returned', () => {
-    expect(seesWaiver(contractor, { toBeReturned: true, revisionState: 'in review' })).toBe(false);
-    expect(seesWaiver(contractor, { toBeReturned: false, revisionState: 'returned' })).toBe(false);
-    expect(seesWaiver(contractor, { toBeReturned: true, revisionState: 'returned' })).toBe(true);
-    expect(seesWaiver(agency, { toBeReturned: false, revisionState: 'in review' })).toBe(true);
+  it('shows the contractor only what is to be returned, once sent', () => {
+    expect(seesWaiver(contractor, { toBeReturned: true, sentAt: null })).toBe(false);
+    expect(seesWaiver(contractor, { toBeReturned: false, sentAt })).toBe(false);
+    expect(seesWaiver(contractor, { toBeReturned: true, sentAt })).toBe(true);
+    expect(seesWaiver(agency, { toBeReturned: false, sentAt: null })).toBe(true);
   });
 });
 

@@ -5,6 +5,7 @@ import { clauseTitles } from '#server/presenters/clause-titles';
 import { nextWords, type Standing } from '#server/presenters/next-words';
 
 describe('a stale check', () => {
+  const stated = { lettingOn: '2026-01-14', facts: { designTraffic: 12 } };
   const age = (overrides: Partial<CheckAge> = {}) =>
     checkStale({
       kind: 'pre-check',
@@ -13,6 +14,8 @@ describe('a stale check', () => {
       today: '2026-03-09',
       resolvedHash: 'a',
       sectionHash: 'a',
+      judgedWith: stated,
+      project: stated,
       stored: null,
       ...overrides,
     });
@@ -26,6 +29,12 @@ describe('a stale check', () => {
   it('is any check whose section has another edition or other layers now', () => {
     expect(age({ sectionHash: 'b' })).toContain('edition or layers have changed');
     expect(age({ kind: 'check of record', state: 'submitted', sectionHash: 'b' })).not.toBeNull();
+  });
+
+  it('is any check whose project states another letting date or other facts now', () => {
+    expect(age({ project: { ...stated, lettingOn: '2026-01-15' } })).toContain('letting date');
+    expect(age({ project: { ...stated, facts: { designTraffic: 30 } } })).not.toBeNull();
+    expect(age({ project: { lettingOn: stated.lettingOn, facts: { ...stated.facts } } })).toBeNull();
   });
 
   it('is never one of a revision that was returned or withdrawn', () => {

@@ -30,14 +30,24 @@ describe('what a return carries', () => {
   });
 
   it('never carries the reason of a waiver that stays internal', () => {
-    const waiver = { finding: findingKey(fail), reason: 'known weak scale', toBeReturned: false };
+    const waiver = {
+      finding: findingKey(fail),
+      reason: 'known weak scale',
+      toBeReturned: false,
+      sentAt: null,
+    };
     const [item] = returnItems({ ...none, findings: [fail], waivers: [waiver] });
     expect(item).toMatchObject({ group: 'for information', waived: null, finding: { outcome: 'fail' } });
     expect(JSON.stringify(item)).not.toContain('weak scale');
   });
 
   it('says the reason of a waiver to be returned, and the outcome stays fail', () => {
-    const waiver = { finding: findingKey(fail), reason: 'methylene blue shows no clay', toBeReturned: true };
+    const waiver = {
+      finding: findingKey(fail),
+      reason: 'methylene blue shows no clay',
+      toBeReturned: true,
+      sentAt: null,
+    };
     const [item] = returnItems({ ...none, findings: [fail], waivers: [waiver] });
     expect(item).toMatchObject({ waived: 'methylene blue shows no clay', finding: { outcome: 'fail' } });
   });
