@@ -1,6 +1,7 @@
 import type { MixRecord } from '../record';
 import type { Analysis, AnalysisOptions, RecomputedValue } from './analysis';
 import { type AggregateNodes, aggregates, blendChoice } from './analysis-aggregate';
+import { type CreepFailure, creepOf } from './analysis-creep';
 import { designFromTrials, designPointOf, type TrialValues, testedContents } from './analysis-design';
 import { fieldVoidsOf } from './analysis-field';
 import { designTrial, indexRecord, type RecordIndex } from './analysis-index';
@@ -22,29 +23,38 @@ export function analyse(record: MixRecord, options: AnalysisOptions): Analysis {
   const fromTrials = designFromTrials(trials, design.pb, design.nodes, options);
   const designNodes = [...design.nodes, ...fromTrials, ...(computed ? [computed] : [])];
   const recomputed = [
+    ...retainedGradations(index, [design, ...trials]),
     ...blendValues(index, [design, ...trials]),
     ...trials.flatMap((trial) => publish(trial.nodes, trial.context, index)),
     ...publish(designNodes, [...design.context, ...fromTrials], index),
     ...agencyValues(record),
   ];
-  return { recomputed, designPoint: point, testedContents: testedContents(trials, design) };
+  return {
+    recomputed,
+    designPoint: point,
+    testedContents: testedContents(trials, design),
+    creepFailures: design.creepFailures,
+  };
 }
 
 interface Trial extends TrialValues {
   aggregate: AggregateNodes;
   /** Every node of the trial, inputs included, for naming causes. */
   context: AnalysisNode[];
+  creepFailures: CreepFailure[];
 }
 
 function trialValues(index: RecordIndex, trial: string, aggregate: AggregateNodes): Trial {
   const volumetric = volumetricsOf(index, trial, aggregate);
   const { dry, conditioned, ratio } = moistureOf(index, trial);
+  const creep = creepOf(index, trial);
   const nodes = [
     ...derivedOf(volumetric),
     ...volumetric.relativeDensities,
     ...volumetric.others,
     ...[dry, conditioned, ratio].filter((node) => node !== null),
     ...crackingOf(index, trial),
+    ...creep.nodes,
     ...fieldVoidsOf(index, trial, volumetric.va),
   ];
   const inputs = [
@@ -56,7 +66,14 @@ function trialValues(index: RecordIndex, trial: string, aggregate: AggregateNode
     aggregate.surfaceArea,
     aggregate.passing(0.075),
   ].filter((node) => node !== null);
-  return { trial, pb: volumetric.pb, nodes, aggregate, context: [...inputs, ...derivedOf(volumetric)] };
+  return {
+    trial,
+    pb: volumetric.pb,
+    nodes,
+    aggregate,
+    context: [...inputs, ...derivedOf(volumetric)],
+    creepFailures: creep.failures,
+  };
 }
 
 function derivedOf(volumetric: TrialNodes): AnalysisNode[] {
@@ -68,6 +85,16 @@ function derivedOf(volumetric: TrialNodes): AnalysisNode[] {
 function publish(nodes: AnalysisNode[], context: AnalysisNode[], index: RecordIndex): RecomputedValue[] {
   for (const node of nodes) attachReported(node, index);
   return nodes.flatMap((node) => recomputedValues(node, context, index));
+}
+
+/** Gradations stated as retained, as percent passing; one that names no trial serves all of them and comes once. */
+function retainedGradations(index: RecordIndex, trials: { aggregate: AggregateNodes }[]): RecomputedValue[] {
+  const nodes = new Map(
+    trials.flatMap(({ aggregate }) =>
+      aggregate.passingFromRetained.map((node) => [JSON.stringify(node.at), node] as const),
+    ),
+  );
+  return publish([...nodes.values()], [], index);
 }
 
 /** What the stockpiles give for each blend, once a blend: it belongs to every trial made of it. */
@@ -90,8 +117,9 @@ function blendValues(index: RecordIndex, trials: Trial[]): RecomputedValue[] {
 function agencyValues(record: MixRecord): RecomputedValue[] {
   const index = indexRecord(record, 'agency');
   const aggregateOf = aggregates(index, blendChoice(record, index));
-  return [designTrial, ...index.trials].flatMap((trial) => {
-    const values = trialValues(index, trial, aggregateOf(trial));
-    return publish(values.nodes, values.context, index);
-  });
+  const trials = [designTrial, ...index.trials].map((trial) => trialValues(index, trial, aggregateOf(trial)));
+  return [
+    ...retainedGradations(index, trials),
+    ...trials.flatMap(({ nodes, context }) => publish(nodes, context, index)),
+  ];
 }

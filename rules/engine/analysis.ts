@@ -1,4 +1,5 @@
 import type { Conditions, Reading } from '../record';
+import type { CreepFailure } from './analysis-creep';
 import type { AnalysisNode } from './analysis-node';
 import type { Evidence } from './finding';
 
@@ -58,6 +59,8 @@ export interface Analysis {
   designPoint: DesignPoint;
   /** In rising order of binder content; the design among them where it was tested itself. */
   testedContents: TestedContent[];
+  /** Creep readings of the design that give no compliance. */
+  creepFailures: CreepFailure[];
 }
 
 export interface AnalysisOptions {

@@ -27,6 +27,7 @@ const nothingComputed: Analysis = {
     trial: null,
   },
   testedContents: [],
+  creepFailures: [],
 };
 
 describe('the recommended disposition', () => {
