@@ -94,15 +94,17 @@ function presentSection({ section, base, layers, confirmedBy }: SectionRow): Sec
   };
 }
 
-/** What the letting date calls for and no section holds yet. It never moves a section that exists. */
+/**
+ * What the letting date calls for, while the project has no section. An agency has rule sets that a project does not
+ * need, so nothing more is proposed once one is chosen, and what exists is never moved.
+ */
 function proposalsFor(
   lettingOn: string | null,
   { editions, sections }: { editions: EditionRow[]; sections: SectionRow[] },
 ): Project['proposals'] {
-  if (lettingOn === null) return [];
-  const taken = new Set(sections.map(({ base }) => base.ruleSetKey));
+  if (lettingOn === null || sections.length > 0) return [];
   return editions
-    .filter((each) => each.layerOfKey === null && !taken.has(each.ruleSetKey))
+    .filter((each) => each.layerOfKey === null)
     .filter((each) => holdsOn(each, { all: editions, date: lettingOn }))
     .map((base) => ({
       base: editionReference(base),

@@ -152,7 +152,10 @@ describe('a project', () => {
 describe('the sections of a project', () => {
   it('are proposed from the letting date: edition and layers that hold on that day', async () => {
     const before = await addProject({ lettingOn: '2026-01-31' });
-    expect(before.proposals).toEqual([expect.objectContaining({ base: expect.objectContaining(base) })]);
+    expect(before.proposals.map((proposal: { base: object }) => proposal.base)).toEqual([
+      expect.objectContaining(base),
+      expect.objectContaining({ ruleSet: 'cvra-421', edition: '2026' }),
+    ]);
     expect(before.proposals[0].layers).toEqual([]);
     const onTheDay = await addProject({ lettingOn: '2026-02-01' });
     expect(onTheDay.proposals[0].layers).toEqual([expect.objectContaining(supplement)]);
