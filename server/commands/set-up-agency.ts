@@ -66,7 +66,7 @@ export async function setUpAgency(deps: Deps, setUp: SetUp): Promise<void> {
       agencyName: setUp.agencyName,
       idOf: () => deps.newId(),
       publishedById: personId,
-      secondAuthorId: personId,
+      secondAuthorId: null,
       publishedAt: () => deps.now(),
     });
     await writeAudit(tx, deps, {

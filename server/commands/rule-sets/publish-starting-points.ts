@@ -16,7 +16,8 @@ interface Publisher {
   /** An id for a thing by its name: stable in the demo, new elsewhere. */
   idOf(name: string): string;
   publishedById: string;
-  secondAuthorId: string;
+  /** Null where nobody but the product vouches for them. */
+  secondAuthorId: string | null;
   publishedAt(firstDay: string): Date;
 }
 

@@ -75,8 +75,8 @@ export const editions = mysqlTable(
     startingPoint: boolean('starting_point').notNull(),
     publishedAt: instant('published_at').notNull(),
     publishedById: id('published_by_id').notNull(),
-    /** The second rule author, without whom nothing is published. */
-    secondAuthorId: id('second_author_id').notNull(),
+    /** The second rule author, without whom nothing is published; null for a starting point, which nobody reviewed. */
+    secondAuthorId: id('second_author_id'),
   },
   (table) => [
     uniqueIndex('editions_edition').on(table.agencyId, table.ruleSetKey, table.edition),

@@ -1,0 +1,1 @@
+ALTER TABLE `editions` MODIFY COLUMN `second_author_id` char(36) character set ascii collate ascii_bin;
