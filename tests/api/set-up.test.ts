@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { makeSetUpLink } from '#server/commands/make-set-up-link';
 import { organisations, people, setUpLinks } from '#server/db/schema/people';
+import { editions } from '#server/db/schema/rule-sets';
 import { password } from './harness/organisations';
 import { browser, startTestApp, type TestApp } from './harness/test-app';
 
@@ -41,6 +42,11 @@ describe('the first day', () => {
       waiverPolicy: 'advisory',
     });
     expect((await first.get('/api/sign-in-options')).body.setUpNeeded).toBe(false);
+    const published = await test.deps.db.select().from(editions);
+    expect(published.length).toBeGreaterThan(0);
+    for (const { startingPoint, secondAuthorId } of published) {
+      expect({ startingPoint, secondAuthorId }).toEqual({ startingPoint: true, secondAuthorId: null });
+    }
   });
 
   it('uses its link once', async () => {
