@@ -9,6 +9,7 @@ import { asPerson, expectAccessible, expectNoSidewaysScroll } from './support';
 
 const mix = 'BW-125-J1';
 const internalWord = 'Tollhouse sent last year’s report; ask quietly.';
+const answerWord = 'V20 now divides by the effective binder.';
 const returnedWord = 'The ratio divides by total binder. Please correct V20.';
 
 /** As the start wrote it for people to upload by hand. */
@@ -44,13 +45,22 @@ test('a mix design goes from upload to approval, with a return and a revision in
   await manager.goto('/submittals/new');
   await manager.getByRole('radio', { name: /CV-2031/ }).check({ force: true });
   await manager.getByRole('textbox', { name: 'Mix designation' }).fill(mix);
-  await manager.locator('input[type=file]').setInputFiles(await workbook('BW-125-S4 r0.xlsx'));
+  await manager.locator('input[type=file]').setInputFiles(await workbook('BW-125-S6 r0.xlsx'));
   await expectAccessible(manager);
   await manager.getByRole('button', { name: 'Upload and read' }).click();
   await manager.waitForURL(/\/r\/0\/reading/, { timeout: 60_000 });
   await expect(manager.getByRole('heading', { name: /How the workbook was read/ })).toBeVisible();
   await expectAccessible(manager);
   await expectNoSidewaysScroll(manager);
+  for (const meaning of ['3 April 2026', '4721.5 g', '2.4', '72.1 %']) {
+    await manager.getByRole('radio', { name: meaning, exact: true }).check({ force: true });
+  }
+  await expect(manager.getByText('4 cells, 4 answered')).toBeVisible();
+
+  await manager.getByRole('link', { name: 'Upload it again' }).click();
+  await manager.locator('input[type=file]').setInputFiles(await workbook('BW-125-S4 r0.xlsx'));
+  await expect(manager.getByRole('heading', { name: /BW-125-S4 r0.xlsx/ })).toBeVisible({ timeout: 60_000 });
+  await expect(manager.getByText('Every cell that was used was read with certainty.')).toBeVisible();
 
   const findings = manager.url().replace(/\/reading.*/, '');
   await manager.goto(findings);
@@ -130,6 +140,10 @@ test('a mix design goes from upload to approval, with a return and a revision in
   await expect(manager.getByText(returnedWord).first()).toBeVisible();
   await expect(manager.getByText(internalWord)).toHaveCount(0);
   await expectAccessible(manager);
+  await manager.getByRole('button', { name: 'Reply on 412.03(d)' }).click();
+  await manager.getByRole('textbox', { name: 'Reply on 412.03(d)' }).fill(answerWord);
+  await manager.getByRole('button', { name: 'Keep the reply' }).click();
+  await expect(manager.getByText(answerWord)).toBeVisible();
   await manager.getByRole('link', { name: 'Upload revision 1' }).click();
   await manager.locator('input[type=file]').setInputFiles(await workbook('BW-125-S4 r1.xlsx'));
   await manager.getByRole('button', { name: /Upload and read/ }).click();
@@ -141,6 +155,7 @@ test('a mix design goes from upload to approval, with a return and a revision in
   await expect(manager.getByText(/Received/).first()).toBeVisible();
 
   await reviewer.goto(second);
+  await expect(reviewer.getByText(answerWord).first()).toBeVisible();
   await reviewer.getByRole('button', { name: 'Take for review' }).click();
   await expect(reviewer.getByRole('button', { name: 'Give back' })).toBeVisible();
   await engineer.goto(`${second}/return`);
