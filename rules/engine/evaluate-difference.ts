@@ -3,6 +3,7 @@ import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import type { DifferenceMeasure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
+import type { RecomputedValue } from './analysis';
 import { distanceWords } from './distance-words';
 import { doubtAbout } from './doubts';
 import { conditionsOfSubjects } from './evaluate-reading';
@@ -22,13 +23,22 @@ interface Pair {
   values: [number, number];
   count: number;
   evidence: Evidence[];
+  /** Values of either side of which the workbook reports another one than was recomputed. */
+  stated: { side: 0 | 1; value: number; recomputed: RecomputedValue }[];
 }
 
 /** A `difference` rule: how far two laboratories, or the workbook and its own raw readings, lie apart. */
 export function evaluateDifference(world: World, rule: ResolvedRule, measure: DifferenceMeasure): Finding[] {
-  return conditionsOfSubjects(world, { quantity: measure.quantity, at: {} }).map((at) =>
-    ofSubject(world, rule, measure, at),
-  );
+  return subjectsOf(world, measure).map((at) => ofSubject(world, rule, measure, at));
+}
+
+/** Every sieve that either laboratory has a result of: one that the other lacks is not passed over. */
+function subjectsOf(world: World, { quantity, between }: DifferenceMeasure): Conditions[] {
+  const own = conditionsOfSubjects(world, { quantity, at: {} });
+  if (between[0] !== 'contractor') return own;
+  const others = conditionsOfSubjects(world, { quantity, at: { laboratory: 'agency' } });
+  const sieves = new Set([...own, ...others].flatMap(({ sieve }) => (sieve === undefined ? [] : [sieve])));
+  return sieves.size === 0 ? own : [...sieves].map((sieve) => ({ sieve }));
 }
 
 function ofSubject(world: World, rule: ResolvedRule, measure: DifferenceMeasure, at: Conditions): Finding {
@@ -56,8 +66,16 @@ function ofSubject(world: World, rule: ResolvedRule, measure: DifferenceMeasure,
       evidence: pair.evidence,
     });
   }
-  const value = new Decimal(one.value).minus(other.value).abs().toNumber();
-  const judgement = judge({ value, text: null, allowed: null }, limit.limit, rounding.rounder);
+  const judgeApart = (left: number, right: number) => {
+    const value = new Decimal(left).minus(right).abs().toNumber();
+    return { value, judgement: judge({ value, text: null, allowed: null }, limit.limit, rounding.rounder) };
+  };
+  const { value, judgement } = judgeApart(one.value, other.value);
+  const turned = againstStated(world, pair, (values) => {
+    const sides = values.map((each) => convert(each, own, limit.limit.unit));
+    const [left, right] = sides.map((side) => (side.ok ? side.value : Number.NaN));
+    return judgeApart(left ?? Number.NaN, right ?? Number.NaN).judgement.outcome === judgement.outcome;
+  });
   const precision = precisionOf({
     rule,
     quantity: undefined,
@@ -73,10 +91,15 @@ function ofSubject(world: World, rule: ResolvedRule, measure: DifferenceMeasure,
     statistic: 'difference',
     count: pair.count,
   };
+  if (turned.contradicts) {
+    const { reason } = turned;
+    const parts = { observed, limit: limit.limit, evidence: pair.evidence };
+    return makeFinding(world, rule, { ...base, ...parts, outcome: 'undecided', reason });
+  }
   return makeFinding(world, rule, {
     ...base,
     outcome: judgement.outcome,
-    reason: distanceWords(judgement, limit.limit),
+    reason: [distanceWords(judgement, limit.limit), turned.reason].filter(Boolean).join(' '),
     observed,
     limit: limit.limit,
     margin: judgement.margin,
@@ -87,9 +110,37 @@ function ofSubject(world: World, rule: ResolvedRule, measure: DifferenceMeasure,
   });
 }
 
+/** A side that the workbook reports otherwise: where that turns the outcome, nothing is decided without a cause. */
+function againstStated(
+  world: World,
+  { values, stated }: Pair,
+  isSameOutcome: (values: [number, number]) => boolean,
+): { contradicts: boolean; reason: string } {
+  const other: [number, number] = [...values];
+  for (const { side, value } of stated) other[side] = value;
+  const isTurned = ({ side, value }: Pair['stated'][number]) =>
+    !isSameOutcome(side === 0 ? [value, values[1]] : [values[0], value]);
+  const single = stated.filter(isTurned);
+  const turning = single.length === 0 && stated.length > 1 && !isSameOutcome(other) ? stated : single;
+  if (turning.length === 0) return { contradicts: false, reason: '' };
+  for (const { recomputed } of turning) world.contradicted.add(recomputed);
+  const causes = turning.map(({ recomputed }) => recomputed.cause?.text ?? null);
+  return causes.includes(null)
+    ? {
+        contradicts: true,
+        reason:
+          'A value is reported otherwise than its raw readings give, and the two give different outcomes; correct the raw readings or the reported value.',
+      }
+    : {
+        contradicts: false,
+        reason: `A reported value ${causes.join(' and ')}, so the recomputed one is used.`,
+      };
+}
+
 function laboratories(world: World, measure: DifferenceMeasure, at: Conditions): Pair | Obstacle {
   const values: number[] = [];
   const evidence: Evidence[] = [];
+  const stated: Pair['stated'] = [];
   let count = Number.POSITIVE_INFINITY;
   for (const laboratory of ['contractor', 'agency'] as const) {
     const request: SampleRequest = {
@@ -114,13 +165,20 @@ function laboratories(world: World, measure: DifferenceMeasure, at: Conditions):
         `Give the ${laboratory}'s result as a number.`,
       );
     }
+    const { recomputed } = taken.sample;
+    const reported = recomputed?.agrees === false ? recomputed.reported : null;
+    if (recomputed && reported && reported.value !== null && measure.statistic === 'mean') {
+      const unit = world.view.quantity(measure.quantity)?.unit ?? reported.unit;
+      const own = convert(reported.value, reported.unit, unit);
+      if (own.ok) stated.push({ side: laboratory === 'contractor' ? 0 : 1, value: own.value, recomputed });
+    }
     values.push(value.judgeable.value);
     evidence.push(...taken.sample.items.map((item) => item.evidence));
     count = Math.min(count, taken.sample.count);
   }
   const [contractor, agency] = values;
   if (contractor === undefined || agency === undefined) return notShown('One of the two values is missing.');
-  return { ok: true, values: [contractor, agency], count, evidence };
+  return { ok: true, values: [contractor, agency], count, evidence, stated };
 }
 
 function reported(world: World, measure: DifferenceMeasure, at: Conditions): Pair | Obstacle {
@@ -146,5 +204,6 @@ function reported(world: World, measure: DifferenceMeasure, at: Conditions): Pai
     values: [recomputed.reported.value, recomputed.value],
     count: Math.max(1, items.length),
     evidence: [evidenceOfRecomputed(recomputed)],
+    stated: [],
   };
 }

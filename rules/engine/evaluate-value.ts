@@ -11,7 +11,7 @@ import { judgeEach } from './judge-each';
 import { makeFinding } from './make-finding';
 import { type Obstacle, undecided } from './obstacle';
 import { isBorderline, precisionOf } from './precision';
-import { againstReported } from './reported';
+import { againstReported, specimensReportedOtherwise } from './reported';
 import { resolveInterval, resolveLimit } from './resolve-limit';
 import { type Sample, type SampleItem, takeSample } from './sample';
 import { type Judgeable, statisticOf } from './statistic';
@@ -86,7 +86,8 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   if (!inUnit.ok) return makeFinding(world, rule, { ...base, ...inUnit });
 
   const { rounder } = rounding;
-  const judged = judgeSample({ world, measure, statistic, at, sample: inUnit.sample, limit, rounder });
+  const judging = { world, quantity, measure, statistic, at, limit, rounder };
+  const judged = judgeSample({ ...judging, sample: inUnit.sample });
   if (!judged.ok) return makeFinding(world, rule, { ...base, ...judged });
   const { judgement, judgeable } = judged;
   const precision = precisionOf({
@@ -100,7 +101,10 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   const parts = { ...base, observed, roundingSentence: judgement.roundingSentence, precision };
 
   const { outcome } = judgement;
-  const reported = againstReported({ world, quantity, statistic, sample, limit, rounder, outcome });
+  const ofMean = againstReported({ world, quantity, statistic, sample, limit, rounder, outcome });
+  const reported = ofMean?.contradicts
+    ? ofMean
+    : (specimensAgainstReported(judging, sample, outcome) ?? ofMean);
   const short = tooFew(measure, sample);
   if (short) return makeFinding(world, rule, { ...parts, ...short });
   if (reported?.contradicts) {
@@ -123,8 +127,25 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
   });
 }
 
+/** The same for single specimens, where the rule looks at them and the workbook states another value of one. */
+function specimensAgainstReported(
+  judging: Omit<SampleJudging, 'sample'>,
+  sample: Sample,
+  outcome: Judgement['outcome'],
+): ReturnType<typeof againstReported> {
+  const { world, quantity, measure, statistic, limit } = judging;
+  const looksAtEach = measure.kind === 'reading' && measure.alsoEach !== undefined;
+  if (statistic === 'count' || (statistic === 'mean' && !looksAtEach)) return null;
+  return specimensReportedOtherwise(world, quantity, sample, (other) => {
+    const inUnit = sampleInUnit(world, quantity, statistic, other, limit.unit);
+    const judged = inUnit.ok ? judgeSample({ ...judging, sample: inUnit.sample }) : inUnit;
+    return (judged.ok ? judged.judgement.outcome : 'undecided') === outcome;
+  });
+}
+
 interface SampleJudging {
   world: World;
+  quantity: string;
   measure: ReadingMeasure | GradationMeasure;
   statistic: Statistic;
   at: Conditions;
@@ -140,7 +161,9 @@ function judgeSample(judging: SampleJudging): SampleJudgement {
   const { world, measure, statistic, at, sample, limit, rounder } = judging;
   const isReading = measure.kind === 'reading';
   if (statistic === 'each') return judgeEach(sample, limit, rounder);
-  const within = isReading && measure.within ? resolveInterval(world, measure.within, at) : null;
+  const own = world.view.quantity(judging.quantity)?.unit ?? limit.unit;
+  const units = { written: own, wanted: movesToLimit(statistic) ? limit.unit : own };
+  const within = isReading && measure.within ? resolveInterval(world, measure.within, at, units) : null;
   if (within && !within.ok) return within;
   const value = statisticOf({
     sample,
@@ -153,7 +176,7 @@ function judgeSample(judging: SampleJudging): SampleJudgement {
   const result = { ok: true as const, judgement, judgeable: value.judgeable, note: '' };
   if (!isReading || measure.alsoEach === undefined || judgement.outcome === 'fail') return result;
 
-  const interval = resolveInterval(world, measure.alsoEach, at);
+  const interval = resolveInterval(world, measure.alsoEach, at, units);
   if (!interval.ok) return interval;
   const eachLimit = { ...limit, ...interval.interval, target: null, tolerance: null };
   if (eachLimit.min === null && eachLimit.max === null) return result;
@@ -197,7 +220,12 @@ function observedOf(
   return { value: judgeable.value, rounded: judgement.rounded, text, unit, statistic, count };
 }
 
-/** Values in the unit that the limit is written in; a spread or a count has no unit to move. */
+/** A count and a percentage are not in the unit of what is counted. */
+function movesToLimit(statistic: Statistic): boolean {
+  return statistic !== 'count' && statistic !== 'percent-within-limits';
+}
+
+/** Values in the unit that the limit is written in. */
 function sampleInUnit(
   world: World,
   quantity: string,
@@ -206,8 +234,7 @@ function sampleInUnit(
   unit: string,
 ): { ok: true; sample: Sample } | Obstacle {
   const own = world.view.quantity(quantity)?.unit ?? unit;
-  if (own === unit || statistic === 'count' || statistic === 'percent-within-limits')
-    return { ok: true, sample };
+  if (own === unit || !movesToLimit(statistic)) return { ok: true, sample };
   const items: SampleItem[] = [];
   for (const item of sample.items) {
     if (item.value === null) {

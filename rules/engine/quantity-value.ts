@@ -2,7 +2,7 @@ import type { Conditions } from '../record';
 import { doubtAbout } from './doubts';
 import { type Obstacle, undecided } from './obstacle';
 import { labelOfRequest, takeSample } from './sample';
-import { exactMean } from './statistic';
+import { statisticOf } from './statistic';
 import type { World } from './world';
 
 /** The mean of a quantity, for a condition or for a limit that depends on it. */
@@ -23,5 +23,7 @@ export function quantityValue(
       `${labelOfRequest(world, request)} is only known as ${censored.evidence.text ?? 'a result without a number'}`,
     );
   }
-  return exactMean(items.map((item) => item.value ?? Number.NaN));
+  // The mean as a rule on this quantity would judge it.
+  const mean = statisticOf({ sample: result.sample, statistic: 'mean', within: null, hasMin: true });
+  return mean.ok ? { ok: true, value: mean.judgeable.value } : mean;
 }

@@ -1,6 +1,7 @@
 import { convert } from '../quantities/units';
+import type { Conditions } from '../record';
 import type { Statistic } from '../rule-sets/measure';
-import { computedWords, withUnit } from '../rule-sets/words';
+import { andList, computedWords, withUnit } from '../rule-sets/words';
 import type { RecomputedValue } from './analysis';
 import type { ResolvedLimit } from './finding';
 import { judge, type Rounder } from './judge';
@@ -53,6 +54,47 @@ export function againstReported(
     reason: `${values} The two give different outcomes, and no single cause explains the difference; correct the raw readings or the reported value.`,
     wouldDecide: `Correct the raw readings, or the reported value${place}, so that the two agree.`,
   };
+}
+
+/**
+ * Specimens of which the workbook reports another value than their own raw readings give. Where the rule comes to
+ * another outcome with what is reported, neither stands, unless a named cause explains each of them.
+ */
+export function specimensReportedOtherwise(
+  world: World,
+  quantity: string,
+  sample: Sample,
+  isSameOutcome: (other: Sample) => boolean,
+): { contradicts: boolean; reason: string } | null {
+  if (sample.recomputed === null || sample.items.length < 2) return null;
+  const differing = (world.recomputed.get(quantity) ?? []).filter(
+    ({ at, agrees }) => agrees === false && sample.items.some((item) => isSameSpecimen(item.at, at)),
+  );
+  const items = sample.items.map((item) => {
+    const stated = differing.find(({ at }) => isSameSpecimen(item.at, at))?.reported ?? null;
+    if (stated === null || stated.value === null) return item;
+    const own = convert(stated.value, stated.unit, world.view.quantity(quantity)?.unit ?? stated.unit);
+    return own.ok ? { ...item, value: own.value } : item;
+  });
+  if (differing.length === 0 || isSameOutcome({ ...sample, items })) return null;
+  for (const value of differing) world.contradicted.add(value);
+  const specimens = andList(differing.map(({ at }) => `specimen ${at.specimen}`));
+  const causes = new Set(differing.map(({ cause }) => cause?.text ?? null));
+  return causes.has(null)
+    ? {
+        contradicts: true,
+        reason: `The workbook reports other values of ${specimens} than their raw readings give. The two give different outcomes; correct the raw readings or the reported values.`,
+      }
+    : {
+        contradicts: false,
+        reason: `The reported values of ${specimens} ${[...causes].join(' and ')}, so the recomputed ones are judged.`,
+      };
+}
+
+function isSameSpecimen(item: Conditions, other: Conditions): boolean {
+  if (item.specimen === undefined || item.specimen !== other.specimen) return false;
+  const names = [...Object.keys(item), ...Object.keys(other)] as (keyof Conditions)[];
+  return names.every((name) => item[name] === other[name]);
 }
 
 /** The analysis' own object, also where the sample holds it in another unit. */

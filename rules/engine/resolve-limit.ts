@@ -1,5 +1,6 @@
 import Decimal from 'decimal.js';
 import { decimalsOf } from '../numerics/round';
+import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import { measuredUnit } from '../rule-sets/check-rule';
 import type { Bound } from '../rule-sets/limit';
@@ -37,6 +38,12 @@ export function resolveLimit(world: World, rule: ResolvedRule, at: Conditions): 
   return composed(world, rule, bounds);
 }
 
+export interface IntervalUnits {
+  /** Unit of a number that stands in the rule itself. */
+  written: string;
+  wanted: string;
+}
+
 export interface ResolvedInterval {
   min: number | null;
   max: number | null;
@@ -44,11 +51,12 @@ export interface ResolvedInterval {
   maxExclusive: boolean;
 }
 
-/** `where`, `alsoEach` or `within` for this mix. */
+/** `where`, `alsoEach` or `within` for this mix, in the unit that the values stand in. */
 export function resolveInterval(
   world: World,
   interval: { min?: Bound | undefined; max?: Bound | undefined },
   at: Conditions,
+  units: IntervalUnits,
 ): { ok: true; interval: ResolvedInterval } | Obstacle {
   const ends: ResolvedInterval = { min: null, max: null, minExclusive: false, maxExclusive: false };
   for (const end of ['min', 'max'] as const) {
@@ -57,7 +65,9 @@ export function resolveInterval(
     const resolved = resolveBound(world, bound, false, at);
     if (!resolved.ok) return resolved;
     if (resolved.bound === null) continue;
-    ends[end] = resolved.bound.value;
+    const inUnit = boundInUnit(resolved.bound, units.written, units.wanted, 'point');
+    if (!inUnit.ok) return inUnit;
+    ends[end] = inUnit.value;
     ends[`${end}Exclusive`] = resolved.bound.exclusive;
   }
   return { ok: true, interval: ends };
@@ -77,17 +87,25 @@ function composed(
   }
   const decimals = Math.max(...all.map((bound) => bound.decimals));
   const base = emptyLimit(world, rule);
-  const unit = all.find((bound) => bound.unit !== null)?.unit ?? base.unit;
+  const unit = all.find(({ found, unit: own }) => found !== null && own !== null)?.unit ?? base.unit;
   const limit: ResolvedLimit = { ...base, unit, decimals, from: provenance(rule, table) };
-  if (target && tolerance) {
-    limit.target = target.value;
-    limit.tolerance = tolerance.value;
-    limit.min = new Decimal(target.value).minus(tolerance.value).toNumber();
-    limit.max = new Decimal(target.value).plus(tolerance.value).toNumber();
-    limit.minExclusive = limit.maxExclusive = tolerance.exclusive || target.exclusive;
+  const values: Partial<Record<keyof typeof bounds, number>> = {};
+  for (const end of ['min', 'max', 'target', 'tolerance'] as const) {
+    const bound = bounds[end];
+    if (bound === undefined) continue;
+    const inUnit = boundInUnit(bound, base.unit, unit, end === 'tolerance' ? 'distance' : 'point');
+    if (!inUnit.ok) return inUnit;
+    values[end] = inUnit.value;
+  }
+  if (values.target !== undefined && values.tolerance !== undefined) {
+    limit.target = values.target;
+    limit.tolerance = values.tolerance;
+    limit.min = new Decimal(values.target).minus(values.tolerance).toNumber();
+    limit.max = new Decimal(values.target).plus(values.tolerance).toNumber();
+    limit.minExclusive = limit.maxExclusive = (tolerance?.exclusive || target?.exclusive) ?? false;
   } else {
-    limit.min = bounds.min?.value ?? null;
-    limit.max = bounds.max?.value ?? null;
+    limit.min = values.min ?? null;
+    limit.max = values.max ?? null;
     limit.minExclusive = bounds.min?.exclusive ?? false;
     limit.maxExclusive = bounds.max?.exclusive ?? false;
   }
@@ -97,6 +115,23 @@ function composed(
     );
   }
   return { ok: true, limit };
+}
+
+/** A tolerance is a distance: it moves by the step of the scale, not by its offset. */
+function boundInUnit(
+  bound: ResolvedBound,
+  written: string,
+  wanted: string,
+  kind: 'point' | 'distance',
+): { ok: true; value: number } | Obstacle {
+  const own = bound.unit ?? written;
+  if (own === wanted) return { ok: true, value: bound.value };
+  const converted = convert(bound.value, own, wanted);
+  const origin = kind === 'distance' ? convert(0, own, wanted) : { ok: true as const, value: 0 };
+  if (!converted.ok || !origin.ok) {
+    return undecided(`One limit is in ${own} and the value in ${wanted}, which do not compare.`);
+  }
+  return { ok: true, value: new Decimal(converted.value).minus(origin.value).toNumber() };
 }
 
 function resolveBound(
@@ -112,9 +147,10 @@ function resolveBound(
     const other = quantityValue(world, bound.quantity, bound.at);
     if (!other.ok) return other;
     const value = new Decimal(other.value).plus(bound.plus).toNumber();
-    const usual = world.view.quantity(bound.quantity)?.decimals ?? 0;
-    const decimals = Math.max(usual, decimalsOf(bound.plus));
-    return { ok: true, bound: { value, decimals, unit: null, exclusive, found: null } };
+    const entry = world.view.quantity(bound.quantity);
+    const decimals = Math.max(entry?.decimals ?? 0, decimalsOf(bound.plus));
+    const unit = entry?.unit ?? null;
+    return { ok: true, bound: { value, decimals, unit, exclusive, found: null } };
   }
   const row = findRow(world, bound.table, at);
   if (!row.ok) return row;

@@ -75,7 +75,7 @@ function censored({ value, qualifier }: SampleItem): string | null {
 }
 
 /** The mean in decimal arithmetic; the value itself where there is only one, untouched. */
-export function exactMean(values: readonly number[]): { ok: true; value: number } | Obstacle {
+function exactMean(values: readonly number[]): { ok: true; value: number } | Obstacle {
   if (values.length === 0 || values.some((value) => !Number.isFinite(value))) {
     return undecided('One of the values is not a number.');
   }

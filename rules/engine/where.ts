@@ -14,7 +14,8 @@ export function applyWhere(
 ): { ok: true; items: SampleItem[] } | Obstacle {
   let items = sample.items;
   for (const where of request.where ?? []) {
-    const interval = resolveInterval(world, where, request.at);
+    const unit = world.view.quantity(where.quantity)?.unit ?? '1';
+    const interval = resolveInterval(world, where, request.at, { written: unit, wanted: unit });
     if (!interval.ok) return interval;
     const met: SampleItem[] = [];
     for (const item of items) {

@@ -1,5 +1,5 @@
 import { viewOf } from './edition-view';
-import { patchRow } from './patch-row';
+import { patchRow, rowsDisplaced } from './patch-row';
 import type { DocumentProblem } from './problem';
 import { documentName, type Provenance, type ResolvedEdition } from './resolve';
 import type { Layer } from './schema';
@@ -38,7 +38,10 @@ export function applyLayer(
     present: edition.tables,
     key: (table) => table.id,
     words: (table) => table.title ?? table.id,
-    dress: (table, supplied) => ({ ...table, supplied, rowsSupplied: table.rows.map(() => supplied) }),
+    dress: (table, supplied) => {
+      const earlier = edition.tables.find(({ id }) => id === table.id);
+      return { ...table, supplied, rowsSupplied: rowsDisplaced(table, earlier, document, cellWords) };
+    },
   });
   const attributes = applyList({
     ...context,

@@ -4,7 +4,7 @@ import { checkLimits } from './check-limits';
 import { checkWhen } from './check-when';
 import type { EditionView } from './edition-view';
 import { readFormula } from './formula';
-import type { FormulaMeasure } from './measure';
+import type { FormulaMeasure, Statistic } from './measure';
 import type { DocumentProblem } from './problem';
 import type { Rule } from './schema';
 
@@ -55,6 +55,13 @@ function checkMeasure(rule: Rule, view: EditionView, report: ReportFault): void 
       );
     }
   }
+  if (measure.kind === 'difference' && NOT_OF_TWO.has(measure.statistic)) {
+    report(
+      '/measure/statistic',
+      `a difference between two values cannot be taken over ${measure.statistic}.`,
+      'Use mean, min, max, range, standard-deviation, trimmed-mean or count.',
+    );
+  }
   if (measure.kind === 'reading') {
     const wantsWithin = measure.statistic === 'percent-within-limits';
     if (wantsWithin !== (measure.within !== undefined)) {
@@ -93,6 +100,9 @@ function checkFormula(measure: FormulaMeasure, view: EditionView, report: Report
   }
 }
 
+/** Statistics that are no one value of each side. */
+const NOT_OF_TWO = new Set<Statistic>(['each', 'percent-within-limits']);
+
 function checkQuantity(id: string, at: string, view: EditionView, report: ReportFault): void {
   if (view.quantity(id)) return;
   report(
@@ -111,7 +121,10 @@ function checkTableReferences(rule: Rule, view: EditionView, report: ReportFault
   references.push({ path: '/limit/oneOf', target: rule.limit.oneOf });
   references.push({ path: '/rounding/to', target: rule.rounding?.to });
   for (const { path, target } of references) {
-    if (isQuantityReference(target)) checkQuantity(target.quantity, `${path}/quantity`, view, report);
+    if (isQuantityReference(target)) {
+      checkQuantity(target.quantity, `${path}/quantity`, view, report);
+      checkReferenceUnit(rule, path, target.quantity, view, report);
+    }
     if (!isTableReference(target)) continue;
     const table = view.table(target.table);
     if (!table) {
@@ -156,6 +169,25 @@ function checkUnit(
       `Give the column in ${unit} or a unit of the same kind.`,
     );
   }
+}
+
+/** A limit taken from another quantity must be of the same kind as the value. */
+function checkReferenceUnit(
+  rule: Rule,
+  path: string,
+  quantity: string,
+  view: EditionView,
+  report: ReportFault,
+): void {
+  const other = view.quantity(quantity)?.unit;
+  const unit = measuredUnit(rule, view);
+  if (!path.startsWith('/limit') || unit === null || other === undefined || convert(1, other, unit).ok)
+    return;
+  report(
+    `${path}/quantity`,
+    `the quantity ${quantity} is in ${other}, but the value is in ${unit}.`,
+    'Name a quantity of the same kind as the value.',
+  );
 }
 
 /** Unit of what a rule measures, null where the value has none that a column could contradict. */

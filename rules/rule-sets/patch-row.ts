@@ -1,5 +1,5 @@
 import type { DocumentProblem } from './problem';
-import type { ResolvedTable } from './resolve';
+import type { Provenance, ResolvedTable } from './resolve';
 import type { RowPatch } from './schema';
 import { isKeyRange, type LimitTable, type TableCell } from './table';
 
@@ -68,16 +68,50 @@ function withPatch(
 ): ResolvedTable {
   const row = table.rows[index] ?? {};
   const earlier = table.rowsSupplied[index] ?? table.supplied;
-  const text = table.columns
-    .filter((column) => column.name in set)
-    .map((column) => `${column.name} ${cellWords(row[column.name], column.unit)}`)
-    .join(', ');
+  const text = rowWords(table, row, (name) => name in set, cellWords);
   const supplied = { document, displaced: [...earlier.displaced, { document: earlier.document, text }] };
   return {
     ...table,
     rows: table.rows.map((each, i) => (i === index ? { ...each, ...set } : each)),
     rowsSupplied: table.rowsSupplied.map((each, i) => (i === index ? supplied : each)),
   };
+}
+
+/**
+ * What supplied each row of a table that a layer gives anew: the layer, in place of the row with the same keys,
+ * or of nothing.
+ */
+export function rowsDisplaced(
+  table: LimitTable,
+  earlier: ResolvedTable | undefined,
+  document: string,
+  cellWords: RowPatching['cellWords'],
+): Provenance[] {
+  return table.rows.map((row) => {
+    const place =
+      earlier?.rows.findIndex((old) => table.keys.every((key) => isSameCell(old[key], row[key]))) ?? -1;
+    const old = place < 0 ? undefined : earlier?.rows[place];
+    if (!earlier || !old) return { document, displaced: [] };
+    const before = earlier.rowsSupplied[place] ?? earlier.supplied;
+    const text = rowWords(earlier, old, () => true, cellWords);
+    return { document, displaced: [...before.displaced, { document: before.document, text }] };
+  });
+}
+
+function isSameCell(left: TableCell | undefined, right: TableCell | undefined): boolean {
+  return right !== undefined && sameKey(left, right);
+}
+
+function rowWords(
+  table: LimitTable,
+  row: Row,
+  isNamed: (column: string) => boolean,
+  cellWords: RowPatching['cellWords'],
+): string {
+  return table.columns
+    .filter(({ name }) => isNamed(name))
+    .map(({ name, unit }) => `${name} ${cellWords(row[name], unit)}`)
+    .join(', ');
 }
 
 function matchesKey(row: Row, key: Row): boolean {

@@ -217,3 +217,50 @@ describe('layers that are refused', () => {
     expect(refusals([layer])).toHaveLength(3);
   });
 });
+
+describe('a table that a layer gives anew', () => {
+  const table = (rows: { nominalMaximumSize: number; min: string }[]) => ({
+    id: 'vma-min',
+    title: 'Minimum VMA',
+    keys: ['nominalMaximumSize'],
+    columns: [{ name: 'min', unit: '%' }],
+    rows,
+  });
+
+  it('keeps for each row what stood there before, and nothing for a new one', () => {
+    const edition = anEdition({ tables: [table([{ nominalMaximumSize: 12.5, min: '14.0' }])] }, [
+      aLayer({
+        replace: {
+          tables: [
+            table([
+              { nominalMaximumSize: 12.5, min: '14.5' },
+              { nominalMaximumSize: 19, min: '13.0' },
+            ]),
+          ],
+        },
+      }),
+    ]);
+    expect(edition.tables[0]?.rowsSupplied).toEqual([
+      { document: 'Supplement 1, 1', displaced: [{ document: 'Section 900, 2026', text: 'min 14.0 %' }] },
+      { document: 'Supplement 1, 1', displaced: [] },
+    ]);
+  });
+});
+
+describe('a difference over a statistic that is no one value of each side', () => {
+  it.each(['each', 'percent-within-limits'] as const)('is refused: %s', (statistic) => {
+    const rule = aRule({
+      measure: {
+        kind: 'difference',
+        quantity: 'air-voids',
+        between: ['contractor', 'agency'],
+        statistic,
+      },
+      limit: { max: 1 },
+    });
+    const parsed = parseRuleSet(aRuleSet({ rules: [rule] }));
+    expect(parsed.ok ? [] : parsed.problems.map(({ pointer }) => pointer)).toEqual([
+      '/rules/0/measure/statistic',
+    ]);
+  });
+});
