@@ -59,3 +59,11 @@ it('puts five cores over the mean maximum gravity of the lot', () => {
   expect(Math.abs(density - expected.mean)).toBeLessThanOrEqual(0.0005);
   expect(Math.abs(numberOf(inPlaceVoidsFromMaximum(density)) - expected.voids)).toBeLessThanOrEqual(0.0005);
 });
+
+it('takes 93 ± 1 percent of maximum gravity for 6 to 8 percent voids (Tex-242-F, specimen configuration)', () => {
+  const { expected } = referenceRecord(records, 'DEN-07', {
+    inputs: z.unknown(),
+    expected: z.object({ air_voids: z.array(z.number()) }),
+  });
+  expect([94, 92].map((percent) => numberOf(inPlaceVoidsFromMaximum(percent)))).toEqual(expected.air_voids);
+});

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { z } from 'zod';
+import { mean } from '#rules/numerics/mean';
 import { decimalsOf, formatDecimals, type RoundingMethod, roundTo } from '#rules/numerics/round';
 import { referenceRecord } from './reference-record';
 import records from './rounding.json';
@@ -103,5 +104,24 @@ describe('numbers that binary arithmetic holds askew', () => {
   it('judges the stored 5.0499, not the shown 5.0: fails a 5.0 max absolutely, passes it rounded', () => {
     expect(roundTo({ value: 5.0499, to: 0.1, method: 'absolute' }) <= 5).toBe(false);
     expect(roundTo({ value: 5.0499, to: 0.1, method: 'rounding' }) <= 5).toBe(true);
+  });
+});
+
+describe('the optimum as a mean of four binder contents (UFC 3-250-03, table 2-8)', () => {
+  const { inputs, expected } = referenceRecord(records, 'MAR-03', {
+    inputs: z.object({ Pb_at: z.record(z.string(), z.number()) }),
+    expected: z.object({ optimum_Pb: z.number() }),
+  });
+  const optimum = mean(Object.values(inputs.Pb_at));
+  const rounded = (to: number, method: RoundingMethod) =>
+    optimum.ok ? roundTo({ value: optimum.value, to, method }) : null;
+
+  it.each(['rounding', 'half-up', 'truncate'] as const)('is 4.6 to one decimal by %s', (method) => {
+    expect(rounded(0.1, method)).toBe(expected.optimum_Pb);
+  });
+
+  it('splits at 0.05, where 4.625 lies halfway: to the even 4.60, or up to 4.65', () => {
+    expect(optimum).toEqual({ ok: true, value: 4.625 });
+    expect([rounded(0.05, 'rounding'), rounded(0.05, 'half-up')]).toEqual([4.6, 4.65]);
   });
 });

@@ -1,7 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { z } from 'zod';
+import { quantityById } from '#rules/quantities/registry';
 import { sieveFromName } from '#rules/quantities/sieves';
 import { convert } from '#rules/quantities/units';
+import { understandNumber } from '#rules/reading/understand-number';
+import { cellOf } from '#tests/workbooks/grid-of';
 import { numberOf, referenceRecord } from './reference-record';
 import records from './units.json';
 
@@ -55,6 +58,44 @@ describe('conversions from the exact definitions (NIST SP 811, 2008, appendix B.
     expect(numberOf(convert(8, '0.01 in', 'mm'))).toBe(2.032);
     expect(numberOf(convert(14, '0.01 in', 'mm'))).toBe(3.556);
   });
+});
+
+it('turns psi into pascals (definition and examples of a conversion page)', () => {
+  const { inputs, expected } = referenceRecord(records, 'UNI-02', {
+    inputs: z.object({ psi: z.array(z.number()) }),
+    expected: z.object({ Pa: z.array(z.number()), factor: z.number() }),
+  });
+  inputs.psi.forEach((psi, place) => {
+    expect(Math.abs(numberOf(convert(psi, 'psi', 'Pa')) - expected.Pa[place]!)).toBeLessThanOrEqual(0.0001);
+  });
+  expect(numberOf(convert(1, 'psi', 'Pa')) / expected.factor).toBeCloseTo(1, 12);
+});
+
+it('never turns a kinematic viscosity into a dynamic one: the density would have to be known', () => {
+  const { inputs } = referenceRecord(records, 'UNI-12', {
+    inputs: z.object({ viscosity: z.array(z.number()) }),
+    expected: z.unknown(),
+  });
+  for (const centistokes of inputs.viscosity) {
+    expect(convert(centistokes, 'mm²/s', 'Pa·s').ok).toBe(false);
+  }
+});
+
+it('lets the format of a cell decide what a percentage is, and doubts a bare fraction', () => {
+  const { inputs, expected } = referenceRecord(records, 'UNI-11', {
+    inputs: z.object({
+      cell: z.array(z.object({ text: z.string(), stored: z.number(), format: z.string() })),
+    }),
+    expected: z.object({ percent: z.array(z.union([z.number(), z.string()])) }),
+  });
+  const binder = quantityById('binder-content')!;
+  const read = inputs.cell.map(({ text, stored, format }) => {
+    const cell = cellOf('C7', { kind: 'number', value: String(stored), text, format });
+    return understandNumber(cell, { quantity: binder, unit: null, unknownUnit: null, decimal: '.' });
+  });
+  expect(read.map((each) => (each.state === 'value' ? each.value.value : each.state))).toEqual(
+    expected.percent.map((each) => (typeof each === 'number' ? each : 'doubt')),
+  );
 });
 
 describe('sieve names', () => {

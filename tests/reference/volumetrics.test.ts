@@ -218,3 +218,41 @@ it.each(['VOL-17a', 'VOL-17b', 'VOL-17c'])('%s: relative density from heights (A
   });
   expectWithin(numberOf(density), expected.percent_Gmm_N, 0.0005);
 });
+
+it('VOL-08: a mix given in percent of mix, its bulk gravity normalised by the aggregate alone', () => {
+  const { inputs, expected } = referenceRecord(records, 'VOL-08', {
+    inputs: z.object({
+      Pb: number,
+      Gb: number,
+      aggregates_percent_of_mix: z.record(z.string(), number),
+      G: z.record(z.string(), number),
+      Gmm: number,
+      Gmb: number,
+    }),
+    expected: z.object({
+      Gsb: number,
+      Gse: number,
+      Pba: number,
+      Pbe: number,
+      VMA: number,
+      Va: number,
+      VFA: number,
+    }),
+  });
+  const shares = Object.entries(inputs.aggregates_percent_of_mix).map(([name, percentOfMix]) => ({
+    share: (100 * percentOfMix) / (100 - inputs.Pb),
+    value: inputs.G[name]!,
+  }));
+  const Gsb = numberOf(combinedGravity(shares));
+  const Gse = numberOf(effectiveGravity(inputs));
+  const Pba = numberOf(absorbedBinder({ Gb: inputs.Gb, Gse, Gsb }));
+  const VMA = numberOf(voidsInMineralAggregate({ ...inputs, Gsb }));
+  const Va = numberOf(airVoids(inputs));
+  expectWithin(Gsb, expected.Gsb, 0.0005);
+  expectWithin(Gse, expected.Gse, 0.0005);
+  expectWithin(Pba, expected.Pba, 0.005);
+  expectWithin(numberOf(effectiveBinderContent({ Pb: inputs.Pb, Pba })), expected.Pbe, 0.005);
+  expectWithin(VMA, expected.VMA, 0.005);
+  expectWithin(Va, expected.Va, 0.005);
+  expectWithin(numberOf(voidsFilledWithAsphalt({ VMA, Va })), expected.VFA, 0.005);
+});
