@@ -1,3 +1,4 @@
+import { sectionWords } from '#shared/format/section-words';
 import type { Database } from '../db/client';
 import { newestCheckOf } from '../db/queries/checks';
 import { listNotes, listWaivers } from '../db/queries/notes';
@@ -26,17 +27,17 @@ export async function loadRevisionDocuments(
   reader: Reader,
   row: RevisionRow,
 ): Promise<LoadedRevision> {
-  const check = await newestCheckOf(db, row.revision.id);
+  const check = await newestCheckOf(db, reader, row.revision.id);
   if (check === null) throw new Problem('wrong-state', { detail: 'The workbook has not been checked yet.' });
   const [letterhead, startingPoint, notes, waivers, before] = await Promise.all([
     letterheadOf(db, row.agency.id),
     isStartingPoint(db, row.agency.id, row.revision.section.base),
     listNotes(db, reader, row.submittal.id),
     listWaivers(db, reader, row.revision.id),
-    revisionBefore(db, row.submittal.id, row.revision.number),
+    revisionBefore(db, reader, row.revision),
   ]);
   if (letterhead === null) throw new Problem('not-found');
-  const previous = before === null ? null : await newestCheckOf(db, before.id);
+  const previous = before === null ? null : await newestCheckOf(db, reader, before.id);
   const own = notes.filter(({ note }) => note.revisionId === row.revision.id && note.side === 'agency');
   const returned = own.filter(({ note }) => note.kind === 'to be returned').map(({ note }) => note);
   return {
@@ -63,11 +64,4 @@ export async function loadRevisionDocuments(
     checkId: check.id,
     waived: new Set(waivers.map(({ waiver }) => waiver.finding)),
   };
-}
-
-/** "Section 412 Dense-graded asphalt mixtures, edition 2026, with Supplement S-07" */
-export function sectionWords({ base, layers }: RevisionRow['revision']['section']): string {
-  const over = layers.map(({ title }) => title);
-  const withLayers = over.length === 0 ? '' : `, with ${over.join(', ')}`;
-  return `${base.title}, edition ${base.edition}${withLayers}`;
 }

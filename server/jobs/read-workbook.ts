@@ -1,9 +1,10 @@
-import { eq } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import type { CellGrid } from '#rules/reading/cell-grid';
 import { keepReading } from '../commands/readings/keep-reading';
 import { readGrid } from '../commands/readings/read-grid';
 import { loadGrid, storeGrid } from '../db/queries/cell-grids';
+import { type Reader, revisionsOf } from '../db/queries/reader';
 import { listAnswers, loadFile } from '../db/queries/records';
 import { findRevision, lockRevision, type RevisionRow } from '../db/queries/revisions';
 import { snapshotOfSection } from '../db/queries/section-snapshot';
@@ -23,10 +24,11 @@ const payloadSchema = z.object({ revisionId: z.string(), fileId: z.string() });
 export async function readWorkbookJob(context: JobContext): Promise<void> {
   const { deps, job } = context;
   const { revisionId, fileId } = payloadSchema.parse(job.payload);
+  const reader = readerOf(job);
   const row = await draftOf(context, revisionId, fileId);
-  const grid = (await loadGrid(deps.db, fileId)) ?? (await decodeAndKeep(context, fileId));
+  const grid = (await loadGrid(deps.db, reader, fileId)) ?? (await decodeAndKeep(context, fileId));
   const { submittal } = row;
-  const section = await snapshotOfSection(deps.db, submittal);
+  const section = await snapshotOfSection(deps.db, reader, submittal);
   if (section === null) {
     throw new Problem('wrong-state', {
       detail: 'The section of the project is not confirmed.',
@@ -39,13 +41,13 @@ export async function readWorkbookJob(context: JobContext): Promise<void> {
     grid,
     fileName: row.workbook.fileName,
     edition,
-    answers: await listAnswers(deps.db, revisionId),
+    answers: await listAnswers(deps.db, reader, revisionId),
     templateHref: templateHrefOf(submittal),
   });
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revisionId);
+    const locked = await lockRevision(tx, reader, revisionId);
     if (locked?.state !== 'draft' || locked.workbookFileId !== fileId) throw new JobInterrupted();
-    await keepReading(tx, deps, { row, section, edition, read, mapping, madeById: job.createdById });
+    await keepReading(tx, deps, { reader, row, section, edition, read, mapping, madeById: job.createdById });
     // Whoever has the page open saw a draft without a reading: their next write must not pass for informed.
     await tx
       .update(revisions)
@@ -55,13 +57,18 @@ export async function readWorkbookJob(context: JobContext): Promise<void> {
   });
 }
 
+/** A workbook is read for the contractor whose job it is. */
+function readerOf({ organisationId }: JobContext['job']): Reader {
+  return { organisationId, kind: 'contractor' };
+}
+
 /** The revision while it is a draft with this very workbook; a job that was overtaken has nothing to do. */
 async function draftOf({ deps, job }: JobContext, revisionId: string, fileId: string): Promise<RevisionRow> {
+  const reader = readerOf(job);
   const [place] = await deps.db
     .select({ submittalId: revisions.submittalId, number: revisions.number })
     .from(revisions)
-    .where(eq(revisions.id, revisionId));
-  const reader = { organisationId: job.organisationId, kind: 'contractor' as const };
+    .where(and(eq(revisions.id, revisionId), revisionsOf(reader)));
   const row = place === undefined ? null : await findRevision(deps.db, reader, place);
   if (row === null || row.revision.state !== 'draft' || row.workbook.id !== fileId) {
     throw new Problem('wrong-state', {
@@ -73,8 +80,9 @@ async function draftOf({ deps, job }: JobContext, revisionId: string, fileId: st
 }
 
 async function decodeAndKeep(context: JobContext, fileId: string): Promise<CellGrid> {
-  const { deps, signal } = context;
-  const file = await loadFile(deps.db, fileId);
+  const { deps, job, signal } = context;
+  const reader = readerOf(job);
+  const file = await loadFile(deps.db, reader, fileId);
   if (file === null) throw new Error(`The file ${fileId} is not stored.`);
   const { bytes, fileName } = file;
   const progress = createProgress(context);
@@ -86,7 +94,7 @@ async function decodeAndKeep(context: JobContext, fileId: string): Promise<CellG
     throw new Problem(slug, { detail, fix });
   }
   await deps.db.transaction((tx) =>
-    storeGrid(tx, { fileId, grid: decoded.grid, now: deps.now(), newId: deps.newId }),
+    storeGrid(tx, { reader, fileId, grid: decoded.grid, now: deps.now(), newId: deps.newId }),
   );
   return decoded.grid;
 }

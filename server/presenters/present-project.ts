@@ -5,7 +5,7 @@ import { type EditionRow, editionReference, listEditions } from '../db/queries/e
 import {
   contactsOfProject,
   contractorsOfProjects,
-  countMixes,
+  countSubmittals,
   type ProjectRow,
   type SectionRow,
   sectionsOfProjects,
@@ -23,8 +23,8 @@ export async function presentProjectList(
 ): Promise<ProjectListItem[]> {
   const ids = rows.map(({ project }) => project.id);
   const contractors = await contractorsOfProjects(db, actor, ids);
-  const sections = await sectionsOfProjects(db, ids);
-  const mixes = await countMixes(db, actor, ids);
+  const sections = await sectionsOfProjects(db, actor, ids);
+  const submittals = await countSubmittals(db, actor, ids);
   return rows.map(({ project, agency }) => ({
     id: project.id,
     number: project.number,
@@ -40,7 +40,7 @@ export async function presentProjectList(
         layers: layers.map(({ title }) => title),
         confirmed: section.confirmedAt !== null,
       })),
-    mixes: mixes.find(({ projectId }) => projectId === project.id)?.total ?? 0,
+    submittals: submittals.find(({ projectId }) => projectId === project.id)?.total ?? 0,
   }));
 }
 
@@ -50,7 +50,7 @@ export async function presentProject(
   { project, agency }: ProjectRow,
 ): Promise<Project> {
   const { db } = deps;
-  const sections = await sectionsOfProjects(db, [project.id]);
+  const sections = await sectionsOfProjects(db, actor, [project.id]);
   const chooses = confirmsSections(actor);
   const editions = chooses ? await listEditions(db, project.agencyId) : [];
   const today = dateOfInstant(deps.now().toISOString(), agency.timeZone);
@@ -60,7 +60,7 @@ export async function presentProject(
     title: project.title,
     lettingOn: project.lettingOn,
     facts: project.facts,
-    contacts: await contactsOfProject(db, project.id),
+    contacts: await contactsOfProject(db, actor, project.id),
     agency: { id: agency.id, name: agency.name },
     contractors: contractorsOf(await contractorsOfProjects(db, actor, [project.id]), project.id),
     sections: sections.map(presentSection),

@@ -26,15 +26,16 @@ interface Recheck {
 export async function checkAgain(deps: Deps, { actor, requestId, row }: Recheck): Promise<void> {
   const { revision, submittal, project, agency } = row;
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revision.id);
-    const kept = await findMixRecord(tx, revision.id);
-    const section = await snapshotOfSection(tx, submittal);
+    const locked = await lockRevision(tx, actor, revision.id);
+    const kept = await findMixRecord(tx, actor, revision.id);
+    const section = await snapshotOfSection(tx, actor, submittal);
     if (locked === null || kept === null || section === null) {
       throw new Problem('wrong-state', { detail: 'There is no reading to check yet.' });
     }
     const edition = await loadResolvedEdition(tx, section.resolvedHash);
     if (locked.state === 'draft') {
       await keepReading(tx, deps, {
+        reader: actor,
         row: { ...row, revision: locked },
         section,
         edition,
@@ -49,6 +50,7 @@ export async function checkAgain(deps: Deps, { actor, requestId, row }: Recheck)
     const context = { submittedOn, lettingOn: project.lettingOn, facts: project.facts };
     const result = evaluate(kept.record, edition, context);
     await storeCheck(tx, deps, {
+      reader: actor,
       revision,
       kind: 'check of record',
       context,

@@ -2,10 +2,12 @@ import type { CheckResult } from '#rules/engine/finding';
 import type { CheckContext } from '#rules/record';
 import type { Database } from '../../db/client';
 import { nextCheckNumber, removePreChecks } from '../../db/queries/checks';
+import type { Reader } from '../../db/queries/reader';
 import { checks, findings } from '../../db/schema/checks';
 import type { Deps } from '../../deps';
 
 export interface NewCheck {
+  reader: Reader;
   revision: { id: string; agencyId: string; contractorId: string };
   kind: 'pre-check' | 'check of record';
   context: CheckContext & { submittedOn: string };
@@ -23,9 +25,9 @@ const rowsPerInsert = 200;
 export async function storeCheck(
   tx: Database,
   { now, newId }: Pick<Deps, 'now' | 'newId'>,
-  { revision, kind, context, result, madeById }: NewCheck,
+  { reader, revision, kind, context, result, madeById }: NewCheck,
 ): Promise<string> {
-  await removePreChecks(tx, revision.id);
+  await removePreChecks(tx, reader, revision.id);
   const id = newId();
   const tenant = {
     revisionId: revision.id,
@@ -37,7 +39,7 @@ export async function storeCheck(
     id,
     ...tenant,
     kind,
-    number: await nextCheckNumber(tx, revision.id),
+    number: await nextCheckNumber(tx, reader, revision.id),
     madeAt: now(),
     madeById,
     submittedOn: context.submittedOn,

@@ -28,14 +28,14 @@ export async function waive(deps: Deps, waiver: NewWaiver): Promise<string> {
   const { revision, submittal } = row;
   const id = deps.newId();
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revision.id);
+    const locked = await lockRevision(tx, actor, revision.id);
     if (locked?.state !== 'in review') {
       throw new Problem('wrong-state', {
         detail: `Revision ${revision.number} is ${locked?.state ?? 'gone'}, not in review.`,
         fix: 'Take it for review, then waive.',
       });
     }
-    const check = await newestCheckOf(tx, revision.id);
+    const check = await newestCheckOf(tx, actor, revision.id);
     const found = check?.result.findings.find((each) => findingKey(each) === finding);
     if (found === undefined) {
       const detail = 'The check has no such finding.';
@@ -96,7 +96,7 @@ export async function removeWaiver(
   { actor, requestId, waiver, version }: Removal,
 ): Promise<void> {
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, waiver.revisionId);
+    const locked = await lockRevision(tx, actor, waiver.revisionId);
     if (locked?.state !== 'in review') {
       throw new Problem('wrong-state', {
         detail: 'The return is sent, or the revision is no longer in review.',

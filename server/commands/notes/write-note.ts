@@ -30,11 +30,11 @@ export async function writeNote(deps: Deps, note: NewNote): Promise<string> {
   const { revision, submittal } = row;
   const id = deps.newId();
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revision.id);
+    const locked = await lockRevision(tx, actor, revision.id);
     if (locked === null) throw new Problem('not-found');
     const writable = writableKinds(actor, locked.state, note.abilities);
     if (!writable.includes(kind)) throw refusal(writable);
-    if (finding !== null) await expectFinding(tx, revision.id, finding);
+    if (finding !== null) await expectFinding(tx, actor, { revisionId: revision.id, key: finding });
     if (note.answers !== null) await expectAnswerable(tx, row, note.answers);
     const now = deps.now();
     await tx.insert(notes).values({
@@ -81,7 +81,7 @@ export async function changeNote(deps: Deps, change: NoteChange): Promise<void> 
   const { actor, noteId, version, kind, text } = change;
   if (!change.writable.includes(kind)) throw refusal(change.writable);
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, change.revisionId);
+    const locked = await lockRevision(tx, actor, change.revisionId);
     if (locked === null) throw new Problem('not-found');
     const now = deps.now();
     const sentAt = sentAtOnce(kind, locked.state) ? now : null;
@@ -138,8 +138,12 @@ function refusal(writable: NoteKind[]): Problem {
   return new Problem('invalid-input', { detail, errors: [{ pointer: '/kind', detail }] });
 }
 
-async function expectFinding(tx: Database, revisionId: string, key: string): Promise<void> {
-  const check = await newestCheckOf(tx, revisionId);
+async function expectFinding(
+  tx: Database,
+  actor: Actor,
+  { revisionId, key }: { revisionId: string; key: string },
+): Promise<void> {
+  const check = await newestCheckOf(tx, actor, revisionId);
   if (check?.result.findings.some((finding) => findingKey(finding) === key)) return;
   const detail = 'The check has no such finding.';
   throw new Problem('invalid-input', { detail, errors: [{ pointer: '/finding', detail }] });

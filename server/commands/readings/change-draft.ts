@@ -36,12 +36,12 @@ export async function changeDraft(
 ): Promise<void> {
   const { revision, submittal } = row;
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revision.id);
+    const locked = await lockRevision(tx, actor, revision.id);
     if (locked?.state !== 'draft') {
       throw new Problem('wrong-state', { detail: 'Only a draft can be changed.' });
     }
-    const record = await findMixRecord(tx, revision.id);
-    const section = await snapshotOfSection(tx, submittal);
+    const record = await findMixRecord(tx, actor, revision.id);
+    const section = await snapshotOfSection(tx, actor, submittal);
     if (record === null || section === null) {
       throw new Problem('wrong-state', { detail: 'The workbook has not been read yet.' });
     }
@@ -54,6 +54,7 @@ export async function changeDraft(
     };
     const reread = (await change(tx, kept)) ?? kept;
     await keepReading(tx, deps, {
+      reader: actor,
       row: { ...row, revision: locked },
       section,
       edition,

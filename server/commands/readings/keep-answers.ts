@@ -16,17 +16,17 @@ type GivenAnswer = Omit<Answer, 'answer'> & { answer: string | null };
 
 /** Keeps answers to doubts, takes those back that are null, and reads the workbook again from its stored cells. */
 export async function keepAnswers(deps: Deps, act: DraftChange & { given: GivenAnswer[] }): Promise<void> {
-  const { row, given } = act;
+  const { row, actor, given } = act;
   await changeDraft(deps, act, async (tx, kept) => {
     refuseUnknown(kept.read.doubts, given);
     for (const answer of given) await keepAnswer(tx, deps, act, answer);
-    const grid = await loadGrid(tx, row.workbook.id);
+    const grid = await loadGrid(tx, actor, row.workbook.id);
     if (grid === null) throw new Error(`The cells of ${row.workbook.id} are not stored.`);
     const { read, mapping } = await readGrid(tx, {
       grid,
       fileName: row.workbook.fileName,
       edition: kept.edition,
-      answers: await listAnswers(tx, row.revision.id),
+      answers: await listAnswers(tx, actor, row.revision.id),
       templateHref: templateHrefOf(row.submittal),
     });
     return { read, mapping };

@@ -1,11 +1,13 @@
 import { eq } from 'drizzle-orm';
 import type { DocumentRecord } from '#rules/record';
 import type { Database } from '../../db/client';
+import type { Reader } from '../../db/queries/reader';
 import { type DocumentRow, listDocuments } from '../../db/queries/records';
 import { documents } from '../../db/schema/submittals';
 import type { Deps } from '../../deps';
 
 interface KeepDocuments {
+  reader: Reader;
   revision: { id: string; agencyId: string; contractorId: string };
   stated: readonly DocumentRecord[];
 }
@@ -17,9 +19,9 @@ interface KeepDocuments {
 export async function keepDocuments(
   tx: Database,
   { newId }: Pick<Deps, 'newId'>,
-  { revision, stated }: KeepDocuments,
+  { reader, revision, stated }: KeepDocuments,
 ): Promise<DocumentRecord[]> {
-  const present = (await listDocuments(tx, revision.id)).map((row) => row.document);
+  const present = (await listDocuments(tx, reader, revision.id)).map((row) => row.document);
   const unmatched = present.filter((row) => !row.added);
   for (const [position, record] of stated.entries()) {
     const found = unmatched.findIndex((row) => row.stated !== null && sameDocument(row.stated, record));
@@ -43,7 +45,7 @@ export async function keepDocuments(
       await tx.update(documents).set(added).where(eq(documents.id, row.id));
     }
   }
-  return (await listDocuments(tx, revision.id)).map(recordOf);
+  return (await listDocuments(tx, reader, revision.id)).map(recordOf);
 }
 
 /** A document row as the engine sees it: enclosed where its file is attached. */

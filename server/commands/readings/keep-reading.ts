@@ -6,6 +6,7 @@ import type { MixRecord } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import { dateOfInstant } from '#shared/format/dates';
 import type { Database } from '../../db/client';
+import { type Reader, revisionsOf } from '../../db/queries/reader';
 import { listTypedAttributes } from '../../db/queries/records';
 import type { RevisionRow } from '../../db/queries/revisions';
 import type { SectionSnapshot } from '../../db/queries/section-snapshot';
@@ -18,6 +19,7 @@ import { composeRecord } from './compose-record';
 import { keepDocuments } from './keep-documents';
 
 export interface KeptReading {
+  reader: Reader;
   row: Pick<RevisionRow, 'revision' | 'submittal' | 'project' | 'agency'>;
   /** As it stands now, and its resolved edition. */
   section: SectionSnapshot;
@@ -32,13 +34,13 @@ export interface KeptReading {
 export async function keepReading(
   tx: Database,
   deps: Pick<Deps, 'now' | 'newId'>,
-  { row, section, edition, read, mapping, madeById }: KeptReading,
+  { reader, row, section, edition, read, mapping, madeById }: KeptReading,
 ): Promise<CheckResult> {
   const { revision, project, agency } = row;
   const record = composeRecord({
     read,
-    typed: await listTypedAttributes(tx, revision.id),
-    documents: await keepDocuments(tx, deps, { revision, stated: read.record.documents }),
+    typed: await listTypedAttributes(tx, reader, revision.id),
+    documents: await keepDocuments(tx, deps, { reader, revision, stated: read.record.documents }),
     edition,
     facts: project.facts,
   });
@@ -47,13 +49,13 @@ export async function keepReading(
   const context = { submittedOn, lettingOn: project.lettingOn, facts: project.facts };
   const result = evaluate(record, edition, context);
   await storeRecord(tx, deps, { revision, record, read, mapping, recordHash: result.seal.record });
-  await storeCheck(tx, deps, { revision, kind: 'pre-check', context, result, madeById });
+  await storeCheck(tx, deps, { reader, revision, kind: 'pre-check', context, result, madeById });
   await tx
     .update(revisions)
     .set({
       description: mixDescription(record.attributes).slice(0, 300),
       doubtCount: record.doubts.length,
-      changes: await changesSinceBefore(tx, revision, record),
+      changes: await changesSinceBefore(tx, reader, { revision, record }),
       section,
       updatedAt: now,
     })
@@ -116,8 +118,8 @@ async function storeRecord(
 /** In words, against the newest revision before that was submitted; null for the first. */
 async function changesSinceBefore(
   tx: Database,
-  revision: KeptReading['row']['revision'],
-  record: MixRecord,
+  reader: Reader,
+  { revision, record }: Pick<StoreRecord, 'revision' | 'record'>,
 ): Promise<string | null> {
   const earlier = await tx
     .select({ number: revisions.number, record: mixRecords.record })
@@ -128,6 +130,7 @@ async function changesSinceBefore(
         eq(revisions.submittalId, revision.submittalId),
         lt(revisions.number, revision.number),
         ne(revisions.state, 'draft'),
+        revisionsOf(reader),
       ),
     )
     .orderBy(revisions.number);

@@ -4,8 +4,8 @@ import {
   fileHashes,
   findReturn,
   mailsOfReturn,
+  peopleOfReturn,
   peopleWithRole,
-  personById,
   type ReturnRow,
 } from '../../db/queries/returns';
 import { findRevision, type RevisionRow } from '../../db/queries/revisions';
@@ -48,7 +48,8 @@ export async function loadReturn(
   const loaded = await loadRevisionDocuments(deps.db, actor, row);
   const kept = await findReturn(deps.db, actor, row.revision.id);
   if (kept === null && row.revision.state === 'returned') throw new Problem('not-found');
-  const fields = kept === null ? await firstReturnFields(deps.db, row, loaded) : keptReturnFields(kept);
+  const fields =
+    kept === null ? await firstReturnFields(deps.db, actor, { row, loaded }) : keptReturnFields(kept);
   return { row, loaded, abilities, kept, fields };
 }
 
@@ -58,11 +59,10 @@ export async function viewReturn(
   params: { submittalId: string; number: number },
 ): Promise<ReturnView> {
   const { row, loaded, abilities, kept, fields } = await loadReturn(deps, actor, params);
-  const [preparedBy, sentBy, engineers, mails, hashes] = await Promise.all([
-    kept?.preparedById ? personById(deps.db, kept.preparedById) : null,
-    kept?.decidedById ? personById(deps.db, kept.decidedById) : null,
+  const [signers, engineers, mails, hashes] = await Promise.all([
+    kept === null ? null : peopleOfReturn(deps.db, actor, kept.id),
     peopleWithRole(deps.db, row.agency.id, 'signing engineer'),
-    kept === null ? [] : mailsOfReturn(deps.db, kept.id),
+    kept === null ? [] : mailsOfReturn(deps.db, actor, kept.id),
     kept === null ? null : fileHashes(deps.db, kept),
   ]);
   return presentReturn({
@@ -73,9 +73,9 @@ export async function viewReturn(
     waived: loaded.waived,
     recommended: recommended(loaded),
     internalNotes: loaded.internalNotes,
-    preparedBy: preparedBy === null ? null : { id: preparedBy.id, name: preparedBy.name },
+    preparedBy: signers?.preparedBy ?? null,
     signingEngineers: engineers.map(({ id, name }) => ({ id, name })),
-    sentBy: sentBy?.name ?? null,
+    sentBy: signers?.decidedBy?.name ?? null,
     mails,
     fileHashes: hashes,
     abilities: {

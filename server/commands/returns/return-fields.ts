@@ -2,7 +2,9 @@ import { recommendDisposition } from '#rules/engine/disposition';
 import type { Disposition } from '#rules/engine/finding';
 import type { ReturnFields } from '#shared/contracts/returns';
 import type { Database } from '../../db/client';
-import { contactsOf, personById, type ReturnRow } from '../../db/queries/returns';
+import { contactsOfProject } from '../../db/queries/projects';
+import type { Reader } from '../../db/queries/reader';
+import { type ReturnRow, submitterOf } from '../../db/queries/returns';
 import type { RevisionRow } from '../../db/queries/revisions';
 import type { LoadedRevision } from '../../documents/load-revision-documents';
 import { includedAtFirst } from '../../presenters/return-items';
@@ -15,13 +17,12 @@ export function recommended({ sources, waived }: LoadedRevision): Disposition {
 /** A draft that nobody has kept yet: the recommendation, to whoever submitted, with all that may go with it. */
 export async function firstReturnFields(
   db: Database,
-  row: RevisionRow,
-  loaded: LoadedRevision,
+  reader: Reader,
+  { row, loaded }: { row: RevisionRow; loaded: LoadedRevision },
 ): Promise<ReturnFields> {
-  const { submittedById } = row.revision;
   const [submitter, contacts] = await Promise.all([
-    submittedById === null ? null : personById(db, submittedById),
-    contactsOf(db, row.agency.id, row.project.id),
+    submitterOf(db, reader, row.revision.id),
+    contactsOfProject(db, reader, row.project.id),
   ]);
   return {
     disposition: recommended(loaded),

@@ -43,7 +43,7 @@ interface SendReturn {
 export async function sendReturn(deps: Deps, act: SendReturn): Promise<void> {
   const { actor, row, loaded, fields } = act;
   refuseUnfinished(fields, recommended(loaded));
-  const stampsBefore = await stampsOfReturned(deps.db, row.revision.id);
+  const stampsBefore = await stampsOfReturned(deps.db, actor.organisationId, row.revision.id);
   const input = previewInput(deps, act, { name: actor.person.name, function: 'signing engineer' });
   const letter = await renderPdf(letterDefinition(input));
   const workbook = fields.findingsWorkbook ? await renderFindingsWorkbook(input) : null;
@@ -94,7 +94,7 @@ async function lockUnchanged(
   { actor, row, seenVersion }: SendReturn,
   stampsBefore: string,
 ): Promise<void> {
-  const revision = await lockRevision(deps.db, row.revision.id);
+  const revision = await lockRevision(deps.db, actor, row.revision.id);
   if (revision === null || revision.state !== 'in review') {
     throw new Problem('wrong-state', { detail: 'The revision is no longer in review.' });
   }
@@ -102,7 +102,8 @@ async function lockUnchanged(
   const kept = await lockReturn(deps.db, actor.organisationId, row.revision.id);
   if (kept?.state === 'sent') throw new Problem('wrong-state', { detail: 'The return has been sent.' });
   expectVersion(seenVersion, kept ?? { version: 0 });
-  if ((await stampsOfReturned(deps.db, row.revision.id, { lock: true })) !== stampsBefore) {
+  const stamps = await stampsOfReturned(deps.db, actor.organisationId, row.revision.id, { lock: true });
+  if (stamps !== stampsBefore) {
     throw new Problem('version-stale', {
       detail: 'A note or a waiver has changed since you saw the letter.',
     });

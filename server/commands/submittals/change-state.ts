@@ -62,7 +62,7 @@ async function changing(
   change: (tx: Database, present: Present, now: Date) => Promise<Change>,
 ): Promise<void> {
   await deps.db.transaction(async (tx) => {
-    const present = await lockRevision(tx, row.revision.id);
+    const present = await lockRevision(tx, actor, row.revision.id);
     if (present === null) throw new Problem('not-found');
     const now = deps.now();
     const changed = await change(tx, present, now);

@@ -25,7 +25,7 @@ export async function replaceWorkbook(deps: Deps, replacement: Replacement): Pro
   const { actor, row, version, workbook } = replacement;
   const { revision } = row;
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revision.id);
+    const locked = await lockRevision(tx, actor, revision.id);
     if (locked?.state !== 'draft')
       throw new Problem('wrong-state', { detail: 'Only a draft takes another workbook.' });
     const now = deps.now();
@@ -44,9 +44,12 @@ export async function replaceWorkbook(deps: Deps, replacement: Replacement): Pro
       replacedById: actor.personId,
       replacedAt: now,
     });
-    const job = await newestJobOf(tx, { subjectKind: 'revision', subjectId: revision.id });
+    const job = await newestJobOf(tx, actor.organisationId, {
+      subjectKind: 'revision',
+      subjectId: revision.id,
+    });
     if (job !== null) await cancelJob(tx, { id: job.id, organisationId: actor.organisationId, now });
-    await removePreChecks(tx, revision.id);
+    await removePreChecks(tx, actor, revision.id);
     await tx.delete(mixRecords).where(eq(mixRecords.revisionId, revision.id));
     await tx.delete(readings).where(eq(readings.revisionId, revision.id));
     expectWritten(

@@ -54,7 +54,7 @@ export async function startRevision(deps: Deps, next: NextRevision): Promise<num
       state: 'draft',
       reasonForRevision: reason === '' ? null : reason,
       laboratoryId,
-      section: await sectionNow(tx, submittal),
+      section: await sectionNow(tx, actor, submittal),
       workbookFileId: fileId,
       uploadedById: actor.personId,
       uploadedAt: now,
@@ -119,8 +119,12 @@ function refusal(mixDesignation: string, { number, state, disposition }: Latest)
   });
 }
 
-async function sectionNow(tx: Database, { projectId, sectionId }: { projectId: string; sectionId: string }) {
-  const section = await snapshotOfSection(tx, { projectId, sectionId });
+async function sectionNow(
+  tx: Database,
+  actor: Actor,
+  { projectId, sectionId }: { projectId: string; sectionId: string },
+) {
+  const section = await snapshotOfSection(tx, actor, { projectId, sectionId });
   if (section !== null) return section;
   const [project] = await tx
     .select({ number: projects.number })

@@ -36,12 +36,13 @@ export async function submitRevision(deps: Deps, submission: Submission): Promis
   const { actor, row, version } = submission;
   const { revision, agency } = row;
   await deps.db.transaction(async (tx) => {
-    const locked = await lockRevision(tx, revision.id);
+    const locked = await lockRevision(tx, actor, revision.id);
     if (locked?.state !== 'draft') {
       throw new Problem('wrong-state', { detail: `Revision ${revision.number} is submitted already.` });
     }
     const { result, context, section } = await checkOfRecord(tx, deps, submission);
     await storeCheck(tx, deps, {
+      reader: actor,
       revision,
       kind: 'check of record',
       context,
@@ -85,10 +86,13 @@ export async function submitRevision(deps: Deps, submission: Submission): Promis
 }
 
 /** The check is made again from what is stored; what the contractor declared must be what it says. */
-async function checkOfRecord(tx: Database, deps: Deps, { row, declaration, seal }: Submission) {
+async function checkOfRecord(tx: Database, deps: Deps, { actor, row, declaration, seal }: Submission) {
   const { revision, submittal, project, agency } = row;
-  const kept = await findMixRecord(tx, revision.id);
-  const section = await snapshotOfSection(tx, { projectId: project.id, sectionId: submittal.sectionId });
+  const kept = await findMixRecord(tx, actor, revision.id);
+  const section = await snapshotOfSection(tx, actor, {
+    projectId: project.id,
+    sectionId: submittal.sectionId,
+  });
   if (kept === null || section === null) {
     throw new Problem('wrong-state', {
       detail: 'The workbook has not been read and checked.',

@@ -33,7 +33,7 @@ export async function uploadSubmittal(
   const revisionId = deps.newId();
   await deps.db.transaction(async (tx) => {
     const project = await expectProject(tx, actor, projectId);
-    const section = await snapshotOfSection(tx, { projectId, sectionId });
+    const section = await snapshotOfSection(tx, actor, { projectId, sectionId });
     if (section === null) throw unusable('/sectionId', 'This project has no confirmed section of that kind.');
     await expectLaboratory(tx, actor, laboratoryId);
     const now = deps.now();

@@ -1,13 +1,15 @@
-import { and, asc, desc, eq, gte, lte } from 'drizzle-orm';
+import { and, asc, desc, eq, getTableColumns, gte, lte } from 'drizzle-orm';
 import type { Cell, CellGrid, SheetGrid } from '#rules/reading/cell-grid';
 import type { Database } from '../client';
-import { cellBlocks, cellGrids } from '../schema/files';
+import { cellBlocks, cellGrids, files } from '../schema/files';
+import { ofTenant, type Reader } from './reader';
 
 /** Rows in one block: a window of a sheet reads one or two blocks, and a block stays well below a packet. */
 const rowsPerBlock = 200;
 const cellsPerBlock = 20_000;
 
 interface StoreGrid {
+  reader: Reader;
   fileId: string;
   grid: CellGrid;
   now: Date;
@@ -15,11 +17,13 @@ interface StoreGrid {
 }
 
 /** Keeps a decoded workbook by sheet and row block; a workbook that is kept already stays as it is. */
-export async function storeGrid(db: Database, { fileId, grid, now, newId }: StoreGrid): Promise<void> {
+export async function storeGrid(db: Database, stored: StoreGrid): Promise<void> {
+  const { reader, fileId, grid, now, newId } = stored;
   const [kept] = await db
     .select({ id: cellGrids.id })
     .from(cellGrids)
-    .where(and(eq(cellGrids.fileId, fileId), eq(cellGrids.decoder, grid.decoder)));
+    .innerJoin(files, eq(files.id, cellGrids.fileId))
+    .where(and(eq(cellGrids.fileId, fileId), eq(cellGrids.decoder, grid.decoder), ofTenant(files, reader)));
   if (kept !== undefined) return;
   const gridId = newId();
   await db.insert(cellGrids).values({
@@ -39,13 +43,15 @@ export async function storeGrid(db: Database, { fileId, grid, now, newId }: Stor
 }
 
 /** The whole grid of a workbook by the newest decoder that read it, or null. */
-export async function loadGrid(db: Database, fileId: string): Promise<CellGrid | null> {
-  const head = await gridOf(db, fileId);
+export async function loadGrid(db: Database, reader: Reader, fileId: string): Promise<CellGrid | null> {
+  const head = await gridOf(db, reader, fileId);
   if (head === null) return null;
   const blocks = await db
     .select({ sheet: cellBlocks.sheet, cells: cellBlocks.cells })
     .from(cellBlocks)
-    .where(eq(cellBlocks.gridId, head.id))
+    .innerJoin(cellGrids, eq(cellGrids.id, cellBlocks.gridId))
+    .innerJoin(files, eq(files.id, cellGrids.fileId))
+    .where(and(eq(cellBlocks.gridId, head.id), ofTenant(files, reader)))
     .orderBy(asc(cellBlocks.sheet), asc(cellBlocks.fromRow));
   const cells = head.sheets.map((): Cell[] => []);
   for (const block of blocks) for (const cell of block.cells) cells[block.sheet]?.push(cell);
@@ -60,18 +66,22 @@ export async function loadGrid(db: Database, fileId: string): Promise<CellGrid |
 /** Rows of one sheet, both ends included; null where the workbook has no such sheet. */
 export async function loadSheet(
   db: Database,
+  reader: Reader,
   { fileId, name, from, to }: { fileId: string; name: string; from: number; to: number },
 ): Promise<SheetGrid | null> {
-  const head = await gridOf(db, fileId);
+  const head = await gridOf(db, reader, fileId);
   const index = head?.sheets.findIndex((sheet) => sheet.name === name) ?? -1;
   const sheet = head?.sheets[index];
   if (head === null || sheet === undefined) return null;
   const blocks = await db
     .select({ cells: cellBlocks.cells })
     .from(cellBlocks)
+    .innerJoin(cellGrids, eq(cellGrids.id, cellBlocks.gridId))
+    .innerJoin(files, eq(files.id, cellGrids.fileId))
     .where(
       and(
         eq(cellBlocks.gridId, head.id),
+        ofTenant(files, reader),
         eq(cellBlocks.sheet, index),
         lte(cellBlocks.fromRow, to),
         gte(cellBlocks.toRow, from),
@@ -82,11 +92,12 @@ export async function loadSheet(
   return { ...sheet, cells };
 }
 
-export async function gridOf(db: Database, fileId: string) {
+export async function gridOf(db: Database, reader: Reader, fileId: string) {
   const [head] = await db
-    .select()
+    .select(getTableColumns(cellGrids))
     .from(cellGrids)
-    .where(eq(cellGrids.fileId, fileId))
+    .innerJoin(files, eq(files.id, cellGrids.fileId))
+    .where(and(eq(cellGrids.fileId, fileId), ofTenant(files, reader)))
     .orderBy(desc(cellGrids.createdAt), desc(cellGrids.id))
     .limit(1);
   return head ?? null;

@@ -1,22 +1,27 @@
 import { and, desc, eq, max } from 'drizzle-orm';
 import type { Database } from '../client';
 import { checks } from '../schema/checks';
+import { ofTenant, type Reader } from './reader';
 
 export type CheckRow = typeof checks.$inferSelect;
 
 /** The check that is shown of a revision, with its evidence document; null before the workbook is read. */
-export async function newestCheckOf(db: Database, revisionId: string): Promise<CheckRow | null> {
+export async function newestCheckOf(
+  db: Database,
+  reader: Reader,
+  revisionId: string,
+): Promise<CheckRow | null> {
   const [row] = await db
     .select()
     .from(checks)
-    .where(eq(checks.revisionId, revisionId))
+    .where(ofRevision(reader, revisionId))
     .orderBy(desc(checks.number))
     .limit(1);
   return row ?? null;
 }
 
 /** The same without the evidence, for pages that only count. */
-export async function newestCheckHead(db: Database, revisionId: string) {
+export async function newestCheckHead(db: Database, reader: Reader, revisionId: string) {
   const [row] = await db
     .select({
       id: checks.id,
@@ -28,21 +33,25 @@ export async function newestCheckHead(db: Database, revisionId: string) {
       summary: checks.summary,
     })
     .from(checks)
-    .where(eq(checks.revisionId, revisionId))
+    .where(ofRevision(reader, revisionId))
     .orderBy(desc(checks.number))
     .limit(1);
   return row ?? null;
 }
 
-export async function nextCheckNumber(db: Database, revisionId: string): Promise<number> {
+export async function nextCheckNumber(db: Database, reader: Reader, revisionId: string): Promise<number> {
   const [row] = await db
     .select({ number: max(checks.number) })
     .from(checks)
-    .where(eq(checks.revisionId, revisionId));
+    .where(ofRevision(reader, revisionId));
   return (row?.number ?? 0) + 1;
 }
 
 /** A draft keeps one pre-check; its findings go with it. */
-export async function removePreChecks(db: Database, revisionId: string): Promise<void> {
-  await db.delete(checks).where(and(eq(checks.revisionId, revisionId), eq(checks.kind, 'pre-check')));
+export async function removePreChecks(db: Database, reader: Reader, revisionId: string): Promise<void> {
+  await db.delete(checks).where(and(ofRevision(reader, revisionId), eq(checks.kind, 'pre-check')));
+}
+
+function ofRevision(reader: Reader, revisionId: string) {
+  return and(eq(checks.revisionId, revisionId), ofTenant(checks, reader));
 }

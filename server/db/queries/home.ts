@@ -35,7 +35,11 @@ export function notesFromAgencies(db: Database, contractorId: string) {
 }
 
 /** Clause by finding key for the findings of some revisions. */
-export async function clausesOf(db: Database, revisionIds: string[]): Promise<Map<string, string | null>> {
+export async function clausesOf(
+  db: Database,
+  contractorId: string,
+  revisionIds: string[],
+): Promise<Map<string, string | null>> {
   if (revisionIds.length === 0) return new Map();
   const rows = await db
     .select({
@@ -45,7 +49,7 @@ export async function clausesOf(db: Database, revisionIds: string[]): Promise<Ma
       clause: findings.clause,
     })
     .from(findings)
-    .where(inArray(findings.revisionId, revisionIds));
+    .where(and(inArray(findings.revisionId, revisionIds), eq(findings.contractorId, contractorId)));
   return new Map(rows.map((row) => [`${row.revisionId} ${row.rule}~${row.subject}`, row.clause]));
 }
 

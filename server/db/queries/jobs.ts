@@ -4,15 +4,22 @@ import { jobs } from '../schema/work';
 
 export type JobRow = typeof jobs.$inferSelect;
 
-/** The newest job about an object, whatever its state. */
+/** The newest job of the organisation about an object, whatever its state. */
 export async function newestJobOf(
   db: Database,
+  organisationId: string,
   { subjectKind, subjectId }: { subjectKind: string; subjectId: string },
 ): Promise<JobRow | null> {
   const [row] = await db
     .select()
     .from(jobs)
-    .where(and(eq(jobs.subjectKind, subjectKind), eq(jobs.subjectId, subjectId)))
+    .where(
+      and(
+        eq(jobs.organisationId, organisationId),
+        eq(jobs.subjectKind, subjectKind),
+        eq(jobs.subjectId, subjectId),
+      ),
+    )
     .orderBy(desc(jobs.createdAt), desc(jobs.id))
     .limit(1);
   return row ?? null;
@@ -21,6 +28,7 @@ export async function newestJobOf(
 /** Newest job of each of several objects. */
 export async function newestJobsOf(
   db: Database,
+  organisationId: string,
   subjectKind: string,
   subjectIds: string[],
 ): Promise<Map<string, JobRow>> {
@@ -28,7 +36,13 @@ export async function newestJobsOf(
   const rows = await db
     .select()
     .from(jobs)
-    .where(and(eq(jobs.subjectKind, subjectKind), inArray(jobs.subjectId, subjectIds)))
+    .where(
+      and(
+        eq(jobs.organisationId, organisationId),
+        eq(jobs.subjectKind, subjectKind),
+        inArray(jobs.subjectId, subjectIds),
+      ),
+    )
     .orderBy(jobs.createdAt, jobs.id);
   return new Map(rows.map((row) => [row.subjectId, row]));
 }

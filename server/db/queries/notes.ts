@@ -3,7 +3,7 @@ import type { Database } from '../client';
 import { notes, waivers } from '../schema/checks';
 import { people } from '../schema/people';
 import { revisions } from '../schema/submittals';
-import type { Reader } from './reader';
+import { ofTenant, type Reader } from './reader';
 
 export type NoteRow = Awaited<ReturnType<typeof listNotes>>[number];
 export type WaiverRow = Awaited<ReturnType<typeof listWaivers>>[number];
@@ -60,10 +60,4 @@ export async function findWaiver(db: Database, agencyId: string, waiverId: strin
     .innerJoin(revisions, eq(revisions.id, waivers.revisionId))
     .where(and(eq(waivers.id, waiverId), eq(waivers.agencyId, agencyId)));
   return row ?? null;
-}
-
-function ofTenant(table: typeof notes | typeof waivers, reader: Reader) {
-  return reader.kind === 'agency'
-    ? eq(table.agencyId, reader.organisationId)
-    : eq(table.contractorId, reader.organisationId);
 }

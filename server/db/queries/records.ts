@@ -1,24 +1,29 @@
-import { asc, eq } from 'drizzle-orm';
+import { and, asc, eq } from 'drizzle-orm';
 import type { Database } from '../client';
 import { files } from '../schema/files';
 import { people } from '../schema/people';
-import { answers, documents, mixRecords, typedAttributes } from '../schema/submittals';
+import { answers, documents, mixRecords, revisions, typedAttributes } from '../schema/submittals';
+import { ofTenant, type Reader, revisionsOf } from './reader';
 
 /** The canonical record of a revision, and how it was read; null before the workbook is read. */
-export async function findMixRecord(db: Database, revisionId: string) {
-  const [row] = await db.select().from(mixRecords).where(eq(mixRecords.revisionId, revisionId));
+export async function findMixRecord(db: Database, reader: Reader, revisionId: string) {
+  const [row] = await db
+    .select()
+    .from(mixRecords)
+    .where(and(eq(mixRecords.revisionId, revisionId), ofTenant(mixRecords, reader)));
   return row ?? null;
 }
 
-export function listAnswers(db: Database, revisionId: string) {
+export function listAnswers(db: Database, reader: Reader, revisionId: string) {
   return db
     .select({ sheet: answers.sheet, cell: answers.cell, text: answers.text, answer: answers.answer })
     .from(answers)
-    .where(eq(answers.revisionId, revisionId))
+    .innerJoin(revisions, eq(revisions.id, answers.revisionId))
+    .where(and(eq(answers.revisionId, revisionId), revisionsOf(reader)))
     .orderBy(asc(answers.sheet), asc(answers.cell));
 }
 
-export function listTypedAttributes(db: Database, revisionId: string) {
+export function listTypedAttributes(db: Database, reader: Reader, revisionId: string) {
   return db
     .select({
       name: typedAttributes.name,
@@ -27,14 +32,15 @@ export function listTypedAttributes(db: Database, revisionId: string) {
       on: typedAttributes.typedOn,
     })
     .from(typedAttributes)
+    .innerJoin(revisions, eq(revisions.id, typedAttributes.revisionId))
     .innerJoin(people, eq(people.id, typedAttributes.personId))
-    .where(eq(typedAttributes.revisionId, revisionId))
+    .where(and(eq(typedAttributes.revisionId, revisionId), revisionsOf(reader)))
     .orderBy(asc(typedAttributes.name));
 }
 
 export type DocumentRow = Awaited<ReturnType<typeof listDocuments>>[number];
 
-export function listDocuments(db: Database, revisionId: string) {
+export function listDocuments(db: Database, reader: Reader, revisionId: string) {
   return db
     .select({
       document: documents,
@@ -47,15 +53,15 @@ export function listDocuments(db: Database, revisionId: string) {
     })
     .from(documents)
     .leftJoin(files, eq(files.id, documents.fileId))
-    .where(eq(documents.revisionId, revisionId))
+    .where(and(eq(documents.revisionId, revisionId), ofTenant(documents, reader)))
     .orderBy(asc(documents.position), asc(documents.id));
 }
 
-/** Bytes of a stored file with its name; the caller has checked whose it is. */
-export async function loadFile(db: Database, fileId: string) {
+/** Bytes of a stored file with its name. */
+export async function loadFile(db: Database, reader: Reader, fileId: string) {
   const [row] = await db
     .select({ bytes: files.bytes, mediaType: files.mediaType, fileName: files.fileName })
     .from(files)
-    .where(eq(files.id, fileId));
+    .where(and(eq(files.id, fileId), ofTenant(files, reader)));
   return row ?? null;
 }

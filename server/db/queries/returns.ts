@@ -1,15 +1,15 @@
 import { and, asc, desc, eq, inArray, lt } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/mysql-core';
 import type { Database } from '../client';
 import { rolesFromColumn } from '../roles-column';
 import { notes, waivers } from '../schema/checks';
 import { files } from '../schema/files';
 import { members, organisations, people } from '../schema/people';
-import { contacts, projects } from '../schema/projects';
 import { returns } from '../schema/returns';
 import { editions } from '../schema/rule-sets';
 import { revisions } from '../schema/submittals';
 import { outbox } from '../schema/work';
-import type { Reader } from './reader';
+import { ofTenant, type Reader, returnsOf, revisionsOf } from './reader';
 
 export type ReturnRow = typeof returns.$inferSelect;
 
@@ -19,14 +19,10 @@ export async function findReturn(
   reader: Reader,
   revisionId: string,
 ): Promise<ReturnRow | null> {
-  const own =
-    reader.kind === 'agency'
-      ? eq(returns.agencyId, reader.organisationId)
-      : and(eq(returns.contractorId, reader.organisationId), eq(returns.state, 'sent'));
   const [row] = await db
     .select()
     .from(returns)
-    .where(and(eq(returns.revisionId, revisionId), own));
+    .where(and(eq(returns.revisionId, revisionId), returnsOf(reader)));
   return row ?? null;
 }
 
@@ -52,21 +48,16 @@ export async function letterheadOf(db: Database, agencyId: string) {
   return row?.letterhead ?? null;
 }
 
-export function contactsOf(db: Database, agencyId: string, projectId: string) {
-  return db
-    .select({ name: contacts.name, function: contacts.function, email: contacts.email })
-    .from(contacts)
-    .innerJoin(projects, eq(projects.id, contacts.projectId))
-    .where(and(eq(contacts.projectId, projectId), eq(projects.agencyId, agencyId)))
-    .orderBy(asc(contacts.position));
-}
-
 /** The revision before this one that was submitted, for what moved. */
-export async function revisionBefore(db: Database, submittalId: string, number: number) {
+export async function revisionBefore(
+  db: Database,
+  reader: Reader,
+  { submittalId, number }: { submittalId: string; number: number },
+) {
   const [row] = await db
     .select({ id: revisions.id, number: revisions.number })
     .from(revisions)
-    .where(and(eq(revisions.submittalId, submittalId), lt(revisions.number, number)))
+    .where(and(eq(revisions.submittalId, submittalId), lt(revisions.number, number), revisionsOf(reader)))
     .orderBy(desc(revisions.number))
     .limit(1);
   return row ?? null;
@@ -83,15 +74,34 @@ export async function peopleWithRole(db: Database, organisationId: string, role:
   return rows.filter((row) => rolesFromColumn(row.role).some((one) => one === role));
 }
 
-export async function personById(db: Database, personId: string) {
+/** Who submitted a revision, whether or not they still belong to the contractor. */
+export async function submitterOf(db: Database, reader: Reader, revisionId: string) {
   const [row] = await db
-    .select({ id: people.id, name: people.name, email: people.email })
-    .from(people)
-    .where(eq(people.id, personId));
+    .select({ name: people.name, email: people.email })
+    .from(revisions)
+    .innerJoin(people, eq(people.id, revisions.submittedById))
+    .where(and(eq(revisions.id, revisionId), revisionsOf(reader)));
   return row ?? null;
 }
 
-export function mailsOfReturn(db: Database, returnId: string) {
+const preparer = alias(people, 'preparer');
+const decider = alias(people, 'decider');
+
+/** Who prepared and who signed a return; each null while nobody has. */
+export async function peopleOfReturn(db: Database, reader: Reader, returnId: string) {
+  const [row] = await db
+    .select({
+      preparedBy: { id: preparer.id, name: preparer.name },
+      decidedBy: { id: decider.id, name: decider.name },
+    })
+    .from(returns)
+    .leftJoin(preparer, eq(preparer.id, returns.preparedById))
+    .leftJoin(decider, eq(decider.id, returns.decidedById))
+    .where(and(eq(returns.id, returnId), returnsOf(reader)));
+  return row ?? { preparedBy: null, decidedBy: null };
+}
+
+export function mailsOfReturn(db: Database, reader: Reader, returnId: string) {
   return db
     .select({
       recipients: outbox.recipients,
@@ -103,7 +113,8 @@ export function mailsOfReturn(db: Database, returnId: string) {
       text: outbox.text,
     })
     .from(outbox)
-    .where(and(eq(outbox.subjectKind, 'return'), eq(outbox.subjectId, returnId)))
+    .innerJoin(returns, eq(returns.id, outbox.subjectId))
+    .where(and(eq(outbox.subjectKind, 'return'), eq(outbox.subjectId, returnId), returnsOf(reader)))
     .orderBy(asc(outbox.createdAt));
 }
 
@@ -129,14 +140,10 @@ export async function fileHashes(
 
 /** A stored file of the agency's or contractor's own. */
 export async function storedFile(db: Database, reader: Reader, fileId: string) {
-  const own =
-    reader.kind === 'agency'
-      ? eq(files.agencyId, reader.organisationId)
-      : eq(files.contractorId, reader.organisationId);
   const [row] = await db
     .select()
     .from(files)
-    .where(and(eq(files.id, fileId), own));
+    .where(and(eq(files.id, fileId), ofTenant(files, reader)));
   return row ?? null;
 }
 
@@ -164,18 +171,21 @@ export async function isStartingPoint(
  */
 export async function stampsOfReturned(
   db: Database,
+  agencyId: string,
   revisionId: string,
   { lock = false } = {},
 ): Promise<string> {
   const noteStamps = db
     .select({ id: notes.id, version: notes.version })
     .from(notes)
-    .where(and(eq(notes.revisionId, revisionId), eq(notes.kind, 'to be returned')))
+    .where(
+      and(eq(notes.revisionId, revisionId), eq(notes.agencyId, agencyId), eq(notes.kind, 'to be returned')),
+    )
     .orderBy(asc(notes.id));
   const waiverStamps = db
     .select({ id: waivers.id, version: waivers.version })
     .from(waivers)
-    .where(eq(waivers.revisionId, revisionId))
+    .where(and(eq(waivers.revisionId, revisionId), eq(waivers.agencyId, agencyId)))
     .orderBy(asc(waivers.id));
   const rows = lock
     ? [...(await noteStamps.for('update')), ...(await waiverStamps.for('update'))]

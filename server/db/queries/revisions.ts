@@ -7,7 +7,7 @@ import { laboratories, organisations, people } from '../schema/people';
 import { projects, sections } from '../schema/projects';
 import { returns } from '../schema/returns';
 import { mixRecords, revisions, submittals } from '../schema/submittals';
-import { type Reader, revisionsOf, submittalsOf } from './reader';
+import { type Reader, returnsOf, revisionsOf, submittalsOf } from './reader';
 
 const contractor = alias(organisations, 'contractor');
 const agency = alias(organisations, 'agency');
@@ -104,8 +104,12 @@ export function listRevisions(db: Database, reader: Reader, submittalId: string)
 }
 
 /** Locks a revision for a command that changes it. */
-export async function lockRevision(db: Database, revisionId: string) {
-  const [row] = await db.select().from(revisions).where(eq(revisions.id, revisionId)).for('update');
+export async function lockRevision(db: Database, reader: Reader, revisionId: string) {
+  const [row] = await db
+    .select()
+    .from(revisions)
+    .where(and(eq(revisions.id, revisionId), revisionsOf(reader)))
+    .for('update');
   return row ?? null;
 }
 
@@ -120,12 +124,16 @@ export async function lockSubmittal(db: Database, reader: Reader, submittalId: s
 }
 
 /** Who signed the return of a revision; null before it is sent. */
-export async function nameOfDecider(db: Database, revisionId: string): Promise<string | null> {
+export async function nameOfDecider(
+  db: Database,
+  reader: Reader,
+  revisionId: string,
+): Promise<string | null> {
   const [row] = await db
     .select({ name: people.name })
     .from(returns)
     .innerJoin(people, eq(people.id, returns.decidedById))
-    .where(and(eq(returns.revisionId, revisionId), eq(returns.state, 'sent')));
+    .where(and(eq(returns.revisionId, revisionId), eq(returns.state, 'sent'), returnsOf(reader)));
   return row?.name ?? null;
 }
 

@@ -1,9 +1,10 @@
 import { and, asc, eq } from 'drizzle-orm';
 import type { z } from 'zod';
 import type { Database } from '../client';
-import { sectionLayers, sections } from '../schema/projects';
+import { projects, sectionLayers, sections } from '../schema/projects';
 import { editions } from '../schema/rule-sets';
 import type { sectionSnapshotSchema } from '../schema/submittals';
+import { projectsOf, type Reader } from './reader';
 
 export type SectionSnapshot = z.infer<typeof sectionSnapshotSchema>;
 
@@ -12,6 +13,7 @@ const named = { ruleSet: editions.ruleSetKey, edition: editions.edition, title: 
 /** A section of a project as it stands now; null where the project has none of that id, or it is not confirmed. */
 export async function snapshotOfSection(
   db: Database,
+  reader: Reader,
   { projectId, sectionId }: { projectId: string; sectionId: string },
 ): Promise<SectionSnapshot | null> {
   const [section] = await db
@@ -21,14 +23,17 @@ export async function snapshotOfSection(
       confirmedAt: sections.confirmedAt,
     })
     .from(sections)
+    .innerJoin(projects, eq(projects.id, sections.projectId))
     .innerJoin(editions, eq(editions.id, sections.baseEditionId))
-    .where(and(eq(sections.id, sectionId), eq(sections.projectId, projectId)));
+    .where(and(eq(sections.id, sectionId), eq(sections.projectId, projectId), projectsOf(reader)));
   if (section === undefined || section.confirmedAt === null) return null;
   const layers = await db
     .select(named)
     .from(sectionLayers)
+    .innerJoin(sections, eq(sections.id, sectionLayers.sectionId))
+    .innerJoin(projects, eq(projects.id, sections.projectId))
     .innerJoin(editions, eq(editions.id, sectionLayers.editionId))
-    .where(eq(sectionLayers.sectionId, sectionId))
+    .where(and(eq(sectionLayers.sectionId, sectionId), projectsOf(reader)))
     .orderBy(asc(sectionLayers.position));
   return { sectionId, base: section.base, layers, resolvedHash: section.resolvedHash };
 }

@@ -24,7 +24,7 @@ export const checkAgainRoute = route(checkAgain, async ({ deps, params, actor, r
 
 export const proveSealRoute = route(proveSeal, async ({ deps, params, actor }) => {
   const { revision } = await expectRevision(deps, actor, params);
-  const proof = await prove(deps.db, revision.id);
+  const proof = await prove(deps.db, actor, revision.id);
   if (proof !== null) return proof;
   throw new Problem('wrong-state', { detail: `Revision ${revision.number} has no check yet.` });
 });

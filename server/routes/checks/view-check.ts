@@ -20,15 +20,15 @@ import { viewRevision } from '../submittals/load-revision';
 
 /** The newest check of a revision with what the reader may see beside it. */
 export async function viewCheck(deps: Deps, actor: RequestActor, row: RevisionRow): Promise<CheckView> {
-  const check = await newestCheckOf(deps.db, row.revision.id);
-  const kept = await findMixRecord(deps.db, row.revision.id);
+  const check = await newestCheckOf(deps.db, actor, row.revision.id);
+  const kept = await findMixRecord(deps.db, actor, row.revision.id);
   if (check === null || kept === null) throw unchecked(row);
   const { abilities } = await viewRevision(deps, actor, row);
   const [edition, notes, waivers, before, startingPoint] = await Promise.all([
     loadResolvedEdition(deps.db, check.resolvedHash),
     visibleNotes(deps.db, actor, { row, abilities }),
     visibleWaivers(deps.db, actor, { row, abilities }),
-    previousCheck(deps, row),
+    previousCheck(deps, actor, row),
     isStartingPoint(deps.db, row.agency.id, row.revision.section.base),
   ]);
   const { findings, seal } = check.result;
@@ -66,9 +66,13 @@ function concerns(note: { revision: number; kind: string }, number: number): boo
   return note.revision === number || (note.revision === number - 1 && note.kind !== 'internal');
 }
 
-async function previousCheck(deps: Deps, { revision }: RevisionRow): Promise<CheckRow | null> {
-  const before = await revisionBefore(deps.db, revision.submittalId, revision.number);
-  return before === null ? null : newestCheckOf(deps.db, before.id);
+async function previousCheck(
+  deps: Deps,
+  actor: RequestActor,
+  { revision }: RevisionRow,
+): Promise<CheckRow | null> {
+  const before = await revisionBefore(deps.db, actor, revision);
+  return before === null ? null : newestCheckOf(deps.db, actor, before.id);
 }
 
 function staleness(

@@ -47,10 +47,10 @@ export const removeDocumentRoute = route(removeDocument, async ({ deps, params, 
 
 export const getDocumentFileRoute = route(getDocumentFile, async ({ deps, params, actor }) => {
   const row = await expectRevision(deps, actor, params);
-  const found = (await listDocuments(deps.db, row.revision.id)).find(
+  const found = (await listDocuments(deps.db, actor, row.revision.id)).find(
     ({ document }) => document.id === params.documentId,
   );
-  const file = found?.file == null ? null : await loadFile(deps.db, found.file.id);
+  const file = found?.file == null ? null : await loadFile(deps.db, actor, found.file.id);
   if (file === null) throw new Problem('not-found');
   return { ...file, inline: true };
 });

@@ -23,11 +23,11 @@ export async function currentRevision(
   const chosen = nearest(submittals);
   if (chosen === undefined) return null;
   const row = await findRevision(deps.db, actor, { submittalId: chosen.id, number: chosen.revision.number });
-  const check = row === null ? null : await newestCheckOf(deps.db, row.revision.id);
+  const check = row === null ? null : await newestCheckOf(deps.db, actor, row.revision.id);
   if (row === null || check === null) return null;
   const view = await viewRevision(deps, actor, row);
-  const before = await revisionBefore(deps.db, chosen.id, view.number);
-  const previous = before === null ? null : await newestCheckOf(deps.db, before.id);
+  const before = await revisionBefore(deps.db, actor, row.revision);
+  const previous = before === null ? null : await newestCheckOf(deps.db, actor, before.id);
   const { findings } = check.result;
   const moved = new Map(
     (previous === null ? [] : movedFindings(previous.result.findings, findings)).map((each) => [

@@ -1,5 +1,7 @@
 import { getHome, type Home } from '#shared/contracts/home';
 import { dateOfInstant } from '#shared/format/dates';
+import { countInFigures, countOf } from '#shared/format/numbers';
+import { sectionWords } from '#shared/format/section-words';
 import { clausesOf, laboratoriesRead, lastLetter, notesFromAgencies } from '../../db/queries/home';
 import { newestJobsOf } from '../../db/queries/jobs';
 import { listSubmittals } from '../../db/queries/list-submittals';
@@ -26,6 +28,7 @@ export const getHomeRoute = route(getHome, async ({ deps, actor }) => {
   const rows = await listSubmittals(deps.db, actor, { rows: shownSubmittals });
   const jobs = await newestJobsOf(
     deps.db,
+    actor.organisationId,
     'revision',
     rows.filter(({ revision }) => revision.state === 'draft').map(({ revision }) => revision.id),
   );
@@ -41,14 +44,16 @@ export const getHomeRoute = route(getHome, async ({ deps, actor }) => {
     lastLetter: await lastLetterOf(deps, actor),
     projects: await presentProjectList(deps.db, actor, projectRows),
     laboratories: await laboratoryNotes(deps, actor),
-    templates: await templates(deps, projectRows),
+    templates: await templates(deps, actor, projectRows),
     abilities: { upload: preparesSubmittals(actor) },
   };
 });
 
 async function fromAgency(deps: Deps, actor: RequestActor): Promise<Home['fromAgency']> {
   const rows = await notesFromAgencies(deps.db, actor.organisationId);
-  const clauses = await clausesOf(deps.db, [...new Set(rows.map(({ revision }) => revision.id))]);
+  const clauses = await clausesOf(deps.db, actor.organisationId, [
+    ...new Set(rows.map(({ revision }) => revision.id)),
+  ]);
   const mayReply = { note: false, reply: hasRole(actor, 'quality manager') };
   return rows.map((row) => ({
     ...presentNote(row, actor, mayReply),
@@ -76,30 +81,26 @@ async function laboratoryNotes(deps: Deps, actor: RequestActor): Promise<Home['l
     note:
       workbooks === 0
         ? 'No workbook of it has been read yet.'
-        : `${workbooks === 1 ? 'One workbook' : `${workbooks} workbooks`} of it read, with ${doubtWords(Number(doubts ?? 0))}.`,
+        : `${countInFigures(workbooks, 'workbook')} of it read, with ${countOf(Number(doubts ?? 0), 'doubt')} left.`,
   }));
-}
-
-function doubtWords(doubts: number): string {
-  if (doubts === 0) return 'no doubt left';
-  return doubts === 1 ? 'one doubt left' : `${doubts} doubts left`;
 }
 
 /** One template an edition with its layers, however many projects are judged under it. */
 async function templates(
   deps: Deps,
+  actor: RequestActor,
   projects: Awaited<ReturnType<typeof listProjectRows>>,
 ): Promise<Home['templates']> {
   const sections = await sectionsOfProjects(
     deps.db,
+    actor,
     projects.map(({ project }) => project.id),
   );
   const offered = new Map<string, Home['templates'][number]>();
   for (const { section, base, layers } of sections) {
     if (section.confirmedAt === null || offered.has(section.resolvedHash)) continue;
-    const over = layers.length === 0 ? '' : `, with ${layers.map(({ title }) => title).join(' and ')}`;
     offered.set(section.resolvedHash, {
-      label: `Template for ${base.title}, edition ${base.edition}${over}`,
+      label: `Template for ${sectionWords({ base, layers })}`,
       href: templateHrefOf({ projectId: section.projectId, sectionId: section.id }),
     });
   }

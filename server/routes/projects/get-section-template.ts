@@ -9,7 +9,7 @@ export const getSectionTemplateRoute = route(
   getSectionTemplate,
   async ({ deps, actor, params: { projectId, sectionId } }) => {
     const { project } = await loadProject(deps, actor, projectId);
-    const sections = await sectionsOfProjects(deps.db, [projectId]);
+    const sections = await sectionsOfProjects(deps.db, actor, [projectId]);
     const found = sections.find(({ section }) => section.id === sectionId);
     if (!found) throw new Problem('not-found');
     const { resolvedHash } = found.section;

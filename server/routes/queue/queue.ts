@@ -46,7 +46,7 @@ export const getQueueItemRoute = route(getQueueItem, async ({ deps, params: { su
   if (found === undefined) throw new Problem('not-found');
   const { row, item } = found;
   const [check, waivers, notes] = await Promise.all([
-    newestCheckOf(deps.db, row.revision.id),
+    newestCheckOf(deps.db, actor, row.revision.id),
     listWaivers(deps.db, actor, row.revision.id),
     internalNotes(deps.db, actor.organisationId, submittalId),
   ]);

@@ -20,9 +20,10 @@ export const getSheetRoute = route(getSheet, async ({ deps, params, query, actor
   const row = await expectRevision(deps, actor, params);
   const from = query.from ?? 1;
   const to = Math.min(query.to ?? from + mostRows - 1, from + mostRows - 1);
-  const sheet = await loadSheet(deps.db, { fileId: row.workbook.id, name: query.sheet, from, to });
-  if (sheet === null) throw noSheet(query.sheet, (await gridOf(deps.db, row.workbook.id))?.sheets ?? []);
-  const kept = await findMixRecord(deps.db, row.revision.id);
+  const sheet = await loadSheet(deps.db, actor, { fileId: row.workbook.id, name: query.sheet, from, to });
+  if (sheet === null)
+    throw noSheet(query.sheet, (await gridOf(deps.db, actor, row.workbook.id))?.sheets ?? []);
+  const kept = await findMixRecord(deps.db, actor, row.revision.id);
   const shown = new Set(sheet.cells.map(({ address }) => address));
   const uses = (kept?.reading.uses ?? []).filter((use) => use.sheet === sheet.name && shown.has(use.cell));
   return { sheet, uses };

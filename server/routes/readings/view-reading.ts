@@ -13,7 +13,7 @@ import { viewRevision } from '../submittals/load-revision';
 /** How the workbook of a revision was read, with what the reader may answer. */
 export async function viewReading(deps: Deps, actor: RequestActor, row: RevisionRow): Promise<ReadingView> {
   const { revision } = row;
-  const kept = await findMixRecord(deps.db, revision.id);
+  const kept = await findMixRecord(deps.db, actor, revision.id);
   if (kept === null) {
     throw new Problem('wrong-state', {
       detail: `The workbook of revision ${revision.number} has not been read.`,
@@ -22,10 +22,10 @@ export async function viewReading(deps: Deps, actor: RequestActor, row: Revision
   }
   const { abilities } = await viewRevision(deps, actor, row);
   const [grid, answers, typed, documents, edition] = await Promise.all([
-    gridOf(deps.db, row.workbook.id),
-    listAnswers(deps.db, revision.id),
-    listTypedAttributes(deps.db, revision.id),
-    listDocuments(deps.db, revision.id),
+    gridOf(deps.db, actor, row.workbook.id),
+    listAnswers(deps.db, actor, revision.id),
+    listTypedAttributes(deps.db, actor, revision.id),
+    listDocuments(deps.db, actor, revision.id),
     loadResolvedEdition(deps.db, revision.section.resolvedHash),
   ]);
   return presentReading({

@@ -8,7 +8,7 @@ import { route } from '../define-route';
 
 export const getReturnMailRoute = route(getReturnMail, async ({ deps, actor, params }) => {
   const found = await loadReturn(deps, actor, params);
-  const [sent] = found.kept?.state === 'sent' ? await mailsOfReturn(deps.db, found.kept.id) : [];
+  const [sent] = found.kept?.state === 'sent' ? await mailsOfReturn(deps.db, actor, found.kept.id) : [];
   if (sent !== undefined) return { subject: sent.subject, text: sent.text };
   const { subject, text } = returnMail(previewInput(deps, found), {
     address: returnAddress(deps.settings, found.row),

@@ -23,7 +23,7 @@ export const listSubmittalsRoute = route(listSubmittals, async ({ deps, query, a
   });
   const page = rows.slice(0, limits.pageRows);
   const drafts = page.filter(({ revision }) => revision.state === 'draft').map(({ revision }) => revision.id);
-  const jobs = await newestJobsOf(deps.db, 'revision', drafts);
+  const jobs = await newestJobsOf(deps.db, actor.organisationId, 'revision', drafts);
   const last = page.at(-1);
   const more = rows.length > page.length && last !== undefined;
   return {

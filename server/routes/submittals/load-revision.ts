@@ -28,12 +28,12 @@ export async function viewRevision(deps: Deps, actor: RequestActor, row: Revisio
   const { revision } = row;
   const [all, check, job, decidedBy] = await Promise.all([
     listRevisions(deps.db, actor, row.submittal.id),
-    newestCheckHead(deps.db, revision.id),
+    newestCheckHead(deps.db, actor, revision.id),
     // Its reading is the contractor's business: the agency sees what was submitted.
     actor.kind === 'contractor'
-      ? newestJobOf(deps.db, { subjectKind: 'revision', subjectId: revision.id })
+      ? newestJobOf(deps.db, actor.organisationId, { subjectKind: 'revision', subjectId: revision.id })
       : null,
-    revision.state === 'returned' ? nameOfDecider(deps.db, revision.id) : null,
+    revision.state === 'returned' ? nameOfDecider(deps.db, actor, revision.id) : null,
   ]);
   return presentRevision({ row, actor, now: deps.now(), job, hasCheck: check !== null, all, decidedBy });
 }
