@@ -1,10 +1,12 @@
-import { findingKey } from '#rules/engine/finding';
+import { type Disposition, findingKey } from '#rules/engine/finding';
+import type { NoteKind } from '#shared/contracts/notes';
 import { dateOfInstant } from '#shared/format/dates';
 import { isWorkingDay } from '#shared/working-days';
 import { demoWorkbooks } from '#tests/workbooks/demo/write-demo-workbooks';
 import type { Deps } from '../../deps';
 import { newestCheckOf } from '../queries/checks';
 import { demoId } from './demo-id';
+import { demoOrganisations } from './demo-people';
 import { demoProjects } from './seed-projects';
 import { type DemoDesk, type DemoPlace, demoDesk } from './submittals-desk';
 
@@ -47,12 +49,15 @@ async function approved(desk: DemoDesk, day: Day): Promise<void> {
     workbook: 'KD-095-L1 r0.xlsx',
   });
   await desk.submit(day(24, '14:20'), { by: 'Leda Farrow', place });
-  await desk.take(day(22), { by: 'Patience Adeyinka', place });
-  await desk.sendReturn(day(18), {
-    by: 'Mairi Halloran',
+  await review(desk, day, {
     place,
-    disposition: 'approved',
-    reason: 'The design meets the section; what is noted calls for nothing.',
+    by: 'Patience Adeyinka',
+    taken: 22,
+    answer: {
+      sent: 18,
+      disposition: 'approved',
+      reason: 'The design meets the section; what is noted calls for nothing.',
+    },
   });
 }
 
@@ -64,19 +69,22 @@ async function returnedWithDraft(desk: DemoDesk, day: Day): Promise<void> {
     workbook: 'TA-190-B2 r0.xlsx',
   });
   await desk.submit(day(14, '11:05'), { by: 'Bram Ostler', place });
-  await desk.take(day(13), { by: 'Ines Tordoff', place });
-  await desk.note(day(8, '09:40'), {
+  await review(desk, day, {
+    place,
     by: 'Ines Tordoff',
-    place,
-    finding: null,
-    kind: 'to be returned',
-    text: 'The mix is dry and dusty. More binder and a cleaner sand would mend most of what is listed.',
-  });
-  await desk.sendReturn(day(7), {
-    by: 'Mairi Halloran',
-    place,
-    disposition: 'revise and resubmit',
-    reason: 'Volumetrics and resistance to moisture are to be put right before production.',
+    taken: 13,
+    notes: [
+      {
+        at: day(8, '09:40'),
+        kind: 'to be returned',
+        text: 'The mix is dry and dusty. More binder and a cleaner sand would mend most of what is listed.',
+      },
+    ],
+    answer: {
+      sent: 7,
+      disposition: 'revise and resubmit',
+      reason: 'Volumetrics and resistance to moisture are to be put right before production.',
+    },
   });
   await desk.revise(day(0, '07:30'), { by: 'Nia Corrie', place, workbook: 'TA-190-B2 r1.xlsx' });
 }
@@ -89,19 +97,23 @@ async function inReview(desk: DemoDesk, day: Day): Promise<void> {
     workbook: 'BW-125-S4 r0.xlsx',
   });
   await desk.submit(day(20, '15:10'), { by: 'Dele Fairweather', place: first });
-  await desk.take(day(19), { by: 'Ines Tordoff', place: first });
-  await desk.note(day(12, '09:10'), {
+  await review(desk, day, {
+    place: first,
     by: 'Ines Tordoff',
-    place: first,
-    finding: 'dust-proportion~design point',
-    kind: 'to be returned',
-    text: 'Your sheet divides by total binder. The ratio is to effective binder. Please correct it and bring the dust down.',
-  });
-  await desk.sendReturn(day(11), {
-    by: 'Mairi Halloran',
-    place: first,
-    disposition: 'revise and resubmit',
-    reason: 'The mix is close; the dust proportion is to be put right.',
+    taken: 19,
+    notes: [
+      {
+        at: day(12, '09:10'),
+        finding: 'dust-proportion~design point',
+        kind: 'to be returned',
+        text: 'Your sheet divides by total binder. The ratio is to effective binder. Please correct it and bring the dust down.',
+      },
+    ],
+    answer: {
+      sent: 11,
+      disposition: 'revise and resubmit',
+      reason: 'The mix is close; the dust proportion is to be put right.',
+    },
   });
   const second = await desk.revise(day(3), {
     by: 'Sorcha Lund',
@@ -109,20 +121,23 @@ async function inReview(desk: DemoDesk, day: Day): Promise<void> {
     workbook: 'BW-125-S4 r1.xlsx',
   });
   await desk.submit(day(3, '16:00'), { by: 'Dele Fairweather', place: second });
-  await desk.take(day(2), { by: 'Ines Tordoff', place: second });
-  await desk.note(day(1, '10:15'), {
-    by: 'Ines Tordoff',
+  await review(desk, day, {
     place: second,
-    finding: 'dust-proportion~design point',
-    kind: 'internal',
-    text: 'Revision 0 failed on dust. Ask whether the baghouse return was in the blend.',
-  });
-  await desk.note(day(1, '10:20'), {
     by: 'Ines Tordoff',
-    place: second,
-    finding: null,
-    kind: 'to be returned',
-    text: 'Thank you for correcting the dust proportion.',
+    taken: 2,
+    notes: [
+      {
+        at: day(1, '10:15'),
+        finding: 'dust-proportion~design point',
+        kind: 'internal',
+        text: 'Revision 0 failed on dust. Ask whether the baghouse return was in the blend.',
+      },
+      {
+        at: day(1, '10:20'),
+        kind: 'to be returned',
+        text: 'Thank you for correcting the dust proportion.',
+      },
+    ],
   });
 }
 
@@ -135,24 +150,27 @@ async function underWay(desk: DemoDesk, day: Day): Promise<void> {
     workbook: 'TA-190-B2 r0.xlsx',
   });
   await desk.submit(day(5, '12:15'), { by: 'Bram Ostler', place });
-  await desk.take(day(4), { by: 'Ines Tordoff', place });
   const [required, advisory] = await Promise.all([
     firstFail(desk, place, 'required'),
     firstFail(desk, place, 'advisory'),
   ]);
-  await desk.note(day(1, '14:05'), {
-    by: 'Ines Tordoff',
+  await review(desk, day, {
     place,
-    finding: required,
-    kind: 'to be returned',
-    text: 'Please show with the next revision how this is met at the plant, not only in the laboratory.',
-  });
-  await desk.note(day(1, '14:10'), {
     by: 'Ines Tordoff',
-    place,
-    finding: null,
-    kind: 'internal',
-    text: 'The same mix came back on CV-2034. Decide both alike.',
+    taken: 4,
+    notes: [
+      {
+        at: day(1, '14:05'),
+        finding: required,
+        kind: 'to be returned',
+        text: 'Please show with the next revision how this is met at the plant, not only in the laboratory.',
+      },
+      {
+        at: day(1, '14:10'),
+        kind: 'internal',
+        text: 'The same mix came back on CV-2034. Decide both alike.',
+      },
+    ],
   });
   await desk.waive(day(1, '14:20'), {
     by: 'Ines Tordoff',
@@ -164,12 +182,39 @@ async function underWay(desk: DemoDesk, day: Day): Promise<void> {
 
 /** Which findings fail is for the check to say, and a demo without one would be no demo. */
 async function firstFail(desk: DemoDesk, place: DemoPlace, wanted: 'required' | 'advisory'): Promise<string> {
-  const check = await newestCheckOf(desk.db, place.revisionId);
+  const agency = { kind: 'agency', organisationId: demoOrganisations.agency.id } as const;
+  const check = await newestCheckOf(desk.db, agency, place.revisionId);
   const fail = check?.result.findings.find(
     ({ outcome, severity, kind }) => outcome === 'fail' && severity === wanted && kind !== 'consistency',
   );
   if (fail === undefined) throw new Error(`The demo's revision has no ${wanted} finding that fails.`);
   return findingKey(fail);
+}
+
+interface Review {
+  place: DemoPlace;
+  /** The reviewer. */
+  by: string;
+  /** Taken so many working days before the day of seeding. */
+  taken: number;
+  notes?: { at: string; finding?: string; kind: NoteKind; text: string }[];
+  /** Without one the review is still under way. */
+  answer?: { sent: number; disposition: Disposition; reason: string };
+}
+
+/** What the agency does with a revision: a reviewer takes it and writes on it, the signing engineer answers. */
+async function review(
+  desk: DemoDesk,
+  day: Day,
+  { place, by, taken, notes = [], answer }: Review,
+): Promise<void> {
+  await desk.take(day(taken), { by, place });
+  for (const { at, finding = null, ...note } of notes) {
+    await desk.note(at, { by, place, finding, ...note });
+  }
+  if (answer === undefined) return;
+  const { sent, ...decision } = answer;
+  await desk.sendReturn(day(sent), { by: 'Mairi Halloran', place, ...decision });
 }
 
 async function unassigned(desk: DemoDesk, day: Day): Promise<void> {

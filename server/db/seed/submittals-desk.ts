@@ -116,8 +116,8 @@ export function demoDesk({ deps, workbook }: { deps: Deps; workbook: (name: stri
       const inner = at(instant);
       const actor = await actorNamed(inner, by);
       const row = await expectRow(inner, actor, place);
-      const check = await newestCheckOf(inner.db, place.revisionId);
-      const kept = await findMixRecord(inner.db, place.revisionId);
+      const check = await newestCheckOf(inner.db, actor, place.revisionId);
+      const kept = await findMixRecord(inner.db, actor, place.revisionId);
       if (check === null || kept === null) throw new Error('The demo submits what has been checked.');
       await submitRevision(inner, {
         actor,
