@@ -120,6 +120,20 @@ export function meanNode(
   return node === null ? null : { ...node, unit: first.unit, count, specimens };
 }
 
+/** The value as it would be with another number for one of its inputs; null where that allows none. */
+export function valueWith(node: AnalysisNode, moved: AnalysisNode, value: number): number | null {
+  if (node === moved) return value;
+  if (node.compute === null) return node.value;
+  const inputs: number[] = [];
+  for (const input of node.inputs) {
+    const own = valueWith(input, moved, value);
+    if (own === null) return null;
+    inputs.push(own);
+  }
+  const result = node.compute(inputs);
+  return result.ok ? result.value : null;
+}
+
 /** The thread from this value down to the cells, built once. */
 export function evidenceOf(node: AnalysisNode): Evidence {
   const known = evidences.get(node);

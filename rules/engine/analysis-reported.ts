@@ -77,6 +77,7 @@ function recomputedValue(
     },
     agrees,
     cause: agrees === false ? causeFor(node, reported!, trialNodes, ofSpecimens) : null,
+    node,
   };
 }
 

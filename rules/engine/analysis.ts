@@ -34,6 +34,8 @@ export interface RecomputedValue {
   agrees: boolean | null;
   /** The one named cause that reproduces the reported value, if exactly one does. */
   cause: NamedCause | null;
+  /** The calculation itself, to be repeated with another input. */
+  node: AnalysisNode;
 }
 
 export interface DesignPoint {

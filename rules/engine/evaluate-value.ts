@@ -9,7 +9,7 @@ import type { Finding, Observed, ResolvedLimit } from './finding';
 import { type Judgement, judge, type Rounder, rounderOf } from './judge';
 import { judgeEach } from './judge-each';
 import { makeFinding } from './make-finding';
-import { type Obstacle, undecided } from './obstacle';
+import { NUMBER_WORDS, type Obstacle, undecided } from './obstacle';
 import { isBorderline, precisionOf } from './precision';
 import { againstReported, specimensReportedOtherwise } from './reported';
 import { resolveInterval, resolveLimit } from './resolve-limit';
@@ -122,6 +122,7 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
     ...parts,
     outcome,
     reason,
+    wouldDecide: NUMBER_WORDS,
     margin: judgement.margin,
     borderline: isBorderline(judgement.margin, precision),
   });

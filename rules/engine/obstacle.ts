@@ -13,7 +13,7 @@ export interface Obstacle {
 export const COMPACT_WORDS = 'Compact and test specimens at the declared binder content.';
 
 export const SINGLE_WORDS = 'State the value of each specimen.';
-export const NUMBER_WORDS = 'Give the result as a number.';
+export const NUMBER_WORDS = 'Test on until the result is a number, and give that.';
 
 export function notShown(reason: string): Obstacle {
   return { ok: false, outcome: 'not shown', reason };

@@ -1,6 +1,5 @@
 import { type PropertyCurve, propertyCurve, type TrialPoint } from '../calculations/design-point';
 import { known } from '../numerics/numeric-result';
-import { roundTo } from '../numerics/round';
 import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import { isQuantityReference } from '../rule-sets/bounds-of';
@@ -18,8 +17,9 @@ import type { Evidence, ResolvedLimit } from './finding';
 import { type Rounder, rounderOf } from './judge';
 import { resolveLimit } from './resolve-limit';
 import type { RoomOfRule } from './room';
-import { type Side, stretchesOf } from './room-stretches';
+import { stretchesOf } from './room-stretches';
 import { isPerTrial } from './scope';
+import { sideOf } from './side-of-limit';
 import type { World } from './world';
 
 interface Refusal {
@@ -194,15 +194,6 @@ function valueAt(curve: PropertyCurve, content: number, own: string, unit: strin
   if (!value.ok) return null;
   const converted = convert(value.value, own, unit);
   return converted.ok ? converted.value : null;
-}
-
-/** After the rule's own rounding, as a finding is judged. A value that cannot be had is outside. */
-function sideOf(value: number | null, limit: ResolvedLimit, rounder: Rounder): Side {
-  if (value === null) return 'below';
-  const rounded = roundTo({ value, ...rounder });
-  if (limit.min !== null && (limit.minExclusive ? rounded <= limit.min : rounded < limit.min)) return 'below';
-  if (limit.max !== null && (limit.maxExclusive ? rounded >= limit.max : rounded > limit.max)) return 'above';
-  return 'inside';
 }
 
 function labelOf(world: World, quantity: string): string {

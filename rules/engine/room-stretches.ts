@@ -1,8 +1,6 @@
 import Decimal from 'decimal.js';
 import type { RoomStretch } from './room';
-
-/** Where a value lies by the rule that judges it. */
-export type Side = 'below' | 'inside' | 'above';
+import { lastAlike, type Side } from './side-of-limit';
 
 export interface StretchInput {
   /** Tested binder contents between which the value is known, %. */
@@ -95,18 +93,6 @@ function runsInside(first: number, last: number, sideOf: (index: number) => Side
     start = end + 1;
   }
   return runs;
-}
-
-function lastAlike(first: number, last: number, isAlike: (index: number) => boolean): number {
-  if (isAlike(last)) return last;
-  let alike = first;
-  let other = last;
-  while (other - alike > 1) {
-    const middle = Math.floor((alike + other) / 2);
-    if (isAlike(middle)) alike = middle;
-    else other = middle;
-  }
-  return alike;
 }
 
 /** A turn between two hundredths is no end: the range then ends at the hundredth inside. */
