@@ -1,38 +1,58 @@
-import { Engine } from 'json-rules-engine';
 import { evaluate } from '#rules/engine/evaluate';
-import type { MixRecord } from '#rules/record';
+import type { CheckContext, MixRecord } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
-import { inTurn, told } from './measure';
+import { bareRun } from './bare-run';
+import { inTurn, told, WARM_UPS } from './measure';
 
-const context = { submittedOn: '2026-03-09', lettingOn: '2026-01-14', facts: {} };
+const context: CheckContext = { submittedOn: '2026-03-09', lettingOn: '2026-01-14', facts: {} };
+const RUNS = 40;
+const RULES = 120;
+const READINGS = 600;
 
-/** A full check with evidence and seal against a bare run of as many conditions, 120 of them on 600 readings. */
+/** A full check with evidence and seal against a bare run of the same conditions, 120 rules on 600 readings. */
 export async function benchFullCheck(record: MixRecord, edition: ResolvedEdition): Promise<string> {
-  const wide = withRules(edition, 120);
-  const long = withReadings(record, 600);
-  const engine = new Engine([], { allowUndefinedFacts: true });
-  const values = new Map<string, number>();
-  for (const [index, rule] of wide.rules.entries()) {
-    const fact = `value-${index}`;
-    values.set(fact, 10 + index);
-    engine.addFact(fact, () => values.get(fact) ?? 0, { cache: false });
-    engine.addRule({
-      name: rule.id,
-      conditions: {
-        all: [
-          { fact, operator: 'greaterThanInclusive', value: 5 },
-          { fact, operator: 'lessThanInclusive', value: 500 },
-        ],
-      },
-      event: { type: 'pass' },
-    });
-  }
+  const wide = withRules(edition, RULES);
+  const long = withReadings(record, READINGS);
   const { first, second, ratio } = await inTurn(
-    40,
-    () => evaluate(long, wide, context),
-    () => engine.run(),
+    RUNS,
+    freshCheck(long, wide, RUNS),
+    bareRun(long, wide, context),
   );
-  return `full check, ${wide.rules.length} rules on ${long.readings.length} readings: ${told(first)}; bare run of the conditions: ${told(second)}; ratio ${ratio.toFixed(1)}, target at most 3`;
+  return `full check, ${wide.rules.length} rules on ${long.readings.length} readings: ${told(first)}; bare run of the same conditions: ${told(second)}; ratio ${ratio.toFixed(1)}, target at most 3`;
+}
+
+/** What a check costs with 10 and 100 times the readings, and with 10 and 100 times the rules. */
+export async function benchGrowth(record: MixRecord, edition: ResolvedEdition): Promise<string> {
+  const rows: string[] = [];
+  for (const what of ['readings', 'rules'] as const) {
+    const costs: number[] = [];
+    for (const times of [1, 10, 100]) {
+      const wide = withRules(edition, what === 'rules' ? RULES * times : RULES);
+      const long = withReadings(record, what === 'readings' ? READINGS * times : READINGS);
+      const runs = times === 100 ? 3 : 10;
+      const { first } = await inTurn(runs, freshCheck(long, wide, runs), () => undefined);
+      costs.push(first.medianMs);
+    }
+    const [one = 0, ten = 0, hundred = 0] = costs;
+    rows.push(
+      `full check with 1, 10, 100 times the ${what}: ${costs.map((cost) => `${cost.toFixed(1)} ms`).join(', ')}; ` +
+        `from 10 to 100 times the cost grows ${(hundred / ten).toFixed(1)} times, from 1 to 10 times ${(ten / one).toFixed(1)} (10 is linear)`,
+    );
+  }
+  return rows.join('\n');
+}
+
+/**
+ * Every check is of a record that the engine has not met: nothing kept from the run before can help. The copies
+ * are made before anything is measured.
+ */
+function freshCheck(record: MixRecord, edition: ResolvedEdition, runs: number): () => unknown {
+  const records = Array.from({ length: runs + WARM_UPS }, () => structuredClone(record));
+  return () => {
+    const fresh = records.pop();
+    if (fresh === undefined) throw new Error('More checks are run than records were made.');
+    return evaluate(fresh, edition, context);
+  };
 }
 
 function withRules(edition: ResolvedEdition, count: number): ResolvedEdition {

@@ -5,15 +5,17 @@ export interface Timing {
   greatestMs: number;
 }
 
+/** Runs of each that are not counted. */
+export const WARM_UPS = 3;
+
 /** Two things in turn, A B A B …, so that a drift of the machine's speed meets both alike. */
 export async function inTurn(
   runs: number,
   first: () => unknown | Promise<unknown>,
   second: () => unknown | Promise<unknown>,
 ): Promise<{ first: Timing; second: Timing; ratio: number }> {
-  const warmUps = 3;
   const times: [number[], number[]] = [[], []];
-  for (let run = -warmUps; run < runs; run += 1) {
+  for (let run = -WARM_UPS; run < runs; run += 1) {
     for (const [index, act] of [first, second].entries()) {
       const start = performance.now();
       await act();

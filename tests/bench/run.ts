@@ -3,7 +3,7 @@ import { templateMapping } from '#rules/reading/template-mapping';
 import { decodeWorkbook } from '#server/workbook/decode';
 import { demoEdition, demoWorkbooks } from '#tests/workbooks/demo/write-demo-workbooks';
 import { benchFirstScreen } from './first-screen';
-import { benchFullCheck } from './full-check';
+import { benchFullCheck, benchGrowth } from './full-check';
 import { benchUploadToFindings } from './upload-to-findings';
 import { benchStart } from './warm-start';
 
@@ -21,6 +21,7 @@ const { record } = readWorkbook({
 });
 
 console.log(await benchFullCheck(record, edition));
+console.log(await benchGrowth(record, edition));
 console.log(await benchUploadToFindings(bytes, edition));
 console.log(benchFirstScreen());
 console.log(await benchStart());
