@@ -1,5 +1,5 @@
 import type { Quantity } from '#rules/quantities/quantity';
-import { formatPlain, groupThousands } from '#shared/format/numbers';
+import { countOf, formatPlain, groupThousands } from '#shared/format/numbers';
 import { Formula } from './formula';
 import { QuantitySymbol } from './quantity-symbol';
 import './quantity-table.css';
@@ -13,50 +13,56 @@ export interface QuantityRow {
 /** Entries of the registry, or those that a rule set declares: unit, range, methods, formula and source of each. */
 export function QuantityTable({ caption, rows }: { caption: string; rows: readonly QuantityRow[] }) {
   return (
-    <table className="table table-stacked quantity-table">
-      <caption className="hidden-text">{caption}</caption>
-      <thead>
-        <tr>
-          <th scope="col">Quantity</th>
-          <th scope="col">Symbol</th>
-          <th scope="col">Unit</th>
-          <th scope="col">Plausible</th>
-          <th scope="col">Test methods</th>
-          <th scope="col">Formula and source</th>
-        </tr>
-      </thead>
-      <tbody>
-        {rows.map(({ quantity, writtenAs }) => (
-          <tr key={quantity.id} id={quantity.id} tabIndex={-1}>
-            <th scope="row">
-              {capitalised(quantity.label)}
-              <small className="font-mono">{quantity.id}</small>
-              {writtenAs ? <small>written as “{writtenAs}”</small> : null}
-            </th>
-            <td className="quantity-symbol">
-              <QuantitySymbol>{quantity.symbol}</QuantitySymbol>
-            </td>
-            <td>
-              {unitWords(quantity.unit)}
-              <Aside text={alsoAccepted(quantity)} />
-              <Aside text={conditionWords(quantity)} />
-            </td>
-            <td>
-              <span className="whitespace-nowrap">{rangeWords(quantity)}</span>
-              <Aside text={decimalWords(quantity.decimals)} />
-            </td>
-            <td>
-              {quantity.methods.length > 0 ? quantity.methods.join(', ') : <span className="mute">none</span>}
-              <Aside text={precisionWords(quantity)} />
-            </td>
-            <td>
-              {quantity.derivation ? <Formula>{quantity.derivation}</Formula> : 'as tested or stated'}
-              <Aside text={quantity.source} />
-            </td>
+    <div className="sideways">
+      <table className="table table-stacked quantity-table">
+        <caption className="hidden-text">{caption}</caption>
+        <thead>
+          <tr>
+            <th scope="col">Quantity</th>
+            <th scope="col">Symbol</th>
+            <th scope="col">Unit</th>
+            <th scope="col">Plausible</th>
+            <th scope="col">Test methods</th>
+            <th scope="col">Formula and source</th>
           </tr>
-        ))}
-      </tbody>
-    </table>
+        </thead>
+        <tbody>
+          {rows.map(({ quantity, writtenAs }) => (
+            <tr key={quantity.id} id={quantity.id} tabIndex={-1}>
+              <th scope="row">
+                {capitalised(quantity.label)}
+                <small className="font-mono">{quantity.id}</small>
+                {writtenAs ? <small>written as “{writtenAs}”</small> : null}
+              </th>
+              <td className="quantity-symbol">
+                <QuantitySymbol>{quantity.symbol}</QuantitySymbol>
+              </td>
+              <td>
+                {unitWords(quantity.unit)}
+                <Aside text={alsoAccepted(quantity)} />
+                <Aside text={conditionWords(quantity)} />
+              </td>
+              <td>
+                <span className="whitespace-nowrap">{rangeWords(quantity)}</span>
+                <Aside text={decimalWords(quantity.decimals)} />
+              </td>
+              <td>
+                {quantity.methods.length > 0 ? (
+                  quantity.methods.join(', ')
+                ) : (
+                  <span className="mute">none</span>
+                )}
+                <Aside text={precisionWords(quantity)} />
+              </td>
+              <td>
+                {quantity.derivation ? <Formula>{quantity.derivation}</Formula> : 'as tested or stated'}
+                <Aside text={quantity.source} />
+              </td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   );
 }
 
@@ -96,7 +102,7 @@ function numberOf(value: number): string {
 }
 
 function decimalWords(decimals: number): string {
-  return decimals === 0 ? 'whole numbers' : decimals === 1 ? 'one decimal' : `${decimals} decimals`;
+  return decimals === 0 ? 'whole numbers' : countOf(decimals, 'decimal');
 }
 
 function precisionWords({ methodPrecision, unit }: Quantity): string | null {
