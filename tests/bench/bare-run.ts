@@ -77,8 +77,8 @@ function renamed(condition: unknown): Condition {
   if (group.all) return { all: group.all.map(renamed) } as TopLevelCondition;
   if (group.any) return { any: group.any.map(renamed) } as TopLevelCondition;
   if (group.not) return { not: renamed(group.not) } as TopLevelCondition;
-  const { operator, value, ...rest } = condition as Comparison;
-  return { fact: nameOf({ ...rest, operator, value }), operator, value };
+  const comparison = condition as Comparison;
+  return { fact: nameOf(comparison), operator: comparison.operator, value: comparison.value };
 }
 
 function nameOf({ fact, params }: Pick<LeafComparison, 'fact' | 'params'>): string {
