@@ -27,6 +27,7 @@ export default defineConfig({
   outputDir: '../test-results/browser',
   workers: 1,
   timeout: 120_000,
+  expect: { timeout: 15_000 },
   forbidOnly: Boolean(process.env.CI),
   use: {
     baseURL: `http://127.0.0.1:${demoPort}`,

@@ -95,6 +95,33 @@ describe('the reading page', () => {
     stop();
   });
 
+  it('keeps showing an answer that waits for the one before it', async () => {
+    const { stop } = await open();
+    const answer = vi.fn<() => void>();
+    vi.stubGlobal('fetch', (_input: string, init?: RequestInit) =>
+      init?.method === 'PUT'
+        ? new Promise<Response>((resolve) => {
+            answer.mockImplementationOnce(() =>
+              resolve(
+                new Response(JSON.stringify(aReadingView({ version: 5 })), {
+                  headers: { 'Content-Type': 'application/json' },
+                }),
+              ),
+            );
+          })
+        : new Promise(() => undefined),
+    );
+    press('1');
+    press('j');
+    press('1');
+    const second = () => screen.getByRole<HTMLInputElement>('radio', { name: '4721.5 g' });
+    await waitFor(() => expect(second().checked).toBe(true));
+    answer();
+    await new Promise((resolve) => setTimeout(resolve, 20));
+    expect(second().checked).toBe(true);
+    stop();
+  });
+
   it('goes to the next doubt with J and answers that one', async () => {
     const { sent, stop } = await open({ [`PUT ${base}/answers`]: aReadingView({ version: 5 }) });
     press('j');
