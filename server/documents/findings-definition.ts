@@ -1,6 +1,7 @@
 import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces';
 import type { Finding } from '#rules/engine/finding';
 import { findingKey } from '#rules/engine/finding';
+import { sectionOfClause } from '#shared/format/clause';
 import { formatDate } from '#shared/format/dates';
 import type { DocumentInput, DocumentItem } from './document-input';
 import { itemTable, pageFrame, ruleLine } from './letter-definition';
@@ -35,7 +36,7 @@ function clauseGroups(input: DocumentInput): Content[] {
   const known = new Map(input.items.map((item) => [findingKey(item.finding), item]));
   for (const finding of input.findings) {
     const item = known.get(findingKey(finding)) ?? asItem(finding);
-    const section = sectionOf(finding);
+    const section = sectionOfClause(finding.clause) ?? 'Does not add up';
     groups.set(section, [...(groups.get(section) ?? []), item]);
   }
   return [...groups].map(([section, items]) => itemTable(section, tally(items), items));
@@ -43,11 +44,6 @@ function clauseGroups(input: DocumentInput): Content[] {
 
 function asItem(finding: Finding): DocumentItem {
   return { group: 'for information', finding, waivedBecause: null, notes: [], previousText: null };
-}
-
-/** The clause without its last part: `412.03(b)` belongs to `412.03`. */
-function sectionOf({ clause }: Finding): string {
-  return clause === null ? 'Does not add up' : clause.replace(/\([^()]*\)$/u, '');
 }
 
 function tally(items: DocumentItem[]): string {

@@ -1,6 +1,7 @@
 import type { Content, TableCell, TDocumentDefinitions } from 'pdfmake/interfaces';
 import { cautionsFor } from '#shared/cautions';
 import { formatDate } from '#shared/format/dates';
+import { shortHash } from '#shared/format/short-hash';
 import { nextActHeadings, nextActs } from '#shared/next-acts';
 import type { DocumentInput, DocumentItem } from './document-input';
 import { gaugeSvg } from './gauge-svg';
@@ -68,7 +69,7 @@ export function pageFrame(input: DocumentInput): Omit<TDocumentDefinitions, 'con
               stack: [
                 pdfText(cautionsFor({ startingPoint: input.startingPoint })),
                 pdfText(
-                  `Check ${shortSeal(input.seal.seal)}, ${formatDate(input.checkedOn)}. ${input.section}.`,
+                  `Check ${shortHash(input.seal.seal)}, ${formatDate(input.checkedOn)}. ${input.section}.`,
                 ),
               ],
             },
@@ -78,10 +79,6 @@ export function pageFrame(input: DocumentInput): Omit<TDocumentDefinitions, 'con
       ],
     }),
   };
-}
-
-export function shortSeal(seal: string): string {
-  return `${seal.slice(0, 4)} ${seal.slice(4, 8)} … ${seal.slice(-4)}`;
 }
 
 export function ruleLine(width = 0.75, colour: string = printColours.ink): Content {

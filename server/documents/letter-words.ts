@@ -1,4 +1,5 @@
 import { formatDate } from '#shared/format/dates';
+import { countInFigures } from '#shared/format/numbers';
 import type { NextAct } from '#shared/next-acts';
 import type { DocumentInput, DocumentItem } from './document-input';
 
@@ -40,11 +41,11 @@ const tallyWords: Record<NextAct, [one: string, many: string]> = {
 
 export function groupTally(act: NextAct, items: DocumentItem[]): string {
   const [one, many] = tallyWords[act];
-  return `${items.length} ${items.length === 1 ? one : many}`;
+  return countInFigures(items.length, one, many);
 }
 
 function counted(count: number, one: string, many: string): string {
-  return count === 0 ? '' : `${count} ${count === 1 ? one : many}`;
+  return count === 0 ? '' : countInFigures(count, one, many);
 }
 
 function joinWords(parts: string[]): string {

@@ -1,4 +1,5 @@
 import type { Conditions, MixRecord, Reading } from '#rules/record';
+import { countInFigures } from '#shared/format/numbers';
 
 /** "binder content 5.1 to 5.3 %; 14 readings changed", or null where the records hold the same. */
 export function changeSummary(previous: MixRecord, present: MixRecord): string | null {
@@ -69,7 +70,7 @@ function readingCounts(previous: MixRecord, present: MixRecord): string[] {
 
 function counted(count: number, word: string): string {
   if (count === 0) return '';
-  return `${count} ${count === 1 ? 'reading' : 'readings'} ${word}`;
+  return `${countInFigures(count, 'reading')} ${word}`;
 }
 
 function byPlace(readings: readonly Reading[]): Map<string, Reading[]> {

@@ -1,5 +1,6 @@
 import type { Finding } from '#rules/engine/finding';
 import type { Doubt } from '#rules/record';
+import { sectionWords } from '#shared/format/section-words';
 import type { RevisionRow } from '../db/queries/revisions';
 import type { SectionSnapshot } from '../db/queries/section-snapshot';
 import { declarationText } from './declaration-text';
@@ -13,13 +14,11 @@ interface Declaration {
 
 /** The declaration that a draft's present findings and doubts call for. */
 export function declarationOf({ row, section, findings, doubts }: Declaration): string {
-  const layers = section.layers.map(({ title, edition }) => `${title}, ${edition}`);
-  const base = `${section.base.title}, edition ${section.base.edition}`;
   return declarationText({
     mixDesignation: row.submittal.mixDesignation,
     revision: row.revision.number,
     projectNumber: row.project.number,
-    section: layers.length === 0 ? base : `${base}, with ${layers.join(' and ')}`,
+    section: sectionWords(section),
     findings: [...findings],
     doubts: doubts.map(
       ({ sheet, cell, about }) => `${sheet} ${cell}`.trim() || (about.attribute ?? 'a value'),

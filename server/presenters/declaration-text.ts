@@ -1,4 +1,5 @@
 import type { Finding } from '#rules/engine/finding';
+import { countInFigures } from '#shared/format/numbers';
 
 export interface DeclarationInput {
   mixDesignation: string;
@@ -20,7 +21,7 @@ export function declarationText(input: DeclarationInput): string {
     listed('undecided', 'is undecided', 'are undecided', findings),
     doubts.length === 0
       ? null
-      : `${count(doubts.length, 'doubt is', 'doubts are')} not answered: ${doubts.join('; ')}.`,
+      : `${countInFigures(doubts.length, 'doubt is', 'doubts are')} not answered: ${doubts.join('; ')}.`,
   ].filter((line) => line !== null);
   const opening =
     `We submit ${input.mixDesignation} revision ${input.revision} for ${input.projectNumber} ` +
@@ -40,15 +41,11 @@ function listed(
 ): string | null {
   const named = findings.filter((finding) => finding.outcome === outcome).map(nameOf);
   if (named.length === 0) return null;
-  return `${count(named.length, one, many)}: ${named.join('; ')}.`;
+  return `${countInFigures(named.length, one, many)}: ${named.join('; ')}.`;
 }
 
 function nameOf({ clause, title, subject }: DeclarationInput['findings'][number]): string {
   const general = subject === 'mix' || subject === 'design point';
   const named = general ? title : `${title}, ${subject}`;
   return clause === null ? named : `${clause} ${named}`;
-}
-
-function count(number: number, one: string, many: string): string {
-  return `${number} ${number === 1 ? one : many}`;
 }

@@ -64,6 +64,7 @@ export async function presentProject(
     agency: { id: agency.id, name: agency.name },
     contractors: contractorsOf(await contractorsOfProjects(db, actor, [project.id]), project.id),
     sections: sections.map(presentSection),
+    startingPoint: sections.some(({ base, layers }) => [base, ...layers].some((each) => each.startingPoint)),
     proposals: proposalsFor(project.lettingOn, { editions, sections }),
     choices: editions
       .filter((each) => each.layerOfKey === null && !each.withdrawn)

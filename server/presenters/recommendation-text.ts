@@ -1,4 +1,5 @@
 import { type Finding, findingKey } from '#rules/engine/finding';
+import { countOf, countWord } from '#shared/format/numbers';
 
 /** "Two required rules fail without a waiver, one is not shown." */
 export function recommendationText(findings: readonly Finding[], waived: ReadonlySet<string>): string {
@@ -44,27 +45,8 @@ function clauses(rows: [number, string, string][]): Clause[] {
 function sentence(parts: Clause[], noun: string): string {
   const [first, ...others] = parts;
   if (first === undefined) return '';
-  const subject = `${numberWord(first.count)} ${noun}${first.count === 1 ? '' : 's'}`;
-  const rest = others.map(({ count, words }) => `${numberWord(count)} ${words}`);
+  const subject = countOf(first.count, noun);
+  const rest = others.map(({ count, words }) => `${countWord(count)} ${words}`);
   const text = [`${subject} ${first.words}`, ...rest].join(', ');
   return `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
-}
-
-function numberWord(count: number): string {
-  const words = [
-    'no',
-    'one',
-    'two',
-    'three',
-    'four',
-    'five',
-    'six',
-    'seven',
-    'eight',
-    'nine',
-    'ten',
-    'eleven',
-    'twelve',
-  ];
-  return words[count] ?? String(count);
 }

@@ -64,10 +64,6 @@ function showsDate(format: string): boolean {
   return /[dmyhs]/i.test(bare) && !/general/i.test(bare) && !/[0#?]/.test(bare.replace(/s\.0+/gi, ''));
 }
 
-export function isPercentFormat(format: string | null): boolean {
-  return format !== null && bareFormat(format.split(';')[0] ?? '').includes('%');
-}
-
 /** A stored number as the spreadsheet shows it, as far as its format decides that. */
 export function formatNumber(stored: string, format: string): string {
   // The General format shows up to eleven characters as they are stored.

@@ -53,7 +53,7 @@ export const projectListItemSchema = z.strictObject({
       confirmed: z.boolean(),
     }),
   ),
-  mixes: z.number().int(),
+  submittals: z.number().int(),
 });
 
 export const projectSchema = z.strictObject({
@@ -62,6 +62,8 @@ export const projectSchema = z.strictObject({
   agency: organisationReferenceSchema,
   contractors: z.array(organisationReferenceSchema),
   sections: z.array(sectionSchema),
+  /** True where one of the sections stands on a shipped starting point. */
+  startingPoint: z.boolean(),
   /** Sections proposed from the letting date that are not in `sections` yet; agency only. */
   proposals: z.array(
     z.strictObject({

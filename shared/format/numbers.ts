@@ -36,14 +36,18 @@ export function groupThousands(text: string): string {
   });
 }
 
-/** In a tally a zero is a middle dot. */
-export function formatTally(count: number): string {
-  return count === 0 ? '·' : String(count);
-}
-
 const words = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine'];
 
-/** "two rules", "12 rules": words up to nine, figures beyond. */
+/** "two rules", "12 rules": words up to nine, figures beyond, as a sentence has it. */
 export function countOf(count: number, singular: string, plural = `${singular}s`): string {
-  return `${words[count] ?? count} ${count === 1 ? singular : plural}`;
+  return `${countWord(count)} ${count === 1 ? singular : plural}`;
+}
+
+export function countWord(count: number): string {
+  return words[count] ?? String(count);
+}
+
+/** "2 doubts", "1 doubt": figures throughout, where numbers are compared or stand beside others. */
+export function countInFigures(count: number, singular: string, plural = `${singular}s`): string {
+  return `${count} ${count === 1 ? singular : plural}`;
 }

@@ -13,10 +13,6 @@ export function withUnit(number: string, unit: string): string {
   return word === '' ? groupThousands(number) : `${groupThousands(number)} ${word}`;
 }
 
-export function formatQuantity(value: number, unit: string, significantDigits = 6): string {
-  return withUnit(formatPlain(value, significantDigits), unit);
-}
-
 /** "184 kB", "1.2 MB" of a file. */
 export function formatBytes(bytes: number): string {
   if (bytes < 1000) return `${bytes} bytes`;

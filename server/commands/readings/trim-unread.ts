@@ -1,4 +1,5 @@
 import type { ReadingResult } from '#rules/reading/reading-result';
+import { countInFigures } from '#shared/format/numbers';
 
 /** More than anybody looks through; and the kept reading has to fit into one packet to the database. */
 export const mostUnreadPerSheet = 2000;
@@ -25,7 +26,7 @@ export function trimUnread(read: ReadingResult, most = mostUnreadPerSheet): Read
     unread.push({
       sheet,
       cell: first?.cell ?? '',
-      text: `${more} more ${more === 1 ? 'cell' : 'cells'}`,
+      text: countInFigures(more, 'more cell'),
       reason: first?.reason ?? '',
     });
   }

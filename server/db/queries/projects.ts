@@ -90,6 +90,7 @@ const namedEdition = {
   ruleSetKey: editions.ruleSetKey,
   edition: editions.edition,
   title: editions.title,
+  startingPoint: editions.startingPoint,
 };
 
 export type SectionRow = Awaited<ReturnType<typeof sectionsOfProjects>>[number];

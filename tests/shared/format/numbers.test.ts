@@ -5,7 +5,6 @@ import {
   formatFixed,
   formatPlain,
   formatSigned,
-  formatTally,
   groupThousands,
 } from '#shared/format/numbers';
 
@@ -49,11 +48,6 @@ describe('numbers as people read them', () => {
     expect(groupThousands('20000.2500')).toBe('20,000.2500');
     expect(groupThousands('−1200')).toBe('−1,200');
     expect(groupThousands('PG 64-22')).toBe('PG 64-22');
-  });
-
-  it('puts a middle dot for nothing in a tally', () => {
-    expect(formatTally(0)).toBe('·');
-    expect(formatTally(12)).toBe('12');
   });
 
   it('counts in words up to nine', () => {

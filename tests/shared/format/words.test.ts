@@ -3,7 +3,7 @@ import { clauseParts, sectionOfClause } from '#shared/format/clause';
 import { findByFragment, findingFragment, slug } from '#shared/format/finding-key';
 import { gaugeText, marginText, observedText } from '#shared/format/margin';
 import { splitSymbols, symbolParts } from '#shared/format/symbols';
-import { formatBytes, formatQuantity, unitWord, withUnit } from '#shared/format/units';
+import { formatBytes, unitWord, withUnit } from '#shared/format/units';
 import { aFinding } from '#tests/builders/a-finding';
 
 describe('units', () => {
@@ -12,7 +12,6 @@ describe('units', () => {
     expect(withUnit('1000', 's')).toBe('1,000 s');
     expect(withUnit('1.3', '1')).toBe('1.3');
     expect(unitWord('1')).toBe('');
-    expect(formatQuantity(4.4340000001, '%')).toBe('4.434 %');
   });
 
   it('give the size of a file in the words of its reader', () => {

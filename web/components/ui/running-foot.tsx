@@ -6,19 +6,24 @@ import { Kbd } from './kbd';
 /** The place under every page where the shell keeps its foot. */
 export const FootPlace = createContext<HTMLElement | null>(null);
 
-/** What the page has to say in its foot: seal or draft, then cautions; its keys; on phones its first two acts. */
+/**
+ * What the page has to say in its foot: seal or draft, then cautions; its keys; on phones its first two acts. Where
+ * the foot has no room for its words they close the page.
+ */
 export function RunningFoot({ texts, acts }: { texts: readonly ReactNode[]; acts?: ReactNode }) {
   const place = useContext(FootPlace);
   const keys = useRegisteredShortcuts().filter((shortcut) => shortcut.foot);
   if (!place) return null;
   const foot = createPortal(
     <div className={`running-foot${acts ? ' has-acts' : ''}`}>
-      {texts.map((text, index) => (
-        // biome-ignore lint/suspicious/noArrayIndexKey: at most three fixed lines.
-        <span key={index} className="foot-text">
-          {text}
-        </span>
-      ))}
+      <span className="foot-texts">
+        {texts.map((text, index) => (
+          // biome-ignore lint/suspicious/noArrayIndexKey: at most three fixed lines.
+          <span key={index} className="foot-text">
+            {text}
+          </span>
+        ))}
+      </span>
       {acts ? <span className="foot-acts">{acts}</span> : null}
       <span className="foot-keys">
         {keys.map((shortcut) => (
@@ -33,13 +38,12 @@ export function RunningFoot({ texts, acts }: { texts: readonly ReactNode[]; acts
   );
   return (
     <>
-      {acts ? <CautionsInPage texts={texts} /> : null}
+      <CautionsInPage texts={texts} />
       {foot}
     </>
   );
 }
 
-/** On phones the foot has room for acts only, and its words stand at the end of the page. */
 function CautionsInPage({ texts }: { texts: readonly ReactNode[] }) {
   return (
     <div className="page-cautions">
@@ -52,6 +56,6 @@ function CautionsInPage({ texts }: { texts: readonly ReactNode[] }) {
 }
 
 export function keyName(key: string, ctrl = false): string {
-  const name = key.length === 1 ? key.toUpperCase() : key;
+  const name = key === 'Escape' ? 'Esc' : key.length === 1 ? key.toUpperCase() : key;
   return ctrl ? `Ctrl ${name}` : name;
 }

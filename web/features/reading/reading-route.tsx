@@ -1,18 +1,14 @@
-import {
-  type LoaderFunctionArgs,
-  redirect,
-  type ShouldRevalidateFunctionArgs,
-  useParams,
-} from 'react-router-dom';
+import { type LoaderFunctionArgs, redirect, type ShouldRevalidateFunctionArgs } from 'react-router-dom';
 import { queryClient } from '../../lib/client';
 import { paths } from '../../lib/paths';
 import { revisionQuery } from '../../lib/queries/revision-query';
+import { readRevisionParams, useRevisionParams } from '../../lib/revision-params';
 import { readingQuery } from './api/get-reading';
 import { ReadingPage } from './components/reading-page';
 
 /** A workbook that is still being read, or could not be, is shown on its own page. */
 export async function loader({ params }: LoaderFunctionArgs) {
-  const revision = revisionOf(params);
+  const revision = readRevisionParams(params);
   const { job } = await queryClient.fetchQuery(revisionQuery(revision));
   if (job && job.state !== 'done') return redirect(paths.workbook(revision.submittalId, revision.number));
   await queryClient.ensureQueryData(readingQuery(revision));
@@ -29,10 +25,6 @@ export function shouldRevalidate({
 }
 
 export function Component() {
-  const params = revisionOf(useParams());
+  const params = useRevisionParams();
   return <ReadingPage key={`${params.submittalId} ${params.number}`} params={params} />;
-}
-
-function revisionOf(params: { submittalId?: string | undefined; number?: string | undefined }) {
-  return { submittalId: params.submittalId ?? '', number: Number(params.number) };
 }

@@ -1,11 +1,12 @@
-import { type LoaderFunctionArgs, useParams } from 'react-router-dom';
+import type { LoaderFunctionArgs } from 'react-router-dom';
 import { queryClient } from '../../lib/client';
 import { revisionQuery } from '../../lib/queries/revision-query';
+import { readRevisionParams, useRevisionParams } from '../../lib/revision-params';
 import { returnQuery } from './api/get-return';
 import { ReturnPage } from './components/return-page';
 
 export async function loader({ params }: LoaderFunctionArgs) {
-  const revision = revisionOf(params);
+  const revision = readRevisionParams(params);
   await Promise.all([
     queryClient.ensureQueryData(revisionQuery(revision)),
     queryClient.ensureQueryData(returnQuery(revision)),
@@ -14,10 +15,6 @@ export async function loader({ params }: LoaderFunctionArgs) {
 }
 
 export function Component() {
-  const params = revisionOf(useParams());
+  const params = useRevisionParams();
   return <ReturnPage key={`${params.submittalId} ${params.number}`} params={params} />;
-}
-
-function revisionOf(params: { submittalId?: string | undefined; number?: string | undefined }) {
-  return { submittalId: params.submittalId ?? '', number: Number(params.number) };
 }

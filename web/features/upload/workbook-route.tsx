@@ -1,15 +1,16 @@
-import { type LoaderFunctionArgs, useLocation, useParams } from 'react-router-dom';
+import { type LoaderFunctionArgs, useLocation } from 'react-router-dom';
 import { queryClient } from '../../lib/client';
 import { revisionQuery } from '../../lib/queries/revision-query';
+import { readRevisionParams, useRevisionParams } from '../../lib/revision-params';
 import { WorkbookPage } from './components/workbook-page';
 
 export async function loader({ params }: LoaderFunctionArgs) {
-  await queryClient.ensureQueryData(revisionQuery(revisionOf(params)));
+  await queryClient.ensureQueryData(revisionQuery(readRevisionParams(params)));
   return null;
 }
 
 export function Component() {
-  const params = revisionOf(useParams());
+  const params = useRevisionParams();
   const { state } = useLocation();
   return (
     <WorkbookPage
@@ -18,8 +19,4 @@ export function Component() {
       justUploaded={state?.justUploaded === true}
     />
   );
-}
-
-function revisionOf(params: { submittalId?: string | undefined; number?: string | undefined }) {
-  return { submittalId: params.submittalId ?? '', number: Number(params.number) };
 }

@@ -2,9 +2,9 @@ import { describe, expect, it } from 'vitest';
 import type { Finding } from '#rules/engine/finding';
 import { aCheckView, aNote, aWaiver } from '#tests/builders/a-check-view';
 import { aFinding } from '#tests/builders/a-finding';
-import { changedOutcomes } from '../../../../web/features/findings/lib/changed-outcomes';
 import { foldedPassLine } from '../../../../web/features/findings/lib/folded-line';
 import { ledgerGroups, ledgerRows, tallyOf } from '../../../../web/features/findings/lib/ledger';
+import { changedOutcomes } from '../../../../web/lib/changed-outcomes';
 
 const rule = (letter: string, overrides: Parameters<typeof aFinding>[0] = {}): Finding =>
   aFinding({

@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import { formatInstant } from '#shared/format/dates';
+import { countInFigures } from '#shared/format/numbers';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
@@ -21,7 +22,7 @@ export function CaughtMailPage({ mailId }: { mailId: string | null }) {
         <>
           <PageHead
             title="Caught mail"
-            rest={mails.length === 1 ? '1 mail' : `${mails.length} mails`}
+            rest={countInFigures(mails.length, 'mail')}
             lede="Nothing of it left this machine."
           />
           {mails.length === 0 ? (
@@ -60,5 +61,5 @@ export function CaughtMailPage({ mailId }: { mailId: string | null }) {
 }
 
 function enclosed(count: number): string {
-  return count === 1 ? '1 enclosure' : `${count} enclosures`;
+  return countInFigures(count, 'enclosure');
 }

@@ -2,9 +2,9 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { checkAgain } from '#shared/contracts/checks';
 import { announce } from '../../../lib/announce';
 import { call } from '../../../lib/api';
+import { changedOutcomes } from '../../../lib/changed-outcomes';
 import { checkQuery } from '../../../lib/queries/check-query';
 import { type RevisionParams, revisionKey } from '../../../lib/queries/revision-query';
-import { changedOutcomes } from '../lib/changed-outcomes';
 
 export function useCheckAgain(params: RevisionParams) {
   const client = useQueryClient();

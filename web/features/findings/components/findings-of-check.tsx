@@ -4,6 +4,7 @@ import { MarginPage } from '../../../components/ui/margin-page';
 import { useCheck } from '../../../lib/queries/check-query';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { useSession } from '../../../lib/queries/session-query';
+import { useTakeRevision } from '../api/take-revision';
 import { useAddressRow } from '../hooks/use-address-row';
 import { useLedgerKeys } from '../hooks/use-ledger-keys';
 import { useLedgerState } from '../hooks/use-ledger-state';
@@ -26,6 +27,7 @@ export function FindingsOfCheck({ params, revision }: { params: RevisionParams; 
   useLedgerKeys(state, revision);
   const { job } = revision;
   useRenewWhileRunning(params, job !== null && (job.state === 'waiting' || job.state === 'running'));
+  const take = useTakeRevision(params, revision.version);
   const { open, toggle, unfolded, setUnfolded, draft, setDraft } = state;
   const context = useMemo(
     () => ({
@@ -39,8 +41,9 @@ export function FindingsOfCheck({ params, revision }: { params: RevisionParams; 
       setUnfolded,
       draft,
       setDraft,
+      take,
     }),
-    [params, revision, check, session.timeZone, open, toggle, unfolded, setUnfolded, draft, setDraft],
+    [params, revision, check, session.timeZone, open, toggle, unfolded, setUnfolded, draft, setDraft, take],
   );
   return (
     <LedgerContext value={context}>

@@ -2,6 +2,7 @@ import { createContext, useContext } from 'react';
 import type { CheckView } from '#shared/contracts/checks';
 import type { Revision } from '#shared/contracts/submittals';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
+import type { useTakeRevision } from '../api/take-revision';
 
 /** What is being written in the margin, and on what. */
 export type Draft =
@@ -21,6 +22,8 @@ export interface LedgerState {
   setUnfolded: (groupId: string, unfolded: boolean) => void;
   draft: Draft | null;
   setDraft: (draft: Draft | null) => void;
+  /** One act in two places: at the head of the page and, on phones, in its foot. */
+  take: ReturnType<typeof useTakeRevision>;
 }
 
 export const LedgerContext = createContext<LedgerState | null>(null);

@@ -2,9 +2,12 @@ import { formatInstantShort } from '#shared/format/dates';
 import { Button } from '../../../components/ui/button';
 import { Kbd } from '../../../components/ui/kbd';
 import { Note } from '../../../components/ui/note';
+import { ProblemNotice } from '../../../components/ui/problem-notice';
+import { asProblem } from '../../../lib/problem';
 import { useRemoveWaiver } from '../api/waive';
 import type { LedgerRow } from '../lib/ledger';
 import { nameOfFinding } from '../lib/row-words';
+import { whyNotWaived } from '../lib/waivable';
 import { useLedger } from './ledger-context';
 import { NoteForm } from './note-form';
 import { RecordedNote } from './recorded-note';
@@ -47,7 +50,7 @@ export function MarginNotes({ row, isOpen }: { row: LedgerRow; isOpen: boolean }
             <span>Write a note on {nameOfFinding(row.finding)}</span>
             <Kbd hidden>N</Kbd>
           </button>
-          {canWaive(row, revision.abilities) ? (
+          {whyNotWaived(row, revision.abilities) === null ? (
             <button
               type="button"
               className="note-write"
@@ -63,31 +66,27 @@ export function MarginNotes({ row, isOpen }: { row: LedgerRow; isOpen: boolean }
   );
 }
 
-/** Only fails can be waived; whether this reader may is said with the revision. */
-export function canWaive(
-  { finding, waiver }: LedgerRow,
-  abilities: { waiveAdvisory: boolean; waiveRequired: boolean },
-): boolean {
-  if (finding.outcome !== 'fail' || waiver) return false;
-  return finding.severity === 'advisory' ? abilities.waiveAdvisory : abilities.waiveRequired;
-}
-
 function WaiverNote({ row: { waiver }, isOpen }: { row: LedgerRow; isOpen: boolean }) {
   const { params, timeZone } = useLedger();
   const remove = useRemoveWaiver(params);
   if (!waiver) return null;
   return (
-    <Note
-      text={`Waived. ${waiver.reason}`}
-      by={waiver.by}
-      on={formatInstantShort(waiver.at, timeZone)}
-      state={waiver.toBeReturned ? 'to be returned' : 'internal'}
-    >
-      {isOpen && waiver.abilities.remove ? (
-        <Button kind="inline" isDisabled={remove.isPending} onPress={() => remove.mutate(waiver)}>
-          Take the waiver back
-        </Button>
+    <>
+      <Note
+        text={`Waived. ${waiver.reason}`}
+        by={waiver.by}
+        on={formatInstantShort(waiver.at, timeZone)}
+        state={waiver.toBeReturned ? 'to be returned' : 'internal'}
+      >
+        {isOpen && waiver.abilities.remove ? (
+          <Button kind="inline" isDisabled={remove.isPending} onPress={() => remove.mutate(waiver)}>
+            Take the waiver back
+          </Button>
+        ) : null}
+      </Note>
+      {remove.isError ? (
+        <ProblemNotice problem={asProblem(remove.error)} unaffected="The waiver still stands." />
       ) : null}
-    </Note>
+    </>
   );
 }

@@ -6,7 +6,7 @@ import { Button, LinkButton } from '../../../components/ui/button';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { paths } from '../../../lib/paths';
 import { asProblem } from '../../../lib/problem';
-import { useGiveBackRevision, useTakeRevision } from '../api/take-revision';
+import { useGiveBackRevision } from '../api/take-revision';
 import { useLedger } from './ledger-context';
 import { SubmittalNotes } from './submittal-notes';
 import { WithdrawForm } from './withdraw-form';
@@ -56,9 +56,8 @@ function daysLeft(days: number): string {
 }
 
 function Acts() {
-  const { revision, params } = useLedger();
+  const { revision, params, take } = useLedger();
   const { abilities } = revision;
-  const take = useTakeRevision(params, revision.version);
   const giveBack = useGiveBackRevision(params, revision.version);
   const decides = abilities.prepareReturn || abilities.sendReturn;
   const [withdrawing, setWithdrawing] = useState(false);
@@ -68,13 +67,19 @@ function Acts() {
     <>
       <div className="acts">
         {decides ? (
-          <LinkButton kind="primary" keyHint="D" to={paths.return(params.submittalId, params.number)}>
+          <LinkButton
+            kind="primary"
+            className="acts-in-foot"
+            keyHint="D"
+            to={paths.return(params.submittalId, params.number)}
+          >
             Decide and return
           </LinkButton>
         ) : null}
         {abilities.take ? (
           <Button
             kind={decides ? 'outlined' : 'primary'}
+            className="acts-in-foot"
             isDisabled={take.isPending}
             onPress={() => take.mutate()}
           >
@@ -87,12 +92,12 @@ function Acts() {
           </LinkButton>
         ) : null}
         {abilities.submit ? (
-          <LinkButton kind="outlined" to={{ hash: 'submit' }}>
+          <LinkButton kind="outlined" className="acts-in-foot" to={{ hash: 'submit' }}>
             Submit revision {revision.number}
           </LinkButton>
         ) : null}
         {abilities.startRevision ? (
-          <LinkButton kind="primary" to={paths.nextRevision(params.submittalId)}>
+          <LinkButton kind="primary" className="acts-in-foot" to={paths.nextRevision(params.submittalId)}>
             Upload revision {revision.number + 1}
           </LinkButton>
         ) : null}

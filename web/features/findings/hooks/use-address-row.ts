@@ -10,14 +10,15 @@ export function useAddressRow(state: ReturnType<typeof useLedgerState>): void {
   latest.current = state;
   // biome-ignore lint/correctness/useExhaustiveDependencies: only a new address moves the reader, never a changed ledger.
   useEffect(() => {
-    const { addressed, groups, show, setUnfolded } = latest.current;
-    const byHand: unknown = location.state;
-    if (!addressed || isByHand(byHand)) return;
+    const { addressed, groups, show, setUnfolded, editNote } = latest.current;
+    const arrival: unknown = location.state;
+    if (!addressed || says(arrival, 'byHand')) return;
     const key = findingKey(addressed);
     const group = groups.find((each) => each.folded.some((row) => row.key === key));
     if (group) setUnfolded(group.id, true);
     show(key);
-    requestAnimationFrame(() => focusRow(key));
+    if (says(arrival, 'editNote')) editNote(key);
+    else requestAnimationFrame(() => focusRow(key));
   }, [location.key, location.hash]);
 }
 
@@ -35,6 +36,6 @@ export function returnToRow(key: string | null): void {
   });
 }
 
-function isByHand(state: unknown): boolean {
-  return typeof state === 'object' && state !== null && 'byHand' in state;
+function says(state: unknown, what: 'byHand' | 'editNote'): boolean {
+  return typeof state === 'object' && state !== null && what in state;
 }

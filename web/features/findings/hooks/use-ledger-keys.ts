@@ -1,21 +1,31 @@
 import { useRef } from 'react';
 import { useNavigate } from 'react-router-dom';
 import type { Revision } from '#shared/contracts/submittals';
+import { announce } from '../../../lib/announce';
 import { paths } from '../../../lib/paths';
 import { type Shortcut, useShortcuts } from '../../../lib/shortcuts';
-import { canWaive } from '../components/margin-notes';
+import { whyNotWaived } from '../lib/waivable';
 import type { useLedgerState } from './use-ledger-state';
 
-/** J and K walk the rows, Enter opens the one in focus, N and W write beside it, D decides. */
+/** J and K walk the rows, Enter opens the one in focus, N, E and W write beside it, D decides. */
 export function useLedgerKeys(state: ReturnType<typeof useLedgerState>, revision: Revision): void {
   const cursor = useRef<string | null>(null);
   const navigate = useNavigate();
   const { abilities } = revision;
-  const write = (act: 'note' | 'waive') => {
+  const rowAtHand = () => {
     const key = focusedRow() ?? cursor.current;
-    const row = state.rows.find((each) => each.key === key);
-    if (act === 'note') state.setDraft({ act, key: row?.key ?? null });
-    else if (row && canWaive(row, abilities)) state.setDraft({ act, key: row.key });
+    return state.rows.find((each) => each.key === key);
+  };
+  const waive = () => {
+    const row = rowAtHand();
+    const whyNot = row ? whyNotWaived(row, abilities) : 'Go to the row of a fail first.';
+    if (whyNot !== null) announce(whyNot);
+    else if (row) state.setDraft({ act: 'waive', key: row.key });
+  };
+  const edit = () => {
+    const row = rowAtHand();
+    if (row) state.editNote(row.key);
+    else announce('Go to a row first.');
   };
   const walk = (step: 1 | -1) => {
     cursor.current = walkRows(step, focusedRow() ?? cursor.current);
@@ -27,19 +37,21 @@ export function useLedgerKeys(state: ReturnType<typeof useLedgerState>, revision
     (abilities.note || abilities.reply) && {
       key: 'n',
       label: 'note',
-      run: () => write('note'),
+      run: () => state.setDraft({ act: 'note', key: rowAtHand()?.key ?? null }),
       foot: true,
     },
+    (abilities.note || abilities.reply) && { key: 'e', label: 'edit the note', run: edit },
     (abilities.waiveAdvisory || abilities.waiveRequired) && {
       key: 'w',
       label: 'waive',
-      run: () => write('waive'),
+      run: waive,
       foot: true,
     },
     (abilities.prepareReturn || abilities.sendReturn) && {
       key: 'd',
       label: 'decide',
       run: () => void navigate(paths.return(revision.submittalId, revision.number)),
+      foot: true,
     },
   ];
   useShortcuts(keys.filter((key) => key !== false));

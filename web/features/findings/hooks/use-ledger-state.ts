@@ -34,6 +34,11 @@ export function useLedgerState(check: CheckView) {
       { replace: true, preventScrollReset: true, state: { byHand: true } },
     );
   };
+  /** The reader's own note on a row where there is one, else a new one. */
+  const editNote = (key: string) => {
+    const note = rows.find((row) => row.key === key)?.notes.find((each) => each.abilities.change);
+    setDraft(note ? { act: 'change', key, noteId: note.id } : { act: 'note', key });
+  };
   return {
     rows,
     groups,
@@ -47,6 +52,7 @@ export function useLedgerState(check: CheckView) {
       setUnfoldedSet((now) => withOrWithout(now, groupId, isUnfolded)),
     draft,
     setDraft,
+    editNote,
   };
 }
 

@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
+import { Link, useNavigate } from 'react-router-dom';
 import { cautions } from '#shared/cautions';
 import { findingFragment } from '#shared/format/finding-key';
 import { Button } from '../../../components/ui/button';
@@ -23,11 +23,15 @@ export function GradationPage() {
   const check = useCheck(params);
   const [asTable, setAsTable] = useState(false);
   usePageTitle(`Gradation, ${revision.mixDesignation} revision ${revision.number}`);
-  useShortcuts([{ key: 't', label: 'table', run: () => setAsTable((now) => !now), foot: true }]);
   const { gradation } = check;
   const findings = check.findings.filter((finding) => finding.kind === 'gradation');
   const first = findings[0];
   const back = paths.revision(params.submittalId, params.number);
+  const navigate = useNavigate();
+  useShortcuts([
+    { key: 't', label: 'table', run: () => setAsTable((now) => !now), foot: true },
+    { key: 'Escape', label: 'back', run: () => void navigate(back), foot: true },
+  ]);
   return (
     <MarginPage marginWidthPx={300} aside={<GradationAside findings={findings} revisionPath={back} />}>
       <PageHead
@@ -71,7 +75,9 @@ export function GradationPage() {
           {asTable ? <GradationTable points={gradation.points} params={params} /> : null}
         </>
       )}
-      <RunningFoot texts={[cautions.findings]} />
+      <RunningFoot
+        texts={check.startingPoint ? [cautions.startingPoint, cautions.findings] : [cautions.findings]}
+      />
     </MarginPage>
   );
 }

@@ -3,6 +3,8 @@ import type { Home } from '#shared/contracts/home';
 import type { ProjectListItem } from '#shared/contracts/projects';
 import { getReturnWorkbook } from '#shared/contracts/returns';
 import { formatDate, formatInstantShort } from '#shared/format/dates';
+import { countInFigures } from '#shared/format/numbers';
+import { editionWords, withLayers } from '#shared/format/section-words';
 import { Note } from '../../../components/ui/note';
 import { hrefOf } from '../../../lib/api';
 import { paths } from '../../../lib/paths';
@@ -15,7 +17,7 @@ export function HomeMargin({ home }: { home: Home }) {
       <FromAgency home={home} />
       <h2>Projects</h2>
       {home.projects.length === 0 ? (
-        <p className="small mute pt-1">None yet. The agency adds your firm to a project.</p>
+        <p className="small mute pt-1">None yet. The agency adds contractors to its projects.</p>
       ) : (
         <ul className="margin-list">
           {home.projects.map((project) => (
@@ -91,11 +93,7 @@ function FromAgency({ home }: { home: Home }) {
 }
 
 function projectWords(project: ProjectListItem): string {
-  const sections = project.sections.map(({ title, edition, layers }) =>
-    layers.length === 0
-      ? `${title}, edition ${edition}`
-      : `${title}, edition ${edition}, with ${layers.join(' and ')}`,
-  );
-  const mixes = `${project.mixes} ${project.mixes === 1 ? 'mix' : 'mixes'}`;
-  return [...(sections.length > 0 ? sections : ['no section confirmed']), mixes].join(' · ');
+  const sections = project.sections.map((section) => editionWords(section) + withLayers(section.layers));
+  const submittals = countInFigures(project.submittals, 'submittal');
+  return [...(sections.length > 0 ? sections : ['no section confirmed']), submittals].join(' · ');
 }

@@ -7,6 +7,7 @@ import { FileDrop } from '../../../components/ui/file-drop';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
+import { announce } from '../../../lib/announce';
 import { handOverFile } from '../../../lib/handed-over-file';
 import { addressOfRevision } from '../../../lib/next-address';
 import { paths } from '../../../lib/paths';
@@ -17,7 +18,7 @@ import { useHome } from '../api/get-home';
 import { CurrentRevision, submitAddress } from './current-revision';
 import { History } from './history';
 import { HomeMargin } from './home-margin';
-import { MixTable } from './mix-table';
+import { MixTable, mixRowId } from './mix-table';
 import '../home.css';
 
 export function HomePage() {
@@ -79,7 +80,10 @@ function useHomeKeys() {
   const at = submittals[index];
   const step = (by: 1 | -1) => {
     const next = submittals[Math.min(Math.max(index + (chosen === null ? 0 : by), 0), submittals.length - 1)];
-    if (next) setCursor(next.id);
+    if (!next) return;
+    setCursor(next.id);
+    document.getElementById(mixRowId(next.id))?.scrollIntoView({ block: 'nearest' });
+    announce(`${next.mixDesignation} revision ${next.revision.number}, ${next.next}`);
   };
   useShortcuts([
     ...(abilities.upload

@@ -46,6 +46,7 @@ export function MixTable({
         {submittals.map((submittal) => (
           <tr
             key={submittal.id}
+            id={mixRowId(submittal.id)}
             className={submittal.id === cursor ? 'cursor' : undefined}
             onFocus={() => onCursor(submittal.id)}
           >
@@ -73,6 +74,10 @@ export function MixTable({
       </tbody>
     </table>
   );
+}
+
+export function mixRowId(submittalId: string): string {
+  return `mix-${submittalId}`;
 }
 
 function Standing({ submittal }: { submittal: SubmittalListItem }) {

@@ -1,4 +1,5 @@
 import type { SubmittalListItem } from '#shared/contracts/submittals';
+import { countInFigures } from '#shared/format/numbers';
 
 export interface Standing {
   /** The part that is set in strong type. */
@@ -28,8 +29,7 @@ export function standingOf(
 
 function draftStanding({ revision, doubts }: Pick<SubmittalListItem, 'revision' | 'doubts'>): Standing {
   if (revision.summary === null) return { strong: '', rest: 'not yet checked' };
-  if (doubts > 0)
-    return { strong: 'not yet submitted', rest: `, ${doubts} ${doubts === 1 ? 'doubt' : 'doubts'}` };
+  if (doubts > 0) return { strong: 'not yet submitted', rest: `, ${countInFigures(doubts, 'doubt')}` };
   return { strong: 'not yet submitted', rest: '' };
 }
 

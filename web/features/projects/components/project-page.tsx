@@ -1,4 +1,5 @@
 import { Link } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import { formatDate } from '#shared/format/dates';
 import { LinkButton } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
@@ -67,7 +68,10 @@ export function ProjectPage({ projectId }: { projectId: string }) {
           <Link to={`${paths.submittals}?project=${project.id}`}>Its submittals</Link>
         </div>
       </PageHead>
-      <SectionHead title="Sections" about="one edition with its layers each; mixes are judged under them" />
+      <SectionHead
+        title="Sections"
+        about="one edition with its layers each; submittals are judged under them"
+      />
       {project.sections.length === 0 ? (
         <EmptyState title="No section is confirmed yet.">
           {project.abilities.confirmSections
@@ -80,7 +84,7 @@ export function ProjectPage({ projectId }: { projectId: string }) {
       {project.abilities.confirmSections ? <SectionProposals project={project} /> : null}
       <SectionHead title="The project states" about="used where a workbook states nothing" />
       {facts.length === 0 ? (
-        <EmptyState title="Nothing is stated for all mixes.">
+        <EmptyState title="Nothing is stated for all submittals.">
           What neither workbook nor project states is asked when a workbook is read.
         </EmptyState>
       ) : (
@@ -95,7 +99,7 @@ export function ProjectPage({ projectId }: { projectId: string }) {
       <RunningFoot
         texts={[
           'A section never moves by itself when a newer edition appears.',
-          'Shipped rule sets are starting points: check them against the agency’s current specification.',
+          ...(project.startingPoint ? [cautions.startingPoint] : []),
         ]}
       />
     </MarginPage>

@@ -1,6 +1,7 @@
 import { Link } from 'react-router-dom';
 import type { ProjectListItem } from '#shared/contracts/projects';
 import { formatDate } from '#shared/format/dates';
+import { editionWords, withLayers } from '#shared/format/section-words';
 import { LinkButton } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { PlainPage } from '../../../components/ui/margin-page';
@@ -46,7 +47,7 @@ export function ProjectsPage() {
               <th scope="col">Letting</th>
               <th scope="col">Sections</th>
               <th scope="col" className="number">
-                Mixes
+                Submittals
               </th>
             </tr>
           </thead>
@@ -84,14 +85,14 @@ function ProjectRow({ project, isAgency }: { project: ProjectListItem; isAgency:
         ) : (
           project.sections.map((section) => (
             <p key={`${section.title} ${section.edition}`}>
-              {section.title}, edition {section.edition}
-              {section.layers.length > 0 ? `, with ${section.layers.join(' and ')}` : ''}
+              {editionWords(section)}
+              {withLayers(section.layers)}
               {section.confirmed ? null : <span className="mute"> · to be confirmed</span>}
             </p>
           ))
         )}
       </td>
-      <td className="number">{project.mixes}</td>
+      <td className="number">{project.submittals}</td>
     </tr>
   );
 }

@@ -1,10 +1,10 @@
 import { useState } from 'react';
 import type { Project } from '#shared/contracts/projects';
+import { sectionWords } from '#shared/format/section-words';
 import { Button } from '../../../components/ui/button';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { SectionHead } from '../../../components/ui/section-head';
 import { asProblem } from '../../../lib/problem';
-import { sectionWords } from '../../../lib/section-words';
 import { useConfirmSection } from '../api/change-section';
 import { editionKey } from '../lib/edition-key';
 import { SectionForm } from './section-form';

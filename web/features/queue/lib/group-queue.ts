@@ -1,4 +1,5 @@
 import type { QueueItem } from '#shared/contracts/queue';
+import { countInFigures } from '#shared/format/numbers';
 
 export interface QueueGroup {
   key: string;
@@ -45,7 +46,7 @@ function byProject(items: readonly QueueItem[]): QueueGroup[] {
 }
 
 function countWords(count: number): string {
-  return `${count} ${count === 1 ? 'submittal' : 'submittals'}`;
+  return countInFigures(count, 'submittal');
 }
 
 function withContractorWords(count: number): string {

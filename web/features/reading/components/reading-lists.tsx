@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { ReadingView } from '#shared/contracts/readings';
+import { countInFigures } from '#shared/format/numbers';
 import { Button } from '../../../components/ui/button';
 import { RichText } from '../../../components/ui/rich-text';
 import { paths } from '../../../lib/paths';
@@ -19,7 +20,7 @@ export function Understood({ params, reading }: { params: RevisionParams; readin
     <section aria-labelledby="understood">
       <div className="side-head">
         <h2 id="understood">Understood</h2>
-        <span>{`${count(readings, 'reading')}, ${count(attributes, 'attribute')}, ${count(documents, 'document')}`}</span>
+        <span>{`${countInFigures(readings, 'reading')}, ${countInFigures(attributes, 'attribute')}, ${countInFigures(documents, 'document')}`}</span>
       </div>
       {reading.understood.length === 0 ? (
         <p className="small mute py-2">
@@ -40,7 +41,7 @@ export function Understood({ params, reading }: { params: RevisionParams; readin
       )}
       {hidden > 0 ? (
         <Button kind="text" onPress={() => setShowsAll(true)}>
-          {`Show ${count(hidden, 'more kind')}`}
+          {`Show ${countInFigures(hidden, 'more kind')}`}
         </Button>
       ) : null}
     </section>
@@ -54,7 +55,7 @@ export function NotUsed({ params, reading }: { params: RevisionParams; reading: 
     <section aria-labelledby="not-used">
       <div className="side-head">
         <h2 id="not-used">Not used</h2>
-        <span>{`${count(reading.unread.length, 'cell')} ${reading.unread.length === 1 ? 'holds' : 'hold'} something`}</span>
+        <span>{countInFigures(reading.unread.length, 'cell holds something', 'cells hold something')}</span>
       </div>
       {groups.length === 0 ? (
         <p className="small mute py-2">Every cell that holds something was used.</p>
@@ -65,7 +66,9 @@ export function NotUsed({ params, reading }: { params: RevisionParams; reading: 
               <CellLink params={params} sheet={group.sheet} cell={group.cell} />
               <span>
                 <RichText>{group.reason}</RichText>
-                {group.text === null ? `; ${count(group.count, 'cell')}` : ` “${shortened(group.text)}”`}
+                {group.text === null
+                  ? `; ${countInFigures(group.count, 'cell')}`
+                  : ` “${shortened(group.text)}”`}
               </span>
             </li>
           ))}
@@ -81,10 +84,6 @@ function CellLink({ params, sheet, cell }: { params: RevisionParams; sheet: stri
       {`${sheet} ${cell}`.trim()}
     </Link>
   );
-}
-
-function count(number: number, word: string): string {
-  return `${number} ${number === 1 ? word : `${word}s`}`;
 }
 
 function shortened(text: string): string {

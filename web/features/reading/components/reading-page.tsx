@@ -1,5 +1,7 @@
 import { useNavigate } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { ReadingView } from '#shared/contracts/readings';
+import { shortHash } from '#shared/format/short-hash';
 import { LinkButton } from '../../../components/ui/button';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
@@ -40,7 +42,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
     if (!reading.abilities.answer) return;
     const { sheet, cell, text } = doubt;
     answers.mutate([{ sheet, cell, text, answer: value }], {
-      onSuccess: (kept) => announce(doubtsLeftWords(kept.doubts)),
+      onSuccess: ({ reading: kept }) => announce(doubtsLeftWords(kept.doubts)),
     });
   };
   const openFindings = useOpenFindings(params);
@@ -95,6 +97,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       texts={[
         `SHA-256 of the file ${shortHash(reading.sha256)}, kept as uploaded`,
         `Read with the mapping ${reading.mappingName}`,
+        cautions.findings,
       ]}
       acts={
         <LinkButton kind="primary" to={paths.revision(params.submittalId, params.number)}>
@@ -155,9 +158,4 @@ function Onward({
 function useOpenFindings({ submittalId, number }: RevisionParams): () => void {
   const navigate = useNavigate();
   return () => void navigate(paths.revision(submittalId, number));
-}
-
-/** "2c9e 04b7 … 81fa" */
-function shortHash(hash: string): string {
-  return `${hash.slice(0, 4)} ${hash.slice(4, 8)} … ${hash.slice(-4)}`;
 }

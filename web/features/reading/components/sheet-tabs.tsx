@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { ReadingView } from '#shared/contracts/readings';
+import { countInFigures } from '#shared/format/numbers';
 import { paths } from '../../../lib/paths';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 
@@ -32,5 +33,5 @@ export function SheetTabs({
 }
 
 function doubtWords(count: number): string {
-  return `${count} ${count === 1 ? 'doubt' : 'doubts'}`;
+  return countInFigures(count, 'doubt');
 }

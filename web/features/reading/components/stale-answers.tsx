@@ -1,4 +1,5 @@
 import type { ReadingView } from '#shared/contracts/readings';
+import { countInFigures } from '#shared/format/numbers';
 import { Mark } from '../../../components/ui/mark';
 
 /** Answers of the workbook before whose cell has changed: they no longer hold and are asked again. */
@@ -8,7 +9,7 @@ export function StaleAnswers({ stale }: { stale: ReadingView['stale'] }) {
     <section aria-labelledby="stale-answers">
       <div className="side-head">
         <h2 id="stale-answers">No longer holds</h2>
-        <span>{stale.length === 1 ? '1 answer' : `${stale.length} answers`}</span>
+        <span>{countInFigures(stale.length, 'answer')}</span>
       </div>
       <ul>
         {stale.map((answer) => (

@@ -1,4 +1,5 @@
 import type { ReadingView } from '#shared/contracts/readings';
+import { countInFigures } from '#shared/format/numbers';
 
 export type ReadingDoubt = ReadingView['doubts'][number];
 
@@ -46,7 +47,7 @@ export function openDoubts(doubts: readonly ReadingDoubt[]): number {
 /** "4 cells, 3 answered" */
 export function doubtCountWords(doubts: readonly ReadingDoubt[]): string {
   if (doubts.length === 0) return 'none';
-  const cells = `${doubts.length} ${doubts.length === 1 ? 'cell' : 'cells'}`;
+  const cells = countInFigures(doubts.length, 'cell');
   const answered = doubts.length - openDoubts(doubts);
   return answered === 0 ? cells : `${cells}, ${answered} answered`;
 }
@@ -55,5 +56,5 @@ export function doubtCountWords(doubts: readonly ReadingDoubt[]): string {
 export function doubtsLeftWords(doubts: readonly ReadingDoubt[]): string {
   const left = openDoubts(doubts);
   if (left === 0) return doubts.length === 0 ? 'Nothing is in doubt.' : 'Every doubt is answered.';
-  return `${left} ${left === 1 ? 'doubt' : 'doubts'} left.`;
+  return `${countInFigures(left, 'doubt')} left.`;
 }

@@ -1,8 +1,11 @@
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
+import { Link, useNavigate } from 'react-router-dom';
+import { cautions } from '#shared/cautions';
 import type { ReturnView } from '#shared/contracts/returns';
 import type { Revision } from '#shared/contracts/submittals';
 import { formatTime } from '#shared/format/dates';
+import { findingFragment } from '#shared/format/finding-key';
+import { Button } from '../../../components/ui/button';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { TwoHalves } from '../../../components/ui/two-halves';
@@ -13,13 +16,14 @@ import { useSession } from '../../../lib/queries/session-query';
 import { useShortcuts } from '../../../lib/shortcuts';
 import { useMakeReturnReady, useSendReturn } from '../api/send-return';
 import { useReturnDraft } from '../hooks/use-return-draft';
+import { type SigningEngineer, useSigningEngineer } from '../hooks/use-signing-engineer';
 import { reasonWanted } from '../lib/return-values';
 import { DecisionFields } from './decision-fields';
 import { DraftProblem } from './draft-problem';
 import { Enclosures } from './enclosures';
 import { LetterInSight } from './letter-in-sight';
 import { LetterItems } from './letter-items';
-import { SendActs } from './send-acts';
+import { SendActs, sendToSignWords } from './send-acts';
 
 export function DecidePage({
   params,
@@ -33,11 +37,14 @@ export function DecidePage({
   const { timeZone } = useSession();
   const draft = useReturnDraft(params, view);
   const { isActing, sendNow, sendToSign, error } = useSending(params, view, draft);
-  useShortcuts(
-    view.abilities.send
+  const signing = useSigningEngineer(view);
+  const edit = useEditNote(params, view);
+  useShortcuts([
+    ...(revision.abilities.note ? [{ key: 'e', label: 'edit the note', foot: true, run: edit }] : []),
+    ...(view.abilities.send
       ? [{ key: 'Enter', ctrl: true, label: 'sign and send', foot: true, run: () => void sendNow() }]
-      : [],
-  );
+      : []),
+  ]);
   return (
     <TwoHalves
       work={
@@ -62,17 +69,83 @@ export function DecidePage({
             canChange={view.abilities.change}
           />
           <Enclosures form={draft.form} canChange={view.abilities.change} />
-          <SendActs view={view} isActing={isActing} onSend={sendNow} onSendToSign={sendToSign} />
+          <SendActs
+            view={view}
+            signing={signing}
+            isActing={isActing}
+            onSend={sendNow}
+            onSendToSign={sendToSign}
+          />
         </>
       }
       sight={
         <>
           <LetterInSight params={params} version={view.version} title="The letter as it will be sent" />
-          <RunningFoot texts={[draftWords(draft.isKeeping, view.savedAt, timeZone)]} />
+          <RunningFoot
+            texts={[draftWords(draft.isKeeping, view.savedAt, timeZone), cautions.findings]}
+            acts={
+              <FootActs
+                view={view}
+                signing={signing}
+                isActing={isActing}
+                onSend={sendNow}
+                onSendToSign={sendToSign}
+              />
+            }
+          />
         </>
       }
     />
   );
+}
+
+function FootActs({
+  view: { abilities, signingEngineers },
+  signing: { engineer },
+  isActing,
+  onSend,
+  onSendToSign,
+}: {
+  view: ReturnView;
+  signing: SigningEngineer;
+  isActing: boolean;
+  onSend: () => void;
+  onSendToSign: (signingEngineerId: string) => void;
+}) {
+  return (
+    <>
+      {abilities.makeReady && signingEngineers.length > 0 ? (
+        <Button
+          kind={abilities.send ? 'outlined' : 'primary'}
+          isDisabled={engineer === null}
+          isPending={isActing}
+          onPress={() => engineer && onSendToSign(engineer.id)}
+        >
+          {sendToSignWords(engineer)}
+        </Button>
+      ) : null}
+      {abilities.send ? (
+        <Button kind="primary" onPress={onSend} isPending={isActing}>
+          Sign and send
+        </Button>
+      ) : null}
+    </>
+  );
+}
+
+/** Notes are written where the finding stands: E goes there from the item in focus, with its note open. */
+function useEditNote(params: RevisionParams, view: ReturnView): () => void {
+  const navigate = useNavigate();
+  return () => {
+    const entry = document.activeElement?.closest<HTMLElement>('[data-item]');
+    const item = view.items.find(({ key }) => key === entry?.dataset.item);
+    if (!item) {
+      announce('Go to a finding of the letter first.');
+      return;
+    }
+    const address = `${paths.revision(params.submittalId, params.number)}#${findingFragment(item.finding)}`;
+    void navigate(address, { state: { editNote: true } });
+  };
 }
 
 type Draft = ReturnType<typeof useReturnDraft>;

@@ -87,7 +87,7 @@ function LetterItem({
   const address = `${paths.revision(params.submittalId, params.number)}#${findingFragment(finding)}`;
   const { title, rest } = findingBrief(finding);
   return (
-    <li className="letter-item">
+    <li className="letter-item" data-item={item.key}>
       <Checkbox
         label={`Include ${finding.clause ?? ''} ${finding.title}`}
         isSelected={isIncluded}

@@ -1,25 +1,24 @@
-import { useState } from 'react';
 import type { ReturnView } from '#shared/contracts/returns';
+import { countInFigures } from '#shared/format/numbers';
 import { Button } from '../../../components/ui/button';
 import { SelectField } from '../../../components/ui/select-field';
-import { onlyOne } from '../../../lib/only-one';
+import type { SigningEngineer } from '../hooks/use-signing-engineer';
 
 /** A signing engineer signs and sends; a reviewer hands the return on. */
 export function SendActs({
   view,
+  signing: { engineer, chosen, choose },
   isActing,
   onSend,
   onSendToSign,
 }: {
   view: ReturnView;
+  signing: SigningEngineer;
   isActing: boolean;
   onSend: () => void;
   onSendToSign: (signingEngineerId: string) => void;
 }) {
   const { signingEngineers, abilities, internalNotes } = view;
-  const sole = onlyOne(signingEngineers);
-  const [chosen, setChosen] = useState<string | null>(sole?.id ?? null);
-  const engineer = signingEngineers.find(({ id }) => id === chosen) ?? null;
   return (
     <div className="send-acts">
       {view.state === 'ready to sign' ? (
@@ -28,7 +27,13 @@ export function SendActs({
         </p>
       ) : null}
       {abilities.send ? (
-        <Button kind="primary" keyHint="Ctrl Enter" onPress={onSend} isPending={isActing}>
+        <Button
+          kind="primary"
+          className="acts-in-foot"
+          keyHint="Ctrl Enter"
+          onPress={onSend}
+          isPending={isActing}
+        >
           Sign and send
         </Button>
       ) : null}
@@ -39,17 +44,18 @@ export function SendActs({
           placeholder="signing engineer"
           choices={signingEngineers.map(({ id, name }) => ({ value: id, label: name }))}
           value={chosen}
-          onChange={setChosen}
+          onChange={choose}
         />
       ) : null}
       {abilities.makeReady && signingEngineers.length > 0 ? (
         <Button
           kind={abilities.send ? 'outlined' : 'primary'}
+          className="acts-in-foot"
           isDisabled={engineer === null}
           isPending={isActing}
           onPress={() => engineer && onSendToSign(engineer.id)}
         >
-          {engineer ? `Send to ${engineer.name} to sign` : 'Send to a signing engineer'}
+          {sendToSignWords(engineer)}
         </Button>
       ) : null}
       {abilities.makeReady && signingEngineers.length === 0 ? (
@@ -62,7 +68,11 @@ export function SendActs({
   );
 }
 
+export function sendToSignWords(engineer: SigningEngineer['engineer']): string {
+  return engineer ? `Send to ${engineer.name} to sign` : 'Send to a signing engineer';
+}
+
 function internalWords(count: number): string {
   if (count === 0) return '';
-  return count === 1 ? '1 internal note stays here.' : `${count} internal notes stay here.`;
+  return `${countInFigures(count, 'internal note stays', 'internal notes stay')} here.`;
 }

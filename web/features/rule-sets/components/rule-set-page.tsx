@@ -3,6 +3,7 @@ import { useEffect } from 'react';
 import { useLocation, useParams, useSearchParams } from 'react-router-dom';
 import { cautions } from '#shared/cautions';
 import type { RuleSetView } from '#shared/contracts/rule-sets';
+import { countInFigures } from '#shared/format/numbers';
 import { PageHead } from '../../../components/ui/page-head';
 import { QuantityTable } from '../../../components/ui/quantity-table';
 import { RunningFoot } from '../../../components/ui/running-foot';
@@ -43,7 +44,7 @@ export function RuleSetPage() {
           />
           {groups.map((group) => (
             <section key={group.section} aria-label={group.section}>
-              <SectionHead title={group.section} about={`${group.rules.length} rules`} />
+              <SectionHead title={group.section} about={countInFigures(group.rules.length, 'rule')} />
               {group.rules.map((rule) => (
                 <RuleText key={rule.id} rule={rule} tables={view.tables} />
               ))}

@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import { type Revision, startRevision } from '#shared/contracts/submittals';
+import { editionWords } from '#shared/format/section-words';
 import { Button } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { FormChoice } from '../../../components/ui/form-choice';
@@ -31,7 +32,7 @@ export function NextRevisionPage({ submittalId }: { submittalId: string }) {
         }
         title={`Upload revision ${next}`}
         rest={latest.mixDesignation}
-        lede={`It is checked as a draft against ${latest.section.base.title}, edition ${latest.section.base.edition}. Nothing is sent until you submit.`}
+        lede={`It is checked as a draft against ${editionWords(latest.section.base)}. Nothing is sent until you submit.`}
       />
       {latest.abilities.startRevision ? (
         <NextRevisionForm latest={latest} />

@@ -3,6 +3,7 @@ import { useEffect, useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
 import type { Project } from '#shared/contracts/projects';
 import { uploadSubmittal } from '#shared/contracts/submittals';
+import { sectionWords } from '#shared/format/section-words';
 import { limits } from '#shared/limits';
 import { Button } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
@@ -19,7 +20,6 @@ import { paths } from '../../../lib/paths';
 import { asProblem } from '../../../lib/problem';
 import { useLaboratories } from '../../../lib/queries/laboratories-query';
 import { projectQuery, useProjects } from '../../../lib/queries/projects-query';
-import { sectionWords } from '../../../lib/section-words';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useUploadSubmittal } from '../api/upload-workbook';
 import { ChosenWorkbook } from './chosen-workbook';
@@ -35,7 +35,7 @@ export function UploadPage({ projectId }: { projectId: string | null }) {
         lede="It becomes revision 0 of a new submittal, as a draft. Nothing is sent until you submit."
       />
       {projects.length === 0 ? (
-        <EmptyState title="Your firm is on no project yet.">
+        <EmptyState title="No project names you as a contractor yet.">
           The agency adds contractors to its projects. <Link to={paths.projects}>See the projects</Link>
         </EmptyState>
       ) : laboratories.length === 0 ? (

@@ -77,7 +77,7 @@ function Replacement({
       <ChosenWorkbook file={file} onFile={(chosen) => void send(chosen)} isDisabled={isSending} />
       <p className="small mute pt-2">
         The new workbook takes the place of the present one; revision {revision.number} keeps its number. The
-        replaced file stays with your firm only.{' '}
+        replaced file stays with you only.{' '}
         <a href={revision.section.templateHref} download>
           Template of this section
         </a>
