@@ -42,6 +42,5 @@ export async function presentSession(
     today: dateOfInstant(deps.now().toISOString(), timeZone),
     timeZone,
     abilities: sessionAbilities(active, { mailIsCaught: deps.settings.smtpUrl === null }),
-    singleKeys: true,
   };
 }

@@ -29,7 +29,7 @@ export const getQueue = endpoint({
   path: '/api/queue',
   summary: 'The review queue of the active agency by due date',
   query: z.strictObject({
-    who: z.enum(['everyone', 'mine', 'unassigned', 'to sign']).default('everyone'),
+    who: z.enum(['everyone', 'mine', 'not taken', 'to sign']).default('everyone'),
     by: z.enum(['due', 'project']).default('due'),
   }),
   response: z.strictObject({
@@ -38,7 +38,7 @@ export const getQueue = endpoint({
     counts: z.strictObject({
       everyone: z.number().int(),
       mine: z.number().int(),
-      unassigned: z.number().int(),
+      notTaken: z.number().int(),
       toSign: z.number().int(),
       late: z.number().int(),
       withContractors: z.number().int(),

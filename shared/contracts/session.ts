@@ -38,7 +38,6 @@ export const sessionSchema = z.strictObject({
     confirmSections: z.boolean(),
     seeCaughtMail: z.boolean(),
   }),
-  singleKeys: z.boolean(),
 });
 
 export const getSession = endpoint({

@@ -74,9 +74,9 @@ describe('the submittals of the demo', () => {
     expect(body.submittals).toHaveLength(2);
   });
 
-  it('put one unassigned, two with Ines Tordoff and one with a contractor into the queue', async () => {
+  it('put one that nobody took, two with Ines Tordoff and one with a contractor into the queue', async () => {
     const { body } = await (await as('Ines Tordoff')).get('/api/queue').expect(200);
-    expect(body.counts).toMatchObject({ everyone: 3, mine: 2, unassigned: 1, withContractors: 1, late: 0 });
+    expect(body.counts).toMatchObject({ everyone: 3, mine: 2, notTaken: 1, withContractors: 1, late: 0 });
   });
 
   it('have a draft with doubts and a revision in review that moved', async () => {

@@ -73,12 +73,12 @@ describe('the review queue', () => {
       ['Q-NEXT', 'next week and after', '2026-03-23', 7],
       ['Q-BACK', 'with the contractor', '2026-03-16', null],
     ]);
-    expect(counts).toEqual({ everyone: 3, mine: 1, unassigned: 1, toSign: 0, late: 1, withContractors: 1 });
+    expect(counts).toEqual({ everyone: 3, mine: 1, notTaken: 1, toSign: 0, late: 1, withContractors: 1 });
   });
 
   it('narrows to mine and to what nobody has taken, and orders by project', async () => {
     expect(names((await queue('?who=mine')).items)).toEqual(['Q-WEEK']);
-    expect(names((await queue('?who=unassigned')).items)).toEqual(['Q-NEXT']);
+    expect(names((await queue('?who=not+taken')).items)).toEqual(['Q-NEXT']);
     expect(names((await queue('?by=project')).items)).toEqual(['Q-NEXT', 'Q-LATE', 'Q-WEEK', 'Q-BACK']);
     expect((await ines.get('/api/queue?who=nobody')).status).toBe(422);
   });
@@ -128,7 +128,7 @@ describe('the review queue', () => {
     expect((await queue()).counts.withContractors).toBe(1);
     expectStatus(await submit(dele, { submittalId: back.submittalId, number: 1 }), 200);
     const after = await queue();
-    expect(after.counts).toMatchObject({ everyone: 4, withContractors: 0, unassigned: 2 });
+    expect(after.counts).toMatchObject({ everyone: 4, withContractors: 0, notTaken: 2 });
   });
 });
 

@@ -27,7 +27,6 @@ export function aSession(overrides: Partial<Session> = {}): Session {
       confirmSections: false,
       seeCaughtMail: false,
     },
-    singleKeys: true,
     ...overrides,
   } satisfies Session);
 }

@@ -42,7 +42,7 @@ test('an empty database gets its agency, people, contractor, project and section
   await administrator.getByText('reviewer', { exact: true }).last().click();
   await administrator.getByRole('button', { name: 'Send the invitation' }).first().click();
   await expect(administrator.getByText('piers.holt@mere-fen.example')).toBeVisible();
-  await administrator.getByRole('textbox', { name: 'Name of the firm' }).fill('Staithe Surfacing');
+  await administrator.getByRole('textbox', { name: 'Name of the contractor' }).fill('Staithe Surfacing');
   await administrator.getByRole('textbox', { name: 'Administrator', exact: true }).fill('Nell Rowan');
   await administrator
     .getByRole('textbox', { name: /Administrator.s e-mail/ })

@@ -35,7 +35,7 @@ export async function seedSubmittals(deps: Deps): Promise<void> {
   await returnedWithDraft(desk, day);
   await inReview(desk, day);
   await underWay(desk, day);
-  await unassigned(desk, day);
+  await notTaken(desk, day);
   await inDoubt(desk, new Date(deps.now().getTime() - 40 * 60_000).toISOString());
 }
 
@@ -217,7 +217,7 @@ async function review(
   await desk.sendReturn(day(sent), { by: 'Mairi Halloran', place, ...decision });
 }
 
-async function unassigned(desk: DemoDesk, day: Day): Promise<void> {
+async function notTaken(desk: DemoDesk, day: Day): Promise<void> {
   const place = await desk.upload(day(1), {
     by: 'Tove Hallam',
     project: 'CV-2031',

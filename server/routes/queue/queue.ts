@@ -21,16 +21,16 @@ export const getQueueRoute = route(getQueue, async ({ deps, query, actor }) => {
   const entries = entriesOf(await listQueue(deps.db, actor.organisationId), desk);
   const open = entries.filter(({ item }) => item.group !== 'with the contractor');
   const mine = open.filter(({ row }) => row.revision.takenById === actor.personId);
-  const unassigned = open.filter(({ row }) => row.revision.state === 'submitted');
+  const notTaken = open.filter(({ row }) => row.revision.state === 'submitted');
   const toSign = open.filter(({ row }) => isToSign(row, actor));
-  const chosen = { everyone: entries, mine, unassigned, 'to sign': toSign }[query.who];
+  const chosen = { everyone: entries, mine, 'not taken': notTaken, 'to sign': toSign }[query.who];
   return {
     today: desk.today,
     items: inOrder(chosen, query.by).map(({ item }) => item),
     counts: {
       everyone: open.length,
       mine: mine.length,
-      unassigned: unassigned.length,
+      notTaken: notTaken.length,
       toSign: toSign.length,
       late: open.filter(({ item }) => item.group === 'late').length,
       withContractors: entries.length - open.length,

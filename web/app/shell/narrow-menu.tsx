@@ -6,7 +6,7 @@ import { navigationOf } from './navigation';
 import { PersonMenuItems } from './person-menu-items';
 import { useChooseOrganisation } from './use-choose-organisation';
 
-/** Below 760 px the head keeps the wordmark and the person's name; all else is one list. */
+/** Below 1024 px the head keeps the wordmark and this one list, headed by the person's name; see narrow.css. */
 export function NarrowMenu({ session }: { session: Session }) {
   const choose = useChooseOrganisation();
   return (

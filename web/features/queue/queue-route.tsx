@@ -17,7 +17,7 @@ export function Component() {
 function filtersOf(search: URLSearchParams): QueueFilters {
   const who = search.get('who');
   return {
-    who: who === 'mine' || who === 'unassigned' || who === 'to sign' ? who : 'everyone',
+    who: who === 'mine' || who === 'not taken' || who === 'to sign' ? who : 'everyone',
     by: search.get('by') === 'project' ? 'project' : 'due',
   };
 }

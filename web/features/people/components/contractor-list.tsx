@@ -14,10 +14,10 @@ export function ContractorList() {
   const { contractors, abilities } = useContractors();
   return (
     <section>
-      <SectionHead title="Contractors" about="firms that submit mixes on the agency’s projects" />
+      <SectionHead title="Contractors" about="they submit mixes on the agency’s projects" />
       {contractors.length === 0 ? (
         <EmptyState title="No contractor works with the agency yet.">
-          Add a firm; its administrator is invited by mail and invites its own people.
+          Add one; its administrator is invited by mail and invites its own people.
         </EmptyState>
       ) : (
         <table className="table table-stacked">
@@ -28,9 +28,6 @@ export function ContractorList() {
               <th scope="col" className="number">
                 Projects
               </th>
-              <th scope="col" className="number">
-                People
-              </th>
               <th scope="col">Administrator</th>
             </tr>
           </thead>
@@ -39,8 +36,7 @@ export function ContractorList() {
               <tr key={contractor.id}>
                 <th scope="row">{contractor.name}</th>
                 <td className="number">{contractor.projects}</td>
-                <td className="number">{contractor.people}</td>
-                <td>{contractor.invited ? 'invited, not yet accepted' : 'signed up'}</td>
+                <td>{administratorWords(contractor)}</td>
               </tr>
             ))}
           </tbody>
@@ -49,6 +45,11 @@ export function ContractorList() {
       {abilities.add ? <AddContractor /> : null}
     </section>
   );
+}
+
+function administratorWords({ joined, invited }: { joined: boolean; invited: boolean }): string {
+  if (joined) return 'signed up';
+  return invited ? 'invited, not yet accepted' : 'not invited';
 }
 
 const empty = { name: '', administrator: { name: '', email: '' } };
@@ -71,7 +72,7 @@ function AddContractor() {
       {problem ? <ProblemNotice problem={problem} unaffected="What you entered is kept." /> : null}
       <form onSubmit={onSubmit} noValidate className="form-column">
         <div className="fieldset">
-          <FormText control={control} name="name" label="Name of the firm" />
+          <FormText control={control} name="name" label="Name of the contractor" />
           <FormText control={control} name="administrator.name" label="Administrator" />
           <FormText
             control={control}

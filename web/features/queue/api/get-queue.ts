@@ -3,7 +3,7 @@ import { getQueue } from '#shared/contracts/queue';
 import { call } from '../../../lib/api';
 
 export interface QueueFilters {
-  who: 'everyone' | 'mine' | 'unassigned' | 'to sign';
+  who: 'everyone' | 'mine' | 'not taken' | 'to sign';
   by: 'due' | 'project';
 }
 

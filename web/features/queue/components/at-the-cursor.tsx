@@ -37,11 +37,16 @@ export function AtTheCursor({
       {query.error ? <ProblemNotice problem={asProblem(query.error)} /> : null}
       {query.data ? <Details detail={query.data} /> : null}
       <div className="acts pt-4">
-        <LinkButton kind="primary" keyHint="Enter" to={paths.revision(item.submittalId, item.revision)}>
+        <LinkButton
+          kind="primary"
+          className="acts-in-foot"
+          keyHint="Enter"
+          to={paths.revision(item.submittalId, item.revision)}
+        >
           Open the findings
         </LinkButton>
         {item.abilities.take ? (
-          <Button onPress={onTake} isPending={isChanging} keyHint="A">
+          <Button className="acts-in-foot" onPress={onTake} isPending={isChanging} keyHint="A">
             Take for review
           </Button>
         ) : null}

@@ -10,12 +10,12 @@ export function QueueFilterLine({
 }: {
   ref: Ref<HTMLElement>;
   filters: QueueFilters;
-  counts: { mine: number; unassigned: number; toSign: number };
+  counts: { mine: number; notTaken: number; toSign: number };
 }) {
   const who: { value: QueueFilters['who']; label: string }[] = [
     { value: 'everyone', label: 'Everyone’s' },
     { value: 'mine', label: `Mine, ${counts.mine}` },
-    { value: 'unassigned', label: `Unassigned, ${counts.unassigned}` },
+    { value: 'not taken', label: `Not taken, ${counts.notTaken}` },
     { value: 'to sign', label: `To sign, ${counts.toSign}` },
   ];
   const by: { value: QueueFilters['by']; label: string }[] = [

@@ -3,6 +3,7 @@ import { useNavigate } from 'react-router-dom';
 import { cautions } from '#shared/cautions';
 import type { QueueItem } from '#shared/contracts/queue';
 import { formatDateWithWeekday } from '#shared/format/dates';
+import { Button, LinkButton } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
@@ -67,9 +68,29 @@ export function QueuePage({ filters }: { filters: QueueFilters }) {
       ) : (
         <QueueTable groups={groups} today={today} cursor={item} onCursor={setChosen} />
       )}
-      <RunningFoot texts={[`${reviewWorkingDays} working days from receipt.`, cautions.findings]} />
+      <RunningFoot
+        texts={[`${reviewWorkingDays} working days from receipt.`, cautions.findings]}
+        acts={item ? <FootActs item={item} onTake={() => take.mutate(item, { onError: toTheTop })} /> : null}
+      />
     </MarginPage>
   );
+}
+
+/** On phones the acts of the row that was tapped last. */
+function FootActs({ item, onTake }: { item: QueueItem; onTake: () => void }) {
+  return (
+    <>
+      {item.abilities.take ? <Button onPress={onTake}>Take for review</Button> : null}
+      <LinkButton kind="primary" to={paths.revision(item.submittalId, item.revision)}>
+        Open {item.mixDesignation} r{item.revision}
+      </LinkButton>
+    </>
+  );
+}
+
+/** The refusal stands at the head of the page, out of sight of the foot. */
+function toTheTop(): void {
+  window.scrollTo({ top: 0 });
 }
 
 function useQueueKeys(options: {
@@ -99,7 +120,7 @@ function useQueueKeys(options: {
     },
     {
       key: 'a',
-      label: 'assign to me',
+      label: 'take',
       foot: true,
       run: () => item?.abilities.take && onTake(item),
     },
@@ -116,7 +137,7 @@ function emptyTitle(who: QueueFilters['who']): string {
   const titles: Record<QueueFilters['who'], string> = {
     everyone: 'No revision is waiting for a decision.',
     mine: 'You have taken no revision.',
-    unassigned: 'Every submitted revision has a reviewer.',
+    'not taken': 'Every submitted revision has a reviewer.',
     'to sign': 'No return is ready to sign.',
   };
   return titles[who];

@@ -106,7 +106,7 @@ function QueueRow({
       </td>
       <SummaryCells summary={item.summary} />
       <td className="queue-reviewer">
-        {item.reviewer?.name ?? <span className="mute">unassigned</span>}
+        {item.reviewer?.name ?? <span className="mute">not taken</span>}
         {item.returnState === 'ready to sign' ? <small>ready to sign</small> : null}
       </td>
     </tr>

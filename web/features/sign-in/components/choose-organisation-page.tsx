@@ -35,7 +35,7 @@ export function ChooseOrganisationPage() {
       {problem ? <ProblemNotice problem={problem} /> : null}
       {memberships.length === 0 ? (
         <EmptyState title="You belong to no organisation.">
-          Ask an administrator of your agency or firm to invite you.
+          Ask an administrator of your agency or contractor to invite you.
         </EmptyState>
       ) : (
         <table className="table table-head-over table-stacked form-column">

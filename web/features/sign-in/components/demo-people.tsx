@@ -22,7 +22,7 @@ export function DemoPeople({
       <SectionHead
         id="demo-people"
         title="People of the demo"
-        about="Every person, firm and project here is invented."
+        about="Every person, organisation and project here is invented."
       />
       <table className="table table-stacked">
         <thead>
