@@ -8,7 +8,7 @@ import {
   tableFeatures,
   useTable,
 } from '@tanstack/react-table';
-import { type ReactNode, useMemo } from 'react';
+import { Fragment, type ReactNode, useMemo } from 'react';
 
 const features = tableFeatures({
   rowSortingFeature,
@@ -26,6 +26,8 @@ export interface DataColumn<Row> {
   number?: boolean;
   /** The cell that names its row. */
   rowHeader?: boolean;
+  /** The head is for screen readers alone, as over acts. */
+  hideHeader?: boolean;
   className?: string;
 }
 
@@ -35,12 +37,17 @@ export function DataTable<Row extends object>({
   columns,
   rows,
   rowKey,
+  rowAfter,
+  className = '',
   initialSort = [],
 }: {
   caption: string;
   columns: readonly DataColumn<Row>[];
   rows: readonly Row[];
   rowKey: (row: Row) => string;
+  /** What opens under a row over its whole width; nothing where it is null. */
+  rowAfter?: (row: Row) => ReactNode;
+  className?: string;
   initialSort?: SortingState;
 }) {
   const definitions = useMemo(() => columns.map((column) => definitionOf<Row>(column)), [columns]);
@@ -56,7 +63,7 @@ export function DataTable<Row extends object>({
   const byId = new Map(columns.map((column) => [column.id, column]));
   return (
     <div className="sideways">
-      <table className="table">
+      <table className={`table table-sorted ${className}`.trim()}>
         <caption className="hidden-text">{caption}</caption>
         <thead>
           <tr>
@@ -73,7 +80,9 @@ export function DataTable<Row extends object>({
                     <SortSign direction={column.getIsSorted()} />
                   </button>
                 ) : (
-                  byId.get(column.id)?.header
+                  <span className={byId.get(column.id)?.hideHeader ? 'hidden-text' : undefined}>
+                    {byId.get(column.id)?.header}
+                  </span>
                 )}
               </th>
             ))}
@@ -81,24 +90,36 @@ export function DataTable<Row extends object>({
         </thead>
         <tbody>
           {table.getRowModel().rows.map((row) => (
-            <tr key={row.id}>
-              {columns.map((column) => {
-                const Cell = column.rowHeader ? 'th' : 'td';
-                return (
-                  <Cell
-                    key={column.id}
-                    className={classesOf(column)}
-                    {...(column.rowHeader ? { scope: 'row' } : {})}
-                  >
-                    {column.cell(row.original)}
-                  </Cell>
-                );
-              })}
-            </tr>
+            <Fragment key={row.id}>
+              <tr>
+                {columns.map((column) => {
+                  const Cell = column.rowHeader ? 'th' : 'td';
+                  return (
+                    <Cell
+                      key={column.id}
+                      className={classesOf(column)}
+                      {...(column.rowHeader ? { scope: 'row' } : {})}
+                    >
+                      {column.cell(row.original)}
+                    </Cell>
+                  );
+                })}
+              </tr>
+              <RowAfter columnCount={columns.length}>{rowAfter?.(row.original)}</RowAfter>
+            </Fragment>
           ))}
         </tbody>
       </table>
     </div>
+  );
+}
+
+function RowAfter({ columnCount, children }: { columnCount: number; children: ReactNode }) {
+  if (children === null || children === undefined) return null;
+  return (
+    <tr>
+      <td colSpan={columnCount}>{children}</td>
+    </tr>
   );
 }
 

@@ -1,74 +1,91 @@
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import type { Person } from '#shared/contracts/people';
 import { type Role, rolesOf } from '#shared/contracts/roles';
 import { Button } from '../../../components/ui/button';
 import { CheckboxLine } from '../../../components/ui/checkbox';
+import { type DataColumn, DataTable } from '../../../components/ui/data-table';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { asProblem } from '../../../lib/problem';
 import { useSession } from '../../../lib/queries/session-query';
 import { usePeople, usePeopleActs } from '../api/people';
 
+/** Which person's form is open under their row. */
+interface Open {
+  membershipId: string;
+  form: 'roles' | 'removal';
+}
+
 export function PersonTable() {
   const { people } = usePeople();
+  const [open, setOpen] = useState<Open | null>(null);
+  const columns = useMemo(() => columnsFor(setOpen), []);
+  const close = () => setOpen(null);
   return (
-    <table className="table table-head-over table-stacked">
-      <caption className="hidden-text">People and their roles</caption>
-      <thead>
-        <tr>
-          <th scope="col">Name</th>
-          <th scope="col">Roles</th>
-          <th scope="col">E-mail address</th>
-          <th scope="col" className="number">
-            <span className="hidden-text">Acts</span>
-          </th>
-        </tr>
-      </thead>
-      <tbody>
-        {people.map((person) => (
-          <PersonRow key={person.membershipId} person={person} />
-        ))}
-      </tbody>
-    </table>
+    <DataTable
+      caption="People and their roles"
+      className="table-head-over table-stacked"
+      columns={columns}
+      rows={people}
+      rowKey={(person) => person.membershipId}
+      rowAfter={(person) => {
+        if (open?.membershipId !== person.membershipId) return null;
+        return open.form === 'roles' ? (
+          <RoleForm person={person} onDone={close} />
+        ) : (
+          <Removal person={person} onDone={close} />
+        );
+      }}
+    />
   );
 }
 
-type Open = 'roles' | 'removal' | null;
+function columnsFor(onOpen: (open: Open) => void): DataColumn<Person>[] {
+  return [
+    { id: 'name', header: 'Name', rowHeader: true, sortBy: ({ name }) => name, cell: ({ name }) => name },
+    {
+      id: 'roles',
+      header: 'Roles',
+      sortBy: ({ roles }) => roles.join(', '),
+      cell: ({ roles }) => roles.join(', '),
+    },
+    {
+      id: 'email',
+      header: 'E-mail address',
+      className: 'mute',
+      sortBy: ({ email }) => email,
+      cell: ({ email }) => email,
+    },
+    {
+      id: 'acts',
+      header: 'Acts',
+      hideHeader: true,
+      number: true,
+      cell: (person) => <PersonActs person={person} onOpen={onOpen} />,
+    },
+  ];
+}
 
-function PersonRow({ person }: { person: Person }) {
-  const [open, setOpen] = useState<Open>(null);
+function PersonActs({ person, onOpen }: { person: Person; onOpen: (open: Open) => void }) {
+  const { membershipId, name, abilities } = person;
   return (
     <>
-      <tr>
-        <th scope="row">{person.name}</th>
-        <td>{person.roles.join(', ')}</td>
-        <td className="mute">{person.email}</td>
-        <td className="number">
-          {person.abilities.change ? (
-            <Button
-              kind="text"
-              onPress={() => setOpen('roles')}
-              aria-label={`Change the roles of ${person.name}`}
-            >
-              Change roles
-            </Button>
-          ) : null}{' '}
-          {person.abilities.remove ? (
-            <Button kind="text" onPress={() => setOpen('removal')} aria-label={`Take ${person.name} out`}>
-              Take out
-            </Button>
-          ) : null}
-        </td>
-      </tr>
-      {open ? (
-        <tr>
-          <td colSpan={4}>
-            {open === 'roles' ? (
-              <RoleForm person={person} onDone={() => setOpen(null)} />
-            ) : (
-              <Removal person={person} onDone={() => setOpen(null)} />
-            )}
-          </td>
-        </tr>
+      {abilities.change ? (
+        <Button
+          kind="text"
+          onPress={() => onOpen({ membershipId, form: 'roles' })}
+          aria-label={`Change the roles of ${name}`}
+        >
+          Change roles
+        </Button>
+      ) : null}{' '}
+      {abilities.remove ? (
+        <Button
+          kind="text"
+          onPress={() => onOpen({ membershipId, form: 'removal' })}
+          aria-label={`Take ${name} out`}
+        >
+          Take out
+        </Button>
       ) : null}
     </>
   );

@@ -1,8 +1,10 @@
+import { useMemo } from 'react';
 import { Link } from 'react-router-dom';
 import { cautions } from '#shared/cautions';
 import type { SubmittalListItem } from '#shared/contracts/submittals';
 import { formatDateShort, formatInstantShort } from '#shared/format/dates';
 import { Button, LinkButton } from '../../../components/ui/button';
+import { type DataColumn, DataTable } from '../../../components/ui/data-table';
 import { EmptyState } from '../../../components/ui/empty-state';
 import { PlainPage } from '../../../components/ui/margin-page';
 import { OutcomeTally } from '../../../components/ui/outcome-tally';
@@ -30,10 +32,11 @@ export function SubmittalsPage({ filters }: { filters: SubmittalFilters }) {
       <SubmittalFilter filters={filters} />
       {items.length === 0 ? <NoSubmittals filters={filters} /> : <SubmittalTable items={items} />}
       {hasMore ? (
-        <div className="pt-3">
+        <div className="acts pt-3">
           <Button onPress={() => void showMore()} isPending={isLoadingMore}>
             Show more
           </Button>
+          <span className="small mute">A column head sorts those that are shown.</span>
         </div>
       ) : null}
       <RunningFoot texts={[cautions.findings]} />
@@ -64,51 +67,87 @@ function NoSubmittals({ filters }: { filters: SubmittalFilters }) {
 function SubmittalTable({ items }: { items: readonly SubmittalListItem[] }) {
   const { active, timeZone } = useSession();
   const isAgency = active?.kind === 'agency';
+  const columns = useMemo(() => columnsFor({ isAgency, timeZone }), [isAgency, timeZone]);
   return (
-    <table className="table table-head-over submittal-table">
-      <caption className="hidden-text">Submittals, newest change first</caption>
-      <thead>
-        <tr>
-          <th scope="col">Mix</th>
-          <th scope="col">{isAgency ? 'Contractor and project' : 'Project'}</th>
-          <th scope="col">Stands at</th>
-          <th scope="col">Outcomes</th>
-          <th scope="col">Next</th>
-          <th scope="col" className="number">
-            Changed
-          </th>
-        </tr>
-      </thead>
-      <tbody>
-        {items.map((item) => (
-          <tr key={item.id}>
-            <th scope="row">
-              <Link className="plain" to={addressOfRevision(item.id, item.revision)}>
-                {item.mixDesignation} <span>r{item.revision.number}</span>
-              </Link>
-              <small>{item.description}</small>
-            </th>
-            <td className="submittal-project">
-              {isAgency ? <span>{item.contractor.name}</span> : null}
-              <Link className="plain mute" to={paths.project(item.project.id)}>
-                {item.project.number} {item.project.title}
-              </Link>
-            </td>
-            <td>
-              <b>{item.revision.disposition ?? item.revision.state}</b>
-              {item.standingApproval && item.standingApproval.revision !== item.revision.number ? (
-                <small>
-                  r{item.standingApproval.revision} stands {item.standingApproval.disposition},{' '}
-                  {formatDateShort(item.standingApproval.on)}
-                </small>
-              ) : null}
-            </td>
-            <td>{item.revision.summary ? <OutcomeTally summary={item.revision.summary} /> : ''}</td>
-            <td>{item.next}</td>
-            <td className="number submittal-changed">{formatInstantShort(item.updatedAt, timeZone)}</td>
-          </tr>
-        ))}
-      </tbody>
-    </table>
+    <DataTable
+      caption="Submittals, newest change first until sorted otherwise"
+      className="table-head-over submittal-table"
+      columns={columns}
+      rows={items}
+      rowKey={(item) => item.id}
+    />
+  );
+}
+
+function columnsFor({
+  isAgency,
+  timeZone,
+}: {
+  isAgency: boolean;
+  timeZone: string;
+}): DataColumn<SubmittalListItem>[] {
+  return [
+    {
+      id: 'mix',
+      header: 'Mix',
+      rowHeader: true,
+      sortBy: (item) => item.mixDesignation,
+      cell: (item) => (
+        <>
+          <Link className="plain" to={addressOfRevision(item.id, item.revision)}>
+            {item.mixDesignation} <span>r{item.revision.number}</span>
+          </Link>
+          <small>{item.description}</small>
+        </>
+      ),
+    },
+    {
+      id: 'project',
+      header: isAgency ? 'Contractor and project' : 'Project',
+      className: 'submittal-project',
+      sortBy: ({ contractor, project }) => `${isAgency ? contractor.name : ''} ${project.number}`,
+      cell: ({ contractor, project }) => (
+        <>
+          {isAgency ? <span>{contractor.name}</span> : null}
+          <Link className="plain mute" to={paths.project(project.id)}>
+            {project.number} {project.title}
+          </Link>
+        </>
+      ),
+    },
+    {
+      id: 'stands',
+      header: 'Stands at',
+      sortBy: ({ revision }) => revision.disposition ?? revision.state,
+      cell: (item) => <StandsAt item={item} />,
+    },
+    {
+      id: 'outcomes',
+      header: 'Outcomes',
+      cell: ({ revision }) => (revision.summary ? <OutcomeTally summary={revision.summary} /> : ''),
+    },
+    { id: 'next', header: 'Next', sortBy: (item) => item.next, cell: (item) => item.next },
+    {
+      id: 'changed',
+      header: 'Changed',
+      number: true,
+      className: 'submittal-changed',
+      sortBy: (item) => item.updatedAt,
+      cell: (item) => formatInstantShort(item.updatedAt, timeZone),
+    },
+  ];
+}
+
+function StandsAt({ item: { revision, standingApproval } }: { item: SubmittalListItem }) {
+  return (
+    <>
+      <b>{revision.disposition ?? revision.state}</b>
+      {standingApproval && standingApproval.revision !== revision.number ? (
+        <small>
+          r{standingApproval.revision} stands {standingApproval.disposition},{' '}
+          {formatDateShort(standingApproval.on)}
+        </small>
+      ) : null}
+    </>
   );
 }
