@@ -1,10 +1,6 @@
 import { covarianceFactor, covarianceOf, deviationAlong } from '../numerics/covariance-factor';
-import {
-  COARSE,
-  type FitProblem,
-  type LeastSquaresFit,
-  levenbergMarquardt,
-} from '../numerics/levenberg-marquardt';
+import { fitFromStarts } from '../numerics/fit-from-starts';
+import type { FitProblem, LeastSquaresFit } from '../numerics/levenberg-marquardt';
 import { known, unusable } from '../numerics/numeric-result';
 import { twoSidedT } from '../numerics/student-t';
 import { decadesBeyond } from './creep-compliance';
@@ -86,7 +82,10 @@ export function fitCreep(model: CreepModelName, points: readonly { t: number; D:
   const curve = creepModel(model, span);
   const lacking = lackingPoints(curve, ordered.length, span.timeCount);
   if (lacking) return { ok: false, reason: lacking };
-  const { best, starts, agreeing } = bestOf(curve, ordered, span);
+  const { best, starts, agreeing } = fitFromStarts(
+    problemOf(curve, ordered),
+    creepStarts(curve, ordered, span),
+  );
   const residuals = new Array<number>(points.length).fill(0);
   order.forEach((place, i) => {
     residuals[place] = -best.residuals[i]!;
@@ -158,10 +157,6 @@ const LEAST_DEVIATION = 0.001;
 /** In ln: a factor of a million either way is no bound. */
 const WIDEST_HALF = 6 * Math.LN10;
 const DESCRIBED_CONFIDENCE = 0.95;
-/** Sums of squares that differ by less than this, in proportion, are on the way to the same minimum. */
-const SAME_MINIMUM = 0.05;
-/** What is left of a perfect fit before its end: far below any reading's own noise. */
-const SMALLEST_SUM = 1e-8;
 
 function lackingPoints(model: CreepModel, pointCount: number, timeCount: number): string | null {
   const { parameterCount } = model;
@@ -172,26 +167,6 @@ function lackingPoints(model: CreepModel, pointCount: number, timeCount: number)
     return `a curve with ${parameterCount} parameters needs at least ${parameterCount} different loading times, and there ${timeCount === 1 ? 'is' : 'are'} ${timeCount}`;
   }
   return null;
-}
-
-/** Every start roughly, then the best of them to the end; another one only where that does not converge. */
-function bestOf(
-  model: CreepModel,
-  points: readonly LnPoint[],
-  span: PointSpan,
-): { best: LeastSquaresFit; starts: number; agreeing: number } {
-  const problem = problemOf(model, points);
-  const rough = creepStarts(model, points, span)
-    .map((start) => levenbergMarquardt(problem, start, COARSE))
-    .toSorted((a, b) => a.sumOfSquares - b.sumOfSquares);
-  const least = rough[0]!.sumOfSquares;
-  const good = rough.filter(({ sumOfSquares }) => sumOfSquares <= least * (1 + SAME_MINIMUM) + SMALLEST_SUM);
-  let best = levenbergMarquardt(problem, rough[0]!.parameters);
-  for (const { parameters } of good.slice(1)) {
-    if (best.converged) break;
-    best = levenbergMarquardt(problem, parameters);
-  }
-  return { best, starts: rough.length, agreeing: good.length };
 }
 
 function problemOf(model: CreepModel, points: readonly LnPoint[]): FitProblem {

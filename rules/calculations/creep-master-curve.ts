@@ -1,5 +1,6 @@
 import { covarianceFactor, deviationAlong } from '../numerics/covariance-factor';
-import { type FitProblem, type LeastSquaresFit, levenbergMarquardt } from '../numerics/levenberg-marquardt';
+import { fitFromStarts } from '../numerics/fit-from-starts';
+import type { FitProblem, LeastSquaresFit } from '../numerics/levenberg-marquardt';
 import { cannot, known } from '../numerics/numeric-result';
 import { twoSidedT } from '../numerics/student-t';
 import { type CreepFit, describeFit, spanOf } from './creep-fit';
@@ -59,10 +60,13 @@ export function masterCurve(
   const others = ordered.map((_, place) => place).filter((place) => place !== reference);
   if (points.length <= model.parameterCount + others.length) return cannot('there are too few points');
   const problem = problemOf(model, points, others);
-  const fits = creepStarts(model, shifted, span).map((start) =>
-    levenbergMarquardt(problem, [...start, ...others.map((place) => firstShifts[place]!)]),
+  const { best, starts, agreeing } = fitFromStarts(
+    problem,
+    creepStarts(model, shifted, span).map((start) => [
+      ...start,
+      ...others.map((place) => firstShifts[place]!),
+    ]),
   );
-  const best = bestOf(fits);
   const lnShifts = ordered.map((_, place) => {
     const at = others.indexOf(place);
     return at < 0 ? 0 : best.parameters[model.parameterCount + at]!;
@@ -73,20 +77,11 @@ export function masterCurve(
     best,
     points: reduced.map(({ t, D }) => ({ t: settled(t), D })),
     residuals: best.residuals.map((residual) => -residual),
-    starts: fits.length,
-    startsAgreeing: fits.filter(
-      ({ converged, sumOfSquares }) => converged && sumOfSquares <= best.sumOfSquares * 1.001 + 1e-18,
-    ).length,
+    starts,
+    startsAgreeing: agreeing,
   });
   const shifts = shiftFactors(ordered, { reference, others, best, model });
   return { ok: true, master: { referenceTemperature: ordered[reference]!.temperature, shifts, fit } };
-}
-
-function bestOf(fits: readonly LeastSquaresFit[]): LeastSquaresFit {
-  return fits.reduce((one, other) => {
-    if (one.converged !== other.converged) return one.converged ? one : other;
-    return other.sumOfSquares < one.sumOfSquares ? other : one;
-  });
 }
 
 function seriesFault(series: readonly TemperatureSeries[]): string | null {

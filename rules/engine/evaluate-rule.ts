@@ -3,6 +3,7 @@ import type { Measure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
 import { applicabilityOf } from './applicability';
 import { evaluateAttribute } from './evaluate-attribute';
+import { evaluateCreep } from './evaluate-creep';
 import { evaluateDifference } from './evaluate-difference';
 import { evaluateDocument } from './evaluate-document';
 import { evaluateFormula } from './evaluate-formula';
@@ -42,10 +43,8 @@ function measured(world: World, rule: ResolvedRule, measure: Measure): Finding[]
       return evaluateDocument(world, rule, measure);
     case 'formula':
       return evaluateFormula(world, rule, measure);
-    case 'creep-compliance': {
-      const reason = `Rules of the kind ${measure.kind} are not computed by this version of the engine.`;
-      return [makeFinding(world, rule, { ...wholeRule(world, rule), outcome: 'undecided', reason })];
-    }
+    case 'creep-compliance':
+      return evaluateCreep(world, rule, measure);
   }
 }
 

@@ -3,6 +3,7 @@ import type { CheckContext, MixRecord } from '../record';
 import type { ResolvedEdition } from '../rule-sets/resolve';
 import { unsettledBy } from './alternatives';
 import { analyse } from './analyse';
+import { analyseCreep } from './analyse-creep';
 import type { Analysis, RecomputedValue } from './analysis';
 import { consistencyFindings, consistencyNotChecked } from './consistency-findings';
 import { summarise } from './disposition';
@@ -21,7 +22,7 @@ export function evaluate(record: MixRecord, edition: ResolvedEdition, context: C
   const analysis = analysisOf(record, edition);
   const world = settledWorld({ record, edition, context, analysis });
   const judged = edition.rules.flatMap((rule) => evaluateRule(world, rule)).toSorted(byClauseThenSubject);
-  const findings = [...judged, ...dataFindings(world)];
+  const findings = [...judged, ...dataFindings(world, judged)];
   assertUniqueKeys(findings);
   return {
     analysis: {
@@ -33,7 +34,7 @@ export function evaluate(record: MixRecord, edition: ResolvedEdition, context: C
         fit: analysis.designPoint.fit,
       },
       roomToMove: roomToMove(world),
-      creep: [],
+      creep: analyseCreep(world),
     },
     summary: summarise(findings),
     findings,
@@ -80,9 +81,10 @@ function withTolerance(value: RecomputedValue, tolerances: Record<string, number
   return { ...value, tolerance, agrees, cause: agrees ? null : value.cause };
 }
 
-function dataFindings(world: World): Finding[] {
+function dataFindings(world: World, judged: readonly Finding[]): Finding[] {
   try {
-    return consistencyFindings(world, checkConsistency(world.record, world.analysis));
+    const beside = { submittedOn: world.context.submittedOn, judged };
+    return consistencyFindings(world, checkConsistency(world.record, world.analysis, beside));
   } catch (error) {
     return [consistencyNotChecked(error)];
   }

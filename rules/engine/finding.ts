@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { conditionsSchema, originSchema, readingSchema, sourceSchema } from '../record';
+import { creepAnalysisSchema } from './creep-analysis';
 import { roomToMoveSchema } from './room';
 
 export const outcomeSchema = z.enum(['pass', 'fail', 'not shown', 'undecided', 'not applicable']);
@@ -160,7 +161,8 @@ export const checkResultSchema = z.strictObject({
       .nullable(),
     /** Null where the edition chose no rules for it, and in checks by engines that did not compute it. */
     roomToMove: roomToMoveSchema.nullable(),
-    creep: z.array(z.never()),
+    /** Empty where there is no creep test, and in checks by engines that did not compute it. */
+    creep: creepAnalysisSchema,
   }),
   summary: summarySchema,
   findings: z.array(findingSchema),

@@ -201,6 +201,7 @@ export function measuredUnit(rule: Rule, view: EditionView): string | null {
     return view.quantity(measure.quantity)?.unit ?? null;
   }
   if (measure.kind === 'formula') return measure.unit ?? '1';
+  if (measure.kind === 'creep-compliance') return view.quantity('creep-compliance')?.unit ?? null;
   return measure.kind === 'difference' ? (view.quantity(measure.quantity)?.unit ?? null) : null;
 }
 

@@ -123,3 +123,4 @@ export type FormulaMeasure = z.infer<typeof formulaMeasureSchema>;
 export type DifferenceMeasure = z.infer<typeof differenceMeasureSchema>;
 export type AttributeMeasure = z.infer<typeof attributeMeasureSchema>;
 export type DocumentMeasure = z.infer<typeof documentMeasureSchema>;
+export type CreepComplianceMeasure = z.infer<typeof creepComplianceMeasureSchema>;

@@ -2,10 +2,11 @@ import type { Observed, Outcome, ResolvedLimit } from '../engine/finding';
 import { decimalsOf, type RoundingMethod } from '../numerics/round';
 import type { Conditions } from '../record';
 import { measuredUnit } from './check-rule';
+import { creepClauses } from './creep-words';
 import type { EditionView } from './edition-view';
 import { readFormula } from './formula';
 import { generalLimitWords, intervalWords, oneOfWords, resolvedLimitWords } from './limit-words';
-import type { FormulaMeasure, Measure, Statistic } from './measure';
+import type { CreepComplianceMeasure, FormulaMeasure, Measure, Statistic } from './measure';
 import type { Rule } from './schema';
 import { conditionSentence } from './when-words';
 import {
@@ -129,10 +130,14 @@ function labelOf(measure: Measure, at: Conditions, view: EditionView, count?: nu
     case 'document':
       return view.document(measure.type)?.label ?? measure.type;
     case 'creep-compliance':
-      return phrase('creep-compliance', { temperature: measure.temperature, time: measure.time }, view);
+      return phrase('creep-compliance', creepConditions(measure), view);
     case 'formula':
       return formulaWords(measure, at, view);
   }
+}
+
+function creepConditions({ temperature, time, stress }: CreepComplianceMeasure): Conditions {
+  return stress === undefined ? { temperature, time } : { temperature, time, stress };
 }
 
 function phrase(id: string, at: Conditions, view: EditionView): string {
@@ -199,6 +204,7 @@ function countClauses(rule: Rule, view: EditionView): string[] {
       clauses.push(`the limits to be within are ${intervalWords(measure.within, unit, view)}`);
   }
   if (measure.kind === 'formula') clauses.push(...symbolClauses(measure, view));
+  if (measure.kind === 'creep-compliance') clauses.push(...creepClauses(measure));
   for (const where of measure.where ?? []) {
     const quantity = view.quantity(where.quantity);
     const name = quantity ? quantityPhrase(quantity, where.at) : where.quantity;

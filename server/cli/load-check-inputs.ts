@@ -1,7 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { basename } from 'node:path';
 import { z } from 'zod';
-import { kindsNotComputed } from '#rules/engine/not-computed';
 import type { CellGrid } from '#rules/reading/cell-grid';
 import { type Mapping, mappingSchema } from '#rules/reading/mapping';
 import { templateMapping } from '#rules/reading/template-mapping';
@@ -23,13 +22,6 @@ export async function loadEdition(rules: string, layers: string[]): Promise<Reso
   if (!resolution.ok) {
     const files = [rules, ...layers].map((file) => basename(file)).join(', ');
     throw faultOf(files, resolution.problems);
-  }
-  const [unknown] = kindsNotComputed(resolution.edition);
-  if (unknown) {
-    throw new InputFault(
-      `Rule ${unknown.rule} of ${basename(rules)} measures ${unknown.kind}, which this version does not compute yet.`,
-      'Take the rule out, or judge by an edition without it.',
-    );
   }
   return resolution.edition;
 }

@@ -1,0 +1,295 @@
+import { firstFall, nonLinearityPercent } from '../calculations/creep-compliance';
+import type { CreepFit } from '../calculations/creep-fit';
+import type { CreepModelName } from '../calculations/creep-model';
+import { numberWords } from '../rule-sets/words';
+import type { CreepAnalysis, CreepAnalysisPoint, CreepCurve, CreepMasterCurve } from './creep-analysis';
+import { fitOf, masterOf } from './creep-fits';
+import { type CreepPoint, cellOf, creepPoints } from './creep-points';
+import { decadeWords, fittable } from './creep-value';
+import { naturalOrder } from './natural-order';
+import type { World } from './world';
+
+/** The creep tests of the design by the contractor: their points, curves and master curve. No limits enter here. */
+export function analyseCreep(world: World): CreepAnalysis {
+  try {
+    return analysed(world);
+  } catch (error) {
+    const detail = error instanceof Error ? error.message : String(error);
+    const problem = `An internal error occurred while the creep tests were analysed: ${detail}`;
+    return [{ ...NOTHING_ANALYSED, problems: [problem] }];
+  }
+}
+
+const NOTHING_ANALYSED: CreepCurve = {
+  kind: 'curve',
+  temperature: null,
+  stress: null,
+  stresses: [],
+  method: null,
+  specimens: [],
+  points: [],
+  fits: [],
+  remarks: [],
+  problems: [],
+};
+
+function analysed(world: World): CreepAnalysis {
+  const points = creepPoints(world).filter(
+    ({ at }) => (at.trial ?? 'design') === 'design' && (at.laboratory ?? 'contractor') === 'contractor',
+  );
+  if (points.length === 0) return [];
+  const temperatures = byTemperature(points);
+  const pooled = temperatures.map((group) => curveOf(group, null));
+  const curves = temperatures.flatMap((group, i) => {
+    const { stresses } = pooled[i]!;
+    const single = stresses.length < 2 ? [] : stresses.map((stress) => curveOf(group, stress));
+    return [pooled[i]!, ...single];
+  });
+  const master = masterCurveOf(pooled);
+  return master === null ? curves : [...curves, master];
+}
+
+interface TemperatureGroup {
+  temperature: number | null;
+  points: CreepPoint[];
+}
+
+/** Readings within 0.5 °C of their middle belong to one test temperature. */
+function byTemperature(points: CreepPoint[]): TemperatureGroup[] {
+  const stated = points.filter(({ at }) => at.temperature !== undefined);
+  const ordered = stated.toSorted((a, b) => a.at.temperature! - b.at.temperature!);
+  const groups: CreepPoint[][] = [];
+  for (const point of ordered) {
+    const open = groups.at(-1);
+    const first = open?.[0]?.at.temperature;
+    if (open && first !== undefined && point.at.temperature! - first <= 1 + 1e-9) open.push(point);
+    else groups.push([point]);
+  }
+  const without = points.filter(({ at }) => at.temperature === undefined);
+  return [
+    ...groups.map((group) => ({ temperature: middleTemperature(group), points: group })),
+    ...(without.length > 0 ? [{ temperature: null, points: without }] : []),
+  ];
+}
+
+function middleTemperature(group: CreepPoint[]): number {
+  const temperatures = group.map(({ at }) => at.temperature!);
+  return Number(temperatures[Math.floor((temperatures.length - 1) / 2)]!.toFixed(1)) + 0;
+}
+
+const MODELS: CreepModelName[] = ['sigmoid', 'power', 'prony'];
+
+function curveOf({ temperature, points }: TemperatureGroup, stress: number | null): CreepCurve {
+  const own = stress === null ? points : points.filter(({ at }) => at.stress === stress);
+  const used = fittable(own)
+    .filter(({ qualifier }) => qualifier === null)
+    .toSorted(inOrder);
+  const fits = MODELS.map((model) =>
+    fitOf(
+      model,
+      used.map(({ at, value }) => ({ t: at.time!, D: value! })),
+    ),
+  );
+  const problems = new Set(own.flatMap(({ fault }) => fault ?? []));
+  if (used.length > 0 && !fits[0]!.ok) problems.add(`No curve is fitted: ${fits[0]!.reason}.`);
+  if (own.some(({ qualifier }) => qualifier !== null)) {
+    problems.add('Values that are only known as a bound enter no curve.');
+  }
+  const levels = new Set(own.flatMap(({ at }) => at.stress ?? []));
+  const stresses = [...levels].toSorted((a, b) => a - b);
+  const methods = new Set(own.flatMap(({ evidence }) => methodOf(evidence)));
+  return {
+    kind: 'curve',
+    temperature,
+    stress:
+      stress ??
+      (stresses.length === 1 && own.every(({ at }) => at.stress !== undefined) ? stresses[0]! : null),
+    stresses,
+    method: methods.size === 1 ? [...methods][0]! : null,
+    specimens: [...new Set(used.flatMap(({ specimen }) => specimen ?? []))].toSorted(naturalOrder),
+    points: used.map(presented),
+    fits: fits.flatMap((fit) => (fit.ok ? [{ ...fit.fit, words: fitWords(fit.fit) }] : [])),
+    remarks: used.length === 0 ? [] : remarksOf(used, stresses),
+    problems: [...problems],
+  };
+}
+
+function methodOf(evidence: CreepPoint['evidence']): string[] {
+  if (evidence.method !== undefined) return [evidence.method];
+  return (evidence.inputs ?? []).flatMap(methodOf);
+}
+
+function inOrder(a: CreepPoint, b: CreepPoint): number {
+  return (
+    a.at.time! - b.at.time! ||
+    naturalOrder(a.specimen ?? '', b.specimen ?? '') ||
+    (a.at.stress ?? 0) - (b.at.stress ?? 0) ||
+    a.value! - b.value!
+  );
+}
+
+function presented({ at, specimen, value, count, evidence }: CreepPoint): CreepAnalysisPoint {
+  return {
+    specimen,
+    temperature: at.temperature ?? null,
+    time: at.time!,
+    stress: at.stress ?? null,
+    value: value!,
+    count,
+    origin: evidence.origin,
+    source: cellOf(evidence),
+  };
+}
+
+/** Why a parameter says little, and what that means. */
+export function fitWords(fit: CreepFit): string[] {
+  const words: string[] = [];
+  if (fit.rejected !== null) words.push(`The fit is rejected: ${fit.rejected}.`);
+  const loose = fit.parameters.filter(({ held }) => !held).map(({ symbol }) => symbol);
+  if (fit.model === 'sigmoid' && fit.tauDecadesBeyond !== null && fit.tauDecadesBeyond > 0) {
+    const tau = fit.parameters.find(({ symbol }) => symbol === 'τ')!.value;
+    const [side, end] = tau > fit.window.to ? ['beyond', 'D∞'] : ['before', 'D0'];
+    words.push(
+      `τ lies ${decadeWords(fit.tauDecadesBeyond)} ${side} the tested times, so ${end} and τ are held by the shape of the curve, not by tested points.`,
+    );
+  } else if (loose.length > 0) {
+    words.push(`No tested point holds ${loose.join(', ')}: the interval is wider than a factor of two.`);
+  }
+  if (fit.steep)
+    words.push('n is above 1: the curve has no positive retardation spectrum and no relaxation modulus.');
+  return words;
+}
+
+function remarksOf(used: CreepPoint[], stresses: number[]): CreepCurve['remarks'] {
+  const remarks = [growth(used)];
+  const linear = linearity(used, stresses);
+  if (linear !== null) remarks.push(linear);
+  const scatter = scatterAtEnd(used);
+  if (scatter !== null) remarks.push(scatter);
+  return remarks;
+}
+
+function growth(used: CreepPoint[]): CreepCurve['remarks'][number] {
+  for (const series of seriesOf(used)) {
+    const fall = firstFall(series.points);
+    if (fall === null) continue;
+    const of = series.specimen === null ? '' : ` of specimen ${series.specimen}`;
+    const [earlier, later] = fall;
+    const text = `Compliance${of} falls between ${numberWords(earlier.t)} and ${numberWords(later.t)} s`;
+    return { holds: false, text };
+  }
+  return { holds: true, text: 'Compliance rises with every reading' };
+}
+
+function seriesOf(used: CreepPoint[]): { specimen: string | null; points: { t: number; D: number }[] }[] {
+  const groups = new Map<string, { specimen: string | null; points: { t: number; D: number }[] }>();
+  for (const { at, specimen, value } of used) {
+    const key = `${specimen}|${at.stress}`;
+    const group = groups.get(key) ?? { specimen, points: [] };
+    group.points.push({ t: at.time!, D: value! });
+    groups.set(key, group);
+  }
+  return [...groups.values()];
+}
+
+function linearity(used: CreepPoint[], stresses: number[]): CreepCurve['remarks'][number] | null {
+  const worst = worstNonLinearity(used, stresses);
+  if (worst === null) return null;
+  const { low, high, percent } = worst;
+  const levels = `${numberWords(low)} and ${numberWords(high)} kPa`;
+  const amount = `${numberWords(Number(percent.toPrecision(2)))} %`;
+  return percent <= LINEAR_WITHIN_PERCENT
+    ? { holds: true, text: `Linear: ${levels} agree within ${amount}` }
+    : { holds: false, text: `Not linear: ${levels} differ by ${amount}` };
+}
+
+/** Two levels of stress agree within this, % of the smaller compliance; common practice, no source. */
+export const LINEAR_WITHIN_PERCENT = 10;
+
+/** The largest difference between neighbouring levels of stress, at a time that both were read at. */
+export function worstNonLinearity(
+  used: readonly CreepPoint[],
+  stresses: readonly number[],
+): {
+  low: number;
+  high: number;
+  time: number;
+  values: [number, number];
+  percent: number;
+  points: CreepPoint[];
+} | null {
+  let worst: ReturnType<typeof worstNonLinearity> = null;
+  for (let i = 1; i < stresses.length; i += 1) {
+    const [low, high] = [stresses[i - 1]!, stresses[i]!];
+    for (const time of new Set(used.map(({ at }) => at.time!))) {
+      const pair = [low, high].map((stress) =>
+        used.filter(({ at }) => at.time === time && at.stress === stress),
+      ) as [CreepPoint[], CreepPoint[]];
+      const values = comparable(pair);
+      if (values === null) continue;
+      const percent = nonLinearityPercent(...values);
+      if (!percent.ok || (worst !== null && percent.value <= worst.percent)) continue;
+      worst = { low, high, time, values, percent: percent.value, points: pair.flat() };
+    }
+  }
+  return worst;
+}
+
+/** Means over the specimens that were tested under both; over all where no specimen was. */
+function comparable([low, high]: [CreepPoint[], CreepPoint[]]): [number, number] | null {
+  if (low.length === 0 || high.length === 0) return null;
+  const both = new Set(
+    low
+      .flatMap(({ specimen }) => specimen ?? [])
+      .filter((specimen) => high.some((each) => each.specimen === specimen)),
+  );
+  const of = (points: CreepPoint[]) => {
+    const chosen =
+      both.size > 0 ? points.filter(({ specimen }) => specimen !== null && both.has(specimen)) : points;
+    return chosen.reduce((sum, { value }) => sum + value!, 0) / chosen.length;
+  };
+  return [of(low), of(high)];
+}
+
+function scatterAtEnd(used: CreepPoint[]): CreepCurve['remarks'][number] | null {
+  const last = Math.max(...used.map(({ at }) => at.time!));
+  const values = used
+    .filter(({ at, specimen }) => at.time === last && specimen !== null)
+    .map(({ value }) => value!);
+  if (values.length < 2) return null;
+  const average = values.reduce((sum, value) => sum + value, 0) / values.length;
+  const away = Math.max(...values.map((value) => (100 * Math.abs(value - average)) / average));
+  return {
+    holds: true,
+    text: `Specimens within ${numberWords(Math.max(1, Math.ceil(away)))} % of their mean at ${numberWords(last)} s`,
+  };
+}
+
+function masterCurveOf(curves: readonly CreepCurve[]): CreepMasterCurve | null {
+  const series = curves.flatMap(({ temperature, points }) =>
+    temperature === null || new Set(points.map(({ time }) => time)).size < 2 ? [] : [{ temperature, points }],
+  );
+  if (series.length < 2) return null;
+  const result = masterOf(
+    series.map(({ temperature, points }) => ({
+      temperature,
+      points: points.map(({ time, value }) => ({ t: time, D: value })),
+    })),
+  );
+  if (!result.ok) return null;
+  const { referenceTemperature, shifts, fit } = result.master;
+  const apart = shifts.filter(({ overlaps }) => !overlaps);
+  return {
+    kind: 'master-curve',
+    referenceTemperature,
+    shifts,
+    points: series
+      .toSorted((a, b) => a.temperature - b.temperature)
+      .flatMap(({ temperature, points }) => points.map((point) => ({ ...point, temperature }))),
+    fit: { ...fit, words: fitWords(fit) },
+    problems: apart.map(
+      ({ temperature }) =>
+        `The compliances at ${numberWords(temperature)} °C overlap with no other temperature's: only the form of the curve holds their shift.`,
+    ),
+  };
+}
