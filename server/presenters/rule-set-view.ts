@@ -87,7 +87,7 @@ function tableView(table: ResolvedTable, edition: ResolvedEdition): Omit<TableVi
     })),
     ...table.columns.map(({ name, unit }) => ({
       name,
-      label: columnLabels[name] ?? capitalised(name),
+      label: columnLabels[name] ?? capitalised(wordsOf(name)),
       unit: unit ?? null,
       key: false,
     })),
@@ -110,3 +110,11 @@ function tableView(table: ResolvedTable, edition: ResolvedEdition): Omit<TableVi
 }
 
 const columnLabels: Record<string, string> = { min: 'At least', max: 'At most' };
+
+/** `mixingMin` as "mixing min". */
+function wordsOf(name: string): string {
+  return name.replace(
+    /([a-z])([A-Z])/g,
+    (_, before: string, after: string) => `${before} ${after.toLowerCase()}`,
+  );
+}

@@ -24,6 +24,22 @@ describe('an edition as its page shows it', () => {
     expect(ruleSetContents(edition, edition).ruleViews[0]?.precision).toBe('± 0.6 %');
   });
 
+  it('heads the columns of a table with words', () => {
+    const edition = anEdition({
+      attributes: [{ name: 'course', type: 'text', values: ['surface', 'base'] }],
+      tables: [
+        {
+          id: 'temperatures',
+          keys: ['course'],
+          columns: [{ name: 'mixingMin', unit: '°C' }, { name: 'max' }],
+          rows: [{ course: 'surface', mixingMin: '150', max: '163' }],
+        },
+      ],
+    });
+    const [table] = ruleSetContents(edition, edition).tables;
+    expect(table?.columns.map(({ label }) => label)).toEqual(['Course', 'Mixing min', 'At most']);
+  });
+
   it('has none where the edition declares none', () => {
     const edition = anEdition();
     expect(ruleSetContents(edition, edition).quantities).toEqual([]);

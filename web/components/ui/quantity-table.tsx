@@ -13,8 +13,8 @@ export interface QuantityRow {
 /** Entries of the registry, or those that a rule set declares: unit, range, methods, formula and source of each. */
 export function QuantityTable({ caption, rows }: { caption: string; rows: readonly QuantityRow[] }) {
   return (
-    <div className="sideways">
-      <table className="table table-stacked quantity-table">
+    <div className="sideways quantity-frame">
+      <table className="table quantity-table">
         <caption className="hidden-text">{caption}</caption>
         <thead>
           <tr>
