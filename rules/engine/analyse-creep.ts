@@ -1,10 +1,10 @@
-import { firstFall, nonLinearityPercent } from '../calculations/creep-compliance';
 import type { CreepFit } from '../calculations/creep-fit';
 import type { CreepModelName } from '../calculations/creep-model';
 import { numberWords } from '../rule-sets/words';
 import type { CreepAnalysis, CreepAnalysisPoint, CreepCurve, CreepMasterCurve } from './creep-analysis';
 import { fitOf, masterOf } from './creep-fits';
 import { type CreepPoint, cellOf, creepPoints } from './creep-points';
+import { remarksOf } from './creep-remarks';
 import { decadeWords, fittable } from './creep-value';
 import { naturalOrder } from './natural-order';
 import type { World } from './world';
@@ -109,7 +109,7 @@ function curveOf({ temperature, points }: TemperatureGroup, stress: number | nul
     specimens: [...new Set(used.flatMap(({ specimen }) => specimen ?? []))].toSorted(naturalOrder),
     points: used.map(presented),
     fits: fits.flatMap((fit) => (fit.ok ? [{ ...fit.fit, words: fitWords(fit.fit) }] : [])),
-    remarks: used.length === 0 ? [] : remarksOf(used, stresses),
+    remarks: remarksOf(used.map(presented)),
     problems: [...problems],
   };
 }
@@ -158,111 +158,6 @@ export function fitWords(fit: CreepFit): string[] {
   if (fit.steep)
     words.push('n is above 1: the curve has no positive retardation spectrum and no relaxation modulus.');
   return words;
-}
-
-function remarksOf(used: CreepPoint[], stresses: number[]): CreepCurve['remarks'] {
-  const remarks = [growth(used)];
-  const linear = linearity(used, stresses);
-  if (linear !== null) remarks.push(linear);
-  const scatter = scatterAtEnd(used);
-  if (scatter !== null) remarks.push(scatter);
-  return remarks;
-}
-
-function growth(used: CreepPoint[]): CreepCurve['remarks'][number] {
-  for (const series of seriesOf(used)) {
-    const fall = firstFall(series.points);
-    if (fall === null) continue;
-    const of = series.specimen === null ? '' : ` of specimen ${series.specimen}`;
-    const [earlier, later] = fall;
-    const text = `Compliance${of} falls between ${numberWords(earlier.t)} and ${numberWords(later.t)} s`;
-    return { holds: false, text };
-  }
-  return { holds: true, text: 'Compliance rises with every reading' };
-}
-
-function seriesOf(used: CreepPoint[]): { specimen: string | null; points: { t: number; D: number }[] }[] {
-  const groups = new Map<string, { specimen: string | null; points: { t: number; D: number }[] }>();
-  for (const { at, specimen, value } of used) {
-    const key = `${specimen}|${at.stress}`;
-    const group = groups.get(key) ?? { specimen, points: [] };
-    group.points.push({ t: at.time!, D: value! });
-    groups.set(key, group);
-  }
-  return [...groups.values()];
-}
-
-function linearity(used: CreepPoint[], stresses: number[]): CreepCurve['remarks'][number] | null {
-  const worst = worstNonLinearity(used, stresses);
-  if (worst === null) return null;
-  const { low, high, percent } = worst;
-  const levels = `${numberWords(low)} and ${numberWords(high)} kPa`;
-  const amount = `${numberWords(Number(percent.toPrecision(2)))} %`;
-  return percent <= LINEAR_WITHIN_PERCENT
-    ? { holds: true, text: `Linear: ${levels} agree within ${amount}` }
-    : { holds: false, text: `Not linear: ${levels} differ by ${amount}` };
-}
-
-/** Two levels of stress agree within this, % of the smaller compliance; common practice, no source. */
-export const LINEAR_WITHIN_PERCENT = 10;
-
-/** The largest difference between neighbouring levels of stress, at a time that both were read at. */
-export function worstNonLinearity(
-  used: readonly CreepPoint[],
-  stresses: readonly number[],
-): {
-  low: number;
-  high: number;
-  time: number;
-  values: [number, number];
-  percent: number;
-  points: CreepPoint[];
-} | null {
-  let worst: ReturnType<typeof worstNonLinearity> = null;
-  for (let i = 1; i < stresses.length; i += 1) {
-    const [low, high] = [stresses[i - 1]!, stresses[i]!];
-    for (const time of new Set(used.map(({ at }) => at.time!))) {
-      const pair = [low, high].map((stress) =>
-        used.filter(({ at }) => at.time === time && at.stress === stress),
-      ) as [CreepPoint[], CreepPoint[]];
-      const values = comparable(pair);
-      if (values === null) continue;
-      const percent = nonLinearityPercent(...values);
-      if (!percent.ok || (worst !== null && percent.value <= worst.percent)) continue;
-      worst = { low, high, time, values, percent: percent.value, points: pair.flat() };
-    }
-  }
-  return worst;
-}
-
-/** Means over the specimens that were tested under both; over all where no specimen was. */
-function comparable([low, high]: [CreepPoint[], CreepPoint[]]): [number, number] | null {
-  if (low.length === 0 || high.length === 0) return null;
-  const both = new Set(
-    low
-      .flatMap(({ specimen }) => specimen ?? [])
-      .filter((specimen) => high.some((each) => each.specimen === specimen)),
-  );
-  const of = (points: CreepPoint[]) => {
-    const chosen =
-      both.size > 0 ? points.filter(({ specimen }) => specimen !== null && both.has(specimen)) : points;
-    return chosen.reduce((sum, { value }) => sum + value!, 0) / chosen.length;
-  };
-  return [of(low), of(high)];
-}
-
-function scatterAtEnd(used: CreepPoint[]): CreepCurve['remarks'][number] | null {
-  const last = Math.max(...used.map(({ at }) => at.time!));
-  const values = used
-    .filter(({ at, specimen }) => at.time === last && specimen !== null)
-    .map(({ value }) => value!);
-  if (values.length < 2) return null;
-  const average = values.reduce((sum, value) => sum + value, 0) / values.length;
-  const away = Math.max(...values.map((value) => (100 * Math.abs(value - average)) / average));
-  return {
-    holds: true,
-    text: `Specimens within ${numberWords(Math.max(1, Math.ceil(away)))} % of their mean at ${numberWords(last)} s`,
-  };
 }
 
 function masterCurveOf(curves: readonly CreepCurve[]): CreepMasterCurve | null {

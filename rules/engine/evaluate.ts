@@ -6,6 +6,7 @@ import { analyse } from './analyse';
 import { analyseCreep } from './analyse-creep';
 import type { Analysis, RecomputedValue } from './analysis';
 import { consistencyFindings, consistencyNotChecked } from './consistency-findings';
+import type { CreepAnalysis } from './creep-analysis';
 import { summarise } from './disposition';
 import { evaluateRule } from './evaluate-rule';
 import { type CheckResult, type Finding, findingKey, type RecomputedReading } from './finding';
@@ -22,7 +23,8 @@ export function evaluate(record: MixRecord, edition: ResolvedEdition, context: C
   const analysis = analysisOf(record, edition);
   const world = settledWorld({ record, edition, context, analysis });
   const judged = edition.rules.flatMap((rule) => evaluateRule(world, rule)).toSorted(byClauseThenSubject);
-  const findings = [...judged, ...dataFindings(world, judged)];
+  const creep = analyseCreep(world);
+  const findings = [...judged, ...dataFindings(world, judged, creep)];
   assertUniqueKeys(findings);
   return {
     analysis: {
@@ -34,7 +36,7 @@ export function evaluate(record: MixRecord, edition: ResolvedEdition, context: C
         fit: analysis.designPoint.fit,
       },
       roomToMove: roomToMove(world),
-      creep: analyseCreep(world),
+      creep,
     },
     summary: summarise(findings),
     findings,
@@ -81,9 +83,9 @@ function withTolerance(value: RecomputedValue, tolerances: Record<string, number
   return { ...value, tolerance, agrees, cause: agrees ? null : value.cause };
 }
 
-function dataFindings(world: World, judged: readonly Finding[]): Finding[] {
+function dataFindings(world: World, judged: readonly Finding[], creep: CreepAnalysis): Finding[] {
   try {
-    const beside = { submittedOn: world.context.submittedOn, judged };
+    const beside = { submittedOn: world.context.submittedOn, judged, creep };
     return consistencyFindings(world, checkConsistency(world.record, world.analysis, beside));
   } catch (error) {
     return [consistencyNotChecked(error)];
