@@ -1,11 +1,24 @@
 import { evidenceOfReading } from '../engine/sample';
-import type { DocumentRecord, MixRecord } from '../record';
+import type { DocumentRecord, MixRecord, Reading } from '../record';
 import { dateWords } from '../rule-sets/words';
 import { type ConsistencyInput, type ConsistencyObservation, subjectOf } from './consistency-observation';
 
 /** Dates that cannot follow one another. */
-export function checkDates({ record }: ConsistencyInput): ConsistencyObservation[] {
-  return [...expiredBeforeIssued(record), ...testedAfterReport(record)];
+export function checkDates({ record, submittedOn }: ConsistencyInput): ConsistencyObservation[] {
+  return [
+    ...expiredBeforeIssued(record),
+    ...testedAfterReport(record),
+    ...testedAfterSubmission(record, submittedOn),
+  ];
+}
+
+/** What is submitted has been tested. One finding a quantity, and none where the report is already contradicted. */
+function testedAfterSubmission(record: MixRecord, submittedOn: string | null): ConsistencyObservation[] {
+  if (submittedOn === null || testedAfterReport(record).length > 0) return [];
+  return testedAfter(record.readings, submittedOn, (label, last) => ({
+    sentence: `A test of ${label} is dated ${dateWords(last)}, after the submission on ${dateWords(submittedOn)}.`,
+    reason: 'What is submitted has been tested before; the date of the test is wrong.',
+  }));
 }
 
 function expiredBeforeIssued({ documents }: MixRecord): ConsistencyObservation[] {
@@ -39,18 +52,24 @@ function testedAfterReport({ documents, readings }: MixRecord): ConsistencyObser
     .map(({ date }) => date!);
   const latest = dates.toSorted().at(-1);
   if (latest === undefined) return [];
-  const late = readings.filter(({ testedOn }) => testedOn !== undefined && testedOn > latest);
-  const quantities = new Set(late.map(({ quantity }) => quantity));
-  return [...quantities].map((quantity) => {
+  return testedAfter(readings, latest, (label, last) => ({
+    sentence: `A test of ${label} is dated ${dateWords(last)}, after the mix design report of ${dateWords(latest)}.`,
+    reason: 'A report cannot state a test that was made later; one of the two dates is wrong.',
+  }));
+}
+
+function testedAfter(
+  readings: readonly Reading[],
+  day: string,
+  words: (label: string, last: string) => Pick<ConsistencyObservation, 'sentence' | 'reason'>,
+): ConsistencyObservation[] {
+  const late = readings.filter(({ testedOn }) => testedOn !== undefined && testedOn > day);
+  return [...new Set(late.map(({ quantity }) => quantity))].map((quantity) => {
     const own = late.filter((reading) => reading.quantity === quantity);
-    const last = own
-      .map(({ testedOn }) => testedOn!)
-      .toSorted()
-      .at(-1)!;
+    const dates = own.map(({ testedOn }) => testedOn!).toSorted();
     return dateBreach({
       subject: `${subjectOf(quantity, {})}, date of test`,
-      sentence: `A test of ${subjectOf(quantity, {})} is dated ${dateWords(last)}, after the mix design report of ${dateWords(latest)}.`,
-      reason: 'A report cannot state a test that was made later; one of the two dates is wrong.',
+      ...words(subjectOf(quantity, {}), dates.at(-1)!),
       evidence: own.map(evidenceOfReading),
       quantity,
       at: own[0]!.at,

@@ -8,6 +8,7 @@ import {
   placeOf,
   subjectOf,
 } from './consistency-observation';
+import { hasManyDigits, replicateGroups } from './replicate-groups';
 
 /** Measured with so many digits that even two specimens hardly ever agree in all of them. */
 const sensitiveQuantities = new Set([
@@ -39,9 +40,7 @@ export function checkReplicates({ index }: ConsistencyInput): ConsistencyObserva
     .filter(
       ({ id, kind }) => sensitiveQuantities.has(id) || (kind === 'measured' && !commonQuantities.has(id)),
     )
-    .flatMap(({ id }) =>
-      [...alike(index.all(id)).values()].flatMap((readings) => observed(id, readings) ?? []),
-    );
+    .flatMap(({ id }) => replicateGroups(index.all(id)).flatMap((readings) => observed(id, readings) ?? []));
 }
 
 function observed(quantity: string, readings: Reading[]): ConsistencyObservation | null {
@@ -65,21 +64,4 @@ function observed(quantity: string, readings: Reading[]): ConsistencyObservation
     quantity,
     at,
   };
-}
-
-/** Whole percentages and round numbers agree by chance: fewer than three significant digits say nothing. */
-function hasManyDigits({ value, source }: Reading): boolean {
-  const digits = (source?.text ?? String(value)).replace(/[^0-9]/g, '').replace(/^0+/, '');
-  return digits.length >= 3;
-}
-
-function alike(readings: Reading[]): Map<string, Reading[]> {
-  const groups = new Map<string, Reading[]>();
-  for (const reading of readings) {
-    const { specimen, ...others } = reading.at;
-    if (specimen === undefined) continue;
-    const key = JSON.stringify(Object.entries(others).toSorted(([a], [b]) => (a < b ? -1 : 1)));
-    groups.set(key, [...(groups.get(key) ?? []), reading]);
-  }
-  return groups;
 }

@@ -32,6 +32,8 @@ export interface ConsistencyInput {
   analysis: Analysis;
   /** The contractor's readings that carry a number. */
   index: RecordIndex;
+  /** The day of submission, where it is known. */
+  submittedOn: string | null;
 }
 
 /** A number of the workbook or of the analysis, with its thread. */
