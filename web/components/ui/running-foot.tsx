@@ -1,5 +1,6 @@
-import { createContext, type ReactNode, useContext } from 'react';
+import { createContext, type ReactNode, useContext, useEffect, useRef, useState } from 'react';
 import { createPortal } from 'react-dom';
+import { usePrintText } from '../../lib/print-frame';
 import { useRegisteredShortcuts } from '../../lib/shortcuts';
 import { Kbd } from './kbd';
 
@@ -13,10 +14,11 @@ export const FootPlace = createContext<HTMLElement | null>(null);
 export function RunningFoot({ texts, acts }: { texts: readonly ReactNode[]; acts?: ReactNode }) {
   const place = useContext(FootPlace);
   const keys = useRegisteredShortcuts().filter((shortcut) => shortcut.foot);
+  const words = usePrintedFoot();
   if (!place) return null;
   const foot = createPortal(
     <div className={`running-foot${acts ? ' has-acts' : ''}`}>
-      <span className="foot-texts">
+      <span className="foot-texts" ref={words}>
         {texts.map((text, index) => (
           // biome-ignore lint/suspicious/noArrayIndexKey: at most three fixed lines.
           <span key={index} className="foot-text">
@@ -53,6 +55,19 @@ function CautionsInPage({ texts }: { texts: readonly ReactNode[] }) {
       ))}
     </div>
   );
+}
+
+/** Printed pages carry the same words in their margins, as text. */
+function usePrintedFoot() {
+  const words = useRef<HTMLSpanElement>(null);
+  const [text, setText] = useState('');
+  usePrintText('foot', text);
+  // The words are nodes, known as text only once they are drawn, so every drawing asks.
+  useEffect(() => {
+    const lines = [...(words.current?.children ?? [])].map((line) => line.textContent ?? '');
+    setText(lines.join('\n'));
+  });
+  return words;
 }
 
 export function keyName(key: string, ctrl = false): string {

@@ -8,7 +8,7 @@ import { useLedger } from './ledger-context';
 /** The check no longer stands on what is in force; a new one is made, the old one kept. */
 export function StaleLine({ reason }: { reason: string }) {
   const { params, revision } = useLedger();
-  const again = useCheckAgain(params);
+  const again = useCheckAgain(params, revision.version);
   return (
     <>
       <div className="stale-line" role="status">

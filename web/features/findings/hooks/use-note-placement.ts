@@ -29,7 +29,7 @@ export function useNotePlacement(ledger: RefObject<HTMLElement | null>): void {
 function placeIn(frame: HTMLElement): void {
   const notes = [...frame.querySelectorAll<HTMLElement>('.margin-note')];
   if (!window.matchMedia(marginWidth).matches) {
-    frame.style.removeProperty('min-height');
+    frame.style.removeProperty('--notes-reach');
     for (const note of notes) note.style.removeProperty('top');
     return;
   }
@@ -49,5 +49,5 @@ function placeIn(frame: HTMLElement): void {
     bottom = Math.max(bottom, box.rowTop + offset + box.height);
   });
   // A long last note runs past its row; the page has to reach as far as it does.
-  frame.style.minHeight = `${Math.ceil(bottom)}px`;
+  frame.style.setProperty('--notes-reach', `${Math.ceil(bottom)}px`);
 }

@@ -20,7 +20,7 @@ export function GradationChart({
   maximumSizeMm: number | null;
   params: RevisionParams;
 }) {
-  const size = useMediaQuery('(max-width: 759px)') ? narrow : wide;
+  const size = useMediaQuery('screen and (max-width: 759px)') ? narrow : wide;
   const geometry = gradationGeometry(points, maximumSizeMm, size);
   return (
     <figure>

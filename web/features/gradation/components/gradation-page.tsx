@@ -8,6 +8,7 @@ import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { paths } from '../../../lib/paths';
+import { usePrintedRevision } from '../../../lib/print-frame';
 import { useCheck } from '../../../lib/queries/check-query';
 import { useRevision } from '../../../lib/queries/revision-query';
 import { useRevisionParams } from '../../../lib/revision-params';
@@ -23,6 +24,7 @@ export function GradationPage() {
   const check = useCheck(params);
   const [asTable, setAsTable] = useState(false);
   usePageTitle(`Gradation, ${revision.mixDesignation} revision ${revision.number}`);
+  usePrintedRevision(revision);
   const { gradation } = check;
   const findings = check.findings.filter((finding) => finding.kind === 'gradation');
   const first = findings[0];

@@ -2,6 +2,7 @@ import { queryOptions, useQueryClient, useSuspenseQuery } from '@tanstack/react-
 import type { z } from 'zod';
 import {
   changePerson,
+  type Invitation,
   invitePerson,
   listPeople,
   type Person,
@@ -48,8 +49,8 @@ export function usePeopleActs() {
       await call(removePerson, { params: { membershipId }, version });
       await renew();
     },
-    withdraw: async (invitationId: string) => {
-      await call(withdrawInvitation, { params: { invitationId } });
+    withdraw: async ({ id: invitationId, version }: Invitation) => {
+      await call(withdrawInvitation, { params: { invitationId }, version });
       await renew();
     },
   };

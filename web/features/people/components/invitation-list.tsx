@@ -17,7 +17,7 @@ export function InvitationList() {
   if (invitations.length === 0) return null;
   const withdraw = async (invitation: Invitation) => {
     setError(null);
-    await acts.withdraw(invitation.id).catch(setError);
+    await acts.withdraw(invitation).catch(setError);
   };
   return (
     <section>

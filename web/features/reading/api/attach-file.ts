@@ -1,13 +1,23 @@
 import { attachFile } from '#shared/contracts/readings';
+import { useActKey } from '../../../lib/act-key';
 import { call } from '../../../lib/api';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { useReadingChange } from './use-reading-change';
 
-/** The version is the document row's own, as its If-Match guards that row. */
 export function useAttachFile(params: RevisionParams) {
-  return useReadingChange<{ documentId: string; version: number; file: File }>(
+  const act = useActKey();
+  return useReadingChange<{ documentId: string; file: File }>(
     params,
-    ({ documentId, version, file }) =>
-      call(attachFile, { params: { ...params, documentId }, body: {}, files: { file }, version }),
+    async ({ documentId, file }, { version }) => {
+      const reading = await call(attachFile, {
+        params: { ...params, documentId },
+        body: {},
+        files: { file },
+        version,
+        idempotencyKey: act.keyFor([documentId, version, file]),
+      });
+      act.done();
+      return reading;
+    },
   );
 }

@@ -4,7 +4,7 @@ import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { useReadingChange } from './use-reading-change';
 
 export function useRemoveDocument(params: RevisionParams) {
-  return useReadingChange<{ documentId: string; version: number }>(params, ({ documentId, version }) =>
+  return useReadingChange<{ documentId: string }>(params, ({ documentId }, { version }) =>
     call(removeDocument, { params: { ...params, documentId }, version }),
   );
 }

@@ -63,7 +63,7 @@ function DocumentLine({
     if (!file) return;
     const found = documentFileFault(file, limits.documentBytes);
     setFault(found);
-    if (!found) attach.mutate({ documentId: row.id, version: row.version, file });
+    if (!found) attach.mutate({ documentId: row.id, file });
   };
   const problem = attach.error ?? remove.error;
   return (
@@ -98,7 +98,7 @@ function DocumentLine({
           <Button
             kind="inline"
             isPending={remove.isPending}
-            onPress={() => remove.mutate({ documentId: row.id, version: row.version })}
+            onPress={() => remove.mutate({ documentId: row.id })}
             aria-label={`Remove ${row.added ? '' : 'the file of '}${row.label}`}
           >
             {row.added ? 'Remove' : 'Remove the file'}

@@ -9,6 +9,7 @@ import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { announce } from '../../../lib/announce';
 import { paths } from '../../../lib/paths';
+import { usePrintedRevision } from '../../../lib/print-frame';
 import { asProblem } from '../../../lib/problem';
 import { type RevisionParams, useRevision } from '../../../lib/queries/revision-query';
 import { useMediaQuery } from '../../../lib/use-media-query';
@@ -35,6 +36,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   const reading = useReading(params);
   const revision = useRevision(params);
   usePageTitle(`Reading of ${revision.mixDesignation} revision ${revision.number}`);
+  usePrintedRevision(revision);
   const [cursor, setCursor] = useCellCursor(firstPlace(reading));
   const answers = useKeepAnswers(params);
   const attributes = useKeepAttributes(params);
@@ -47,7 +49,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   };
   const openFindings = useOpenFindings(params);
   useReadingKeys({ reading, cursor, onCursor: setCursor, onAnswer: answer, onFindings: openFindings });
-  const isNarrow = useMediaQuery('(max-width: 759px)');
+  const isNarrow = useMediaQuery('screen and (max-width: 759px)');
 
   const problem = answers.error ?? attributes.error;
   const head = (

@@ -60,58 +60,63 @@ export function SheetGridView({
   };
   const drawing = { ...rows, sheet, merged, letters, selected: cursor.cell, idPrefix };
   return (
-    <div
-      ref={scroller}
-      className="sheet-scroll"
-      onScroll={({ currentTarget }) =>
-        onWindow(
-          rowWindow({
-            scrollPx: currentTarget.scrollTop,
-            heightPx: currentTarget.clientHeight,
-            rowPx,
-            rowCount,
-          }),
-        )
-      }
-    >
-      <table
-        className="sheet sheet-whole"
-        // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the sheet is a grid whose cursor the arrow keys move.
-        role="grid"
-        aria-label={`Sheet ${sheet.name}`}
-        aria-rowcount={rowCount + 1}
-        aria-colcount={columnCount + 1}
-        aria-activedescendant={`${idPrefix}${cursor.cell}`}
-        tabIndex={0}
-        onKeyDown={onKeyDown}
-        style={{ minWidth: `${rowNumberRem + widths.reduce((sum, width) => sum + width, 0) / 14}rem` }}
+    <>
+      <p className="print-only small">
+        Printed are rows {first} to {last} of the {rowCount} of sheet {sheet.name}, those in sight.
+      </p>
+      <div
+        ref={scroller}
+        className="sheet-scroll"
+        onScroll={({ currentTarget }) =>
+          onWindow(
+            rowWindow({
+              scrollPx: currentTarget.scrollTop,
+              heightPx: currentTarget.clientHeight,
+              rowPx,
+              rowCount,
+            }),
+          )
+        }
       >
-        <colgroup>
-          <col style={{ width: `${rowNumberRem}rem` }} />
-          {widths.map((width, index) => (
-            // biome-ignore lint/suspicious/noArrayIndexKey: a column is its place.
-            <col key={index} style={{ width: `${width / 14}rem` }} />
-          ))}
-        </colgroup>
-        <thead>
-          <ColumnHeads sheet={sheet} to={columnCount} />
-        </thead>
-        <tbody>
-          <Spacer rows={first - 1} />
-          {numbersBetween(first, last).map((row) => (
-            <SheetRow
-              key={row}
-              row={row}
-              toColumn={columnCount}
-              lastRow={last}
-              drawing={drawing}
-              onCell={(cell) => onCursor({ sheet: cursor.sheet, cell })}
-            />
-          ))}
-          <Spacer rows={rowCount - last} />
-        </tbody>
-      </table>
-    </div>
+        <table
+          className="sheet sheet-whole"
+          // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the sheet is a grid whose cursor the arrow keys move.
+          role="grid"
+          aria-label={`Sheet ${sheet.name}`}
+          aria-rowcount={rowCount + 1}
+          aria-colcount={columnCount + 1}
+          aria-activedescendant={`${idPrefix}${cursor.cell}`}
+          tabIndex={0}
+          onKeyDown={onKeyDown}
+          style={{ minWidth: `${rowNumberRem + widths.reduce((sum, width) => sum + width, 0) / 14}rem` }}
+        >
+          <colgroup>
+            <col style={{ width: `${rowNumberRem}rem` }} />
+            {widths.map((width, index) => (
+              // biome-ignore lint/suspicious/noArrayIndexKey: a column is its place.
+              <col key={index} style={{ width: `${width / 14}rem` }} />
+            ))}
+          </colgroup>
+          <thead>
+            <ColumnHeads sheet={sheet} to={columnCount} />
+          </thead>
+          <tbody>
+            <Spacer rows={first - 1} />
+            {numbersBetween(first, last).map((row) => (
+              <SheetRow
+                key={row}
+                row={row}
+                toColumn={columnCount}
+                lastRow={last}
+                drawing={drawing}
+                onCell={(cell) => onCursor({ sheet: cursor.sheet, cell })}
+              />
+            ))}
+            <Spacer rows={rowCount - last} />
+          </tbody>
+        </table>
+      </div>
+    </>
   );
 }
 

@@ -1,3 +1,4 @@
+import { usePrintedRevision } from '../../../lib/print-frame';
 import { type RevisionParams, useRevision } from '../../../lib/queries/revision-query';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useReturn } from '../api/get-return';
@@ -10,6 +11,7 @@ export function ReturnPage({ params }: { params: RevisionParams }) {
   const view = useReturn(params);
   const revision = useRevision(params);
   usePageTitle(`Return of ${revision.mixDesignation} revision ${revision.number}`);
+  usePrintedRevision(revision);
   return view.state === 'sent' ? (
     <SentPage params={params} view={view} revision={revision} />
   ) : (

@@ -1,8 +1,13 @@
 import { requestPasswordReset, resetPassword } from '#shared/contracts/session';
+import { useActKey } from '../../../lib/act-key';
 import { call } from '../../../lib/api';
 
-export function askForPasswordReset(email: string) {
-  return call(requestPasswordReset, { body: { email } });
+export function useAskForPasswordReset() {
+  const act = useActKey();
+  return async (email: string) => {
+    await call(requestPasswordReset, { body: { email }, idempotencyKey: act.keyFor(email) });
+    act.done();
+  };
 }
 
 export function setNewPassword(token: string, password: string) {

@@ -9,10 +9,11 @@ import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { useContractForm } from '../../../lib/form';
 import { paths } from '../../../lib/paths';
 import { usePageTitle } from '../../../lib/use-page-title';
-import { askForPasswordReset } from '../api/password-resets';
+import { useAskForPasswordReset } from '../api/password-resets';
 
 export function ForgottenPasswordPage() {
   usePageTitle('Ask for a new password');
+  const askForPasswordReset = useAskForPasswordReset();
   const [sentTo, setSentTo] = useState<string | null>(null);
   const { form, problem, onSubmit } = useContractForm({
     schema: requestPasswordReset.body!,

@@ -44,15 +44,18 @@ export function useReplaceWorkbook({
   version,
 }: Pick<Revision, 'submittalId' | 'number' | 'version'>) {
   const keep = useKeepRevision();
-  return async (workbook: File) =>
-    keep(
-      await call(replaceWorkbook, {
-        params: { submittalId, number },
-        body: {},
-        files: { workbook },
-        version,
-      }),
-    );
+  const act = useActKey();
+  return async (workbook: File) => {
+    const revision = await call(replaceWorkbook, {
+      params: { submittalId, number },
+      body: {},
+      files: { workbook },
+      version,
+      idempotencyKey: act.keyFor([version, workbook]),
+    });
+    act.done();
+    return keep(revision);
+  };
 }
 
 function useKeepRevision() {

@@ -54,7 +54,7 @@ export function ReadingProgress({
         what={job.progress || 'Waiting to be read.'}
         whenLong="Large workbooks take longer: every cell is read, hidden sheets too. You may leave this page; reading goes on."
       />
-      <Button onPress={() => cancel.mutate(job.id)} isPending={cancel.isPending}>
+      <Button onPress={() => cancel.mutate(job)} isPending={cancel.isPending}>
         Cancel reading
       </Button>
       {cancel.error ? <ProblemNotice problem={asProblem(cancel.error)} /> : null}
