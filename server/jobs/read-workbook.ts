@@ -41,6 +41,8 @@ export async function readWorkbookJob(context: JobContext): Promise<void> {
     grid,
     fileName: row.workbook.fileName,
     edition,
+    resolvedHash: section.resolvedHash,
+    agencyId: row.agency.id,
     answers: await listAnswers(deps.db, reader, revisionId),
     templateHref: templateHrefOf(submittal),
   });

@@ -57,7 +57,8 @@ export const contractorSchema = z.strictObject({
   id: idSchema,
   name: z.string(),
   projects: z.number().int(),
-  people: z.number().int(),
+  /** True once somebody belongs to it. */
+  joined: z.boolean(),
   invited: z.boolean(),
 });
 

@@ -26,6 +26,8 @@ export async function keepAnswers(deps: Deps, act: DraftChange & { given: GivenA
       grid,
       fileName: row.workbook.fileName,
       edition: kept.edition,
+      resolvedHash: kept.section.resolvedHash,
+      agencyId: row.agency.id,
       answers: await listAnswers(tx, actor, row.revision.id),
       templateHref: templateHrefOf(row.submittal),
     });

@@ -7,15 +7,17 @@ import { recogniseTemplate } from '#rules/reading/template-stamp';
 import type { Doubt } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import type { Database } from '../../db/client';
-import { findResolvedEdition } from '../../db/resolved-edition';
 import { Problem } from '../../problem';
+import { ownResolvedEdition } from '../projects/own-edition';
 import { trimUnread } from './trim-unread';
 
 interface ReadGrid {
   grid: CellGrid;
   fileName: string;
-  /** Of the section that judges it. */
+  /** Of the section that judges it, with its hash and its agency. */
   edition: ResolvedEdition;
+  resolvedHash: string;
+  agencyId: string;
   answers: Answer[];
   /** Where the section's own template is. */
   templateHref: string;
@@ -29,7 +31,7 @@ export interface GridRead {
 /** Reads a stored grid through the mapping of its layout; another layout than the template is refused with a remedy. */
 export async function readGrid(
   db: Database,
-  { grid, fileName, edition, answers, templateHref }: ReadGrid,
+  { grid, fileName, edition, resolvedHash, agencyId, answers, templateHref }: ReadGrid,
 ): Promise<GridRead> {
   const stamp = recogniseTemplate(grid);
   if (stamp === null) {
@@ -40,7 +42,9 @@ export async function readGrid(
     });
   }
   // A template of an earlier edition keeps its own places; what they mean is the section's to say.
-  const made = (await findResolvedEdition(db, stamp.editionHash)) ?? edition;
+  const hash = stamp.editionHash;
+  const earlier = hash === resolvedHash ? null : await ownResolvedEdition(db, { agencyId, hash });
+  const made = earlier ?? edition;
   const document = templateMapping(made);
   const unanswered = readWorkbook({ grid, mapping: document, edition, answers: [] });
   const read =

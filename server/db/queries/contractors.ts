@@ -8,7 +8,10 @@ interface OfAgency {
   now: Date;
 }
 
-/** Contractors that work with an agency, by name; their projects are counted with this agency only. */
+/**
+ * Contractors that work with an agency, by name; their projects are counted with this agency only. How many people
+ * a contractor has is its own affair: the agency is told whether the first has joined.
+ */
 export async function listContractorsOf(db: Database, { agencyId, now }: OfAgency) {
   const contractors = await db
     .select({ id: organisations.id, name: organisations.name })
@@ -24,11 +27,11 @@ export async function listContractorsOf(db: Database, { agencyId, now }: OfAgenc
     .innerJoin(projects, eq(projects.id, projectContractors.projectId))
     .where(and(eq(projects.agencyId, agencyId), inArray(projectContractors.contractorId, ids)))
     .groupBy(projectContractors.contractorId);
-  const peopleCounts = await db
-    .select({ id: members.organisationId, total: count() })
+  const joined = await db
+    .selectDistinct({ id: members.organisationId })
     .from(members)
-    .where(inArray(members.organisationId, ids))
-    .groupBy(members.organisationId);
+    .innerJoin(agencyContractors, eq(agencyContractors.contractorId, members.organisationId))
+    .where(eq(agencyContractors.agencyId, agencyId));
   const open = await db
     .select({ id: invitations.organisationId })
     .from(invitations)
@@ -43,7 +46,7 @@ export async function listContractorsOf(db: Database, { agencyId, now }: OfAgenc
   return contractors.map((contractor) => ({
     ...contractor,
     projects: projectCounts.find(({ id }) => id === contractor.id)?.total ?? 0,
-    people: peopleCounts.find(({ id }) => id === contractor.id)?.total ?? 0,
+    joined: joined.some(({ id }) => id === contractor.id),
     invited: open.some(({ id }) => id === contractor.id),
   }));
 }
@@ -62,11 +65,21 @@ export async function findContractorOf(
   return row ?? null;
 }
 
-export async function hasAdministrator(db: Database, organisationId: string): Promise<boolean> {
+export async function hasAdministrator(
+  db: Database,
+  { agencyId, contractorId }: { agencyId: string; contractorId: string },
+): Promise<boolean> {
   const rows = await db
     .select({ id: members.id })
     .from(members)
-    .where(and(eq(members.organisationId, organisationId), like(members.role, '%administrator%')))
+    .innerJoin(agencyContractors, eq(agencyContractors.contractorId, members.organisationId))
+    .where(
+      and(
+        eq(agencyContractors.agencyId, agencyId),
+        eq(members.organisationId, contractorId),
+        like(members.role, '%administrator%'),
+      ),
+    )
     .limit(1);
   return rows.length > 0;
 }

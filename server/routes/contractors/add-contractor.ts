@@ -7,5 +7,5 @@ import { route } from '../define-route';
 export const addContractorRoute = route(addEndpoint, async ({ deps, actor, body, requestId }) => {
   allow(managesProjects(actor));
   const id = await addContractor(deps, { actor, ...body, requestId });
-  return { id, name: body.name, projects: 0, people: 0, invited: true };
+  return { id, name: body.name, projects: 0, joined: false, invited: true };
 });
