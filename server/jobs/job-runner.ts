@@ -148,8 +148,17 @@ async function finish(
     .where(heldBy(id, owner));
 }
 
+/** Whoever would cancel it must know that it has ended. */
+const nextVersion = sql`${jobs.version} + 1`;
+
 function ended(now: Date) {
-  return { owner: null, leaseUntil: null, finishedAt: now, done: sql`greatest(${jobs.done}, ${jobs.total})` };
+  return {
+    owner: null,
+    leaseUntil: null,
+    finishedAt: now,
+    done: sql`greatest(${jobs.done}, ${jobs.total})`,
+    version: nextVersion,
+  };
 }
 
 interface Settling {
@@ -167,7 +176,13 @@ async function settle({ deps, job, owner, error, interrupted }: Settling): Promi
   if (present.cancelRequested) {
     await deps.db
       .update(jobs)
-      .set({ ...letGo, state: 'cancelled', progress: 'Cancelled.', finishedAt: deps.now() })
+      .set({
+        ...letGo,
+        state: 'cancelled',
+        progress: 'Cancelled.',
+        finishedAt: deps.now(),
+        version: nextVersion,
+      })
       .where(heldBy(job.id, owner));
     return;
   }
@@ -196,7 +211,14 @@ async function settle({ deps, job, owner, error, interrupted }: Settling): Promi
   };
   await deps.db
     .update(jobs)
-    .set({ ...letGo, state: 'failed', problem, progress: detail.slice(0, 300), finishedAt: deps.now() })
+    .set({
+      ...letGo,
+      state: 'failed',
+      problem,
+      progress: detail.slice(0, 300),
+      finishedAt: deps.now(),
+      version: nextVersion,
+    })
     .where(heldBy(job.id, owner));
 }
 

@@ -22,6 +22,7 @@ export function presentInvitation(invitation: InvitationRow): Invitation {
     invitedOn: invitation.createdAt.toISOString(),
     expiresOn: invitation.expiresAt.toISOString(),
     mail: invitation.mail,
+    version: invitation.version,
   };
 }
 

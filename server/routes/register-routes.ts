@@ -34,7 +34,7 @@ async function answer(route: Route, http: RawExchange['http'], deps: Deps): Prom
     requestId: requestIdOf(response),
     http,
   };
-  if (!route.endpoint.idempotent || run.idempotencyScope === null) {
+  if (!route.endpoint.idempotent) {
     const result = await run.run(raw);
     sendAnswer(http, route.endpoint, { status: route.endpoint.status ?? 200, result });
     return;
@@ -46,18 +46,23 @@ async function answer(route: Route, http: RawExchange['http'], deps: Deps): Prom
 interface Admitted {
   personId: string | null;
   /** Keys of one person for one organisation are told apart from all others. */
-  idempotencyScope: { personId: string; organisationId: string } | null;
+  idempotencyScope: { personId: string; organisationId: string };
   run(raw: RawExchange): Promise<unknown>;
 }
 
+/** Who has not signed in is told apart by nothing but the key. */
+const nobody = '00000000-0000-0000-0000-000000000000';
+const anybodys = { personId: nobody, organisationId: nobody };
+
 async function admit(route: Route, request: Request, deps: Deps): Promise<Admitted> {
   if (route.access === 'open') {
-    return { personId: null, idempotencyScope: null, run: (raw) => route.run(raw) };
+    return { personId: null, idempotencyScope: anybodys, run: (raw) => route.run(raw) };
   }
   const signedIn = await authenticate(request, deps);
   const personId = signedIn.person.id;
   if (route.access === 'person') {
-    return { personId, idempotencyScope: null, run: (raw) => route.run(raw, signedIn) };
+    const idempotencyScope = { ...anybodys, personId };
+    return { personId, idempotencyScope, run: (raw) => route.run(raw, signedIn) };
   }
   const actor = await actorOf(signedIn, deps);
   return {

@@ -75,6 +75,7 @@ export const checkAgain = endpoint({
   response: checkViewSchema,
   status: 201,
   idempotent: true,
+  versioned: true,
 });
 
 export const proveSeal = endpoint({

@@ -24,6 +24,7 @@ export const invitationSchema = z.strictObject({
   invitedOn: instantSchema,
   expiresOn: instantSchema,
   mail: z.enum(['waiting', 'sent', 'failed']),
+  version: z.number().int(),
 });
 
 export const listPeople = endpoint({
@@ -73,6 +74,7 @@ export const withdrawInvitation = endpoint({
   summary: 'Withdraw an open invitation',
   params: z.strictObject({ invitationId: idSchema }),
   status: 204,
+  versioned: true,
 });
 
 export const getInvitation = endpoint({

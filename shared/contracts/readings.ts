@@ -143,6 +143,7 @@ export const attachFile = endpoint({
   body: z.strictObject({}),
   files: ['file'],
   response: readingViewSchema,
+  idempotent: true,
   versioned: true,
 });
 

@@ -92,6 +92,7 @@ export const requestPasswordReset = endpoint({
   body: z.strictObject({ email: emailSchema }),
   status: 204,
   open: true,
+  idempotent: true,
 });
 
 export const resetPassword = endpoint({

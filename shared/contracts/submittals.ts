@@ -26,6 +26,8 @@ export const jobSchema = z.strictObject({
   problem: z
     .strictObject({ slug: z.string(), detail: z.string(), fix: z.string(), href: z.string().nullable() })
     .nullable(),
+  /** Of what a canceller has to know: it moves when the work is to be cancelled and when it has ended. */
+  version: z.number().int(),
 });
 
 export const revisionListItemSchema = z.strictObject({
@@ -199,6 +201,7 @@ export const replaceWorkbook = endpoint({
   files: ['workbook'],
   response: revisionSchema,
   status: 202,
+  idempotent: true,
   versioned: true,
 });
 
@@ -262,6 +265,7 @@ export const cancelJob = endpoint({
   summary: 'Cancel long work',
   params: z.strictObject({ jobId: idSchema }),
   response: jobSchema,
+  versioned: true,
 });
 
 export type Job = z.infer<typeof jobSchema>;

@@ -81,6 +81,32 @@ describe('every route', () => {
   );
 });
 
+/** Writes that need neither a version nor a key, and why. */
+const unguarded: Record<string, string> = {
+  'POST /api/session': 'signing in twice is two sign-ins, and neither undoes the other',
+  'DELETE /api/session': 'a session is its browser’s own and ends once',
+  'PUT /api/session/organisation': 'a session is its browser’s own; the last choice holds',
+  'POST /api/password-resets/:token': 'the link works once',
+  'POST /api/invitation-links/:token': 'the link works once',
+  'POST /api/set-up/:token': 'the link works once',
+};
+
+describe('every write', () => {
+  it.each(writes.filter(({ name }) => !(name in unguarded)))(
+    '$name carries the version that it changes, or a key where it creates or sends',
+    ({ endpoint: { method, versioned, idempotent, files } }) => {
+      expect(versioned || (method === 'post' && idempotent)).toBe(true);
+      // What is uploaded is stored, so a repeat must be known for one.
+      if (files !== undefined) expect(idempotent).toBe(true);
+    },
+  );
+
+  it('that needs neither is still there', () => {
+    const names = writes.map(({ name }) => name);
+    expect(Object.keys(unguarded).filter((name) => !names.includes(name))).toEqual([]);
+  });
+});
+
 describe('the description of the API', () => {
   it('is OpenAPI 3.1 and names every route', async () => {
     const { body } = await request(test.app).get('/api/openapi.json').expect(200);

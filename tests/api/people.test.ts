@@ -193,7 +193,7 @@ describe('an invitation', () => {
       .select()
       .from(invitations)
       .where(eq(invitations.email, 'withdrawn@larkmoor.example'));
-    await administrator.delete(`/api/invitations/${row?.id}`).expect(204);
+    await administrator.delete(`/api/invitations/${row?.id}`).set('If-Match', '"1"').expect(204);
     await browser(test.app).get(`/api/invitation-links/${token}`).expect(410);
   });
 
@@ -204,7 +204,22 @@ describe('an invitation', () => {
       .from(invitations)
       .where(eq(invitations.email, 'theirs@larkmoor.example'));
     const path = (id: string) => `/api/invitations/${id}`;
-    await expectSameAsAbsent(stranger, row?.id ?? '', { method: 'delete', path });
+    await expectSameAsAbsent(stranger, row?.id ?? '', { method: 'delete', path, version: 1 });
+  });
+
+  it('is not withdrawn by somebody who saw an older one, who is shown the present one', async () => {
+    await invite('stale@larkmoor.example');
+    const [row] = await test.deps.db
+      .update(invitations)
+      .set({ version: 2 })
+      .where(eq(invitations.email, 'stale@larkmoor.example'))
+      .then(() =>
+        test.deps.db.select().from(invitations).where(eq(invitations.email, 'stale@larkmoor.example')),
+      );
+    const answer = await administrator.delete(`/api/invitations/${row?.id}`).set('If-Match', '"1"');
+    expect(answer.status).toBe(412);
+    expect(answer.body.present).toMatchObject({ email: 'stale@larkmoor.example', version: 2 });
+    await administrator.delete(`/api/invitations/${row?.id}`).set('If-Match', '"2"').expect(204);
   });
 
   it('is made by an administrator alone', async () => {
@@ -262,7 +277,7 @@ describe('contractors and laboratories', () => {
       .post('/api/contractors')
       .send({ name: 'Gorse Hill Roads', administrator: { name: 'Ada', email: 'ada@gorse.example' } })
       .expect(201);
-    expect(body).toMatchObject({ name: 'Gorse Hill Roads', people: 0, invited: true });
+    expect(body).toMatchObject({ name: 'Gorse Hill Roads', joined: false, invited: true });
     const listed = (await administrator.get('/api/contractors').expect(200)).body.contractors;
     expect(listed).toContainEqual(body);
     expect(await tokenFor('ada@gorse.example')).not.toBe('');

@@ -165,7 +165,10 @@ describe('a reading that is under way', () => {
     const server = aServer({ held: true });
     server.runner.start();
     await eventually(server.entered);
-    expectStatus(await dele.post(`/api/jobs/${body.job.id}/cancellation`).send(), 200);
+    const cancel = dele
+      .post(`/api/jobs/${body.job.id}/cancellation`)
+      .set('If-Match', `"${body.job.version}"`);
+    expectStatus(await cancel.send(), 200);
     server.letGo();
     await eventually(async () => (await jobOf(body.job.id)).state === 'cancelled', 60_000);
     await server.runner.stop();

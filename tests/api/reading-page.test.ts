@@ -8,6 +8,7 @@ import type { ReadingView } from '#shared/contracts/readings';
 import {
   aDraft,
   aSubmitted,
+  checkAgain,
   type DemoWorld,
   expectStatus,
   pathOf,
@@ -309,7 +310,7 @@ it('marks a check as stale once the section has other layers', async () => {
     .where(own);
   const { body } = await dele.get(`${pathOf(draft)}/check`).expect(200);
   expect(body.stale).toMatch(/edition or layers have changed/);
-  const again = expectStatus(await dele.post(`${pathOf(draft)}/checks`).send({}), 201).body;
+  const again = expectStatus(await checkAgain(dele, draft), 201).body;
   expect(again.stale).toBeNull();
   expect(again.seal.resolvedEdition).toBe(other?.resolvedHash);
   await world.deps.db

@@ -146,6 +146,23 @@ describe('setting a new password', () => {
     expect(again.status).toBe(410);
   });
 
+  it('mails one link for one key, however often it is asked for, and no address is told apart by it', async () => {
+    const person = await aSignedIn(test, { organisation: agency, roles: ['reviewer'] });
+    const ask = (email: string, key: string) =>
+      browser(test.app).post('/api/password-resets').set('Idempotency-Key', key).send({ email });
+    for (const email of [person.email, 'nobody@elsewhere.example']) {
+      await ask(email, `key-of-${email}`).expect(204);
+      await ask(email, `key-of-${email}`).expect(204);
+      const other = await ask('another@elsewhere.example', `key-of-${email}`).expect(422);
+      expect(other.body.type).toBe('/problems/key-reused');
+    }
+    const mails = await test.deps.db.select().from(outbox).where(eq(outbox.subjectId, person.personId));
+    expect(mails).toHaveLength(1);
+    await ask(person.email, 'another-key').expect(204);
+    const later = await test.deps.db.select().from(outbox).where(eq(outbox.subjectId, person.personId));
+    expect(later).toHaveLength(2);
+  });
+
   it('answers alike for an address that nobody has, and writes no mail', async () => {
     const before = await test.deps.db.select().from(outbox);
     const answer = await browser(test.app)

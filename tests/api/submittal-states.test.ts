@@ -8,6 +8,7 @@ import { outbox } from '#server/db/schema/work';
 import {
   aDraft,
   aSubmitted,
+  checkAgain,
   type DemoWorld,
   expectStatus,
   pathOf,
@@ -92,7 +93,7 @@ describe('submitting', () => {
     const draft = await aDraft(world, dele, { mixDesignation: 'ST-ZONE' });
     world.clock.set('2026-03-29T23:30:00.000Z');
     const { version } = await revisionAt(dele, draft.submittalId);
-    expectStatus(await dele.post(`${pathOf(draft)}/checks`).send({}), 201);
+    expectStatus(await checkAgain(dele, draft), 201);
     expect((await revisionAt(dele, draft.submittalId)).version).toBe(version);
     const submitted = expectStatus(await submit(dele, draft), 200).body;
     expect(submitted).toMatchObject({ receivedOn: '2026-03-30', dueOn: '2026-04-13' });
@@ -147,7 +148,7 @@ describe('submitting', () => {
       .set('If-Match', `"${draft.version}"`)
       .send({ declaration: check.declaration, accepted: true, seal: check.seal.seal });
     expect(sent.status).toBe(409);
-    const again = expectStatus(await dele.post(`${pathOf(draft)}/checks`).send({}), 201).body;
+    const again = expectStatus(await checkAgain(dele, draft), 201).body;
     expect(again).toMatchObject({ kind: 'pre-check', submittedOn: '2026-03-10', stale: null });
     expectStatus(await submit(dele, draft), 200);
     world.clock.set('2026-03-09T09:00:00.000Z');
@@ -326,9 +327,14 @@ describe('the check of a submitted revision', () => {
 
   it('is kept beside a new one, by a reviewer', async () => {
     const submitted = await aSubmitted(world);
-    expect((await dele.post(`${pathOf(submitted)}/checks`).send({})).status).toBe(409);
+    expect((await checkAgain(dele, submitted)).status).toBe(409);
+    const stale = await ines
+      .post(`${pathOf(submitted)}/checks`)
+      .set('If-Match', '"1"')
+      .send({});
+    expect(expectStatus(stale, 412).body.present.number).toBe(0);
     world.clock.set('2026-03-11T09:00:00.000Z');
-    const again = expectStatus(await ines.post(`${pathOf(submitted)}/checks`).send({}), 201).body;
+    const again = expectStatus(await checkAgain(ines, submitted), 201).body;
     world.clock.set('2026-03-09T09:00:00.000Z');
     expect(again).toMatchObject({ kind: 'check of record', submittedOn: '2026-03-09' });
     const row = await rowOf(submitted);

@@ -274,10 +274,15 @@ describe('another workbook for a draft', () => {
     const dele = await world.as('Dele Fairweather');
     const draft = await aDraft(world, dele, { mixDesignation: 'UP-5' });
     const bytes = await world.workbook('BW-125-S4 r1.xlsx');
-    const replaced = await dele
-      .put(`${pathOf(draft)}/workbook`)
-      .set('If-Match', `"${draft.version}"`)
-      .attach('workbook', bytes, 'BW-125-S4 r1.xlsx');
+    const send = () =>
+      dele
+        .put(`${pathOf(draft)}/workbook`)
+        .set('If-Match', `"${draft.version}"`)
+        .set('Idempotency-Key', 'key-of-the-other-workbook')
+        .attach('workbook', bytes, 'BW-125-S4 r1.xlsx');
+    const replaced = await send();
+    // Sent again after a lost answer: the same act, not a refusal and not a second replacement.
+    expect(expectStatus(await send(), 202).text).toBe(replaced.text);
     expect(expectStatus(replaced, 202).body).toMatchObject({ number: 0, state: 'draft', hasCheck: false });
     await world.work();
     const now = await revisionAt(dele, draft.submittalId);
@@ -316,10 +321,13 @@ describe('the reading of a workbook', () => {
       202,
     );
     const cancel = `/api/jobs/${body.job.id}/cancellation`;
-    expect((await bram!.post(cancel).send()).status).toBe(404);
-    expect((await gil!.post(cancel).send()).status).toBe(403);
-    const { body: job } = expectStatus(await dele!.post(cancel).send(), 200);
+    const seen = `"${body.job.version}"`;
+    expect((await bram!.post(cancel).set('If-Match', seen).send()).status).toBe(404);
+    expect((await gil!.post(cancel).set('If-Match', seen).send()).status).toBe(403);
+    const { body: job } = expectStatus(await dele!.post(cancel).set('If-Match', seen).send(), 200);
     expect(job.state).toBe('cancelled');
+    const stale = expectStatus(await dele!.post(cancel).set('If-Match', seen).send(), 412);
+    expect(stale.body.present).toEqual(job);
     await world.work();
     expect(await revisionAt(dele!, body.submittalId)).toMatchObject({
       hasCheck: false,

@@ -17,13 +17,14 @@ interface Recheck {
   actor: Actor;
   requestId: string;
   row: RevisionRow;
+  version: number;
 }
 
 /**
  * A draft's pre-check is made anew as of today. Of what is submitted a new sealed check is added: same record, same
  * date of submission, the section as it stands now; the earlier ones stay.
  */
-export async function checkAgain(deps: Deps, { actor, requestId, row }: Recheck): Promise<void> {
+export async function checkAgain(deps: Deps, { actor, requestId, row, version }: Recheck): Promise<void> {
   const { revision, submittal, project, agency } = row;
   await deps.db.transaction(async (tx) => {
     const locked = await lockRevision(tx, actor, revision.id);
@@ -32,6 +33,7 @@ export async function checkAgain(deps: Deps, { actor, requestId, row }: Recheck)
     if (locked === null || kept === null || section === null) {
       throw new Problem('wrong-state', { detail: 'There is no reading to check yet.' });
     }
+    if (locked.version !== version) throw new Problem('version-stale');
     const edition = await loadResolvedEdition(tx, section.resolvedHash);
     if (locked.state === 'draft') {
       await keepReading(tx, deps, {
@@ -59,7 +61,7 @@ export async function checkAgain(deps: Deps, { actor, requestId, row }: Recheck)
     });
     await tx
       .update(revisions)
-      .set({ section, updatedAt: now, version: locked.version + 1 })
+      .set({ section, updatedAt: now, version: version + 1 })
       .where(eq(revisions.id, revision.id));
     await writeAudit(tx, deps, {
       actor,

@@ -36,7 +36,7 @@ export async function acceptInvitation(
   await deps.db.transaction(async (tx) => {
     const [used] = await tx
       .update(invitations)
-      .set({ status: 'accepted' })
+      .set({ status: 'accepted', version: invitation.version + 1 })
       .where(and(eq(invitations.id, invitation.id), eq(invitations.status, 'pending')));
     if (used.affectedRows !== 1) throw new Problem('link-used');
     const { name, password } = acceptance;

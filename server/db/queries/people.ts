@@ -1,4 +1,4 @@
-import { and, asc, desc, eq, gt, inArray, or } from 'drizzle-orm';
+import { and, asc, desc, eq, gt, or } from 'drizzle-orm';
 import type { Database } from '../client';
 import { rolesFromColumn } from '../roles-column';
 import { invitations, members, organisations, people } from '../schema/people';
@@ -52,6 +52,7 @@ const invitationColumns = {
   organisation: organisations.name,
   createdAt: invitations.createdAt,
   expiresAt: invitations.expiresAt,
+  version: invitations.version,
 };
 
 /** Open invitations that an organisation made, or that lead into it; newest first. */
@@ -60,9 +61,10 @@ export async function listOpenInvitations(
   { organisationId, now }: { organisationId: string; now: Date },
 ) {
   const rows = await db
-    .select(invitationColumns)
+    .select({ ...invitationColumns, mail: outbox.state })
     .from(invitations)
     .innerJoin(organisations, eq(organisations.id, invitations.organisationId))
+    .leftJoin(outbox, and(eq(outbox.subjectKind, 'invitation'), eq(outbox.subjectId, invitations.id)))
     .where(
       and(
         or(eq(invitations.organisationId, organisationId), eq(invitations.invitedFromId, organisationId)),
@@ -71,23 +73,10 @@ export async function listOpenInvitations(
       ),
     )
     .orderBy(desc(invitations.createdAt), desc(invitations.id));
-  const mails = await mailStates(
-    db,
-    rows.map((row) => row.id),
-  );
-  return rows.map((row) => ({ ...withRoles(row), mail: mails.get(row.id) ?? ('waiting' as const) }));
+  return rows.map((row) => ({ ...withRoles(row), mail: row.mail ?? ('waiting' as const) }));
 }
 
 export type InvitationRow = Awaited<ReturnType<typeof listOpenInvitations>>[number];
-
-async function mailStates(db: Database, invitationIds: string[]) {
-  if (invitationIds.length === 0) return new Map<string, 'waiting' | 'sent' | 'failed'>();
-  const rows = await db
-    .select({ id: outbox.subjectId, state: outbox.state })
-    .from(outbox)
-    .where(and(eq(outbox.subjectKind, 'invitation'), inArray(outbox.subjectId, invitationIds)));
-  return new Map(rows.map((row) => [row.id, row.state]));
-}
 
 /** A link that still holds, with where it leads; null where it was used, withdrawn or has expired. */
 export async function findInvitationByToken(

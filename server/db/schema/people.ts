@@ -138,6 +138,7 @@ export const invitations = mysqlTable(
     tokenHash: sha256('token_hash').notNull(),
     expiresAt: instant('expires_at').notNull(),
     createdAt: instant('created_at').notNull(),
+    version: version(),
   },
   (table) => [
     uniqueIndex('invitations_token').on(table.tokenHash),

@@ -12,7 +12,7 @@ import {
 } from 'drizzle-orm/mysql-core';
 import { z } from 'zod';
 import { limits } from '#shared/limits';
-import { choice, id, instant, json, longBlob, reference, sha256 } from '../columns';
+import { choice, id, instant, json, longBlob, reference, sha256, version } from '../columns';
 import { files } from './files';
 import { organisations, people } from './people';
 
@@ -52,6 +52,8 @@ export const jobs = mysqlTable(
     createdById: id('created_by_id'),
     createdAt: instant('created_at').notNull(),
     finishedAt: instant('finished_at'),
+    /** Counts what a canceller has to know of: that it is to be cancelled, and that it has ended. */
+    version: version(),
   },
   (table) => [
     index('jobs_state').on(table.state, table.leaseUntil),
@@ -120,6 +122,7 @@ export const idempotencyKeys = mysqlTable(
   'idempotency_keys',
   {
     id: id('id').primaryKey(),
+    /** Whose key it is; for acts that are open to anybody, nobody's id, so neither refers to a row. */
     personId: id('person_id').notNull(),
     organisationId: id('organisation_id').notNull(),
     /** Hash of the header, so that any spelling compares exactly. */
@@ -136,7 +139,6 @@ export const idempotencyKeys = mysqlTable(
   (table) => [
     uniqueIndex('idempotency_keys_key').on(table.personId, table.organisationId, table.key),
     index('idempotency_keys_created').on(table.createdAt),
-    reference('idempotency_keys_person_fk', table.personId, people.id),
   ],
 );
 

@@ -40,7 +40,7 @@ async function contractorWithoutAdministrator(deps: Deps, actor: RequestActor, c
   const contractor = await findContractorOf(deps.db, { agencyId: actor.organisationId, contractorId });
   if (!contractor) throw new Problem('not-found');
   allow(managesProjects(actor));
-  if (await hasAdministrator(deps.db, contractorId)) {
+  if (await hasAdministrator(deps.db, { agencyId: actor.organisationId, contractorId })) {
     throw new Problem('wrong-state', {
       detail: `${contractor.name} has an administrator already.`,
       fix: 'Ask them to invite the person.',

@@ -101,6 +101,15 @@ export async function submit(person: Browser, place: { submittalId: string; numb
     .send({ declaration: check.declaration, accepted: true, seal: check.seal.seal });
 }
 
+/** Has a revision checked anew as its page shows it now. */
+export async function checkAgain(person: Browser, place: { submittalId: string; number: number }) {
+  const { version } = await revisionAt(person, place.submittalId, place.number);
+  return person
+    .post(`${pathOf(place)}/checks`)
+    .set('If-Match', `"${version}"`)
+    .send({});
+}
+
 /** A revision 0 in the agency's hands, taken by the reviewer where one is named. */
 export async function aSubmitted(world: DemoWorld, options: UploadOptions & { takenBy?: string } = {}) {
   const dele = await world.as('Dele Fairweather');

@@ -83,10 +83,12 @@ function lazyPool(): WorkbookPool {
 
 type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
 
+/** Counted over all browsers: before anybody signs in, their keys are told apart by nothing else. */
+let keys = 0;
+
 /** Somebody with a browser: cookies are kept, and writes name the product's own page as their origin. */
 export function browser(app: Express) {
   const agent = request.agent(app);
-  let keys = 0;
   const send = (method: Method, path: string) => {
     const sending = agent[method](path);
     if (method === 'get') return sending;
