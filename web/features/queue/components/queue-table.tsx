@@ -116,7 +116,10 @@ function QueueRow({
 function DueCell({ item }: { item: QueueItem }) {
   if (item.group === 'with the contractor') {
     return (
-      <td className="queue-due">{item.returnedOn ? `since ${formatDateShort(item.returnedOn)}` : ''}</td>
+      <td className="queue-due">
+        {item.returnedOn ? `since ${formatDateShort(item.returnedOn)}` : ''}
+        <small className="queue-stands">{item.stands}</small>
+      </td>
     );
   }
   const late = item.group === 'late' ? 'is-late' : undefined;

@@ -61,8 +61,8 @@ export function SheetGridView({
   const drawing = { ...rows, sheet, merged, letters, selected: cursor.cell, idPrefix };
   return (
     <>
-      <p className="print-only small">
-        Printed are rows {first} to {last} of the {rowCount} of sheet {sheet.name}, those in sight.
+      <p className="print-only small py-1">
+        Printed: rows {first} to {last} of the {rowCount} of sheet {sheet.name}.
       </p>
       <div
         ref={scroller}

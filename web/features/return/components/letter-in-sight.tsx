@@ -52,6 +52,7 @@ export function LetterInSight({
           </Button>
         </span>
       </div>
+      <p className="print-only small py-1">The letter is printed from its own PDF.</p>
       {showsMail ? <MailText params={params} version={version} /> : null}
       {!showsMail && error ? (
         <ProblemNotice problem={asProblem(error)} unaffected="The draft and its items are not affected." />

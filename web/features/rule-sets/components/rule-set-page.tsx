@@ -77,9 +77,12 @@ export function RuleSetPage() {
 }
 
 function footTexts(view: RuleSetView): string[] {
-  const texts = [stateCaution(view.state), view.startingPoint ? cautions.startingPoint : null];
-  const said = texts.filter((text) => text !== null);
-  return said.length > 0 ? said : [cautions.contract];
+  const texts = [
+    stateCaution(view.state),
+    view.startingPoint ? cautions.startingPoint : null,
+    cautions.contract,
+  ];
+  return texts.filter((text) => text !== null);
 }
 
 /** An address may name a rule or a table; the page comes to it after its data. */

@@ -10,6 +10,7 @@ import { usePageTitle } from '../../../lib/use-page-title';
 import { useReplaceWorkbook } from '../api/upload-workbook';
 import { ChosenWorkbook } from './chosen-workbook';
 import { ReadingProgress } from './reading-progress';
+import { ReplacedWorkbooks } from './replaced-workbooks';
 
 /** The workbook of a draft: how far its reading is, why it failed, and another one in its place. */
 export function WorkbookPage({ params, justUploaded }: { params: RevisionParams; justUploaded: boolean }) {
@@ -42,6 +43,7 @@ export function WorkbookPage({ params, justUploaded }: { params: RevisionParams;
         {revision.abilities.replaceWorkbook ? (
           <Replacement revision={revision} onReplaced={() => setIsFollowed(true)} />
         ) : null}
+        <ReplacedWorkbooks params={params} replaced={revision.replacedWorkbooks} />
       </div>
     </PlainPage>
   );
