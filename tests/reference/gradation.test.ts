@@ -7,6 +7,11 @@ import {
   nominalMaximumSize,
   type SievePoint,
 } from '#rules/calculations/gradation';
+import { evaluate } from '#rules/engine/evaluate';
+import { sieveFromName } from '#rules/quantities/sieves';
+import { aReading } from '#tests/builders/a-reading';
+import { aContext, aRecord } from '#tests/builders/a-record';
+import { anEdition, aRule } from '#tests/builders/a-rule-set';
 import records from './gradation.json';
 import { numberOf, referenceRecord } from './reference-record';
 
@@ -137,4 +142,24 @@ describe('fineness modulus', () => {
       expect(finenessModulus(half.filter(({ openingMm }) => openingMm !== missing)).ok).toBe(false);
     }
   });
+});
+
+it('judges a sand ratio by its formula: 37.4 percent (Mississippi DOT, Field Manual for HMA, p. 16)', () => {
+  const { inputs, expected } = referenceRecord(records, 'GRD-07', {
+    inputs: z.object({ passing: z.record(z.string(), z.number()) }),
+    expected: z.looseObject({ sand_ratio: z.number() }),
+  });
+  const readings = Object.entries(inputs.passing).map(([name, value]) =>
+    aReading({
+      quantity: 'percent-passing',
+      value,
+      at: { trial: 'design', sieve: sieveFromName(name.includes('/') ? `${name} in` : name)! },
+    }),
+  );
+  const measure = { kind: 'formula' as const, expression: '100*(P0.6 - P0.075)/(P2.36 - P0.075)', unit: '%' };
+  const edition = anEdition({
+    rules: [aRule({ measure, limit: { max: '50' }, rounding: { method: 'rounding', to: 0.1 } })],
+  });
+  const [finding] = evaluate(aRecord({ readings }), edition, aContext()).findings;
+  expect(finding).toMatchObject({ outcome: 'pass', observed: { rounded: expected.sand_ratio } });
 });
