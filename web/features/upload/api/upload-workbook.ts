@@ -43,6 +43,7 @@ export function useReplaceWorkbook({
   number,
   version,
 }: Pick<Revision, 'submittalId' | 'number' | 'version'>) {
+  const client = useQueryClient();
   const keep = useKeepRevision();
   const act = useActKey();
   return async (workbook: File) => {
@@ -52,6 +53,10 @@ export function useReplaceWorkbook({
       files: { workbook },
       version,
       idempotencyKey: act.keyFor([version, workbook]),
+    }).catch(async (error: unknown) => {
+      // Whoever repeats it after "it has changed" has to have the present version.
+      await client.invalidateQueries({ queryKey: revisionQuery({ submittalId, number }).queryKey });
+      throw error;
     });
     act.done();
     return keep(revision);

@@ -16,7 +16,7 @@ export function ReplacedWorkbooks({ params, replaced }: ReplacedWorkbooksProps) 
   if (replaced.length === 0) return null;
   return (
     <section className="pt-4">
-      <SectionHead title="Replaced workbooks" about="as they were uploaded; you alone see them" />
+      <SectionHead title="Replaced workbooks" about="as they were uploaded; the agency does not see them" />
       <ul>
         {replaced.map(({ id, fileName, replacedBy, replacedAt }) => (
           <li key={id}>
