@@ -4,6 +4,7 @@ import { decodeWorkbook } from '#server/workbook/decode';
 import { demoEdition, demoWorkbooks } from '#tests/workbooks/demo/write-demo-workbooks';
 import { benchFirstScreen } from './first-screen';
 import { benchFullCheck, benchGrowth } from './full-check';
+import { benchLighthouse } from './lighthouse';
 import { benchUploadToFindings } from './upload-to-findings';
 import { benchStart } from './warm-start';
 
@@ -25,3 +26,4 @@ console.log(await benchGrowth(record, edition));
 console.log(await benchUploadToFindings(bytes, edition));
 console.log(benchFirstScreen());
 console.log(await benchStart());
+console.log(await benchLighthouse());
