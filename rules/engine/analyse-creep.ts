@@ -3,7 +3,7 @@ import type { CreepModelName } from '../calculations/creep-model';
 import { numberWords } from '../rule-sets/words';
 import type { CreepAnalysis, CreepAnalysisPoint, CreepCurve, CreepMasterCurve } from './creep-analysis';
 import { fitOf, masterOf } from './creep-fits';
-import { type CreepPoint, cellOf, creepPoints } from './creep-points';
+import { type CreepPoint, cellOf, creepPoints, inOrder } from './creep-points';
 import { remarksOf } from './creep-remarks';
 import { decadeWords, fittable } from './creep-value';
 import { naturalOrder } from './natural-order';
@@ -117,15 +117,6 @@ function curveOf({ temperature, points }: TemperatureGroup, stress: number | nul
 function methodOf(evidence: CreepPoint['evidence']): string[] {
   if (evidence.method !== undefined) return [evidence.method];
   return (evidence.inputs ?? []).flatMap(methodOf);
-}
-
-function inOrder(a: CreepPoint, b: CreepPoint): number {
-  return (
-    a.at.time! - b.at.time! ||
-    naturalOrder(a.specimen ?? '', b.specimen ?? '') ||
-    (a.at.stress ?? 0) - (b.at.stress ?? 0) ||
-    a.value! - b.value!
-  );
 }
 
 function presented({ at, specimen, value, count, evidence }: CreepPoint): CreepAnalysisPoint {

@@ -1,6 +1,7 @@
 import type { Conditions, Origin, Source } from '../record';
 import type { RecomputedValue } from './analysis';
 import type { Evidence } from './finding';
+import { naturalOrder } from './natural-order';
 import { evidenceOfReading, evidenceOfRecomputed } from './sample';
 import type { UsableReading, World } from './world';
 
@@ -35,9 +36,19 @@ export function creepPoints(world: World): CreepPoint[] {
     .map(pointOfReading);
   const usable = [...ofComputed, ...stated];
   const faulty = faultyReadings(world).filter(({ at }) => !usable.some((each) => standsFor(each, at)));
-  const points = [...usable, ...faulty];
+  const points = [...usable, ...faulty].toSorted(inOrder);
   pointsOfWorld.set(world, points);
   return points;
+}
+
+/** By loading time, specimen and stress: nothing may depend on the order of a record's readings. */
+export function inOrder(a: CreepPoint, b: CreepPoint): number {
+  return (
+    (a.at.time ?? -1) - (b.at.time ?? -1) ||
+    naturalOrder(a.specimen ?? '', b.specimen ?? '') ||
+    (a.at.stress ?? 0) - (b.at.stress ?? 0) ||
+    (a.value ?? 0) - (b.value ?? 0)
+  );
 }
 
 /** Cell of a point: its own, else the first of what it is made of. */

@@ -33,13 +33,15 @@ export interface FitTolerance {
   step: number;
   /** Gain of the last step in the sum of squares. */
   reduction: number;
+  /** Largest such cosine with which a short or idle step still counts: a damped step is short anywhere. */
+  proof: number;
 }
 
 /** As near to the minimum as the arithmetic comes. */
-export const FINE: FitTolerance = { cosine: 1e-11, step: 1e-11, reduction: 1e-13 };
+export const FINE: FitTolerance = { cosine: 1e-11, step: 1e-11, reduction: 1e-13, proof: 1e-5 };
 
 /** Near enough to tell one minimum from another, for choosing among several starts. */
-export const COARSE: FitTolerance = { cosine: 1e-4, step: 1e-3, reduction: 1e-3 };
+export const COARSE: FitTolerance = { cosine: 1e-4, step: 1e-3, reduction: 1e-3, proof: 2 };
 
 /**
  * Nonlinear least squares from one start: minimises Σr(p)², with bounds.
@@ -75,11 +77,8 @@ export function levenbergMarquardt(
 }
 
 /** Tries steps, each shorter than the one before, until one reduces the sum. Null where it goes on from there. */
-function improve(
-  state: State,
-  free: number[],
-  { step: least, reduction }: FitTolerance,
-): LeastSquaresFit['stop'] | null {
+function improve(state: State, free: number[], tolerance: FitTolerance): LeastSquaresFit['stop'] | null {
+  const isFlat = state.largestCosine(free) < Math.max(tolerance.proof, state.cosineNoise());
   while (state.damping < MOST_DAMPING) {
     const step = state.dampedStep(free);
     if (step !== null) {
@@ -87,21 +86,20 @@ function improve(
       const { accepted, relativeStep } = state.attempt(free, step);
       if (accepted) {
         state.damping = Math.max(state.damping / 8, LEAST_DAMPING);
-        if (relativeStep < least) return 'step';
-        return before - state.sum < reduction * before && relativeStep < LONGEST_LAST_STEP
-          ? 'reduction'
-          : null;
+        if (!isFlat) return null;
+        if (relativeStep < tolerance.step) return 'step';
+        const isIdle = before - state.sum < tolerance.reduction * before;
+        return isIdle && relativeStep < LONGEST_LAST_STEP ? 'reduction' : null;
       }
-      if (relativeStep < least) return 'step';
+      if (isFlat && relativeStep < tolerance.step) return 'step';
     }
     state.damping *= 6;
   }
-  // No step helps any more: at the noise of the arithmetic that is the minimum, elsewhere it is a failure.
-  return state.largestCosine(free) < STALLED_COSINE ? 'gradient' : 'stalled';
+  // No step helps any more: where the sum is flat that is the minimum, elsewhere it is a failure.
+  return isFlat ? 'gradient' : 'stalled';
 }
 
 const MOST_ITERATIONS = 300;
-const STALLED_COSINE = 1e-5;
 /** A tiny gain on a long step is a flat valley, along which it is worth going on. */
 const LONGEST_LAST_STEP = 1e-4;
 const LEAST_DAMPING = 1e-12;
@@ -184,6 +182,11 @@ class State {
       if (length > 0) largest = Math.max(largest, Math.abs(this.gradient[i]!) / length);
     }
     return largest;
+  }
+
+  /** What rounding alone makes of that cosine where the residuals have all but vanished. */
+  cosineNoise(): number {
+    return EXACT_RESIDUAL / Math.sqrt(this.sum / this.problem.residualCount);
   }
 
   dampedStep(free: number[]): Float64Array | null {

@@ -29,6 +29,9 @@ export function roundTo({ value, to, method }: RoundingOptions): number {
   if (!Number.isFinite(value)) throw new RangeError('Only a finite number can be rounded.');
   if (method === 'absolute') return value;
   if (!Number.isFinite(to) || to <= 0) throw new RangeError('The unit of rounding must be above zero.');
+  const decimals = decimalSteps.get(to);
+  const short = decimals === undefined ? null : fixedText(value, decimals, method);
+  if (short !== null) return Number(short) + 0;
   const unit = new Exact(to);
   return new Exact(value).div(unit).toDecimalPlaces(0, modes[method]).mul(unit).toNumber() + 0;
 }
@@ -40,6 +43,11 @@ export function roundTo({ value, to, method }: RoundingOptions): number {
  * @example decimalsOf('0.80') // 2
  */
 export function decimalsOf(written: string | number): number {
+  if (typeof written === 'number' && Number.isFinite(written)) {
+    const text = `${written}`;
+    const point = text.indexOf('.');
+    if (!text.includes('e')) return point < 0 ? 0 : text.length - point - 1;
+  }
   const match = /^[-+]?\d*(?:\.(\d*))?(?:e([-+]?\d+))?$/i.exec(String(written).trim());
   if (!match) return 0;
   return Math.max(0, (match[1]?.length ?? 0) - Number(match[2] ?? 0));
@@ -47,9 +55,46 @@ export function decimalsOf(written: string | number): number {
 
 /** A number written with so many decimals, an exact half to the even digit. */
 export function formatDecimals(value: number, decimals: number): string {
-  const text = new Exact(value).toFixed(decimals, Decimal.ROUND_HALF_EVEN);
+  const text =
+    fixedText(value, decimals, 'rounding') ?? new Exact(value).toFixed(decimals, Decimal.ROUND_HALF_EVEN);
   return /^-0(\.0*)?$/.test(text) ? text.slice(1) : text;
 }
+
+/**
+ * The number with so many decimals, worked out on the digits of its shortest decimal form; null where it is written
+ * with an exponent or has more digits than an integer holds exactly, for the slow way to do.
+ */
+function fixedText(
+  value: number,
+  decimals: number,
+  method: Exclude<RoundingMethod, 'absolute'>,
+): string | null {
+  const text = `${Math.abs(value)}`;
+  if (text.includes('e') || text === 'Infinity' || text === 'NaN') return null;
+  const point = text.indexOf('.');
+  const whole = point < 0 ? text : text.slice(0, point);
+  const fraction = point < 0 ? '' : text.slice(point + 1);
+  const kept = whole + fraction.slice(0, decimals).padEnd(decimals, '0');
+  if (kept.length > EXACT_DIGITS) return null;
+  const digits = Number(kept) + (roundsUp(kept, fraction.slice(decimals), method) ? 1 : 0);
+  const all = `${digits}`.padStart(decimals + 1, '0');
+  const cut = all.length - decimals;
+  const sign = value < 0 && digits !== 0 ? '-' : '';
+  return `${sign}${all.slice(0, cut)}${decimals === 0 ? '' : `.${all.slice(cut)}`}`;
+}
+
+function roundsUp(kept: string, rest: string, method: Exclude<RoundingMethod, 'absolute'>): boolean {
+  if (rest === '' || method === 'truncate' || rest < '5') return false;
+  if (rest !== '5' || method === 'half-up') return true;
+  return Number(kept.at(-1)) % 2 === 1;
+}
+
+/** Every integer of so many digits, and the next one, is a number of its own. */
+const EXACT_DIGITS = 15;
+
+const decimalSteps = new Map(
+  Array.from({ length: 10 }, (_, decimals) => [Number(`1e-${decimals}`), decimals]),
+);
 
 /** Wide enough that the quotient of two doubles in shortest form is never itself rounded at a half. */
 const Exact = Decimal.clone({ precision: 60 });
