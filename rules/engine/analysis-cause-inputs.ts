@@ -1,5 +1,5 @@
 import { decimalsOf, roundTo } from '../numerics/round';
-import type { CauseInputs } from './analysis-causes';
+import type { CauseInputs } from './analysis-cause-table';
 import { displayedUnit } from './analysis-digits';
 import type { AnalysisNode } from './analysis-node';
 
@@ -23,6 +23,7 @@ export function causeInputsOf(node: AnalysisNode, trialNodes: AnalysisNode[]): C
   const va = inTrial.get('air-voids');
   const vma = inTrial.get('voids-in-mineral-aggregate');
   return {
+    own: node.value,
     Pb: get('Pb', 'binder-content'),
     Gb: get('Gb', 'binder-specific-gravity'),
     Gmm: get('Gmm', 'maximum-specific-gravity'),
@@ -42,6 +43,9 @@ export function causeInputsOf(node: AnalysisNode, trialNodes: AnalysisNode[]): C
     VaShown: shown(get('Va', 'air-voids'), va),
     VMAShown: shown(get('VMA', 'voids-in-mineral-aggregate'), vma),
     VaOfRatios: pairedVoids(node),
+    PbeShown: shown(get('Pbe', 'effective-binder-content'), inTrial.get('effective-binder-content')),
+    GmmShown: shown(get('Gmm', 'maximum-specific-gravity'), inTrial.get('maximum-specific-gravity'), 0.001),
+    GmbShown: shown(get('Gmb', 'bulk-specific-gravity-mix'), inTrial.get('bulk-specific-gravity-mix'), 0.001),
     S1: get('S1'),
     S2: get('S2'),
     ratioOfPairs: pairedRatio(node),
@@ -49,8 +53,7 @@ export function causeInputsOf(node: AnalysisNode, trialNodes: AnalysisNode[]): C
     A: get('A'),
     B: get('B'),
     C: get('C'),
-    hRef: node.quantity === 'relative-density' ? (node.inputs[2]?.value ?? Number.NaN) : Number.NaN,
-    hN: node.quantity === 'relative-density' ? (node.inputs[3]?.value ?? Number.NaN) : Number.NaN,
+    ...heightsOf(node),
     P: get('P'),
     t: get('t'),
     D: get('D'),
@@ -91,10 +94,10 @@ function unweightedMean(node: AnalysisNode): number {
   return values.reduce((sum, { value }) => sum + value, 0) / values.length;
 }
 
-/** With the decimals that the workbook shows its own value with; one decimal where it shows none. */
-function shown(value: number, node: AnalysisNode | undefined): number {
+/** With the decimals that the workbook shows its own value with; the usual ones where it shows none. */
+function shown(value: number, node: AnalysisNode | undefined, usual = 0.1): number {
   if (!Number.isFinite(value)) return Number.NaN;
-  const to = node?.reported?.source ? displayedUnit(node.reported) : 0.1;
+  const to = node?.reported?.source ? displayedUnit(node.reported) : usual;
   return decimalsOf(to) > 6 ? value : roundTo({ value, to, method: 'rounding' });
 }
 
@@ -119,6 +122,22 @@ function pairedMean(
   const right = second?.inputs ?? [];
   if (left.length < 2 || left.length !== right.length) return Number.NaN;
   return left.reduce((sum, { value }, place) => sum + compute(value, right[place]!.value), 0) / left.length;
+}
+
+/** Of a mean over specimens: the means, and the mean of each specimen's density with its heights turned round. */
+function heightsOf(node: AnalysisNode): { hRef: number; hN: number; densityTurnedRound: number } {
+  const specimens =
+    node.inputs[2] === undefined || node.formula?.startsWith('mean of') ? node.inputs : [node];
+  const isOfHeights =
+    node.quantity === 'relative-density' && specimens.every(({ inputs }) => inputs.length === 4);
+  if (!isOfHeights) return { hRef: Number.NaN, hN: Number.NaN, densityTurnedRound: Number.NaN };
+  const average = (of: (values: number[]) => number) =>
+    specimens.reduce((sum, { inputs }) => sum + of(inputs.map(({ value }) => value)), 0) / specimens.length;
+  return {
+    hRef: average(([, , hRef]) => hRef!),
+    hN: average(([, , , hN]) => hN!),
+    densityTurnedRound: average(([Gmb, Gmm, hRef, hN]) => (100 * Gmb! * hN!) / (Gmm! * hRef!)),
+  };
 }
 
 function recycled(node: AnalysisNode): { recycledContent: number; recycledBinder: number } {
