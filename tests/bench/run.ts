@@ -2,6 +2,7 @@ import { readWorkbook } from '#rules/reading/interpret';
 import { templateMapping } from '#rules/reading/template-mapping';
 import { decodeWorkbook } from '#server/workbook/decode';
 import { demoEdition, demoWorkbooks } from '#tests/workbooks/demo/write-demo-workbooks';
+import { benchCreepFit } from './creep-fit';
 import { benchFirstScreen } from './first-screen';
 import { benchFullCheck, benchGrowth } from './full-check';
 import { benchLighthouse } from './lighthouse';
@@ -23,6 +24,7 @@ const { record } = readWorkbook({
 
 console.log(await benchFullCheck(record, edition));
 console.log(await benchGrowth(record, edition));
+console.log(benchCreepFit());
 console.log(await benchUploadToFindings(bytes, edition));
 console.log(benchFirstScreen());
 console.log(await benchStart());
