@@ -116,7 +116,10 @@ export function templateLayout(edition: ReadingEdition): TemplateLayout {
   const performanceKeys = [
     key('Trial', 'trial'),
     key('Specimen', 'specimen'),
-    ...keyColumns(performance, find).map((name) => conditionKey(name)),
+    ...keyColumns(performance, find).map((name) => ({
+      ...conditionKey(name),
+      list: namedWords(performance, name),
+    })),
     ...laboratoryKey,
     testedOn,
   ];
@@ -239,6 +242,12 @@ export function templateLayout(edition: ReadingEdition): TemplateLayout {
 }
 
 const testedOn = detail('Tested on', 'testedOn');
+
+/** Words that rules name for a condition, `maximum` for a density: the laboratory picks one, or leaves it blank. */
+function namedWords(measured: MeasuredQuantity[], name: keyof Conditions): string[] {
+  const named = measured.map(({ at }) => at[name]).filter((value) => typeof value === 'string');
+  return [...new Set(named)].toSorted();
+}
 
 /** A strength is dry or conditioned by its own name. */
 function withoutSubset(column: TemplateColumn): TemplateColumn {

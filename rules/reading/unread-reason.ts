@@ -7,6 +7,12 @@ export const unreadReasons = {
   noValue: 'Says that there is no value.',
   leftOut: 'Left out by an answer.',
   keyInDoubt: 'What it belongs to is in doubt; answer that cell first.',
+  limit: 'A limit, target or tolerance, not a reading.',
+  total: 'A total; it is recomputed.',
+  difference: 'A difference between two results; it is recomputed.',
+  identifier: 'A number that names or counts something.',
+  rawData: 'Raw data of a test from which no quantity is read.',
+  notRecognised: 'No heading that is known says what this is.',
   hidden: 'Hidden, and nothing in the mapping reads it.',
   comment: 'Only a remark on a cell that holds nothing.',
 } as const;

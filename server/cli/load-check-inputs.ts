@@ -32,13 +32,12 @@ export async function loadGrid(file: string): Promise<CellGrid> {
   return result.grid;
 }
 
-/** The mapping given, else the template's own where the workbook is the template. */
+/** The mapping given, else the template's own where the workbook is the template, else none. */
 export async function loadMapping(
   file: string | null,
   grid: CellGrid,
   edition: ResolvedEdition,
-  workbook: string,
-): Promise<Mapping> {
+): Promise<Mapping | null> {
   if (file !== null) {
     const parsed = mappingSchema.safeParse(await jsonOf(file));
     if (parsed.success) return parsed.data;
@@ -48,11 +47,7 @@ export async function loadMapping(
     }));
     throw faultOf(basename(file), faults);
   }
-  if (recogniseTemplate(grid) !== null) return templateMapping(edition);
-  throw new InputFault(
-    `${basename(workbook)} is not laid out as the template of a rule set.`,
-    'Fill in the template and give that, or say with --mapping how the workbook is laid out.',
-  );
+  return recogniseTemplate(grid) === null ? null : templateMapping(edition);
 }
 
 /** Attributes given beside the workbook: they win, and their origin is typed. */

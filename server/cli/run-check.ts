@@ -1,6 +1,7 @@
 import { evaluate } from '#rules/engine/evaluate';
 import type { CheckResult } from '#rules/engine/finding';
 import { readWorkbook } from '#rules/reading/interpret';
+import { readAnyLayout } from '#rules/reading/read-any-layout';
 import type { ReadingResult } from '#rules/reading/reading-result';
 import type { AttributeValue, MixRecord } from '#rules/record';
 import { parseCheckArguments } from './check-arguments';
@@ -32,8 +33,12 @@ async function check(argv: string[], output: Output): Promise<0 | 1> {
   const edition = await loadEdition(given.rules, given.layers);
   const attributes = await loadAttributes(given.attributes, edition);
   const grid = await loadGrid(given.workbook);
-  const mapping = await loadMapping(given.mapping, grid, edition, given.workbook);
-  const reading = withAttributes(readWorkbook({ grid, mapping, edition, answers: [] }), attributes);
+  const mapping = await loadMapping(given.mapping, grid, edition);
+  const read =
+    mapping === null
+      ? readAnyLayout({ grid, edition, answers: [] })
+      : readWorkbook({ grid, mapping, edition, answers: [] });
+  const reading = withAttributes(read, attributes);
   const context = { submittedOn: given.submittedOn, lettingOn: given.lettingOn, facts: {} };
   const result = evaluate(reading.record, edition, context);
   output.out(`${given.json ? asJson(reading, result) : findingsTable(result, reading)}\n`);

@@ -10,7 +10,6 @@ import { findRevision, lockRevision, type RevisionRow } from '../db/queries/revi
 import { snapshotOfSection } from '../db/queries/section-snapshot';
 import { loadResolvedEdition } from '../db/resolved-edition';
 import { revisions } from '../db/schema/submittals';
-import { templateHrefOf } from '../presenters/template-href';
 import { Problem } from '../problem';
 import type { JobContext } from './job-handlers';
 import { JobInterrupted } from './job-leases';
@@ -39,12 +38,10 @@ export async function readWorkbookJob(context: JobContext): Promise<void> {
   const edition = await loadResolvedEdition(deps.db, section.resolvedHash);
   const { read, mapping } = await readGrid(deps.db, {
     grid,
-    fileName: row.workbook.fileName,
     edition,
     resolvedHash: section.resolvedHash,
     agencyId: row.agency.id,
     answers: await listAnswers(deps.db, reader, revisionId),
-    templateHref: templateHrefOf(submittal),
   });
   await deps.db.transaction(async (tx) => {
     const locked = await lockRevision(tx, reader, revisionId);

@@ -7,7 +7,6 @@ import { loadGrid } from '../../db/queries/cell-grids';
 import { listAnswers } from '../../db/queries/records';
 import { answers } from '../../db/schema/submittals';
 import type { Deps } from '../../deps';
-import { templateHrefOf } from '../../presenters/template-href';
 import { Problem } from '../../problem';
 import { changeDraft, type DraftChange } from './change-draft';
 import { readGrid } from './read-grid';
@@ -24,12 +23,10 @@ export async function keepAnswers(deps: Deps, act: DraftChange & { given: GivenA
     if (grid === null) throw new Error(`The cells of ${row.workbook.id} are not stored.`);
     const { read, mapping } = await readGrid(tx, {
       grid,
-      fileName: row.workbook.fileName,
       edition: kept.edition,
       resolvedHash: kept.section.resolvedHash,
       agencyId: row.agency.id,
       answers: await listAnswers(tx, actor, row.revision.id),
-      templateHref: templateHrefOf(row.submittal),
     });
     return { read, mapping };
   });

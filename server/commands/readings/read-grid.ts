@@ -1,26 +1,23 @@
 import type { CellGrid } from '#rules/reading/cell-grid';
 import { readWorkbook } from '#rules/reading/interpret';
-import type { Mapping } from '#rules/reading/mapping';
+import { type Mapping, mappingSchema } from '#rules/reading/mapping';
+import { readAnyLayout } from '#rules/reading/read-any-layout';
 import type { Answer, ReadingResult } from '#rules/reading/reading-result';
 import { templateMapping } from '#rules/reading/template-mapping';
 import { recogniseTemplate } from '#rules/reading/template-stamp';
 import type { Doubt } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import type { Database } from '../../db/client';
-import { Problem } from '../../problem';
 import { ownResolvedEdition } from '../projects/own-edition';
 import { trimUnread } from './trim-unread';
 
 interface ReadGrid {
   grid: CellGrid;
-  fileName: string;
   /** Of the section that judges it, with its hash and its agency. */
   edition: ResolvedEdition;
   resolvedHash: string;
   agencyId: string;
   answers: Answer[];
-  /** Where the section's own template is. */
-  templateHref: string;
 }
 
 export interface GridRead {
@@ -28,32 +25,51 @@ export interface GridRead {
   mapping: { name: string; document: Mapping };
 }
 
-/** Reads a stored grid through the mapping of its layout; another layout than the template is refused with a remedy. */
-export async function readGrid(
+/** Reads a stored grid: the template through its own mapping, any other layout by what its headings say. */
+export async function readGrid(db: Database, of: ReadGrid): Promise<GridRead> {
+  const { mapping, read } = await readerOf(db, of);
+  const unanswered = read([]);
+  const answered = of.answers.length === 0 ? unanswered : read(of.answers);
+  return {
+    read: trimUnread({ ...answered, doubts: everyDoubt(unanswered.doubts, answered.doubts) }),
+    mapping,
+  };
+}
+
+interface GridReader {
+  mapping: GridRead['mapping'];
+  read: (answers: Answer[]) => ReadingResult;
+}
+
+async function readerOf(
   db: Database,
-  { grid, fileName, edition, resolvedHash, agencyId, answers, templateHref }: ReadGrid,
-): Promise<GridRead> {
+  { grid, edition, resolvedHash, agencyId }: ReadGrid,
+): Promise<GridReader> {
   const stamp = recogniseTemplate(grid);
   if (stamp === null) {
-    throw new Problem('layout-unknown', {
-      detail: `${fileName} is not laid out as the template of ${edition.title}, edition ${edition.edition}.`,
-      fix: 'Fill in the template and upload that.',
-      present: { href: templateHref },
-    });
+    return {
+      mapping: { name: 'Read by its headings', document: noMapping },
+      read: (answers) => readAnyLayout({ grid, edition, answers }),
+    };
   }
   // A template of an earlier edition keeps its own places; what they mean is the section's to say.
   const hash = stamp.editionHash;
   const earlier = hash === resolvedHash ? null : await ownResolvedEdition(db, { agencyId, hash });
   const made = earlier ?? edition;
-  const document = templateMapping(made);
-  const unanswered = readWorkbook({ grid, mapping: document, edition, answers: [] });
-  const read =
-    answers.length === 0 ? unanswered : readWorkbook({ grid, mapping: document, edition, answers });
+  const mapping = templateMapping(made);
   return {
-    read: trimUnread({ ...read, doubts: everyDoubt(unanswered.doubts, read.doubts) }),
-    mapping: { name: `Template of ${made.title}, edition ${made.edition}`.slice(0, 200), document },
+    mapping: { name: `Template of ${made.title}, edition ${made.edition}`.slice(0, 200), document: mapping },
+    read: (answers) => readWorkbook({ grid, mapping, edition, answers }),
   };
 }
+
+/** Nothing of such a layout was laid down by anybody. */
+const noMapping = mappingSchema.parse({
+  laboratory: 'Any',
+  fingerprint: 'read by its headings',
+  version: 1,
+  rules: [],
+});
 
 /** The page lists answered doubts too, so that an answer can be seen and taken back. */
 function everyDoubt(before: readonly Doubt[], after: readonly Doubt[]): Doubt[] {

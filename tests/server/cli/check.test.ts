@@ -6,7 +6,6 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import edition2026 from '#rules/sets/cvra-412-2026.json';
 import { runCheck } from '#server/cli/run-check';
 import { demoWorkbooks } from '#tests/workbooks/demo/write-demo-workbooks';
-import { rawXlsx, sheetData } from '#tests/workbooks/raw-xlsx';
 
 const root = new URL('../../..', import.meta.url).pathname;
 const folder = mkdtempSync(join(tmpdir(), 'clauseway-check-'));
@@ -207,15 +206,6 @@ describe('the check on the command line', () => {
       'a workbook in the old format',
       () => ['--rules', rules, file('old.xlsx', Buffer.from('d0cf11e0a1b11ae1', 'hex'))],
       /old \.xls format/,
-    ],
-    [
-      'a workbook in another layout',
-      async () => [
-        '--rules',
-        rules,
-        file('own.xlsx', await rawXlsx({ sheets: [{ name: 'A', xml: sheetData([['Gmb', 2.4]]) }] })),
-      ],
-      /own\.xlsx is not laid out as the template.*--mapping/,
     ],
     [
       'a mapping with a fault',

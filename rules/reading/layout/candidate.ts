@@ -1,0 +1,34 @@
+import type { Conditions } from '../../record';
+import type { Cell } from '../cell-grid';
+import type { SheetIndex } from '../sheet-index';
+import type { Domain } from '../words/context-words';
+
+/** One cell that may hold a reading, with everything that the layout says of it. */
+export interface Candidate {
+  index: SheetIndex;
+  cell: Cell;
+  /** What its headings may mean. */
+  quantities: string[];
+  /** Conditions said by its own row and column. */
+  at: Conditions;
+  /** Conditions said further off: by a title, by the sheet's name, by a line over the table. */
+  far: Conditions;
+  unit: string | null;
+  unknownUnit: string | null;
+  method: string | null;
+  testedOn: string | null;
+  isAverage: boolean;
+  subset: 'dry' | 'conditioned' | null;
+  onAggregate: boolean;
+  onMix: boolean;
+  /** Kinds of test spoken of, the nearest first. */
+  domains: Domain[];
+  /** Number of its table, for what the cells of one table say together. */
+  table: number;
+  /** Heading words, to say why it was so read. */
+  heading: string;
+  /** Stands in a heading or a text and not in a cell of its own. */
+  written: string | null;
+  /** Why the cell cannot be taken although it is headed. */
+  conflict: string | null;
+}

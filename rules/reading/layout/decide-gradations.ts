@@ -1,0 +1,47 @@
+import { conditionsKey } from '../reading-log';
+import { acceptedConditions } from './accepted-conditions';
+import { gradationKind } from './gradation-kind';
+import type { FindQuantity } from './resolve-quantity';
+import type { Assigned } from './settle-candidates';
+
+const kinds = ['percent-passing', 'percent-retained', 'cumulative-percent-retained'];
+
+/**
+ * Gradations that no heading calls passing or retained are told by their own figures, a column at a time. A plain
+ * "retained" is told individual from cumulative the same way; a clear heading always stands.
+ */
+export function decideGradations(assigned: Assigned[], find: FindQuantity): void {
+  const runs = new Map<string, Assigned[]>();
+  for (const each of assigned) {
+    const isOpen = each.choices.length > 1 && each.choices.every(({ id }) => kinds.includes(id));
+    const isRetained =
+      each.choices.length === 1 &&
+      each.choices[0]?.id === 'percent-retained' &&
+      !/indiv|parti|einzel|fraction/i.test(each.heading);
+    if (!isOpen && !isRetained) continue;
+    const { sieve: _, ...rest } = each.conditions;
+    const key = `${each.table}|${conditionsKey(rest)}|${each.heading.split(' · ')[0]}`;
+    const run = runs.get(key);
+    if (run) run.push(each);
+    else runs.set(key, [each]);
+  }
+  for (const run of runs.values()) {
+    const points = run.flatMap(({ conditions, cell }) =>
+      conditions.sieve !== undefined && cell.kind === 'number'
+        ? [{ sieve: conditions.sieve, value: Number(cell.value) }]
+        : [],
+    );
+    const scaled = points.every(({ value }) => value <= 1)
+      ? points.map(({ sieve, value }) => ({ sieve, value: value * 100 }))
+      : points;
+    const kind = gradationKind(scaled);
+    const isRetained = run[0]?.choices.length === 1;
+    if (kind === null || (isRetained && kind !== 'cumulative-percent-retained')) continue;
+    const quantity = find(kind);
+    if (!quantity) continue;
+    for (const each of run) {
+      each.choices = [quantity];
+      each.conditions = acceptedConditions(each, quantity);
+    }
+  }
+}

@@ -1,0 +1,281 @@
+import type { Conditions } from '../../record';
+import type { Domain } from '../words/context-words';
+import type { KeyName, Role } from '../words/key-words';
+import {
+  domainsIn,
+  harmless,
+  longestPhrase,
+  type PhraseMatch,
+  type Sense,
+  type Vocabulary,
+} from '../words/phrase-index';
+import { tokensOf } from '../words/tokens';
+import { sieveInLabel, statedConditions } from './label-conditions';
+import { labelUnit } from './label-unit';
+
+/** What the text of a heading, a row label or a title says. */
+export interface LabelMeaning {
+  text: string;
+  /** Quantities that the same words may mean; empty where they name none. */
+  quantities: string[];
+  /** One common word, which gives way where another heading names something else. */
+  weak: boolean;
+  attribute: string | null;
+  document: string | null;
+  keys: KeyName[];
+  at: Conditions;
+  role: Role | null;
+  unit: string | null;
+  unknownUnit: string | null;
+  method: string | null;
+  percent: boolean;
+  furniture: boolean;
+  raw: boolean;
+  /** Binder content that names a trial, as written. */
+  binder: string | null;
+  /** Which half of a moisture test. */
+  subset: 'dry' | 'conditioned' | null;
+  /** By mass of aggregate, not of mix. */
+  onAggregate: boolean;
+  /** By mass of mix, said in words. */
+  onMix: boolean;
+  /** Words of it that nothing here knows. */
+  unknown: string[];
+  words: number;
+  domains: Domain[];
+}
+
+/** True where a label says something that a table's heading would say. */
+export function isHeading(meaning: LabelMeaning): boolean {
+  if (meaning.unknown.length > 1) return false;
+  return (
+    meaning.quantities.length > 0 ||
+    meaning.keys.length > 0 ||
+    meaning.role !== null ||
+    Object.keys(meaning.at).length > 0 ||
+    meaning.binder !== null ||
+    meaning.attribute !== null ||
+    meaning.raw
+  );
+}
+
+/** Understands labels, each distinct text once. */
+export class LabelReader {
+  private readonly known = new Map<string, LabelMeaning>();
+
+  constructor(private readonly vocabulary: Vocabulary) {}
+
+  read(text: string): LabelMeaning {
+    const known = this.known.get(text);
+    if (known) return known;
+    const meaning = text.length > 160 ? emptyMeaning(text, 30) : understand(text, this.vocabulary);
+    this.known.set(text, meaning);
+    return meaning;
+  }
+}
+
+/** Words that turn a name into something else than the result itself. */
+const changing = new Set(
+  `virgin loss tolerance difference change ratio correction factor uncorrected rap ras added additional recovered extracted increase decrease slope intercept residual lost error deviation estimated assumed guess previous old
+  cost price vol volume equation coefficient r2 rsq regression confidence uncertainty trial1 supplier source type name brand origin lot tank sample identification number id grade class classification level category limit limits`.split(
+    /\s+/,
+  ),
+);
+
+const weakWords = new Set(
+  `binder asphalt bitumen bitume liant ligante betun asfalto bindemittel voids bulk apparent density strain strength flow load height thickness absorption rut lime abrasion percentage share part formule dosage dosierung anteil slope compliance
+  flash coating retained passing gradation proportion durabilidad soundness strength viscosity flujo compactacion compactacion porosite densidad hohlraum vides vacios huecos las se fm fi pi sa la ac pen ri rice impression los angeles stability penetration stripping shingles deleterious refus
+  ruckstand durchgang passant retenido pasa permeability saturation saturacion diameter dia espesor altura hauteur hohe dicke durchmesser height gyrations girations drehungen umdrehungen component dust ef e* cantabro dct rap ras gtr`.split(
+    /\s+/,
+  ),
+);
+
+function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
+  const domains = domainsIn(text);
+  const stated = statedConditions(text);
+  const taken = labelUnit(stated.rest);
+  const meaning: LabelMeaning = {
+    ...emptyMeaning(text, 0),
+    at: stated.at,
+    binder: stated.binder,
+    unit: taken.unit,
+    unknownUnit: taken.unknownUnit,
+    method: taken.method,
+    domains,
+    subset: subsetIn(text),
+    onAggregate:
+      /\b(?:mass|weight|wt\.?) of (?:dry )?agg|% (?:of )?agg(?:regate)?s?\b|s\/a\b|sobre (?:[áa]ridos|agregados?)|ext[ée]rieure?|des granulats|bezogen auf (?:das )?gestein|by dry aggregate/i.test(
+        text,
+      ),
+    onMix:
+      /\b(?:mass|weight|wt\.?) of (?:the )?(?:total )?mix|% (?:of )?(?:total )?mix|of (?:total )?mix\b|in mix\b|s\/m\b|sobre (?:la )?mezcla|en la mezcla|du m[ée]lange|am Mischgut|int[ée]rieure?|total mix/i.test(
+        text,
+      ),
+  };
+  const sieve =
+    /pass|pasa|p[ _-]?0|p[ _-]?\d{2,3}\b|retain|reten|refus|durchgang|rückstand|minus|tamis|finer|^\s*-\s*(?:no|#)?\s*200/i.test(
+      text,
+    )
+      ? sieveInLabel(taken.rest)
+      : null;
+  if (sieve) meaning.at = { ...meaning.at, sieve: sieve.sieve };
+  const rest = sieve ? sieve.rest : taken.rest;
+  const tokens = tokensOf(rest);
+  meaning.words = tokens.length;
+  const matches: PhraseMatch[] = [];
+  for (let at = 0; at < tokens.length; ) {
+    const match = longestPhrase(vocabulary, tokens, at);
+    if (match) {
+      matches.push(match);
+      at = match.to;
+      continue;
+    }
+    const token = tokens[at] as string;
+    if (token === '%') meaning.percent = true;
+    else if (!harmless.has(token)) meaning.unknown.push(token);
+    at += 1;
+  }
+  addSenses(meaning, matches, tokens);
+  if (meaning.quantities.length === 0 && meaning.unit === '%' && !tokens.includes('%')) {
+    // "Blend, %" and "Blend %" are one name.
+    const whole = longestPhrase(vocabulary, [...tokens, '%'], 0);
+    if (whole?.to === tokens.length + 1) addSenses(meaning, [whole], [...tokens, '%']);
+  }
+  if (meaning.percent && meaning.unit === null) meaning.unit = '%';
+  if (
+    sieve &&
+    meaning.quantities.length === 0 &&
+    !/retain|reten|refus|rückstand/i.test(text) &&
+    meaning.unknown.length === 0
+  ) {
+    meaning.quantities = ['percent-passing'];
+  }
+  return meaning;
+}
+
+function subsetIn(text: string): 'dry' | 'conditioned' | null {
+  if (
+    /\b(?:unconditioned|uncond|dry|control|seco|seca|secos|trocken\w*|à sec|sec|sèches?|sans conditionnement|sin acondicionar|unkonditioniert|no acondicionad\w+)\b/i.test(
+      text,
+    )
+  )
+    return 'dry';
+  const isWet =
+    /\b(?:conditioned|cond|wet|moisture[- ]conditioned|freeze|húmed\w+|humed\w+|nass|wassergelagert|konditioniert|conditionn\w+|après immersion|immersion|acondicionad\w+|soaked)\b/i;
+  return isWet.test(text) ? 'conditioned' : null;
+}
+
+function addSenses(meaning: LabelMeaning, matches: PhraseMatch[], tokens: string[]): void {
+  const named = matches.filter(({ senses }) => senses.some(({ kind }) => kind === 'quantity'));
+  const strong = named.filter((match) => !isWeak(match, tokens));
+  const chosen = strong.length > 0 ? strong : named;
+  const ids = chosen.map((match) => namesOf(match.senses, 'quantity'));
+  const common = (ids[0] ?? []).filter((id) => ids.every((each) => each.includes(id)));
+  const isChanged = meaning.unknown.some((word) => changing.has(word));
+  if (common.length > 0)
+    meaning.quantities = isChanged || meaning.unknown.length > 2 ? [] : told(common, meaning.text);
+  else meaning.quantities = recycledOf(ids.flat());
+  meaning.weak = strong.length === 0 && named.length > 0;
+  const other = matches.filter(
+    (match) => !named.includes(match) || meaning.quantities.length === 0 || meaning.weak,
+  );
+  for (const { senses, from, to } of other) {
+    for (const sense of senses) addSense(meaning, sense, { isWhole: from === 0 && to === tokens.length });
+  }
+  if (matches.some(({ from, to }) => from === 0 && to === tokens.length)) {
+    const whole = matches[0]?.senses ?? [];
+    meaning.attribute = namesOf(whole, 'attribute')[0] ?? meaning.attribute;
+    meaning.document = namesOf(whole, 'document')[0] ?? meaning.document;
+  }
+  if (meaning.quantities.includes('binder-content') && tokens.some((token) => designBinder.has(token))) {
+    meaning.at = { trial: 'design', ...meaning.at };
+  }
+}
+
+/** The quotient and the product of the same two are written with the same words. */
+function told(ids: string[], text: string): string[] {
+  if (!ids.includes('rutting-parameter') || !ids.includes('fatigue-parameter')) return ids;
+  return [/\//.test(text) ? 'rutting-parameter' : 'fatigue-parameter'];
+}
+
+const designBinder = new Set(
+  'optimum optimal optimaler optimale optimo optima design jmf oac obc selected diseno proposed retenue recommended'.split(
+    ' ',
+  ),
+);
+
+function addSense(meaning: LabelMeaning, sense: Sense, { isWhole }: { isWhole: boolean }): void {
+  switch (sense.kind) {
+    case 'key':
+      if (!meaning.keys.includes(sense.name)) meaning.keys.push(sense.name);
+      break;
+    case 'role':
+      // A limit beside a name makes the whole a limit; an average gives way to it.
+      if (meaning.role === null || meaning.role === 'average') meaning.role = sense.name;
+      break;
+    case 'design':
+      if (meaning.at.trial === undefined) meaning.at = { ...meaning.at, trial: 'design' };
+      break;
+    case 'laboratory':
+      meaning.at = { ...meaning.at, laboratory: sense.name };
+      break;
+    case 'furniture':
+      meaning.furniture = true;
+      break;
+    case 'raw':
+      meaning.raw = true;
+      break;
+    case 'attribute':
+      if (isWhole || meaning.attribute === null) meaning.attribute = sense.name;
+      break;
+    case 'document':
+      meaning.document ??= sense.name;
+      break;
+    case 'quantity':
+      break;
+  }
+}
+
+/** "Asphalt content RAP" is the reclaimed material's; any other two names in one label are none. */
+function recycledOf(ids: string[]): string[] {
+  if (ids.includes('rap-content') && ids.includes('binder-content')) return ['rap-binder-content'];
+  if (ids.includes('ras-content') && ids.includes('binder-content')) return ['ras-binder-content'];
+  if (ids.includes('rap-content') && ids.includes('maximum-specific-gravity'))
+    return ['rap-maximum-specific-gravity'];
+  return [];
+}
+
+function isWeak({ from, to }: PhraseMatch, tokens: string[]): boolean {
+  const words = tokens.slice(from, to).filter((token) => token !== '%');
+  return words.length === 1 && weakWords.has(words[0] as string);
+}
+
+function namesOf(senses: readonly Sense[], kind: 'quantity' | 'attribute' | 'document'): string[] {
+  return senses.flatMap((sense) => (sense.kind === kind ? [sense.name] : []));
+}
+
+function emptyMeaning(text: string, unknownWords: number): LabelMeaning {
+  return {
+    text,
+    quantities: [],
+    weak: false,
+    attribute: null,
+    document: null,
+    keys: [],
+    at: {},
+    role: null,
+    unit: null,
+    unknownUnit: null,
+    method: null,
+    percent: false,
+    furniture: false,
+    raw: false,
+    binder: null,
+    subset: null,
+    onAggregate: false,
+    onMix: false,
+    unknown: Array.from({ length: unknownWords }, () => '?'),
+    words: unknownWords,
+    domains: [],
+  };
+}

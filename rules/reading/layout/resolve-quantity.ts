@@ -1,0 +1,36 @@
+import type { Quantity } from '../../quantities/quantity';
+import { convert } from '../../quantities/units';
+import { type Domain, domainsOfQuantity } from '../words/context-words';
+import type { Candidate } from './candidate';
+
+export type FindQuantity = (id: string) => Quantity | undefined;
+
+/** Which of the quantities that the headings may mean is meant; several where nothing on the sheet decides. */
+export function resolveQuantities(candidate: Candidate, find: FindQuantity): Quantity[] {
+  const all = candidate.quantities.flatMap((id) => find(id) ?? []);
+  if (all.length <= 1) return all;
+  const bySubset = ofSubset(all, candidate);
+  if (bySubset.length <= 1) return bySubset;
+  const byUnit = bySubset.filter(
+    (quantity) => candidate.unit === null || convert(1, candidate.unit, quantity.unit).ok,
+  );
+  const units = byUnit.length > 0 ? byUnit : bySubset;
+  if (units.length === 1) return units;
+  return ofDomain(units, candidate.domains);
+}
+
+function ofSubset(all: Quantity[], { subset, at }: Candidate): Quantity[] {
+  const named = subset ?? (at.variant === 'dry' || at.variant === 'conditioned' ? at.variant : null);
+  if (named === null || !all.some(({ id }) => id.startsWith('tensile-strength-'))) return all;
+  const chosen = all.filter(({ id }) => id === `tensile-strength-${named}`);
+  return chosen.length > 0 ? chosen : all;
+}
+
+/** The nearest words that speak for one of them only. */
+function ofDomain(all: Quantity[], domains: Domain[]): Quantity[] {
+  for (const domain of domains) {
+    const fitting = all.filter(({ id }) => domainsOfQuantity[id]?.includes(domain));
+    if (fitting.length === 1) return fitting;
+  }
+  return all;
+}

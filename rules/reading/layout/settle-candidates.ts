@@ -1,0 +1,324 @@
+import type { Quantity } from '../../quantities/quantity';
+import { convert } from '../../quantities/units';
+import type { Conditions, Reading } from '../../record';
+import type { Cell } from '../cell-grid';
+import { conditionsKey, type Place, placeOf, type ReadingLog } from '../reading-log';
+import { type Alternative, doubtOf, type Understood } from '../settled';
+import { readingInWords } from '../take-words';
+import { type NumberValue, understandNumber } from '../understand-number';
+import { unreadReasons } from '../unread-reason';
+import { acceptedConditions } from './accepted-conditions';
+import type { Candidate } from './candidate';
+import { decideGradations } from './decide-gradations';
+import { type FindQuantity, resolveQuantities } from './resolve-quantity';
+import { suspicions } from './suspicions';
+
+/** A candidate whose quantity and conditions are settled as far as the layout can settle them. */
+export interface Assigned extends Candidate {
+  choices: Quantity[];
+  conditions: Conditions;
+}
+
+export interface SettleOptions {
+  log: ReadingLog;
+  find: FindQuantity;
+  decimalOf: (sheet: string) => '.' | ',';
+}
+
+/** From candidates of the whole workbook to readings, doubts and cells that are passed over. */
+export function settleCandidates(candidates: Candidate[], options: SettleOptions): void {
+  const assigned = candidates.map((candidate): Assigned => {
+    const choices = resolveQuantities(candidate, options.find);
+    const [first] = choices;
+    return { ...candidate, choices, conditions: first ? acceptedConditions(candidate, first) : {} };
+  });
+  decideGradations(assigned, options.find);
+  const kept = withoutAverages(withoutOtherMasses(assigned, options.log), options.log);
+  numberReplicates(kept);
+  const suspected = suspicions(kept, options);
+  const formulas = new Set<string>();
+  for (const each of kept) emit(each, { ...options, suspected, formulas });
+}
+
+/** Weighings for the maximum gravity or for an aggregate's are no weighings of a compacted specimen. */
+function withoutOtherMasses(assigned: Assigned[], log: ReadingLog): Assigned[] {
+  const isMass = ({ choices }: Assigned) =>
+    choices[0]?.id.startsWith('mass-') === true && choices[0]?.unit === 'g';
+  const tables = new Map<number, Set<string>>();
+  for (const { table, choices } of assigned) {
+    const known = tables.get(table) ?? new Set<string>();
+    for (const { id } of choices) known.add(id);
+    tables.set(table, known);
+  }
+  return assigned.filter((each) => {
+    if (!isMass(each)) return true;
+    const beside = tables.get(each.table) ?? new Set();
+    const isRice =
+      beside.has('maximum-specific-gravity') &&
+      !beside.has('bulk-specific-gravity-mix') &&
+      !beside.has('mass-saturated-surface-dry');
+    const isAggregate =
+      each.at.stockpile !== undefined ||
+      ['bulk-specific-gravity-aggregate', 'apparent-specific-gravity-aggregate'].some(
+        (id) => beside.has(id) && !beside.has('bulk-specific-gravity-mix'),
+      );
+    const [nearest] = each.domains.filter((domain) =>
+      ['mix', 'moisture', 'marshall', 'maximum-gravity', 'aggregate-gravity'].includes(domain),
+    );
+    if (!isRice && !isAggregate && nearest !== 'maximum-gravity' && nearest !== 'aggregate-gravity')
+      return true;
+    log.passOver(placeOf(each.index.sheet, each.cell), unreadReasons.rawData);
+    return false;
+  });
+}
+
+/** A mean whose specimens stand in the same table is recomputed from them; one without specimens is a reading. */
+function withoutAverages(assigned: Assigned[], log: ReadingLog): Assigned[] {
+  const keyOf = (each: Assigned) => {
+    const { specimen: _, ...rest } = each.conditions;
+    return `${each.table}|${each.choices[0]?.id}|${conditionsKey(rest)}`;
+  };
+  const specimens = new Set(assigned.filter(({ isAverage }) => !isAverage).map(keyOf));
+  return assigned.filter((each) => {
+    if (!each.isAverage) return true;
+    const { specimen: _, ...rest } = each.conditions;
+    each.conditions = rest;
+    if (!specimens.has(keyOf(each))) return true;
+    log.passOver(placeOf(each.index.sheet, each.cell), unreadReasons.average);
+    return false;
+  });
+}
+
+/** Replicates that a table lists without numbers are told apart by their order. */
+function numberReplicates(assigned: Assigned[]): void {
+  const groups = new Map<string, Assigned[]>();
+  for (const each of assigned) {
+    const [quantity] = each.choices;
+    if (!quantity || each.choices.length > 1 || each.isAverage || each.conditions.specimen !== undefined)
+      continue;
+    if (
+      quantity.kind !== 'measured' &&
+      quantity.subject !== 'specimen' &&
+      !each.choices.some(({ id }) => id.startsWith('tensile') || id.endsWith('index'))
+    )
+      continue;
+    if (
+      quantity.subject === 'aggregate' ||
+      quantity.subject === 'binder' ||
+      quantity.id === 'binder-content' ||
+      each.table === 0
+    )
+      continue;
+    const key = `${each.table}|${quantity.id}|${conditionsKey(each.conditions)}`;
+    const group = groups.get(key);
+    if (group) group.push(each);
+    else groups.set(key, [each]);
+  }
+  for (const group of groups.values()) {
+    const inLine =
+      new Set(group.map(({ cell }) => cell.row)).size === 1 ||
+      new Set(group.map(({ cell }) => cell.column)).size === 1;
+    if (group.length < 2 || group.length > 12 || !inLine) continue;
+    for (const [at, each] of group.entries())
+      each.conditions = { ...each.conditions, specimen: String(at + 1) };
+  }
+}
+
+interface EmitOptions extends SettleOptions {
+  suspected: Map<Assigned, { reason: string; alternatives: number[] } | 'fraction'>;
+  formulas: Set<string>;
+}
+
+function emit(each: Assigned, options: EmitOptions): void {
+  const { log } = options;
+  const { cell, choices, conditions } = each;
+  const place = placeOf(each.index.sheet, cell);
+  const [quantity] = choices;
+  if (!quantity) {
+    log.passOver(place, unreadReasons.notRecognised);
+    return;
+  }
+  if (choices.length > 1) {
+    emitAmbiguous(each, place, options);
+    return;
+  }
+  const understood = suspicious(each, quantity, understandAs(each, quantity, options), options);
+  if (understood.state === 'blank' || understood.state === 'none') {
+    log.passOver(place, unreadReasons.noValue);
+    return;
+  }
+  if (cell.kind === 'formula-without-result') {
+    const block = `${each.table}|${quantity.id}`;
+    if (options.formulas.has(block)) {
+      log.use(place, 'doubt', 'A formula whose result was not saved, as in the cells before it.');
+      return;
+    }
+    options.formulas.add(block);
+  }
+  const build = (value: NumberValue) => readingOf(each, quantity, value, place);
+  const settled = log.settle(place, understood, { quantity: quantity.id, at: conditions }, (value) => ({
+    reading: build(value),
+  }));
+  if (settled.state === 'left out') log.passOver(place, unreadReasons.leftOut);
+  if (settled.state !== 'value') return;
+  const reading = build(settled.value);
+  log.readings.push({ reading, place, taken: takenWords(each, reading, quantity) });
+}
+
+function takenWords(each: Assigned, reading: Reading, quantity: Quantity): string {
+  const { index, cell } = each;
+  const hidden = index.isHidden(cell) ? ' · hidden in the workbook' : '';
+  const elsewhere =
+    cell.formula !== null && /\[\d+\]|\[[^\]]+\.xls/i.test(cell.formula) ? ' · from another workbook' : '';
+  const remark = cell.comment === null ? '' : ` · remark: ${cell.comment}`;
+  const why = each.heading === '' ? '' : ` · by ${each.heading.slice(0, 80)}`;
+  return `${readingInWords(reading, quantity)}${hidden}${elsewhere}${remark}${why}`;
+}
+
+/** Where two quantities fit, neither is taken. */
+function emitAmbiguous(each: Assigned, place: Place, options: EmitOptions): void {
+  const alternatives = each.choices.flatMap((quantity) => {
+    const understood = understandAs(each, quantity, options);
+    const values: Alternative<NumberValue>[] =
+      understood.state === 'value'
+        ? [{ answer: String(understood.value.value), label: '', value: understood.value }]
+        : [];
+    return values.map(({ value }) => ({
+      answer: quantity.id,
+      label: quantity.label,
+      value: { quantity, value },
+    }));
+  });
+  const [only, ...more] = alternatives;
+  // A range that leaves one of them only is as good as a word.
+  if (only && more.length === 0 && each.choices.length > 1) {
+    const narrowed = {
+      ...each,
+      choices: [only.value.quantity],
+      conditions: acceptedConditions(each, only.value.quantity),
+    };
+    emit(narrowed, options);
+    return;
+  }
+  const names = each.choices.map(({ label }) => label).join(' or ');
+  const doubt = doubtOf(`may be ${names}; the heading does not say which`, alternatives);
+  const settled = options.log.settle(place, doubt, {}, ({ quantity, value }) => ({
+    reading: readingOf({ ...each, conditions: acceptedConditions(each, quantity) }, quantity, value, place),
+  }));
+  if (settled.state === 'left out') options.log.passOver(place, unreadReasons.leftOut);
+  if (settled.state !== 'value') return;
+  const { quantity, value } = settled.value;
+  const chosen = { ...each, choices: [quantity], conditions: acceptedConditions(each, quantity) };
+  const reading = readingOf(chosen, quantity, value, place);
+  options.log.readings.push({ reading, place, taken: takenWords(chosen, reading, quantity) });
+}
+
+function understandAs(
+  each: Assigned,
+  quantity: Quantity,
+  { decimalOf, suspected }: EmitOptions,
+): Understood<NumberValue> {
+  const cell: Cell = each.written === null ? each.cell : writtenCell(each.cell, each.written);
+  const decimal = decimalOf(each.index.sheet.name);
+  const fits = each.unit !== null && convert(1, each.unit, quantity.unit).ok;
+  const unclear = unitUnclear(each, quantity, cell, decimal);
+  if (unclear) return unclear;
+  // A figure of percent stands for the whole table; it is no unit of a gravity in one of its rows.
+  const unit = fits || (each.unit !== null && each.unit !== '%') ? each.unit : null;
+  return understandNumber(cell, {
+    quantity,
+    unit: each.unit === '%' && quantity.unit === '1' ? '%' : unit,
+    unknownUnit: each.unknownUnit,
+    decimal,
+    inFractions: suspected.get(each) === 'fraction',
+  });
+}
+
+function writtenCell(cell: Cell, written: string): Cell {
+  return { ...cell, kind: 'text', value: written, text: written, format: null, formula: null };
+}
+
+/** Without a unit a figure is taken only where no other unit of the quantity makes it plausible too. */
+function unitUnclear(
+  each: Assigned,
+  quantity: Quantity,
+  cell: Cell,
+  decimal: '.' | ',',
+): Understood<NumberValue> | null {
+  if (
+    each.unit !== null ||
+    each.unknownUnit !== null ||
+    quantity.acceptedUnits.length < 2 ||
+    cell.kind !== 'number'
+  )
+    return null;
+  if (cell.format !== null && /"[^"]+"/.test(cell.format)) return null;
+  const plausible = quantity.acceptedUnits.filter((unit) => {
+    const converted = convert(Number(cell.value), unit, quantity.unit);
+    return (
+      converted.ok && converted.value >= quantity.plausible.min && converted.value <= quantity.plausible.max
+    );
+  });
+  const [only] = plausible;
+  if (plausible.length === 0 || (plausible.length === 1 && only === quantity.unit)) return null;
+  // Zero and near-zero fit every unit; so do scales that differ by little. The canonical one is then as stated.
+  const alternatives = plausible.flatMap((unit) => {
+    const understood = understandNumber(cell, { quantity, unit, unknownUnit: null, decimal });
+    return understood.state === 'value'
+      ? [{ answer: `${cell.value} ${unit}`, label: `${cell.value} ${unit}`, value: understood.value }]
+      : [];
+  });
+  return doubtOf('has no unit, and its figure does not tell which', alternatives);
+}
+
+function suspicious(
+  each: Assigned,
+  quantity: Quantity,
+  understood: Understood<NumberValue>,
+  options: EmitOptions,
+): Understood<NumberValue> {
+  if (understood.state !== 'value') return understood;
+  const suspicion = options.suspected.get(each);
+  if (suspicion && suspicion !== 'fraction') {
+    return doubtOf<NumberValue>(suspicion.reason, [
+      ...suspicion.alternatives.map((value) => ({
+        answer: String(value),
+        label: `${value} ${quantity.unit === '1' ? '' : quantity.unit}`.trim(),
+        value: { value, converted: false },
+      })),
+      { answer: `as it stands`, label: 'As it stands', value: understood.value },
+    ]);
+  }
+  const needsBasis = quantity.id === 'rap-content' || quantity.id === 'ras-content';
+  if (needsBasis && !each.onMix)
+    return doubtOf('does not say of what mass it is a percentage', [
+      { answer: 'of mix', label: 'By mass of mix', value: understood.value },
+    ]);
+  if (quantity.id === 'binder-content' && each.onAggregate && understood.value.value !== null) {
+    const ofAggregate = understood.value.value;
+    return {
+      state: 'value',
+      value: {
+        ...understood.value,
+        value: Math.round((ofAggregate / (100 + ofAggregate)) * 1e14) / 1e12,
+        converted: true,
+      },
+    };
+  }
+  return understood;
+}
+
+function readingOf(each: Assigned, quantity: Quantity, value: NumberValue, place: Place): Reading {
+  const stated = quantity.kind === 'derived' ? 'reported' : 'measured';
+  return {
+    quantity: quantity.id,
+    value: value.value,
+    ...(value.qualifier ? { qualifier: value.qualifier } : {}),
+    unit: quantity.unit,
+    at: each.conditions,
+    ...(each.method ? { method: each.method } : {}),
+    origin: value.converted ? 'converted' : stated,
+    ...(each.testedOn ? { testedOn: each.testedOn } : {}),
+    source: place,
+  };
+}

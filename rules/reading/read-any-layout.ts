@@ -1,0 +1,97 @@
+import { allQuantities } from '../quantities/registry';
+import type { Conditions } from '../record';
+import type { CellGrid } from './cell-grid';
+import type { ReadingEdition } from './edition-contents';
+import { joinAttributes, joinReadings } from './join-duplicates';
+import { CellKinds } from './layout/cell-kind';
+import { decimalMark } from './layout/decimal-mark';
+import { findTables } from './layout/find-tables';
+import { LabelReader } from './layout/label-meaning';
+import { dropMeans } from './layout/means-of-specimens';
+import { farConditions, readTable } from './layout/read-table';
+import { settleCandidates } from './layout/settle-candidates';
+import type { SheetContext } from './layout/sheet-context';
+import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
+import type { Answer, ReadingResult } from './reading-result';
+import { SheetIndex } from './sheet-index';
+import { unreadReasons } from './unread-reason';
+import { vocabularyOf } from './words/phrase-index';
+
+export interface ReadAnyLayoutInput {
+  grid: CellGrid;
+  /** Which attributes, documents and quantities there are words for. */
+  edition: ReadingEdition;
+  answers: Answer[];
+}
+
+/**
+ * Reads a workbook in whatever layout a laboratory has: no sheet is known by its name and no value by its address.
+ * Cells become numbers and words, words become headings of tables, headings say what each number is; what
+ * they leave open is a doubt, and what nothing speaks for is listed as unused.
+ */
+export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): ReadingResult {
+  const reading: ReadingContext = { grid, log: createReadingLog(answers) };
+  const { log } = reading;
+  const kinds = new CellKinds();
+  const labels = new LabelReader(vocabularyOf(edition));
+  const indexes = grid.sheets.map((sheet) => new SheetIndex(sheet));
+  const decimals = new Map(grid.sheets.map((sheet) => [sheet.name, decimalMark(sheet)]));
+  const candidates: SheetContext['candidates'] = [];
+  let nextTable = 0;
+  for (const index of indexes) {
+    const name = labels.read(index.sheet.name.replace(/[_-]+/g, ' '));
+    const dashed = labels.read(index.sheet.name);
+    const context: SheetContext = {
+      kinds,
+      labels,
+      index,
+      reading,
+      edition,
+      decimal: decimals.get(index.sheet.name) ?? '.',
+      ambient: withoutDesign({ ...farConditions(name), ...farConditions(dashed) }),
+      subset: name.subset,
+      domains: [...name.domains, ...dashed.domains],
+      candidates,
+      nextTable,
+    };
+    for (const table of findTables(index.sheet, { kinds, labels })) {
+      context.nextTable = nextTable;
+      readTable(table, context);
+      nextTable += 1;
+    }
+  }
+  const byId = new Map(
+    [...allQuantities(), ...edition.quantities].map((quantity) => [quantity.id, quantity]),
+  );
+  settleCandidates(candidates, {
+    log,
+    find: (id) => byId.get(id),
+    decimalOf: (sheet) => decimals.get(sheet) ?? '.',
+  });
+  dropMeans(log);
+  const readings = joinReadings(log);
+  const attributes = joinAttributes(log);
+  for (const index of indexes) passOverRest(index, reading);
+  return {
+    record: { attributes, readings, documents: log.documents, doubts: log.doubts },
+    doubts: log.doubts,
+    unread: log.unread,
+    uses: log.uses(),
+    answered: log.answered,
+    stale: answers.filter((answer) => !log.answered.includes(answer)),
+  };
+}
+
+/** A sheet called "JMF" holds the submittal; what is told apart as the design on it says so itself. */
+function withoutDesign({ trial, ...rest }: Conditions): Conditions {
+  return trial === undefined || trial === 'design' ? rest : { ...rest, trial };
+}
+
+/** What is left over is listed, so that nothing in a workbook disappears without a word. */
+function passOverRest(index: SheetIndex, { log }: ReadingContext): void {
+  for (const cell of index.sheet.cells) {
+    const place = placeOf(index.sheet, cell);
+    if (log.isUsed(place)) continue;
+    log.passOver(place, cell.kind === 'text' ? unreadReasons.remark : unreadReasons.notRecognised);
+  }
+}
