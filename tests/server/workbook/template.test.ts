@@ -215,6 +215,17 @@ describe.each(editions)('the template of %s', (_, edition) => {
   });
 });
 
+describe('the template of the airfield section', () => {
+  it('offers the words that its rules name for a form of a test', () => {
+    const [, edition] = editions.find(([name]) => name.startsWith('cvra-421')) ?? [];
+    if (!edition) throw new Error('no airfield edition');
+    const sheet = templateLayout(edition).sheets.find(({ name }) => name === 'Performance');
+    if (sheet?.kind !== 'table') throw new Error('no table');
+    expect(sheet.columns.find(({ names }) => names === 'variant')?.list).toEqual(['maximum']);
+    expect(sheet.columns.find(({ quantity }) => quantity === 'joint-density')?.unit).toBe('%');
+  });
+});
+
 describe('the stamp', () => {
   it('is not seen in another layout', () => {
     expect(
