@@ -3,18 +3,11 @@ import type { ResolvedEdition } from '../rule-sets/resolve';
 import { andList, capitalised, uncapitalised } from '../rule-sets/words';
 import { analyse } from './analyse';
 import { attributeFact, attributeText } from './attribute-fact';
+import type { Explanation } from './explanation';
 import { type Finding, findingKey } from './finding';
 import { roomToMove } from './room-to-move';
-import { type ToPass, toPass } from './to-pass';
+import { toPass } from './to-pass';
 import { type World, worldOf } from './world';
-
-/** What a reader asks about a finding beyond its outcome. */
-export interface Explanation {
-  /** Document, table, row and the mix's own attributes that gave the limit, and what it displaced. */
-  whyThisLimit: string | null;
-  /** Each a way of its own; empty where none can be computed. */
-  toPass: ToPass[];
-}
 
 /**
  * Explanations of findings, by key. Apart from the check, because it is asked of few findings and a check has to be

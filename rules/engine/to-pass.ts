@@ -9,6 +9,7 @@ import { fittedQuantities } from './analysis-design';
 import { displayedUnit } from './analysis-digits';
 import { type AnalysisNode, valueWith } from './analysis-node';
 import { conditionsOfSubjects } from './evaluate-reading';
+import type { ToPass } from './explanation';
 import type { Finding, ResolvedLimit } from './finding';
 import { type Rounder, rounderOf } from './judge';
 import { resolveLimit } from './resolve-limit';
@@ -18,20 +19,6 @@ import { type Sample, type SampleItem, takeSample } from './sample';
 import { lastAlike, type Side, sideOf } from './side-of-limit';
 import { subjectOf } from './subject';
 import type { World } from './world';
-
-/** One reading that would have to move, alone, for a failing finding to pass. */
-export interface ToPass {
-  quantity: string;
-  /** As the laboratory writes it: "Gmb", "sand equivalent". */
-  name: string;
-  unit: string;
-  present: number;
-  /** Ends of what would pass, both included; null where that side is open. */
-  from: number | null;
-  to: number | null;
-  /** "Gmb of 2.431 or less instead of 2.442 (mean of 3)" */
-  words: string;
-}
 
 /**
  * Which readings would have to move for a failing finding to pass, and by how much: each alone, with all others as

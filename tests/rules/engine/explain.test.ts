@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { evaluate } from '#rules/engine/evaluate';
-import { type Explanation, explainFindings } from '#rules/engine/explain';
+import { explainFindings } from '#rules/engine/explain';
+import type { Explanation } from '#rules/engine/explanation';
 import { type Finding, findingKey } from '#rules/engine/finding';
 import { toPassWords } from '#rules/engine/to-pass';
 import type { MixRecord, Reading } from '#rules/record';
