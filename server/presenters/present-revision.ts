@@ -3,6 +3,7 @@ import type { Revision } from '#shared/contracts/submittals';
 import { dateOfInstant } from '#shared/format/dates';
 import { workingDaysBetween } from '#shared/working-days';
 import type { JobRow } from '../db/queries/jobs';
+import type { listReplacedWorkbooks } from '../db/queries/records';
 import type { RevisionRow } from '../db/queries/revisions';
 import type { revisions } from '../db/schema/submittals';
 import type { Actor } from '../policies/actor';
@@ -20,6 +21,8 @@ export interface RevisionParts {
   hasCheck: boolean;
   /** Every revision that the reader may see. */
   all: { revision: Parameters<typeof presentRevisionItem>[0]; summary: Summary | null }[];
+  /** Of a contractor's own revision. */
+  replaced: Awaited<ReturnType<typeof listReplacedWorkbooks>>;
   /** Who decided, where the revision is returned. */
   decidedBy: string | null;
 }
@@ -50,6 +53,10 @@ export function presentRevision(parts: RevisionParts): Revision {
       uploadedBy: row.uploadedBy,
       uploadedAt: revision.uploadedAt.toISOString(),
     },
+    replacedWorkbooks: parts.replaced.map(({ fileId: _, replacedAt, ...replaced }) => ({
+      ...replaced,
+      replacedAt: replacedAt.toISOString(),
+    })),
     mappingName: row.mappingName,
     reviewer: reviewerOf(row),
     receivedOn: revision.receivedOn,

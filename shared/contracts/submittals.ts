@@ -91,6 +91,16 @@ export const revisionSchema = z.strictObject({
       uploadedAt: instantSchema,
     })
     .nullable(),
+  /** Workbooks of the draft that a later upload replaced, newest first; the contractor alone sees them. */
+  replacedWorkbooks: z.array(
+    z.strictObject({
+      id: idSchema,
+      fileName: z.string(),
+      bytes: z.number().int(),
+      replacedBy: z.string(),
+      replacedAt: instantSchema,
+    }),
+  ),
   mappingName: z.string().nullable(),
   reviewer: personReferenceSchema.nullable(),
   receivedOn: dateSchema.nullable(),
@@ -210,6 +220,14 @@ export const getWorkbook = endpoint({
   path: '/api/submittals/:submittalId/revisions/:number/workbook',
   summary: 'The workbook as uploaded, byte for byte',
   params: revisionParams,
+  sends: '*/*',
+});
+
+export const getReplacedWorkbook = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/replaced-workbooks/:replacedId',
+  summary: 'A workbook that a later upload replaced, byte for byte; for the contractor alone',
+  params: revisionParams.extend({ replacedId: idSchema }),
   sends: '*/*',
 });
 

@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { documents, revisions } from '#server/db/schema/submittals';
+import { documents, replacedWorkbooks, revisions } from '#server/db/schema/submittals';
 import { allRoutes } from '#server/routes/all-routes';
 import type { Endpoint } from '#shared/contracts/endpoint';
 import {
@@ -20,7 +20,7 @@ let world: DemoWorld;
 let otherReviewer: Browser;
 let draft: { submittalId: string; number: number; version: number };
 let submitted: { submittalId: string; number: number; version: number };
-let ids: { submittalId: string; jobId: string; noteId: string; waiverId: string; documentId: string };
+let ids: Record<'submittalId' | 'jobId' | 'noteId' | 'waiverId' | 'documentId' | 'replacedId', string>;
 
 beforeAll(async () => {
   world = await startDemoWorld();
@@ -32,7 +32,7 @@ beforeAll(async () => {
 }, 180_000);
 afterAll(() => world.close());
 
-/** A job, a note, a waiver and a document of the submitted revision. */
+/** A job, a note, a waiver, a document and a replaced workbook of the submitted revision. */
 async function objectsOf(place: { submittalId: string; number: number }) {
   const [ines, dele] = [await world.as('Ines Tordoff'), await world.as('Dele Fairweather')];
   const { body: check } = await ines.get(`${pathOf(place)}/check`).expect(200);
@@ -47,16 +47,27 @@ async function objectsOf(place: { submittalId: string; number: number }) {
     .send({ finding, reason: 'Known.', toBeReturned: true });
   const { body: revision } = await dele.get(pathOf(place)).expect(200);
   const [row] = await world.deps.db
-    .select({ id: documents.id })
+    .select({ id: documents.id, revision: revisions })
     .from(documents)
     .innerJoin(revisions, eq(revisions.id, documents.revisionId))
     .where(eq(revisions.submittalId, place.submittalId));
+  if (!row) throw new Error('The revision is to state a document.');
+  const replacedId = world.deps.newId();
+  await world.deps.db.insert(replacedWorkbooks).values({
+    id: replacedId,
+    revisionId: row.revision.id,
+    contractorId: row.revision.contractorId,
+    fileId: row.revision.workbookFileId,
+    replacedById: row.revision.uploadedById,
+    replacedAt: world.deps.now(),
+  });
   return {
     submittalId: place.submittalId,
     jobId: revision.job.id,
     noteId: expectStatus(note, 201).body.id,
     waiverId: expectStatus(waiver, 201).body.id,
-    documentId: row?.id ?? '',
+    documentId: row.id,
+    replacedId,
   };
 }
 
@@ -105,7 +116,8 @@ function ask(person: Browser, { method, path, versioned }: Endpoint, named: type
     .replace(':jobId', named.jobId)
     .replace(':noteId', named.noteId)
     .replace(':waiverId', named.waiverId)
-    .replace(':documentId', named.documentId);
+    .replace(':documentId', named.documentId)
+    .replace(':replacedId', named.replacedId);
   const query = path.endsWith('/sheet') ? '?sheet=Trials' : '';
   const sending = person[method](address + query).set('X-Request-Id', 'one-number-for-both');
   if (versioned) sending.set('If-Match', '"1"');
@@ -118,6 +130,7 @@ const absent = {
   noteId: nobodys,
   waiverId: nobodys,
   documentId: nobodys,
+  replacedId: nobodys,
 };
 
 describe('another tenant’s submittal', () => {
@@ -132,6 +145,19 @@ describe('another tenant’s submittal', () => {
       expect(foreign.text).toBe(missing.text);
       expect(foreign.get('Content-Type')).toBe(missing.get('Content-Type'));
     }
+  });
+
+  it('shows its replaced workbook to its contractor, and the agency that judges it sees none', async () => {
+    const path = `${pathOf(submitted)}/replaced-workbooks/`;
+    const [dele, ines] = [await world.as('Dele Fairweather'), await world.as('Ines Tordoff')];
+    const { body: own } = await dele.get(pathOf(submitted)).expect(200);
+    expect(own.replacedWorkbooks).toMatchObject([{ id: ids.replacedId, fileName: 'TA-190-B2 r0.xlsx' }]);
+    await dele.get(path + ids.replacedId).expect(200);
+    expect((await ines.get(pathOf(submitted)).expect(200)).body.replacedWorkbooks).toEqual([]);
+    const ask = (id: string) => ines.get(path + id).set('X-Request-Id', 'one-number-for-both');
+    const [hidden, missing] = [await ask(ids.replacedId), await ask(nobodys)];
+    expect(hidden.status).toBe(404);
+    expect(hidden.text).toBe(missing.text);
   });
 
   it('is in no list, home, search or queue of anybody else', async () => {

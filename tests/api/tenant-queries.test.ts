@@ -91,6 +91,14 @@ async function namesOf({ submittalId, number }: { submittalId: string; number: n
   await db
     .insert(rows.typedAttributes)
     .values({ ...by, id: newId(), name: 'course', value: 'surface', typedOn: '2026-03-09' });
+  await db.insert(rows.replacedWorkbooks).values({
+    id: newId(),
+    revisionId,
+    contractorId: contractor.organisationId,
+    fileId: row.workbook.id,
+    replacedById: by.personId,
+    replacedAt: now,
+  });
   const invitationId = newId();
   await db.insert(invitations).values({
     id: invitationId,
@@ -241,6 +249,10 @@ const queries: Record<string, Record<string, Query>> = {
     listAnswers: ['both', (reader) => records.listAnswers(db(), reader, named.revisionId)],
     listTypedAttributes: ['both', (reader) => records.listTypedAttributes(db(), reader, named.revisionId)],
     listDocuments: ['both', (reader) => records.listDocuments(db(), reader, named.revisionId)],
+    listReplacedWorkbooks: [
+      'contractor',
+      (reader) => records.listReplacedWorkbooks(db(), reader.organisationId, named.revisionId),
+    ],
     loadFile: ['both', (reader) => records.loadFile(db(), reader, named.row.workbook.id)],
   },
   returns: {

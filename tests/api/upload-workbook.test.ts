@@ -294,6 +294,15 @@ describe('another workbook for a draft', () => {
       .innerJoin(revisions, eq(revisions.id, replacedWorkbooks.revisionId))
       .where(eq(revisions.submittalId, draft.submittalId));
     expect(kept).toEqual([{ sha256: draft.workbook.sha256, contractorId: draft.contractor.id }]);
+    expect(now.replacedWorkbooks).toMatchObject([
+      { fileName: 'BW-125-S4 r0.xlsx', replacedBy: 'Dele Fairweather' },
+    ]);
+    const first = await dele
+      .get(`${pathOf(draft)}/replaced-workbooks/${now.replacedWorkbooks[0].id}`)
+      .responseType('blob')
+      .expect(200);
+    expect(createHash('sha256').update(first.body).digest('hex')).toBe(draft.workbook.sha256);
+    expect(first.get('Content-Disposition')).toContain('BW-125-S4 r0.xlsx');
   });
 
   it('is refused where somebody else has changed the draft since, with the present state', async () => {

@@ -60,6 +60,7 @@ export function aRevision(overrides: Partial<Revision> = {}): Revision {
       uploadedBy: 'Dele Fairweather',
       uploadedAt: '2026-03-09T13:00:00.000Z',
     },
+    replacedWorkbooks: [],
     mappingName: null,
     reviewer: { id: '0192f0a0-0000-7000-8000-000000000006', name: 'Ines Tordoff' },
     receivedOn: '2026-03-09',

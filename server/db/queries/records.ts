@@ -1,8 +1,15 @@
-import { and, asc, eq } from 'drizzle-orm';
+import { and, asc, desc, eq } from 'drizzle-orm';
 import type { Database } from '../client';
 import { files } from '../schema/files';
 import { people } from '../schema/people';
-import { answers, documents, mixRecords, revisions, typedAttributes } from '../schema/submittals';
+import {
+  answers,
+  documents,
+  mixRecords,
+  replacedWorkbooks,
+  revisions,
+  typedAttributes,
+} from '../schema/submittals';
 import { ofTenant, type Reader, revisionsOf } from './reader';
 
 /** The canonical record of a revision, and how it was read; null before the workbook is read. */
@@ -55,6 +62,26 @@ export function listDocuments(db: Database, reader: Reader, revisionId: string) 
     .leftJoin(files, eq(files.id, documents.fileId))
     .where(and(eq(documents.revisionId, revisionId), ofTenant(documents, reader)))
     .orderBy(asc(documents.position), asc(documents.id));
+}
+
+/** Workbooks of a draft that later uploads replaced, newest first. They are their contractor's alone. */
+export function listReplacedWorkbooks(db: Database, contractorId: string, revisionId: string) {
+  return db
+    .select({
+      id: replacedWorkbooks.id,
+      fileId: files.id,
+      fileName: files.fileName,
+      bytes: files.sizeBytes,
+      replacedBy: people.name,
+      replacedAt: replacedWorkbooks.replacedAt,
+    })
+    .from(replacedWorkbooks)
+    .innerJoin(files, eq(files.id, replacedWorkbooks.fileId))
+    .innerJoin(people, eq(people.id, replacedWorkbooks.replacedById))
+    .where(
+      and(eq(replacedWorkbooks.revisionId, revisionId), eq(replacedWorkbooks.contractorId, contractorId)),
+    )
+    .orderBy(desc(replacedWorkbooks.replacedAt), desc(replacedWorkbooks.id));
 }
 
 /** Bytes of a stored file with its name. */

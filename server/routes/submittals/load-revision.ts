@@ -1,6 +1,7 @@
 import type { Revision } from '#shared/contracts/submittals';
 import { newestCheckHead } from '../../db/queries/checks';
 import { newestJobOf } from '../../db/queries/jobs';
+import { listReplacedWorkbooks } from '../../db/queries/records';
 import { findRevision, listRevisions, nameOfDecider, type RevisionRow } from '../../db/queries/revisions';
 import type { Deps } from '../../deps';
 import type { RequestActor } from '../../middleware/authenticate';
@@ -26,16 +27,26 @@ export async function expectRevision(
 /** A revision as its page shows it, with what the actor may do. */
 export async function viewRevision(deps: Deps, actor: RequestActor, row: RevisionRow): Promise<Revision> {
   const { revision } = row;
-  const [all, check, job, decidedBy] = await Promise.all([
+  const [all, check, job, replaced, decidedBy] = await Promise.all([
     listRevisions(deps.db, actor, row.submittal.id),
     newestCheckHead(deps.db, actor, revision.id),
     // Its reading is the contractor's business: the agency sees what was submitted.
     actor.kind === 'contractor'
       ? newestJobOf(deps.db, actor.organisationId, { subjectKind: 'revision', subjectId: revision.id })
       : null,
+    actor.kind === 'contractor' ? listReplacedWorkbooks(deps.db, actor.organisationId, revision.id) : [],
     revision.state === 'returned' ? nameOfDecider(deps.db, actor, revision.id) : null,
   ]);
-  return presentRevision({ row, actor, now: deps.now(), job, hasCheck: check !== null, all, decidedBy });
+  return presentRevision({
+    row,
+    actor,
+    now: deps.now(),
+    job,
+    hasCheck: check !== null,
+    all,
+    replaced,
+    decidedBy,
+  });
 }
 
 /** The same after an act: read anew, by whatever state it is in now. */

@@ -1,4 +1,5 @@
 import { checkAgainRoute, getCheckRoute, proveSealRoute } from '../checks/checks';
+import { getCreepRoute } from '../checks/get-creep';
 import type { Route } from '../define-route';
 import {
   addDocumentRoute,
@@ -17,6 +18,7 @@ import {
   takeRevisionRoute,
   withdrawRevisionRoute,
 } from './change-state';
+import { getReplacedWorkbookRoute } from './get-replaced-workbook';
 import { getRevisionRoute, getSubmittalRoute } from './get-revision';
 import { getWorkbookRoute } from './get-workbook';
 import { listSubmittalsRoute } from './list-submittals';
@@ -25,10 +27,10 @@ import { replaceWorkbookRoute, startRevisionRoute, uploadSubmittalRoute } from '
 /** A submittal from its upload to what both sides write on it; returns have their own list. */
 export const submittalRoutes: Route[] = [
   ...[listSubmittalsRoute, uploadSubmittalRoute, getSubmittalRoute, getRevisionRoute],
-  ...[startRevisionRoute, replaceWorkbookRoute, getWorkbookRoute, cancelJobRoute],
+  ...[startRevisionRoute, replaceWorkbookRoute, getWorkbookRoute, getReplacedWorkbookRoute, cancelJobRoute],
   ...[getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute],
   ...[addDocumentRoute, attachFileRoute, removeDocumentRoute, getDocumentFileRoute, getDocumentTypesRoute],
-  ...[getCheckRoute, checkAgainRoute, proveSealRoute],
+  ...[getCheckRoute, getCreepRoute, checkAgainRoute, proveSealRoute],
   ...[submitRevisionRoute, withdrawRevisionRoute, takeRevisionRoute, giveBackRevisionRoute],
   ...[writeNoteRoute, changeNoteRoute, removeNoteRoute, waiveRoute, removeWaiverRoute],
 ];
