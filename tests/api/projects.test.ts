@@ -62,6 +62,23 @@ describe('a project', () => {
     });
   });
 
+  it('states what its editions understand, in their words, and is told at the field what they do not', async () => {
+    const made = await addProject({ facts: { designTraffic: '3.5', course: 'wearing' } });
+    expect(made.facts).toEqual({ designTraffic: 3.5, course: 'surface' });
+    await author.post(`/api/projects/${made.id}/sections`).send({ base, layers: [] }).expect(201);
+    const answer = await administrator
+      .patch(`/api/projects/${made.id}`)
+      .set('If-Match', `"${made.version}"`)
+      .send(aProject({ facts: { designTraffic: '3,5', binderGrade: 'PG 99-99' } }));
+    expect(answer.status).toBe(422);
+    expect(answer.body.errors).toMatchObject([
+      { pointer: '/facts/designTraffic', detail: 'Design traffic cannot be “3,5”.' },
+      { pointer: '/facts/binderGrade', detail: 'Binder grade cannot be “PG 99-99”.' },
+    ]);
+    const { body: kept } = await administrator.get(`/api/projects/${made.id}`).expect(200);
+    expect(kept.facts).toEqual(made.facts);
+  });
+
   it('has a number that no other project of the agency has', async () => {
     const answer = await administrator.post('/api/projects').send(aProject({ number: 'CV-2031' }));
     expect(answer.status).toBe(409);

@@ -19,7 +19,7 @@ export async function ownResolvedEdition(
   const documents: (RuleSet | Layer)[] = [];
   for (const { id, edition } of [named, ...named.layers]) {
     const row = published.find((each) => each.ruleSetKey === id && each.edition === edition);
-    const document = row === undefined ? null : await documentOf(db, agencyId, row);
+    const document = row === undefined ? null : await publishedDocument(db, agencyId, row);
     if (document === null) return null;
     documents.push(document);
   }
@@ -29,7 +29,8 @@ export async function ownResolvedEdition(
   return resolution.ok && resolvedEditionHash(resolution.edition) === hash ? resolution.edition : null;
 }
 
-async function documentOf(db: Database, agencyId: string, { id }: EditionRow) {
+/** A published document of the agency; null where this engine no longer understands it. */
+export async function publishedDocument(db: Database, agencyId: string, { id }: Pick<EditionRow, 'id'>) {
   const parsed = parseRuleSet(await editionDocument(db, { agencyId, editionId: id }));
   return parsed.ok ? parsed.ruleSet : null;
 }

@@ -1,10 +1,5 @@
 import { and, eq } from 'drizzle-orm';
-import {
-  type AttributeDefinition,
-  attributeLabel,
-  type Scalar,
-  withStandardAttributes,
-} from '#rules/rule-sets/attribute';
+import { type AttributeDefinition, type Scalar, withStandardAttributes } from '#rules/rule-sets/attribute';
 import { matchValue } from '#rules/rule-sets/match-value';
 import type { ProblemError } from '#shared/contracts/problems';
 import { dateOfInstant } from '#shared/format/dates';
@@ -12,6 +7,7 @@ import { typedAttributes } from '../../db/schema/submittals';
 import type { Deps } from '../../deps';
 import { askedAttributes } from '../../presenters/asked-attributes';
 import { Problem } from '../../problem';
+import { attributeFault } from './attribute-fault';
 import { changeDraft, type DraftChange } from './change-draft';
 
 type GivenAttributes = Record<string, Scalar | null>;
@@ -62,20 +58,10 @@ function understood(
     }
     const meant = value === null ? null : matchValue(attribute, value);
     if (value !== null && meant === null) {
-      errors.push({
-        pointer,
-        detail: `${attributeLabel(attribute)} cannot be “${value}”.`,
-        fix: choices(attribute),
-      });
+      errors.push(attributeFault(attribute, { value, pointer }));
     }
     return { name, value: meant };
   });
   if (errors.length > 0) throw new Problem('invalid-input', { detail: errors[0]?.detail ?? '', errors });
   return values;
-}
-
-function choices({ type, values = [] }: AttributeDefinition): string {
-  if (values.length === 0) return type === 'number' ? 'Enter a number.' : 'Enter another value.';
-  const named = values.map((entry) => (typeof entry === 'object' ? (entry.label ?? entry.value) : entry));
-  return `Choose one of ${named.join(', ')}.`;
 }
