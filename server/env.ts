@@ -16,16 +16,20 @@ const settingsSchema = z.object({
   SESSION_SECRET: z
     .string()
     .min(32, 'has at least 32 characters')
-    .describe('Signs session cookies; at least 32 characters, the same on every server.'),
+    .describe(
+      'Signs session cookies; at least 32 characters, the same on every server. Required with an external database.',
+    ),
   PUBLIC_URL: z
     .url({ protocol: /^https?$/, error: 'is an http:// or https:// address' })
     .optional()
-    .describe('The address people open; links in mails and the check of origins use it.'),
+    .describe(
+      'The address people open; links in mails and the check of origins use it. Required with an external database.',
+    ),
   MAIL_FROM: z
     .string()
     .min(3, 'is a mail address')
     .default('Clauseway <clauseway@localhost.example>')
-    .describe('Sender of every mail.'),
+    .describe('Sender of every mail. Required with an external database, where it has no default.'),
   SMTP_URL: z
     .url({ protocol: /^smtps?$/, error: 'is an smtp:// or smtps:// address' })
     .optional()

@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { describeSettings, parseSettings, SettingsError } from '#server/env';
 
@@ -89,4 +90,12 @@ describe('settings', () => {
   it('are each described', () => {
     for (const { name, meaning } of describeSettings()) expect(meaning, name).toMatch(/\.$|`\.$/);
   });
+});
+
+it('describes every setting that people set in the README, in the same words', () => {
+  const rows = readFileSync('README.md', 'utf8').matchAll(/^\| `(\w+)` \|(.*)\| (.+) \|$/gm);
+  const described = describeSettings().filter(({ name }) => name !== 'CLAUSEWAY_INSTANCE');
+  expect([...rows].map(([, name, fallback, meaning]) => [name, fallback?.trim(), meaning])).toEqual(
+    described.map(({ name, fallback, meaning }) => [name, fallback && `\`${fallback}\``, meaning]),
+  );
 });
