@@ -39,6 +39,7 @@ function ruleView(rule: ResolvedRule, edition: ResolvedEdition): RuleView {
     condition: rule.when === undefined ? null : `where ${conditionClause(rule.when, view)}`,
     rounding: roundingClause(rule, view) || 'nothing to round',
     precision: precisionWords(rule, view),
+    quantity: quantityOf(rule, view, edition),
     minimumCount: measure.kind === 'reading' ? (measure.minimumCount ?? null) : null,
     advice: rule.advice ?? null,
     source: sourceWords(rule.source ?? null) ?? supplied.document,
@@ -49,6 +50,33 @@ function ruleView(rule: ResolvedRule, edition: ResolvedEdition): RuleView {
     encodedBy: rule.encodedBy ?? null,
     verifiedBy: rule.verifiedBy ?? null,
   };
+}
+
+function quantityOf({ measure }: Rule, view: EditionView, edition: ResolvedEdition): RuleView['quantity'] {
+  const id = measuredId(measure);
+  const quantity = id === null ? undefined : view.quantity(id);
+  if (quantity === undefined) return null;
+  return {
+    id: quantity.id,
+    label: quantity.label,
+    own: edition.quantities.some((each) => each.id === quantity.id),
+  };
+}
+
+function measuredId(measure: Rule['measure']): string | null {
+  switch (measure.kind) {
+    case 'reading':
+    case 'difference':
+      return measure.quantity;
+    case 'gradation':
+      return 'percent-passing';
+    case 'creep-compliance':
+      return 'creep-compliance';
+    case 'formula':
+    case 'attribute':
+    case 'document':
+      return null;
+  }
 }
 
 function precisionWords({ precision, measure }: Rule, view: EditionView): string | null {

@@ -52,6 +52,16 @@ export const ruleViewSchema = z.strictObject({
   rounding: z.string(),
   precision: z.string().nullable(),
   minimumCount: z.number().int().nullable(),
+  /** What is measured; null for an attribute, a document and a formula of several. */
+  quantity: z
+    .strictObject({
+      id: z.string(),
+      label: z.string(),
+      /** Declared by this rule set, and shown on its page. */
+      own: z.boolean(),
+    })
+    .nullable()
+    .default(null),
   advice: z.string().nullable(),
   source: z.string(),
   sourceOrigin: z.enum(['read', 'derived', 'memory', 'agency']),

@@ -24,6 +24,28 @@ describe('an edition as its page shows it', () => {
     expect(ruleSetContents(edition, edition).ruleViews[0]?.precision).toBe('± 0.6 %');
   });
 
+  it('names the quantity that a rule measures, and whether the rule set declares it', () => {
+    const edition = anEdition({
+      quantities: [jointDensity],
+      rules: [
+        aRule(),
+        aRule({ id: 'joint', clause: '1.2', measure: { kind: 'reading', quantity: 'joint-density' } }),
+        aRule({
+          id: 'certificate',
+          clause: '1.3',
+          measure: { kind: 'document', type: 'binder-certificate' },
+          limit: { present: true },
+          rounding: undefined,
+        }),
+      ],
+    });
+    expect(ruleSetContents(edition, edition).ruleViews.map(({ quantity }) => quantity)).toEqual([
+      { id: 'voids-in-mineral-aggregate', label: 'voids in the mineral aggregate', own: false },
+      { id: 'joint-density', label: 'joint density', own: true },
+      null,
+    ]);
+  });
+
   it('heads the columns of a table with words', () => {
     const edition = anEdition({
       attributes: [{ name: 'course', type: 'text', values: ['surface', 'base'] }],

@@ -37,6 +37,11 @@ function aView(overrides: Partial<RuleSetView> = {}): RuleSetView {
         rounding: 'ASTM E29, rounding method, to 0.1',
         precision: null,
         minimumCount: 2,
+        quantity: {
+          id: 'voids-in-mineral-aggregate',
+          label: 'voids in the mineral aggregate',
+          own: false,
+        },
         advice: null,
         source: 'AASHTO M 323',
         sourceOrigin: 'memory',
@@ -98,6 +103,12 @@ describe('an edition as it reads', () => {
     const struck = [...container.querySelectorAll('del')].map((each) => each.textContent);
     expect(struck).toEqual(['at least 13.5', '13.5']);
     expect(container.querySelector('.is-removed')?.textContent).toContain('Recycled shingles');
+  });
+
+  it('leads from a rule to the quantity that it measures', async () => {
+    await open();
+    const quantity = screen.getByRole('link', { name: 'voids in the mineral aggregate' });
+    expect(quantity.getAttribute('href')).toBe('/quantities#voids-in-mineral-aggregate');
   });
 
   it('leads from a rule to its table and back', async () => {

@@ -2,6 +2,7 @@ import { Link } from 'react-router-dom';
 import type { RuleView, TableView } from '#shared/contracts/rule-sets';
 import { slug } from '#shared/format/finding-key';
 import { RichText } from '../../../components/ui/rich-text';
+import { paths } from '../../../lib/paths';
 
 const originWords = {
   read: 'read in the source',
@@ -27,6 +28,13 @@ export function RuleText({ rule, tables }: { rule: RuleView; tables: readonly Ta
         <Fact name="Rounding">{rule.rounding}</Fact>
         {rule.precision ? <Fact name="Precision">{rule.precision}</Fact> : null}
         {rule.minimumCount ? <Fact name="Specimens">at least {rule.minimumCount}</Fact> : null}
+        {rule.quantity ? (
+          <Fact name="Quantity">
+            <Link to={rule.quantity.own ? { hash: rule.quantity.id } : paths.quantity(rule.quantity.id)}>
+              {rule.quantity.label}
+            </Link>
+          </Fact>
+        ) : null}
         {used.length > 0 ? (
           <Fact name={used.length === 1 ? 'Table' : 'Tables'}>
             {used.map((table, index) => (
