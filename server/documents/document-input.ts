@@ -1,5 +1,7 @@
 import { z } from 'zod';
+import { explanationSchema } from '#rules/engine/explanation';
 import { dispositionSchema, findingSchema, sealSchema, summarySchema } from '#rules/engine/finding';
+import { roomWordsSchema } from '#rules/engine/room-words';
 import { letterheadSchema } from '#shared/contracts/organisation';
 import { recipientSchema, returnGroupSchema } from '#shared/contracts/returns';
 
@@ -13,6 +15,8 @@ export const documentItemSchema = z.strictObject({
   waivedBecause: z.string().nullable(),
   notes: z.array(z.string()),
   previousText: z.string().nullable(),
+  /** What would pass, in one sentence; empty where none can be computed. */
+  toPass: z.string().default(''),
 });
 
 export const documentInputSchema = z.strictObject({
@@ -44,6 +48,9 @@ export const documentInputSchema = z.strictObject({
   checkedOn: z.iso.date(),
   startingPoint: z.boolean(),
   enclosesWorkbook: z.boolean(),
+  /** Why each limit and what would pass, by finding, for the workbook. */
+  explanations: z.record(z.string(), explanationSchema).default({}),
+  room: roomWordsSchema.nullable().default(null),
 });
 
 export type DocumentInput = z.infer<typeof documentInputSchema>;

@@ -8,6 +8,7 @@ import { itemTable, pageFrame, ruleLine } from './letter-definition';
 import { introduction } from './letter-words';
 import { pdfText } from './pdf-text';
 import { printColours } from './print-colours';
+import { roomSection } from './room-section';
 
 /** All findings in clause order, as the ledger shows them. */
 export function findingsDefinition(input: DocumentInput): TDocumentDefinitions {
@@ -27,6 +28,7 @@ export function findingsDefinition(input: DocumentInput): TDocumentDefinitions {
       ruleLine(),
       pdfText(introduction(input), { margin: [0, 8, 0, 0] }),
       ...clauseGroups(input),
+      ...roomSection(input),
     ],
   };
 }
@@ -43,7 +45,14 @@ function clauseGroups(input: DocumentInput): Content[] {
 }
 
 function asItem(finding: Finding): DocumentItem {
-  return { group: 'for information', finding, waivedBecause: null, notes: [], previousText: null };
+  return {
+    group: 'for information',
+    finding,
+    waivedBecause: null,
+    notes: [],
+    previousText: null,
+    toPass: '',
+  };
 }
 
 function tally(items: DocumentItem[]): string {

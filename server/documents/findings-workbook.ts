@@ -1,6 +1,8 @@
 import type exceljs from 'exceljs';
+import type { Explanation } from '#rules/engine/explanation';
 import type { Finding } from '#rules/engine/finding';
 import { findingKey } from '#rules/engine/finding';
+import { toPassWords } from '#rules/engine/to-pass';
 import { cautionsFor } from '#shared/cautions';
 import { formatDate } from '#shared/format/dates';
 import { mayLeaveOut, nextActHeadings, nextActOf } from '#shared/next-acts';
@@ -23,6 +25,9 @@ const columns = [
   { header: 'Next', width: 20 },
   { header: 'Result', width: 52 },
   { header: 'Reason', width: 52 },
+  { header: 'Why this limit', width: 52 },
+  { header: 'To pass', width: 52 },
+  { header: 'What would decide it', width: 40 },
   { header: 'Waived because', width: 30 },
   { header: 'Notes to be returned', width: 52 },
   { header: 'Cell', width: 18 },
@@ -36,6 +41,7 @@ export async function renderFindingsWorkbook(input: DocumentInput): Promise<Buff
   workbook.creator = neutralise(input.agency.name);
   addSummary(workbook, input);
   addFindings(workbook, input);
+  addRoom(workbook, input);
   return Buffer.from(await workbook.xlsx.writeBuffer());
 }
 
@@ -66,6 +72,20 @@ function addSummary(workbook: exceljs.Workbook, input: DocumentInput): void {
   sheet.getColumn(2).alignment = { wrapText: true, vertical: 'top', horizontal: 'left' };
 }
 
+/** The same words and figures as on the screen and in the letter. */
+function addRoom(workbook: exceljs.Workbook, { room }: DocumentInput): void {
+  if (room === null) return;
+  const sheet = workbook.addWorksheet('Room to move');
+  sheet.columns = [{ width: 14 }, { width: 44 }, { width: 24 }, { width: 40 }];
+  sheet.addRow([neutralise(room.answer)]);
+  sheet.addRow([]);
+  sheet.addRow(['Clause', 'Rule', 'Limit', 'Holds at a binder content of']).font = { bold: true };
+  for (const { clause, title, limit, holds } of room.lines)
+    sheet.addRow([clause, title, limit, holds].map(neutralise));
+  sheet.addRow([]);
+  for (const note of room.notes) sheet.addRow([neutralise(note)]);
+}
+
 function addFindings(workbook: exceljs.Workbook, input: DocumentInput): void {
   const sheet = workbook.addWorksheet('Findings', { views: [{ state: 'frozen', ySplit: 1 }] });
   sheet.columns = columns;
@@ -73,13 +93,22 @@ function addFindings(workbook: exceljs.Workbook, input: DocumentInput): void {
   const items = new Map(input.items.map((item) => [findingKey(item.finding), item]));
   for (const finding of input.findings) {
     const item = items.get(findingKey(finding));
-    const row = sheet.addRow(rowOf(finding, item?.waivedBecause ?? null, item?.notes ?? []));
+    const explanation = input.explanations[findingKey(finding)];
+    const row = sheet.addRow(
+      rowOf(finding, { waivedBecause: item?.waivedBecause ?? null, notes: item?.notes ?? [], explanation }),
+    );
     row.alignment = { wrapText: true, vertical: 'top' };
   }
   sheet.autoFilter = { from: { row: 1, column: 1 }, to: { row: 1, column: columns.length } };
 }
 
-function rowOf(finding: Finding, waivedBecause: string | null, notes: string[]): (string | number | null)[] {
+interface Beside {
+  waivedBecause: string | null;
+  notes: string[];
+  explanation: Explanation | undefined;
+}
+
+function rowOf(finding: Finding, { waivedBecause, notes, explanation }: Beside): (string | number | null)[] {
   const act = nextActOf(finding, waivedBecause !== null);
   const source = finding.evidence[0]?.reported?.source ?? finding.evidence[0]?.source ?? null;
   const texts = {
@@ -106,6 +135,9 @@ function rowOf(finding: Finding, waivedBecause: string | null, notes: string[]):
     texts.next,
     finding.sentence,
     finding.reason,
+    explanation?.whyThisLimit ?? '',
+    toPassWords(explanation?.toPass ?? []),
+    finding.wouldDecide ?? '',
     waivedBecause ?? '',
     notes.join('\n'),
     texts.cell,

@@ -9,6 +9,7 @@ import { groupTally, introduction } from './letter-words';
 import { markSvg } from './mark-svg';
 import { pdfRuns, pdfText } from './pdf-text';
 import { printColours } from './print-colours';
+import { roomSection } from './room-section';
 
 const gaugeWidthPoints = 104;
 const contentWidthPoints = 595.28 - 2 * 56;
@@ -33,6 +34,7 @@ export function letterDefinition(input: DocumentInput): TDocumentDefinitions {
       ...paragraphs(input.textAbove),
       ...input.generalNotes.map((note) => paragraph(note, printColours.note)),
       ...groups(input),
+      ...roomSection(input),
       ...paragraphs(input.textBelow, [0, 12, 0, 0]),
       ...signature(input),
     ],
@@ -188,13 +190,15 @@ export function itemTable(heading: string, tally: string, items: DocumentItem[])
   };
 }
 
-function itemRow({ finding, waivedBecause, notes, previousText }: DocumentItem): TableCell[] {
+function itemRow({ finding, waivedBecause, notes, previousText, toPass }: DocumentItem): TableCell[] {
   const gauge = gaugeSvg(finding, gaugeWidthPoints);
   const asides = [
     waivedBecause === null ? '' : `Waived: ${waivedBecause}`,
     previousText === null ? '' : `Was ${previousText}.`,
     cellWords(finding),
     finding.outcome === 'pass' ? '' : finding.reason,
+    toPass === '' ? '' : `To pass: ${toPass}`,
+    finding.wouldDecide === null ? '' : `What would decide it: ${finding.wouldDecide}`,
   ].filter((aside) => aside !== '');
   return [
     { svg: markSvg(finding.outcome, waivedBecause !== null), width: 9, margin: [0, 1.5, 0, 0] },

@@ -3,8 +3,11 @@ import type { Database } from '../db/client';
 import { newestCheckOf } from '../db/queries/checks';
 import { listNotes, listWaivers } from '../db/queries/notes';
 import type { Reader } from '../db/queries/reader';
+import { findMixRecord } from '../db/queries/records';
 import { isStartingPoint, letterheadOf, revisionBefore } from '../db/queries/returns';
 import type { RevisionRow } from '../db/queries/revisions';
+import { loadResolvedEdition } from '../db/resolved-edition';
+import { explainCheck } from '../presenters/explain-check';
 import { movedFindings } from '../presenters/moved-findings';
 import type { ReturnSources } from '../presenters/return-items';
 import { Problem } from '../problem';
@@ -29,12 +32,14 @@ export async function loadRevisionDocuments(
 ): Promise<LoadedRevision> {
   const check = await newestCheckOf(db, reader, row.revision.id);
   if (check === null) throw new Problem('wrong-state', { detail: 'The workbook has not been checked yet.' });
-  const [letterhead, startingPoint, notes, waivers, before] = await Promise.all([
+  const [letterhead, startingPoint, notes, waivers, before, kept, edition] = await Promise.all([
     letterheadOf(db, row.agency.id),
     isStartingPoint(db, row.agency.id, row.revision.section.base),
     listNotes(db, reader, row.submittal.id),
     listWaivers(db, reader, row.revision.id),
     revisionBefore(db, reader, row.revision),
+    findMixRecord(db, reader, row.revision.id),
+    loadResolvedEdition(db, check.resolvedHash),
   ]);
   if (letterhead === null) throw new Problem('not-found');
   const previous = before === null ? null : await newestCheckOf(db, reader, before.id);
@@ -52,6 +57,7 @@ export async function loadRevisionDocuments(
       section: sectionWords(row.revision.section),
       startingPoint,
       check: { kind: check.kind, madeAt: check.madeAt, result: check.result },
+      explanations: kept === null ? {} : explainCheck(check, kept.record, edition),
     },
     sources: {
       findings: check.result.findings,

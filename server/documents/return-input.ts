@@ -1,4 +1,7 @@
+import type { Explanation } from '#rules/engine/explanation';
 import type { CheckResult, Disposition } from '#rules/engine/finding';
+import { roomWords } from '#rules/engine/room-words';
+import { toPassWords } from '#rules/engine/to-pass';
 import type { Letterhead } from '#shared/contracts/organisation';
 import type { Recipient, ReturnItem } from '#shared/contracts/returns';
 import { dateOfInstant } from '#shared/format/dates';
@@ -17,6 +20,7 @@ export interface RevisionFacts {
   section: string;
   startingPoint: boolean;
   check: { kind: 'pre-check' | 'check of record'; madeAt: Date; result: CheckResult };
+  explanations: Record<string, Explanation>;
 }
 
 export interface ReturnFacts {
@@ -47,7 +51,7 @@ export function returnInput(revision: RevisionFacts, facts: ReturnFacts, now: Da
     copies: facts.copies,
     signedBy: facts.signedBy,
     waivedCount: facts.items.filter(({ waived }) => waived !== null).length,
-    items: items.map(documentItem),
+    items: items.map(documentItem(revision.explanations)),
     generalNotes: facts.generalNotes,
     enclosesWorkbook: facts.enclosesWorkbook,
   });
@@ -70,7 +74,7 @@ export function findingsInput(
     copies: [],
     signedBy: null,
     waivedCount: items.filter(({ waived }) => waived !== null).length,
-    items: items.map(documentItem),
+    items: items.map(documentItem(revision.explanations)),
     generalNotes: [],
     enclosesWorkbook: false,
   });
@@ -78,6 +82,7 @@ export function findingsInput(
 
 function commonInput(revision: RevisionFacts, now: Date) {
   const { agency, check } = revision;
+  const room = check.result.analysis.roomToMove;
   return {
     agency: { name: agency.name, letterhead: agency.letterhead },
     contractor: revision.contractor,
@@ -93,15 +98,25 @@ function commonInput(revision: RevisionFacts, now: Date) {
     seal: check.result.seal,
     checkedOn: dateOfInstant(check.madeAt.toISOString(), agency.timeZone),
     startingPoint: revision.startingPoint,
+    explanations: revision.explanations,
+    room: room && roomWords(room),
   };
 }
 
-function documentItem({
-  group,
-  finding,
-  waived,
-  notes,
-  previousText,
-}: ReturnItem): DocumentInput['items'][number] {
-  return { group, finding, waivedBecause: waived, notes, previousText };
+function documentItem(explanations: Record<string, Explanation>) {
+  return ({
+    key,
+    group,
+    finding,
+    waived,
+    notes,
+    previousText,
+  }: ReturnItem): DocumentInput['items'][number] => ({
+    group,
+    finding,
+    waivedBecause: waived,
+    notes,
+    previousText,
+    toPass: toPassWords(explanations[key]?.toPass ?? []),
+  });
 }

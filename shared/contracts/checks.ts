@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { explanationSchema } from '#rules/engine/explanation';
 import { findingSchema, sealSchema, summarySchema } from '#rules/engine/finding';
 import { dateSchema, instantSchema } from './common';
 import { endpoint } from './endpoint';
@@ -39,6 +40,10 @@ export const checkViewSchema = z.strictObject({
   }),
   summary: summarySchema,
   findings: z.array(findingSchema),
+  /** Why each limit and what would pass, by finding; none for a check of another engine version. */
+  explanations: z.record(z.string(), explanationSchema).default({}),
+  /** True where there is a room to move to look at. */
+  hasRoom: z.boolean().default(false),
   notes: z.array(noteSchema),
   waivers: z.array(waiverSchema),
   /** Findings that moved since the revision before; empty for revision 0. */
@@ -54,6 +59,8 @@ export const checkViewSchema = z.strictObject({
   gradation: z
     .strictObject({ maximumSizeMm: z.number().nullable(), points: z.array(gradationPointSchema) })
     .nullable(),
+  /** Whether there are creep tests to draw. */
+  hasCreep: z.boolean(),
   /** The declaration that submitting would show; only for a draft. */
   declaration: z.string().nullable(),
 });

@@ -61,13 +61,17 @@ export function aDocumentInput(overrides: Partial<DocumentInput> = {}): Document
     waivedCount: 1,
     items: findings.flatMap((finding) => {
       const group = nextActOf(finding, false);
-      return group === null ? [] : [{ group, finding, waivedBecause: null, notes: [], previousText: null }];
+      return group === null
+        ? []
+        : [{ group, finding, waivedBecause: null, notes: [], previousText: null, toPass: '' }];
     }),
     generalNotes: [],
     seal,
     checkedOn: '2026-03-09',
     startingPoint: true,
     enclosesWorkbook: true,
+    explanations: {},
+    room: null,
     ...overrides,
     findings,
   } satisfies DocumentInput);

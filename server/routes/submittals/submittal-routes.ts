@@ -1,5 +1,6 @@
 import { checkAgainRoute, getCheckRoute, proveSealRoute } from '../checks/checks';
 import { getCreepRoute } from '../checks/get-creep';
+import { getRoomRoute } from '../checks/get-room';
 import type { Route } from '../define-route';
 import {
   addDocumentRoute,
@@ -30,7 +31,7 @@ export const submittalRoutes: Route[] = [
   ...[startRevisionRoute, replaceWorkbookRoute, getWorkbookRoute, getReplacedWorkbookRoute, cancelJobRoute],
   ...[getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute],
   ...[addDocumentRoute, attachFileRoute, removeDocumentRoute, getDocumentFileRoute, getDocumentTypesRoute],
-  ...[getCheckRoute, getCreepRoute, checkAgainRoute, proveSealRoute],
+  ...[getCheckRoute, getRoomRoute, getCreepRoute, checkAgainRoute, proveSealRoute],
   ...[submitRevisionRoute, withdrawRevisionRoute, takeRevisionRoute, giveBackRevisionRoute],
   ...[writeNoteRoute, changeNoteRoute, removeNoteRoute, waiveRoute, removeWaiverRoute],
 ];
