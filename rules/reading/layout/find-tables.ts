@@ -300,7 +300,7 @@ function belongsToHeading(
     const meanings = texts.map(({ text }) => labels.read(text));
     if (meanings.some((meaning) => isHeading(meaning))) return true;
     // Names of stockpiles or specimens over columns of values.
-    return next?.cells.some((cell) => kinds.of(cell) === 'value') ?? false;
+    return next?.cells.some((cell) => kinds.of(cell) === 'value' || kinds.of(cell) === 'unit') ?? false;
   }
   return isNumberedHeading(row, values, table, around) || isKeyedHeading(row, next, table, around);
 }
@@ -414,6 +414,8 @@ function continues(previous: Table, table: Table, { kinds, labels }: Surrounding
   const before = rowsThatSay(previous, { kinds, labels });
   if (own > table.rows.length / 2 && before <= previous.rows.length / 2) return false;
   const width = (rows: TableRow[]) => Math.max(...rows.map(({ cells }) => cells.length));
+  // Under a table of several columns, lines of label and one value are a list of their own.
+  if (own > 0 && width(table.rows) <= 2 && width(previous.rows) > 2) return false;
   return width(table.rows) >= 2 && width(table.rows) <= width([...previous.headings, ...previous.rows]);
 }
 

@@ -64,6 +64,7 @@ export function readTable(table: Table, sheet: SheetContext): void {
   }
   nameColumns(context);
   readHeadBinders(context);
+  const trialOf = trialsByBinder(context);
   const keys = new RowKeys(context.columns, context);
   let group: Group = { at: {}, meaning: null, subset: null };
   let outer: { label: LabelMeaning; column: number } | null = null;
@@ -76,6 +77,7 @@ export function readTable(table: Table, sheet: SheetContext): void {
       continue;
     }
     const facts = keys.read(row);
+    if (trialOf !== null && facts.at.trial === undefined) Object.assign(facts.at, trialOf(row, facts.role));
     const labelled = rowLabels(row, context, outer);
     outer = labelled.outer;
     if (labelled.documents) {
@@ -106,7 +108,9 @@ function tableContext(table: Table, sheet: SheetContext): TableContext {
   const titles = table.titles.map(({ text }) => sheet.labels.read(text));
   const columns = tableColumns(table, sheet.index, sheet);
   const far: Conditions = { ...sheet.ambient };
-  for (const title of titles) Object.assign(far, farConditions(title));
+  for (const [at, title] of titles.entries()) {
+    Object.assign(far, farConditions(title), writtenKey(table.titles[at] as Cell, sheet));
+  }
   sheet.nextTable += 1;
   const context: TableContext = {
     ...sheet,
@@ -121,6 +125,21 @@ function tableContext(table: Table, sheet: SheetContext): TableContext {
   };
   context.nameKey = nameKeyOf(context);
   return context;
+}
+
+/** "Stockpile: No. 8 Chip" over a table says whose it is. */
+function writtenKey(cell: Cell, { labels, decimal }: SheetContext): Conditions {
+  const match = /^([^:=]{1,40}?)\s*[:=]\s*(\S.{0,40})$/.exec(plainText(cell.text));
+  if (!match?.[1] || !match[2]) return {};
+  const meaning = labels.read(match[1]);
+  const key =
+    meaning.quantities.length === 0 && meaning.unknown.length === 0
+      ? meaning.keys.find(isConditionKey)
+      : undefined;
+  if (key === undefined || key === 'variant' || key === 'sieve') return {};
+  const said: Cell = { ...cell, kind: 'text', value: match[2], text: match[2] };
+  const understood = keyConditions(key, said, { labels, unit: meaning.unit, decimal });
+  return understood.state === 'value' ? understood.value : {};
 }
 
 /** A report's title is full of words like "design"; only a short one names what stands under it. */
@@ -181,7 +200,7 @@ function nameColumns(context: TableContext): void {
   for (const column of columns.values()) {
     if (column.kind !== 'value' || column.name === null || column.nameCell === null) continue;
     const key = column.nameKey ?? nameKey;
-    if (column.quantities.length > 0 && !givesWay(column, key)) continue;
+    if (labels.read(column.nameCell.text).quantities.length > 0 && !givesWay(column, key)) continue;
     if (column.at[key] !== undefined) continue;
     const understood = keyConditions(key, column.nameCell, { labels, unit: column.unit, decimal });
     if (understood.state !== 'value') continue;
@@ -260,10 +279,69 @@ function nameByBinder(context: TableContext): void {
       return cell && kinds.of(cell) === 'value' ? [{ column, cell }] : [];
     });
     if (new Set(values.map(({ cell }) => cell.text)).size < 2) continue;
-    for (const { column, cell } of values)
-      column.at = { ...column.at, trial: plainText(cell.text).replace(/\s*%$/, '') };
+    for (const { column, cell } of values) column.at = { ...column.at, trial: binderText(cell) };
     return;
   }
+}
+
+/**
+ * Rows told apart by their binder content only, at steps that trials are made at: it names the trials. Contents
+ * that differ by a few hundredths are results of one mix, and name nothing.
+ */
+function trialsByBinder(context: TableContext): ((row: TableRow, role: Role | null) => Conditions) | null {
+  const { columns, table, far, kinds } = context;
+  const all = [...columns.values()];
+  const binder = all.find(
+    ({ kind, quantities, role }) =>
+      kind === 'value' && role === null && quantities.includes('binder-content'),
+  );
+  if (
+    !binder ||
+    far.trial !== undefined ||
+    all.some(({ key, at }) => key === 'trial' || at.trial !== undefined)
+  )
+    return null;
+  if (
+    all.some(({ kind, quantities }) => kind === 'label' && quantities.length === 0) &&
+    all.every(({ key }) => key === null)
+  ) {
+    const label = all.find(({ kind }) => kind === 'label');
+    if (
+      label &&
+      table.rows.some(({ cells }) =>
+        cells.some(
+          (cell) =>
+            cell.column === label.column &&
+            kinds.of(cell) === 'text' &&
+            context.labels.read(cell.text).role === null,
+        ),
+      )
+    )
+      return null;
+  }
+  const texts = new Map<string, number>();
+  for (const { cells } of table.rows) {
+    const cell = cells.find(({ column }) => column === binder.column);
+    const value =
+      cell && kinds.of(cell) === 'value'
+        ? Number(plainText(cell.text).replace(',', '.').replace(/\s*%$/, ''))
+        : Number.NaN;
+    if (cell && Number.isFinite(value)) texts.set(binderText(cell), value);
+  }
+  const steps = [...texts.values()].sort((a, b) => a - b);
+  const isLadder =
+    steps.length > 1 && steps.every((value, at) => at === 0 || value - (steps[at - 1] as number) > 0.195);
+  if (!isLadder) return null;
+  let last: string | null = null;
+  return ({ cells }, role) => {
+    const cell = cells.find(({ column }) => column === binder.column);
+    if (cell && role === null && kinds.of(cell) === 'value') last = binderText(cell);
+    return last === null ? {} : { trial: last };
+  };
+}
+
+function binderText(cell: Cell): string {
+  return plainText(cell.text).replace(',', '.').replace(/\s*%$/, '');
 }
 
 function titleOf(row: TableRow, { kinds, labels, columns }: TableContext): LabelMeaning | null {
@@ -311,6 +389,7 @@ export function bareCandidate(context: TableContext, cell: Cell): Candidate {
     method: null,
     testedOn: null,
     isAverage: false,
+    specimenOfRow: false,
     subset: context.tableSubset,
     onAggregate: false,
     onMix: false,
@@ -489,6 +568,7 @@ function readValue(
     method: facts.method ?? label?.method ?? column.method ?? group.meaning?.method ?? null,
     testedOn: facts.testedOn,
     isAverage: role === 'average',
+    specimenOfRow: facts.at.specimen !== undefined,
     subset:
       facts.subset ??
       labels.findLast(({ subset }) => subset !== null)?.subset ??

@@ -35,6 +35,7 @@ export function settleCandidates(candidates: Candidate[], options: SettleOptions
   decideGradations(assigned, options.find);
   const kept = withoutAverages(withoutOtherMasses(assigned, options.log), options.log);
   numberReplicates(kept);
+  freeFromSpecimen(kept);
   const suspected = suspicions(kept, options);
   const formulas = new Set<string>();
   for (const each of kept) emit(each, { ...options, suspected, formulas });
@@ -87,6 +88,30 @@ function withoutAverages(assigned: Assigned[], log: ReadingLog): Assigned[] {
     log.passOver(placeOf(each.index.sheet, each.cell), unreadReasons.average);
     return false;
   });
+}
+
+/** A result that several columns of specimens share stands in the first of them, or is merged over them all. */
+function freeFromSpecimen(assigned: Assigned[]): void {
+  const specimens = new Map<number, Set<string>>();
+  const lines = new Map<string, number>();
+  const lineOf = ({ table, cell }: Assigned) => `${table}|${cell.row}`;
+  for (const each of assigned) {
+    if (each.conditions.specimen === undefined) continue;
+    lines.set(lineOf(each), (lines.get(lineOf(each)) ?? 0) + 1);
+    const known = specimens.get(each.table) ?? new Set();
+    known.add(each.conditions.specimen);
+    specimens.set(each.table, known);
+  }
+  for (const each of assigned) {
+    const [quantity] = each.choices;
+    if (!quantity || each.conditions.specimen === undefined || each.specimenOfRow) continue;
+    const isMerged = each.index.spanOf(each.cell).columns > 1;
+    const isShared = quantity.kind === 'derived' || quantity.id === 'maximum-specific-gravity';
+    const isAlone = lines.get(lineOf(each)) === 1 && (specimens.get(each.table)?.size ?? 0) > 1;
+    if (!isMerged && !(isShared && isAlone)) continue;
+    const { specimen: _, ...rest } = each.conditions;
+    each.conditions = rest;
+  }
 }
 
 /** Replicates that a table lists without numbers are told apart by their order. */

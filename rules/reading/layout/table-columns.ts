@@ -274,7 +274,8 @@ function nameColumn(
   const upperKey = meanings
     .slice(0, kinds.of(lowest) === 'text' ? -1 : undefined)
     .flatMap(({ keys, quantities }) => (quantities.length === 0 ? keys : []))
-    .find(isConditionKey);
+    .filter(isConditionKey)
+    .find((key) => key !== 'variant' && result.at[key] === undefined);
   if (kinds.of(lowest) !== 'text') {
     result.name = plainText(lowest.text);
     result.nameCell = lowest;
@@ -325,7 +326,8 @@ function decideKind(
     .filter((cell) => kinds.of(cell) === 'text')
     .map(({ text }) => labels.read(text));
   const last = meanings.at(-1);
-  const keys = result.nameKey !== null || !last || last.unknown.length > 0 ? [] : last.keys;
+  const isNumbered = result.nameCell !== null && kinds.of(result.nameCell) !== 'text';
+  const keys = result.nameKey !== null || isNumbered || !last || last.unknown.length > 0 ? [] : last.keys;
   const sample = cells.slice(0, 80);
   const texts = sample.filter((cell) => kinds.of(cell) === 'text');
   const say = texts.filter(({ text }) => {
@@ -370,7 +372,8 @@ function decideKind(
   else if (keys.some(isConditionKey) && !(isBehindValues && isNameOnly(keys, sample)))
     setKey(result, keys.filter(isConditionKey), sample);
   else if (keys.includes('quantity')) result.kind = 'label';
-  else if (looksLikeSieves(sample, result.heads.length === 0 || isFirst)) setKey(result, ['sieve'], sample);
+  else if (looksLikeSieves(sample, isFirst || result.heads.every((cell) => kinds.of(cell) === 'unit')))
+    setKey(result, ['sieve'], sample);
   else if (texts.length > 0 && texts.length * 2 >= sample.length)
     result.kind = isFirst || result.heads.length === 0 ? 'label' : 'aside';
   else if (isFirst && result.heads.length > 0 && result.quantities.length === 0 && sample.length > 0)

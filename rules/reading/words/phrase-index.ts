@@ -85,8 +85,8 @@ function nameOf(sense: Sense): string {
   return 'name' in sense ? sense.name : '';
 }
 
-/** Single letters are names of trials and masses at once; alone they say nothing. */
-const isTelling = (phrase: string) => phrase.trim().length > 1;
+/** `A`, `D` and `S1` are names of trials and specimens as often as symbols; alone they say nothing. */
+const isTelling = (phrase: string) => !/^\s*(?:\p{L}|[A-Z]\d)\s*$/u.test(phrase);
 
 let shared: PhraseIndex | null = null;
 

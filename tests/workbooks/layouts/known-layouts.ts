@@ -1,32 +1,6 @@
-import { Book } from './book';
-import { english, englishAbbreviated, french, german, type Headings, spanish } from './headings';
-import { inventedMix } from './invented-mix';
-import type { Section } from './sections';
+import { english, englishAbbreviated, french, german, spanish } from './headings';
+import { type Layout, layout } from './layout';
 import * as s from './sections';
-
-export interface Layout {
-  name: string;
-  make: () => Book;
-}
-
-function layout(
-  seed: number,
-  name: string,
-  words: Headings,
-  us: boolean,
-  sections: Section[],
-  options: Parameters<typeof inventedMix>[1] = {},
-): Layout {
-  return {
-    name,
-    make: () => {
-      const book = new Book();
-      const mix = inventedMix(seed, options);
-      for (const section of sections) section(book, mix, { words, us });
-      return book;
-    },
-  };
-}
 
 export const knownLayouts: Layout[] = [
   layout(1, 'plain English, SI', english, false, [
