@@ -1,8 +1,10 @@
 import { QueryClientProvider } from '@tanstack/react-query';
 import { cleanup, render } from '@testing-library/react';
-import { type ReactNode, Suspense } from 'react';
+import { type ReactNode, Suspense, useState } from 'react';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
-import { afterEach, vi } from 'vitest';
+import { afterEach, onTestFinished, vi } from 'vitest';
+import { FootPlace } from '../../web/components/ui/running-foot';
+import { onAnnouncement } from '../../web/lib/announce';
 import { createQueryClient } from '../../web/lib/query-client';
 import { listenForShortcuts } from '../../web/lib/shortcuts';
 
@@ -81,4 +83,22 @@ export function renderPage(element: ReactNode, { path, at }: { path: string; at:
     </QueryClientProvider>,
   );
   return { ...rendered, router, client, stop };
+}
+
+/** A page with the place of its foot, as the shell gives it. */
+export function WithFoot({ children }: { children: ReactNode }) {
+  const [foot, setFoot] = useState<HTMLElement | null>(null);
+  return (
+    <FootPlace value={foot}>
+      {children}
+      <footer ref={setFoot} />
+    </FootPlace>
+  );
+}
+
+/** What is said to a screen reader from now on, in its order. */
+export function listenToAnnouncements(): string[] {
+  const said: string[] = [];
+  onTestFinished(onAnnouncement((message) => said.push(message)));
+  return said;
 }

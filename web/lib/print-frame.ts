@@ -4,7 +4,7 @@ import { useEffect } from 'react';
  * What stands in the margins of every printed page: whose paper it is and what it is about, then what the page says
  * in its foot. Margin boxes take strings, so they go to the style of the root; print.css sets them.
  */
-export function usePrintHead({ agency, reference }: { agency: string; reference: string }): void {
+function usePrintHead({ agency, reference }: { agency: string; reference: string }): void {
   usePrintText('agency', agency);
   usePrintText('reference', reference);
 }

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import {
+  countInFigures,
   countOf,
   decimalsOf,
   formatFixed,
@@ -48,6 +49,12 @@ describe('numbers as people read them', () => {
     expect(groupThousands('20000.2500')).toBe('20,000.2500');
     expect(groupThousands('−1200')).toBe('−1,200');
     expect(groupThousands('PG 64-22')).toBe('PG 64-22');
+  });
+
+  it('counts in figures where numbers are compared', () => {
+    expect(countInFigures(1, 'doubt')).toBe('1 doubt');
+    expect(countInFigures(0, 'doubt')).toBe('0 doubts');
+    expect(countInFigures(2, 'note stays', 'notes stay')).toBe('2 notes stay');
   });
 
   it('counts in words up to nine', () => {

@@ -2,9 +2,31 @@ import { describe, expect, it } from 'vitest';
 import { clauseParts, sectionOfClause } from '#shared/format/clause';
 import { findByFragment, findingFragment, slug } from '#shared/format/finding-key';
 import { gaugeText, marginText, observedText } from '#shared/format/margin';
+import { sectionWords } from '#shared/format/section-words';
+import { shortHash } from '#shared/format/short-hash';
 import { splitSymbols, symbolParts } from '#shared/format/symbols';
 import { formatBytes, unitWord, withUnit } from '#shared/format/units';
 import { aFinding } from '#tests/builders/a-finding';
+
+describe('a section', () => {
+  const base = { title: 'Section 412', edition: '2026' };
+
+  it('is its edition, then its layers in their order', () => {
+    expect(sectionWords({ base, layers: [] })).toBe('Section 412, edition 2026');
+    const layers = [{ title: 'Supplement S-07' }, { title: 'Special provision 3' }];
+    expect(sectionWords({ base, layers })).toBe(
+      'Section 412, edition 2026, with Supplement S-07 and Special provision 3',
+    );
+  });
+});
+
+describe('a hash', () => {
+  it('is short enough to compare by eye, without the name of its method', () => {
+    const hash = `7f3a91c0${'0'.repeat(52)}5be2`;
+    expect(shortHash(hash)).toBe('7f3a 91c0 … 5be2');
+    expect(shortHash(`sha256:${hash}`)).toBe('7f3a 91c0 … 5be2');
+  });
+});
 
 describe('units', () => {
   it('stand after their number with a space; a ratio has none', () => {

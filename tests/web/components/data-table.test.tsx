@@ -38,6 +38,23 @@ describe('a table that sorts', () => {
     expect(order()).toEqual(['BW-190', 'BW-125', 'BW-095']);
   });
 
+  it('keeps what is open under a row with it', () => {
+    render(
+      <DataTable
+        caption="Mixes"
+        columns={columns}
+        rows={rows}
+        rowKey={(row) => row.mix}
+        rowAfter={(row) => (row.mix === 'BW-095' ? <p>opened</p> : null)}
+      />,
+    );
+    const rowBeforeOpened = () =>
+      screen.getByText('opened').closest('tr')?.previousElementSibling?.textContent;
+    expect(rowBeforeOpened()).toContain('BW-095');
+    fireEvent.click(screen.getByText('Mix'));
+    expect(rowBeforeOpened()).toContain('BW-095');
+  });
+
   it('offers no sorting where none is meant', () => {
     render(<DataTable caption="Mixes" columns={columns} rows={rows} rowKey={(row) => row.mix} />);
     expect(screen.queryByRole('button', { name: 'Act' })).toBeNull();

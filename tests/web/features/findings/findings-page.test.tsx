@@ -1,12 +1,12 @@
 // @vitest-environment happy-dom
 import { act, fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
-import { aCheckView, aNote } from '#tests/builders/a-check-view';
+import { aCheckView, aNote, aWaiver } from '#tests/builders/a-check-view';
 import { aFinding } from '#tests/builders/a-finding';
 import { aRevision, noAbilities } from '#tests/builders/a-revision';
 import { aSession } from '#tests/builders/a-session';
 import { FindingsPage } from '../../../../web/features/findings/components/findings-page';
-import { aProblemResponse, renderPage, stubServer } from '../../render-page';
+import { aProblemResponse, listenToAnnouncements, renderPage, stubServer } from '../../render-page';
 
 const submittalId = '0192f0a0-0000-7000-8000-000000000001';
 const base = `/api/submittals/${submittalId}/revisions/1`;
@@ -115,6 +115,46 @@ describe('the findings page', () => {
     fireEvent.click(clauseButton('412.03(b)'));
     expect(screen.getByText('Waive with a reason')).toBeTruthy();
     stop();
+  });
+
+  it('says why W does nothing on a row that cannot be waived', async () => {
+    const said = listenToAnnouncements();
+    const { stop } = await open({ abilities: { waiveAdvisory: true } });
+    fireEvent.keyDown(document.body, { key: 'w' });
+    act(() => clauseButton('412.03(c)').focus());
+    fireEvent.keyDown(clauseButton('412.03(c)'), { key: 'w' });
+    act(() => clauseButton('412.03(b)').focus());
+    fireEvent.keyDown(clauseButton('412.03(b)'), { key: 'w' });
+    expect(said).toEqual([
+      'Go to the row of a fail first.',
+      '412.03(c) is pass; only a fail can be waived.',
+      '412.03(b) is required; you may not waive it.',
+    ]);
+    expect(screen.queryByLabelText('Reason for waiving 412.03(b)')).toBeNull();
+    stop();
+  });
+
+  it('edits the note of the row in focus with E', async () => {
+    const { stop } = await open({
+      abilities: { note: true },
+      check: { notes: [aNote({ abilities: { change: true, remove: true, reply: false } })] },
+    });
+    act(() => clauseButton('412.03(b)').focus());
+    fireEvent.keyDown(clauseButton('412.03(b)'), { key: 'e' });
+    expect(await screen.findByDisplayValue('Please bring the voids up.')).toBeTruthy();
+    stop();
+  });
+
+  it('says that a waiver still stands where it could not be taken back', async () => {
+    const waiver = aWaiver({ abilities: { remove: true } });
+    await open({
+      abilities: { waiveRequired: true },
+      check: { waivers: [waiver] },
+      answers: { [`DELETE /api/waivers/${waiver.id}`]: aProblemResponse('version-stale', 412) },
+    });
+    fireEvent.click(clauseButton('412.03(b)'));
+    fireEvent.click(screen.getByText('Take the waiver back'));
+    expect(await screen.findByText(/The waiver still stands\./)).toBeTruthy();
   });
 
   it('leads to the decision only who may take it', async () => {

@@ -1,11 +1,14 @@
 // @vitest-environment happy-dom
 import { fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it, vi } from 'vitest';
+import { aCheckView } from '#tests/builders/a-check-view';
+import { aFinding } from '#tests/builders/a-finding';
 import { aReadingView } from '#tests/builders/a-reading-view';
 import { aRevision } from '#tests/builders/a-revision';
 import { aSession } from '#tests/builders/a-session';
 import { ReadingPage } from '../../../../web/features/reading/components/reading-page';
-import { aProblemResponse, renderPage, stubServer } from '../../render-page';
+import { checkQuery } from '../../../../web/lib/queries/check-query';
+import { aProblemResponse, listenToAnnouncements, renderPage, stubServer } from '../../render-page';
 
 const submittalId = '0192f0a0-0000-7000-8000-000000000001';
 const params = { submittalId, number: 1 };
@@ -45,13 +48,15 @@ const aSheet = {
 };
 
 async function open(answers: Record<string, unknown> = {}, reading = aReadingView()) {
-  const sent = stubServer({
-    'GET /api/session': aSession(),
-    [`GET ${base}`]: aRevision({ state: 'draft' }),
-    [`GET ${base}/reading`]: reading,
-    [`GET ${base}/sheet`]: aSheet,
-    ...answers,
-  });
+  const sent = stubServer(
+    Object.assign(answers, {
+      'GET /api/session': aSession(),
+      [`GET ${base}`]: aRevision({ state: 'draft' }),
+      [`GET ${base}/reading`]: reading,
+      [`GET ${base}/sheet`]: aSheet,
+      ...answers,
+    }),
+  );
   const page = renderPage(<ReadingPage params={params} />, {
     path: '/submittals/:submittalId/r/:number/reading',
     at,
@@ -82,6 +87,20 @@ describe('the reading page', () => {
       ]),
     );
     expect(sent.find((request) => request.method === 'PUT')?.headers.get('If-Match')).toBe('"4"');
+    stop();
+  });
+
+  it('says which outcomes a kept answer moved', async () => {
+    const said = listenToAnnouncements();
+    const answers: Record<string, unknown> = {
+      [`PUT ${base}/answers`]: aReadingView({ version: 5 }),
+      [`GET ${base}/check`]: aCheckView({ findings: [aFinding({ outcome: 'undecided' })] }),
+    };
+    const { client, stop } = await open(answers);
+    await waitFor(() => expect(client.getQueryData(checkQuery(params).queryKey)).toBeDefined());
+    answers[`GET ${base}/check`] = aCheckView({ findings: [aFinding({ outcome: 'fail' })] });
+    press('2');
+    await waitFor(() => expect(said).toContain('Checked again. Changed: one outcome, 412.03(b) fail.'));
     stop();
   });
 

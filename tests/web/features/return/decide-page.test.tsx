@@ -1,11 +1,12 @@
 // @vitest-environment happy-dom
-import { fireEvent, screen, waitFor, within } from '@testing-library/react';
+import { act, fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
+import { cautions } from '#shared/cautions';
 import { aReturnView } from '#tests/builders/a-return-view';
-import { aRevision } from '#tests/builders/a-revision';
+import { aRevision, noAbilities } from '#tests/builders/a-revision';
 import { aSession } from '#tests/builders/a-session';
 import { ReturnPage } from '../../../../web/features/return/components/return-page';
-import { aProblemResponse, renderPage, stubServer } from '../../render-page';
+import { aProblemResponse, listenToAnnouncements, renderPage, stubServer, WithFoot } from '../../render-page';
 
 const submittalId = '0192f0a0-0000-7000-8000-000000000001';
 const params = { submittalId, number: 1 };
@@ -109,6 +110,43 @@ describe('deciding on a return', () => {
     expect(screen.queryByRole('button', { name: 'Sign and send' })).toBeNull();
     expect(screen.getByRole('button', { name: 'Send to Mairi Halloran to sign' })).toBeTruthy();
     expect(screen.getByText('4 internal notes stay here.')).toBeTruthy();
+  });
+});
+
+describe('the foot of a return', () => {
+  it('holds both acts and the caution', async () => {
+    stubServer({
+      'GET /api/session': aSession(),
+      [`GET ${base}`]: aRevision(),
+      [`GET ${base}/return`]: aReturnView(),
+    });
+    renderPage(
+      <WithFoot>
+        <ReturnPage params={params} />
+      </WithFoot>,
+      { path: '/submittals/:submittalId/r/:number/return', at: `/submittals/${submittalId}/r/1/return` },
+    );
+    const foot = within(await screen.findByRole('contentinfo'));
+    expect(await foot.findByRole('button', { name: 'Sign and send' })).toBeTruthy();
+    expect(foot.getByRole('button', { name: 'Send to Mairi Halloran to sign' })).toBeTruthy();
+    expect(foot.getByText(cautions.findings)).toBeTruthy();
+  });
+});
+
+describe('editing a note from the letter', () => {
+  it('goes to the finding of the item in focus with E, and says where there is none', async () => {
+    const said = listenToAnnouncements();
+    const { router, stop } = await open({
+      [`GET ${base}`]: aRevision({ abilities: { ...noAbilities, note: true } }),
+    });
+    fireEvent.keyDown(document.body, { key: 'e' });
+    expect(said).toEqual(['Go to a finding of the letter first.']);
+    const link = screen.getByRole('link', { name: '412.03(b)' });
+    act(() => link.focus());
+    fireEvent.keyDown(link, { key: 'e' });
+    await waitFor(() => expect(router.state.location.hash).toBe('#vma~design-point'));
+    expect(router.state.location.state).toEqual({ editNote: true });
+    stop();
   });
 });
 

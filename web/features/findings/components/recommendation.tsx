@@ -1,5 +1,4 @@
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
 import { formatDate, formatDayAndMonth } from '#shared/format/dates';
 import { countOf } from '#shared/format/numbers';
 import { Button, LinkButton } from '../../../components/ui/button';
@@ -112,7 +111,9 @@ function Acts() {
           </Button>
         ) : null}
         {before ? (
-          <Link to={paths.revision(params.submittalId, before.number)}>See r{before.number}</Link>
+          <LinkButton kind="text" to={paths.revision(params.submittalId, before.number)}>
+            See r{before.number}
+          </LinkButton>
         ) : null}
       </div>
       {withdrawing && abilities.withdraw ? <WithdrawForm onLeave={() => setWithdrawing(false)} /> : null}

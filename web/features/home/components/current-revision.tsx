@@ -30,7 +30,7 @@ export function CurrentRevision({ current }: { current: Current }) {
         about={current.changes}
         acts={
           current.canSubmit ? (
-            <LinkButton kind="primary" to={submitAddress(current)}>
+            <LinkButton kind="primary" className="acts-in-foot" to={submitAddress(current)}>
               Submit revision {current.revision}
             </LinkButton>
           ) : null

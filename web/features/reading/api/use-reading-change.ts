@@ -27,11 +27,7 @@ export function useReadingChange<Change>(
     waiting.current = waiting.current.filter((each) => each !== given);
   };
   const mutation = useMutation({
-    mutationFn: async (given: Change) => {
-      const before = await checkNow(client, params);
-      const reading = await change(given, await client.ensureQueryData(options));
-      return { reading, before };
-    },
+    mutationFn: async (given: Change) => change(given, await client.ensureQueryData(options)),
     // One after the other: each change sends the version that the one before it brought.
     scope: { id: JSON.stringify(options.queryKey) },
     onMutate: async (given: Change) => {
@@ -41,7 +37,8 @@ export function useReadingChange<Change>(
       await client.cancelQueries({ queryKey: options.queryKey });
       client.setQueryData(options.queryKey, (present) => present && foreseen(given, present));
     },
-    onSuccess: ({ reading, before }, given) => {
+    onSuccess: (reading, given) => {
+      const before = client.getQueryData(checkQuery(params).queryKey);
       settle(given);
       const shown = waiting.current.reduce((present, each) => foreseen(each, present), reading);
       client.setQueryData(options.queryKey, shown);
@@ -62,15 +59,11 @@ export function useReadingChange<Change>(
   return { ...mutation, error: refusal };
 }
 
-/** The check as the reader last saw it; a draft that could not be checked yet has none. */
-async function checkNow(client: QueryClient, params: RevisionParams): Promise<CheckView | null> {
-  return client.ensureQueryData(checkQuery(params)).catch(() => null);
-}
-
+/** Only against a check that was known before: a draft that could not be checked yet has none. */
 async function sayChanges(
   client: QueryClient,
   params: RevisionParams,
-  before: CheckView | null,
+  before: CheckView | undefined,
 ): Promise<void> {
   if (!before) return;
   const after = await client.fetchQuery({ ...checkQuery(params), staleTime: 0 }).catch(() => null);

@@ -1,3 +1,4 @@
+import { useQuery } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
 import { cautions } from '#shared/cautions';
 import type { ReadingView } from '#shared/contracts/readings';
@@ -11,6 +12,7 @@ import { announce } from '../../../lib/announce';
 import { paths } from '../../../lib/paths';
 import { usePrintedRevision } from '../../../lib/print-frame';
 import { asProblem } from '../../../lib/problem';
+import { checkQuery } from '../../../lib/queries/check-query';
 import { type RevisionParams, useRevision } from '../../../lib/queries/revision-query';
 import { useMediaQuery } from '../../../lib/use-media-query';
 import { usePageTitle } from '../../../lib/use-page-title';
@@ -38,13 +40,15 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   usePageTitle(`Reading of ${revision.mixDesignation} revision ${revision.number}`);
   usePrintedRevision(revision);
   const [cursor, setCursor] = useCellCursor(firstPlace(reading));
+  // At hand before anything is changed, so that the page can say which outcomes a change moved.
+  useQuery({ ...checkQuery(params), enabled: revision.hasCheck });
   const answers = useKeepAnswers(params);
   const attributes = useKeepAttributes(params);
   const answer = (doubt: ReadingDoubt, value: string | null) => {
     if (!reading.abilities.answer) return;
     const { sheet, cell, text } = doubt;
     answers.mutate([{ sheet, cell, text, answer: value }], {
-      onSuccess: ({ reading: kept }) => announce(doubtsLeftWords(kept.doubts)),
+      onSuccess: (kept) => announce(doubtsLeftWords(kept.doubts)),
     });
   };
   const openFindings = useOpenFindings(params);
