@@ -6,7 +6,9 @@ import './quantity-table.css';
 
 export interface QuantityRow {
   quantity: Quantity;
-  /** A name that workbooks give it, where it is what a search found. */
+  /** How workbooks write it, besides label and symbol. */
+  names: readonly string[];
+  /** The one of them that a search found. */
   writtenAs?: string | null;
 }
 
@@ -27,12 +29,18 @@ export function QuantityTable({ caption, rows }: { caption: string; rows: readon
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ quantity, writtenAs }) => (
+          {rows.map(({ quantity, names, writtenAs }) => (
             <tr key={quantity.id} id={quantity.id} tabIndex={-1}>
               <th scope="row">
                 {capitalised(quantity.label)}
                 <small className="font-mono">{quantity.id}</small>
                 {writtenAs ? <small>written as “{writtenAs}”</small> : null}
+                {names.length > 0 ? (
+                  <details>
+                    <summary>{countOf(names.length, 'name')} in workbooks</summary>
+                    {names.join(' · ')}
+                  </details>
+                ) : null}
               </th>
               <td className="quantity-symbol">
                 <QuantitySymbol>{quantity.symbol}</QuantitySymbol>

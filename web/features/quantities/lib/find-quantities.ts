@@ -1,5 +1,6 @@
 import type { Quantity } from '#rules/quantities/quantity';
 import type { QuantityRow } from '../../../components/ui/quantity-table';
+import { workbookNames } from './workbook-names';
 
 /**
  * Quantities in which every word of the search occurs: in name, symbol, id, unit, method or source, or in a name that
@@ -10,10 +11,11 @@ export function findQuantities(quantities: readonly Quantity[], search: string):
     .split(' ')
     .filter((word) => word !== '');
   return quantities.flatMap((quantity): QuantityRow[] => {
-    if (holdsAll(ownText(quantity), words)) return [{ quantity }];
-    const writtenAs = quantity.aliases.find((alias) => holdsAll(plain(alias), words));
-    if (writtenAs !== undefined) return [{ quantity, writtenAs }];
-    return holdsAll(plain([ownText(quantity), ...quantity.aliases].join(' ')), words) ? [{ quantity }] : [];
+    const names = workbookNames(quantity);
+    if (holdsAll(ownText(quantity), words)) return [{ quantity, names }];
+    const writtenAs = names.find((name) => holdsAll(plain(name), words));
+    if (writtenAs !== undefined) return [{ quantity, names, writtenAs }];
+    return holdsAll(plain([ownText(quantity), ...names].join(' ')), words) ? [{ quantity, names }] : [];
   });
 }
 

@@ -62,7 +62,7 @@ export function RuleSetPage() {
               />
               <QuantityTable
                 caption={`Quantities of ${view.title}`}
-                rows={view.quantities.map((quantity) => ({ quantity }))}
+                rows={view.quantities.map((quantity) => ({ quantity, names: quantity.aliases }))}
               />
             </>
           ) : null}
