@@ -25,7 +25,7 @@ export const creepQuantities: QuantityInput[] = [
     label: 'creep strain',
     unit: 'µε',
     acceptedUnits: ['µε', 'mm/mm', '% strain'],
-    decimals: 0,
+    decimals: 1,
     plausible: { min: 0, max: 50000 },
     gaugeSpan: 1,
     gaugeScale: 'log',

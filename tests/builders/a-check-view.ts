@@ -38,6 +38,7 @@ export function aCheckView(overrides: Partial<CheckView> = {}): CheckView {
     startingPoint: false,
     clauseTitles: { '412.03': 'Volumetric properties' },
     gradation: null,
+    hasCreep: false,
     declaration: null,
     ...overrides,
   });

@@ -32,6 +32,14 @@ const signedIn: RouteObject[] = [
     lazy: () => import('../features/gradation/gradation-route'),
   },
   {
+    path: 'submittals/:submittalId/r/:number/creep',
+    lazy: () => import('../features/creep/creep-route'),
+  },
+  {
+    path: 'submittals/:submittalId/r/:number/room',
+    lazy: () => import('../features/room/room-route'),
+  },
+  {
     path: 'submittals/:submittalId/r/:number/return',
     lazy: () => import('../features/return/return-route'),
   },

@@ -14,6 +14,11 @@ export const paths = {
   reading: (submittalId: string, number: number, at?: { sheet: string; cell?: string }) =>
     `/submittals/${submittalId}/r/${number}/reading${searchOf(at)}`,
   gradation: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/gradation`,
+  creep: (submittalId: string, number: number, temperature?: number) =>
+    `/submittals/${submittalId}/r/${number}/creep${searchOf(
+      temperature === undefined ? undefined : { temperature: String(temperature) },
+    )}`,
+  room: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/room`,
   return: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/return`,
   workbook: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/workbook`,
   nextRevision: (submittalId: string) => `/submittals/${submittalId}/next`,

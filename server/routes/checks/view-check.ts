@@ -2,6 +2,7 @@ import { summarise } from '#rules/engine/disposition';
 import type { CheckView } from '#shared/contracts/checks';
 import { dateOfInstant } from '#shared/format/dates';
 import { type CheckRow, newestCheckOf } from '../../db/queries/checks';
+import { listNotes, listWaivers } from '../../db/queries/notes';
 import { findMixRecord } from '../../db/queries/records';
 import { isStartingPoint, revisionBefore } from '../../db/queries/returns';
 import type { RevisionRow } from '../../db/queries/revisions';
@@ -11,6 +12,7 @@ import type { RequestActor } from '../../middleware/authenticate';
 import { checkStale } from '../../presenters/check-stale';
 import { clauseTitles } from '../../presenters/clause-titles';
 import { declarationOf } from '../../presenters/declaration-of';
+import { explainCheck } from '../../presenters/explain-check';
 import { gradationView } from '../../presenters/gradation-view';
 import { movedFindings } from '../../presenters/moved-findings';
 import { recommendationText } from '../../presenters/recommendation-text';
@@ -24,13 +26,15 @@ export async function viewCheck(deps: Deps, actor: RequestActor, row: RevisionRo
   const kept = await findMixRecord(deps.db, actor, row.revision.id);
   if (check === null || kept === null) throw unchecked(row);
   const { abilities } = await viewRevision(deps, actor, row);
-  const [edition, notes, waivers, before, startingPoint] = await Promise.all([
+  const [edition, allNotes, allWaivers, before, startingPoint] = await Promise.all([
     loadResolvedEdition(deps.db, check.resolvedHash),
-    visibleNotes(deps.db, actor, { row, abilities }),
-    visibleWaivers(deps.db, actor, { row, abilities }),
+    listNotes(deps.db, actor, row.submittal.id),
+    listWaivers(deps.db, actor, row.revision.id),
     previousCheck(deps, actor, row),
     isStartingPoint(deps.db, row.agency.id, row.revision.section.base),
   ]);
+  const notes = visibleNotes(allNotes, actor, abilities);
+  const waivers = visibleWaivers(allWaivers, actor, abilities);
   const { findings, seal } = check.result;
   const waived = new Set(waivers.map(({ finding }) => finding));
   const { base, layers } = row.revision.section;
@@ -46,6 +50,8 @@ export async function viewCheck(deps: Deps, actor: RequestActor, row: RevisionRo
     },
     summary: summarise(findings, waived),
     findings,
+    explanations: explainCheck(check, kept.record, edition),
+    hasRoom: check.result.analysis.roomToMove !== null,
     notes: notes.filter((note) => concerns(note, row.revision.number)),
     waivers,
     moved: before === null ? [] : movedFindings(before.result.findings, findings),
@@ -54,6 +60,7 @@ export async function viewCheck(deps: Deps, actor: RequestActor, row: RevisionRo
     startingPoint,
     clauseTitles: clauseTitles(edition.rules),
     gradation: gradationView(kept.record, findings),
+    hasCreep: check.result.analysis.creep.length > 0,
     declaration:
       row.revision.state === 'draft'
         ? declarationOf({ row, section: row.revision.section, findings, doubts: kept.record.doubts })
@@ -93,7 +100,7 @@ function staleness(
   });
 }
 
-function unchecked({ revision }: RevisionRow): Problem {
+export function unchecked({ revision }: RevisionRow): Problem {
   return new Problem('wrong-state', {
     detail: `Revision ${revision.number} has no check yet: its workbook has not been read.`,
     fix: 'Look at the reading; it says how far it is, or what is wrong with the workbook.',

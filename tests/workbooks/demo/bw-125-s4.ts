@@ -1,3 +1,4 @@
+import { brightwaterCreep } from './bw-125-s4-creep';
 import { type DemoDates, type DemoMix, dateBefore, specimen } from './demo-mix';
 
 /**
@@ -242,5 +243,6 @@ export function brightwaterSurfaceMended(dates: DemoDates): DemoMix {
     // 0.075 mm: 0.25·1.2 + 0.2·1.8 + 0.35·5.5 + 0.2·9.2 = 4.43.
     jobMix: [100, 96.3, 86.5, 59.2, 42.3, 29.5, 20.6, 12.4, 7.2, 4.4],
     reported: { ...mix.reported, 'Dust proportion': 0.99 },
+    creep: brightwaterCreep(),
   };
 }

@@ -48,6 +48,8 @@ export interface DemoMix {
   aggregates: Record<string, FilledValue>[];
   moisture: { subset: 'dry' | 'conditioned'; loads: number[]; voids: number[]; saturation: number[] }[];
   performance: Record<string, FilledValue>[];
+  /** Creep strains, where the laboratory has measured them. */
+  creep?: Record<string, FilledValue>[];
   documents: Record<string, FilledValue>[];
   testedOn: FilledValue;
 }
@@ -91,6 +93,7 @@ export function contentOf(mix: DemoMix): TemplateContent {
       ],
       Moisture: mix.moisture.flatMap(moistureRows),
       Performance: mix.performance,
+      ...(mix.creep ? { Creep: mix.creep } : {}),
       Documents: mix.documents,
     },
     gradation: {

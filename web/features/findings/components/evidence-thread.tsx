@@ -4,8 +4,10 @@ import { colourOfMark, markOfOutcome } from '../../../components/ui/marks';
 import { RichText } from '../../../components/ui/rich-text';
 import { mainTie, type Tie, tiesOf } from '../lib/ties';
 import { CellStep } from './cell-step';
+import { CreepStep } from './creep-step';
 import { FormulaStep } from './formula-step';
 import { InputsStep } from './inputs-step';
+import { NextStep } from './next-step';
 import { RuleStep } from './rule-step';
 import { SheetInPlace } from './sheet-in-place';
 
@@ -32,8 +34,10 @@ export function EvidenceThread({ finding }: { finding: Finding }) {
           </>
         ) : null}
         <FormulaStep finding={finding} ties={ties} onShow={choose} />
+        {finding.kind === 'creep-compliance' ? <CreepStep finding={finding} /> : null}
         <InputsStep finding={finding} ties={ties} onShow={choose} />
         <CellStep finding={finding} ties={ties} onShow={choose} />
+        <NextStep finding={finding} />
         {finding.advice ? (
           <>
             <dt>Advice</dt>

@@ -30,6 +30,8 @@ export function LedgerTools({ order }: { order: LedgerOrder }) {
       </Link>
       <span className="order-sights">
         {check.gradation ? <Link to={paths.gradation(submittalId, number)}>Gradation</Link> : null}
+        {check.hasCreep ? <Link to={paths.creep(submittalId, number)}>Creep</Link> : null}
+        {check.hasRoom ? <Link to={paths.room(submittalId, number)}>Room to move</Link> : null}
         <Link to={paths.reading(submittalId, number)}>How it was read</Link>
         <a href={hrefOf(getFindingsPdf, { params })} download>
           Findings as PDF
