@@ -5,6 +5,11 @@ export const cautions = {
   startingPoint: 'Starting point: check every limit against the agency’s current specification.',
 } as const;
 
+/** What the foot of a page says where a check is shown. */
+export function checkCautions(startingPoint: boolean): string[] {
+  return startingPoint ? [cautions.startingPoint, cautions.findings] : [cautions.findings];
+}
+
 /** For a document that stands on its own, away from the product. */
 export function cautionsFor({ startingPoint }: { startingPoint: boolean }): string {
   const said: string[] = [cautions.findings, cautions.contract];

@@ -1,5 +1,5 @@
 import { QueryClientProvider } from '@tanstack/react-query';
-import { cleanup, render } from '@testing-library/react';
+import { cleanup, configure, render } from '@testing-library/react';
 import { type ReactNode, Suspense, useState } from 'react';
 import { createMemoryRouter, RouterProvider } from 'react-router-dom';
 import { afterEach, onTestFinished, vi } from 'vitest';
@@ -7,6 +7,9 @@ import { FootPlace } from '../../web/components/ui/running-foot';
 import { onAnnouncement } from '../../web/lib/announce';
 import { createQueryClient } from '../../web/lib/query-client';
 import { listenForShortcuts } from '../../web/lib/shortcuts';
+
+// On a loaded machine the first drawing of a page takes longer than the second that is usual.
+configure({ asyncUtilTimeout: 5000 });
 
 afterEach(() => {
   cleanup();

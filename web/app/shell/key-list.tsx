@@ -29,7 +29,7 @@ export function KeyList() {
             ))}
           </dl>
           <Checkbox isSelected={singleKeys} onChange={setSingleKeys}>
-            Single keys act when no field has the focus
+            Single keys act when no field has the focus, in this browser
           </Checkbox>
           <div className="acts pt-2">
             <Button slot="close">Close</Button>

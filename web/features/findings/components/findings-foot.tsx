@@ -1,4 +1,4 @@
-import { cautions } from '#shared/cautions';
+import { checkCautions } from '#shared/cautions';
 import { formatDate, formatInstant } from '#shared/format/dates';
 import { sectionWords } from '#shared/format/section-words';
 import { shortHash } from '#shared/format/short-hash';
@@ -24,9 +24,9 @@ export function FindingsFoot() {
           {prove.isPending ? ', being repeated' : proofWords(prove.data?.result, prove.isError)}
           {isPreCheck ? `, judged as if submitted on ${formatDate(check.submittedOn)}` : null}, sealed{' '}
           {formatInstant(check.madeAt, timeZone)} · {sectionWords(check.section)}
+          {check.section.state === 'in force' ? null : `, ${check.section.state}`}
         </>,
-        ...(check.startingPoint ? [cautions.startingPoint] : []),
-        cautions.findings,
+        ...checkCautions(check.startingPoint),
       ]}
       acts={useFootActs()}
     />

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
-import { cautions } from '#shared/cautions';
+import { checkCautions } from '#shared/cautions';
 import { findingFragment } from '#shared/format/finding-key';
 import { Button } from '../../../components/ui/button';
 import { EmptyState } from '../../../components/ui/empty-state';
@@ -77,9 +77,7 @@ export function GradationPage() {
           {asTable ? <GradationTable points={gradation.points} params={params} /> : null}
         </>
       )}
-      <RunningFoot
-        texts={check.startingPoint ? [cautions.startingPoint, cautions.findings] : [cautions.findings]}
-      />
+      <RunningFoot texts={checkCautions(check.startingPoint)} />
     </MarginPage>
   );
 }

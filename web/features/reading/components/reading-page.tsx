@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
-import { cautions } from '#shared/cautions';
+import { checkCautions } from '#shared/cautions';
 import type { ReadingView } from '#shared/contracts/readings';
 import { shortHash } from '#shared/format/short-hash';
 import { LinkButton } from '../../../components/ui/button';
@@ -41,7 +41,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   usePrintedRevision(revision);
   const [cursor, setCursor] = useCellCursor(firstPlace(reading));
   // At hand before anything is changed, so that the page can say which outcomes a change moved.
-  useQuery({ ...checkQuery(params), enabled: revision.hasCheck });
+  const check = useQuery({ ...checkQuery(params), enabled: revision.hasCheck });
   const answers = useKeepAnswers(params);
   const attributes = useKeepAttributes(params);
   const answer = (doubt: ReadingDoubt, value: string | null) => {
@@ -103,7 +103,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       texts={[
         `SHA-256 of the file ${shortHash(reading.sha256)}, kept as uploaded`,
         `Read with the mapping ${reading.mappingName}`,
-        cautions.findings,
+        ...checkCautions(check.data?.startingPoint === true),
       ]}
       acts={
         <LinkButton kind="primary" to={paths.revision(params.submittalId, params.number)}>

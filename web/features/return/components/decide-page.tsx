@@ -1,6 +1,7 @@
+import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
-import { cautions } from '#shared/cautions';
+import { checkCautions } from '#shared/cautions';
 import type { ReturnView } from '#shared/contracts/returns';
 import type { Revision } from '#shared/contracts/submittals';
 import { formatTime } from '#shared/format/dates';
@@ -11,6 +12,7 @@ import { RunningFoot } from '../../../components/ui/running-foot';
 import { TwoHalves } from '../../../components/ui/two-halves';
 import { announce } from '../../../lib/announce';
 import { paths } from '../../../lib/paths';
+import { checkQuery } from '../../../lib/queries/check-query';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { useSession } from '../../../lib/queries/session-query';
 import { useShortcuts } from '../../../lib/shortcuts';
@@ -37,6 +39,7 @@ export function DecidePage({
   const { timeZone } = useSession();
   const draft = useReturnDraft(params, view);
   const { isActing, sendNow, sendToSign, error } = useSending(params, view, draft);
+  const check = useQuery(checkQuery(params));
   const signing = useSigningEngineer(view);
   const edit = useEditNote(params, view);
   useShortcuts([
@@ -82,7 +85,10 @@ export function DecidePage({
         <>
           <LetterInSight params={params} version={view.version} title="The letter as it will be sent" />
           <RunningFoot
-            texts={[draftWords(draft.isKeeping, view.savedAt, timeZone), cautions.findings]}
+            texts={[
+              draftWords(draft.isKeeping, view.savedAt, timeZone),
+              ...checkCautions(check.data?.startingPoint === true),
+            ]}
             acts={
               <FootActs
                 view={view}
