@@ -1,5 +1,7 @@
+import type { Source } from '../record';
 import type { ResolvedRule } from '../rule-sets/resolve';
 import { andList, capitalised, uncapitalised } from '../rule-sets/words';
+import type { AnalysisNode } from './analysis-node';
 import type { RoomOfRule, RoomStretch, RoomToMove } from './room';
 import { roomOfRule } from './room-of-rule';
 import { common } from './room-stretches';
@@ -21,6 +23,7 @@ export function roomToMove(world: World): RoomToMove | null {
     trials: world.analysis.testedContents.map(({ trial, binderContent }) => ({
       trial,
       binderContent: binderContent.value,
+      source: sourceOf(binderContent),
     })),
     rules,
   };
@@ -45,6 +48,11 @@ export function roomToMove(world: World): RoomToMove | null {
     excluding: [],
     reason: null,
   };
+}
+
+/** The cell of the reading, or of the first where it is a mean. */
+function sourceOf({ reading, inputs }: AnalysisNode): Source | null {
+  return reading?.source ?? inputs[0]?.reading?.source ?? null;
 }
 
 /** An error of ours leaves the rule without an answer and says so. */

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { sourceSchema } from '../record';
 
 /** One unbroken range of binder contents, both ends included, % of mix, to 0.01. */
 export const roomStretchSchema = z.strictObject({
@@ -34,7 +35,14 @@ export const roomOfRuleSchema = z.strictObject({
 export const roomToMoveSchema = z.strictObject({
   /** %, the content that is judged. */
   declaredBinderContent: z.number().nullable(),
-  trials: z.array(z.strictObject({ trial: z.string(), binderContent: z.number() })),
+  /** Tested contents in rising order, each with the cell that states it. */
+  trials: z.array(
+    z.strictObject({
+      trial: z.string(),
+      binderContent: z.number(),
+      source: sourceSchema.nullable(),
+    }),
+  ),
   rules: z.array(roomOfRuleSchema),
   /** Null where no content meets every rule, or where one of them could not be computed. */
   room: z

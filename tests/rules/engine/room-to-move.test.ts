@@ -296,7 +296,7 @@ describe('what cannot be followed', () => {
       reading('maximum-specific-gravity', 2.5, { trial: 'design' }),
       reading('bulk-specific-gravity-mix', 2.4, { trial: 'design', specimen: '1' }),
     ];
-    expect(roomOf([voids()], own).trials).toEqual([
+    expect(roomOf([voids()], own).trials).toMatchObject([
       { trial: 'A', binderContent: 5 },
       { trial: 'design', binderContent: 5.5 },
       { trial: 'B', binderContent: 6 },

@@ -28,10 +28,10 @@ const filled = rule('filled', 'Voids filled with asphalt', { holds: [stretch(4.9
 const room = (overrides: Partial<RoomToMove> = {}): RoomToMove => ({
   declaredBinderContent: 5.4,
   trials: [
-    { trial: 'A', binderContent: 4.8 },
-    { trial: 'B', binderContent: 5.3 },
-    { trial: 'C', binderContent: 5.8 },
-    { trial: 'D', binderContent: 6.3 },
+    { trial: 'A', binderContent: 4.8, source: null },
+    { trial: 'B', binderContent: 5.3, source: null },
+    { trial: 'C', binderContent: 5.8, source: null },
+    { trial: 'D', binderContent: 6.3, source: null },
   ],
   rules: [dust, filled],
   room: { from: 5.35, to: 5.49, closedBelowBy: ['dust'], closedAboveBy: ['filled'], containsDeclared: true },
