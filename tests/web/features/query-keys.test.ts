@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { caughtMailQuery } from '../../../web/features/caught-mail/api/caught-mail';
+import { creepQuery } from '../../../web/features/creep/api/get-creep';
 import { queueQuery } from '../../../web/features/queue/api/get-queue';
 import { queueItemQuery } from '../../../web/features/queue/api/get-queue-item';
 import { documentTypesQuery } from '../../../web/features/reading/api/get-document-types';
@@ -23,6 +24,7 @@ describe('query keys of the pages', () => {
     ['submittals', [submittalsQuery({}), submittalsQuery({ state: 'draft' }), submittalsQuery({ q: 'BW' })]],
     ['submittal', [submittalQuery('s1'), submittalQuery('s2')]],
     ['project', [projectsQuery(), projectQuery('p1'), projectQuery('p2')]],
+    ['creep', [creepQuery(one), creepQuery(two)]],
     ['reading', [readingQuery(one), readingQuery(two)]],
     ['document types', [documentTypesQuery(one), documentTypesQuery(two)]],
     ['return', [returnQuery(one), returnQuery(two)]],
