@@ -1,30 +1,25 @@
 import type { Project, ProjectListItem, Section } from '#shared/contracts/projects';
 import { dateOfInstant, formatDate } from '#shared/format/dates';
-import type { Database } from '../db/client';
-import { type EditionRow, editionReference, listEditions } from '../db/queries/editions';
-import {
-  contactsOfProject,
-  contractorsOfProjects,
-  countSubmittals,
-  type ProjectRow,
-  type SectionRow,
-  sectionsOfProjects,
-} from '../db/queries/projects';
-import type { Deps } from '../deps';
+import { type EditionRow, editionReference } from '../db/queries/editions';
+import type { contractorsOfProjects, countSubmittals, ProjectRow, SectionRow } from '../db/queries/projects';
 import { type Actor, preparesSubmittals } from '../policies/actor';
 import { editionState, holdsOn, layersOf, layersOn } from '../policies/edition-dates';
 import { confirmsSections, managesProjects } from '../policies/session-abilities';
 import { templateHrefOf } from './template-href';
 
-export async function presentProjectList(
-  db: Database,
-  actor: Actor,
+type ContractorRow = Awaited<ReturnType<typeof contractorsOfProjects>>[number];
+
+/** Of all listed projects. */
+interface ListParts {
+  sections: SectionRow[];
+  contractors: ContractorRow[];
+  submittals: Awaited<ReturnType<typeof countSubmittals>>;
+}
+
+export function presentProjectList(
   rows: ProjectRow[],
-): Promise<ProjectListItem[]> {
-  const ids = rows.map(({ project }) => project.id);
-  const contractors = await contractorsOfProjects(db, actor, ids);
-  const sections = await sectionsOfProjects(db, actor, ids);
-  const submittals = await countSubmittals(db, actor, ids);
+  { sections, contractors, submittals }: ListParts,
+): ProjectListItem[] {
   return rows.map(({ project, agency }) => ({
     id: project.id,
     number: project.number,
@@ -44,25 +39,30 @@ export async function presentProjectList(
   }));
 }
 
-export async function presentProject(
-  deps: Pick<Deps, 'db' | 'now'>,
-  actor: Actor,
-  { project, agency }: ProjectRow,
-): Promise<Project> {
-  const { db } = deps;
-  const sections = await sectionsOfProjects(db, actor, [project.id]);
-  const chooses = confirmsSections(actor);
-  const editions = chooses ? await listEditions(db, project.agencyId) : [];
-  const today = dateOfInstant(deps.now().toISOString(), agency.timeZone);
+interface ProjectParts {
+  actor: Actor;
+  now: Date;
+  row: ProjectRow;
+  sections: SectionRow[];
+  contacts: Project['contacts'];
+  contractors: ContractorRow[];
+  /** That the actor may choose from; empty for whoever confirms no section. */
+  editions: EditionRow[];
+}
+
+export function presentProject(parts: ProjectParts): Project {
+  const { actor, sections, contacts, contractors, editions } = parts;
+  const { project, agency } = parts.row;
+  const today = dateOfInstant(parts.now.toISOString(), agency.timeZone);
   return {
     id: project.id,
     number: project.number,
     title: project.title,
     lettingOn: project.lettingOn,
     facts: project.facts,
-    contacts: await contactsOfProject(db, actor, project.id),
+    contacts,
     agency: { id: agency.id, name: agency.name },
-    contractors: contractorsOf(await contractorsOfProjects(db, actor, [project.id]), project.id),
+    contractors: contractorsOf(contractors, project.id),
     sections: sections.map(presentSection),
     startingPoint: sections.some(({ base, layers }) => [base, ...layers].some((each) => each.startingPoint)),
     proposals: proposalsFor(project.lettingOn, { editions, sections }),
@@ -76,7 +76,7 @@ export async function presentProject(
     version: project.version,
     abilities: {
       change: managesProjects(actor),
-      confirmSections: chooses,
+      confirmSections: confirmsSections(actor),
       upload: preparesSubmittals(actor) && sections.some(({ section }) => section.confirmedAt !== null),
     },
   };

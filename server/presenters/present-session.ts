@@ -1,46 +1,31 @@
-import { asc, eq } from 'drizzle-orm';
 import type { Session } from '#shared/contracts/session';
 import { dateOfInstant } from '#shared/format/dates';
-import { rolesFromColumn } from '../db/roles-column';
-import { members, organisations } from '../db/schema/people';
-import type { Deps } from '../deps';
-import type { SignedInPerson } from '../middleware/authenticate';
+import type { MembershipRow } from '../db/queries/memberships';
 import { sessionAbilities } from '../policies/session-abilities';
 
-interface SessionFacts {
-  person: SignedInPerson;
+interface SessionParts {
+  person: Session['person'];
   activeOrganisationId: string | null;
+  memberships: MembershipRow[];
+  now: Date;
+  mailIsCaught: boolean;
 }
 
-export async function presentSession(
-  deps: Deps,
-  { person, activeOrganisationId }: SessionFacts,
-): Promise<Session> {
-  const rows = await deps.db
-    .select({
-      organisationId: organisations.id,
-      organisationName: organisations.name,
-      kind: organisations.kind,
-      timeZone: organisations.timeZone,
-      role: members.role,
-    })
-    .from(members)
-    .innerJoin(organisations, eq(organisations.id, members.organisationId))
-    .where(eq(members.personId, person.id))
-    .orderBy(asc(organisations.name), asc(organisations.id));
-  const memberships = rows.map(({ role, timeZone: _zone, ...membership }) => ({
-    ...membership,
-    roles: rolesFromColumn(role),
-  }));
-  const active = memberships.find((each) => each.organisationId === activeOrganisationId) ?? null;
-  const zone = rows.find((each) => each.organisationId === activeOrganisationId)?.timeZone ?? 'UTC';
-  const timeZone = active?.kind === 'agency' ? zone : 'UTC';
+export function presentSession(parts: SessionParts): Session {
+  const { person, activeOrganisationId, now, mailIsCaught } = parts;
+  const found = parts.memberships.find((each) => each.organisationId === activeOrganisationId);
+  const timeZone = found?.kind === 'agency' ? found.timeZone : 'UTC';
+  const active = found === undefined ? null : presentMembership(found);
   return {
     person: { id: person.id, name: person.name, email: person.email },
     active,
-    memberships,
-    today: dateOfInstant(deps.now().toISOString(), timeZone),
+    memberships: parts.memberships.map(presentMembership),
+    today: dateOfInstant(now.toISOString(), timeZone),
     timeZone,
-    abilities: sessionAbilities(active, { mailIsCaught: deps.settings.smtpUrl === null }),
+    abilities: sessionAbilities(active, { mailIsCaught }),
   };
+}
+
+function presentMembership({ timeZone: _, ...membership }: MembershipRow): Session['memberships'][number] {
+  return membership;
 }

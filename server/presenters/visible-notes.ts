@@ -1,20 +1,16 @@
 import type { Note, Waiver } from '#shared/contracts/notes';
 import type { Revision } from '#shared/contracts/submittals';
-import type { Database } from '../db/client';
-import { listNotes, listWaivers, type NoteRow, type WaiverRow } from '../db/queries/notes';
-import type { RevisionRow } from '../db/queries/revisions';
+import type { NoteRow, WaiverRow } from '../db/queries/notes';
 import type { Actor } from '../policies/actor';
 import { noteAbilities } from '../policies/note-abilities';
 import { seesNote, seesWaiver } from '../policies/note-visibility';
 
-interface Of {
-  row: Pick<RevisionRow, 'submittal' | 'revision'>;
-  abilities: Pick<Revision['abilities'], 'note' | 'reply' | 'waiveAdvisory' | 'waiveRequired'>;
-}
-
-/** Every note of a submittal that the actor may see, oldest first. */
-export async function visibleNotes(db: Database, actor: Actor, { row, abilities }: Of): Promise<Note[]> {
-  const all = await listNotes(db, actor, row.submittal.id);
+/** Those notes that the actor may see, in their order. */
+export function visibleNotes(
+  all: readonly NoteRow[],
+  actor: Actor,
+  abilities: Pick<Revision['abilities'], 'note' | 'reply'>,
+): Note[] {
   return all.filter((each) => seesNote(actor, each.note)).map((each) => presentNote(each, actor, abilities));
 }
 
@@ -48,9 +44,12 @@ export function presentNote(
   };
 }
 
-/** Waivers of a revision that the actor may see. */
-export async function visibleWaivers(db: Database, actor: Actor, { row, abilities }: Of): Promise<Waiver[]> {
-  const all = await listWaivers(db, actor, row.revision.id);
+/** Those waivers that the actor may see, in their order. */
+export function visibleWaivers(
+  all: readonly WaiverRow[],
+  actor: Actor,
+  abilities: Pick<Revision['abilities'], 'waiveAdvisory' | 'waiveRequired'>,
+): Waiver[] {
   return all
     .filter(({ waiver }) => seesWaiver(actor, waiver))
     .map((each) => presentWaiver(each, actor, abilities));

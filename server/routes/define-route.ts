@@ -3,15 +3,8 @@ import type { z } from 'zod';
 import type { Endpoint } from '#shared/contracts/endpoint';
 import type { Deps } from '../deps';
 import type { Authenticated, RequestActor } from '../middleware/authenticate';
+import type { UploadedFile } from '../uploaded-file';
 import { parseRequest } from './parse-request';
-
-export interface UploadedFile {
-  field: string;
-  fileName: string;
-  /** As the client says; what it is, is told by its content. */
-  mediaType: string;
-  bytes: Buffer;
-}
 
 export interface FileResponse {
   bytes: Buffer;

@@ -6,7 +6,8 @@ import { actorOf, authenticate } from '../middleware/authenticate';
 import { idempotently } from '../middleware/idempotently';
 import { versionFrom } from '../middleware/if-match';
 import { requestIdOf } from '../middleware/request-context';
-import type { RawExchange, Route, UploadedFile } from './define-route';
+import type { UploadedFile } from '../uploaded-file';
+import type { RawExchange, Route } from './define-route';
 import { sendAnswer } from './send-answer';
 
 /** Each route is declared once; here it meets HTTP. */

@@ -326,7 +326,8 @@ const others: Record<string, Record<string, string>> = {
   'demo-sign-ins': { listDemoPeople: 'the sign-in page shows them to everybody while the demo is there' },
   editions: { editionReference: 'pure' },
   memberships: {
-    onlyOrganisationOf: 'a person’s own',
+    membershipsOf: 'a person’s own',
+    onlyOrganisationOf: 'the same',
     isMember: 'asked of the person and organisation named',
   },
   organisations: { anyOrganisation: 'for the set-up page', findOrganisation: 'the reader itself' },

@@ -5,7 +5,7 @@ import type { Database } from '../../db/client';
 import { documents } from '../../db/schema/submittals';
 import type { Deps } from '../../deps';
 import { Problem } from '../../problem';
-import type { UploadedFile } from '../../routes/define-route';
+import type { UploadedFile } from '../../uploaded-file';
 import { changeDraft, type DraftChange } from '../readings/change-draft';
 import { storeFile } from '../submittals/store-workbook';
 import { documentMediaType } from './document-media-type';

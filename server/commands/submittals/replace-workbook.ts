@@ -9,7 +9,7 @@ import { cancelJob } from '../../jobs/cancel-job';
 import { expectWritten } from '../../middleware/if-match';
 import type { Actor } from '../../policies/actor';
 import { Problem } from '../../problem';
-import type { UploadedFile } from '../../routes/define-route';
+import type { UploadedFile } from '../../uploaded-file';
 import { enqueueReading, storeFile, workbookMediaType } from './store-workbook';
 
 interface Replacement {

@@ -9,7 +9,7 @@ import type { Deps } from '../../deps';
 import { type Actor, preparesSubmittals } from '../../policies/actor';
 import { mayFollow } from '../../policies/revision-abilities';
 import { Problem } from '../../problem';
-import type { UploadedFile } from '../../routes/define-route';
+import type { UploadedFile } from '../../uploaded-file';
 import { enqueueReading, storeFile, workbookMediaType } from './store-workbook';
 import { expectLaboratory } from './upload-submittal';
 

@@ -5,7 +5,7 @@ import type { Deps } from '../../deps';
 import { enqueueJob } from '../../jobs/enqueue-job';
 import type { Actor } from '../../policies/actor';
 import { Problem } from '../../problem';
-import type { UploadedFile } from '../../routes/define-route';
+import type { UploadedFile } from '../../uploaded-file';
 
 export interface NewFile {
   tenant: { agencyId: string; contractorId: string };

@@ -9,7 +9,7 @@ import { writeAudit } from '../../db/write-audit';
 import type { Deps } from '../../deps';
 import { type Actor, preparesSubmittals } from '../../policies/actor';
 import { Problem } from '../../problem';
-import type { UploadedFile } from '../../routes/define-route';
+import type { UploadedFile } from '../../uploaded-file';
 import { enqueueReading, storeFile, workbookMediaType } from './store-workbook';
 
 export interface Upload {

@@ -14,7 +14,8 @@ import {
 import { listDocuments, loadFile } from '../../db/queries/records';
 import { loadResolvedEdition } from '../../db/resolved-edition';
 import { Problem } from '../../problem';
-import { route, type UploadedFile } from '../define-route';
+import type { UploadedFile } from '../../uploaded-file';
+import { route } from '../define-route';
 import { expectDraft } from '../readings/expect-draft';
 import { viewReading } from '../readings/view-reading';
 import { expectRevision } from '../submittals/load-revision';

@@ -9,12 +9,12 @@ import { listProjectRows, sectionsOfProjects } from '../../db/queries/projects';
 import type { Deps } from '../../deps';
 import type { RequestActor } from '../../middleware/authenticate';
 import { hasRole, preparesSubmittals } from '../../policies/actor';
-import { presentProjectList } from '../../presenters/present-project';
 import { presentSubmittalItem } from '../../presenters/present-submittal-item';
 import { templateHrefOf } from '../../presenters/template-href';
 import { presentNote } from '../../presenters/visible-notes';
 import { Problem } from '../../problem';
 import { route } from '../define-route';
+import { viewProjectList } from '../projects/view-project';
 import { currentRevision } from './current-revision';
 
 const shownSubmittals = 30;
@@ -42,7 +42,7 @@ export const getHomeRoute = route(getHome, async ({ deps, actor }) => {
     current: await currentRevision(deps, actor, submittals),
     fromAgency: await fromAgency(deps, actor),
     lastLetter: await lastLetterOf(deps, actor),
-    projects: await presentProjectList(deps.db, actor, projectRows),
+    projects: await viewProjectList(deps, actor, projectRows),
     laboratories: await laboratoryNotes(deps, actor),
     templates: await templates(deps, actor, projectRows),
     abilities: { upload: preparesSubmittals(actor) },

@@ -2,8 +2,8 @@ import { acceptInvitation as acceptEndpoint } from '#shared/contracts/people';
 import { activateOrganisation } from '../../auth/activate-organisation';
 import { signInWithPassword } from '../../auth/sign-in';
 import { acceptInvitation, loadInvitation } from '../../commands/people/accept-invitation';
-import { presentSession } from '../../presenters/present-session';
 import { openRoute } from '../define-route';
+import { viewSession } from '../session/view-session';
 
 export const acceptInvitationRoute = openRoute(
   acceptEndpoint,
@@ -14,6 +14,6 @@ export const acceptInvitationRoute = openRoute(
     const { organisationId } = await acceptInvitation(deps, { ...body, token, requestId });
     const person = before ?? (await signInWithPassword(deps, http, credentials));
     await activateOrganisation(deps, { organisationId, http });
-    return presentSession(deps, { person, activeOrganisationId: organisationId });
+    return viewSession(deps, { person, activeOrganisationId: organisationId });
   },
 );

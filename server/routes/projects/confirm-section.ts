@@ -2,9 +2,9 @@ import { confirmSection as confirmEndpoint } from '#shared/contracts/projects';
 import { confirmSection } from '../../commands/projects/keep-section';
 import { allow } from '../../policies/allow';
 import { confirmsSections } from '../../policies/session-abilities';
-import { presentProject } from '../../presenters/present-project';
 import { route } from '../define-route';
 import { loadProject } from './load-project';
+import { viewProject } from './view-project';
 
 export const confirmSectionRoute = route(
   confirmEndpoint,
@@ -12,6 +12,6 @@ export const confirmSectionRoute = route(
     const row = await loadProject(deps, actor, projectId);
     allow(confirmsSections(actor));
     await confirmSection(deps, { actor, projectId, choice: body, requestId });
-    return presentProject(deps, actor, row);
+    return viewProject(deps, actor, row);
   },
 );

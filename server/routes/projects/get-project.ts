@@ -1,8 +1,8 @@
 import { getProject } from '#shared/contracts/projects';
-import { presentProject } from '../../presenters/present-project';
 import { route } from '../define-route';
 import { loadProject } from './load-project';
+import { viewProject } from './view-project';
 
 export const getProjectRoute = route(getProject, async ({ deps, actor, params }) =>
-  presentProject(deps, actor, await loadProject(deps, actor, params.projectId)),
+  viewProject(deps, actor, await loadProject(deps, actor, params.projectId)),
 );

@@ -1,10 +1,10 @@
 import { listProjects } from '#shared/contracts/projects';
 import { listProjectRows } from '../../db/queries/projects';
 import { managesProjects } from '../../policies/session-abilities';
-import { presentProjectList } from '../../presenters/present-project';
 import { route } from '../define-route';
+import { viewProjectList } from './view-project';
 
 export const listProjectsRoute = route(listProjects, async ({ deps, actor }) => ({
-  projects: await presentProjectList(deps.db, actor, await listProjectRows(deps.db, actor)),
+  projects: await viewProjectList(deps, actor, await listProjectRows(deps.db, actor)),
   abilities: { add: managesProjects(actor) },
 }));

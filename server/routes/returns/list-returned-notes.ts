@@ -1,13 +1,15 @@
 import { listReturnedNotes } from '#shared/contracts/returns';
 import { dateOfInstant } from '#shared/format/dates';
 import { loadReturn } from '../../commands/returns/load-return';
+import { listNotes } from '../../db/queries/notes';
 import { visibleNotes } from '../../presenters/visible-notes';
 import { route } from '../define-route';
 
 /** The agency's notes that came with the return, each with the replies that the reader may see. */
 export const listReturnedNotesRoute = route(listReturnedNotes, async ({ deps, actor, params }) => {
   const { row, loaded, abilities, kept } = await loadReturn(deps, actor, params);
-  const notes = await visibleNotes(deps.db, actor, { row, abilities });
+  const all = await listNotes(deps.db, actor, row.submittal.id);
+  const notes = visibleNotes(all, actor, abilities);
   const titles = new Map(
     loaded.sources.findings.map((finding) => [`${finding.rule}~${finding.subject}`, finding]),
   );

@@ -1,9 +1,9 @@
 import { fromNodeHeaders } from 'better-auth/node';
 import { chooseOrganisation } from '#shared/contracts/session';
 import { isMember } from '../../db/queries/memberships';
-import { presentSession } from '../../presenters/present-session';
 import { Problem } from '../../problem';
 import { personRoute } from '../define-route';
+import { viewSession } from './view-session';
 
 export const chooseOrganisationRoute = personRoute(
   chooseOrganisation,
@@ -14,6 +14,6 @@ export const chooseOrganisationRoute = personRoute(
       body: { organizationId: organisationId },
       headers: fromNodeHeaders(http.request.headers),
     });
-    return presentSession(deps, { person, activeOrganisationId: organisationId });
+    return viewSession(deps, { person, activeOrganisationId: organisationId });
   },
 );

@@ -1,7 +1,7 @@
 import { getSession } from '#shared/contracts/session';
-import { presentSession } from '../../presenters/present-session';
 import { personRoute } from '../define-route';
+import { viewSession } from './view-session';
 
 export const getSessionRoute = personRoute(getSession, async ({ deps, signedIn }) =>
-  presentSession(deps, signedIn),
+  viewSession(deps, signedIn),
 );
