@@ -65,18 +65,18 @@ function withRules(edition: ResolvedEdition, count: number): ResolvedEdition {
   return { ...edition, rules };
 }
 
-/** Creep strains fill the record up: no rule of the edition reads them. */
+/** Moduli at many temperatures and frequencies fill the record up: no rule of the edition reads them. */
 function withReadings(record: MixRecord, count: number): MixRecord {
   const readings = [...record.readings];
-  for (let time = 1; readings.length < count; time += 1) {
-    readings.push({
-      quantity: 'creep-strain',
-      value: 20 + time / 10,
-      unit: 'µε',
-      at: { temperature: -10, time, stress: 400, specimen: '1' },
-      origin: 'measured',
-      source: null,
-    });
+  for (let place = 0; readings.length < count; place += 1) {
+    const at = {
+      trial: 'design',
+      temperature: 4 + 16 * (place % 3),
+      specimen: `${(Math.floor(place / 3) % 3) + 1}`,
+      frequency: 1 + Math.floor(place / 9),
+    };
+    const value = 5000 + place;
+    readings.push({ quantity: 'dynamic-modulus', value, unit: 'MPa', at, origin: 'measured', source: null });
   }
   return { ...record, readings };
 }
