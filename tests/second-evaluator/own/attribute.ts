@@ -45,7 +45,7 @@ export function sameScalar(left: Scalar, right: Scalar): boolean {
   return left === right;
 }
 
-function definitionOf(world: World, name: string): Definition {
+export function definitionOf(world: World, name: string): Definition {
   const declared = world.edition.attributes.find((attribute) => attribute.name === name);
   if (declared === undefined) return STANDARD[name] ?? { type: 'text' };
   const values = declared.values?.map((entry) =>
@@ -56,7 +56,8 @@ function definitionOf(world: World, name: string): Definition {
   return values === undefined ? { type: declared.type } : { type: declared.type, values };
 }
 
-function matching({ type, values }: Definition, stated: Scalar): Scalar | null {
+/** The attribute's own value that a written one means, or null. */
+export function matching({ type, values }: Definition, stated: Scalar): Scalar | null {
   const value = asType(type, stated);
   if (values === undefined) return value;
   for (const allowed of values) {
@@ -68,7 +69,7 @@ function matching({ type, values }: Definition, stated: Scalar): Scalar | null {
 
 function asType(type: Definition['type'], stated: Scalar): Scalar | null {
   if (type === 'text') return String(stated);
-  if (type === 'boolean') return typeof stated === 'boolean' ? stated : null;
+  if (type === 'boolean') return { true: true, false: false }[String(stated)] ?? null;
   if (type === 'date') return /^\d{4}-\d{2}-\d{2}$/.test(String(stated)) ? String(stated) : null;
   if (typeof stated === 'number') return stated;
   return /^-?\d+(\.\d+)?$/.test(String(stated)) ? Number(stated) : null;

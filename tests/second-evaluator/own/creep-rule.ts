@@ -1,56 +1,114 @@
 import type { Reading } from '#rules/record';
 import type { CreepComplianceMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
-import { exact, over } from './exact';
+import { isSameCondition } from './conditions';
+import { asNumber, exact, over } from './exact';
 import { type Allowed, isOne, meanOf, one } from './interval';
-import { type Judgement, judged, precisionOf } from './judged';
-import { limitsOf, stepFor } from './limits';
-import { allowedOf } from './quantity-value';
-import { select } from './selection';
+import { type Judgement, judged, measuresOf, precisionOf } from './judged';
+import { knownOf } from './known';
+import { throughThreePoints } from './power-law';
+import { haveUnits, valuesOf } from './quantity-value';
+import { toTwelveDigits } from './rounding';
+import { isDoubted, select } from './selection';
 import { type Verdict, type World, without } from './world';
 
-type CreepRule = Rule & { measure: CreepComplianceMeasure };
+export type CreepRule = Rule & { measure: CreepComplianceMeasure };
 
 export function creepVerdicts(world: World, rule: CreepRule): Verdict[] {
-  return [{ rule: rule.id, subject: 'design point', ...judgeCreep(world, rule) }];
+  return [{ rule: rule.id, subject: 'mix', ...judgeCreep(world, rule) }];
 }
 
-/** Measured points only: no curve is drawn through them here. */
+/** A compliance stated or strained at one loading time; null where it cannot be told. */
+interface Point {
+  specimen: string | undefined;
+  time: number;
+  value: Allowed | null;
+}
+
 function judgeCreep(world: World, rule: CreepRule): Judgement {
-  const { temperature, time, stress } = rule.measure;
-  const wanted = { trial: 'design', temperature, ...(stress === undefined ? {} : { stress }) };
-  const pooled = { pooled: ['stress', 'time'] };
-  const compliance = select(world, 'creep-compliance', { ...wanted, time }, pooled);
-  const strain = select(world, 'creep-strain', { ...wanted, time }, pooled);
-  const found = [compliance, strain];
-  const points: Allowed[] = [];
-  for (const each of found) {
-    for (const reading of each.is === 'readings' ? each.readings : []) {
-      const point = pointOf(reading);
-      if (point === null || !isOne(point)) return without('undecided');
-      points.push(point);
+  const { measure } = rule;
+  const value = compliance(world, measure);
+  if (typeof value === 'string') return without(value);
+  const measures = measuresOf({ world, unit: knownOf('creep-compliance').unit }, rule);
+  if (measures.is !== 'resolved') return without(measures.is);
+  return judged(value, measures.value, precisionOf(rule, undefined, 1));
+}
+
+function compliance(world: World, measure: CreepComplianceMeasure): Allowed | 'not shown' | 'undecided' {
+  const { time, source, temperature, stress } = measure;
+  const wanted = { temperature, ...(stress === undefined ? {} : { stress }) };
+  const found = pointsOf(world, wanted);
+  const points = typeof found === 'string' ? [] : found;
+  const atTime = points.filter((point) => isSameCondition('time', time, point.time));
+  const isMeasured = source === 'measured' || (source === 'either' && atTime.length > 0);
+  const doubted = isMeasured ? { ...wanted, time } : wanted;
+  if (QUANTITIES.some((quantity) => isDoubted(world, quantity, doubted))) return 'undecided';
+  if (typeof found === 'string') return found;
+  if (!isMeasured) return fitted(points, measure);
+  return atTime.length === 0 ? 'not shown' : meanOfSpecimens(atTime);
+}
+
+const QUANTITIES = ['creep-compliance', 'creep-strain'];
+
+function pointsOf(
+  world: World,
+  wanted: { temperature: number; stress?: number },
+): Point[] | 'not shown' | 'undecided' {
+  const points: Point[] = [];
+  let isUnsure = false;
+  for (const quantity of QUANTITIES) {
+    const options = { pooled: ['time', 'stress'], heedsDoubts: false };
+    const chosen = select(world, quantity, wanted, options);
+    if (chosen.is === 'doubtful') isUnsure = true;
+    if (chosen.is !== 'readings') continue;
+    for (const reading of chosen.readings) {
+      if (reading.at.time === undefined) isUnsure = true;
+      else points.push({ specimen: reading.at.specimen, time: reading.at.time, value: valueBy(reading) });
     }
   }
-  if (points.length === 0) {
-    return without(found.some(({ is }) => is === 'doubtful') ? 'undecided' : 'not shown');
-  }
-  const place = { world, unit: '1/GPa' };
-  const limits = limitsOf(place, rule.limit);
-  if (limits.is !== 'resolved') return without(limits.is === 'missing' ? 'not shown' : 'undecided');
-  const step = stepFor(place, rule.rounding, limits.value);
-  if (step === null) return without('undecided');
-  return judged(meanOf(points), {
-    limits: limits.value,
-    method: rule.rounding?.method ?? 'absolute',
-    step,
-    precision: precisionOf(rule, undefined, points.length),
-  });
+  if (points.length > 0) return points;
+  return isUnsure ? 'undecided' : 'not shown';
 }
 
 /** D in 1/GPa: a strain in µε over a stress in kPa is the same number. */
-function pointOf(reading: Reading): Allowed | null {
-  if (reading.quantity === 'creep-compliance') return allowedOf(reading.quantity, reading);
+function valueBy(reading: Reading): Allowed | null {
   const { stress } = reading.at;
-  if (stress === undefined || stress === 0 || reading.value === null) return null;
-  return one(over(exact(reading.value), exact(stress)));
+  if (reading.value === null || !haveUnits(reading.quantity, [reading])) return null;
+  if (reading.quantity === 'creep-strain') {
+    return stress === undefined ? null : one(over(exact(reading.value), exact(stress)));
+  }
+  const values = valuesOf(reading.quantity, [reading], knownOf(reading.quantity).unit, true);
+  return values.is === 'values' ? values.values[0]!.allowed : null;
+}
+
+/** The mean over specimens, of each the mean of its own points. */
+function meanOfSpecimens(points: Point[]): Allowed | 'undecided' {
+  const specimens = new Set(points.map(({ specimen }) => specimen));
+  const means: Allowed[] = [];
+  for (const specimen of specimens) {
+    const own = points.filter((point) => point.specimen === specimen).map(({ value }) => value);
+    if (own.includes(null)) return 'undecided';
+    means.push(meanOf(own.filter((value) => value !== null)));
+  }
+  return meanOf(means);
+}
+
+/**
+ * Between the tested times the curve, where the points lie on one exactly; outside them undecided, because no rule
+ * here allows to extrapolate.
+ */
+function fitted(points: Point[], { time }: CreepComplianceMeasure): Allowed | 'undecided' {
+  const first = new Map<number, number>();
+  for (const { time: tested, value } of points) {
+    if (value === null || !isOne(value)) return 'undecided';
+    first.set(tested, asNumber(value.low));
+  }
+  const times = [...first.keys()].sort((left, right) => left - right);
+  if (times.length < 4 || time < times[0]! || time > times.at(-1)!) return 'undecided';
+  const three = times.slice(0, 3).map((each) => ({ time: each, value: first.get(each)! }));
+  for (const [tested, value] of first) {
+    const apart = Math.abs(throughThreePoints(three, tested) - value);
+    if (!(apart <= 1e-8 * value)) throw new Error('The points lie on no power law, and none is fitted here.');
+  }
+  return one(toTwelveDigits(throughThreePoints(three, time)));
 }

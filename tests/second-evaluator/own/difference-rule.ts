@@ -1,45 +1,54 @@
 import type { DifferenceMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
-import { compare, exact, minus, over, times } from './exact';
-import { type Allowed, isOne, one } from './interval';
-import { type Judgement, judged, precisionOf } from './judged';
+import { type Exact, exact, magnitude, minus, over, times } from './exact';
+import { isOne, one } from './interval';
+import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
-import { limitsOf, stepFor } from './limits';
 import { meanAt, valuesOf } from './quantity-value';
-import { subjectOf } from './reading-rule';
-import { select } from './selection';
+import { isDoubted, select } from './selection';
 import { statisticOf } from './statistic-of';
+import { subjectOf } from './subject';
+import { converted } from './units';
 import { type Verdict, type World, without } from './world';
 
-type DifferenceRule = Rule & { measure: DifferenceMeasure };
-type Side = { is: 'value'; value: Allowed } | { is: 'missing' } | { is: 'doubtful' };
+export type DifferenceRule = Rule & { measure: DifferenceMeasure };
+type Side = { is: 'value'; value: Exact } | { is: 'missing' } | { is: 'doubtful' };
 
 export function differenceVerdicts(world: World, rule: DifferenceRule): Verdict[] {
-  const { measure } = rule;
-  return [{ rule: rule.id, subject: subjectOf(measure.quantity, {}), ...judgeDifference(world, rule) }];
+  const { quantity } = rule.measure;
+  return [{ rule: rule.id, subject: subjectOf(quantity, {}), ...judgeDifference(world, rule) }];
 }
 
 function judgeDifference(world: World, rule: DifferenceRule): Judgement {
-  const { quantity, between } = rule.measure;
-  const [left, right] =
-    between[0] === 'contractor'
-      ? [sideOfLaboratory(world, rule.measure, 'contractor'), sideOfLaboratory(world, rule.measure, 'agency')]
-      : [meanAt(world, quantity, {}), recomputedVoids(world)];
-  if (left.is === 'missing' || right.is === 'missing') return without('not shown');
-  if (left.is === 'doubtful' || right.is === 'doubtful') return without('undecided');
-  const place = { world, unit: knownOf(quantity).unit };
-  const limits = limitsOf(place, rule.limit);
-  if (limits.is !== 'resolved') return without(limits.is === 'missing' ? 'not shown' : 'undecided');
-  const step = stepFor(place, rule.rounding, limits.value);
-  if (step === null) return without('undecided');
-  return judged(apart(left.value, right.value), {
-    limits: limits.value,
-    method: rule.rounding?.method ?? 'absolute',
-    step,
-    precision: precisionOf(rule, undefined, 1),
-  });
+  const { quantity } = rule.measure;
+  const values: Exact[] = [];
+  const sides = sidesOf(world, rule.measure);
+  const areOfWorkbook = rule.measure.between[0] === 'reported';
+  // Of one workbook a doubtful cell may be the missing one; two laboratories are asked one after the other.
+  if (areOfWorkbook && sides.some(({ is }) => is === 'doubtful')) return without('undecided');
+  for (const side of sides) {
+    if (side.is !== 'value') return without(side.is === 'missing' ? 'not shown' : 'undecided');
+    values.push(side.value);
+  }
+  const [left, right] = values as [Exact, Exact];
+  const { unit } = knownOf(quantity);
+  const measures = measuresOf({ world, unit }, rule);
+  if (measures.is !== 'resolved') return without(measures.is);
+  const target = measures.value.limits.unit ?? unit;
+  const ends = [converted(left, unit, target), converted(right, unit, target)] as const;
+  if (ends[0] === null || ends[1] === null) return without('undecided');
+  const apart = magnitude(minus(ends[0], ends[1]));
+  return judged(one(apart), measures.value, precisionOf(rule, undefined, 1));
 }
 
+function sidesOf(world: World, measure: DifferenceMeasure): Side[] {
+  if (measure.between[0] === 'contractor') {
+    return [sideOfLaboratory(world, measure, 'contractor'), sideOfLaboratory(world, measure, 'agency')];
+  }
+  return [recomputedVoids(world), reportedVoids(world)];
+}
+
+/** One number a side: a censored one leaves the distance open. */
 function sideOfLaboratory(
   world: World,
   { quantity, statistic }: DifferenceMeasure,
@@ -47,29 +56,25 @@ function sideOfLaboratory(
 ): Side {
   const chosen = select(world, quantity, { laboratory });
   if (chosen.is !== 'readings') return chosen;
-  const values = valuesOf(quantity, chosen.readings);
+  const values = valuesOf(quantity, chosen.readings, knownOf(quantity).unit, true);
   if (values.is !== 'values') return values;
   const value = statisticOf(values.values, statistic, null);
-  return value === null ? { is: 'doubtful' } : { is: 'value', value };
+  return value === null || !isOne(value) ? { is: 'doubtful' } : { is: 'value', value: value.low };
 }
 
 /** 100·(Gmm − Gmb)/Gmm from the means of the design's own gravities (AASHTO T 269; from memory, verify). */
-export function recomputedVoids(world: World): Side {
+function recomputedVoids(world: World): Side {
   const maximum = meanAt(world, 'maximum-specific-gravity', {});
   const bulk = meanAt(world, 'bulk-specific-gravity-mix', {});
+  if (maximum.is === 'doubtful' || bulk.is === 'doubtful') return { is: 'doubtful' };
   if (maximum.is === 'missing' || bulk.is === 'missing') return { is: 'missing' };
-  if (maximum.is !== 'value' || bulk.is !== 'value') return { is: 'doubtful' };
   if (!isOne(maximum.value) || !isOne(bulk.value)) return { is: 'doubtful' };
   const share = over(minus(maximum.value.low, bulk.value.low), maximum.value.low);
-  return { is: 'value', value: one(times(exact(100), share)) };
+  return { is: 'value', value: times(exact(100), share) };
 }
 
-function apart(left: Allowed, right: Allowed): Allowed {
-  const low = minus(left.low, right.high);
-  const high = minus(left.high, right.low);
-  const zero = exact(0);
-  const flipped = { low: minus(zero, high), high: minus(zero, low) };
-  if (compare(low, zero) >= 0) return { low, high };
-  if (compare(high, zero) <= 0) return flipped;
-  return { low: zero, high: compare(high, flipped.high) > 0 ? high : flipped.high };
+function reportedVoids(world: World): Side {
+  if (isDoubted(world, 'air-voids', {})) return { is: 'doubtful' };
+  const reported = world.record.readings.find(({ quantity }) => quantity === 'air-voids');
+  return reported?.value == null ? { is: 'missing' } : { is: 'value', value: exact(reported.value) };
 }

@@ -3,12 +3,12 @@ import type { Rule } from '#rules/rule-sets/schema';
 import type { Exact } from './exact';
 import { computed, NoValue, namesIn } from './formula';
 import { isOne, one } from './interval';
-import { type Judgement, judged, precisionOf } from './judged';
-import { limitsOf, stepFor } from './limits';
+import { type Judgement, judged, measuresOf, precisionOf } from './judged';
+import { knownOf } from './known';
 import { meanAt } from './quantity-value';
 import { type Verdict, type World, without } from './world';
 
-type FormulaRule = Rule & { measure: FormulaMeasure };
+export type FormulaRule = Rule & { measure: FormulaMeasure };
 
 /** Trade symbols of the quantities that formulas are drawn over. */
 const SYMBOLS: Record<string, string> = {
@@ -24,38 +24,39 @@ const SYMBOLS: Record<string, string> = {
 };
 
 export function formulaVerdicts(world: World, rule: FormulaRule): Verdict[] {
-  return [{ rule: rule.id, subject: 'design point', ...judgeFormula(world, rule) }];
+  return [{ rule: rule.id, subject: formulaSubject(rule.measure), ...judgeFormula(world, rule) }];
+}
+
+/** Of the design point, unless it is all of aggregate or binder, which belong to every trial. */
+export function formulaSubject({ expression, at }: FormulaMeasure): string {
+  if (at.trial !== undefined) return at.trial === 'design' ? 'design point' : 'mix';
+  const isOfMix = namesIn(expression).some((name) => knownOf(quantityOf(name).quantity).of === 'mix');
+  return isOfMix ? 'design point' : 'mix';
+}
+
+function quantityOf(name: string): { quantity: string; sieve: number | undefined } {
+  const [, symbol = name, opening] = /^(P)([\d.]+)$/.exec(name) ?? [];
+  return { quantity: SYMBOLS[symbol]!, sieve: opening === undefined ? undefined : Number(opening) };
 }
 
 function judgeFormula(world: World, rule: FormulaRule): Judgement {
   const { expression, at, unit } = rule.measure;
   const values = new Map<string, Exact>();
-  let isMissing = false;
-  let isDoubtful = false;
+  const failures = new Set<string>();
   for (const name of namesIn(expression)) {
-    const [, symbol = name, opening] = /^(P)([\d.]+)$/.exec(name) ?? [];
-    const sieve = opening === undefined ? {} : { sieve: Number(opening) };
-    const found = meanAt(world, SYMBOLS[symbol]!, { ...at, ...sieve });
-    if (found.is === 'missing') isMissing = true;
-    else if (found.is === 'doubtful' || !isOne(found.value)) isDoubtful = true;
+    const { quantity, sieve } = quantityOf(name);
+    const found = meanAt(world, quantity, sieve === undefined ? at : { ...at, sieve });
+    if (found.is === 'missing') failures.add('not shown');
+    else if (found.is === 'doubtful' || !isOne(found.value)) failures.add('undecided');
     else values.set(name, found.value.low);
   }
-  if (isMissing) return without('not shown');
-  if (isDoubtful) return without('undecided');
-  const place = { world, unit: unit ?? '1' };
-  const limits = limitsOf(place, rule.limit);
-  if (limits.is !== 'resolved') return without(limits.is === 'missing' ? 'not shown' : 'undecided');
-  const step = stepFor(place, rule.rounding, limits.value);
-  if (step === null) return without('undecided');
+  if (failures.has('not shown')) return without('not shown');
+  if (failures.has('undecided')) return without('undecided');
   try {
     const value = one(computed(expression, (name) => values.get(name)!));
-    const precision = precisionOf(rule, undefined, 1);
-    return judged(value, {
-      limits: limits.value,
-      method: rule.rounding?.method ?? 'absolute',
-      step,
-      precision,
-    });
+    const measures = measuresOf({ world, unit: unit ?? '1' }, rule);
+    if (measures.is !== 'resolved') return without(measures.is);
+    return judged(value, measures.value, precisionOf(rule, undefined, 1));
   } catch (error) {
     if (error instanceof NoValue) return without('undecided');
     throw error;

@@ -14,7 +14,7 @@ import {
 import { toTwelveDigits } from './rounding';
 
 /** Value of a name in a formula. */
-export type ValueOf = (name: string) => Exact;
+export type ValueBy = (name: string) => Exact;
 
 /** A formula without a value: a division by zero, a root of a negative number. */
 export class NoValue extends Error {}
@@ -26,9 +26,9 @@ export function namesIn(expression: string): string[] {
 }
 
 /** Computed exactly by descent: sums of products of powers, with brackets, signs and a few functions. */
-export function computed(expression: string, valueOf: ValueOf): Exact {
+export function computed(expression: string, valueBy: ValueBy): Exact {
   const rest = tokens(expression);
-  const value = sum(rest, valueOf);
+  const value = sum(rest, valueBy);
   if (rest.length > 0) throw new Error(`The formula goes on after its end: ${rest.join(' ')}.`);
   return value;
 }
@@ -39,21 +39,21 @@ function tokens(expression: string): string[] {
   return expression.match(/\d+(\.\d+)?|\p{L}+[\p{L}\d.]*|[-+*/^(),]/gu) ?? [];
 }
 
-function sum(rest: string[], valueOf: ValueOf): Exact {
-  let value = product(rest, valueOf);
+function sum(rest: string[], valueBy: ValueBy): Exact {
+  let value = product(rest, valueBy);
   while (rest[0] === '+' || rest[0] === '-') {
     const sign = rest.shift();
-    const next = product(rest, valueOf);
+    const next = product(rest, valueBy);
     value = sign === '+' ? plus(value, next) : minus(value, next);
   }
   return value;
 }
 
-function product(rest: string[], valueOf: ValueOf): Exact {
-  let value = signed(rest, valueOf);
+function product(rest: string[], valueBy: ValueBy): Exact {
+  let value = signed(rest, valueBy);
   while (rest[0] === '*' || rest[0] === '/') {
     const sign = rest.shift();
-    const next = signed(rest, valueOf);
+    const next = signed(rest, valueBy);
     if (sign === '/' && next.top === 0n) throw new NoValue();
     value = sign === '*' ? times(value, next) : over(value, next);
   }
@@ -61,35 +61,35 @@ function product(rest: string[], valueOf: ValueOf): Exact {
 }
 
 /** A sign holds less tightly than a power: -2^2 is -4. */
-function signed(rest: string[], valueOf: ValueOf): Exact {
+function signed(rest: string[], valueBy: ValueBy): Exact {
   if (rest[0] === '-') {
     rest.shift();
-    return minus(exact(0), signed(rest, valueOf));
+    return minus(exact(0), signed(rest, valueBy));
   }
-  return power(rest, valueOf);
+  return power(rest, valueBy);
 }
 
-function power(rest: string[], valueOf: ValueOf): Exact {
-  const base = atom(rest, valueOf);
+function power(rest: string[], valueBy: ValueBy): Exact {
+  const base = atom(rest, valueBy);
   if (rest[0] !== '^') return base;
   rest.shift();
-  const exponent = asNumber(signed(rest, valueOf));
+  const exponent = asNumber(signed(rest, valueBy));
   let value = exact(1);
   for (let i = 0; i < exponent; i += 1) value = times(value, base);
   return value;
 }
 
-function atom(rest: string[], valueOf: ValueOf): Exact {
+function atom(rest: string[], valueBy: ValueBy): Exact {
   const token = rest.shift();
   if (token === undefined) throw new Error('The formula ends too early.');
-  if (token === '(') return closed(rest, [sum(rest, valueOf)])[0]!;
+  if (token === '(') return closed(rest, [sum(rest, valueBy)])[0]!;
   if (/^\d/.test(token)) return exact(token);
-  if (!FUNCTIONS.has(token)) return valueOf(token);
+  if (!FUNCTIONS.has(token)) return valueBy(token);
   rest.shift();
-  const given = [sum(rest, valueOf)];
+  const given = [sum(rest, valueBy)];
   while (rest[0] === ',') {
     rest.shift();
-    given.push(sum(rest, valueOf));
+    given.push(sum(rest, valueBy));
   }
   return applied(token, closed(rest, given));
 }

@@ -1,6 +1,5 @@
-import type { Reading } from '#rules/record';
 import { compare, type Exact, exact, greatest, least, minus, plus } from './exact';
-import { mean, range, trimmedMean } from './statistics';
+import { mean } from './statistics';
 
 /** Every value that a reading allows: one, or all on one side of a censored one. */
 export interface Allowed {
@@ -11,6 +10,8 @@ export interface Allowed {
 const FAR = exact('1e30');
 const HAIR = exact('1e-30');
 
+export const ANYTHING: Allowed = { low: minus(exact(0), FAR), high: FAR };
+
 export function isOne({ low, high }: Allowed): boolean {
   return compare(low, high) === 0;
 }
@@ -19,12 +20,13 @@ export function one(value: Exact): Allowed {
   return { low: value, high: value };
 }
 
-/** What `<` or `>` leaves open; the number itself is not among it. Null for a result without a number. */
-export function allowedBy(reading: Reading, value: Exact | null): Allowed | null {
-  if (value === null || reading.qualifier === 'none' || reading.qualifier === 'non-plastic') return null;
-  if (reading.qualifier === '<') return { low: minus(exact(0), FAR), high: minus(value, HAIR) };
-  if (reading.qualifier === '>') return { low: plus(value, HAIR), high: FAR };
-  return one(value);
+/** All below the number, which is not itself among them. */
+export function below(value: Exact): Allowed {
+  return { low: ANYTHING.low, high: minus(value, HAIR) };
+}
+
+export function above(value: Exact): Allowed {
+  return { low: plus(value, HAIR), high: FAR };
 }
 
 export function meanOf(values: Allowed[]): Allowed {
@@ -37,21 +39,6 @@ export function leastOf(values: Allowed[]): Allowed {
 
 export function greatestOf(values: Allowed[]): Allowed {
   return { low: greatest(lows(values)), high: greatest(highs(values)) };
-}
-
-export function trimmedOf(values: Allowed[]): Allowed | null {
-  const low = trimmedMean(lows(values));
-  const high = trimmedMean(highs(values));
-  return low === null || high === null ? null : { low, high };
-}
-
-export function rangeOf(values: Allowed[]): Allowed {
-  if (values.every(isOne)) return one(range(lows(values)));
-  const smallest = minus(greatest(lows(values)), least(highs(values)));
-  return {
-    low: compare(smallest, exact(0)) < 0 ? exact(0) : smallest,
-    high: minus(greatest(highs(values)), least(lows(values))),
-  };
 }
 
 function lows(values: Allowed[]): Exact[] {

@@ -1,68 +1,97 @@
 import type { Conditions, Reading } from '#rules/record';
-import { compare, type Exact, exact, magnitude, minus, over, times } from './exact';
+import { agreement, CONDITIONS, isSameCondition } from './conditions';
 import { knownOf } from './known';
+import { oneASpecimen } from './specimens';
 import type { World } from './world';
 
 export type Selected = { is: 'readings'; readings: Reading[] } | { is: 'missing' } | { is: 'doubtful' };
 
 type Fit = 'yes' | 'perhaps' | 'no';
 
-const CONDITIONS = [
-  'variant',
-  'passes',
-  'frequency',
-  'aging',
-  'stress',
-  'gyrations',
-  'temperature',
-  'time',
-  'sieve',
-] as const;
-
 export interface SelectOptions {
   /** Conditions whose several values are not several things. */
   pooled?: readonly string[];
-  /** Only what is stated for this one specimen. */
-  specimen?: string;
+  /** Only what is stated for this one specimen; null for what is stated for none. */
+  specimen?: string | null;
+  /** False where doubts are looked at otherwise. */
+  heedsDoubts?: boolean;
 }
 
-/** The readings that a rule's conditions select, or why there is none that counts. */
+/** The readings that a rule's conditions select, one a specimen, or why there is none that counts. */
 export function select(
   world: World,
   quantity: string,
   wanted: Conditions,
-  { pooled = [], specimen }: SelectOptions = {},
+  { pooled = [], specimen, heedsDoubts = true }: SelectOptions = {},
 ): Selected {
-  const isOfSpecimen = (at: Conditions) => specimen === undefined || at.specimen === specimen;
-  const fitting: Reading[] = [];
+  if (heedsDoubts && isDoubted(world, quantity, wanted)) return { is: 'doubtful' };
+  let fitting: Reading[] = [];
   let perhaps = 0;
   for (const reading of world.record.readings) {
-    if (reading.quantity !== quantity || !isOfSpecimen(reading.at)) continue;
+    if (reading.quantity !== quantity) continue;
+    if (specimen !== undefined && (reading.at.specimen ?? null) !== specimen) continue;
     const fit = fitOf(world, quantity, wanted, reading.at);
     if (fit === 'yes') fitting.push(reading);
+    if (fit === 'unresolved') return { is: 'doubtful' };
     if (fit === 'perhaps') perhaps += 1;
   }
-  if (fitting.length === 0) {
-    const isDoubted = world.record.doubts.some(
-      ({ about }) =>
-        about.quantity === quantity &&
-        (about.at?.specimen === undefined || isOfSpecimen(about.at)) &&
-        fitOf(world, quantity, wanted, about.at ?? {}) !== 'no',
-    );
-    return isDoubted || perhaps > 0 ? { is: 'doubtful' } : { is: 'missing' };
-  }
-  for (const name of CONDITIONS) {
-    if (wanted[name] !== undefined || pooled.includes(name)) continue;
-    const values = new Set(fitting.map(({ at }) => at[name]).filter((value) => value !== undefined));
-    if (values.size > 1) return { is: 'doubtful' };
-  }
-  return { is: 'readings', readings: fitting };
+  if (fitting.length === 0) return { is: perhaps > 0 ? 'doubtful' : 'missing' };
+  // What is stated for this trial goes before what is stated for all.
+  const own = fitting.filter(({ at }) => at.trial !== undefined);
+  if (knownOf(quantity).of !== 'mix' && own.length > 0) fitting = own;
+  if (severalConditions(wanted, fitting, pooled)) return { is: 'doubtful' };
+  if (pooled.length > 0) return { is: 'readings', readings: fitting };
+  const readings = oneASpecimen(fitting);
+  return readings === null ? { is: 'doubtful' } : { is: 'readings', readings };
 }
 
-export function fitOf(world: World, quantity: string, wanted: Conditions, stated: Conditions): Fit {
+/**
+ * An open doubt about what could count here, with no sure reading in its place: at all the conditions, the specimen
+ * too, that the doubtful cell states.
+ */
+export function isDoubted(world: World, quantity: string, wanted: Conditions): boolean {
+  for (const { about } of world.record.doubts) {
+    if (about.quantity !== quantity) continue;
+    const doubted = about.at ?? {};
+    if (fitOf(world, quantity, wanted, doubted) === 'no') continue;
+    const isSure = world.record.readings.some(
+      (reading) => reading.quantity === quantity && standsFor(reading.at, doubted),
+    );
+    if (!isSure) return true;
+  }
+  return false;
+}
+
+function standsFor(sure: Conditions, doubted: Conditions): boolean {
+  if ((sure.laboratory ?? 'contractor') !== (doubted.laboratory ?? 'contractor')) return false;
+  if ((sure.trial ?? 'design') !== (doubted.trial ?? 'design')) return false;
+  for (const name of ['specimen', 'stockpile', ...CONDITIONS] as const) {
+    if (doubted[name] !== undefined && doubted[name] !== sure[name]) return false;
+  }
+  return true;
+}
+
+/** One with a condition beside one without it may be two tests as well as one. */
+function severalConditions(wanted: Conditions, fitting: Reading[], pooled: readonly string[]): boolean {
+  for (const name of CONDITIONS) {
+    if (wanted[name] !== undefined || pooled.includes(name)) continue;
+    const first = fitting[0]!.at[name];
+    for (const { at } of fitting) {
+      if (first === undefined ? at[name] !== undefined : !isSameCondition(name, first, at[name])) return true;
+    }
+  }
+  return false;
+}
+
+export function fitOf(
+  world: World,
+  quantity: string,
+  wanted: Conditions,
+  stated: Conditions,
+): Fit | 'unresolved' {
   if ((wanted.laboratory ?? 'contractor') !== (stated.laboratory ?? 'contractor')) return 'no';
-  const everyTrial = knownOf(quantity).of !== 'mix' && stated.trial === undefined;
-  if (!everyTrial && (wanted.trial ?? 'design') !== (stated.trial ?? 'design')) return 'no';
+  const isOfEveryTrial = knownOf(quantity).of !== 'mix' && stated.trial === undefined;
+  if (!isOfEveryTrial && (wanted.trial ?? 'design') !== (stated.trial ?? 'design')) return 'no';
   let fit: Fit = 'yes';
   if (wanted.stockpile === undefined) {
     if (stated.stockpile !== undefined) return 'no';
@@ -70,46 +99,9 @@ export function fitOf(world: World, quantity: string, wanted: Conditions, stated
   else if (stated.stockpile !== wanted.stockpile) return 'no';
   for (const name of CONDITIONS) {
     const value = wanted[name];
-    if (value === undefined) continue;
-    const other = stated[name];
-    if (other === undefined) {
-      fit = 'perhaps';
-      continue;
-    }
-    const agreement = agrees(world, name, value, other, wanted.trial);
-    if (agreement === 'no') return 'no';
-    if (agreement === 'perhaps') fit = 'perhaps';
+    const found = value === undefined ? 'yes' : agreement(world, name, value, stated[name]);
+    if (found === 'no' || found === 'unresolved') return found;
+    if (found === 'perhaps') fit = 'perhaps';
   }
   return fit;
-}
-
-function agrees(
-  world: World,
-  name: (typeof CONDITIONS)[number],
-  wanted: string | number,
-  stated: string | number,
-  trial: string | undefined,
-): Fit {
-  if (name === 'gyrations' && typeof wanted !== typeof stated) {
-    const [named, number] = typeof wanted === 'string' ? [wanted, stated] : [stated, wanted];
-    const resolved = gyrationsOf(world, String(named), trial);
-    return resolved === null ? 'perhaps' : resolved === number ? 'yes' : 'no';
-  }
-  if (typeof wanted === 'string' || typeof stated === 'string') return wanted === stated ? 'yes' : 'no';
-  const apart = magnitude(minus(exact(wanted), exact(stated)));
-  const allowed: Exact =
-    name === 'temperature'
-      ? exact('0.5')
-      : name === 'time'
-        ? over(times(exact(wanted), exact(1)), exact(100))
-        : exact(0);
-  return compare(apart, allowed) <= 0 ? 'yes' : 'no';
-}
-
-/** How many gyrations a name stands for, as the workbook states it. */
-function gyrationsOf(world: World, name: string, trial: string | undefined): number | null {
-  const chosen = select(world, `gyrations-${name}`, trial === undefined ? {} : { trial });
-  if (chosen.is !== 'readings') return null;
-  const [first] = chosen.readings;
-  return first?.value ?? null;
 }

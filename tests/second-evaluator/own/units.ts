@@ -17,6 +17,10 @@ const FACTORS: Record<string, { kind: string; factor: Exact; offset?: Exact }> =
     kind: 'pressure',
     factor: over(exact('4.4482216152605'), times(exact('0.00064516'), exact(1000))),
   },
+  '1/GPa': { kind: 'compliance', factor: exact(1) },
+  '1/MPa': { kind: 'compliance', factor: exact(1000) },
+  µε: { kind: 'strain', factor: exact(1) },
+  cycles: { kind: 'cycles', factor: exact(1) },
   '°C': { kind: 'temperature', factor: exact(1), offset: exact(0) },
   '°F': { kind: 'temperature', factor: over(exact(5), exact(9)), offset: exact(32) },
 };

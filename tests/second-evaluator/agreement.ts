@@ -1,0 +1,91 @@
+import { evaluate } from '#rules/engine/evaluate';
+import type { Outcome } from '#rules/engine/finding';
+import { type MixRecord, mixRecordSchema } from '#rules/record';
+import { type ResolvedEdition, resolveEdition } from '#rules/rule-sets/resolve';
+import { type Layer, layerSchema, type RuleSet, ruleSetSchema } from '#rules/rule-sets/schema';
+import type { GeneratedCase } from './generated/parts';
+import { verdictsOf } from './own/verdicts';
+import { type Verdict, worldOf } from './own/world';
+
+export interface JudgedTwice {
+  /** Empty where both agree. */
+  disagreements: string[];
+  /** Kind and outcome of each finding that was compared. */
+  findings: { kind: string; outcome: Outcome; borderline: boolean }[];
+}
+
+/** One case judged by the engine and by the second evaluator, finding by finding. */
+export function judgeTwice({ base, layers, record, context }: GeneratedCase): JudgedTwice {
+  const parsedBase = ruleSetSchema.parse(base);
+  const parsedLayers = layers.map((layer) => layerSchema.parse(layer));
+  const parsedRecord = mixRecordSchema.parse(record);
+  const edition = resolved(parsedBase, parsedLayers);
+  const result = evaluate(parsedRecord, edition, context);
+  const findings = result.findings.filter(({ clause }) => clause !== null);
+  const verdicts = verdictsOf(worldOf(parsedRecord, parsedBase, parsedLayers, context));
+  return {
+    disagreements: compared(findings.map(asVerdict), verdicts),
+    findings: findings.map(({ kind, outcome, borderline }) => ({ kind, outcome, borderline })),
+  };
+}
+
+export type Judged = { record: MixRecord; edition: ResolvedEdition };
+
+function resolved(base: RuleSet, layers: Layer[]): ResolvedEdition {
+  const resolution = resolveEdition(base, layers);
+  if (resolution.ok) return resolution.edition;
+  throw new Error(`A drawn edition does not resolve: ${JSON.stringify(resolution.problems)}`);
+}
+
+type Finding = ReturnType<typeof evaluate>['findings'][number];
+
+function asVerdict(finding: Finding): Verdict {
+  return {
+    rule: finding.rule,
+    subject: finding.subject,
+    outcome: finding.outcome,
+    rounded: finding.observed?.rounded ?? null,
+    margin: finding.margin,
+    borderline: finding.borderline,
+    figuresAreLaidDown: true,
+  };
+}
+
+function compared(engines: Verdict[], own: Verdict[]): string[] {
+  const left = new Map(engines.map((verdict) => [`${verdict.rule}~${verdict.subject}`, verdict]));
+  const disagreements: string[] = [];
+  for (const verdict of own) {
+    const key = `${verdict.rule}~${verdict.subject}`;
+    const engine = left.get(key);
+    left.delete(key);
+    if (engine === undefined) disagreements.push(`${key}: the engine has no such finding; ${words(verdict)}`);
+    else if (!isSame(engine, verdict)) {
+      disagreements.push(`${key}: the engine says ${words(engine)}; the second evaluator ${words(verdict)}`);
+    }
+  }
+  for (const [key, verdict] of left) {
+    disagreements.push(`${key}: only the engine has it: ${words(verdict)}`);
+  }
+  return disagreements;
+}
+
+function isSame(engine: Verdict, own: Verdict): boolean {
+  if (engine.outcome !== own.outcome) return false;
+  if (own.outcome !== 'pass' && own.outcome !== 'fail') return engine.margin === null && !engine.borderline;
+  if (!own.figuresAreLaidDown) return true;
+  return (
+    isNear(engine.rounded, own.rounded) &&
+    isNear(engine.margin, own.margin) &&
+    engine.borderline === own.borderline
+  );
+}
+
+/** Equal to nine digits: what an unrounded quotient is written with is no part of the contract. */
+function isNear(left: number | null, right: number | null): boolean {
+  if (left === null || right === null) return left === right;
+  return Math.abs(left - right) <= 1e-9 * Math.max(1, Math.abs(left), Math.abs(right));
+}
+
+function words({ outcome, rounded, margin, borderline }: Verdict): string {
+  return `${outcome}, ${rounded}, margin ${margin}${borderline ? ', borderline' : ''}`;
+}
