@@ -54,12 +54,15 @@ function decimalsOf(place: Place): number {
   return /\.(\d+)/.exec(place.text)?.[1]?.length ?? 0;
 }
 
+/** More choices than anybody reads. */
+const mostAlternatives = 12;
+
 function settleConflict(log: ReadingLog, group: TakenReading[], distinct: TakenReading[]): Reading[] {
   const last = group.at(-1) as TakenReading;
   const first = distinct.find((taken) => taken.place !== last.place) as TakenReading;
   const { quantity, at } = last.reading;
   const reason = `says ${last.place.text} where ${whereOf(first.place, last.place)} says ${first.place.text} for the same thing`;
-  const alternatives = distinct.map((taken) => ({
+  const alternatives = distinct.slice(0, mostAlternatives).map((taken) => ({
     answer: `${taken.reading.value} ${taken.reading.unit}`,
     label: `${taken.place.text}, as in ${whereOf(taken.place, last.place)}`,
     value: taken,

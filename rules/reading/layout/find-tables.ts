@@ -19,7 +19,7 @@ export interface Table {
 
 export interface Surroundings {
   kinds: CellKinds;
-  labels: LabelReader;
+  labels: Pick<LabelReader, 'read'>;
 }
 
 /** Cuts a sheet at its blank bands and at its heading rows. */
@@ -32,10 +32,13 @@ export function findTables(sheet: SheetGrid, around: Surroundings): Table[] {
     const found = tablesOf(region, around, merges);
     const [first] = found;
     if (first) first.titles = [...titles, ...first.titles];
-    titles = found.length === 0 ? [...titles, ...region.flatMap(({ cells }) => cells)].slice(-4) : [];
+    titles = found.length === 0 ? [...titles, ...region.flatMap(({ cells }) => cells)] : [];
     tables.push(...found);
   }
-  return joinContinued(tables, around);
+  const left = titles.map((cell) => ({ row: cell.row, cells: [cell] }));
+  const last: Table[] =
+    left.length === 0 ? [] : [{ titles: [], headings: [], rows: left, firstColumn: 1, lastColumn: 1 }];
+  return [...joinContinued(tables, around), ...last];
 }
 
 function mergeStarts(sheet: SheetGrid): Map<string, number> {
@@ -291,8 +294,17 @@ function belongsToHeading(
 ): boolean {
   const { kinds, labels } = around;
   if (!next && table.headings.length === 0) return false;
-  const values = row.cells.filter((cell) => kinds.of(cell) === 'value');
-  const texts = row.cells.filter((cell) => kinds.of(cell) === 'text');
+  const isOpen =
+    table.rows.length === 0 &&
+    next !== undefined &&
+    next.cells.length > 1 &&
+    row.cells.filter((cell) => saysCondition(cell, around)).length > 1;
+  const values = row.cells.filter(
+    (cell) => kinds.of(cell) === 'value' && !(isOpen && saysCondition(cell, around)),
+  );
+  const texts = row.cells.filter(
+    (cell) => kinds.of(cell) === 'text' || (kinds.of(cell) === 'value' && !values.includes(cell)),
+  );
   if (values.length === 0) {
     if (isPair(row, around)) return false;
     if (texts.length === 0) return row.cells.some((cell) => kinds.of(cell) === 'unit');
@@ -303,6 +315,11 @@ function belongsToHeading(
     return next?.cells.some((cell) => kinds.of(cell) === 'value' || kinds.of(cell) === 'unit') ?? false;
   }
   return isNumberedHeading(row, values, table, around) || isKeyedHeading(row, next, table, around);
+}
+
+/** "-20 °C" and "10 Hz" are figures that head what stands under them. */
+export function saysCondition(cell: Cell, { labels }: Surroundings): boolean {
+  return cell.kind === 'text' && Object.keys(labels.read(cell.text).at).length > 0;
 }
 
 /** "Sieve, mm | 25 | 19 | 12.5 …" at the top of a table: keys over the columns. */
@@ -316,12 +333,9 @@ function isKeyedHeading(
   if (!first || !next || table.rows.length > 0 || kinds.of(first) !== 'text' || others.length < 2)
     return false;
   const meaning = labels.read(first.text);
-  if (
-    meaning.quantities.length > 0 ||
-    meaning.unknown.length > 0 ||
-    !meaning.keys.some((key) => keysOfHeads.has(key))
-  )
-    return false;
+  const isProperty = meaning.keys.includes('quantity') && table.headings.length > 0;
+  const isHead = meaning.keys.some((key) => keysOfHeads.has(key)) || isProperty;
+  if (meaning.quantities.length > 0 || meaning.unknown.length > 0 || !isHead) return false;
   const heads = others.filter((cell) => kinds.of(cell) === 'value');
   const below = next.cells.find(({ column }) => column >= first.column);
   return heads.length >= 2 && below !== undefined && next.cells.length > 2;

@@ -76,7 +76,7 @@ export class LabelReader {
 
 /** Words that turn a name into something else than the result itself. */
 const changing = new Set(
-  `virgin loss tolerance difference change ratio correction factor uncorrected rap ras added additional recovered extracted increase decrease slope intercept residual lost error deviation estimated assumed guess previous old
+  `dust virgin loss tolerance difference change ratio correction factor uncorrected rap ras added additional recovered extracted increase decrease slope intercept residual lost error deviation estimated assumed guess previous old
   cost price vol volume equation coefficient r2 rsq regression confidence uncertainty trial1 supplier source type name brand origin lot tank sample identification number id grade class classification level category limit limits`.split(
     /\s+/,
   ),
@@ -90,9 +90,13 @@ const weakWords = new Set(
   ),
 );
 
+/** "VMA (min. 14.0), %", "VFA (65-75)": the limit in brackets is no part of the name. */
+const bracketedLimit =
+  /[([]\s*(?:(?:min|max|spec|limit|target|req|mind|höchst|mini|maxi|mín|máx)[a-zé.]*\s*[:=]?\s*\d[^)\]]*|[≥≤<>]=?\s*\d[^)\]]*|\d+(?:[.,]\d+)?\s*(?:-|–|to|bis|à|a)\s*\d+(?:[.,]\d+)?\s*%?)\s*[)\]]/i;
+
 function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   const domains = domainsIn(text);
-  const stated = statedConditions(text);
+  const stated = statedConditions(text.replace(bracketedLimit, ' '));
   const taken = labelUnit(stated.rest);
   const meaning: LabelMeaning = {
     ...emptyMeaning(text, 0),

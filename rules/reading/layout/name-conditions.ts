@@ -12,7 +12,7 @@ import type { LabelMeaning, LabelReader } from './label-meaning';
 export function keyConditions(
   key: ConditionName,
   cell: Cell,
-  { labels, unit, decimal }: { labels: LabelReader; unit: string | null; decimal: '.' | ',' },
+  { labels, unit, decimal }: { labels: Pick<LabelReader, 'read'>; unit: string | null; decimal: '.' | ',' },
 ): Understood<Conditions> {
   const text = plainText(cell.text);
   if (key === 'sieve') return sieveCondition(cell, unit);

@@ -10,7 +10,7 @@ import type { TableRow } from './find-tables';
 import type { LabelMeaning } from './label-meaning';
 import { keyConditions } from './name-conditions';
 import { readDocumentPair } from './read-document-row';
-import { bareCandidate, mark, roleReasons, type TableContext } from './read-table';
+import { bareCandidate, mark, roleReasons, saysOutcome, type TableContext } from './read-table';
 import { readWritten } from './read-written';
 import { isConditionKey } from './table-columns';
 import { isRowLabel } from './table-rows';
@@ -51,6 +51,11 @@ function readPairRow(row: TableRow, above: Cell | null, context: TableContext): 
   for (const [at, cell] of row.cells.entries()) {
     const kind = kinds.of(cell);
     const place = placeOf(index.sheet, cell);
+    if (kind === 'none' && label && saysOutcome(cell)) {
+      readPairValue(cell, label, null, context);
+      label.used = true;
+      continue;
+    }
     if (kind === 'none') {
       reading.log.passOver(place, unreadReasons.noValue);
       if (label) label.used = true;

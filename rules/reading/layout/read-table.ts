@@ -18,6 +18,7 @@ import { readWritten } from './read-written';
 import type { SheetContext } from './sheet-context';
 import { isConditionKey, type TableColumn, tableColumns } from './table-columns';
 import { type RowFacts, RowKeys } from './table-rows';
+import { hasWeighings, weighingOf } from './weighings';
 
 /** Everything that speaks for a whole table. */
 export interface TableContext extends SheetContext {
@@ -30,6 +31,8 @@ export interface TableContext extends SheetContext {
   /** Said by titles over the table, and further off by the sheet. */
   far: Conditions;
   tableDomains: Domain[];
+  /** Conditions that a list of properties states in lines of its own, with the test that each stands under. */
+  scoped: { outer: string | null; at: Conditions }[];
   tableSubset: 'dry' | 'conditioned' | null;
 }
 
@@ -63,6 +66,8 @@ export function readTable(table: Table, sheet: SheetContext): void {
     return;
   }
   nameColumns(context);
+  for (const [at, title] of context.titles.entries())
+    readTitleBinder(title, table.titles[at] as Cell, context);
   readHeadBinders(context);
   const trialOf = trialsByBinder(context);
   const keys = new RowKeys(context.columns, context);
@@ -72,6 +77,7 @@ export function readTable(table: Table, sheet: SheetContext): void {
     const alone = titleOf(row, context);
     if (alone) {
       group = groupOf(alone, group);
+      readTitleBinder(alone, row.cells[0] as Cell, context);
       mark(context, row.cells[0] as Cell, 'A title within the table.');
       readWritten(row.cells[0] as Cell, context);
       continue;
@@ -118,11 +124,13 @@ function tableContext(table: Table, sheet: SheetContext): TableContext {
     number: sheet.nextTable,
     columns,
     nameKey: 'specimen',
+    scoped: [],
     titles,
     far,
     tableDomains: [...titles.toReversed().flatMap(({ domains }) => domains), ...sheet.domains],
     tableSubset: titles.findLast(({ subset }) => subset !== null)?.subset ?? sheet.subset,
   };
+  if (hasWeighings(table, sheet)) nameWeighings(context);
   context.nameKey = nameKeyOf(context);
   return context;
 }
@@ -140,6 +148,31 @@ function writtenKey(cell: Cell, { labels, decimal }: SheetContext): Conditions {
   const said: Cell = { ...cell, kind: 'text', value: match[2], text: match[2] };
   const understood = keyConditions(key, said, { labels, unit: meaning.unit, decimal });
   return understood.state === 'value' ? understood.value : {};
+}
+
+function nameWeighings(context: TableContext): void {
+  const { columns, labels } = context;
+  for (const column of columns.values()) {
+    const head = column.heads.findLast(({ kind }) => kind === 'text');
+    const quantity = head ? weighingOf(head.text) : null;
+    if (!quantity || column.kind === 'label') continue;
+    Object.assign(column, {
+      kind: 'value',
+      key: null,
+      quantities: [quantity],
+      weak: false,
+      name: null,
+      nameCell: null,
+      role: null,
+      subset: null,
+    });
+  }
+  context.labels = { read: (text) => weighed(labels.read(text)) };
+}
+
+function weighed(meaning: LabelMeaning): LabelMeaning {
+  const quantity = weighingOf(meaning.text);
+  return quantity ? { ...meaning, quantities: [quantity], weak: false, keys: [], subset: null } : meaning;
 }
 
 /** A report's title is full of words like "design"; only a short one names what stands under it. */
@@ -197,6 +230,7 @@ function nameKeyOf({ table, columns, titles, labels, kinds, tableDomains }: Tabl
 /** Sets what names over columns mean, and takes rows of keys ("Specimen | 1 | 2 | 3") for the columns' own. */
 function nameColumns(context: TableContext): void {
   const { columns, labels, decimal, nameKey, table, kinds } = context;
+  nameByCorners(context);
   for (const column of columns.values()) {
     if (column.kind !== 'value' || column.name === null || column.nameCell === null) continue;
     const key = column.nameKey ?? nameKey;
@@ -226,6 +260,12 @@ function nameColumns(context: TableContext): void {
       (cell) => cell.column > first.column && columns.get(cell.column)?.kind === 'value',
     );
     if (values.length < 1) continue;
+    const isList =
+      [...columns.values()].filter(({ kind, role }) => kind === 'value' && role === null).length === 1;
+    if (isList && values.length === 1 && key !== 'trial' && key !== 'specimen' && key !== 'blend') {
+      keepScoped(row, { key, meaning, cell: values[0] as Cell }, context);
+      continue;
+    }
     for (const cell of values) {
       const column = columns.get(cell.column) as TableColumn;
       const understood = keyConditions(key, cell, {
@@ -239,6 +279,33 @@ function nameColumns(context: TableContext): void {
     }
   }
   nameByBinder(context);
+}
+
+/** "Trial | A | A | B | B" over "Sample | 1 | 2 | 1 | 2": each row of heads says itself what it names. */
+function nameByCorners({ table, columns, kinds, labels, decimal }: TableContext): void {
+  if (table.headings.length < 2) return;
+  for (const { row, cells } of table.headings) {
+    const [corner] = cells;
+    if (!corner || kinds.of(corner) !== 'text' || columns.get(corner.column)?.kind === 'value') continue;
+    const meaning = labels.read(corner.text);
+    const key =
+      meaning.quantities.length === 0 && meaning.unknown.length === 0
+        ? meaning.keys.find(isConditionKey)
+        : undefined;
+    if (key === undefined) continue;
+    for (const column of columns.values()) {
+      if (column.kind !== 'value') continue;
+      const head = column.heads.find(
+        (cell) => cell.row === row || (cell.row < row && cell === column.nameCell),
+      );
+      if (!head || head.column === corner.column || head.row !== row) continue;
+      if (labels.read(head.text).quantities.length > 0 || labels.read(head.text).role !== null) continue;
+      const understood = keyConditions(key, head, { labels, unit: meaning.unit, decimal });
+      if (understood.state !== 'value') continue;
+      column.at = { ...understood.value, ...column.at };
+      if (column.nameCell === head) column.nameKey = key;
+    }
+  }
 }
 
 /** In a table of names, "RAP" and "Natural sand" are stockpiles and no quantities. */
@@ -344,6 +411,62 @@ function binderText(cell: Cell): string {
   return plainText(cell.text).replace(',', '.').replace(/\s*%$/, '');
 }
 
+/** In a list of properties a condition belongs to the test that it stands with. */
+function keepScoped(
+  row: TableRow,
+  { key, meaning, cell }: { key: ConditionName; meaning: LabelMeaning; cell: Cell },
+  context: TableContext,
+): void {
+  const { labels, decimal, table, columns, kinds, reading, index } = context;
+  const understood = keyConditions(key, cell, {
+    labels,
+    unit: meaning.unit ?? unitBeside(row, context),
+    decimal,
+  });
+  if (understood.state !== 'value') return;
+  reading.log.use(placeOf(index.sheet, cell), 'read', `Key: ${key}.`);
+  const outermost = [...columns.values()].find(({ kind }) => kind === 'label')?.column;
+  const outer = table.rows
+    .filter((each) => each.row <= row.row)
+    .flatMap(({ cells }) => cells.filter((each) => each.column === outermost && kinds.of(each) === 'text'))
+    .at(-1);
+  const label = row.cells.find((each) => kinds.of(each) === 'text');
+  context.scoped.push({ outer: outer && outer !== label ? outer.text : null, at: understood.value });
+}
+
+/** The families of tests that a list of properties holds: a condition without an owner fits one family only. */
+function familiesIn({ table, kinds, labels }: TableContext): Set<string> {
+  const families = new Set<string>();
+  for (const { cells } of table.rows) {
+    for (const cell of cells) {
+      if (kinds.of(cell) !== 'text') continue;
+      for (const id of labels.read(cell.text).quantities) {
+        const family = familyOf(id);
+        if (family) families.add(family);
+      }
+    }
+  }
+  return families;
+}
+
+function familyOf(id: string): string | null {
+  if (/rut|stripping|passes-to|wheel/.test(id)) return 'rutting';
+  if (/cracking|flexibility|fracture|post-peak|overlay|fatigue/.test(id)) return 'cracking';
+  if (/^creep-(?:comp|strain)|deformation$/.test(id)) return 'creep';
+  if (/modulus|phase-angle/.test(id)) return 'modulus';
+  return /flow-number|viscosity|penetration|ductility|draindown/.test(id) ? id : null;
+}
+
+function scopedConditions(labels: LabelMeaning[], context: TableContext): Conditions {
+  const found: Conditions = {};
+  const outer = labels.length > 1 ? labels[0]?.text : null;
+  for (const each of context.scoped) {
+    const belongs = each.outer === null ? familiesIn(context).size <= 1 : each.outer === outer;
+    if (belongs) Object.assign(found, each.at);
+  }
+  return found;
+}
+
 function titleOf(row: TableRow, { kinds, labels, columns }: TableContext): LabelMeaning | null {
   const [cell] = row.cells;
   if (row.cells.length !== 1 || !cell || kinds.of(cell) !== 'text') return null;
@@ -375,6 +498,20 @@ function readHeadBinders(context: TableContext): void {
       written: binder.text,
     });
   }
+}
+
+/** "Trial 1 – 4.5 % asphalt" over a table. */
+function readTitleBinder(title: LabelMeaning, cell: Cell, context: TableContext): void {
+  const { trial } = title.at;
+  if (title.binder === null || trial === undefined || title.unknown.length > 1) return;
+  context.candidates.push({
+    ...bareCandidate(context, cell),
+    quantities: ['binder-content'],
+    at: { trial },
+    unit: '%',
+    heading: title.text,
+    written: title.binder,
+  });
 }
 
 export function bareCandidate(context: TableContext, cell: Cell): Candidate {
@@ -453,7 +590,7 @@ function readRow(row: TableRow, { facts, group, labelsAt }: RowReading, context:
     const place = placeOf(index.sheet, cell);
     if (!column || reading.log.isUsed(place)) continue;
     const kind = kinds.of(cell);
-    if (kind === 'none') {
+    if (kind === 'none' && !(column.kind === 'value' && saysOutcome(cell))) {
       reading.log.passOver(place, unreadReasons.noValue);
       continue;
     }
@@ -483,6 +620,11 @@ function readRow(row: TableRow, { facts, group, labelsAt }: RowReading, context:
   }
 }
 
+/** "NP" and "none" are results of some tests and no lack of one. */
+export function saysOutcome(cell: Cell): boolean {
+  return /^(?:np|none|nil|non-?plastic)$/i.test(cell.text.trim());
+}
+
 function unitAfter(row: TableRow, cell: Cell, { kinds, labels, columns }: TableContext): string | null {
   const next = row.cells.find(({ column }) => column === cell.column + 1);
   if (!next || kinds.of(next) !== 'unit' || (columns.get(next.column)?.heads.length ?? 0) > 0) return null;
@@ -502,7 +644,7 @@ function readValue(
   { column, facts, group, labels, unit }: ValueReading,
   context: TableContext,
 ): void {
-  const isText = context.kinds.of(cell) === 'text';
+  const isText = context.kinds.of(cell) === 'text' || context.kinds.of(cell) === 'none';
   const label = labels.at(-1) ?? null;
   const role = facts.role ?? roleOf(labels) ?? column.role ?? group.meaning?.role ?? null;
   const attribute = label ? label.attribute : column.attribute;
@@ -529,11 +671,7 @@ function readValue(
     );
     return;
   }
-  if (
-    isText &&
-    !/^\s*[<>≤≥]?\s*\d/.test(cell.text) &&
-    !/^(?:np|none|nil|non-?plastic)$/i.test(cell.text.trim())
-  ) {
+  if (isText && !/^\s*[<>≤≥]?\s*\d/.test(cell.text) && !saysOutcome(cell)) {
     passOver(cell, unreadReasons.remark, context);
     return;
   }
@@ -541,7 +679,7 @@ function readValue(
     passOver(cell, unreadReasons.keyInDoubt, context);
     return;
   }
-  const at: Conditions = { ...group.at, ...column.at };
+  const at: Conditions = { ...group.at, ...scopedConditions(labels, context), ...column.at };
   for (const each of labels) Object.assign(at, each.at);
   Object.assign(
     at,

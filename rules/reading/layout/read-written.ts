@@ -11,7 +11,7 @@ export function readWritten(cell: Cell, context: TableContext): boolean {
   const meaning = context.labels.read(match[1]);
   const written = match[2].replace(/[.;]$/, '');
   if (meaning.unknown.length > 0 || meaning.role !== null) return false;
-  if (meaning.quantities.length > 0 && readsAsNumber(written)) {
+  if (meaning.quantities.length > 0 && (readsAsNumber(written) || /^\d[\d.,]*\s*[-–]\s*\d/.test(written))) {
     context.candidates.push({
       ...bareCandidate(context, cell),
       quantities: meaning.quantities,

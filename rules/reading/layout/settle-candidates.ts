@@ -7,6 +7,7 @@ import { type Alternative, doubtOf, type Understood } from '../settled';
 import { readingInWords } from '../take-words';
 import { type NumberValue, understandNumber } from '../understand-number';
 import { unreadReasons } from '../unread-reason';
+import type { Domain } from '../words/context-words';
 import { acceptedConditions } from './accepted-conditions';
 import type { Candidate } from './candidate';
 import { decideGradations } from './decide-gradations';
@@ -27,7 +28,9 @@ export interface SettleOptions {
 
 /** From candidates of the whole workbook to readings, doubts and cells that are passed over. */
 export function settleCandidates(candidates: Candidate[], options: SettleOptions): void {
-  const assigned = candidates.map((candidate): Assigned => {
+  const neighbours = domainsOfTables(candidates, options.find);
+  const assigned = candidates.map((each): Assigned => {
+    const candidate = { ...each, domains: [...each.domains, ...(neighbours.get(each.table) ?? [])] };
     const choices = resolveQuantities(candidate, options.find);
     const [first] = choices;
     return { ...candidate, choices, conditions: first ? acceptedConditions(candidate, first) : {} };
@@ -39,6 +42,25 @@ export function settleCandidates(candidates: Candidate[], options: SettleOptions
   const suspected = suspicions(kept, options);
   const formulas = new Set<string>();
   for (const each of kept) emit(each, { ...options, suspected, formulas });
+}
+
+/** What the unmistakable headings of a table say about its others. */
+function domainsOfTables(candidates: Candidate[], find: FindQuantity): Map<number, Domain[]> {
+  const counts = new Map<number, { aggregate: number; mix: number }>();
+  for (const { table, quantities } of candidates) {
+    const subject = quantities.length === 1 ? find(quantities[0] as string)?.subject : undefined;
+    if (subject === undefined || subject === 'binder') continue;
+    const count = counts.get(table) ?? { aggregate: 0, mix: 0 };
+    if (subject === 'aggregate') count.aggregate += 1;
+    else count.mix += 1;
+    counts.set(table, count);
+  }
+  return new Map(
+    [...counts].map(([table, { aggregate, mix }]) => [
+      table,
+      aggregate > 0 && mix === 0 ? ['aggregate'] : mix > 0 && aggregate === 0 ? ['mix'] : [],
+    ]),
+  );
 }
 
 /** Weighings for the maximum gravity or for an aggregate's are no weighings of a compacted specimen. */
@@ -163,11 +185,17 @@ function emit(each: Assigned, options: EmitOptions): void {
     log.passOver(place, unreadReasons.notRecognised);
     return;
   }
+  const lacking = lackingKey(quantity.id, conditions);
+  if (lacking === 'stockpile' || lacking === 'sieve') {
+    log.passOver(place, lacking === 'stockpile' ? unreadReasons.total : unreadReasons.notRecognised);
+    return;
+  }
   if (choices.length > 1) {
     emitAmbiguous(each, place, options);
     return;
   }
-  const understood = suspicious(each, quantity, understandAs(each, quantity, options), options);
+  const plain = suspicious(each, quantity, understandAs(each, quantity, options), options);
+  const understood = lacking === 'time' && plain.state === 'value' ? timeUnknown(plain.value) : plain;
   if (understood.state === 'blank' || understood.state === 'none') {
     log.passOver(place, unreadReasons.noValue);
     return;
@@ -188,6 +216,21 @@ function emit(each: Assigned, options: EmitOptions): void {
   if (settled.state !== 'value') return;
   const reading = build(settled.value);
   log.readings.push({ reading, place, taken: takenWords(each, reading, quantity) });
+}
+
+/** A share of no stockpile, a percentage on no sieve and a creep value at no time say nothing. */
+function lackingKey(id: string, at: Conditions): 'stockpile' | 'sieve' | 'time' | null {
+  if (id === 'stockpile-share') return at.stockpile === undefined ? 'stockpile' : null;
+  if (id === 'percent-passing' || id.endsWith('percent-retained'))
+    return at.sieve === undefined ? 'sieve' : null;
+  const isTimed = id === 'creep-compliance' || id === 'creep-strain' || id.endsWith('-deformation');
+  return isTimed && at.time === undefined ? 'time' : null;
+}
+
+function timeUnknown(value: NumberValue): Understood<NumberValue> {
+  return doubtOf('does not say at which loading time it was taken', [
+    { answer: 'as it stands', label: 'As it stands', value },
+  ]);
 }
 
 function takenWords(each: Assigned, reading: Reading, quantity: Quantity): string {

@@ -7,7 +7,7 @@ import { plainText } from '../plain-text';
 import type { SheetIndex } from '../sheet-index';
 import type { Domain } from '../words/context-words';
 import type { DocumentPart, KeyName, Role } from '../words/key-words';
-import type { Surroundings, Table } from './find-tables';
+import { type Surroundings, saysCondition, type Table } from './find-tables';
 import type { LabelMeaning } from './label-meaning';
 import { isMaterial } from './materials';
 
@@ -186,7 +186,8 @@ function groupHead(
 }
 
 function columnUnder(column: number, heads: Cell[], { kinds, labels }: Surroundings): TableColumn {
-  const texts = heads.filter((cell) => kinds.of(cell) === 'text');
+  const isWords = (cell: Cell) => kinds.of(cell) === 'text' || saysCondition(cell, { kinds, labels });
+  const texts = heads.filter(isWords);
   const meanings = texts.map(({ text }) => labels.read(text));
   const result: TableColumn = {
     column,
@@ -269,8 +270,8 @@ function nameColumn(
   meanings: LabelMeaning[],
   { kinds, labels }: Surroundings,
 ): void {
-  const lowest = heads.findLast((cell) => kinds.of(cell) !== 'unit');
-  if (!lowest) return;
+  const lowest = heads.findLast((cell) => kinds.of(cell) !== 'unit' && kinds.of(cell) !== 'none');
+  if (!lowest || saysCondition(lowest, { kinds, labels })) return;
   const upperKey = meanings
     .slice(0, kinds.of(lowest) === 'text' ? -1 : undefined)
     .flatMap(({ keys, quantities }) => (quantities.length === 0 ? keys : []))

@@ -46,7 +46,7 @@ export const volumetricWords: Record<string, string> = {
   'dust-proportion': `DP | D/B | F/A | dust proportion | dust ratio | dust to binder | dust/binder | dust to binder ratio | dust to effective binder |
     dust to effective binder ratio | dust to effective asphalt | dust to asphalt | dust to asphalt ratio | dust/asphalt | dust/AC | dust to AC ratio |
     filler to binder | filler/binder ratio | filler/bitumen ratio | filler bitumen ratio | fines to effective asphalt | fines/effective asphalt |
-    P200/Pbe | P0.075/Pbe | -200/Pbe | Fuller Bindemittel Verhaltnis | Fuller/Bindemittel | rapport filler/liant | rapport fines/bitume |
+    P200/Pbe | dust/Pbe | dust to Pbe | fines/Pbe | P0.075/Pbe | P075/Pbe | -200/Pbe | Fuller Bindemittel Verhaltnis | Fuller/Bindemittel | rapport filler/liant | rapport fines/bitume |
     rapport filler/bitume | relacion polvo/asfalto | relacion filler/ligante | relacion polvo asfalto efectivo | relacion filler/betun | polvo/asfalto |
     proporcion de polvo`,
   'film-thickness': `AFT | film thickness | apparent film thickness | binder film thickness | asphalt film thickness | avg film thickness |
