@@ -2,6 +2,7 @@ import type { Quantity } from '#rules/quantities/quantity';
 import { countOf, formatPlain, groupThousands } from '#shared/format/numbers';
 import { Formula } from './formula';
 import { QuantitySymbol } from './quantity-symbol';
+import { Sideways } from './sideways';
 import './quantity-table.css';
 
 export interface QuantityRow {
@@ -15,7 +16,7 @@ export interface QuantityRow {
 /** Entries of the registry, or those that a rule set declares: unit, range, methods, formula and source of each. */
 export function QuantityTable({ caption, rows }: { caption: string; rows: readonly QuantityRow[] }) {
   return (
-    <div className="sideways quantity-frame">
+    <Sideways label={caption} className="quantity-frame">
       <table className="table quantity-table">
         <caption className="hidden-text">{caption}</caption>
         <thead>
@@ -70,7 +71,7 @@ export function QuantityTable({ caption, rows }: { caption: string; rows: readon
           ))}
         </tbody>
       </table>
-    </div>
+    </Sideways>
   );
 }
 

@@ -1,6 +1,7 @@
 import { Link } from 'react-router-dom';
 import type { RuleSetView, TableView } from '#shared/contracts/rule-sets';
 import { slug } from '#shared/format/finding-key';
+import { Sideways } from '../../../components/ui/sideways';
 
 /** Limits keyed by attributes, as printed; a row that a layer changed shows what stood there. */
 export function LimitTable({ table, view }: { table: TableView; view: RuleSetView }) {
@@ -20,7 +21,7 @@ export function LimitTable({ table, view }: { table: TableView; view: RuleSetVie
           ))}
         </span>
       </p>
-      <div className="sideways">
+      <Sideways label={table.title}>
         <table className="table">
           <caption className="hidden-text">{table.title}</caption>
           <thead>
@@ -63,7 +64,7 @@ export function LimitTable({ table, view }: { table: TableView; view: RuleSetVie
             ))}
           </tbody>
         </table>
-      </div>
+      </Sideways>
     </section>
   );
 }

@@ -7,6 +7,7 @@ import { PlainPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { SectionHead } from '../../../components/ui/section-head';
+import { Sideways } from '../../../components/ui/sideways';
 import { paths } from '../../../lib/paths';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { ruleSetsQuery } from '../api/get-rule-sets';
@@ -54,7 +55,7 @@ function EditionTable({
   titles: ReadonlyMap<string, string>;
 }) {
   return (
-    <div className="sideways">
+    <Sideways label={`Editions of ${ruleSetId}`}>
       <table className="table table-head-over edition-table">
         <caption className="hidden-text">Editions of {ruleSetId}</caption>
         <thead>
@@ -88,7 +89,7 @@ function EditionTable({
           ))}
         </tbody>
       </table>
-    </div>
+    </Sideways>
   );
 }
 
