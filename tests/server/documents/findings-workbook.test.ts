@@ -10,6 +10,17 @@ async function opened(bytes: Buffer): Promise<exceljs.Workbook> {
   return workbook;
 }
 
+const room = {
+  answer: 'A binder content of 5.10 to 5.51 % meets the one rule that can be followed.',
+  lines: [{ clause: '412.03(b)', title: 'VMA', limit: 'at least 14.0 %', holds: '5.10 to 5.51 %' }],
+  notes: ['Read between four trials.'],
+};
+
+function columnHeadings(sheet: exceljs.Worksheet | undefined): string[] {
+  const values = sheet?.getRow(1).values;
+  return Array.isArray(values) ? values.slice(1).map(String) : [];
+}
+
 describe('the findings workbook', () => {
   it('holds every finding as a row, with numbers as numbers', async () => {
     const findings = [
@@ -23,6 +34,39 @@ describe('the findings workbook', () => {
     expect(sheet?.getRow(2).getCell(5).value).toBe('fail');
     expect(sheet?.getRow(2).getCell(12).value).toBe(-0.1);
     expect(sheet?.getRow(3).getCell(1).value).toBe('412.02(a)');
+  });
+
+  it('says why each limit, what would pass and what would decide, and gives the room to move a sheet', async () => {
+    const findings = [
+      aFinding({ outcome: 'fail' }),
+      aFinding({ rule: 'cav', outcome: 'undecided', wouldDecide: 'Answer the doubt at Trials E9.' }),
+    ];
+    const way = { quantity: 'binder-content', name: 'Pb', unit: '%', present: 5.3, from: 5.4, to: null };
+    const explanations = {
+      'vma~design point': {
+        whyThisLimit: 'Nominal maximum aggregate size 12.5 mm: Table 412-2 gives the limit.',
+        toPass: [{ ...way, words: 'Pb of 5.40 % or more instead of 5.30' }],
+      },
+    };
+    const workbook = await opened(
+      await renderFindingsWorkbook(aDocumentInput({ findings, explanations, room })),
+    );
+    const rows = workbook.getWorksheet('Findings');
+    const headings = columnHeadings(rows);
+    const cell = (row: number, heading: string) =>
+      rows?.getRow(row).getCell(headings.indexOf(heading) + 1).value;
+    expect(cell(2, 'Why this limit')).toMatch(/^Nominal maximum aggregate size 12\.5 mm/);
+    expect(cell(2, 'To pass')).toBe('Pb of 5.40 % or more instead of 5.30.');
+    expect(cell(3, 'What would decide it')).toBe('Answer the doubt at Trials E9.');
+    const sheet = workbook.getWorksheet('Room to move');
+    expect(sheet?.getRow(1).getCell(1).value).toBe(room.answer);
+    expect(sheet?.getRow(4).values).toEqual([
+      undefined,
+      '412.03(b)',
+      'VMA',
+      'at least 14.0 %',
+      '5.10 to 5.51 %',
+    ]);
   });
 
   it.each(['=HYPERLINK("http://x.example")', '+1+1', '-2+3', '@SUM(A1)', '\t=1'])(

@@ -76,6 +76,37 @@ describe('the letter of a return', () => {
     expect(pages[1]).toContain(`2 of ${pages.length}`);
   });
 
+  it('ends with the room to move, after what is for information', async () => {
+    const room = {
+      answer: 'A binder content of 5.10 to 5.51 % meets the one rule that can be followed.',
+      lines: [{ clause: '412.03(b)', title: 'VMA', limit: 'at least 14.0 %', holds: '5.10 to 5.51 %' }],
+      notes: ['Read between four trials.'],
+    };
+    const text = textOf(await renderPdf(letterDefinition(aDocumentInput({ findings, room })))).replace(
+      /\s+/g,
+      ' ',
+    );
+    expect(text).toMatch(/Put right.*Room to move.*412\.03\(b\) VMA at least 14\.0 % 5\.10 to 5\.51 %/);
+    expect(text).toContain(room.answer);
+    const without = textOf(await renderPdf(letterDefinition(aDocumentInput({ findings }))));
+    expect(without).not.toContain('Room to move');
+  });
+
+  it('says what would pass and what would decide beside the finding', async () => {
+    const input = aDocumentInput({
+      findings: [
+        aFinding({ outcome: 'fail' }),
+        aFinding({ rule: 'b', outcome: 'undecided', wouldDecide: 'Answer the doubt at Trials E9.' }),
+      ],
+    });
+    const items = input.items.map((item, place) =>
+      place === 0 ? { ...item, toPass: 'Gmb of 2.431 or less instead of 2.442.' } : item,
+    );
+    const text = textOf(await renderPdf(letterDefinition({ ...input, items }))).replace(/\s+/g, ' ');
+    expect(text).toContain('To pass: Gmb of 2.431 or less instead of 2.442.');
+    expect(text).toContain('What would decide it: Answer the doubt at Trials E9.');
+  });
+
   it('says the cautions and that the rule set is a starting point', async () => {
     const text = textOf(await renderPdf(letterDefinition(aDocumentInput({ findings })))).replace(/\s+/g, ' ');
     expect(text).toContain('Findings assist a qualified person and decide nothing by themselves.');
