@@ -115,6 +115,7 @@ function blendValues(index: RecordIndex, trials: Trial[]): RecomputedValue[] {
 
 /** The agency's own specimens, never mixed with the contractor's. */
 function agencyValues(record: MixRecord): RecomputedValue[] {
+  if (!record.readings.some(({ at }) => at.laboratory === 'agency')) return [];
   const index = indexRecord(record, 'agency');
   const aggregateOf = aggregates(index, blendChoice(record, index));
   const trials = [designTrial, ...index.trials].map((trial) => trialValues(index, trial, aggregateOf(trial)));

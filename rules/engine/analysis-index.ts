@@ -21,6 +21,16 @@ export interface RecordIndex {
 }
 
 export function indexRecord(record: MixRecord, laboratory: Laboratory): RecordIndex {
+  const ofRecord = indexes.get(record) ?? {};
+  indexes.set(record, ofRecord);
+  ofRecord[laboratory] ??= newIndex(record, laboratory);
+  return ofRecord[laboratory];
+}
+
+/** A record does not change; analysis and consistency look at the same one. */
+const indexes = new WeakMap<MixRecord, Partial<Record<Laboratory, RecordIndex>>>();
+
+function newIndex(record: MixRecord, laboratory: Laboratory): RecordIndex {
   const byQuantity = new Map<string, Reading[]>();
   const byTrial = new Map<string, Reading[]>();
   const trials = new Set<string>();

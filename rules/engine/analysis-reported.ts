@@ -7,6 +7,7 @@ import { halfDisplayedUnit } from './analysis-digits';
 import { designTrial, isSpecial, type RecordIndex, specialKey, withoutGaps } from './analysis-index';
 import { type AnalysisNode, evidenceOf } from './analysis-node';
 import { propagatedHalfUnits } from './analysis-slopes';
+import type { Evidence } from './finding';
 
 /** Finds what the workbook itself states for a computed value and keeps it with the value. */
 export function attachReported(node: AnalysisNode, index: RecordIndex): void {
@@ -60,6 +61,9 @@ function recomputedValue(
   const allowed = reported === null ? null : toleranceOf(node, reported);
   const agrees = reported === null || allowed === null ? null : allowed.includes();
   const laboratory = index.laboratory === 'agency' ? ('agency' as const) : undefined;
+  // The thread to the cells and the search for a cause are dear, and most values are never asked for either.
+  let inputs: Evidence[] | undefined;
+  let cause: NamedCause | null | undefined;
   return {
     quantity: node.quantity,
     at: withoutGaps({ ...node.at, laboratory }),
@@ -68,7 +72,10 @@ function recomputedValue(
     origin: node.origin === 'interpolated' || node.origin === 'converted' ? node.origin : 'recomputed',
     symbol: node.symbol,
     formula: node.formula ?? '',
-    inputs: node.inputs.map(evidenceOf),
+    get inputs() {
+      inputs ??= node.inputs.map(evidenceOf);
+      return inputs;
+    },
     count: node.count ?? 1,
     specimens: node.specimens.map(({ at, value }) => ({ specimen: at.specimen ?? '', value })),
     reported,
@@ -76,7 +83,11 @@ function recomputedValue(
       return allowed === null ? null : allowed.tolerance();
     },
     agrees,
-    cause: agrees === false ? causeFor(node, reported!, trialNodes, ofSpecimens) : null,
+    get cause() {
+      if (cause === undefined)
+        cause = agrees === false ? causeFor(node, reported!, trialNodes, ofSpecimens) : null;
+      return cause;
+    },
     node,
   };
 }

@@ -26,7 +26,15 @@ export type FactOf = (comparison: LeafComparison) => Fact;
  */
 export function decide(condition: Condition | LimitCondition, factOf: FactOf): Truth {
   const parsed = parse(condition);
-  const atBest = holds(parsed, factOf, true);
+  let hasUnknown = false;
+  const watched: FactOf = (comparison) => {
+    const fact = factOf(comparison);
+    if (fact.kind !== 'value') hasUnknown = true;
+    return fact;
+  };
+  const atBest = holds(parsed, watched, true);
+  // A walk that met no unknown fact goes the same way whatever unknown facts count as.
+  if (!hasUnknown) return atBest ? 'true' : 'false';
   const atWorst = holds(parsed, factOf, false);
   return atBest === atWorst ? (atBest ? 'true' : 'false') : 'unknown';
 }
@@ -35,6 +43,20 @@ export function decide(condition: Condition | LimitCondition, factOf: FactOf): T
 export interface LimitCondition {
   all: { fact: 'judged'; operator: LimitOperator; value: unknown }[];
 }
+
+/** Being among allowed values, as a condition; the rules engine reads each list once. */
+export function listCondition(allowed: readonly Scalar[]): LimitCondition {
+  const key = JSON.stringify(allowed);
+  const kept = lists.get(key);
+  if (kept) return kept;
+  const condition: LimitCondition = { all: [{ fact: 'judged', operator: 'oneOf', value: allowed }] };
+  if (lists.size >= KEPT_LISTS) lists.clear();
+  lists.set(key, condition);
+  return condition;
+}
+
+const KEPT_LISTS = 500;
+const lists = new Map<string, LimitCondition>();
 
 export type LimitOperator = 'atLeast' | 'moreThan' | 'atMost' | 'lessThan' | 'oneOf';
 

@@ -4,7 +4,7 @@ import type { AttributeMeasure } from '../rule-sets/measure';
 import type { ResolvedRule } from '../rule-sets/resolve';
 import { orList } from '../rule-sets/words';
 import { attributeEvidence, attributeFact, attributeText } from './attribute-fact';
-import { satisfies } from './decide';
+import { listCondition, satisfies } from './decide';
 import { distanceWords } from './distance-words';
 import type { Finding, Observed, ResolvedLimit } from './finding';
 import { judge, rounderOf } from './judge';
@@ -65,9 +65,7 @@ function ofList(
   const written = limit.oneOf ?? [];
   // An allowed value may be written by its label or an alias: it means the attribute's own value.
   const allowed = written.map((each) => (attribute ? (matchValue(attribute, each) ?? each) : each));
-  const isAllowed =
-    fact.kind === 'value' &&
-    satisfies({ all: [{ fact: 'judged', operator: 'oneOf', value: allowed }] }, fact.value);
+  const isAllowed = fact.kind === 'value' && satisfies(listCondition(allowed), fact.value);
   const words = attribute ? allowed.map((each) => attributeText(world, measure.attribute, each)) : written;
   const reason = isAllowed
     ? `${capitalise(base.observed.text)} is among the allowed values.`

@@ -58,6 +58,9 @@ export function conditionsOfSubjects(
   world: World,
   { quantity, at }: { quantity: string; at: Conditions },
 ): Conditions[] {
+  const splitsBySieve =
+    at.sieve === undefined && (world.view.quantity(quantity)?.conditions.includes('sieve') ?? false);
+  if (at.stockpile !== 'each' && !splitsBySieve) return [at];
   const ofLaboratory = conditionsOf(world, quantity).filter(
     ({ laboratory = 'contractor' }) => laboratory === (at.laboratory ?? 'contractor'),
   );
@@ -67,8 +70,7 @@ export function conditionsOfSubjects(
     const stockpiles = [...new Set(names)].toSorted(naturalOrder);
     if (stockpiles.length > 0) subjects = stockpiles.map((stockpile) => ({ ...at, stockpile }));
   }
-  const splitsBySieve = world.view.quantity(quantity)?.conditions.includes('sieve') ?? false;
-  if (!splitsBySieve || at.sieve !== undefined) return subjects;
+  if (!splitsBySieve) return subjects;
   return subjects.flatMap((subject) => {
     const matching = ofTrial(
       ofLaboratory.filter(({ stockpile }) => stockpile === subject.stockpile),

@@ -67,7 +67,7 @@ function settledWorld(input: {
 
 /** The analysis with the edition's own tolerances between reported and recomputed values. */
 function analysisOf(record: MixRecord, edition: ResolvedEdition): Analysis {
-  const analysis = analyse(record, edition.designPoint);
+  const analysis = analysisBy(record, edition.designPoint);
   const { reportedTolerance } = edition;
   if (Object.keys(reportedTolerance).length === 0) return analysis;
   return {
@@ -75,6 +75,18 @@ function analysisOf(record: MixRecord, edition: ResolvedEdition): Analysis {
     recomputed: analysis.recomputed.map((value) => withTolerance(value, reportedTolerance)),
   };
 }
+
+/** The analysis of a record rests on the design point only: editions that agree on it share one. */
+function analysisBy(record: MixRecord, { targetAirVoids, fit }: ResolvedEdition['designPoint']): Analysis {
+  const ofRecord = analyses.get(record) ?? new Map<string, Analysis>();
+  analyses.set(record, ofRecord);
+  const key = `${targetAirVoids} ${fit}`;
+  const kept = ofRecord.get(key) ?? analyse(record, { targetAirVoids, fit });
+  ofRecord.set(key, kept);
+  return kept;
+}
+
+const analyses = new WeakMap<MixRecord, Map<string, Analysis>>();
 
 function withTolerance(value: RecomputedValue, tolerances: Record<string, number>): RecomputedValue {
   const tolerance = tolerances[value.quantity];
@@ -101,7 +113,9 @@ function recomputedReading(value: RecomputedValue): RecomputedReading {
     origin: value.origin,
     source: null,
     formula: value.formula,
-    inputs: value.inputs,
+    get inputs() {
+      return value.inputs;
+    },
     reported: value.reported?.value ?? null,
   };
 }

@@ -1,4 +1,5 @@
 import Decimal from 'decimal.js';
+import { decimalDifference } from '../numerics/decimal-sum';
 import { decimalsOf, formatDecimals, type RoundingMethod, roundTo } from '../numerics/round';
 import type { Conditions } from '../record';
 import type { ResolvedRule } from '../rule-sets/resolve';
@@ -78,8 +79,8 @@ export function judge(judgeable: Judgeable, limit: ResolvedLimit, rounder: Round
 
 /** Signed distance to the nearest limit, positive inside, in decimal arithmetic. */
 export function marginOf(value: number, limit: Pick<ResolvedLimit, 'min' | 'max'>): number | null {
-  const above = limit.min === null ? null : new Decimal(value).minus(limit.min).toNumber();
-  const below = limit.max === null ? null : new Decimal(limit.max).minus(value).toNumber();
+  const above = limit.min === null ? null : decimalDifference(value, limit.min);
+  const below = limit.max === null ? null : decimalDifference(limit.max, value);
   if (above === null) return below;
   if (below === null) return above;
   return Math.min(above, below);

@@ -16,12 +16,19 @@ export interface FoundRow {
   keys: Record<string, string>;
 }
 
+export type RowResult = { ok: true; found: FoundRow } | Obstacle;
+
 /** The one row of a table that matches this mix (and sieve); no such row leaves the rule undecided. */
-export function findRow(
-  world: World,
-  tableId: string,
-  at: Conditions,
-): { ok: true; found: FoundRow } | Obstacle {
+export function findRow(world: World, tableId: string, at: Conditions): RowResult {
+  const key = `${tableId} ${at.sieve ?? ''}`;
+  const kept = world.rows.get(key);
+  if (kept) return kept;
+  const result = oneRow(world, tableId, at);
+  world.rows.set(key, result);
+  return result;
+}
+
+function oneRow(world: World, tableId: string, at: Conditions): RowResult {
   const rows = matchingRows(world, tableId, { sieve: at.sieve });
   if (!rows.ok) return rows;
   const [found, ...others] = rows.found;

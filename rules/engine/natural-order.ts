@@ -1,5 +1,6 @@
 /** Text with its numbers compared as numbers: 412.2 before 412.10, 412.03(b) before 412.03(k). */
 export function naturalOrder(left: string, right: string): number {
+  if (left === right) return 0;
   const a = partsOf(left);
   const b = partsOf(right);
   for (let i = 0; i < Math.max(a.length, b.length); i += 1) {
@@ -13,9 +14,18 @@ export function naturalOrder(left: string, right: string): number {
   return left < right ? -1 : left > right ? 1 : 0;
 }
 
+/** Clauses and subjects are compared again and again while a list is sorted. */
 function partsOf(text: string): string[] {
-  return text.match(/\d+|[a-z]+|[^a-z\d]+/gi) ?? [];
+  const kept = partsByText.get(text);
+  if (kept) return kept;
+  const parts = text.match(/\d+|[a-z]+|[^a-z\d]+/gi) ?? [];
+  if (partsByText.size >= KEPT_TEXTS) partsByText.clear();
+  partsByText.set(text, parts);
+  return parts;
 }
+
+const KEPT_TEXTS = 2000;
+const partsByText = new Map<string, string[]>();
 
 function compareParts(one: string, other: string): number {
   const areNumbers = /^\d/.test(one) && /^\d/.test(other);

@@ -38,10 +38,10 @@ export function precisionOf(input: {
   };
 }
 
-/** |margin| within the precision, in decimals, exactly as the whisker is drawn. */
+/** |margin|, which is a decimal difference, within the precision, exactly as the whisker is drawn. */
 export function isBorderline(margin: number | null, precision: UsedPrecision | null): boolean {
   if (margin === null || precision === null) return false;
-  return new Decimal(margin).abs().lessThanOrEqualTo(precision.value);
+  return Math.abs(margin) <= precision.value;
 }
 
 function originWords(source: string, origin: string): string {

@@ -47,6 +47,18 @@ export type SampleResult = { ok: true; sample: Sample } | Obstacle;
  * analysis could; else the readings as they are.
  */
 export function takeSample(world: World, request: SampleRequest): SampleResult {
+  const isFiltered = request.where !== undefined && request.where.length > 0;
+  if (isFiltered || request.toCompare) return explainedSample(world, request);
+  const key = `${request.quantity} ${JSON.stringify(request.at)}`;
+  const kept = world.samples.get(key);
+  if (kept) return kept;
+  const result = explainedSample(world, request);
+  world.samples.set(key, result);
+  return result;
+}
+
+/** Where nothing is shown, with what is missing for computing it. */
+function explainedSample(world: World, request: SampleRequest): SampleResult {
   const taken = chooseSample(world, request);
   if (taken.ok || taken.outcome !== 'not shown') return taken;
   const missing = missingForComputing(world, request, (other) => chooseSample(world, other).ok);

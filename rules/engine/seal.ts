@@ -1,6 +1,6 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
-import type { CheckContext, MixRecord } from '../record';
+import type { CheckContext, MixRecord, Reading } from '../record';
 import type { ResolvedEdition } from '../rule-sets/resolve';
 import { canonicalText } from './canonical-text';
 import { ENGINE_VERSION } from './engine-version';
@@ -34,8 +34,15 @@ export function sealOf({
 
 /** Who typed a value and when is kept beside the record, not in its hash. */
 export function recordHash(record: MixRecord): string {
-  return hashOf(withoutTyped(record));
+  const kept = recordHashes.get(record);
+  if (kept !== undefined) return kept;
+  const hash = hashOf(withoutTyped(record));
+  recordHashes.set(record, hash);
+  return hash;
 }
+
+/** A record does not change, and may be judged by several editions. */
+const recordHashes = new WeakMap<MixRecord, string>();
 
 /** Cases prove an edition; they are not part of what a record is judged by. */
 export function resolvedEditionHash(edition: ResolvedEdition): string {
@@ -60,8 +67,12 @@ function withoutTyped(record: MixRecord): unknown {
     attributes: Object.fromEntries(
       Object.entries(record.attributes).map(([name, { typed: _typed, ...attribute }]) => [name, attribute]),
     ),
-    readings: record.readings.map(({ typed: _typed, ...reading }) => reading),
+    readings: record.readings.map((reading) => (reading.typed === undefined ? reading : untyped(reading))),
   };
+}
+
+function untyped({ typed: _typed, ...reading }: Reading): Omit<Reading, 'typed'> {
+  return reading;
 }
 
 /** What was decided, without any sentence. */

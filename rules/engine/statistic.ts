@@ -1,4 +1,4 @@
-import Decimal from 'decimal.js';
+import { decimalMean } from '../numerics/decimal-sum';
 import { trimmedMean } from '../numerics/mean';
 import { percentWithinLimits } from '../numerics/percent-within-limits';
 import { range, sampleStandardDeviation } from '../numerics/spread';
@@ -79,8 +79,7 @@ function exactMean(values: readonly number[]): { ok: true; value: number } | Obs
   if (values.length === 0 || values.some((value) => !Number.isFinite(value))) {
     return undecided('One of the values is not a number.');
   }
-  const sum = values.reduce((total, value) => total.plus(value), new Exact(0));
-  return { ok: true, value: sum.div(values.length).toNumber() };
+  return { ok: true, value: decimalMean(values) };
 }
 
 function ofNumbers(
@@ -169,5 +168,3 @@ function numeric(result: { ok: true; value: number } | { ok: false; reason: stri
     ? plain(result.value)
     : undecided(`${result.reason.charAt(0).toUpperCase()}${result.reason.slice(1)}.`);
 }
-
-const Exact = Decimal.clone({ precision: 40 });

@@ -5,7 +5,9 @@ import { viewOf } from '../rule-sets/edition-view';
 import type { ResolvedEdition, ResolvedTable } from '../rule-sets/resolve';
 import type { Analysis, RecomputedValue } from './analysis';
 import type { Fact } from './decide';
+import type { RowResult } from './look-up';
 import type { Obstacle } from './obstacle';
+import type { SampleResult } from './sample';
 
 /** A reading as the engine uses it: in the canonical unit, or with the reason why it cannot be used. */
 export interface UsableReading {
@@ -15,6 +17,11 @@ export interface UsableReading {
   fault: string | null;
 }
 
+/** Readings by quantity; each quantity is made ready when a rule first asks for it. */
+export interface UsableReadings {
+  get(quantity: string): UsableReading[] | undefined;
+}
+
 /** Everything that the rules of one check look at, indexed once. */
 export interface World {
   record: MixRecord;
@@ -22,13 +29,16 @@ export interface World {
   view: EditionView;
   context: CheckContext;
   analysis: Analysis;
-  readings: Map<string, UsableReading[]>;
+  readings: UsableReadings;
   recomputed: Map<string, RecomputedValue[]>;
   /** The blend that the job mix names, `several` where it does not say which of several. */
   designBlend: string | null | 'several';
   tables: ReadonlyMap<string, ResolvedTable>;
   /** Attributes as far as they have been asked for. */
   facts: Map<string, Fact>;
+  /** Samples and table rows as far as they have been asked for: many rules look at the same ones. */
+  samples: Map<string, SampleResult>;
+  rows: Map<string, RowResult>;
   /** Findings that an unanswered doubt could turn, by key, each with the reason. */
   unsettled: ReadonlyMap<string, Obstacle>;
   /** Filled while rules are judged: computed values whose reported counterpart has another outcome. */
@@ -43,22 +53,36 @@ export function worldOf(input: {
   unsettled?: ReadonlyMap<string, Obstacle>;
 }): World {
   const view = viewOf(input.edition);
-  const readings = new Map<string, UsableReading[]>();
-  for (const reading of input.record.readings) {
-    push(readings, reading.quantity, usable(reading, view.quantity(reading.quantity)?.unit ?? reading.unit));
-  }
   const recomputed = new Map<string, RecomputedValue[]>();
   for (const value of input.analysis.recomputed) push(recomputed, value.quantity, value);
   return {
     unsettled: new Map(),
     ...input,
     view,
-    readings,
+    readings: usableReadings(input.record, view),
     recomputed,
     designBlend: designBlendOf(input.record),
     tables: new Map(input.edition.tables.map((table) => [table.id, table])),
     facts: new Map(),
+    samples: new Map(),
+    rows: new Map(),
     contradicted: new Set(),
+  };
+}
+
+function usableReadings(record: MixRecord, view: EditionView): UsableReadings {
+  const stated = new Map<string, Reading[]>();
+  for (const reading of record.readings) push(stated, reading.quantity, reading);
+  const ready = new Map<string, UsableReading[]>();
+  return {
+    get: (quantity) => {
+      const kept = ready.get(quantity);
+      if (kept) return kept;
+      const unit = view.quantity(quantity)?.unit;
+      const readings = stated.get(quantity)?.map((reading) => usable(reading, unit ?? reading.unit));
+      if (readings) ready.set(quantity, readings);
+      return readings;
+    },
   };
 }
 
