@@ -250,3 +250,25 @@ describe('matching a stated value', () => {
     expect(normaliseText('Mix')).toBe('mix');
   });
 });
+
+describe('a list of allowed words', () => {
+  const grades = (oneOf: string[], binderGrade: string) =>
+    findingOf({
+      rule: { measure: { kind: 'attribute', attribute: 'binderGrade' }, limit: { oneOf } },
+      record: { attributes: { binderGrade: { value: binderGrade, origin: 'reported' } } },
+    });
+
+  it('is "one of" where there are several, in the rule and in the requirement', () => {
+    const finding = grades(['PG 58-28', 'PG 64-22', 'PG 70-22'], 'PG 52-28');
+    expect(finding.ruleSentence).toBe('Binder grade is one of PG 58-28, PG 64-22 or PG 70-22.');
+    expect(finding.requirement).toBe('Binder grade is one of PG 58-28, PG 64-22 or PG 70-22.');
+    expect(finding.sentence).toBe('Binder grade is PG 52-28, allowed PG 58-28, PG 64-22 or PG 70-22.');
+  });
+
+  it('is the word itself where there is one', () => {
+    const finding = grades(['PG 64-22'], 'PG 64-22');
+    expect(finding.ruleSentence).toBe('Binder grade is PG 64-22.');
+    expect(finding.requirement).toBe('Binder grade is PG 64-22.');
+    expect(finding.sentence).toBe('Binder grade is PG 64-22, allowed PG 64-22.');
+  });
+});

@@ -186,6 +186,25 @@ describe('the check on the command line', () => {
       /empty\.json cannot be used/,
     ],
     [
+      'a formula with a symbol that is not known',
+      () => {
+        const rule = {
+          id: 'gse-over-gsb',
+          clause: '412.03(x)',
+          title: 'Effective over bulk gravity',
+          severity: 'required',
+          measure: { kind: 'formula', expression: 'Gse - Gxx' },
+          limit: { min: 0 },
+        };
+        return [
+          '--rules',
+          file('formula.json', { ...edition2026, cases: [], rules: [rule], roomToMove: [] }),
+          'x.xlsx',
+        ];
+      },
+      /Rule gse-over-gsb: in the formula "Gse - Gxx", the symbol Gxx is not known/,
+    ],
+    [
       'a layer on its own',
       () => ['--rules', 'rules/sets/cvra-412-s07-2026.json', 'x.xlsx'],
       /is a layer of cvra-412, edition 2026, and cannot stand alone/,
