@@ -48,6 +48,56 @@ describe('the findings page', () => {
     expect(link.getAttribute('href')).toBe(`${at}#vma~design-point`);
   });
 
+  it('says in the thread why this limit, what would pass and what would decide', async () => {
+    const undecided = aFinding({
+      rule: 'tsr',
+      clause: '412.05(a)',
+      outcome: 'undecided',
+      margin: null,
+      wouldDecide: 'Add 1 more result of the same kind.',
+    });
+    const way = { quantity: 'binder-content', name: 'Pb', unit: '%', present: 5.3, from: 5.37, to: 5.49 };
+    await open({
+      check: {
+        findings: [
+          aFinding({
+            limit: {
+              ...aFinding().limit!,
+              from: {
+                document: 'Section 412, 2026',
+                table: null,
+                tableTitle: null,
+                row: null,
+                displaced: [],
+              },
+            },
+          }),
+          undecided,
+        ],
+        explanations: {
+          'vma~design point': {
+            whyThisLimit: 'Section 412, 2026 sets it in the rule itself.',
+            toPass: [{ ...way, words: 'Pb of 5.37 to 5.49 % instead of 5.30 (the room to move)' }],
+          },
+        },
+      },
+    });
+    fireEvent.click(clauseButton('412.03(b)'));
+    expect(screen.getByText(/sets it in the rule itself/)).toBeTruthy();
+    expect(screen.getByText('To pass').nextElementSibling?.textContent).toBe(
+      'Pb of 5.37 to 5.49 % instead of 5.30 (the room to move).',
+    );
+    fireEvent.click(clauseButton('412.05(a)'));
+    expect(screen.getByText('Would decide it').nextElementSibling?.textContent).toBe(
+      'Add 1 more result of the same kind.',
+    );
+  });
+
+  it('leads to the room to move where there is one', async () => {
+    await open({ check: { hasRoom: true } });
+    expect(screen.getByRole('link', { name: 'Room to move' }).getAttribute('href')).toBe(`${at}/room`);
+  });
+
   it('opens a row in place with its rule, rounding and cell, and closes it again', async () => {
     await open();
     const button = clauseButton('412.03(b)');
