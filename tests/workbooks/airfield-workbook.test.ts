@@ -1,4 +1,4 @@
-import { expect, it } from 'vitest';
+import { expect, it, vi } from 'vitest';
 import { evaluate } from '#rules/engine/evaluate';
 import { readWorkbook } from '#rules/reading/interpret';
 import { templateMapping } from '#rules/reading/template-mapping';
@@ -8,6 +8,8 @@ import airfield from '#rules/sets/cvra-421-2026.json';
 import { decodeWorkbook } from '#server/workbook/decode';
 import { buildTemplate, finishTemplate } from '#server/workbook/write-template';
 import { type FilledValue, fillTemplate, type TemplateContent } from './fill-template';
+
+vi.setConfig({ testTimeout: 60_000 });
 
 const sublots = ['S1', 'S2', 'S3', 'S4'];
 const each = <Row extends Record<string, FilledValue>>(
