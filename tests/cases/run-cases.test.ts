@@ -2,18 +2,15 @@ import { describe, expect, it } from 'vitest';
 import { evaluate } from '#rules/engine/evaluate';
 import type { Finding, Outcome } from '#rules/engine/finding';
 import { outcomeSchema } from '#rules/engine/finding';
-import { type ResolvedEdition, resolveEdition } from '#rules/rule-sets/resolve';
+import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import type { ExpectedFinding, Layer, RuleSet, RuleSetCase } from '#rules/rule-sets/schema';
-import { isLayer, parseRuleSet } from '#rules/rule-sets/schema';
-import { shippedRuleSets } from '#rules/sets/shipped-rule-sets';
+import { isLayer } from '#rules/rule-sets/schema';
+import { shippedEditions } from '#tests/builders/shipped-editions';
 import impossible from './impossible-outcomes.json';
 
-const documents = shippedRuleSets.map(({ file, document }) => ({ file, ruleSet: parsed(file, document) }));
 const impossibleOutcomes: Record<string, Record<string, Partial<Record<string, string>>>> = impossible;
 
-describe.each(documents)('$file', ({ ruleSet }) => {
-  const edition = resolved(ruleSet);
-
+describe.each(shippedEditions())('$file', ({ ruleSet, edition }) => {
   it.each(edition.cases.map((each) => [each.title, each] as const))('%s', (_, each) => {
     expect(edition.cases.length).toBeGreaterThan(0);
     expect(differences(each, edition)).toEqual([]);
@@ -90,22 +87,4 @@ function rulesToCover(ruleSet: RuleSet | Layer): string[] {
 
 function impossibleReason(ruleSet: RuleSet | Layer, rule: string, outcome: Outcome): string | undefined {
   return impossibleOutcomes[`${ruleSet.id}@${ruleSet.edition}`]?.[rule]?.[outcome];
-}
-
-function parsed(file: string, document: unknown): RuleSet | Layer {
-  const result = parseRuleSet(document);
-  if (!result.ok) throw new Error(`${file}: ${JSON.stringify(result.problems)}`);
-  return result.ruleSet;
-}
-
-function resolved(ruleSet: RuleSet | Layer): ResolvedEdition {
-  const base = isLayer(ruleSet)
-    ? documents.find(
-        (each) => each.ruleSet.id === ruleSet.layerOf.id && each.ruleSet.edition === ruleSet.layerOf.edition,
-      )?.ruleSet
-    : ruleSet;
-  if (!base) throw new Error(`The base of ${ruleSet.id} is not shipped.`);
-  const resolution = resolveEdition(base, isLayer(ruleSet) ? [ruleSet] : []);
-  if (!resolution.ok) throw new Error(JSON.stringify(resolution.problems));
-  return resolution.edition;
 }
