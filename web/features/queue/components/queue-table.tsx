@@ -99,7 +99,7 @@ function QueueRow({
       </td>
       <td className="queue-time">
         {item.group === 'with the contractor' || !item.receivedOn || !item.dueOn ? (
-          item.stands
+          <span>{item.stands}</span>
         ) : (
           <TimeGauge today={today} receivedOn={item.receivedOn} dueOn={item.dueOn} />
         )}
