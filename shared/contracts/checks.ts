@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { explanationSchema } from '#rules/engine/explanation';
-import { findingSchema, sealSchema, summarySchema } from '#rules/engine/finding';
+import { dispositionSchema, findingSchema, sealSchema, summarySchema } from '#rules/engine/finding';
 import { dateSchema, instantSchema } from './common';
 import { endpoint } from './endpoint';
 import { noteSchema, waiverSchema } from './notes';
@@ -85,6 +85,44 @@ export const checkAgain = endpoint({
   versioned: true,
 });
 
+export const checkHeadSchema = z.strictObject({
+  /** Counts up within the revision; the highest is the one that is shown on its page. */
+  number: z.number().int(),
+  kind: z.enum(['pre-check', 'check of record']),
+  madeAt: instantSchema,
+  /** Null where the product itself made it. */
+  madeBy: z.string().nullable(),
+  /** The date that was used as the date of submission. */
+  submittedOn: dateSchema,
+  base: editionReferenceSchema,
+  layers: z.array(editionReferenceSchema),
+  engineVersion: z.string(),
+  seal: z.string(),
+  /** As it was recommended then, before any waiver. */
+  recommended: dispositionSchema,
+});
+
+export const listChecks = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/checks',
+  summary: 'Every check of a revision that is kept, newest first',
+  params: revisionParams,
+  response: z.strictObject({ checks: z.array(checkHeadSchema) }),
+});
+
+export const getKeptCheck = endpoint({
+  method: 'get',
+  path: '/api/submittals/:submittalId/revisions/:number/checks/:check',
+  summary: 'One check of a revision as it was made, with its findings',
+  params: revisionParams.extend({ check: z.coerce.number().int().min(1) }),
+  response: checkHeadSchema.extend({
+    summary: summarySchema,
+    findings: z.array(findingSchema),
+    /** True where a shipped starting point was used. */
+    startingPoint: z.boolean(),
+  }),
+});
+
 export const proveSeal = endpoint({
   method: 'get',
   path: '/api/submittals/:submittalId/revisions/:number/check/proof',
@@ -113,6 +151,7 @@ export const getFindingsWorkbook = endpoint({
   sends: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
 });
 
+export type CheckHead = z.infer<typeof checkHeadSchema>;
 export type CheckView = z.infer<typeof checkViewSchema>;
 export type Moved = z.infer<typeof movedSchema>;
 export type GradationPoint = z.infer<typeof gradationPointSchema>;

@@ -19,6 +19,7 @@ function addressOf(path: string): string {
   return path
     .replace(':number', '0')
     .replace(':index', '0')
+    .replace(/:check$/, '1')
     .replace(':ruleSetId', 'none')
     .replace(':edition', '2000')
     .replace(':token', 'a-token-that-nobody-made')

@@ -341,6 +341,25 @@ describe('the check of a submitted revision', () => {
     const kept = await world.deps.db.select().from(checks).where(eq(checks.revisionId, row.id));
     expect(kept.map(({ number }) => number).sort()).toHaveLength(2);
     expect(new Set(kept.map(({ seal }) => seal)).size).toBe(1);
+    for (const person of [dele, ines]) {
+      const { body: listed } = await person.get(`${pathOf(submitted)}/checks`).expect(200);
+      expect(listed.checks.map((each: { madeBy: string }) => each.madeBy)).toEqual([
+        'Ines Tordoff',
+        'Dele Fairweather',
+      ]);
+      const [newest, first] = listed.checks;
+      expect(first).toMatchObject({
+        submittedOn: '2026-03-09',
+        base: { ruleSet: 'cvra-412', edition: '2026' },
+        seal: again.seal.seal,
+        recommended: again.summary.recommended,
+      });
+      expect(newest.number).toBeGreaterThan(first.number);
+      const { body: old } = await person.get(`${pathOf(submitted)}/checks/${first.number}`).expect(200);
+      expect(old).toMatchObject(first);
+      expect(old.findings).toEqual(again.findings);
+      await person.get(`${pathOf(submitted)}/checks/${newest.number + 1}`).expect(404);
+    }
   });
 });
 

@@ -117,7 +117,8 @@ function ask(person: Browser, { method, path, versioned }: Endpoint, named: type
     .replace(':noteId', named.noteId)
     .replace(':waiverId', named.waiverId)
     .replace(':documentId', named.documentId)
-    .replace(':replacedId', named.replacedId);
+    .replace(':replacedId', named.replacedId)
+    .replace(':check', '1');
   const query = path.endsWith('/sheet') ? '?sheet=Trials' : '';
   const sending = person[method](address + query).set('X-Request-Id', 'one-number-for-both');
   if (versioned) sending.set('If-Match', '"1"');

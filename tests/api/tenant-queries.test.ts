@@ -152,6 +152,11 @@ const queries: Record<string, Record<string, Query>> = {
   checks: {
     newestCheckOf: ['both', (reader) => checks.newestCheckOf(db(), reader, named.revisionId)],
     newestCheckHead: ['both', (reader) => checks.newestCheckHead(db(), reader, named.revisionId)],
+    listCheckHeads: ['both', (reader) => checks.listCheckHeads(db(), reader, named.revisionId)],
+    findCheck: [
+      'both',
+      (reader) => checks.findCheck(db(), reader, { revisionId: named.revisionId, number: 1 }),
+    ],
     // The first number is what a revision without checks would get.
     nextCheckNumber: [
       'both',

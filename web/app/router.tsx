@@ -28,6 +28,14 @@ const signedIn: RouteObject[] = [
     lazy: () => import('../features/findings/findings-route'),
   },
   {
+    path: 'submittals/:submittalId/r/:number/checks',
+    lazy: () => import('../features/checks/checks-route'),
+  },
+  {
+    path: 'submittals/:submittalId/r/:number/checks/:check',
+    lazy: () => import('../features/checks/kept-check-route'),
+  },
+  {
     path: 'submittals/:submittalId/r/:number/gradation',
     lazy: () => import('../features/gradation/gradation-route'),
   },

@@ -20,6 +20,9 @@ export const paths = {
     )}`,
   room: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/room`,
   return: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/return`,
+  checks: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/checks`,
+  keptCheck: (submittalId: string, number: number, check: number) =>
+    `/submittals/${submittalId}/r/${number}/checks/${check}`,
   workbook: (submittalId: string, number: number) => `/submittals/${submittalId}/r/${number}/workbook`,
   nextRevision: (submittalId: string) => `/submittals/${submittalId}/next`,
   projects: '/projects',

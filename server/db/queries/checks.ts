@@ -1,6 +1,7 @@
 import { and, desc, eq, max } from 'drizzle-orm';
 import type { Database } from '../client';
 import { checks } from '../schema/checks';
+import { people } from '../schema/people';
 import { ofTenant, type Reader } from './reader';
 
 export type CheckRow = typeof checks.$inferSelect;
@@ -36,6 +37,44 @@ export async function newestCheckHead(db: Database, reader: Reader, revisionId: 
     .where(ofRevision(reader, revisionId))
     .orderBy(desc(checks.number))
     .limit(1);
+  return row ?? null;
+}
+
+const head = {
+  number: checks.number,
+  kind: checks.kind,
+  madeAt: checks.madeAt,
+  madeBy: people.name,
+  submittedOn: checks.submittedOn,
+  resolvedHash: checks.resolvedHash,
+  engineVersion: checks.engineVersion,
+  seal: checks.seal,
+  summary: checks.summary,
+};
+
+export type CheckHeadRow = Awaited<ReturnType<typeof listCheckHeads>>[number];
+
+/** Every check of a revision that is kept, newest first, without the evidence. */
+export function listCheckHeads(db: Database, reader: Reader, revisionId: string) {
+  return db
+    .select(head)
+    .from(checks)
+    .leftJoin(people, eq(people.id, checks.madeById))
+    .where(ofRevision(reader, revisionId))
+    .orderBy(desc(checks.number));
+}
+
+/** One check of a revision with its evidence, or null. */
+export async function findCheck(
+  db: Database,
+  reader: Reader,
+  { revisionId, number }: { revisionId: string; number: number },
+) {
+  const [row] = await db
+    .select({ head, result: checks.result })
+    .from(checks)
+    .leftJoin(people, eq(people.id, checks.madeById))
+    .where(and(ofRevision(reader, revisionId), eq(checks.number, number)));
   return row ?? null;
 }
 

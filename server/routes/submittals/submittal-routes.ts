@@ -1,6 +1,7 @@
 import { checkAgainRoute, getCheckRoute, proveSealRoute } from '../checks/checks';
 import { getCreepRoute } from '../checks/get-creep';
 import { getRoomRoute } from '../checks/get-room';
+import { getKeptCheckRoute, listChecksRoute } from '../checks/kept-checks';
 import type { Route } from '../define-route';
 import {
   addDocumentRoute,
@@ -31,7 +32,15 @@ export const submittalRoutes: Route[] = [
   ...[startRevisionRoute, replaceWorkbookRoute, getWorkbookRoute, getReplacedWorkbookRoute, cancelJobRoute],
   ...[getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute],
   ...[addDocumentRoute, attachFileRoute, removeDocumentRoute, getDocumentFileRoute, getDocumentTypesRoute],
-  ...[getCheckRoute, getRoomRoute, getCreepRoute, checkAgainRoute, proveSealRoute],
+  ...[
+    getCheckRoute,
+    getRoomRoute,
+    getCreepRoute,
+    checkAgainRoute,
+    proveSealRoute,
+    listChecksRoute,
+    getKeptCheckRoute,
+  ],
   ...[submitRevisionRoute, withdrawRevisionRoute, takeRevisionRoute, giveBackRevisionRoute],
   ...[writeNoteRoute, changeNoteRoute, removeNoteRoute, waiveRoute, removeWaiverRoute],
 ];

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { caughtMailQuery } from '../../../web/features/caught-mail/api/caught-mail';
+import { checksQuery, keptCheckQuery } from '../../../web/features/checks/api/kept-checks';
 import { creepQuery } from '../../../web/features/creep/api/get-creep';
 import { queueQuery } from '../../../web/features/queue/api/get-queue';
 import { queueItemQuery } from '../../../web/features/queue/api/get-queue-item';
@@ -24,6 +25,7 @@ describe('query keys of the pages', () => {
     ['submittals', [submittalsQuery({}), submittalsQuery({ state: 'draft' }), submittalsQuery({ q: 'BW' })]],
     ['submittal', [submittalQuery('s1'), submittalQuery('s2')]],
     ['project', [projectsQuery(), projectQuery('p1'), projectQuery('p2')]],
+    ['checks', [checksQuery(one), checksQuery(two), keptCheckQuery(one, 1), keptCheckQuery(one, 2)]],
     ['creep', [creepQuery(one), creepQuery(two)]],
     ['reading', [readingQuery(one), readingQuery(two)]],
     ['document types', [documentTypesQuery(one), documentTypesQuery(two)]],

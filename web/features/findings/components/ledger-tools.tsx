@@ -33,6 +33,7 @@ export function LedgerTools({ order }: { order: LedgerOrder }) {
         {check.hasCreep ? <Link to={paths.creep(submittalId, number)}>Creep</Link> : null}
         {check.hasRoom ? <Link to={paths.room(submittalId, number)}>Room to move</Link> : null}
         <Link to={paths.reading(submittalId, number)}>How it was read</Link>
+        <Link to={paths.checks(submittalId, number)}>Checks</Link>
         <a href={hrefOf(getFindingsPdf, { params })} download>
           Findings as PDF
         </a>
