@@ -202,9 +202,9 @@ export function describeFit(input: {
   const variance = Math.max(deviation, LEAST_DEVIATION) ** 2;
   const factor = covarianceFactor(best.jacobian, solvedFor, variance).slice(0, model.parameterCount);
   const rSquared = explained(points, best.sumOfSquares);
-  const parameters = publishedParameters(model, best, factor, degreesOfFreedom);
   const times = points.map(({ t }) => t);
   const window = { from: Math.min(...times), to: Math.max(...times) };
+  const parameters = publishedParameters(model, best, factor, { degreesOfFreedom, lastTime: window.to });
   const tau = parameters.find(({ symbol }) => symbol === 'τ')?.value;
   const beyond = tau === undefined ? null : decadesBeyond(tau, window);
   return {
@@ -242,10 +242,11 @@ function publishedParameters(
   model: CreepModel,
   best: LeastSquaresFit,
   factor: readonly (readonly number[])[],
-  degreesOfFreedom: number,
+  { degreesOfFreedom, lastTime }: { degreesOfFreedom: number; lastTime: number },
 ): FittedParameter[] {
   const quantile = twoSidedT(DESCRIBED_CONFIDENCE, degreesOfFreedom);
   const t = quantile.ok ? quantile.value : Number.POSITIVE_INFINITY;
+  const reached = reachedBy(model, { best, factor, t, lnLast: Math.log(lastTime) });
   return model.published(best.parameters).map(({ symbol, unit, value, gradient }) => {
     const half = t * deviationAlong(factor, gradient);
     const isBounded = half <= WIDEST_HALF;
@@ -254,11 +255,26 @@ function publishedParameters(
       symbol,
       unit,
       value: settled(value),
-      low: isBounded ? settled(value * Math.exp(-half)) : null,
+      low: isBounded ? settled(Math.max(value * Math.exp(-half), symbol === 'D∞' ? reached : 0)) : null,
       high: isBounded ? settled(value * Math.exp(half)) : null,
       held: half <= Math.LN2 && !rests,
     };
   });
+}
+
+/** What the curve has reached at the last tested time, at the lower end of its band: D∞ lies above it. */
+function reachedBy(
+  model: CreepModel,
+  {
+    best,
+    factor,
+    t,
+    lnLast,
+  }: { best: LeastSquaresFit; factor: readonly (readonly number[])[]; t: number; lnLast: number },
+): number {
+  const gradient = new Float64Array(model.parameterCount);
+  const lnD = model.lnCompliance(best.parameters, lnLast, gradient);
+  return Math.exp(lnD - t * deviationAlong(factor, gradient));
 }
 
 /** Points that hardly differ leave nothing to explain: then only a fit through all of them counts as one. */

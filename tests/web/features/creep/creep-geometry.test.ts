@@ -38,7 +38,7 @@ describe('the chart of creep compliance', () => {
 
   it('labels decades and keeps the ticks between them', () => {
     const { times } = drawn();
-    expect(times.flatMap(({ label }) => label ?? [])).toEqual(['1', '10', '100', '1000']);
+    expect(times.flatMap(({ label }) => label ?? [])).toEqual(['1', '10', '100', '1,000']);
     expect(times.length).toBeGreaterThan(20);
   });
 

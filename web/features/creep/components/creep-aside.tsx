@@ -2,6 +2,7 @@ import type { CreepCurveView, CreepFindingView, CreepFitView } from '#shared/con
 import { formatPlain, groupThousands } from '#shared/format/numbers';
 import { Mark } from '../../../components/ui/mark';
 import { wordOfOutcome } from '../../../components/ui/marks';
+import { QuantitySymbol } from '../../../components/ui/quantity-symbol';
 import { RadioLine } from '../../../components/ui/radio-line';
 import { otherModelWords } from '../lib/other-models';
 
@@ -63,7 +64,7 @@ export function CreepAside({
         {curve.remarks.map(({ holds, text }) => (
           <li key={text}>
             <Mark name={holds ? 'pass' : 'undecided'} />
-            <span>{text}</span>
+            <span>{unbroken(text)}</span>
           </li>
         ))}
         <li>
@@ -103,7 +104,9 @@ function FitTable({ curve, fit }: { curve: CreepCurveView; fit: CreepFitView }) 
       <dl className="creep-fit">
         {fit.parameters.map(({ symbol, value, unit, low, high }) => (
           <div key={symbol}>
-            <dt>{symbol}</dt>
+            <dt>
+              <QuantitySymbol>{symbol}</QuantitySymbol>
+            </dt>
             <dd>
               <b>{groupThousands(formatPlain(value, 3))}</b> {unit === '1' ? '' : unit}
               <small>
@@ -115,7 +118,9 @@ function FitTable({ curve, fit }: { curve: CreepCurveView; fit: CreepFitView }) 
           </div>
         ))}
         <div>
-          <dt>R²</dt>
+          <dt>
+            <var>R</var>²
+          </dt>
           <dd>
             <b>{fit.rSquared.toFixed(3)}</b>
             <small>
@@ -139,4 +144,9 @@ function FitTable({ curve, fit }: { curve: CreepCurveView; fit: CreepFitView }) 
       </p>
     </>
   );
+}
+
+/** A number stays with its unit. */
+function unbroken(text: string): string {
+  return text.replace(/ (?=(%|s|kPa|°C)\b|%)/g, '\u00a0');
 }

@@ -5,6 +5,7 @@ import { paths } from '../../../lib/paths';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { useMediaQuery } from '../../../lib/use-media-query';
 import { type CreepGeometry, creepGeometry } from '../lib/creep-geometry';
+import { DrawnSymbol } from './drawn-symbol';
 import { LimitFlag } from './limit-flag';
 import { FittedCurve, LogFrame } from './log-frame';
 import { SpecimenShape } from './specimen-shape';
@@ -81,7 +82,8 @@ function Asymptotes({ geometry: { asymptotes, frame } }: { geometry: CreepGeomet
       <g key={symbol}>
         <path className="asymptote" d={`M${frame.left} ${y}H${frame.right}`} />
         <text x={frame.right - 4} y={symbol === 'D0' ? y + 15 : y - 6} textAnchor="end">
-          {symbol} {formatPlain(value, 3)}
+          <DrawnSymbol>{symbol}</DrawnSymbol>
+          {formatPlain(value, 3)}
           {words}
         </text>
       </g>

@@ -1,6 +1,6 @@
 import { scaleLog } from 'd3-scale';
 import type { CreepFindingView, CreepFitView, CreepSampleView } from '#shared/contracts/creep';
-import { formatPlain } from '#shared/format/numbers';
+import { formatPlain, groupThousands } from '#shared/format/numbers';
 
 export interface ChartSize {
   widthPx: number;
@@ -213,7 +213,10 @@ function decadeTicks(span: Span, at: (value: number) => number, labelled: readon
     for (let digit = 1; digit <= 9; digit += 1) {
       const value = Number(`${digit}e${exponent}`);
       if (value < span.from || value > span.to) continue;
-      ticks.push({ at: at(value), label: labelled.includes(digit) ? formatPlain(value) : null });
+      ticks.push({
+        at: at(value),
+        label: labelled.includes(digit) ? groupThousands(formatPlain(value)) : null,
+      });
     }
   }
   return ticks;
