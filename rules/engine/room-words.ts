@@ -64,9 +64,10 @@ function answerOf(room: RoomToMove): string {
 
 function countWords({ rules }: RoomToMove): string {
   const count = rules.filter(({ state }) => state === 'computed').length;
+  const some = rules.some(({ state }) => state === 'left out') ? ' that can be followed' : '';
   if (count === 1) return 'the one rule that can be followed';
-  if (count === 2) return 'both rules';
-  return `all ${NUMBERS[count] ?? count} rules`;
+  if (count === 2) return `both rules${some}`;
+  return `all ${NUMBERS[count] ?? count} rules${some}`;
 }
 
 const NUMBERS = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten'];

@@ -77,6 +77,9 @@ describe('the drawing of the room to move', () => {
     expect(geometryOf({}, 5.8).present?.side).toBe('left');
     expect(geometryOf({}, 5.5).earlier).toBeNull();
     expect(geometryOf({ declaredBinderContent: null }).present).toBeNull();
+    // Alone it keeps clear of the room, which begins at 5.4.
+    expect(geometryOf({ declaredBinderContent: 5.3 }, null).present?.side).toBe('left');
+    expect(geometryOf({ declaredBinderContent: 5.4 }, null).present?.side).toBe('right');
   });
 
   it('widens to a declared content beyond the trials', () => {

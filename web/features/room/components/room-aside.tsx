@@ -2,7 +2,12 @@ import { Link } from 'react-router-dom';
 import type { RoomView } from '#shared/contracts/room';
 
 /** The answer in words, how it was read, and the rules with their findings. */
-export function RoomAside({ room, revisionPath }: { room: RoomView['room']; revisionPath: string }) {
+export function RoomAside({
+  room,
+  earlier,
+  revisionPath,
+}: Pick<RoomView, 'room' | 'earlier'> & { revisionPath: string }) {
+  const hasEarlier = earlier !== null && earlier.binderContent !== room?.declaredBinderContent;
   if (room === null) return <h2>Room to move</h2>;
   return (
     <>
@@ -16,7 +21,7 @@ export function RoomAside({ room, revisionPath }: { room: RoomView['room']; revi
             </Link>
             <span>
               {title}
-              {limit === '' ? '' : ` ${limit}`}
+              {limit === '' ? '' : `, ${limit}`}
             </span>
           </li>
         ))}
@@ -27,8 +32,9 @@ export function RoomAside({ room, revisionPath }: { room: RoomView['room']; revi
         </p>
       ))}
       <p className="small mute pt-2">
-        Heavy ticks close the room; dotted ends are the ends of the trials. The hollow dot is the revision
-        before.
+        {room.room === null ? '' : 'Heavy ticks close the room; '}
+        {room.room === null ? 'Dotted' : 'dotted'} ends are the ends of the trials.
+        {hasEarlier ? ` The hollow dot is revision ${earlier.revision}.` : ''}
       </p>
     </>
   );

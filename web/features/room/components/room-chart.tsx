@@ -27,8 +27,9 @@ export function RoomChart({
         role="group"
         aria-label={`${room.words.answer} The same as a table below.`}
       >
-        <Rows geometry={geometry} />
+        <Lanes geometry={geometry} />
         <Room geometry={geometry} />
+        <Names geometry={geometry} />
         <Ends geometry={geometry} />
         <Designs geometry={geometry} isNameAbove={size.namesPx === 0} />
         <Axis geometry={geometry} params={params} />
@@ -37,21 +38,28 @@ export function RoomChart({
   );
 }
 
-function Rows({ geometry: { rows, frame } }: { geometry: RoomGeometry }) {
+function Lanes({ geometry: { rows, frame } }: { geometry: RoomGeometry }) {
   return rows.map((row) => (
     <g key={row.rule.rule}>
       <title>{`${row.rule.clause} ${row.rule.title}, ${row.rule.limitWords}: ${holdsWords(row.rule)}`}</title>
       <path className="grid-line" d={`M0 ${row.y - rowTop(row)}H${frame.right}`} />
-      <text x="0" y={row.nameY}>
-        <tspan className="room-clause">{clauseParts(row.rule.clause).letter || row.rule.clause}</tspan>{' '}
-        {row.rule.title}
-      </text>
       {row.bars.map(({ x1, x2 }) => (
         <rect key={x1} className="lane" x={x1} y={row.y - 7} width={Math.max(1, x2 - x1)} height="14" />
       ))}
-      {row.words === null ? null : (
-        <text x={frame.left} y={row.y + 4} className="room-words">
-          {row.words}
+    </g>
+  ));
+}
+
+/** Over the room, which lies behind the names where there is no space beside the drawing. */
+function Names({ geometry: { rows, frame } }: { geometry: RoomGeometry }) {
+  return rows.map(({ rule, y, nameY, words }) => (
+    <g key={rule.rule}>
+      <text x="0" y={nameY}>
+        <tspan className="room-clause">{clauseParts(rule.clause).letter || rule.clause}</tspan> {rule.title}
+      </text>
+      {words === null ? null : (
+        <text x={frame.left} y={y + 4} className="room-words">
+          {words}
         </text>
       )}
     </g>

@@ -26,7 +26,7 @@ export function RoomPage() {
   const back = paths.revision(params.submittalId, params.number);
   const canDraw = room !== null && room.trials.length > 1;
   return (
-    <MarginPage marginWidthPx={300} aside={<RoomAside room={room} revisionPath={back} />}>
+    <MarginPage marginWidthPx={300} aside={<RoomAside room={room} earlier={earlier} revisionPath={back} />}>
       <PageHead
         kicker={
           <Link to={back}>

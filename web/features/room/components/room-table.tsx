@@ -28,7 +28,10 @@ export function RoomTable({ rules }: { rules: readonly RoomOfRule[] }) {
   );
 }
 
-const endWords = { limit: 'the limit', trials: 'the last trial' };
+const endWords = {
+  below: { limit: 'the limit', trials: 'the first trial' },
+  above: { limit: 'the limit', trials: 'the last trial' },
+};
 
 function rowsOf(rule: RoomOfRule) {
   const head = (
@@ -50,9 +53,9 @@ function rowsOf(rule: RoomOfRule) {
     <tr key={`${rule.rule}${from}`}>
       {head}
       <td className="number">{contentWords(from)}</td>
-      <td>{endWords[below]}</td>
+      <td>{endWords.below[below]}</td>
       <td className="number">{contentWords(to)}</td>
-      <td>{endWords[above]}</td>
+      <td>{endWords.above[above]}</td>
     </tr>
   ));
 }

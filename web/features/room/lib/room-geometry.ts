@@ -73,7 +73,10 @@ export function roomGeometry(
     .range([frame.left, frame.right]);
   const rowMiddle = (index: number) => headPx + rowPx * index + rowPx / 2 + (namesPx === 0 ? 8 : 0);
   const other = earlier !== null && earlier.binderContent !== declared ? earlier : null;
-  const presentIsRight = other === null || declared === null || declared > other.binderContent;
+  const isRightOf = (content: number) => declared === null || declared > content;
+  // A label keeps clear of the other dot, else of the room.
+  const presentIsRight =
+    other === null ? room.room === null || isRightOf(room.room.from - 1e-9) : isRightOf(other.binderContent);
   return {
     heightPx: frame.bottom + axisPx,
     frame,
