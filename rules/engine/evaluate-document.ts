@@ -113,11 +113,21 @@ function ageVerdict(
     : { outcome: 'fail', reason: `${age}, before ${dateWords(on)}.` };
 }
 
-/** The newest by date; undated ones only where there is none with a date. */
+/** The newest by date, of two of one day the one that holds longer; undated ones only where there is none with a date. */
 function newestOf(documents: DocumentRecord[]): DocumentRecord | null {
   const dated = documents.filter(({ date }) => date !== null);
-  const [newest] = dated.toSorted((a, b) => ((a.date ?? '') < (b.date ?? '') ? 1 : -1));
+  const [newest] = dated.toSorted(
+    (a, b) => compareText(b.date ?? '', a.date ?? '') || compareText(heldTo(b), heldTo(a)),
+  );
   return newest ?? documents[0] ?? null;
+}
+
+function heldTo({ validTo }: DocumentRecord): string {
+  return validTo ?? 'without end';
+}
+
+function compareText(a: string, b: string): number {
+  return a < b ? -1 : a > b ? 1 : 0;
 }
 
 function statedDate(world: World, measure: DocumentMeasure): string | null {

@@ -1,34 +1,45 @@
 import type { Where } from '../rule-sets/measure';
 import { quantityPhrase } from '../rule-sets/words';
 import { type Obstacle, undecided } from './obstacle';
-import { resolveInterval } from './resolve-limit';
+import { type ResolvedInterval, resolveInterval } from './resolve-limit';
 import type { Sample, SampleItem, SampleRequest } from './sample';
 import { select } from './select';
 import type { World } from './world';
 
-/** The items whose specimen meets every condition; a specimen of which that is not known leaves all undecided. */
+/**
+ * The items whose specimen meets every condition. One that is not met settles that a specimen does not count,
+ * whatever is known of the others; a specimen of which it is not settled leaves all undecided.
+ */
 export function applyWhere(
   world: World,
   request: SampleRequest,
   sample: Sample,
 ): { ok: true; items: SampleItem[] } | Obstacle {
-  let items = sample.items;
+  const conditions: { where: Where; interval: ResolvedInterval }[] = [];
   for (const where of request.where ?? []) {
     const unit = world.view.quantity(where.quantity)?.unit ?? '1';
     const interval = resolveInterval(world, where, request.at, { written: unit, wanted: unit });
     if (!interval.ok) return interval;
-    const met: SampleItem[] = [];
-    for (const item of items) {
+    conditions.push({ where, interval: interval.interval });
+  }
+  const items: SampleItem[] = [];
+  for (const item of sample.items) {
+    const values = conditions.map(({ where, interval }) => {
       const value = valueOfSpecimen(world, where, request, item);
-      if (value === null) return undecided(unknownReason(world, where, item), stateWords(world, where));
-      const { min, max, minExclusive, maxExclusive } = interval.interval;
-      const isAbove = min === null || (minExclusive ? value > min : value >= min);
-      const isBelow = max === null || (maxExclusive ? value < max : value <= max);
-      if (isAbove && isBelow) met.push(item);
-    }
-    items = met;
+      return { where, isMet: value === null ? null : isInside(value, interval) };
+    });
+    if (values.some(({ isMet }) => isMet === false)) continue;
+    const unknown = values.find(({ isMet }) => isMet === null)?.where;
+    if (unknown) return undecided(unknownReason(world, unknown, item), stateWords(world, unknown));
+    items.push(item);
   }
   return { ok: true, items };
+}
+
+function isInside(value: number, { min, max, minExclusive, maxExclusive }: ResolvedInterval): boolean {
+  const isAbove = min === null || (minExclusive ? value > min : value >= min);
+  const isBelow = max === null || (maxExclusive ? value < max : value <= max);
+  return isAbove && isBelow;
 }
 
 /** The one sure value of another quantity on the same specimen, recomputed where it can be, else as read. */
