@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Finding } from '#rules/engine/finding';
 import { checks, notes, waivers } from '#server/db/schema/checks';
@@ -45,6 +45,21 @@ async function markReturned(place: Place): Promise<void> {
     .update(revisions)
     .set({ state: 'returned', disposition: 'revise and resubmit', returnedAt: world.deps.now() })
     .where(eq(revisions.submittalId, place.submittalId));
+  const sent = { sentAt: world.deps.now() };
+  await world.deps.db
+    .update(notes)
+    .set(sent)
+    .where(
+      and(
+        eq(notes.submittalId, place.submittalId),
+        eq(notes.side, 'agency'),
+        eq(notes.kind, 'to be returned'),
+      ),
+    );
+  await world.deps.db
+    .update(waivers)
+    .set(sent)
+    .where(and(eq(waivers.submittalId, place.submittalId), eq(waivers.toBeReturned, true)));
 }
 
 describe('notes', () => {
