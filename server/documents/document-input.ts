@@ -4,6 +4,7 @@ import { dispositionSchema, findingSchema, sealSchema, summarySchema } from '#ru
 import { roomWordsSchema } from '#rules/engine/room-words';
 import { letterheadSchema } from '#shared/contracts/organisation';
 import { recipientSchema, returnGroupSchema } from '#shared/contracts/returns';
+import { creepWordsSchema } from './creep-words';
 
 /**
  * What a letter, a findings workbook or a mail is rendered from. It is frozen with the decision, so that a
@@ -51,6 +52,7 @@ export const documentInputSchema = z.strictObject({
   /** Why each limit and what would pass, by finding, for the workbook. */
   explanations: z.record(z.string(), explanationSchema).default({}),
   room: roomWordsSchema.nullable().default(null),
+  creep: creepWordsSchema.nullable().default(null),
 });
 
 export type DocumentInput = z.infer<typeof documentInputSchema>;

@@ -7,6 +7,7 @@ import { cautionsFor } from '#shared/cautions';
 import { formatDate } from '#shared/format/dates';
 import { mayLeaveOut, nextActHeadings, nextActOf } from '#shared/next-acts';
 import { neutralise } from '../workbook/neutralise';
+import { addCreepSheet } from './creep-sheet';
 import type { DocumentInput } from './document-input';
 
 const columns = [
@@ -42,6 +43,7 @@ export async function renderFindingsWorkbook(input: DocumentInput): Promise<Buff
   addSummary(workbook, input);
   addFindings(workbook, input);
   addRoom(workbook, input);
+  addCreepSheet(workbook, input.creep);
   return Buffer.from(await workbook.xlsx.writeBuffer());
 }
 

@@ -5,6 +5,7 @@ import { toPassWords } from '#rules/engine/to-pass';
 import type { Letterhead } from '#shared/contracts/organisation';
 import type { Recipient, ReturnItem } from '#shared/contracts/returns';
 import { dateOfInstant } from '#shared/format/dates';
+import { creepWords } from './creep-words';
 import { type DocumentInput, documentInputSchema } from './document-input';
 
 /** What documents of a revision have in common, whether a return or a check before submission. */
@@ -100,6 +101,7 @@ function commonInput(revision: RevisionFacts, now: Date) {
     startingPoint: revision.startingPoint,
     explanations: revision.explanations,
     room: room && roomWords(room),
+    creep: creepWords(check.result.analysis.creep),
   };
 }
 

@@ -81,7 +81,7 @@ function rangeOf(tested: readonly number[], asked: readonly number[]): Range | n
   if (tested.length === 0) return null;
   return {
     from: Math.min(...tested, ...asked) / 2.2,
-    to: Math.max(Math.max(...tested) * 10, ...asked.map((time) => time * 3)),
+    to: Math.max(Math.max(...tested) * 10, ...asked.map((time) => time * 12)),
   };
 }
 

@@ -36,7 +36,9 @@ export function aCreepTest(parts: CreepTestParts = {}): Reading[] {
   } = parts;
   return specimens.flatMap((factor, place) =>
     times.map((time, row) => {
-      const value = Number((compliance(time) * factor * (as === 'strain' ? (stress ?? 1) : 1)).toPrecision(6));
+      const value = Number(
+        (compliance(time) * factor * (as === 'strain' ? (stress ?? 1) : 1)).toPrecision(6),
+      );
       const specimen = String(place + 1);
       return aReading({
         quantity: as === 'strain' ? 'creep-strain' : 'creep-compliance',

@@ -72,6 +72,7 @@ export function aDocumentInput(overrides: Partial<DocumentInput> = {}): Document
     enclosesWorkbook: true,
     explanations: {},
     room: null,
+    creep: null,
     ...overrides,
     findings,
   } satisfies DocumentInput);

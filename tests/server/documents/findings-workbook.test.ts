@@ -1,8 +1,13 @@
 import exceljs from 'exceljs';
 import { describe, expect, it } from 'vitest';
+import { evaluate } from '#rules/engine/evaluate';
+import { creepWords } from '#server/documents/creep-words';
 import { renderFindingsWorkbook } from '#server/documents/findings-workbook';
+import { aCreepTest } from '#tests/builders/a-creep-test';
 import { aDocumentInput } from '#tests/builders/a-document-input';
 import { aFinding } from '#tests/builders/a-finding';
+import { aContext, aRecord } from '#tests/builders/a-record';
+import { anEdition } from '#tests/builders/a-rule-set';
 
 async function opened(bytes: Buffer): Promise<exceljs.Workbook> {
   const workbook = new exceljs.Workbook();
@@ -67,6 +72,34 @@ describe('the findings workbook', () => {
       'at least 14.0 %',
       '5.10 to 5.51 %',
     ]);
+  });
+
+  it('gives the creep tests a sheet with the figures of the screen and every point as numbers', async () => {
+    const { analysis } = evaluate(
+      aRecord({ readings: [...aCreepTest({ specimens: [0.98, 1] }), ...aCreepTest({ temperature: 0 })] }),
+      anEdition(),
+      aContext(),
+    );
+    const creep = creepWords(analysis.creep);
+    const workbook = await opened(await renderFindingsWorkbook(aDocumentInput({ creep })));
+    const sheet = workbook.getWorksheet('Creep compliance');
+    const rows = sheet?.getRows(1, sheet.rowCount) ?? [];
+    const first = rows.map((row) => String(row.getCell(1).value ?? ''));
+    expect(first).toContain('Creep compliance at −10 °C under 200 kPa');
+    expect(first.find((text) => text.startsWith('Sigmoid: D0 '))).toMatch(
+      / 1\/GPa \(.* to .*\); .*; R² \d\.\d{3}, 14 points$/,
+    );
+    expect(first.find((text) => text.startsWith('log aT at −10 °C'))).toBe('log aT at −10 °C: reference');
+    const heads = first.indexOf('Temperature, °C');
+    expect(rows.slice(heads + 1).map((row) => row.getCell(5).value)).toHaveLength(21);
+    // 0.98 times CRP-15's 0.05135117 at 1 s, as strain to six digits under 200 kPa.
+    expect(rows[heads + 1]?.values).toEqual([undefined, -10, 200, '1', 1, 0.050324, 'Creep E2']);
+  });
+
+  it('has no such sheet without creep tests', async () => {
+    expect(creepWords([])).toBeNull();
+    const workbook = await opened(await renderFindingsWorkbook(aDocumentInput({})));
+    expect(workbook.getWorksheet('Creep compliance')).toBeUndefined();
   });
 
   it.each(['=HYPERLINK("http://x.example")', '+1+1', '-2+3', '@SUM(A1)', '\t=1'])(

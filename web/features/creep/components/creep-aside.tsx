@@ -1,7 +1,6 @@
 import type { CreepCurveView, CreepFindingView, CreepFitView } from '#shared/contracts/creep';
 import { formatPlain, groupThousands } from '#shared/format/numbers';
 import { Mark } from '../../../components/ui/mark';
-import { wordOfOutcome } from '../../../components/ui/marks';
 import { QuantitySymbol } from '../../../components/ui/quantity-symbol';
 import { RadioLine } from '../../../components/ui/radio-line';
 import { otherModelWords } from '../lib/other-models';
@@ -80,11 +79,19 @@ export function CreepAside({
   );
 }
 
+const verbs: Record<CreepFindingView['finding']['outcome'], string> = {
+  pass: 'passes',
+  fail: 'fails',
+  'not shown': 'is not shown',
+  undecided: 'is undecided',
+  'not applicable': 'does not apply',
+};
+
 function Why({ view: { finding } }: { view: CreepFindingView }) {
   return (
     <section className="creep-why">
       <h2>
-        Why {finding.clause ?? finding.title} is {wordOfOutcome[finding.outcome].toLowerCase()}
+        Why {finding.clause ?? finding.title} {verbs[finding.outcome]}
       </h2>
       <p className="small">{finding.reason}</p>
       {finding.wouldDecide ? (

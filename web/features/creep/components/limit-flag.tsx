@@ -16,7 +16,8 @@ export function LimitFlag({ flag: { x, limits, value, view }, bottom }: { flag: 
           <path className="flag-arrow" d={arrow(x, towards === 'up' ? y - POLE : y + POLE, towards)} />
           <path className="limit-tick" d={`M${x - 15} ${y}h30`} />
           <text className="flag-label" x={labelX} y={y + (towards === 'up' ? 16 : -8)} textAnchor={anchor}>
-            <tspan className="flag-clause">{finding.clause ?? finding.title}</tspan> {times}, {label}
+            <tspan className="flag-clause">{finding.clause ?? finding.title}</tspan>
+            {label === '' ? '' : ` ${times}, ${label}`}
           </text>
         </g>
       ))}

@@ -45,6 +45,7 @@ export interface Tick {
 export interface Flag {
   key: string;
   x: number;
+  /** On a narrow drawing the label is empty: the clause leads to the table. */
   limits: { y: number; towards: 'up' | 'down'; label: string; labelX: number; anchor: 'start' | 'end' }[];
   value: { y: number; low: number | null; high: number | null } | null;
   view: CreepFindingView;
@@ -246,7 +247,9 @@ function flagOf(
   return {
     key: `${finding.rule}~${finding.subject}`,
     x,
-    limits: limits.flatMap((limit) => (limit === null ? [] : [{ ...limit, labelX, anchor }])),
+    limits: limits.flatMap((limit) =>
+      limit === null ? [] : [{ ...limit, label: isNarrow ? '' : limit.label, labelX, anchor }],
+    ),
     value:
       estimate === null
         ? null
