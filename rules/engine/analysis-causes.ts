@@ -20,7 +20,7 @@ function slips(reported: Reading): Cause[] {
       id: 'decimal-point-moved',
       text: 'has the decimal point out of place',
       compute: ({ own }) =>
-        [-3, -2, -1, 1, 2, 3]
+        misplacements
           .map((places) => own * 10 ** places)
           .find((value) => value !== 0 && showsAs(value, reported)) ?? Number.NaN,
     },
@@ -33,6 +33,9 @@ function slips(reported: Reading): Cause[] {
     },
   ];
 }
+
+/** By two places it is a percentage written as a fraction: the reader asks about that, and the answer decides. */
+const misplacements = [-3, -1, 1, 3];
 
 /** A value with every two neighbouring digits of its printed form in the other order. */
 function withSwappedDigits(value: number, unit: number): number[] {
