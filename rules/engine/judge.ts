@@ -9,7 +9,7 @@ import { type LimitCondition, satisfies } from './decide';
 import type { ResolvedLimit } from './finding';
 import { findRow, numberOfCell } from './look-up';
 import { type Obstacle, undecided } from './obstacle';
-import type { Judgeable } from './statistic';
+import type { AllowedInterval, Judgeable } from './statistic';
 import type { World } from './world';
 
 export interface Rounder {
@@ -117,24 +117,29 @@ function newCondition(limit: Ends): LimitCondition {
 }
 
 /**
- * The outcome of every value in an open interval, where it is the same for all. Limits allow one unbroken
+ * The outcome of every value in an interval, where it is the same for all. Limits allow one unbroken
  * stretch of values, so the two ends tell: both inside, or both outside on the same side.
  */
 function outcomeOfInterval(
-  allowed: { low: number; high: number },
+  allowed: AllowedInterval,
   limit: Ends,
   rounder: Rounder,
 ): 'pass' | 'fail' | 'undecided' {
-  const low = sideOf(allowed.low, 1, limit, rounder);
-  const high = sideOf(allowed.high, -1, limit, rounder);
+  const low = sideOf(allowed.low, allowed.lowIncluded ? 0 : 1, limit, rounder);
+  const high = sideOf(allowed.high, allowed.highIncluded ? 0 : -1, limit, rounder);
   if (low !== high) return 'undecided';
   return low === 'inside' ? 'pass' : 'fail';
 }
 
-function sideOf(end: number, inward: 1 | -1, limit: Ends, rounder: Rounder): 'below' | 'inside' | 'above' {
+function sideOf(
+  end: number,
+  inward: 1 | 0 | -1,
+  limit: Ends,
+  rounder: Rounder,
+): 'below' | 'inside' | 'above' {
   if (end === -Infinity) return limit.min === null ? 'inside' : 'below';
   if (end === Infinity) return limit.max === null ? 'inside' : 'above';
-  // The end itself is not among the values; the nearest one is a hair inside.
+  // Where the end itself is not among the values, the nearest one is a hair inside.
   const nearest = new Decimal(end)
     .plus(new Decimal(Math.max(1, Math.abs(end))).times(1e-12 * inward))
     .toNumber();

@@ -15,8 +15,16 @@ export interface Judgeable {
   text: string | null;
   /** True for a result without a number: `value` only stands in for it. */
   isWord?: boolean;
-  /** Open at both ends; null for a plain number. */
-  allowed: { low: number; high: number } | null;
+  /** Null for a plain number. */
+  allowed: AllowedInterval | null;
+}
+
+/** Every number that a value may be. An end is among them only where that is said. */
+export interface AllowedInterval {
+  low: number;
+  high: number;
+  lowIncluded?: boolean;
+  highIncluded?: boolean;
 }
 
 export interface StatisticRequest {
@@ -133,11 +141,24 @@ function ofCensored(
     );
   }
   const combine = COMBINE[statistic];
-  const low = combine(judgeables.map((each) => each.allowed?.low ?? each.value));
-  const high = combine(judgeables.map((each) => each.allowed?.high ?? each.value));
+  const lows = judgeables.map((each) => each.allowed?.low ?? each.value);
+  const highs = judgeables.map((each) => each.allowed?.high ?? each.value);
+  const low = combine(lows);
+  const high = combine(highs);
   const value = combine(judgeables.map((each) => each.value));
   if (low === high) return plain(value);
-  return { ok: true, judgeable: { value, text: censoredText(low, high), allowed: { low, high } } };
+  // The smallest of 14.0 and >13 may be 14.0 itself, not only what lies below it.
+  const isPlain = judgeables.map((each) => each.allowed === null);
+  const lowIncluded = statistic === 'mean' ? false : isAttained(lows, low, isPlain, statistic === 'min');
+  const highIncluded = statistic === 'mean' ? false : isAttained(highs, high, isPlain, statistic === 'max');
+  const allowed = { low, high, lowIncluded, highIncluded };
+  return { ok: true, judgeable: { value, text: censoredText(low, high), allowed } };
+}
+
+/** Whether an end of the interval is a value: by any plain number there, or only where all that stand there are plain. */
+function isAttained(ends: number[], end: number, isPlain: boolean[], byAny: boolean): boolean {
+  const there = isPlain.filter((_, i) => ends[i] === end);
+  return byAny ? there.includes(true) : !there.includes(false);
 }
 
 const SINGLE = new Set<Statistic>(['mean', 'min', 'max', 'each']);
