@@ -32,7 +32,9 @@ export function askedAttributes({ edition, workbook, facts, typed }: AttributeSo
     if (stated === undefined && project === undefined) {
       return [ask(attribute, 'Neither the workbook nor the project states it.', typed)];
     }
-    return conflict === null ? [] : [ask(attribute, conflict, typed, [stated?.value, meantBy(attribute, project)])];
+    return conflict === null
+      ? []
+      : [ask(attribute, conflict, typed, [stated?.value, meantBy(attribute, project)])];
   });
 }
 

@@ -39,7 +39,7 @@ export function presentRevision(parts: RevisionParts): Revision {
     version: revision.version,
     project: { id: project.id, number: project.number, title: project.title, lettingOn: project.lettingOn },
     contractor: row.contractor,
-    agency: { id: row.agency.id, name: row.agency.name },
+    agency: { id: row.agency.id, name: row.agency.name, timeZone: row.agency.timeZone },
     section: presentSection(row),
     laboratory: row.laboratory,
     description: revision.description,

@@ -14,7 +14,7 @@ interface SessionParts {
 export function presentSession(parts: SessionParts): Session {
   const { person, activeOrganisationId, now, mailIsCaught } = parts;
   const found = parts.memberships.find((each) => each.organisationId === activeOrganisationId);
-  const timeZone = found?.kind === 'agency' ? found.timeZone : 'UTC';
+  const timeZone = found?.timeZone ?? 'UTC';
   const active = found === undefined ? null : presentMembership(found);
   return {
     person: { id: person.id, name: person.name, email: person.email },

@@ -8,6 +8,9 @@ export const dateSchema = z.iso.date();
 export const personReferenceSchema = z.strictObject({ id: idSchema, name: z.string() });
 export const organisationReferenceSchema = z.strictObject({ id: idSchema, name: z.string() });
 
+/** With the time zone in which the dates of its submittals are told, to both sides. */
+export const agencyReferenceSchema = organisationReferenceSchema.extend({ timeZone: z.string() });
+
 export function pageOf<Item extends z.ZodType>(item: Item) {
   return z.strictObject({ items: z.array(item), nextCursor: z.string().nullable() });
 }

@@ -7,13 +7,14 @@ import { projectListItemSchema } from './projects';
 import { revisionListItemSchema, submittalListItemSchema } from './submittals';
 
 export const homeSchema = z.strictObject({
-  today: dateSchema,
   submittals: z.array(submittalListItemSchema),
   /** The draft, or else the newest revision, that is nearest to being sent; with its findings to look at. */
   current: z
     .strictObject({
       submittalId: idSchema,
       mixDesignation: z.string(),
+      /** The agency's, in which its dates are told. */
+      timeZone: z.string(),
       revision: z.number().int(),
       state: z.string(),
       heading: z.string(),

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { dispositionSchema, summarySchema } from '#rules/engine/finding';
 import { limits } from '../limits';
 import {
+  agencyReferenceSchema,
   dateSchema,
   idSchema,
   instantSchema,
@@ -49,7 +50,7 @@ export const submittalListItemSchema = z.strictObject({
   description: z.string(),
   project: z.strictObject({ id: idSchema, number: z.string(), title: z.string() }),
   contractor: organisationReferenceSchema,
-  agency: organisationReferenceSchema,
+  agency: agencyReferenceSchema,
   revision: revisionListItemSchema,
   standingApproval: z
     .strictObject({ revision: z.number().int(), disposition: dispositionSchema, on: dateSchema })
@@ -74,7 +75,7 @@ export const revisionSchema = z.strictObject({
     lettingOn: dateSchema.nullable(),
   }),
   contractor: organisationReferenceSchema,
-  agency: organisationReferenceSchema,
+  agency: agencyReferenceSchema,
   section: sectionSchema,
   laboratory: z.strictObject({ id: idSchema, name: z.string() }),
   /** "12.5 mm dense-graded surface course · PG 64-22 · 12 million ESAL" */

@@ -37,7 +37,11 @@ export function aRevision(overrides: Partial<Revision> = {}): Revision {
       lettingOn: '2026-01-14',
     },
     contractor: { id: '0192f0a0-0000-7000-8000-000000000003', name: 'Brightwater Paving' },
-    agency: { id: '0192f0a0-0000-7000-8000-000000000004', name: 'Carrow Valley Roads Authority' },
+    agency: {
+      id: '0192f0a0-0000-7000-8000-000000000004',
+      name: 'Carrow Valley Roads Authority',
+      timeZone: 'UTC',
+    },
     section: {
       id: '0192f0a0-0000-7000-8000-000000000009',
       base: edition,

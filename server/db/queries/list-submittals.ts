@@ -84,7 +84,7 @@ function build(db: Database, reader: Reader, filter: SubmittalFilter) {
       changedAt,
       project: { id: projects.id, number: projects.number, title: projects.title },
       contractor: { id: contractor.id, name: contractor.name },
-      agency: { id: agency.id, name: agency.name },
+      agency: { id: agency.id, name: agency.name, timeZone: agency.timeZone },
       revision: revisionColumns,
       summary: checks.summary,
     })

@@ -41,6 +41,7 @@ export async function currentRevision(
   return {
     submittalId: chosen.id,
     mixDesignation: view.mixDesignation,
+    timeZone: view.agency.timeZone,
     revision: view.number,
     state: view.state,
     heading: headingOf(view.number, view.state, view.disposition),

@@ -37,7 +37,6 @@ export const getHomeRoute = route(getHome, async ({ deps, actor }) => {
   );
   const projectRows = await listProjectRows(deps.db, actor);
   return {
-    today: dateOfInstant(deps.now().toISOString(), 'UTC'),
     submittals,
     current: await currentRevision(deps, actor, submittals),
     fromAgency: await fromAgency(deps, actor),

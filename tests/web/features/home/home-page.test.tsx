@@ -17,7 +17,7 @@ const aSubmittal = (last: number, mixDesignation: string, next: string): Home['s
   description: '',
   project: { id: organisation(3, '').id, number: 'CV-2031', title: 'Hollin Ridge Road' },
   contractor: organisation(1, 'Brightwater Paving'),
-  agency: organisation(2, 'Carrow Valley Roads Authority'),
+  agency: { ...organisation(2, 'Carrow Valley Roads Authority'), timeZone: 'UTC' },
   revision: {
     number: 1,
     state: 'draft',
@@ -38,7 +38,6 @@ const aSubmittal = (last: number, mixDesignation: string, next: string): Home['s
 describe("a contractor's home", () => {
   it('says and brings into sight the mix that J and K go to', async () => {
     const home = homeSchema.parse({
-      today: '2026-03-12',
       submittals: [aSubmittal(1, 'BW-125-S4', 'Submit revision 1'), aSubmittal(2, 'BW-190-B1', 'Nothing')],
       current: null,
       fromAgency: [],
@@ -54,6 +53,8 @@ describe("a contractor's home", () => {
     const row = (await screen.findByRole('rowheader', { name: 'BW-190-B1 r1' })).closest('tr');
     const brought = vi.fn<() => void>();
     if (row) row.scrollIntoView = brought;
+    // The keys are bound once the drawn page has settled.
+    await act(async () => undefined);
     act(() => void fireEvent.keyDown(document.body, { key: 'j' }));
     act(() => void fireEvent.keyDown(document.body, { key: 'j' }));
     expect(said).toEqual(['BW-125-S4 revision 1, Submit revision 1', 'BW-190-B1 revision 1, Nothing']);

@@ -7,7 +7,6 @@ import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { paths } from '../../../lib/paths';
 import { useRevision } from '../../../lib/queries/revision-query';
-import { useSession } from '../../../lib/queries/session-query';
 import { useRevisionParams } from '../../../lib/revision-params';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useChecks } from '../api/kept-checks';
@@ -17,7 +16,7 @@ export function ChecksPage() {
   const params = useRevisionParams();
   const revision = useRevision(params);
   const checks = useChecks(params);
-  const { timeZone } = useSession();
+  const { timeZone } = revision.agency;
   usePageTitle(`Checks of ${revision.mixDesignation} revision ${revision.number}`);
   return (
     <MarginPage>

@@ -10,7 +10,6 @@ import { PageHead } from '../../../components/ui/page-head';
 import { RunningFoot } from '../../../components/ui/running-foot';
 import { paths } from '../../../lib/paths';
 import { useRevision } from '../../../lib/queries/revision-query';
-import { useSession } from '../../../lib/queries/session-query';
 import { useRevisionParams } from '../../../lib/revision-params';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useKeptCheck } from '../api/kept-checks';
@@ -20,7 +19,7 @@ export function KeptCheckPage({ number }: { number: number }) {
   const params = useRevisionParams();
   const revision = useRevision(params);
   const check = useKeptCheck(params, number);
-  const { timeZone } = useSession();
+  const { timeZone } = revision.agency;
   const made = formatInstant(check.madeAt, timeZone);
   usePageTitle(`Check of ${made}, ${revision.mixDesignation} revision ${revision.number}`);
   return (

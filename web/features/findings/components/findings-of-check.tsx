@@ -3,7 +3,6 @@ import type { Revision } from '#shared/contracts/submittals';
 import { MarginPage } from '../../../components/ui/margin-page';
 import { useCheck } from '../../../lib/queries/check-query';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
-import { useSession } from '../../../lib/queries/session-query';
 import { useTakeRevision } from '../api/take-revision';
 import { useAddressRow } from '../hooks/use-address-row';
 import { useLedgerKeys } from '../hooks/use-ledger-keys';
@@ -21,7 +20,6 @@ import { SubmitSection } from './submit-section';
 
 export function FindingsOfCheck({ params, revision }: { params: RevisionParams; revision: Revision }) {
   const check = useCheck(params);
-  const session = useSession();
   const state = useLedgerState(check);
   useAddressRow(state);
   useLedgerKeys(state, revision);
@@ -34,7 +32,7 @@ export function FindingsOfCheck({ params, revision }: { params: RevisionParams; 
       params,
       revision,
       check,
-      timeZone: session.timeZone,
+      timeZone: revision.agency.timeZone,
       open,
       toggle,
       unfolded,
@@ -43,7 +41,19 @@ export function FindingsOfCheck({ params, revision }: { params: RevisionParams; 
       setDraft,
       take,
     }),
-    [params, revision, check, session.timeZone, open, toggle, unfolded, setUnfolded, draft, setDraft, take],
+    [
+      params,
+      revision,
+      check,
+      revision.agency.timeZone,
+      open,
+      toggle,
+      unfolded,
+      setUnfolded,
+      draft,
+      setDraft,
+      take,
+    ],
   );
   return (
     <LedgerContext value={context}>

@@ -2,17 +2,18 @@ import type { RevisionListItem } from '#shared/contracts/submittals';
 import { dateOfInstant, formatDate } from '#shared/format/dates';
 import { OutcomeTally } from '../../../components/ui/outcome-tally';
 import { SectionHead } from '../../../components/ui/section-head';
-import { useSession } from '../../../lib/queries/session-query';
 
 /** One row a revision, the first one first. */
 export function History({
   mixDesignation,
+  timeZone,
   revisions,
 }: {
   mixDesignation: string;
+  /** The agency's. */
+  timeZone: string;
   revisions: readonly RevisionListItem[];
 }) {
-  const { timeZone } = useSession();
   const day = (instant: string | null) => (instant ? formatDate(dateOfInstant(instant, timeZone)) : null);
   return (
     <section>

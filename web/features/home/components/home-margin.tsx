@@ -48,8 +48,9 @@ export function HomeMargin({ home }: { home: Home }) {
 }
 
 function FromAgency({ home }: { home: Home }) {
-  const { timeZone } = useSession();
+  const { timeZone: ownZone } = useSession();
   const { lastLetter } = home;
+  const zones = new Map(home.submittals.map(({ id, agency }) => [id, agency.timeZone]));
   return (
     <section>
       <h2>From the agency</h2>
@@ -61,7 +62,7 @@ function FromAgency({ home }: { home: Home }) {
             key={note.id}
             text={note.text}
             by={note.by}
-            on={formatInstantShort(note.at, timeZone)}
+            on={formatInstantShort(note.at, zones.get(note.submittalId) ?? ownZone)}
             state={note.clause ? `on ${note.mixDesignation} ${note.clause}` : `on ${note.mixDesignation}`}
           >
             <Link to={paths.return(note.submittalId, note.revision)}>Answer</Link>

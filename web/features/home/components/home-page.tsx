@@ -24,7 +24,7 @@ import '../home.css';
 export function HomePage() {
   usePageTitle('Home');
   const home = useHome();
-  const { active } = useSession();
+  const { active, today } = useSession();
   const { cursor, setCursor } = useHomeKeys();
   const { current } = home;
   const navigate = useNavigate();
@@ -34,7 +34,7 @@ export function HomePage() {
   };
   return (
     <MarginPage marginWidthPx={300} aside={<HomeMargin home={home} />}>
-      <PageHead title={active?.organisationName} rest={formatDateWithWeekday(home.today)} />
+      <PageHead title={active?.organisationName} rest={formatDateWithWeekday(today)} />
       {home.abilities.upload ? (
         <FileDrop
           title="Drop a workbook to check it"
@@ -49,7 +49,11 @@ export function HomePage() {
       {current ? (
         <>
           <CurrentRevision current={current} />
-          <History mixDesignation={current.mixDesignation} revisions={current.history} />
+          <History
+            mixDesignation={current.mixDesignation}
+            timeZone={current.timeZone}
+            revisions={current.history}
+          />
         </>
       ) : null}
       <RunningFoot

@@ -6,7 +6,6 @@ import { Mark } from '../../../components/ui/mark';
 import { markOfOutcome } from '../../../components/ui/marks';
 import { addressOfRevision } from '../../../lib/next-address';
 import { paths } from '../../../lib/paths';
-import { useSession } from '../../../lib/queries/session-query';
 import { nextCounts } from '../lib/next-counts';
 import { standingOf } from '../lib/standing-words';
 
@@ -81,7 +80,7 @@ export function mixRowId(submittalId: string): string {
 }
 
 function Standing({ submittal }: { submittal: SubmittalListItem }) {
-  const { timeZone } = useSession();
+  const { timeZone } = submittal.agency;
   const { strong, rest } = standingOf(submittal, (instant) => formatInstantShort(instant, timeZone));
   return (
     <>

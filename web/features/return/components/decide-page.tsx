@@ -14,7 +14,6 @@ import { announce } from '../../../lib/announce';
 import { paths } from '../../../lib/paths';
 import { checkQuery } from '../../../lib/queries/check-query';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
-import { useSession } from '../../../lib/queries/session-query';
 import { useShortcuts } from '../../../lib/shortcuts';
 import { useMakeReturnReady, useSendReturn } from '../api/send-return';
 import { useReturnDraft } from '../hooks/use-return-draft';
@@ -36,7 +35,7 @@ export function DecidePage({
   view: ReturnView;
   revision: Revision;
 }) {
-  const { timeZone } = useSession();
+  const { timeZone } = revision.agency;
   const draft = useReturnDraft(params, view);
   const { isActing, sendNow, sendToSign, error } = useSending(params, view, draft);
   const check = useQuery(checkQuery(params));

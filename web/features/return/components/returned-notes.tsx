@@ -10,8 +10,7 @@ import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { SectionHead } from '../../../components/ui/section-head';
 import { announce } from '../../../lib/announce';
 import { useContractForm } from '../../../lib/form';
-import type { RevisionParams } from '../../../lib/queries/revision-query';
-import { useSession } from '../../../lib/queries/session-query';
+import { type RevisionParams, useRevision } from '../../../lib/queries/revision-query';
 import { useReturnedNotes } from '../api/list-returned-notes';
 import { useWriteReply } from '../api/write-reply';
 
@@ -41,7 +40,7 @@ export function ReturnedNotes({ params }: { params: RevisionParams }) {
 }
 
 function ReturnedNote({ params, entry }: { params: RevisionParams; entry: Entry }) {
-  const { timeZone } = useSession();
+  const { timeZone } = useRevision(params).agency;
   const [isWriting, setIsWriting] = useState(false);
   const { note, replies } = entry;
   const about = entry.clause ?? entry.findingTitle ?? 'the submittal';

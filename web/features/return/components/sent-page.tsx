@@ -28,7 +28,8 @@ export function SentPage({
   view: ReturnView;
   revision: Revision;
 }) {
-  const { timeZone, active } = useSession();
+  const { active } = useSession();
+  const { timeZone } = revision.agency;
   const { sent } = view;
   if (!sent) return null;
   const next = revision.number + 1;

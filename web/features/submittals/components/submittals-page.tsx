@@ -65,9 +65,9 @@ function NoSubmittals({ filters }: { filters: SubmittalFilters }) {
 }
 
 function SubmittalTable({ items }: { items: readonly SubmittalListItem[] }) {
-  const { active, timeZone } = useSession();
+  const { active } = useSession();
   const isAgency = active?.kind === 'agency';
-  const columns = useMemo(() => columnsFor({ isAgency, timeZone }), [isAgency, timeZone]);
+  const columns = useMemo(() => columnsFor({ isAgency }), [isAgency]);
   return (
     <DataTable
       caption="Submittals, newest change first until sorted otherwise"
@@ -79,13 +79,7 @@ function SubmittalTable({ items }: { items: readonly SubmittalListItem[] }) {
   );
 }
 
-function columnsFor({
-  isAgency,
-  timeZone,
-}: {
-  isAgency: boolean;
-  timeZone: string;
-}): DataColumn<SubmittalListItem>[] {
+function columnsFor({ isAgency }: { isAgency: boolean }): DataColumn<SubmittalListItem>[] {
   return [
     {
       id: 'mix',
@@ -133,7 +127,7 @@ function columnsFor({
       number: true,
       className: 'submittal-changed',
       sortBy: (item) => item.updatedAt,
-      cell: (item) => formatInstantShort(item.updatedAt, timeZone),
+      cell: (item) => formatInstantShort(item.updatedAt, item.agency.timeZone),
     },
   ];
 }

@@ -2,8 +2,7 @@ import { getReplacedWorkbook, type Revision } from '#shared/contracts/submittals
 import { dateOfInstant, formatDate } from '#shared/format/dates';
 import { SectionHead } from '../../../components/ui/section-head';
 import { hrefOf } from '../../../lib/api';
-import type { RevisionParams } from '../../../lib/queries/revision-query';
-import { useSession } from '../../../lib/queries/session-query';
+import { type RevisionParams, useRevision } from '../../../lib/queries/revision-query';
 
 interface ReplacedWorkbooksProps {
   params: RevisionParams;
@@ -12,7 +11,7 @@ interface ReplacedWorkbooksProps {
 
 /** What was uploaded before: it stays with the contractor, as it was. */
 export function ReplacedWorkbooks({ params, replaced }: ReplacedWorkbooksProps) {
-  const { timeZone } = useSession();
+  const { timeZone } = useRevision(params).agency;
   if (replaced.length === 0) return null;
   return (
     <section className="pt-4">
