@@ -14,7 +14,9 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          include: ['tests/{rules,shared,server,web,reference,cases,workbooks}/**/*.test.{ts,tsx}'],
+          include: [
+            'tests/{rules,shared,server,web,reference,cases,workbooks,second-evaluator}/**/*.test.{ts,tsx}',
+          ],
           setupFiles: ['tests/setup/fail-on-console.ts'],
         },
       },

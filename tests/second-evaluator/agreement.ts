@@ -1,8 +1,8 @@
 import { evaluate } from '#rules/engine/evaluate';
-import type { Outcome } from '#rules/engine/finding';
-import { type MixRecord, mixRecordSchema } from '#rules/record';
+import type { Finding, Outcome } from '#rules/engine/finding';
+import { mixRecordSchema } from '#rules/record';
 import { type ResolvedEdition, resolveEdition } from '#rules/rule-sets/resolve';
-import { type Layer, layerSchema, type RuleSet, ruleSetSchema } from '#rules/rule-sets/schema';
+import { layerSchema, ruleSetSchema } from '#rules/rule-sets/schema';
 import type { GeneratedCase } from './generated/parts';
 import { verdictsOf } from './own/verdicts';
 import { type Verdict, worldOf } from './own/world';
@@ -15,29 +15,35 @@ export interface JudgedTwice {
 }
 
 /** One case judged by the engine and by the second evaluator, finding by finding. */
-export function judgeTwice({ base, layers, record, context }: GeneratedCase): JudgedTwice {
-  const parsedBase = ruleSetSchema.parse(base);
-  const parsedLayers = layers.map((layer) => layerSchema.parse(layer));
-  const parsedRecord = mixRecordSchema.parse(record);
-  const edition = resolved(parsedBase, parsedLayers);
-  const result = evaluate(parsedRecord, edition, context);
-  const findings = result.findings.filter(({ clause }) => clause !== null);
-  const verdicts = verdictsOf(worldOf(parsedRecord, parsedBase, parsedLayers, context));
+export function judgeTwice(drawn: GeneratedCase): JudgedTwice {
+  const findings = engineFindings(drawn);
+  const base = ruleSetSchema.parse(drawn.base);
+  const layers = drawn.layers.map((layer) => layerSchema.parse(layer));
+  const world = worldOf(mixRecordSchema.parse(drawn.record), base, layers, drawn.context);
   return {
-    disagreements: compared(findings.map(asVerdict), verdicts),
+    disagreements: compared(findings.map(asVerdict), verdictsOf(world)),
     findings: findings.map(({ kind, outcome, borderline }) => ({ kind, outcome, borderline })),
   };
 }
 
-export type Judged = { record: MixRecord; edition: ResolvedEdition };
+/** Where the engine parts with what was expected of a case. */
+export function disagreementsWith(drawn: GeneratedCase, expected: Verdict[]): string[] {
+  return compared(engineFindings(drawn).map(asVerdict), expected);
+}
 
-function resolved(base: RuleSet, layers: Layer[]): ResolvedEdition {
-  const resolution = resolveEdition(base, layers);
+/** The engine's findings on rules; what does not add up in the data is no part of the comparison. */
+export function engineFindings(drawn: GeneratedCase): Finding[] {
+  const record = mixRecordSchema.parse(drawn.record);
+  const result = evaluate(record, editionOf(drawn), drawn.context);
+  return result.findings.filter(({ clause }) => clause !== null);
+}
+
+function editionOf({ base, layers }: GeneratedCase): ResolvedEdition {
+  const parsed = layers.map((layer) => layerSchema.parse(layer));
+  const resolution = resolveEdition(ruleSetSchema.parse(base), parsed);
   if (resolution.ok) return resolution.edition;
   throw new Error(`A drawn edition does not resolve: ${JSON.stringify(resolution.problems)}`);
 }
-
-type Finding = ReturnType<typeof evaluate>['findings'][number];
 
 function asVerdict(finding: Finding): Verdict {
   return {

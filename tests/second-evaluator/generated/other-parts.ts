@@ -53,7 +53,16 @@ function oneOf(
   return { table: `${id}-allowed`, column: 'allowed' };
 }
 
-const DAYS = ['2025-01-31', '2025-08-31', '2026-02-09', '2026-02-28', '2026-03-09', '2026-03-10'];
+const DAYS = [
+  '2026-02-09',
+  '2025-01-31',
+  '2025-02-28',
+  '2025-08-31',
+  '2026-01-28',
+  '2026-02-28',
+  '2026-03-09',
+  '2026-03-10',
+];
 
 /** A document, stated or enclosed, of an age that just holds or just does not, with or without a date. */
 export function documentPart(draw: Draw, id: string, type: string): Part {
@@ -92,7 +101,7 @@ export function documentPart(draw: Draw, id: string, type: string): Part {
       kind: 'document',
       type,
       ...(enclosed ? { enclosed } : {}),
-      ...(draw.chance(65) ? { maximumAgeMonths: draw.oneOf([1, 2, 6, 12, 13]) } : {}),
+      ...(draw.chance(75) ? { maximumAgeMonths: draw.oneOf([1, 6, 12]) } : {}),
       ...(on === undefined ? {} : { on }),
     },
     limit: { present: true },

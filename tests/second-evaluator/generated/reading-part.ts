@@ -33,7 +33,9 @@ export function readingPart(draw: Draw, id: string, candidate: Candidate): Part 
   const where = drawWhere(draw, candidate, wanted, count);
   part.tables.push(...limit.tables, ...rounding.tables);
   part.readings.push(...limit.readings, ...where.readings);
-  const shape: Shape = { candidate, wanted, count, scale, statistic };
+  const isSpread = statistic === 'range' || statistic === 'standard-deviation';
+  const spread = isSpread ? [judgedScale.min, judgedScale.max] : [];
+  const shape: Shape = { candidate, wanted, count, scale, statistic, spread };
   const drawn = drawReadings(draw, shape);
   part.readings.push(...drawn.readings);
   part.doubts.push(...drawn.doubts);

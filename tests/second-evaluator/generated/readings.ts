@@ -2,7 +2,7 @@ import type { At, Wanted } from './conditions';
 import { type Draw, decimal } from './draw';
 import type { Scale } from './limits';
 import type { DoubtInput, ReadingInput } from './parts';
-import type { Candidate } from './quantities';
+import { type Candidate, REPLICATED } from './quantities';
 
 export interface Shape {
   candidate: Candidate;
@@ -10,6 +10,8 @@ export interface Shape {
   count: number;
   scale: Scale;
   statistic: string;
+  /** Limits of a range or a deviation, in the steps of the scale. */
+  spread?: number[];
 }
 
 interface Drawn {
@@ -24,18 +26,38 @@ export function drawReadings(draw: Draw, shape: Shape): Drawn {
   const isMissing = draw.chance(9);
   const isLabelled = draw.chance(92) || count > 1;
   const centre = draw.whole(0, 1);
+  const spread = drawSpread(draw, shape);
   for (let place = 0; place < count && !isMissing; place += 1) {
     const at: At = {
       ...(draw.chance(70) && candidate.isOfAggregate !== true ? { trial: 'design' } : {}),
       ...wanted.readings(place),
       ...(isLabelled ? { specimen: String(place + 1) } : {}),
     };
-    drawn.readings.push(drawReading(draw, shape, at, centre));
+    const reading = drawReading(draw, shape, at, centre);
+    drawn.readings.push(
+      spread === null || reading.value === null ? reading : { ...reading, value: spread(place) },
+    );
   }
   const [first] = drawn.readings.filter(({ quantity }) => quantity === candidate.id);
   if (first !== undefined && draw.chance(5)) drawn.readings.push(again(draw, first));
   if (draw.chance(9)) drawn.doubts.push(drawDoubt(draw, shape));
   return drawn;
+}
+
+/**
+ * Values whose range or deviation is a limit, and values that are all the same. In binary arithmetic they are a hair
+ * off.
+ */
+function drawSpread(
+  draw: Draw,
+  { statistic, scale, count, spread = [] }: Shape,
+): ((place: number) => number) | null {
+  if (!(REPLICATED as readonly string[]).includes(statistic) || !draw.chance(75)) return null;
+  const { min, max, decimals } = scale;
+  const start = draw.oneOf([min, max, min + 1]);
+  const whole = spread.length > 0 && draw.chance(70) ? draw.oneOf(spread) : draw.whole(0, 8);
+  if (statistic === 'range') return (place) => decimal(start + (place === count - 1 ? whole : 0), decimals);
+  return (place) => decimal(start + place * whole, decimals);
 }
 
 /** The same specimen once more, the same number or another, or a mean beside its specimens. */

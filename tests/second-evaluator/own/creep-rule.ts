@@ -27,14 +27,6 @@ interface Point {
 
 function judgeCreep(world: World, rule: CreepRule): Judgement {
   const { measure } = rule;
-  const value = compliance(world, measure);
-  if (typeof value === 'string') return without(value);
-  const measures = measuresOf({ world, unit: knownOf('creep-compliance').unit }, rule);
-  if (measures.is !== 'resolved') return without(measures.is);
-  return judged(value, measures.value, precisionOf(rule, undefined, 1));
-}
-
-function compliance(world: World, measure: CreepComplianceMeasure): Allowed | 'not shown' | 'undecided' {
   const { time, source, temperature, stress } = measure;
   const wanted = { temperature, ...(stress === undefined ? {} : { stress }) };
   const found = pointsOf(world, wanted);
@@ -42,10 +34,15 @@ function compliance(world: World, measure: CreepComplianceMeasure): Allowed | 'n
   const atTime = points.filter((point) => isSameCondition('time', time, point.time));
   const isMeasured = source === 'measured' || (source === 'either' && atTime.length > 0);
   const doubted = isMeasured ? { ...wanted, time } : wanted;
-  if (QUANTITIES.some((quantity) => isDoubted(world, quantity, doubted))) return 'undecided';
-  if (typeof found === 'string') return found;
-  if (!isMeasured) return fitted(points, measure);
-  return atTime.length === 0 ? 'not shown' : meanOfSpecimens(atTime);
+  if (QUANTITIES.some((quantity) => isDoubted(world, quantity, doubted))) return without('undecided');
+  if (typeof found === 'string') return without(found);
+  const measures = measuresOf({ world, unit: knownOf('creep-compliance').unit }, rule);
+  if (measures.is !== 'resolved') return without(measures.is);
+  if (isMeasured && atTime.length === 0) return without('not shown');
+  const value = isMeasured ? meanOfSpecimens(atTime) : fitted(points, measure);
+  return value === 'undecided'
+    ? without(value)
+    : judged(value, measures.value, precisionOf(rule, undefined, 1));
 }
 
 const QUANTITIES = ['creep-compliance', 'creep-strain'];

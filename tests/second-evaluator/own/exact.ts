@@ -60,8 +60,11 @@ export function magnitude(value: Exact): Exact {
 }
 
 export function asNumber(value: Exact): number {
-  return Number(value.top) / Number(value.bottom);
+  return Number((value.top * SCALE) / value.bottom) / Number(SCALE);
 }
+
+/** Quotients of long numbers would leave the range of a floating one. */
+const SCALE = 10n ** 40n;
 
 function whole10(digits: bigint, zeros: number): Exact {
   return { top: digits * 10n ** BigInt(zeros), bottom: 1n };

@@ -97,11 +97,13 @@ export function fitOf(
     if (stated.stockpile !== undefined) return 'no';
   } else if (stated.stockpile === undefined) fit = 'perhaps';
   else if (stated.stockpile !== wanted.stockpile) return 'no';
+  let isUnresolved = false;
   for (const name of CONDITIONS) {
     const value = wanted[name];
     const found = value === undefined ? 'yes' : agreement(world, name, value, stated[name]);
-    if (found === 'no' || found === 'unresolved') return found;
+    if (found === 'no') return 'no';
+    if (found === 'unresolved') isUnresolved = true;
     if (found === 'perhaps') fit = 'perhaps';
   }
-  return fit;
+  return isUnresolved ? 'unresolved' : fit;
 }
