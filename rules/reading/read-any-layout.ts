@@ -1,4 +1,5 @@
 import { allQuantities } from '../quantities/registry';
+import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import type { CellGrid } from './cell-grid';
 import type { ReadingEdition } from './edition-contents';
@@ -48,7 +49,11 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
       reading,
       edition,
       decimal: decimals.get(index.sheet.name) ?? '.',
-      ambient: withoutDesign({ ...farConditions(name), ...farConditions(dashed) }),
+      ambient: withoutDesign({
+        ...sheetTemperature(index.sheet.name),
+        ...farConditions(name),
+        ...farConditions(dashed),
+      }),
       subset: name.subset,
       domains: [...name.domains, ...dashed.domains],
       candidates,
@@ -80,6 +85,16 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
     answered: log.answered,
     stale: answers.filter((answer) => !log.answered.includes(answer)),
   };
+}
+
+/** "Creep -10C", "IDT_20C", "Hamburg 122F": a sheet's name leaves out the sign for degrees. */
+function sheetTemperature(name: string): Conditions {
+  const match =
+    /(?:^|[\s_(])((?:minus |neg |m)?-?\d{1,3}(?:[.,]\d)?)\s*(?:°|deg)?\s*([CF])(?![\p{L}\d])/iu.exec(name);
+  if (!match?.[1] || !match[2]) return {};
+  const degrees = Number(match[1].replace(/^(?:minus |neg |m)/i, '-').replace(',', '.'));
+  const converted = convert(degrees, `°${match[2].toUpperCase()}`, '°C');
+  return converted.ok ? { temperature: converted.value } : {};
 }
 
 /** A sheet called "JMF" holds the submittal; what is told apart as the design on it says so itself. */

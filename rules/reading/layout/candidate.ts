@@ -18,6 +18,8 @@ export interface Candidate {
   method: string | null;
   testedOn: string | null;
   isAverage: boolean;
+  /** Stands in a table with headings. */
+  isHeaded: boolean;
   /** Its row, and not its column, says which specimen it is. */
   specimenOfRow: boolean;
   subset: 'dry' | 'conditioned' | null;

@@ -1,3 +1,4 @@
+import { sieveFromName } from '../../quantities/sieves';
 import type { Cell, SheetGrid } from '../cell-grid';
 import type { CellKinds } from './cell-kind';
 import { isHeading, type LabelMeaning, type LabelReader } from './label-meaning';
@@ -195,7 +196,9 @@ function tablesOf(region: Region, around: Surroundings, merges: Map<string, numb
       continue;
     }
     const opens: boolean =
-      table === null || (table.rows.length > 0 && isHeadingRow(row, next, around, table));
+      table === null ||
+      (table.rows.length > 0 && isHeadingRow(row, next, around, table)) ||
+      widens(table, row, next, around);
     if (opens) {
       table = { titles, headings: [], rows: [], firstColumn, lastColumn: firstColumn };
       titles = [];
@@ -207,6 +210,18 @@ function tablesOf(region: Region, around: Surroundings, merges: Map<string, numb
     current.lastColumn = Math.max(current.lastColumn, row.cells.at(-1)?.column ?? 1);
   }
   return tables;
+}
+
+/** Under lines of label and value a wider row of heads begins the table that they speak for. */
+function widens(table: Table, row: TableRow, next: TableRow | undefined, around: Surroundings): boolean {
+  const isList =
+    table.headings.length === 0 &&
+    table.rows.length > 0 &&
+    table.rows.every(({ cells }) => cells.length <= 2);
+  if (!isList || row.cells.length < 3 || !next || next.cells.length < 3) return false;
+  const first = around.kinds.of(row.cells[0] as Cell);
+  if (first !== 'text' || !next.cells.some((cell) => around.kinds.of(cell) === 'value')) return false;
+  return belongsToHeading(row, next, { ...table, rows: [], headings: [] }, around);
 }
 
 /** One text alone in its row; over columns to the right of the first it heads them instead. */
@@ -271,8 +286,19 @@ export function isPair(row: TableRow, { kinds, labels }: Surroundings): boolean 
     label.quantities.length > 0 ||
     label.keys.length > 0;
   if (!asks) return false;
+  const isDated =
+    texts.length === 2 &&
+    row.cells.length === 2 &&
+    label.keys.some(
+      (key) =>
+        key === 'date' || key === 'testedOn' || key === 'validTo' || key === 'issuer' || key === 'reference',
+    );
   const isFact =
-    label.attribute !== null || label.document !== null || label.furniture || /:\s*$/.test(first.text);
+    isDated ||
+    label.attribute !== null ||
+    label.document !== null ||
+    label.furniture ||
+    /:\s*$/.test(first.text);
   const answers = !isHeading(answer) || answer.unknown.length > 0;
   if (isFact)
     return (
@@ -293,15 +319,10 @@ function belongsToHeading(
   around: Surroundings,
 ): boolean {
   const { kinds, labels } = around;
-  if (!next && table.headings.length === 0) return false;
-  const isOpen =
-    table.rows.length === 0 &&
-    next !== undefined &&
-    next.cells.length > 1 &&
-    row.cells.filter((cell) => saysCondition(cell, around)).length > 1;
-  const values = row.cells.filter(
-    (cell) => kinds.of(cell) === 'value' && !(isOpen && saysCondition(cell, around)),
-  );
+  if (!next && table.headings.length === 0) return table.rows.length === 0 && isHeadsOnly(row, around);
+  const figures =
+    table.rows.length === 0 && next !== undefined && next.cells.length > 1 ? headFigures(row, around) : [];
+  const values = row.cells.filter((cell) => kinds.of(cell) === 'value' && !figures.includes(cell));
   const texts = row.cells.filter(
     (cell) => kinds.of(cell) === 'text' || (kinds.of(cell) === 'value' && !values.includes(cell)),
   );
@@ -310,11 +331,48 @@ function belongsToHeading(
     if (texts.length === 0) return row.cells.some((cell) => kinds.of(cell) === 'unit');
     if (row.cells.length === 1) return true;
     const meanings = texts.map(({ text }) => labels.read(text));
+    const [label, ...answers] = meanings;
+    const isAnswered =
+      label &&
+      label.quantities.length > 0 &&
+      answers.length > 0 &&
+      answers.every((meaning) => !isHeading(meaning) && /\d/.test(meaning.text));
+    if (isAnswered) return false;
     if (meanings.some((meaning) => isHeading(meaning))) return true;
     // Names of stockpiles or specimens over columns of values.
     return next?.cells.some((cell) => kinds.of(cell) === 'value' || kinds.of(cell) === 'unit') ?? false;
   }
   return isNumberedHeading(row, values, table, around) || isKeyedHeading(row, next, table, around);
+}
+
+/** Figures that head columns: sieves in a run, and texts like "-20 °C" or "19 mm"; one alone is a value. */
+function headFigures(row: TableRow, around: Surroundings): Cell[] {
+  const said = row.cells.filter(
+    (cell) =>
+      saysCondition(cell, around) ||
+      (cell.kind === 'text' && around.kinds.of(cell) === 'value' && sieveFromName(cell.text) !== null),
+  );
+  if (said.length > 1) return said;
+  const numbers = row.cells.filter(({ kind }) => kind === 'number');
+  const openings = numbers.map(({ value }) => sieveFromName(value));
+  const falls = openings.every(
+    (opening, at) => opening !== null && (at === 0 || opening < (openings[at - 1] as number)),
+  );
+  const first = row.cells[0];
+  const isNamed =
+    first !== undefined &&
+    around.kinds.of(first) === 'text' &&
+    around.labels.read(first.text).quantities.length === 0;
+  return falls && isNamed && numbers.length > 3 ? numbers : [];
+}
+
+/** A row of headings that stands alone, with a blank row under it. */
+function isHeadsOnly(row: TableRow, { kinds, labels }: Surroundings): boolean {
+  const texts = row.cells.filter((cell) => kinds.of(cell) === 'text');
+  const heads = texts.filter(
+    ({ text }) => isHeading(labels.read(text)) && labels.read(text).unknown.length === 0,
+  );
+  return texts.length > 2 && texts.length === row.cells.length && heads.length * 3 >= texts.length * 2;
 }
 
 /** "-20 °C" and "10 Hz" are figures that head what stands under them. */

@@ -18,7 +18,7 @@ export function statedConditions(text: string): StatedConditions {
   const found: StatedConditions = { at: {}, binder: null, rest: plainText(text) };
   // Without a digit or one of these words there is nothing to take, and most labels have neither.
   if (
-    !/\d|\b(?:trial|mix|blend|n|sodium|magnesium|dry|wet|cond|uncond|mag|soak|[a-z]*sulf)/i.test(
+    !/\d|\b(?:trial|mix|blend|n|sodium|magnesium|dry|left|right|wet|cond|uncond|mag|soak|[a-z]*sulf)/i.test(
       found.rest,
     ) &&
     !namedIds.test(found.rest)
@@ -39,6 +39,14 @@ const namedIds =
   /\b(?:versuch|variante|essai|ensayo|mezcla|mischung|formule|rezept|m[eé]lange|core|specimen|sample|replicate|rep|puck|pill|plug|sublot|lot|probe|prüfkörper|probekörper|bohrkern|éprouvette|eprouvette|carotte|échantillon|probeta|testigo|muestra|run|briquette)\b/i;
 
 const patterns: [RegExp, Take][] = [
+  [
+    /\b(left|right)(?:[ -](?:wheel|track|side))?\b/i,
+    (match, found) => {
+      found.at.specimen = match[1] ?? '';
+      // "Left" alone is a name like any other; beside a quantity it says which wheel.
+      return /\p{L}{3}/u.test(found.rest.replace(match[0], ''));
+    },
+  ],
   [
     new RegExp(
       String.raw`(?:\(|@|\bat\b|\bà\b|\ba\b|\bbei\b|,|=|:|^|\s)\s*(${number})\s*(°\s*[CF]|deg\.?\s*[CF]|º\s*[CF]|℃|℉)\b\.?|(?:@|\bat\b|\bbei\b|^)\s*(${number})\s*([CF])\s*\)?$`,

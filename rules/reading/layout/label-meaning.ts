@@ -97,7 +97,12 @@ const bracketedLimit =
 function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   const domains = domainsIn(text);
   const stated = statedConditions(text.replace(bracketedLimit, ' '));
-  const taken = labelUnit(stated.rest);
+  const namesSieve =
+    /pass|pasa|p[ _-]?0|p[ _-]?\d{2,3}\b|retain|reten|refus|durchgang|rückstand|minus|tamis|finer|^\s*-\s*(?:no|#)?\s*200/i.test(
+      text,
+    );
+  const sieve = namesSieve ? sieveInLabel(stated.rest) : null;
+  const taken = labelUnit(sieve ? sieve.rest : stated.rest);
   const meaning: LabelMeaning = {
     ...emptyMeaning(text, 0),
     at: stated.at,
@@ -116,15 +121,8 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
         text,
       ),
   };
-  const sieve =
-    /pass|pasa|p[ _-]?0|p[ _-]?\d{2,3}\b|retain|reten|refus|durchgang|rückstand|minus|tamis|finer|^\s*-\s*(?:no|#)?\s*200/i.test(
-      text,
-    )
-      ? sieveInLabel(taken.rest)
-      : null;
   if (sieve) meaning.at = { ...meaning.at, sieve: sieve.sieve };
-  const rest = sieve ? sieve.rest : taken.rest;
-  const tokens = tokensOf(rest);
+  const tokens = tokensOf(taken.rest);
   meaning.words = tokens.length;
   const matches: PhraseMatch[] = [];
   for (let at = 0; at < tokens.length; ) {
@@ -191,7 +189,11 @@ function addSenses(meaning: LabelMeaning, matches: PhraseMatch[], tokens: string
     meaning.attribute = namesOf(whole, 'attribute')[0] ?? meaning.attribute;
     meaning.document = namesOf(whole, 'document')[0] ?? meaning.document;
   }
-  if (meaning.quantities.includes('binder-content') && tokens.some((token) => designBinder.has(token))) {
+  const isTarget = meaning.quantities.includes('percent-passing') && tokens.includes('jmf');
+  if (
+    isTarget ||
+    (meaning.quantities.includes('binder-content') && tokens.some((token) => designBinder.has(token)))
+  ) {
     meaning.at = { trial: 'design', ...meaning.at };
   }
 }

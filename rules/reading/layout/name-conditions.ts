@@ -44,6 +44,10 @@ function asConditions(
   return doubtOf(understood.reason, alternatives);
 }
 
+/** What a binder or a mix has gone through before the test. */
+const agings =
+  /^(?:original|unaged|tank|rtfo\w*|pav\w*|rtfo\s*\+\s*pav|stoa|ltoa|short[- ]term.*|long[- ]term.*|aged|\d+\s*h\b.*)$/i;
+
 const combined =
   /^(?:blend|combined|combination|composite|total|all|total blend|combined blend|combined gradation|combined aggregate|aggregate blend|blended|job mix blend|gemisch|gesamt|kornmischung|m[ée]lange|combin[ée]e?|combinad[oa]|mezcla|mezcla combinada|sieblinie|resultante|courbe|mixture|mix|theoretical blend|calculated blend|total aggregate|combined agg\.?|blend gradation|gesteinskörnungsgemisch|mineralstoffgemisch|stockpile blend|computed blend|blend \(calc(?:ulated)?\.?\)|result)\.?$/i;
 
@@ -52,6 +56,7 @@ function namedCondition(key: ConditionName, text: string, meaning: LabelMeaning)
   if (key === 'laboratory') return at.laboratory ? { laboratory: at.laboratory } : undefined;
   if (key === 'variant') {
     if (at.variant !== undefined) return { variant: at.variant };
+    if (agings.test(text)) return { aging: text };
     return meaning.subset ? { variant: meaning.subset } : { variant: text.toLowerCase() };
   }
   if (key === 'stockpile') {

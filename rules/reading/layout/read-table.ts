@@ -1,4 +1,5 @@
 import { quantityById } from '../../quantities/registry';
+import { sieveFromName } from '../../quantities/sieves';
 import type { Conditions } from '../../record';
 import type { Cell } from '../cell-grid';
 import type { ConditionName } from '../mapping';
@@ -191,6 +192,7 @@ function nameKeyOf({ table, columns, titles, labels, kinds, tableDomains }: Tabl
   const values = [...columns.values()].filter(({ kind }) => kind === 'value');
   const said = [...columns.values()].find((column) => column.corner !== null)?.corner;
   if (said) return said;
+  if (headsAreSieves(values.flatMap(({ nameCell }) => nameCell ?? []))) return 'sieve';
   const keyed = [...columns.values()].flatMap(({ key }) => key ?? []);
   if (keyed.includes('sieve')) return 'stockpile';
   if (keyed.includes('stockpile')) return 'specimen';
@@ -227,6 +229,20 @@ function nameKeyOf({ table, columns, titles, labels, kinds, tableDomains }: Tabl
   return 'specimen';
 }
 
+/** Named openings, or bare figures that fall along the series; 1, 2 and 3 number specimens. */
+function headsAreSieves(heads: Cell[]): boolean {
+  const named = heads.filter(
+    ({ kind, text }) =>
+      kind === 'text' && /mm|µm|in\b|["#/″]|no\./i.test(text) && sieveFromName(text) !== null,
+  );
+  if (named.length > 2 && named.length * 2 > heads.length) return true;
+  const openings = heads.flatMap(({ kind, value }) => (kind === 'number' ? [sieveFromName(value)] : []));
+  return (
+    openings.length > 3 &&
+    openings.every((opening, at) => opening !== null && (at === 0 || opening < (openings[at - 1] as number)))
+  );
+}
+
 /** Sets what names over columns mean, and takes rows of keys ("Specimen | 1 | 2 | 3") for the columns' own. */
 function nameColumns(context: TableContext): void {
   const { columns, labels, decimal, nameKey, table, kinds } = context;
@@ -246,8 +262,6 @@ function nameColumns(context: TableContext): void {
     if (column.nameKey !== null && column.heads.length > 1 && key !== 'stockpile') column.unit = null;
   }
   nameByBinder(context);
-  const isTransposed = [...columns.values()].some(({ kind }) => kind === 'label');
-  if (!isTransposed) return;
   for (const row of table.rows) {
     const first = row.cells.find((cell) => kinds.of(cell) === 'text');
     const meaning = first ? labels.read(first.text) : null;
@@ -255,7 +269,14 @@ function nameColumns(context: TableContext): void {
       meaning && meaning.quantities.length === 0 && meaning.role === null && !meaning.raw
         ? meaning.keys.find(isConditionKey)
         : undefined;
+    const kind = first ? columns.get(first.column)?.kind : undefined;
+    const own = first ? columns.get(first.column)?.key : undefined;
     if (!first || !meaning || key === undefined || meaning.unknown.length > 0) continue;
+    if (
+      kind !== 'label' &&
+      !(kind === 'key' && own !== key && own !== undefined && own !== null && figures.has(own))
+    )
+      continue;
     const values = row.cells.filter(
       (cell) => cell.column > first.column && columns.get(cell.column)?.kind === 'value',
     );
@@ -411,6 +432,16 @@ function binderText(cell: Cell): string {
   return plainText(cell.text).replace(',', '.').replace(/\s*%$/, '');
 }
 
+/** Keys that are figures: words among them are lines of another kind. */
+const figures: ReadonlySet<ConditionName> = new Set([
+  'sieve',
+  'time',
+  'temperature',
+  'passes',
+  'frequency',
+  'stress',
+]);
+
 /** In a list of properties a condition belongs to the test that it stands with. */
 function keepScoped(
   row: TableRow,
@@ -526,6 +557,7 @@ export function bareCandidate(context: TableContext, cell: Cell): Candidate {
     method: null,
     testedOn: null,
     isAverage: false,
+    isHeaded: false,
     specimenOfRow: false,
     subset: context.tableSubset,
     onAggregate: false,
@@ -656,7 +688,10 @@ function readValue(
     passOver(cell, isText ? unreadReasons.remark : roleReasons[role], context);
     return;
   }
-  const chosen = quantitiesOf({ column, group, labels }, context);
+  const isOwnLine = facts.label !== null && facts.label.quantities.length > 0;
+  const chosen = isOwnLine
+    ? (facts.label?.quantities ?? null)
+    : quantitiesOf({ column, group, labels }, context);
   if (chosen === null) {
     if (isText) {
       passOver(cell, unreadReasons.remark, context);
@@ -671,7 +706,9 @@ function readValue(
     );
     return;
   }
-  if (isText && !/^\s*[<>≤≥]?\s*\d/.test(cell.text) && !saysOutcome(cell)) {
+  const stands = Object.keys(facts.at).length > 0 && !column.weak && column.quantities.length > 0;
+  const isMisplaced = stands && plainText(cell.text).length <= 12 && !/\s/.test(plainText(cell.text));
+  if (isText && !/^\s*[<>≤≥]?\s*\d/.test(cell.text) && !saysOutcome(cell) && !isMisplaced) {
     passOver(cell, unreadReasons.remark, context);
     return;
   }
@@ -698,7 +735,7 @@ function readValue(
     unit:
       unit ??
       nearest?.unit ??
-      column.unit ??
+      (isOwnLine ? null : column.unit) ??
       group.meaning?.unit ??
       context.titles.findLast((title) => title.unit !== null)?.unit ??
       null,
@@ -706,6 +743,7 @@ function readValue(
     method: facts.method ?? label?.method ?? column.method ?? group.meaning?.method ?? null,
     testedOn: facts.testedOn,
     isAverage: role === 'average',
+    isHeaded: context.table.headings.length > 0,
     specimenOfRow: facts.at.specimen !== undefined,
     subset:
       facts.subset ??
@@ -757,11 +795,12 @@ function quantitiesOf(
     ({ key, at }) => key === 'sieve' || at.sieve !== undefined,
   );
   const over = [group.meaning, ...context.titles.toReversed()].find(
-    (meaning) => meaning && meaning.quantities.length > 0,
+    (meaning) => meaning && meaning.quantities.length > 0 && !isMaterial(meaning.quantities),
   );
   if (hasSieve) {
     const told = over?.quantities.filter((id) => gradation.includes(id)) ?? [];
-    return told.length > 0 ? told : gradation;
+    if (told.length > 0) return told;
+    return column.unit === null || column.unit === '%' ? gradation : null;
   }
   const isCross =
     Object.keys(column.at).length > 0 ||

@@ -7,7 +7,7 @@ export type FindQuantity = (id: string) => Quantity | undefined;
 
 /** Which of the quantities that the headings may mean is meant; several where nothing on the sheet decides. */
 export function resolveQuantities(candidate: Candidate, find: FindQuantity): Quantity[] {
-  const all = candidate.quantities.flatMap((id) => find(id) ?? []);
+  const all = ofReclaimed(candidate).flatMap((id) => find(id) ?? []);
   if (all.length <= 1) return all;
   const bySubset = ofSubset(all, candidate);
   if (bySubset.length <= 1) return bySubset;
@@ -17,6 +17,18 @@ export function resolveQuantities(candidate: Candidate, find: FindQuantity): Qua
   const units = byUnit.length > 0 ? byUnit : bySubset;
   if (units.length === 1) return units;
   return ofDomain(units, candidate.domains);
+}
+
+/** On a sheet about reclaimed material alone, its binder and its maximum gravity are not the mix's. */
+function ofReclaimed({ quantities, domains, at, heading }: Candidate): string[] {
+  const nearest = domains.find((domain) => domain === 'recycled' || domain === 'mix');
+  const isReclaimed = nearest === 'recycled' && at.trial === undefined;
+  if (!isReclaimed) return quantities;
+  const isShingle = domains.includes('recycled') && /\bRAS\b|shingle/i.test(heading);
+  return quantities.map((id) => {
+    if (id === 'binder-content') return isShingle ? 'ras-binder-content' : 'rap-binder-content';
+    return id === 'maximum-specific-gravity' && !isShingle ? 'rap-maximum-specific-gravity' : id;
+  });
 }
 
 function ofSubset(all: Quantity[], { subset, at }: Candidate): Quantity[] {

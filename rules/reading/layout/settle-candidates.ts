@@ -153,7 +153,7 @@ function numberReplicates(assigned: Assigned[]): void {
       quantity.subject === 'aggregate' ||
       quantity.subject === 'binder' ||
       quantity.id === 'binder-content' ||
-      each.table === 0
+      !each.isHeaded
     )
       continue;
     const key = `${each.table}|${quantity.id}|${conditionsKey(each.conditions)}`;
@@ -162,9 +162,8 @@ function numberReplicates(assigned: Assigned[]): void {
     else groups.set(key, [each]);
   }
   for (const group of groups.values()) {
-    const inLine =
-      new Set(group.map(({ cell }) => cell.row)).size === 1 ||
-      new Set(group.map(({ cell }) => cell.column)).size === 1;
+    // Under one heading and beside the same words they are replicates; else they are two statements of one thing.
+    const inLine = new Set(group.map(({ heading }) => heading)).size === 1;
     if (group.length < 2 || group.length > 12 || !inLine) continue;
     for (const [at, each] of group.entries())
       each.conditions = { ...each.conditions, specimen: String(at + 1) };

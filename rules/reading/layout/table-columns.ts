@@ -90,8 +90,50 @@ export function tableColumns(
     });
     columns.set(column, described);
   }
+  keepTellingKeys(columns, below);
   nameRows(columns, below, around);
+  nameShares(columns, below);
   return columns;
+}
+
+/**
+ * Of two columns of the same kind of key, "Lot" beside "Sublot" or "Source" beside "Aggregate", the one that tells
+ * more rows apart is the key; the other tells more of the same rows.
+ */
+function keepTellingKeys(columns: Map<number, TableColumn>, below: Map<number, Cell[]>): void {
+  const kept = new Map<ConditionName, TableColumn>();
+  const distinct = ({ column }: TableColumn) =>
+    new Set((below.get(column) ?? []).map(({ text }) => text)).size;
+  for (const column of columns.values()) {
+    if (column.kind !== 'key' || column.key === null || column.key === 'sieve') continue;
+    const before = kept.get(column.key);
+    if (before && distinct(column) <= distinct(before)) column.kind = 'aside';
+    else {
+      if (before) before.kind = 'aside';
+      kept.set(column.key, column);
+    }
+  }
+}
+
+/** A bare "Percent" beside stockpiles is their share where it sums to 100, and nothing where it does not. */
+function nameShares(columns: Map<number, TableColumn>, below: Map<number, Cell[]>): void {
+  const all = [...columns.values()];
+  if (!all.some(({ key }) => key === 'stockpile') || all.some(({ key }) => key === 'sieve')) return;
+  for (const column of all) {
+    const isBare =
+      column.kind === 'value' &&
+      column.quantities.length === 0 &&
+      column.unit === '%' &&
+      column.name === null;
+    if (!isBare || column.heads.length === 0) continue;
+    const values = (below.get(column.column) ?? [])
+      .filter(({ kind }) => kind === 'number')
+      .map(({ value }) => Number(value));
+    const sum = values.reduce((total, value) => total + value, 0);
+    const last = values.at(-1) ?? 0;
+    const isTotal = Math.abs(last - 100) < 0.05 && Math.abs(sum - 200) < 0.6;
+    if (values.length > 1 && (Math.abs(sum - 100) < 0.6 || isTotal)) column.quantities = ['stockpile-share'];
+  }
 }
 
 /** A column of words that name no quantity names the rows: specimens, trials or stockpiles, as the columns' heads say. */
@@ -333,6 +375,7 @@ function decideKind(
   const texts = sample.filter((cell) => kinds.of(cell) === 'text');
   const say = texts.filter(({ text }) => {
     const meaning = labels.read(text);
+    if (meaning.unknown.length > 0 && keys.some(isConditionKey)) return false;
     return meaning.quantities.length > 0 || meaning.attribute !== null || meaning.furniture || meaning.raw;
   });
   if (hasDocuments) {
@@ -344,6 +387,13 @@ function decideKind(
     }
   }
   if (result.quantities.length > 0 && !(result.weak && keys.length > 0) && texts.length <= sample.length / 2)
+    return;
+  if (
+    result.quantities.length > 0 &&
+    !result.weak &&
+    keys.length === 0 &&
+    say.length * 2 < Math.max(1, texts.length)
+  )
     return;
   if (result.role !== null && result.role !== 'average' && result.quantities.length === 0) {
     result.kind = 'aside';
@@ -429,7 +479,7 @@ function looksLikeSieves(sample: Cell[], mayBe: boolean): boolean {
   if (!mayBe || sample.length < 4) return false;
   const named = sample.filter((cell) => cell.kind === 'text' && sieveFromName(cell.text) !== null);
   if (named.length >= sample.length * 0.7) return true;
-  const openings = sample.map((cell) => (cell.kind === 'number' ? sieveFromName(cell.value) : null));
+  const openings = sample.map((cell) => sieveFromName(cell.kind === 'number' ? cell.value : cell.text));
   if (openings.some((opening) => opening === null) || sample.length < 5) return false;
   const falls = openings.every(
     (opening, at) => at === 0 || (opening as number) < (openings[at - 1] as number),

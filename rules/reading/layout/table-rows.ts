@@ -64,9 +64,9 @@ export class RowKeys {
       return;
     }
     const place = placeOf(index.sheet, cell);
-    if (cell.kind === 'text' && key !== 'variant') {
+    if (cell.kind === 'text') {
       const meaning = labels.read(cell.text);
-      const role = meaning.role ?? (meaning.furniture ? 'remark' : null);
+      const role = key === 'variant' ? null : (meaning.role ?? (meaning.furniture ? 'remark' : null));
       if (role !== null && role !== 'serial' && meaning.quantities.length === 0) {
         facts.role = role;
         const named = key === 'trial' ? namedBeside(meaning) : null;
@@ -79,6 +79,17 @@ export class RowKeys {
       if (meaning.quantities.length > 0 && !isKeyName(key, meaning)) {
         facts.label = meaning;
         reading.log.use(place, 'label', 'A label.');
+        return;
+      }
+      const isFigure =
+        key === 'sieve' || key === 'time' || key === 'temperature' || key === 'passes' || key === 'frequency';
+      if (
+        isFigure &&
+        meaning.keys.length > 0 &&
+        !meaning.keys.includes(key) &&
+        meaning.unknown.length === 0
+      ) {
+        facts.role = 'remark';
         return;
       }
       if (key !== 'stockpile' && meaning.unknown.length > 3) {
@@ -149,6 +160,7 @@ export class RowKeys {
 /** "RAP" names a stockpile and "P200" a sieve; "Blend %" under the sieves is a row of its own. */
 function isKeyName(key: string, meaning: LabelMeaning): boolean {
   if (key === 'sieve') return meaning.at.sieve !== undefined;
+  if (key === 'variant') return meaning.subset !== null || meaning.weak;
   if (key === 'stockpile' || key === 'specimen' || key === 'trial')
     return meaning.weak || meaning.unknown.length > 0 || isMaterial(meaning.quantities);
   return false;

@@ -1,15 +1,15 @@
 /** How laboratories name aggregates, gradations and recycled materials. Common practice, no source. */
 export const aggregateWords: Record<string, string> = {
-  'percent-passing': `% passing | passing | percent passing | total percent passing | cumulative % passing | % finer | percent finer | pct passing | passing %
+  'percent-passing': `% passing | % pass | pass % | percent pass | Siebdurchgang M | tamisats cumules | % pasante | pasante % | passing | percent passing | total percent passing | cumulative % passing | % finer | percent finer | pct passing | passing %
     | Siebdurchgang | Durchgang | Siebdurchgang in M-% | passant | passants | tamisat | tamisats | % passant | % tamisat | cumule passant | passant cumule | pasa | pasante | que pasa | % pasa | % que pasa |
     porcentaje que pasa | porcentaje pasante | pasante acumulado`,
-  'percent-retained': `% retained | retained | individual % retained | individual percent retained | ind % retained | individual retained | percent retained | fraction retained |
+  'percent-retained': `% retained | % ret | ret % | % ind ret | ind ret | % retenido parcial | % retenu | retenu | retained | individual % retained | individual percent retained | ind % retained | individual retained | percent retained | fraction retained |
     Ruckstand | Siebruckstand | Einzelruckstand | refus | refus partiel | refus partiels | % refus | retenido | retenido parcial | % retenido | retenido individual | porcentaje retenido`,
-  'cumulative-percent-retained': `cumulative % retained | cum % retained | cumulative retained | total % retained | total percent retained | cumulative percent retained | cum retained | % retained cumulative |
+  'cumulative-percent-retained': `cumulative % retained | cum % ret | % cum ret | cum ret | % ret acumulado | ret acumulado | % cumulative retained | cumulative ret | retained cum | % retained cum | cum % retained | cumulative retained | total % retained | total percent retained | cumulative percent retained | cum retained | % retained cumulative |
     retained cumulative | accumulated retained | Ruckstand kumuliert | kumulierter Ruckstand | Siebruckstand kumuliert | Ruckstandssumme | Summenruckstand | refus cumule | refus cumules | % refus cumule |
     retenido acumulado | % retenido acumulado | porcentaje retenido acumulado`,
-  'stockpile-share': `blend % | % blend | stockpile % | proportion | proportions | bin percentage | bin % | blend proportion | blend proportions | share | cold feed % | % of blend | % of aggregate | % in blend |
-    percent used | % used | aggregate % | percent of total | percent of blend | blend percentage | percentage in blend | cold feed | mix % | percentage | stockpile percentage | % by mass of aggregate | stockpile share | aggregate proportion |
+  'stockpile-share': `blend % | % blend | stockpile % | proportion | proportions | bin percentage | bin % | blend proportion | blend proportions | share | cold feed % | % of blend | % in blend |
+    percent used | % used | aggregate % | percent of total | percent of blend | blend percentage | percentage in blend | cold feed | mix % | percentage | stockpile percentage | stockpile share | aggregate proportion |
     Anteil | Zugabeanteil | Mischungsanteil | Gesteinsanteil | Dosierung | proportion du melange | pourcentage du melange | dosage | part | % melange | formule |
     proporcion | dosificacion | % en la mezcla | porcentaje en mezcla | participacion | % mezcla | porcentaje de la mezcla`,
   'bulk-specific-gravity-aggregate': `Gsb | bulk specific gravity | bulk SG | bulk sp gr | bulk specific gravity dry | bulk specific gravity OD | bulk SG dry | bulk dry SG | bulk dry specific gravity |
@@ -22,12 +22,12 @@ export const aggregateWords: Record<string, string> = {
   'saturated-surface-dry-specific-gravity-aggregate': `Gssd | bulk specific gravity SSD | SSD specific gravity | bulk SSD | bulk SG SSD | specific gravity SSD | SSD SG | gravedad especifica SSS | gravedad especifica bulk SSS`,
   'effective-specific-gravity-aggregate': `Gse | effective specific gravity | effective SG | effective gravity | eff SG | effective specific gravity of aggregate | gravedad especifica efectiva | gravedad efectiva | effektive Rohdichte |
     densite effective`,
-  'water-absorption': `absorption | water absorption | % absorption | aggregate absorption | aggregate water absorption | Wasseraufnahme | Wasseraufnahme WA24 | absorption d'eau | coefficient d'absorption d'eau | absorcion | absorcion de agua | WA24`,
-  'coarse-aggregate-angularity-one-face': `CAA 1 face | CAA one face | CAA 1+ | CAA1 | one fractured face | 1 fractured face | fractured faces 1+ | 1+ fractured faces | one or more fractured faces | fractured faces one | CAA 1 | CAA 1+ faces | CAA 1 or more |
+  'water-absorption': `absorption | abs | abs % | Wasseraufn | water absorption | % absorption | aggregate absorption | aggregate water absorption | Wasseraufnahme | Wasseraufnahme WA24 | absorption d'eau | coefficient d'absorption d'eau | absorcion | absorcion de agua | WA24`,
+  'coarse-aggregate-angularity-one-face': `CAA 1 face | 1 FF | 1+ FF | FF 1 | FF1 | 1 face | 1+ face | 1 or more FF | fractured faces 1 | CAA one face | CAA 1+ | CAA1 | one fractured face | 1 fractured face | fractured faces 1+ | 1+ fractured faces | one or more fractured faces | fractured faces one | CAA 1 | CAA 1+ faces | CAA 1 or more |
     fractured faces 1 face | coarse aggregate angularity 1 face | coarse aggregate angularity one face | coarse angularity 1 face | single fractured face | fractured faces one or more | fractured faces 1 or more | 1 or more fractured faces |
     coarse aggregate angularity 1+ | coarse aggregate angularity 1 or more | crushed faces 1+ | one crushed face | one face | caras fracturadas 1 | caras fracturadas una o mas | una cara fracturada | 1 cara fracturada |
     Bruchflachigkeit eine Flache | faces cassees 1 | une face cassee`,
-  'coarse-aggregate-angularity-two-faces': `CAA 2 faces | CAA two faces | CAA 2+ | CAA2 | two fractured faces | 2 fractured faces | fractured faces 2+ | 2+ fractured faces | two or more fractured faces | fractured faces two | CAA 2 | CAA 2+ faces | CAA 2 or more |
+  'coarse-aggregate-angularity-two-faces': `CAA 2 faces | 2 FF | 2+ FF | FF 2 | FF2 | 2 faces | 2+ faces | 2 or more FF | fractured faces 2 | CAA two faces | CAA 2+ | CAA2 | two fractured faces | 2 fractured faces | fractured faces 2+ | 2+ fractured faces | two or more fractured faces | fractured faces two | CAA 2 | CAA 2+ faces | CAA 2 or more |
     fractured faces 2 faces | coarse aggregate angularity 2 faces | coarse aggregate angularity two faces | coarse angularity 2 faces | fractured faces two or more | fractured faces 2 or more | 2 or more fractured faces |
     coarse aggregate angularity 2+ | coarse aggregate angularity 2 or more | crushed faces 2+ | two crushed faces | two faces | caras fracturadas 2 | caras fracturadas dos o mas | dos caras fracturadas | 2 caras fracturadas |
     Bruchflachigkeit zwei Flachen | faces cassees 2 | deux faces cassees`,
@@ -63,7 +63,7 @@ export const aggregateWords: Record<string, string> = {
   'ras-binder-content': `RAS binder content | RAS binder | RAS AC | RAS asphalt content | binder in RAS | AC in RAS | binder content of RAS | Pb RAS`,
   'recycled-binder-ratio': `RBR | ABR | recycled binder ratio | RAP binder ratio | binder replacement | asphalt binder replacement | reclaimed binder ratio | recycled binder`,
   'rap-maximum-specific-gravity': `RAP Gmm | Gmm RAP | Gmm of RAP | RAP maximum specific gravity | RAP Rice`,
-  'rap-moisture': `RAP moisture | RAP moisture content | moisture of RAP`,
+  'rap-moisture': `RAP moisture | moisture | moisture content | RAP moisture content | moisture of RAP`,
   'recycling-agent-content': `recycling agent | rejuvenator | rejuvenator dosage | recycling agent content | rejuvenator content`,
   'crumb-rubber-content': `crumb rubber | GTR | ground tire rubber | crumb rubber content | rubber content`,
   'fibre-content': `fiber content | fibre content | fibers | fibres | cellulose fiber | cellulose fibre | Faseranteil | Faserstoffgehalt | teneur en fibres | contenido de fibras`,

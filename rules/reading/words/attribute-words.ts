@@ -1,7 +1,7 @@
 /** How laboratories head the standard attributes, the submittal's own facts and the usual documents. Common practice, no source. */
 export const attributeWords: Record<string, string> = {
   mixType: `mix type | type of mix | mixture type | mix class | type of mixture | Mischgutart | Mischgutsorte | Asphaltmischgutart | type d'enrobe | type de melange | tipo de mezcla | mix category`,
-  nominalMaximumSize: `NMAS | nominal maximum size | nominal maximum aggregate size | nominal size | NMAS mm | nominal max size | nominal max aggregate size | nominal maximum aggregate | max nominal size | Grosstkorn | Nenngrosstkorn | D nominal | dimension maximale nominale | taille maximale nominale |
+  nominalMaximumSize: `NMAS | nominal max agg size | nominal maximum agg size | nom max size | nom max agg size | nominal max aggregate size | NMS | nominal max | nominal maximum size | nominal maximum aggregate size | nominal size | NMAS mm | nominal max size | nominal max aggregate size | nominal maximum aggregate | max nominal size | Grosstkorn | Nenngrosstkorn | D nominal | dimension maximale nominale | taille maximale nominale |
     diametre nominal maximal | tamano maximo nominal | tamano nominal maximo | TMN`,
   designTraffic: `design traffic | design ESALs | ESALs | ESAL | traffic | traffic level | 20-year ESALs | 20 year design ESALs | design ESAL | traffic ESALs | Verkehrsbelastung | trafic | trafic de dimensionnement | trafico | trafico de diseno | transito de diseno | ejes equivalentes`,
   course: `course | layer | pavement course | pavement layer | Schicht | Asphaltschicht | couche | capa | lift`,

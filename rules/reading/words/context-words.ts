@@ -52,6 +52,8 @@ export const domainsOfQuantity: Record<string, Domain[]> = {
   'binder-phase-angle': ['binder'],
   'mix-phase-angle': ['modulus'],
   'rap-binder-content': ['recycled'],
+  'rap-moisture': ['recycled'],
+  'mix-moisture': ['mix', 'field'],
   'maximum-density-mix': ['maximum-gravity'],
   'bulk-density-mix': ['mix', 'marshall'],
 };

@@ -60,7 +60,7 @@ export const performanceWords: Record<string, string> = {
   'voids-in-coarse-aggregate-mix': `VCAmix | VCA mix | VCA of mix | VCA`,
   'voids-in-coarse-aggregate-dry-rodded': `VCAdrc | VCA drc | VCA dry-rodded | VCA dry rodded`,
   'ignition-correction-factor': `ignition correction factor | ignition oven correction | correction factor ignition | ignition oven correction factor | calibration factor ignition`,
-  'mix-moisture': `mix moisture | moisture content of mix | moisture of mix | mix moisture content`,
+  'mix-moisture': `mix moisture | moisture | moisture content | moisture content of mix | moisture of mix | mix moisture content`,
   coating: `coating | percent coated | coated particles`,
   'overlay-cycles': `overlay test cycles | overlay tester cycles | OT cycles | overlay cycles`,
   'fatigue-life': `beam fatigue | beam fatigue life | fatigue life | cycles to failure fatigue | Nf`,

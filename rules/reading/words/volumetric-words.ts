@@ -14,7 +14,7 @@ export const volumetricWords: Record<string, string> = {
     maximum theoretical specific gravity | maximum specific gravity of mix | max theo SG | MTSG | TMSG | theoretical max gravity |
     maximum specific gravity Rice | maximale Rohdichte relativ | gravedad especifica maxima | gravedad maxima teorica | peso especifico maximo |
     gravedad especifica teorica maxima | gravedad especifica maxima teorica | densite maximale relative | densite relative maximale`,
-  'bulk-specific-gravity-mix': `Gmb | bulk specific gravity | bulk SG | bulk sp gr | bulk specific gravity of mix |
+  'bulk-specific-gravity-mix': `Gmb | bulk | bulk specific gravity | bulk SG | bulk sp gr | bulk specific gravity of mix |
     bulk specific gravity compacted mix | bulk specific gravity of compacted mixture | bulk specific gravity of specimen | compacted bulk SG |
     specimen bulk specific gravity | mix bulk specific gravity | specimen SG | Gmb measured | Gmb corrected |
     gravedad especifica bulk | gravedad especifica bruta | gravedad bulk | gravedad especifica aparente de la mezcla |
@@ -58,7 +58,7 @@ export const volumetricWords: Record<string, string> = {
     escurrimiento | escurrimiento de ligante`,
   'relative-density': `% Gmm | %Gmm | % of Gmm | percent Gmm | percent of Gmm | relative density | density at N | % Gmm at N | % of maximum specific gravity |
     % max density | % compaction at N | Verdichtungsgrad bei N | compacite | densite relative au maximum | compacite giratoire | % de Gmm | densidad relativa`,
-  'field-density': `field density | in-place density | in place density | core density | roadway density | mat density | pavement density |
+  'field-density': `field density | % density | density % | density | in place density % | in-place density | in place density | core density | roadway density | mat density | pavement density |
     percent compaction | % compaction | degree of compaction | Verdichtungsgrad | taux de compactage | compacite en place |
     grado de compactacion | porcentaje de compactacion | compactacion`,
   'in-place-air-voids': `in-place air voids | in place air voids | in-place voids | field air voids | roadway air voids | core air voids |
@@ -67,27 +67,27 @@ export const volumetricWords: Record<string, string> = {
   'gyrations-design': `Ndes | Ndesign | N diseno | N de diseno | N projet | N design | N des | design gyrations | number of gyrations | gyrations | design number of gyrations | gyration level | design gyration level |
     gyratory level | giros de diseno | numero de giros | nombre de girations | girations | Gyrationen | Anzahl Gyrationen | Drehungen | Umdrehungen`,
   'gyrations-maximum': `Nmax | Nmaximum | N maximo | N maximal | N maximum | N max | maximum gyrations | max gyrations | maximum number of gyrations | giros maximos | girations maximales`,
-  'mixing-temperature': `mixing temperature | mix temperature | mixing temp | lab mixing temperature | laboratory mixing temperature | plant mixing temperature |
+  'mixing-temperature': `mixing temperature | mix temp | mixing temp | lab mix temp | lab mixing temp | mix temperature | mixing temp | lab mixing temperature | laboratory mixing temperature | plant mixing temperature |
     mixing temp range | Mischtemperatur | temperature de malaxage | temperature de fabrication | temperature d'enrobage | temperatura de mezclado | temperatura de mezcla`,
-  'compaction-temperature': `compaction temperature | compaction temp | lab compaction temperature | laboratory compaction temperature | compacting temperature |
+  'compaction-temperature': `compaction temperature | comp temp | lab compaction temp | compact temp | compaction temp | lab compaction temperature | laboratory compaction temperature | compacting temperature |
     Verdichtungstemperatur | temperature de compactage | temperatura de compactacion`,
   'lift-thickness': `lift thickness | layer thickness | course thickness | compacted lift thickness | compacted thickness | Schichtdicke | Einbaudicke |
     epaisseur de couche | epaisseur de la couche | espesor de capa`,
-  'mass-in-air': `dry mass | mass in air | dry weight | weight in air | wt in air | dry mass in air | mass dry | weight dry | dry wt | mass in air dry | air mass | air weight |
+  'mass-in-air': `dry mass | wt air | W air | weight air | mass air | air wt | wt dry | weight in air dry | dry weight in air | specimen weight in air | weight of specimen in air | mass in air | dry weight | weight in air | wt in air | dry mass in air | mass dry | weight dry | dry wt | mass in air dry | air mass | air weight |
     dry in air | dry specimen mass | mass of dry specimen | mass of dry specimen in air | weight of dry specimen | dry wt in air | weight dry in air | W dry |
     mass A | A dry | Trockenmasse | Masse trocken | Masse an Luft | Masse in Luft | Trockengewicht | Gewicht an der Luft | Masse der trockenen Probe | masse seche | masse dans l'air |
     masse a l'air | poids sec | poids dans l'air | masse seche dans l'air | masa seca | masa en aire | masa en el aire | peso seco | peso en aire | peso en el aire |
     peso seco en aire | masa seca en el aire`,
-  'mass-saturated-surface-dry': `SSD mass | SSD weight | SSD | mass SSD | SSD wt | wt SSD | saturated surface dry | saturated surface dry mass | saturated surface-dry mass |
+  'mass-saturated-surface-dry': `SSD mass | W SSD | wt SSD | SSD wt in air | weight SSD | surface dry wt | SSD weight in air | SSD weight | SSD | mass SSD | SSD wt | wt SSD | saturated surface dry | saturated surface dry mass | saturated surface-dry mass |
     saturated surface dry weight | surface dry mass | surface dry weight | weight SSD in air | mass of SSD specimen | SSD mass in air | SSD in air | W SSD | mass B | B SSD |
     Masse wassergesattigt | Masse oberflachentrocken | wassergesattigte Masse | Masse SSD | gesattigt oberflachentrocken | masse saturee surface seche |
     masse SSS | masse saturee superficiellement seche | poids SSS | masse saturee | masa saturada superficie seca | masa sss | peso sss | peso saturado superficialmente seco |
     masa saturada superficialmente seca | peso saturado superficie seca | peso saturado | masa saturada`,
-  'mass-in-water': `mass in water | weight in water | wt in water | submerged mass | submerged weight | immersed mass | immersed weight | mass submerged | weight submerged |
+  'mass-in-water': `mass in water | wt water | W water | weight water | mass water | water wt | specimen weight in water | wt submerged | wt sub | weight sub | weight in water | wt in water | submerged mass | submerged weight | immersed mass | immersed weight | mass submerged | weight submerged |
     submerged | in water | submerged wt | mass of specimen in water | weight of specimen in water | W water | mass C | C water |
     Masse unter Wasser | Masse in Wasser | Gewicht unter Wasser | Unterwassergewicht | Unterwassermasse | Tauchmasse | masse dans l'eau | masse immergee | poids immerge | poids dans l'eau |
     masse hydrostatique | masa sumergida | masa en agua | peso sumergido | peso en agua | peso en el agua | masa en el agua`,
-  'specimen-absorption': `specimen absorption | specimen water absorption | water absorbed | % water absorbed | % water absorbed by volume | absorption | water absorption | absorption by volume |
+  'specimen-absorption': `specimen absorption | abs | abs % | specimen water absorption | water absorbed | % water absorbed | % water absorbed by volume | absorption | water absorption | absorption by volume |
     Wasseraufnahme | absorption d'eau | absorcion | absorcion de agua`,
   'bulk-density-mix': `unit weight | mix density | bulk density | mix unit weight | compacted density | density of mix | specimen density | lab density | laboratory density | bulk density of mix |
     density of compacted mix | Raumdichte | Raumdichte am Probekorper | Raumdichte des Probekorpers | Marshall Raumdichte | density | masse volumique apparente | MVA | densite apparente | masse volumique |
