@@ -68,18 +68,23 @@ interface Place {
 
 /** Every 0.01 % between the trials' ends, the ends themselves and the turns, in rising order. */
 function placesOf({ from, to, turns }: StretchInput): Place[] {
-  const contents = new Map<number, Place>();
   const first = new Decimal(from).times(100).ceil().toNumber();
   const last = new Decimal(to).times(100).floor().toNumber();
+  const places: Place[] = [];
   for (let hundredths = first; hundredths <= last; hundredths += 1) {
-    const content = hundredths / 100;
-    contents.set(content, { content, isTurn: false, mayEnd: true });
+    places.push({ content: hundredths / 100, isTurn: false, mayEnd: true });
   }
-  for (const content of turns) {
-    contents.set(content, { content, isTurn: true, mayEnd: contents.has(content) });
+  const others = [...turns.map((content) => ({ content, isTurn: true })), ...[from, to].map(asEnd)];
+  for (const { content, isTurn } of others) {
+    const known = places.find((place) => place.content === content);
+    if (known) known.isTurn ||= isTurn;
+    else places.push({ content, isTurn, mayEnd: !isTurn });
   }
-  for (const content of [from, to]) contents.set(content, { content, isTurn: false, mayEnd: true });
-  return [...contents.values()].sort((a, b) => a.content - b.content);
+  return places.sort((a, b) => a.content - b.content);
+}
+
+function asEnd(content: number): { content: number; isTurn: boolean } {
+  return { content, isTurn: false };
 }
 
 /** Runs of places that are inside, from one corner to the next. */
