@@ -4,7 +4,7 @@ import type { FitProblem, LeastSquaresFit } from '../numerics/levenberg-marquard
 import { known, unusable } from '../numerics/numeric-result';
 import { twoSidedT } from '../numerics/student-t';
 import { decadesBeyond } from './creep-compliance';
-import { type CreepModel, type CreepModelName, creepModel, type PointSpan, storedModel } from './creep-model';
+import { type CreepModel, type CreepModelName, creepModel, type PointSpan } from './creep-model';
 import { creepStarts, type LnPoint } from './creep-starts';
 
 export interface FittedParameter {
@@ -82,9 +82,11 @@ export function fitCreep(model: CreepModelName, points: readonly { t: number; D:
   const curve = creepModel(model, span);
   const lacking = lackingPoints(curve, ordered.length, span.timeCount);
   if (lacking) return { ok: false, reason: lacking };
+  const sketch = sketchOf(ordered);
   const { best, starts, agreeing } = fitFromStarts(
     problemOf(curve, ordered),
-    creepStarts(curve, ordered, span),
+    creepStarts(curve, sketch, span),
+    problemOf(curve, sketch),
   );
   const residuals = new Array<number>(points.length).fill(0);
   order.forEach((place, i) => {
@@ -92,61 +94,6 @@ export function fitCreep(model: CreepModelName, points: readonly { t: number; D:
   });
   const fit = describeFit({ model: curve, best, points, residuals, starts, startsAgreeing: agreeing });
   return { ok: true, fit };
-}
-
-/** ln D of a fit at a loading time, with half the width of its band, both in ln D. */
-export function lnBandAt(
-  fit: BandSource,
-  time: number,
-  confidence: number,
-): { ok: true; lnD: number; halfWidth: number } | { ok: false; reason: string } {
-  const fault = unusable({ 'the loading time': time }, 'positive');
-  if (fault) return { ok: false, reason: fault };
-  const quantile = twoSidedT(confidence, fit.degreesOfFreedom);
-  if (!quantile.ok) return quantile;
-  const gradient = new Float64Array(fit.lnParameters.length);
-  const lnD = storedModel(fit).lnCompliance(fit.lnParameters, Math.log(time), gradient);
-  return { ok: true, lnD, halfWidth: quantile.value * deviationAlong(fit.covarianceFactor, gradient) };
-}
-
-export type BandSource = Pick<
-  CreepFit,
-  'model' | 'lnParameters' | 'covarianceFactor' | 'retardationTimes' | 'lnCentre' | 'degreesOfFreedom'
->;
-
-/** Values of a curve at one time, 1/GPa; a bound that leaves the range of sensible numbers is null. */
-export interface CreepBand {
-  estimate: number;
-  lower: number | null;
-  upper: number | null;
-}
-
-/**
- * The fitted mean curve at a loading time with its two-sided confidence band, 1/GPa. exp(ln D ± t·√(gᵀ·C·g)).
- *
- * Symbols: g gradient of ln D in the fitted parameters, C their covariance, t the quantile at (1 + confidence)/2 for
- * the degrees of freedom of the fit.
- * Source: textbook linearisation. Domain: time above zero, confidence between 0 and 1.
- *
- * @example creepBandAt(fit of exact points of D0 0.045, D∞ 1.2, τ 900, n 0.55, 100, 0.95).estimate // 0.3106168
- */
-export function creepBandAt(
-  fit: BandSource,
-  time: number,
-  confidence: number,
-): { ok: true; band: CreepBand } | { ok: false; reason: string } {
-  const band = lnBandAt(fit, time, confidence);
-  if (!band.ok) return band;
-  const estimate = known(Math.exp(band.lnD));
-  if (!estimate.ok) return estimate;
-  return {
-    ok: true,
-    band: {
-      estimate: estimate.value,
-      lower: expOrNull(band.lnD - band.halfWidth),
-      upper: expOrNull(band.lnD + band.halfWidth),
-    },
-  };
 }
 
 /** Least R² in ln D of a fit that may be used. */
@@ -168,6 +115,15 @@ function lackingPoints(model: CreepModel, pointCount: number, timeCount: number)
   }
   return null;
 }
+
+/** Every so many points of a long series: enough to tell one minimum from another. */
+function sketchOf(ordered: readonly LnPoint[]): readonly LnPoint[] {
+  if (ordered.length <= SKETCH_POINTS) return ordered;
+  const step = ordered.length / SKETCH_POINTS;
+  return Array.from({ length: SKETCH_POINTS }, (_, i) => ordered[Math.floor(i * step)]!);
+}
+
+const SKETCH_POINTS = 80;
 
 function problemOf(model: CreepModel, points: readonly LnPoint[]): FitProblem {
   const { parameterCount, lower, upper } = model;
@@ -305,11 +261,6 @@ export function spanOf(ordered: readonly LnPoint[]): PointSpan {
 
 function byTime(a: LnPoint, b: LnPoint): number {
   return a.lnTime - b.lnTime || a.lnD - b.lnD;
-}
-
-function expOrNull(ln: number): number | null {
-  const bounded = Math.abs(ln) < 30 * Math.LN10 ? known(Math.exp(ln)) : null;
-  return bounded?.ok ? bounded.value : null;
 }
 
 /** As every numeric result: 12 significant digits, so that every engine comes to the same number. */

@@ -1,4 +1,4 @@
-import { type BandSource, type CreepBand, creepBandAt } from './creep-fit';
+import { type BandSource, type CreepBand, creepBandAt } from './creep-band';
 
 export interface CreepSample extends CreepBand {
   /** s */

@@ -1,24 +1,30 @@
 import type { CreepFit } from '../calculations/creep-fit';
-import type { CreepModelName } from '../calculations/creep-model';
 import { numberWords } from '../rule-sets/words';
 import type { CreepAnalysis, CreepAnalysisPoint, CreepCurve, CreepMasterCurve } from './creep-analysis';
-import { fitOf, masterOf } from './creep-fits';
+import { fitsOf, masterOf } from './creep-fits';
+import { decadeWords, fittable } from './creep-fitted-value';
 import { type CreepPoint, cellOf, creepPoints, inOrder } from './creep-points';
 import { remarksOf } from './creep-remarks';
-import { decadeWords, fittable } from './creep-value';
 import { naturalOrder } from './natural-order';
 import type { World } from './world';
 
 /** The creep tests of the design by the contractor: their points, curves and master curve. No limits enter here. */
 export function analyseCreep(world: World): CreepAnalysis {
+  const kept = analyses.get(world.record);
+  if (kept !== undefined) return kept;
   try {
-    return analysed(world);
+    const analysis = analysed(world);
+    analyses.set(world.record, analysis);
+    return analysis;
   } catch (error) {
     const detail = error instanceof Error ? error.message : String(error);
     const problem = `An internal error occurred while the creep tests were analysed: ${detail}`;
     return [{ ...NOTHING_ANALYSED, problems: [problem] }];
   }
 }
+
+/** No rule enters: judged by several editions, a record has one analysis. */
+const analyses = new WeakMap<World['record'], CreepAnalysis>();
 
 const NOTHING_ANALYSED: CreepCurve = {
   kind: 'curve',
@@ -77,19 +83,12 @@ function middleTemperature(group: CreepPoint[]): number {
   return Number(temperatures[Math.floor((temperatures.length - 1) / 2)]!.toFixed(1)) + 0;
 }
 
-const MODELS: CreepModelName[] = ['sigmoid', 'power', 'prony'];
-
 function curveOf({ temperature, points }: TemperatureGroup, stress: number | null): CreepCurve {
   const own = stress === null ? points : points.filter(({ at }) => at.stress === stress);
   const used = fittable(own)
     .filter(({ qualifier }) => qualifier === null)
     .toSorted(inOrder);
-  const fits = MODELS.map((model) =>
-    fitOf(
-      model,
-      used.map(({ at, value }) => ({ t: at.time!, D: value! })),
-    ),
-  );
+  const fits = fitsOf(used.map(({ at, value }) => ({ t: at.time!, D: value! })));
   const problems = new Set(own.flatMap(({ fault }) => fault ?? []));
   if (used.length > 0 && !fits[0]!.ok) problems.add(`No curve is fitted: ${fits[0]!.reason}.`);
   if (own.some(({ qualifier }) => qualifier !== null)) {

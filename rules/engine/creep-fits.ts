@@ -10,6 +10,14 @@ export function fitOf(model: CreepModelName, points: readonly { t: number; D: nu
   return keptIn(fits, `${model} ${keyOf(points)}`, () => fitCreep(model, points));
 }
 
+/** The fits of every model to the same points. */
+export function fitsOf(points: readonly { t: number; D: number }[]): CreepFitResult[] {
+  const key = keyOf(points);
+  return MODELS.map((model) => keptIn(fits, `${model} ${key}`, () => fitCreep(model, points)));
+}
+
+const MODELS: CreepModelName[] = ['sigmoid', 'power', 'prony'];
+
 /** The master curve of several temperatures, once in the same way. */
 export function masterOf(series: readonly TemperatureSeries[]): ReturnType<typeof masterCurve> {
   const key = series.map(({ temperature, points }) => `${temperature}: ${keyOf(points)}`).join('; ');

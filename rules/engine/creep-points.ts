@@ -81,8 +81,16 @@ function pointsOfValue(value: RecomputedValue, differing: RecomputedValue[]): Cr
   return value.specimens.map(({ specimen, value: own }, i) => {
     const at = { ...value.at, specimen };
     const evidence = isMean ? value.inputs[i]! : { ...whole, at };
-    return computedPoint(at, own, 1, evidence, differing);
+    const point = computedPoint(at, own, 1, evidence, differing);
+    return point.reported === null ? { ...point, reported: statedMean(value, own) } : point;
   });
+}
+
+/** A stated mean that the specimens do not have, as what each of them would have to be for it. */
+function statedMean(value: RecomputedValue, own: number): CreepPoint['reported'] {
+  const stated = value.reported?.value ?? null;
+  if (value.agrees !== false || stated === null || stated <= 0 || value.value <= 0) return null;
+  return { value: (own * stated) / value.value, recomputed: value };
 }
 
 function computedPoint(
@@ -139,14 +147,14 @@ function faultyReadings(world: World): CreepPoint[] {
       source: null,
     }),
   );
-  const ofReadings = (['creep-strain', 'horizontal-deformation'] as const).flatMap((quantity) =>
-    (world.readings.get(quantity) ?? []).flatMap(({ reading, at, fault, value }) => {
-      const label = world.view.quantity(quantity)?.label ?? quantity;
-      const why =
-        fault ?? (value === null || reading.qualifier !== undefined ? 'it is not a plain number' : null);
+  const ofReadings = (['creep-strain', 'horizontal-deformation'] as const).flatMap((quantity) => {
+    const label = world.view.quantity(quantity)?.label ?? quantity;
+    return (world.readings.get(quantity) ?? []).flatMap(({ reading, at, fault, value }) => {
+      const isPlain = value !== null && reading.qualifier === undefined;
+      const why = fault ?? (isPlain ? null : 'it is not a plain number');
       return why === null ? [] : [faultyPoint(at, faultWords(label, why), evidenceOfReading(reading))];
-    }),
-  );
+    });
+  });
   return [...ofAnalysis, ...ofReadings];
 }
 

@@ -27,7 +27,9 @@ export function fallsOf(points: readonly CreepAnalysisPoint[]): Fall[] {
   const series = new Map<string, CreepAnalysisPoint[]>();
   for (const point of points) {
     const key = `${point.specimen}|${point.stress}`;
-    series.set(key, [...(series.get(key) ?? []), point]);
+    const known = series.get(key);
+    if (known) known.push(point);
+    else series.set(key, [point]);
   }
   return [...series.values()].flatMap((own) => {
     const fall = firstFall(own.map((point) => ({ t: point.time, D: point.value, point })));

@@ -9,15 +9,20 @@ export interface BestFit {
 
 /**
  * The best of the fits from several starts: each start roughly, then the best of them to the end; another one only
- * where that does not converge.
+ * where that does not converge. The rough part may be done on a sketch, a problem of the same parameters with fewer
+ * residuals.
  *
  * Source: common practice, no source. Domain: at least one start; residuals of order one, such as logarithms.
  *
  * @example // two starts of r = p² − 4, p = 1 and p = 5, agree on p = 2
  */
-export function fitFromStarts(problem: FitProblem, starts: readonly (readonly number[])[]): BestFit {
+export function fitFromStarts(
+  problem: FitProblem,
+  starts: readonly (readonly number[])[],
+  sketch: FitProblem = problem,
+): BestFit {
   const rough = starts
-    .map((start) => levenbergMarquardt(problem, start, COARSE))
+    .map((start) => levenbergMarquardt(sketch, start, COARSE))
     .toSorted((a, b) => a.sumOfSquares - b.sumOfSquares);
   const [first] = rough;
   if (first === undefined) throw new RangeError('A fit needs at least one start.');

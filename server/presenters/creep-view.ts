@@ -1,4 +1,4 @@
-import { creepBandAt } from '#rules/calculations/creep-fit';
+import { creepBandAt } from '#rules/calculations/creep-band';
 import { creepSamples } from '#rules/calculations/creep-samples';
 import type { CreepAnalysis, CreepCurve, CreepMasterCurve, DescribedFit } from '#rules/engine/creep-analysis';
 import type { Evidence, Finding } from '#rules/engine/finding';

@@ -1,5 +1,6 @@
+import { creepBandAt } from '#rules/calculations/creep-band';
 import { sigmoidCompliance } from '#rules/calculations/creep-compliance';
-import { creepBandAt, fitCreep } from '#rules/calculations/creep-fit';
+import { fitCreep } from '#rules/calculations/creep-fit';
 import { timingOf, told } from './measure';
 
 /** A sigmoid through 11 points with its band at each of them, over a thousand synthetic problems with a seed. */

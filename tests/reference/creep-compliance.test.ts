@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { z } from 'zod';
+import { creepBandAt } from '#rules/calculations/creep-band';
 import {
   complianceFromStrain,
   decadesBeyond,
@@ -9,7 +10,7 @@ import {
   pronyCompliance,
   sigmoidCompliance,
 } from '#rules/calculations/creep-compliance';
-import { type CreepFit, creepBandAt, fitCreep } from '#rules/calculations/creep-fit';
+import { type CreepFit, fitCreep } from '#rules/calculations/creep-fit';
 import {
   correctionFactor,
   correctionLimits,

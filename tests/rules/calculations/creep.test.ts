@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { creepBandAt } from '#rules/calculations/creep-band';
 import {
   complianceFromStrain,
   decadesBeyond,
@@ -11,7 +12,7 @@ import {
   pronyCompliance,
   sigmoidCompliance,
 } from '#rules/calculations/creep-compliance';
-import { type CreepFit, creepBandAt, fitCreep } from '#rules/calculations/creep-fit';
+import { type CreepFit, fitCreep } from '#rules/calculations/creep-fit';
 import {
   correctionFactor,
   indirectTensionCompliance,

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { creepBandAt } from '#rules/calculations/creep-fit';
+import { creepBandAt } from '#rules/calculations/creep-band';
 import type { CreepCurve, CreepMasterCurve } from '#rules/engine/creep-analysis';
 import { checkResultSchema } from '#rules/engine/finding';
 import type { Reading } from '#rules/record';

@@ -173,6 +173,20 @@ describe('a measured compliance', () => {
     expect(finding.reason).toContain('0.084 1/GPa');
   });
 
+  it('is undecided where a stated mean has another outcome than its specimens', () => {
+    const mean = aReading({
+      quantity: 'creep-compliance',
+      value: 0.09,
+      at: { temperature: -10, time: 100, stress: 200 },
+    });
+    expect(creepFinding({ readings: [...onCurve, mean] })).toMatchObject({
+      outcome: 'undecided',
+      reason: expect.stringContaining('0.090 1/GPa'),
+    });
+    const near = { ...mean, value: 0.119 };
+    expect(creepFinding({ readings: [...onCurve, near] }).outcome).toBe('pass');
+  });
+
   it('leaves the agency’s tests to rules that name them', () => {
     const readings = onCurve.map((reading) => ({
       ...reading,
