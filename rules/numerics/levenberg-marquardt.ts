@@ -88,8 +88,11 @@ function improve(state: State, free: number[], tolerance: FitTolerance): LeastSq
         state.damping = Math.max(state.damping / 8, LEAST_DAMPING);
         if (!isFlat) return null;
         if (relativeStep < tolerance.step) return 'step';
-        const isIdle = before - state.sum < tolerance.reduction * before;
-        return isIdle && relativeStep < LONGEST_LAST_STEP ? 'reduction' : null;
+        const gain = (before - state.sum) / before;
+        const isIdle = gain < (state.isNegligible() ? NEGLIGIBLE_GAIN : VALLEY_GAIN);
+        state.idleSteps = isIdle ? state.idleSteps + 1 : 0;
+        if (state.idleSteps >= MOST_IDLE_STEPS) return 'reduction';
+        return gain < tolerance.reduction && relativeStep < LONGEST_LAST_STEP ? 'reduction' : null;
       }
       if (isFlat && relativeStep < tolerance.step) return 'step';
     }
@@ -100,12 +103,19 @@ function improve(state: State, free: number[], tolerance: FitTolerance): LeastSq
 }
 
 const MOST_ITERATIONS = 300;
-/** A tiny gain on a long step is a flat valley, along which it is worth going on. */
+/** A tiny gain on a long step is a flat valley, along which it is worth going on, but not for ever. */
 const LONGEST_LAST_STEP = 1e-4;
+const VALLEY_GAIN = 1e-7;
+const NEGLIGIBLE_GAIN = 0.02;
+const MOST_IDLE_STEPS = 6;
 const LEAST_DAMPING = 1e-12;
 const MOST_DAMPING = 1e16;
 /** Residuals in logarithms or otherwise of order one, so small that they are the arithmetic's own. */
 const EXACT_RESIDUAL = 1e-14;
+/** Of order one, too: a tenth of what any reading's own digits leave open. */
+const NEGLIGIBLE_RESIDUAL = 1e-4;
+
+const CONVERGED = new Set<LeastSquaresFit['stop']>(['exact', 'gradient', 'step', 'reduction']);
 
 class State {
   parameters: Float64Array;
@@ -113,6 +123,8 @@ class State {
   jacobian: Float64Array;
   sum: number;
   damping = 1e-3;
+  /** Steps in a row that gained next to nothing. */
+  idleSteps = 0;
   iterations = 0;
 
   private trial: Float64Array;
@@ -145,6 +157,11 @@ class State {
 
   isExact(): boolean {
     return this.sum <= this.problem.residualCount * EXACT_RESIDUAL ** 2;
+  }
+
+  /** Where a valley without an end is still being walked, though what is left is less than any reading's digits. */
+  isNegligible(): boolean {
+    return this.sum <= this.problem.residualCount * NEGLIGIBLE_RESIDUAL ** 2;
   }
 
   /** Gradient and normal matrix here; the parameters that may move. */
@@ -244,7 +261,7 @@ class State {
       jacobian: this.jacobian,
       sumOfSquares: this.sum,
       iterations: this.iterations,
-      converged: stop === 'exact' || stop === 'gradient' || stop === 'step' || stop === 'reduction',
+      converged: CONVERGED.has(stop) || (stop === 'iterations' && this.isNegligible()),
       stop,
       atBound: [...this.parameters].map((value, i) => value <= lower[i]! || value >= upper[i]!),
     };

@@ -30,6 +30,7 @@ import {
   whyNotConvertible,
 } from '#rules/calculations/creep-relaxation';
 import { strainUnderSteps } from '#rules/calculations/creep-superposition';
+import { TEST_TIMES } from '#tests/builders/a-creep-test';
 import { numberOf } from '#tests/reference/reference-record';
 
 const solid = { D0: 0.045, Dinf: 1.2, tau: 900, n: 0.55 };
@@ -316,6 +317,21 @@ describe('a fit', () => {
     expect(fit.rejected).toBeNull();
     const band = creepBandAt(fit, 100, 0.95);
     expect(band.ok && band.band.estimate).toBeCloseTo(0.05, 5);
+  });
+
+  it.each([
+    ['a power law', (t: number) => 0.0435 * t ** 0.114],
+    ['a power law over a glassy part', (t: number) => 0.05 + 0.01 * t ** 0.4],
+    ['steady growth', (t: number) => 0.05 + 0.00025 * t],
+    ['viscous flow', (t: number) => 0.02 * t],
+  ])('of a sigmoid to %s converges, though no point holds where it ends', (_, compliance) => {
+    for (const times of [TEST_TIMES, elevenTimes, Array.from({ length: 300 }, (_value, i) => i + 1)]) {
+      const fit = fitted(times.map((t) => ({ t, D: compliance(t) })));
+      expect(fit).toMatchObject({ converged: true, rejected: null });
+      expect(fit.parameters.find(({ symbol }) => symbol === 'D∞')!.held).toBe(false);
+      const band = creepBandAt(fit, 50, 0.95);
+      expect(band.ok && band.band.estimate / compliance(50)).toBeCloseTo(1, 3);
+    }
   });
 
   it('is rejected where R² in ln D is below 0.98', () => {
