@@ -28,7 +28,7 @@ async function signInByKeyboard(page: Page, name: string): Promise<void> {
 test('doubts are answered, a mix is submitted, annotated and handed on to sign without a mouse', async ({
   browser,
 }) => {
-  test.setTimeout(240_000);
+  test.setTimeout(480_000);
 
   const manager = await asPerson(browser, null);
   await signInByKeyboard(manager, 'Dele Fairweather');

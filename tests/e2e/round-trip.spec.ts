@@ -38,7 +38,7 @@ async function writeNote(
 test('a mix design goes from upload to approval, with a return and a revision in between', async ({
   browser,
 }) => {
-  test.setTimeout(240_000);
+  test.setTimeout(480_000);
 
   const manager = await asPerson(browser, 'Dele Fairweather');
   await expectAccessible(manager);

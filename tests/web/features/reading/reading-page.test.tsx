@@ -141,6 +141,19 @@ describe('the reading page', () => {
     stop();
   });
 
+  it('stays at the doubt that was answered until J goes on', async () => {
+    const { stop } = await open();
+    vi.stubGlobal('fetch', () => new Promise(() => undefined));
+    press('1');
+    await waitFor(() =>
+      expect(screen.getByRole<HTMLInputElement>('radio', { name: '3 April 2026' }).checked).toBe(true),
+    );
+    expect(selected()).toContain('03/04/2026');
+    press('j');
+    expect(selected()).toContain('4721,5');
+    stop();
+  });
+
   it('goes to the next doubt with J and answers that one', async () => {
     const { sent, stop } = await open({ [`PUT ${base}/answers`]: aReadingView({ version: 5 }) });
     press('j');

@@ -10,7 +10,9 @@ const settleMilliseconds = 300;
  */
 export function useCellCursor(first: Place): [Place, (place: Place) => void] {
   const [search, setSearch] = useSearchParams();
-  const named = placeOf(search, first);
+  // The first open doubt is another one after each answer; the cursor must not move by itself.
+  const [start] = useState(first);
+  const named = placeOf(search, start);
   const [cursor, setCursor] = useState(named);
   const addressed = useRef(keyOf(named));
   const namedKey = keyOf(named);
