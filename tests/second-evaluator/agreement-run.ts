@@ -20,7 +20,7 @@ export function runAgreement({ seed, cases, onProgress }: AgreementRun): Tally {
     const { disagreements, findings } = judgeTwice(drawn);
     if (disagreements.length > 0) {
       const least = smallest(drawn, (smaller) => judgeTwice(smaller).disagreements.length > 0);
-      throw new Error(`${judgeTwice(least).disagreements.join('\n')}\n${JSON.stringify(least, null, 1)}`);
+      throw new Error(`${judgeTwice(least).disagreements.join('\n')}\n${JSON.stringify(least)}`);
     }
     tally.add(findings);
     judged += 1;

@@ -26,7 +26,7 @@ export function drawLimit(draw: Draw, id: string, scale: Scale, canRefer: boolea
     [14, 'both'],
     [12, 'target'],
     [18, 'table'],
-    [canRefer ? 8 : 0, 'quantity'],
+    [canRefer ? 20 : 0, 'quantity'],
   ] as const);
   if (form === 'table') return fromTable(draw, id, scale);
   if (form === 'quantity') return fromQuantity(draw, scale);
@@ -107,7 +107,7 @@ function fromQuantity(draw: Draw, scale: Scale): DrawnLimit {
   const plus = draw.whole(-3, 3);
   const steps = (end === 'min' ? scale.min : scale.max) - plus;
   const readings: ReadingInput[] = [];
-  if (!draw.chance(12)) {
+  if (!draw.chance(18)) {
     const qualifier = draw.chance(8) ? { qualifier: '>' as const } : {};
     readings.push({
       quantity: REFERRED,

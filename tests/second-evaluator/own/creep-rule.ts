@@ -6,6 +6,7 @@ import { asNumber, exact, over } from './exact';
 import { type Allowed, isOne, meanOf, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
+import { limitsOf } from './limits';
 import { throughThreePoints } from './power-law';
 import { haveUnits, valuesOf } from './quantity-value';
 import { toTwelveDigits } from './rounding';
@@ -36,9 +37,12 @@ function judgeCreep(world: World, rule: CreepRule): Judgement {
   const doubted = isMeasured ? { ...wanted, time } : wanted;
   if (QUANTITIES.some((quantity) => isDoubted(world, quantity, doubted))) return without('undecided');
   if (typeof found === 'string') return without(found);
-  const measures = measuresOf({ world, unit: knownOf('creep-compliance').unit }, rule);
-  if (measures.is !== 'resolved') return without(measures.is);
+  const place = { world, unit: knownOf('creep-compliance').unit };
+  const limits = limitsOf(place, rule.limit);
+  if (limits.is !== 'resolved') return without(limits.is);
   if (isMeasured && atTime.length === 0) return without('not shown');
+  const measures = measuresOf(place, rule);
+  if (measures.is !== 'resolved') return without(measures.is);
   const value = isMeasured ? meanOfSpecimens(atTime) : fitted(points, measure);
   return value === 'undecided'
     ? without(value)

@@ -30,11 +30,12 @@ export function formulaVerdicts(world: World, rule: FormulaRule): Verdict[] {
 /** Of the design point, unless it is all of aggregate or binder, which belong to every trial. */
 export function formulaSubject({ expression, at }: FormulaMeasure): string {
   if (at.trial !== undefined) return at.trial === 'design' ? 'design point' : 'mix';
-  const isOfMix = namesIn(expression).some((name) => knownOf(quantityOf(name).quantity).of === 'mix');
+  const isOfMix = namesIn(expression).some((name) => knownOf(symbolOf(name).quantity).of === 'mix');
   return isOfMix ? 'design point' : 'mix';
 }
 
-function quantityOf(name: string): { quantity: string; sieve: number | undefined } {
+/** The quantity of a trade symbol, with the sieve that it names. */
+export function symbolOf(name: string): { quantity: string; sieve: number | undefined } {
   const [, symbol = name, opening] = /^(P)([\d.]+)$/.exec(name) ?? [];
   return { quantity: SYMBOLS[symbol]!, sieve: opening === undefined ? undefined : Number(opening) };
 }
@@ -44,7 +45,7 @@ function judgeFormula(world: World, rule: FormulaRule): Judgement {
   const values = new Map<string, Exact>();
   const failures = new Set<string>();
   for (const name of namesIn(expression)) {
-    const { quantity, sieve } = quantityOf(name);
+    const { quantity, sieve } = symbolOf(name);
     const found = meanAt(world, quantity, sieve === undefined ? at : { ...at, sieve });
     if (found.is === 'missing') failures.add('not shown');
     else if (found.is === 'doubtful' || !isOne(found.value)) failures.add('undecided');

@@ -74,7 +74,9 @@ function judgeNumbers(place: Place, rule: ReadingRule, readings: Reading[], meas
   if (also.is !== 'resolved') return without(also.is);
   const limits = inUnitOf(place, measure, unit);
   if (limits === null) return without('undecided');
-  return withEach(main, values.values, { ...measures, limits });
+  // What none stands for depends on the ends that single values are held to.
+  const singles = valuesOf(measure.quantity, readings, unit, limits.min !== null);
+  return singles.is === 'values' ? withEach(main, singles.values, { ...measures, limits }) : main;
 }
 
 /** The ends of `alsoEach` in the unit that the values stand in. */

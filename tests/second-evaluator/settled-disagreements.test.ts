@@ -1,0 +1,121 @@
+import { describe, expect, it } from 'vitest';
+import type { DocumentRecord } from '#rules/record';
+import type { RuleInput } from '#rules/rule-sets/schema';
+import { engineFindings, judgeTwice } from './agreement';
+import type { DocumentInput, GeneratedCase, ReadingInput } from './generated/parts';
+
+/** Where the two evaluators once parted and the engine was wrong: each in its smallest form, with what is right. */
+function aCase(
+  rule: Pick<RuleInput, 'measure' | 'limit'>,
+  record: { readings?: ReadingInput[]; documents?: DocumentInput[] },
+): GeneratedCase {
+  return {
+    base: {
+      format: 'clauseway/rule-set@1',
+      id: 'settled',
+      title: 'Settled',
+      agency: 'Carrow Valley Roads Authority',
+      edition: '1',
+      effective: { from: null, to: null },
+      layerOf: null,
+      rules: [{ id: 'rule', clause: '1', title: 'Rule', severity: 'required', ...rule }],
+    },
+    layers: [],
+    record,
+    context: { submittedOn: '2026-03-09', lettingOn: null, facts: {} },
+  };
+}
+
+function coatings(
+  ...stated: { value: number | null; qualifier?: ReadingInput['qualifier'] }[]
+): ReadingInput[] {
+  return stated.map(({ value, qualifier }, i) => ({
+    quantity: 'coating',
+    value,
+    unit: '%',
+    at: { trial: 'design', specimen: String(i + 1) },
+    origin: 'measured',
+    ...(qualifier === undefined ? {} : { qualifier }),
+  }));
+}
+
+function expectOutcome(drawn: GeneratedCase, outcome: string): void {
+  expect(engineFindings(drawn).map((finding) => finding.outcome)).toEqual([outcome]);
+  expect(judgeTwice(drawn).disagreements).toEqual([]);
+}
+
+describe('the ends of a censored minimum or maximum', () => {
+  const of = (statistic: 'min' | 'max', limit: RuleInput['limit'], readings: ReadingInput[]) =>
+    aCase({ measure: { kind: 'reading', quantity: 'coating', statistic }, limit }, { readings });
+
+  it('leave it undecided where the largest may be the limit itself or more', () => {
+    expectOutcome(
+      of('max', { max: '43.8' }, coatings({ value: 43.8 }, { value: 40, qualifier: '>' })),
+      'undecided',
+    );
+  });
+
+  it('leave it undecided where the smallest may be the limit itself or less', () => {
+    expectOutcome(
+      of('min', { min: '14.0' }, coatings({ value: 14 }, { value: 13, qualifier: '>' })),
+      'undecided',
+    );
+  });
+
+  it('do not pass where the largest may be an exclusive limit itself', () => {
+    const limit = { min: { value: '14.0', exclusive: true } };
+    expectOutcome(of('max', limit, coatings({ value: 14 }, { value: 14.5, qualifier: '<' })), 'undecided');
+  });
+
+  it('pass where the largest is at least an inclusive limit', () => {
+    expectOutcome(
+      of('max', { min: '14.0' }, coatings({ value: 14 }, { value: 14.5, qualifier: '<' })),
+      'pass',
+    );
+  });
+
+  it('fail where every smallest that is allowed lies below the limit', () => {
+    expectOutcome(of('min', { min: '14.0' }, coatings({ value: 15 }, { value: 14, qualifier: '<' })), 'fail');
+  });
+});
+
+describe('two conditions on a specimen', () => {
+  const unknown = { quantity: 'permeability', min: 5 };
+  const unmet = { quantity: 'overlay-cycles', min: 300 };
+  const readings: ReadingInput[] = [
+    ...coatings({ value: 95 }, { value: 80 }),
+    ...['1', '2'].map((specimen) => ({
+      quantity: 'overlay-cycles',
+      value: specimen === '1' ? 400 : 200,
+      unit: 'cycles',
+      at: { specimen },
+      origin: 'measured' as const,
+    })),
+    { quantity: 'permeability', value: 6, unit: '10⁻⁵ cm/s', at: { specimen: '1' }, origin: 'measured' },
+  ];
+
+  it.each([
+    ['the unmet one first', [unmet, unknown]],
+    ['the unknown one first', [unknown, unmet]],
+  ])('leave the specimen out by the one that is not met: %s', (_order, where) => {
+    const measure = { kind: 'reading' as const, quantity: 'coating', where };
+    expectOutcome(aCase({ measure, limit: { min: 90 } }, { readings }), 'pass');
+  });
+});
+
+describe('two documents of one date', () => {
+  const document = (validTo: string | null): Partial<DocumentRecord> & { type: string } => ({
+    type: 'binder-certificate',
+    date: '2026-02-09',
+    validTo,
+  });
+  const measure = { kind: 'document' as const, type: 'binder-certificate', on: 'submitted' as const };
+
+  it.each([
+    ['the expired one first', ['2026-02-28', null]],
+    ['the expired one last', [null, '2026-02-28']],
+  ])('are judged by the one that holds longer: %s', (_order, ends) => {
+    const documents = ends.map(document);
+    expectOutcome(aCase({ measure, limit: { present: true } }, { documents }), 'pass');
+  });
+});
