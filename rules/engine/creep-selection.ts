@@ -29,7 +29,11 @@ export function selectCreepPoints(
   if (!selected.ok) return selected;
   const points = selected.chosen.map(({ point }) => point);
   const timed = points.filter(({ at, fault }) => at.time !== undefined || fault !== null);
-  if (timed.length === 0) return undecided('Readings of creep compliance do not say the loading time.');
+  if (timed.length === 0)
+    return undecided(
+      'Readings of creep compliance do not say the loading time.',
+      'State the loading time of each reading.',
+    );
   return whereMet(world, measure, timed);
 }
 

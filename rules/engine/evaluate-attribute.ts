@@ -42,7 +42,16 @@ export function evaluateAttribute(world: World, rule: ResolvedRule, measure: Att
   if (limit.limit.oneOf !== null) return [ofList(world, rule, measure, { ...base, observed }, limit.limit)];
   if (typeof fact.value !== 'number') {
     const reason = `${text} is not a number, and the rule sets a numeric limit.`;
-    return [makeFinding(world, rule, { ...base, outcome: 'undecided', reason, observed, limit: shown })];
+    return [
+      makeFinding(world, rule, {
+        ...base,
+        outcome: 'undecided',
+        reason,
+        wouldDecide: 'State it as a number.',
+        observed,
+        limit: shown,
+      }),
+    ];
   }
   return [ofNumber(world, rule, base, fact.value, measure, limit.limit)];
 }

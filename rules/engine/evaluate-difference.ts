@@ -10,7 +10,7 @@ import { conditionsOfSubjects } from './evaluate-reading';
 import type { Evidence, Finding, Observed } from './finding';
 import { judge, rounderOf } from './judge';
 import { makeFinding } from './make-finding';
-import { COMPACT_WORDS, notShown, type Obstacle, undecided } from './obstacle';
+import { AGREE_WORDS, COMPACT_WORDS, notShown, type Obstacle, undecided } from './obstacle';
 import { isBorderline, precisionOf } from './precision';
 import { resolveLimit } from './resolve-limit';
 import { evidenceOfRecomputed, labelOfRequest, type SampleRequest, takeSample } from './sample';
@@ -94,7 +94,13 @@ function ofSubject(world: World, rule: ResolvedRule, measure: DifferenceMeasure,
   if (turned.contradicts) {
     const { reason } = turned;
     const parts = { observed, limit: limit.limit, evidence: pair.evidence };
-    return makeFinding(world, rule, { ...base, ...parts, outcome: 'undecided', reason });
+    return makeFinding(world, rule, {
+      ...base,
+      ...parts,
+      outcome: 'undecided',
+      reason,
+      wouldDecide: AGREE_WORDS,
+    });
   }
   return makeFinding(world, rule, {
     ...base,

@@ -11,7 +11,7 @@ import type { Evidence, Finding, Observed, ResolvedLimit } from './finding';
 import { conditionsOfSymbol, type FormulaInput, formulaInputs } from './formula-inputs';
 import { type Judgement, judge, type Rounder, rounderOf } from './judge';
 import { makeFinding } from './make-finding';
-import { type Obstacle, undecided } from './obstacle';
+import { AGREE_WORDS, type Obstacle, undecided } from './obstacle';
 import { isBorderline, precisionOf } from './precision';
 import { resolveLimit } from './resolve-limit';
 import { subjectOf } from './subject';
@@ -102,7 +102,8 @@ function judged(
     roundingSentence: judgement.roundingSentence,
   };
   if (reported.contradicts) {
-    return makeFinding(world, rule, { ...parts, outcome: 'undecided', reason: reported.reason });
+    const { reason } = reported;
+    return makeFinding(world, rule, { ...parts, outcome: 'undecided', reason, wouldDecide: AGREE_WORDS });
   }
   const note = inputs.some(({ sample }) => sample.interpolated)
     ? 'A value in it is interpolated between trials at the declared binder content.'
@@ -124,7 +125,9 @@ function computed(
     formula.expression,
     new Map(inputs.map(({ symbol, value }) => [symbol, value])),
   );
-  return result.ok ? result : undecided(`${capitalised(result.reason)}.`);
+  return result.ok
+    ? result
+    : undecided(`${capitalised(result.reason)}.`, 'Correct the readings that the formula uses.');
 }
 
 /**

@@ -3,7 +3,7 @@ import type { Formula, FormulaSymbol } from '../rule-sets/formula';
 import type { FormulaMeasure } from '../rule-sets/measure';
 import { doubtAbout } from './doubts';
 import type { Evidence } from './finding';
-import { type Obstacle, undecided } from './obstacle';
+import { NUMBER_WORDS, type Obstacle, undecided } from './obstacle';
 import { labelOfRequest, type Sample, type SampleRequest, takeSample } from './sample';
 import { statisticOf } from './statistic';
 import type { World } from './world';
@@ -59,6 +59,7 @@ function inputOf(
   if (judgeable.allowed !== null || judgeable.text !== null) {
     return undecided(
       `The ${labelOfRequest(world, request)} is only known as ${judgeable.text ?? 'a range'}, which a formula cannot use.`,
+      NUMBER_WORDS,
     );
   }
   const { sample } = taken;

@@ -10,6 +10,7 @@ import {
   type Outcome,
   type ResolvedLimit,
 } from './finding';
+import { RULE_WORDS } from './obstacle';
 import type { UsedPrecision } from './precision';
 import type { World } from './world';
 
@@ -63,7 +64,7 @@ export function makeFinding(world: World, rule: ResolvedRule, parts: FindingPart
     requirement: requirementSentence({ rule, view, at, limit, date }),
     sentence: resultSentence({ rule, view, at, limit, outcome, observed, date }),
     reason,
-    wouldDecide: outcome === 'undecided' ? (wouldDecide ?? null) : null,
+    wouldDecide: outcome === 'undecided' ? (wouldDecide ?? RULE_WORDS) : null,
     roundingSentence: parts.roundingSentence ?? null,
     precision: parts.precision ? { value: parts.precision.value, origin: parts.precision.origin } : null,
     advice: rule.advice ?? null,

@@ -15,6 +15,11 @@ export const COMPACT_WORDS = 'Compact and test specimens at the declared binder 
 export const SINGLE_WORDS = 'State the value of each specimen.';
 export const NUMBER_WORDS = 'Test on until the result is a number, and give that.';
 
+export const AGREE_WORDS = 'Correct the raw readings, or the reported value, so that the two agree.';
+
+/** For what no reading would change: limits that contradict, a table without its row, an error of ours. */
+export const RULE_WORDS = 'Tell the agency: the rule, not the workbook, is to be put right.';
+
 export function notShown(reason: string): Obstacle {
   return { ok: false, outcome: 'not shown', reason };
 }

@@ -5,6 +5,7 @@ import { andList, computedWords, withUnit } from '../rule-sets/words';
 import type { RecomputedValue } from './analysis';
 import type { ResolvedLimit } from './finding';
 import { judge, type Rounder } from './judge';
+import { AGREE_WORDS } from './obstacle';
 import type { Sample } from './sample';
 import type { World } from './world';
 
@@ -65,7 +66,7 @@ export function specimensReportedOtherwise(
   quantity: string,
   sample: Sample,
   isSameOutcome: (other: Sample) => boolean,
-): { contradicts: boolean; reason: string } | null {
+): { contradicts: boolean; reason: string; wouldDecide?: string } | null {
   if (sample.recomputed === null || sample.items.length < 2) return null;
   const differing = (world.recomputed.get(quantity) ?? []).filter(
     ({ at, agrees }) => agrees === false && sample.items.some((item) => isSameSpecimen(item.at, at)),
@@ -84,6 +85,7 @@ export function specimensReportedOtherwise(
     ? {
         contradicts: true,
         reason: `The workbook reports other values of ${specimens} than their raw readings give. The two give different outcomes; correct the raw readings or the reported values.`,
+        wouldDecide: AGREE_WORDS,
       }
     : {
         contradicts: false,

@@ -187,5 +187,8 @@ function plain(value: number): { ok: true; judgeable: Judgeable } {
 function numeric(result: { ok: true; value: number } | { ok: false; reason: string }) {
   return result.ok
     ? plain(result.value)
-    : undecided(`${result.reason.charAt(0).toUpperCase()}${result.reason.slice(1)}.`);
+    : undecided(
+        `${result.reason.charAt(0).toUpperCase()}${result.reason.slice(1)}.`,
+        'Add the results of further specimens.',
+      );
 }
