@@ -6,13 +6,16 @@ import { refuse, refuseTooLarge } from './refusal';
 /** A text table as a grid with one sheet without a name. Numbers keep the digits that the file shows. */
 export function decodeCsv(bytes: Buffer, options: DecodeOptions): CellGrid {
   const text = decodeText(bytes);
-  const rows = splitRows(text, delimiterOf(text), options.fileName);
+  const { body, delimiter } = delimited(text);
+  const rows = splitRows(body, delimiter, options.fileName);
+  const hasCommas =
+    delimiter !== ',' && rows.some((fields) => fields.some((field) => decimalComma.test(field)));
   const cells: Cell[] = [];
   let columnCount = 0;
   rows.forEach((fields, rowIndex) => {
     fields.forEach((field, columnIndex) => {
       if (field.trim() === '') return;
-      cells.push(csvCell(field.trim(), rowIndex + 1, columnIndex + 1));
+      cells.push(csvCell(field.trim(), { row: rowIndex + 1, column: columnIndex + 1, hasCommas }));
       columnCount = Math.max(columnCount, columnIndex + 1);
     });
   });
@@ -37,8 +40,16 @@ export function decodeCsv(bytes: Buffer, options: DecodeOptions): CellGrid {
   return { decoder: decoderVersion, date1904: false, properties: {}, sheets: [sheet] };
 }
 
-function csvCell(text: string, row: number, column: number): Cell {
-  const isNumber = /^[+-]?(?:\d+(?:\.\d+)?|\.\d+)(?:e[+-]?\d+)?$/i.test(text);
+/** `4,2` and `2,412`, which in a file parted by semicolons or tabs are no lists. */
+const decimalComma = /^\s*[<>]?\s*[+-]?\d+,\d+\s*%?\s*$/;
+
+/** Beside decimal commas a point groups thousands, so what `1.250` means is for the reading to tell. */
+function csvCell(
+  text: string,
+  { row, column, hasCommas }: { row: number; column: number; hasCommas: boolean },
+): Cell {
+  const isNumber =
+    /^[+-]?(?:\d+(?:\.\d+)?|\.\d+)(?:e[+-]?\d+)?$/i.test(text) && !(hasCommas && text.includes('.'));
   return {
     address: addressOf(row, column),
     row,
@@ -62,6 +73,13 @@ function decodeText(bytes: Buffer): string {
   } catch {
     return new TextDecoder('windows-1252').decode(bytes);
   }
+}
+
+/** A first line `sep=;` is a spreadsheet program's own note of the separator and no row. */
+function delimited(text: string): { body: string; delimiter: string } {
+  const noted = /^sep=(.)(?:\r\n|\r|\n)/i.exec(text);
+  if (noted?.[1]) return { body: text.slice(noted[0].length), delimiter: noted[1] };
+  return { body: text, delimiter: delimiterOf(text) };
 }
 
 /** The separator that most lines agree on, counted outside quotes. */

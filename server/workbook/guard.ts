@@ -48,9 +48,9 @@ async function admit(bytes: Buffer, fileName: string, limits: WorkbookLimits): P
   if (content === 'ole') {
     refuse(`${fileName} is a workbook in the old .xls format, whatever its name ends in.`, saveAsXlsx);
   }
-  if (extension === 'csv') {
+  if (extension === 'csv' || extension === 'tsv') {
     if (content !== 'text') {
-      refuse(`${fileName} is ${contentWords[content]}, not the text that a .csv holds.`, saveAsXlsx);
+      refuse(`${fileName} is ${contentWords[content]}, not the text that a .${extension} holds.`, saveAsXlsx);
     }
     return 'csv';
   }
@@ -62,13 +62,13 @@ async function admit(bytes: Buffer, fileName: string, limits: WorkbookLimits): P
 }
 
 function refuseByName(extension: string, fileName: string): void {
-  if (extension === 'xlsx' || extension === 'csv') return;
+  if (extension === 'xlsx' || extension === 'csv' || extension === 'tsv') return;
   if (extension === 'xlsm' || extension === 'xltm') {
     refuse(`${fileName} may carry macros (.${extension}), and macros are never taken in.`, saveAsXlsx);
   }
   if (extension === 'xls') refuse(`${fileName} is a workbook in the old .xls format.`, saveAsXlsx);
   refuse(
-    `${fileName} is not a workbook that is read here: its name ends in neither .xlsx nor .csv.`,
+    `${fileName} is not a workbook that is read here: its name ends in none of .xlsx, .csv and .tsv.`,
     saveAsXlsx,
   );
 }

@@ -1,7 +1,7 @@
 import type { ProblemSlug } from '#shared/contracts/problems';
 
 export interface WorkbookProblem {
-  slug: Extract<ProblemSlug, 'too-large' | 'file-refused' | 'layout-unknown'>;
+  slug: Extract<ProblemSlug, 'too-large' | 'file-refused'>;
   /** What is wrong and where, as one sentence. */
   detail: string;
   /** What to do about it, as one sentence. */

@@ -81,12 +81,7 @@ export const problemTypes = {
   'file-refused': {
     status: 422,
     title: 'The file cannot be used',
-    fix: 'Send a workbook saved as .xlsx, or a .csv.',
-  },
-  'layout-unknown': {
-    status: 422,
-    title: 'The layout of this workbook is not known',
-    fix: 'Fill in the template of the rule set and upload that.',
+    fix: 'Send a workbook saved as .xlsx, or a .csv or .tsv.',
   },
   'rule-set-refused': { status: 422, title: 'The rule set cannot be used', fix: 'Correct the named places.' },
   'not-immutable': {

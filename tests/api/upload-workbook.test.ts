@@ -245,15 +245,29 @@ describe('a file that cannot be used', () => {
     60_000,
   );
 
-  it('in another layout than the template is refused with one sentence and the way to the template', async () => {
+  it('in a layout of its own is read by what its headings say', async () => {
     const dele = await world.as('Dele Fairweather');
-    const workbook = { name: 'ours.xlsx', bytes: await plain() };
-    const { body } = expectStatus(await upload(world, dele, { workbook }), 202);
+    const rows = [
+      ['Property', 'Trial A', 'Trial B', 'Limit'],
+      ['Maximum specific gravity, Gmm', 2.512, 2.494, null],
+      ['Air voids, %', 5.6, 4.4, 4],
+    ];
+    const bytes = await rawXlsx({ sheets: [{ name: 'Volumetrics', xml: sheetData(rows) }] });
+    const { body } = expectStatus(await upload(world, dele, { workbook: { name: 'ours.xlsx', bytes } }), 202);
     await world.work();
-    const { job, section } = await revisionAt(dele, body.submittalId);
-    expect(job.problem).toMatchObject({ slug: 'layout-unknown', href: section.templateHref });
-    expect(job.problem.detail.split('. ')).toHaveLength(1);
-    expect((await dele.get(section.templateHref)).status).toBe(200);
+    const draft = await revisionAt(dele, body.submittalId);
+    expect(draft).toMatchObject({ hasCheck: true, doubts: 0, job: { state: 'done', problem: null } });
+    const kept = await world.deps.db
+      .select({ quantity: readings.quantity, value: readings.value })
+      .from(readings)
+      .innerJoin(revisions, eq(revisions.id, readings.revisionId))
+      .where(eq(revisions.submittalId, draft.submittalId));
+    expect(kept.map(({ quantity, value }) => `${quantity} ${Number(value)}`).toSorted()).toEqual([
+      'air-voids 4.4',
+      'air-voids 5.6',
+      'maximum-specific-gravity 2.494',
+      'maximum-specific-gravity 2.512',
+    ]);
   });
 
   it('larger than the cap is refused before it is kept', async () => {

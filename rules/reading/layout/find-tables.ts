@@ -271,7 +271,7 @@ function isHeadingRow(
 }
 
 /** "Contractor | Brightwater Paving": a label with its words beside it, not two headings. */
-export function isPair(row: TableRow, { kinds, labels }: Surroundings): boolean {
+export function isPair(row: TableRow, { kinds, labels }: Surroundings, next?: TableRow): boolean {
   const texts = row.cells.filter((cell) => kinds.of(cell) === 'text');
   const [first, second] = texts;
   if (!first || !second) return false;
@@ -299,6 +299,15 @@ export function isPair(row: TableRow, { kinds, labels }: Surroundings): boolean 
     label.document !== null ||
     label.furniture ||
     /:\s*$/.test(first.text);
+  // Over a row of words that ask nothing, two questions side by side are headings.
+  const below = next?.cells[0];
+  const isHeads =
+    answer.attribute !== null &&
+    answer.unknown.length === 0 &&
+    below !== undefined &&
+    next?.cells.length === row.cells.length &&
+    !saysWhat(labels.read(below.text));
+  if (isHeads) return false;
   const answers = !isHeading(answer) || answer.unknown.length > 0;
   if (isFact)
     return (
@@ -327,8 +336,9 @@ function belongsToHeading(
     (cell) => kinds.of(cell) === 'text' || (kinds.of(cell) === 'value' && !values.includes(cell)),
   );
   if (values.length === 0) {
-    if (isPair(row, around)) return false;
+    if (isPair(row, around, next)) return false;
     if (texts.length === 0) return row.cells.some((cell) => kinds.of(cell) === 'unit');
+    if (isAnsweredByWords(row, around)) return false;
     if (row.cells.length === 1) return true;
     const meanings = texts.map(({ text }) => labels.read(text));
     const [label, ...answers] = meanings;
@@ -364,6 +374,16 @@ function headFigures(row: TableRow, around: Surroundings): Cell[] {
     around.kinds.of(first) === 'text' &&
     around.labels.read(first.text).quantities.length === 0;
   return falls && isNamed && numbers.length > 3 ? numbers : [];
+}
+
+/** "Sand equivalent | N/A | %": a property whose result is a word. */
+function isAnsweredByWords(row: TableRow, { kinds, labels }: Surroundings): boolean {
+  const [first, ...others] = row.cells;
+  if (!first || kinds.of(first) !== 'text' || labels.read(first.text).quantities.length === 0) return false;
+  return (
+    others.some((cell) => kinds.of(cell) === 'none' && !/^[-–—]+$/.test(cell.text.trim())) &&
+    others.every((cell) => kinds.of(cell) !== 'text')
+  );
 }
 
 /** A row of headings that stands alone, with a blank row under it. */

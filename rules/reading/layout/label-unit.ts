@@ -116,7 +116,6 @@ const foreignUnits = new Map([
   ['% by volume', '%'],
   ['% of agg', '%'],
   ['% of aggregate', '%'],
-  ['% passing', '%'],
   ['mass %', '%'],
   ['wt. %', '%'],
   ['wt %', '%'],

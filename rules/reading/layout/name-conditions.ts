@@ -25,6 +25,8 @@ export function keyConditions(
   ) {
     return measuredCondition(key, cell, unit, decimal);
   }
+  // A sentence is no name.
+  if (text.length > longestName) return { state: 'none' };
   const meaning = cell.kind === 'text' ? labels.read(text) : null;
   const stated = meaning ? namedCondition(key, text, meaning) : undefined;
   if (stated !== undefined) return certain(stated);
@@ -43,6 +45,8 @@ function asConditions(
   const alternatives = understood.alternatives.map((each) => ({ ...each, value: build(each.value) }));
   return doubtOf(understood.reason, alternatives);
 }
+
+const longestName = 60;
 
 /** What a binder or a mix has gone through before the test. */
 const agings =

@@ -307,13 +307,15 @@ function nameByCorners({ table, columns, kinds, labels, decimal }: TableContext)
   if (table.headings.length < 2) return;
   for (const { row, cells } of table.headings) {
     const [corner] = cells;
-    if (!corner || kinds.of(corner) !== 'text' || columns.get(corner.column)?.kind === 'value') continue;
+    const under = corner ? columns.get(corner.column) : undefined;
+    if (!corner || kinds.of(corner) !== 'text' || under?.kind === 'value') continue;
     const meaning = labels.read(corner.text);
     const key =
       meaning.quantities.length === 0 && meaning.unknown.length === 0
         ? meaning.keys.find(isConditionKey)
         : undefined;
-    if (key === undefined) continue;
+    // Where the figures under it are such keys, it speaks of them and not of the heads beside it.
+    if (key === undefined || under?.key === key) continue;
     for (const column of columns.values()) {
       if (column.kind !== 'value') continue;
       const head = column.heads.find(
@@ -417,8 +419,11 @@ function trialsByBinder(context: TableContext): ((row: TableRow, role: Role | nu
     if (cell && Number.isFinite(value)) texts.set(binderText(cell), value);
   }
   const steps = [...texts.values()].sort((a, b) => a - b);
+  // Specimens that each have their own content are results of one mix unless the steps are those of a design.
+  const hasSpecimens = all.some(({ key }) => key === 'specimen') && steps.length >= table.rows.length - 1;
+  const least = hasSpecimens ? 0.29 : 0.195;
   const isLadder =
-    steps.length > 1 && steps.every((value, at) => at === 0 || value - (steps[at - 1] as number) > 0.195);
+    steps.length > 1 && steps.every((value, at) => at === 0 || value - (steps[at - 1] as number) > least);
   if (!isLadder) return null;
   let last: string | null = null;
   return ({ cells }, role) => {

@@ -461,9 +461,21 @@ function setKey(result: TableColumn, keys: ConditionName[], sample: Cell[]): voi
     result.corner = 'sieve';
     return;
   }
+  const words = sample.filter(
+    ({ kind, text }) => kind === 'text' && !/^[<>~]?\s*-?\d/.test(text.trim()),
+  ).length;
+  if (figureKeys.has(key) && sample.length > 1 && words * 2 > sample.length) {
+    result.kind = 'key';
+    result.key = 'specimen';
+    result.corner = key;
+    return;
+  }
   result.kind = 'key';
   result.key = key;
 }
+
+/** Keys that are figures: words under such a heading are names, and the heading speaks of the heads beside it. */
+const figureKeys: ReadonlySet<ConditionName> = new Set(['time', 'temperature', 'passes', 'frequency']);
 
 export function isSieve(cell: Cell): boolean {
   return (

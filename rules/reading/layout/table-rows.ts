@@ -92,7 +92,7 @@ export class RowKeys {
         facts.role = 'remark';
         return;
       }
-      if (key !== 'stockpile' && meaning.unknown.length > 3) {
+      if (key !== 'stockpile' && key !== 'sieve' && meaning.unknown.length > 3) {
         facts.role = 'remark';
         return;
       }

@@ -243,6 +243,33 @@ describe('the check on the command line', () => {
     60_000,
   );
 
+  it.each([
+    [
+      'semicolons and decimal commas',
+      'a.csv',
+      Buffer.from('Eigenschaft;Versuch A;Versuch B\nHohlraumgehalt, %;5,6;4,4\n'),
+    ],
+    ['tabs', 'b.tsv', Buffer.from('Property\tTrial A\tTrial B\nAir voids, %\t5.6\t4.4\n')],
+    [
+      'two bytes a character',
+      'c.csv',
+      Buffer.from('\ufeffProperty,Trial A,Trial B\n"Air voids, %",5.6,4.4\n', 'utf16le'),
+    ],
+    [
+      'an old code page',
+      'd.csv',
+      Buffer.from('Propri\u00e9t\u00e9;Essai A;Essai B\nTeneur en vides (%);5,6;4,4\n', 'latin1'),
+    ],
+  ])('reads a text file with %s in a layout of its own', async (_, name, bytes) => {
+    const { code, out } = await run('--rules', rules, '--json', file(name, bytes));
+    expect(code).toBe(1);
+    const { record } = JSON.parse(out);
+    expect(record.readings).toMatchObject([
+      { quantity: 'air-voids', value: 5.6, unit: '%', at: { trial: 'A' }, source: { sheet: '', cell: 'B2' } },
+      { quantity: 'air-voids', value: 4.4, unit: '%', at: { trial: 'B' }, source: { sheet: '', cell: 'C2' } },
+    ]);
+  });
+
   it('ends its process with 2 and writes to standard error only', async () => {
     const { code, out, err } = await spawned('--rules', rules, 'gone.xlsx');
     expect([code, out]).toEqual([2, '']);

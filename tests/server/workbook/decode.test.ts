@@ -210,6 +210,22 @@ describe('decoding a text table', () => {
     }
   });
 
+  it('leaves a point beside decimal commas to the reading, and takes no note of the separator for a row', async () => {
+    const cells = await cellsOf(Buffer.from('sep=;\nPasses;Va\n20.000;4,2\n'), 'mix.csv');
+    expect([cells.get('A1')?.text, cells.get('A2')?.kind, cells.get('B2')?.value]).toEqual([
+      'Passes',
+      'text',
+      '4,2',
+    ]);
+    const plain = await cellsOf(Buffer.from('Passes;Va\n20.5;4.2\n'), 'mix.csv');
+    expect([plain.get('A2')?.kind, plain.get('B2')?.value]).toEqual(['number', '4.2']);
+  });
+
+  it('reads a table parted by tabs under the name .tsv', async () => {
+    const cells = await cellsOf(Buffer.from('Trial\tGmm\nA\t2.512\n'), 'mix.tsv');
+    expect(cells.get('B2')).toMatchObject({ kind: 'number', value: '2.512' });
+  });
+
   it('keeps separators and line ends inside quotes', async () => {
     const cells = await cellsOf(Buffer.from('"a, ""b""\nc",2\n'), 'mix.csv');
     expect(cells.get('A1')?.text).toBe('a, "b"\nc');

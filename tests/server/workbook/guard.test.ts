@@ -38,7 +38,7 @@ describe('guarding an upload', () => {
       /is a web page/,
     ],
     ['a workbook whose name allows macros', ole, 'mix.xlsm', /may carry macros/],
-    ['another kind of file', Buffer.from('x'), 'mix.docx', /ends in neither/],
+    ['another kind of file', Buffer.from('x'), 'mix.docx', /ends in none of/],
     ['an empty file', Buffer.alloc(0), 'mix.xlsx', /is empty/],
   ])('refuses %s', async (_, bytes, name, detail) => {
     const problem = await refusalOf(bytes, name);

@@ -18,7 +18,7 @@ describe('choosing a workbook', () => {
   });
 
   it('refuses what is not a workbook', () => {
-    expect(fault('certificate.pdf')).toContain('saved as .xlsx or .csv');
+    expect(fault('certificate.pdf')).toContain('saved as .xlsx, .csv or .tsv');
   });
 
   it('takes a file of exactly the largest size and refuses one byte more', () => {

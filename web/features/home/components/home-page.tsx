@@ -38,10 +38,10 @@ export function HomePage() {
       {home.abilities.upload ? (
         <FileDrop
           title="Drop a workbook to check it"
-          help=".xlsx or .csv, filled in from the template of the rule set. Nothing is sent until you submit."
+          help=".xlsx or .csv, in your laboratory’s own layout or the template. Nothing is sent until you submit."
           button="Choose a file"
           keyHint="U"
-          accept={['.xlsx', '.csv']}
+          accept={['.xlsx', '.csv', '.tsv']}
           onFile={upload}
         />
       ) : null}

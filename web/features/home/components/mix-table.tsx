@@ -22,8 +22,8 @@ export function MixTable({
   if (submittals.length === 0) {
     return (
       <EmptyState title="No mix has been uploaded yet.">
-        Fill in the template of your project’s section, then{' '}
-        <Link to={paths.upload}>upload the workbook</Link>.
+        <Link to={paths.upload}>Upload the workbook</Link> of a mix design, in your laboratory’s own layout or
+        the template of your project’s section.
       </EmptyState>
     );
   }

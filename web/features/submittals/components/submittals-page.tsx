@@ -55,7 +55,8 @@ function NoSubmittals({ filters }: { filters: SubmittalFilters }) {
   }
   return abilities.upload ? (
     <EmptyState title="No mix has been uploaded yet.">
-      Fill in the template of a project’s section, then <Link to={paths.upload}>upload the workbook</Link>.
+      <Link to={paths.upload}>Upload the workbook</Link> of a mix design, in your laboratory’s own layout or
+      the template of a project’s section.
     </EmptyState>
   ) : (
     <EmptyState title="No contractor has submitted a mix yet.">

@@ -31,7 +31,7 @@ export function ChosenWorkbook({
         help={
           file
             ? `${formatBytes(file.size)}. Drop another to take its place.`
-            : '.xlsx or .csv, filled in from the template. Your file is never changed.'
+            : '.xlsx or .csv, in your laboratory’s own layout or the template. Your file is never changed.'
         }
         button={file ? 'Choose another' : 'Choose a file'}
         accept={workbookEndings}

@@ -1,5 +1,5 @@
 /** Endings that the server reads; it looks at the content too, this only spares a pointless upload. */
-export const workbookEndings = ['.xlsx', '.csv'];
+export const workbookEndings = ['.xlsx', '.csv', '.tsv'];
 
 export function workbookFileFault(file: Pick<File, 'name' | 'size'>, mostBytes: number): string | null {
   const name = file.name.toLowerCase();
@@ -10,7 +10,7 @@ export function workbookFileFault(file: Pick<File, 'name' | 'size'>, mostBytes: 
     return `${file.name} may carry macros. Save it as .xlsx, without macros, and choose that file.`;
   }
   if (!workbookEndings.some((ending) => name.endsWith(ending))) {
-    return `${file.name} is not a workbook. Choose a file saved as .xlsx or .csv.`;
+    return `${file.name} is not a workbook. Choose a file saved as .xlsx, .csv or .tsv.`;
   }
   if (file.size === 0) return `${file.name} is empty. Choose the file again.`;
   if (file.size > mostBytes) {
