@@ -7,7 +7,7 @@ export type Side = 'below' | 'inside' | 'above';
 
 /** After the rule's own rounding, as a finding is judged. A value that cannot be had is outside. */
 export function sideOf(value: number | null, limit: ResolvedLimit, rounder: Rounder): Side {
-  if (value === null) return 'below';
+  if (value === null || !Number.isFinite(value)) return 'below';
   const far = farSideOf(value, limit, farthestMove(rounder));
   if (far !== null) return far;
   const rounded = roundTo({ value, ...rounder });

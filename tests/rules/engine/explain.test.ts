@@ -1,3 +1,4 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { evaluate } from '#rules/engine/evaluate';
 import { explainFindings } from '#rules/engine/explain';
@@ -7,6 +8,7 @@ import { RULE_WORDS } from '#rules/engine/obstacle';
 import { toPassWords } from '#rules/engine/to-pass';
 import type { MixRecord, Reading } from '#rules/record';
 import type { LayerInput, RuleInput, RuleSetInput } from '#rules/rule-sets/schema';
+import edition2026 from '#rules/sets/cvra-412-2026.json';
 import { shippedRuleSets } from '#rules/sets/shipped-rule-sets';
 import { aContext, aRecord, attributes } from '#tests/builders/a-record';
 import { aLayer, anEdition, aRule } from '#tests/builders/a-rule-set';
@@ -243,6 +245,65 @@ describe('to pass', () => {
     expect(words({ min: '101' }, reading('sand-equivalent', 43))).toEqual([]);
   });
 });
+
+it('explains whatever there is, and only what fails, without stumbling over impossible data', () => {
+  const edition = anEdition(edition2026 as unknown as Partial<RuleSetInput>);
+  const value = fc.oneof(
+    fc.constantFrom(0, -1, 1e-9, 1e9, 2.4, 2.5, 5, 100),
+    fc.double({ min: -10, max: 5000, noNaN: true }),
+  );
+  const anyReading = fc
+    .record({
+      quantity: fc.constantFrom(
+        'binder-content',
+        'binder-specific-gravity',
+        'maximum-specific-gravity',
+        'bulk-specific-gravity-mix',
+        'bulk-specific-gravity-aggregate',
+        'percent-passing',
+        'sand-equivalent',
+        'tensile-strength-dry',
+        'tensile-strength-conditioned',
+        'air-voids',
+      ),
+      trial: fc.constantFrom('A', 'B', 'C', 'D', 'design'),
+      specimen: fc.constantFrom(undefined, '1', '2'),
+      sieve: fc.constantFrom(2.36, 0.075),
+      value,
+    })
+    .map(({ quantity, trial, specimen, sieve, value: number }) =>
+      reading(quantity, number, {
+        trial,
+        ...(specimen === undefined ? {} : { specimen }),
+        ...(quantity === 'percent-passing' ? { sieve } : {}),
+      }),
+    );
+  fc.assert(
+    fc.property(fc.array(anyReading, { minLength: 10, maxLength: 60 }), (readings) => {
+      const record = aRecord({
+        readings,
+        attributes: attributes({
+          nominalMaximumSize: 12.5,
+          designTraffic: 4,
+          mixType: 'dense-graded',
+          course: 'surface',
+        }),
+      });
+      const context = aContext();
+      const { findings } = evaluate(record, edition, context);
+      const explanations = explainFindings({ record, edition, context, findings });
+      for (const finding of findings) {
+        const ways = explanations[findingKey(finding)]?.toPass ?? [];
+        if (finding.outcome !== 'fail') expect(ways).toEqual([]);
+        for (const { from, to, present } of ways) {
+          expect(from !== null || to !== null).toBe(true);
+          expect((from !== null && from > present) || (to !== null && to < present)).toBe(true);
+        }
+      }
+    }),
+    { numRuns: 60 },
+  );
+}, 120_000);
 
 describe('why this limit', () => {
   const table = {
