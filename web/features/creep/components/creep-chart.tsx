@@ -95,6 +95,8 @@ function Brackets({ geometry, points }: { geometry: CreepGeometry; points: Creep
   const { tested, beyond, frame } = geometry;
   const times = points.map(({ time }) => time);
   const y = frame.top - 12;
+  // A label wider than its bracket begins with it, so that the two labels never touch.
+  const isShort = beyond !== null && beyond.to - beyond.from < 120;
   const span = `${seconds(Math.min(...times))} to ${seconds(Math.max(...times))} s`;
   return (
     <>
@@ -107,9 +109,9 @@ function Brackets({ geometry, points }: { geometry: CreepGeometry; points: Creep
           <path className="bracket bracket-beyond" d={`M${beyond.from} ${y}H${beyond.to}V${frame.top - 2}`} />
           <text
             className="bracket-label bracket-label-beyond"
-            x={(beyond.from + beyond.to) / 2}
+            x={isShort ? beyond.from + 6 : (beyond.from + beyond.to) / 2}
             y={y - 6}
-            textAnchor="middle"
+            textAnchor={isShort ? 'start' : 'middle'}
           >
             {beyond.decades.toFixed(1)} {beyond.decades.toFixed(1) === '1.0' ? 'decade' : 'decades'} beyond
           </text>

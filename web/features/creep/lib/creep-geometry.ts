@@ -233,7 +233,7 @@ function flagOf(
   }: { frame: CreepGeometry['frame']; x: number; y: (value: number) => number; isNarrow: boolean },
 ): Flag {
   const { finding, min, max, estimate, band } = view;
-  const anchor = x > frame.right - (isNarrow ? 130 : 240) ? ('end' as const) : ('start' as const);
+  const anchor = x > frame.right - (isNarrow ? 130 : 190) ? ('end' as const) : ('start' as const);
   const labelX = anchor === 'end' ? x - 20 : x + 20;
   const decimals = finding.limit?.decimals ?? 0;
   const limits = [
