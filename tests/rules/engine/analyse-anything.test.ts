@@ -78,7 +78,7 @@ it('computes finite numbers or nothing from any record, and names each contradic
     }),
     { numRuns: 150 },
   );
-});
+}, 60_000);
 
 it('gives one value for each quantity at each set of conditions', () => {
   fc.assert(
