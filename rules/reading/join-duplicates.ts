@@ -9,10 +9,13 @@ export function joinReadings(log: ReadingLog): Reading[] {
   const groups = new Map<string, TakenReading[]>();
   for (const taken of log.readings) {
     const key = `${taken.reading.quantity}|${conditionsKey(taken.reading.at)}`;
-    groups.set(key, [...(groups.get(key) ?? []), taken]);
+    const group = groups.get(key);
+    if (group) group.push(taken);
+    else groups.set(key, [taken]);
   }
   return [...groups.values()].flatMap((group) => {
     const distinct = distinctOf(group);
+    if (distinct.length > mostAlternatives) return passOverSeries(log, group);
     const [only] = distinct;
     if (distinct.length === 1 && only) {
       for (const { place, taken } of group) log.use(place, 'read', taken);
@@ -22,10 +25,17 @@ export function joinReadings(log: ReadingLog): Reading[] {
   });
 }
 
+/** So many values of one thing are what a machine logged, and no statement of a result. */
+function passOverSeries(log: ReadingLog, group: TakenReading[]): Reading[] {
+  for (const { place } of group) log.passOver(place, unreadReasons.rawData);
+  return [];
+}
+
 /** Values that differ beyond their displayed digits; of two that agree the finer one stands. */
 function distinctOf(group: TakenReading[]): TakenReading[] {
   const distinct: TakenReading[] = [];
   for (const taken of group) {
+    if (distinct.length > mostAlternatives) break;
     const at = distinct.findIndex((known) => agree(known, taken));
     const known = distinct[at];
     if (!known) distinct.push(taken);

@@ -9,9 +9,10 @@ import { decimalMark } from './layout/decimal-mark';
 import { findTables } from './layout/find-tables';
 import { LabelReader } from './layout/label-meaning';
 import { dropMeans } from './layout/means-of-specimens';
-import { farConditions, readTable } from './layout/read-table';
+import { readTable } from './layout/read-table';
 import { settleCandidates } from './layout/settle-candidates';
 import type { SheetContext } from './layout/sheet-context';
+import { farConditions } from './layout/table-context';
 import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
 import type { Answer, ReadingResult } from './reading-result';
 import { SheetIndex } from './sheet-index';
@@ -34,7 +35,7 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
   const reading: ReadingContext = { grid, log: createReadingLog(answers) };
   const { log } = reading;
   const kinds = new CellKinds();
-  const labels = new LabelReader(vocabularyOf(edition));
+  const labels = labelReaderOf(edition);
   const indexes = grid.sheets.map((sheet) => new SheetIndex(sheet));
   const decimals = new Map(grid.sheets.map((sheet) => [sheet.name, decimalMark(sheet)]));
   const candidates: SheetContext['candidates'] = [];
@@ -95,6 +96,16 @@ function sheetTemperature(name: string): Conditions {
   const degrees = Number(match[1].replace(/^(?:minus |neg |m)/i, '-').replace(',', '.'));
   const converted = convert(degrees, `°${match[2].toUpperCase()}`, '°C');
   return converted.ok ? { temperature: converted.value } : {};
+}
+
+const readers = new WeakMap<ReadingEdition, LabelReader>();
+
+function labelReaderOf(edition: ReadingEdition): LabelReader {
+  const known = readers.get(edition);
+  if (known) return known;
+  const reader = new LabelReader(vocabularyOf(edition));
+  readers.set(edition, reader);
+  return reader;
 }
 
 /** A sheet called "JMF" holds the submittal; what is told apart as the design on it says so itself. */

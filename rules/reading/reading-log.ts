@@ -1,4 +1,11 @@
-import type { AttributeValue, Conditions, DocumentRecord, Doubt, Reading } from '../record';
+import {
+  type AttributeValue,
+  type Conditions,
+  conditionsSchema,
+  type DocumentRecord,
+  type Doubt,
+  type Reading,
+} from '../record';
 import type { Cell, CellGrid, SheetGrid } from './cell-grid';
 import type { Answer, CellUse, Unread } from './reading-result';
 import { leaveOut, type Understood } from './settled';
@@ -46,9 +53,10 @@ export interface ReadingLog {
 export type Settled<T> = { state: 'value'; value: T } | { state: 'blank' | 'none' | 'left out' | 'doubt' };
 
 export function createReadingLog(answers: Answer[]): ReadingLog {
-  const uses = new Map<string, CellUse>();
+  /** What each cell was taken for, and whether it is already listed as unused. */
+  const uses = new Map<string, { taken: CellUse; isListed: boolean }>();
+  const doubtAt = new Map<string, Doubt>();
   const answerAt = new Map(answers.map((answer) => [placeKey(answer), answer]));
-  const passedOver = new Set<string>();
   const rank = { label: 0, unused: 1, read: 2, doubt: 3 } as const;
   const log: ReadingLog = {
     readings: [],
@@ -58,16 +66,25 @@ export function createReadingLog(answers: Answer[]): ReadingLog {
     unread: [],
     answered: [],
     use(place, use, taken) {
-      const known = uses.get(placeKey(place));
-      if (known && rank[known.use] >= rank[use]) return;
-      uses.set(placeKey(place), { sheet: place.sheet, cell: place.cell, use, taken });
+      const key = placeKey(place);
+      const known = uses.get(key);
+      if (known && rank[known.taken.use] >= rank[use]) return;
+      const told = { sheet: place.sheet, cell: place.cell, use, taken };
+      if (known) known.taken = told;
+      else uses.set(key, { taken: told, isListed: false });
     },
     isUsed: (place) => uses.has(placeKey(place)),
     passOver(place, reason) {
-      if (passedOver.has(placeKey(place))) return;
-      passedOver.add(placeKey(place));
-      log.unread.push({ ...place, reason });
-      log.use(place, 'unused', reason);
+      const key = placeKey(place);
+      const known = uses.get(key);
+      if (known?.isListed) return;
+      log.unread.push({ sheet: place.sheet, cell: place.cell, text: place.text, reason });
+      const told: CellUse = { sheet: place.sheet, cell: place.cell, use: 'unused', taken: reason };
+      if (!known) uses.set(key, { taken: told, isListed: true });
+      else {
+        known.isListed = true;
+        if (rank[known.taken.use] < rank.unused) known.taken = told;
+      }
     },
     settle(place, understood, about, offer) {
       if (understood.state !== 'doubt') return understood;
@@ -80,7 +97,7 @@ export function createReadingLog(answers: Answer[]): ReadingLog {
         }
       }
       const reason = `${place.cell} ${understood.reason}.`;
-      addDoubt(log, { ...place, reason, alternatives: [], about }, () => [
+      addDoubt(log, doubtAt, { ...place, reason, alternatives: [], about }, () => [
         ...understood.alternatives.map(({ answer: id, label, value }) => ({
           answer: id,
           label,
@@ -91,16 +108,24 @@ export function createReadingLog(answers: Answer[]): ReadingLog {
       log.use(place, 'doubt', reason);
       return { state: 'doubt' };
     },
-    uses: () => [...uses.values()],
+    uses: () => [...uses.values()].map(({ taken }) => taken),
   };
   return log;
 }
 
 /** One doubt a cell: a key that several quantities share is asked about once. */
-function addDoubt(log: ReadingLog, doubt: Doubt, alternatives: () => Doubt['alternatives']): void {
-  const known = log.doubts.find((each) => placeKey(each) === placeKey(doubt));
+function addDoubt(
+  log: ReadingLog,
+  doubtAt: Map<string, Doubt>,
+  doubt: Doubt,
+  alternatives: () => Doubt['alternatives'],
+): void {
+  const key = placeKey(doubt);
+  const known = doubtAt.get(key);
   if (!known) {
-    log.doubts.push({ ...doubt, alternatives: alternatives() });
+    const asked = { ...doubt, alternatives: alternatives() };
+    log.doubts.push(asked);
+    doubtAt.set(key, asked);
   } else if (known.about.quantity !== doubt.about.quantity) {
     known.about = {};
   }
@@ -114,10 +139,16 @@ export function placeKey(place: { sheet: string; cell: string }): string {
   return `${place.sheet}\u0000${place.cell}`;
 }
 
+const conditionNames = Object.keys(conditionsSchema.shape) as (keyof Conditions)[];
+
 /** Conditions in one order, so that the same conditions give the same text. */
 export function conditionsKey(at: Conditions): string {
-  const entries = Object.entries(at).filter(([, value]) => value !== undefined);
-  return JSON.stringify(entries.toSorted(([a], [b]) => (a < b ? -1 : 1)));
+  let key = '';
+  for (const name of conditionNames) {
+    const value = at[name];
+    if (value !== undefined) key += `${name}:${typeof value}:${value}\u0000`;
+  }
+  return key;
 }
 
 export interface ReadingContext {

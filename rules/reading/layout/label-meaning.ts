@@ -59,6 +59,9 @@ export function isHeading(meaning: LabelMeaning): boolean {
   );
 }
 
+/** Labels come again from workbook to workbook; a stream of other texts must not pile up. */
+const keptTexts = 5000;
+
 /** Understands labels, each distinct text once. */
 export class LabelReader {
   private readonly known = new Map<string, LabelMeaning>();
@@ -68,6 +71,7 @@ export class LabelReader {
   read(text: string): LabelMeaning {
     const known = this.known.get(text);
     if (known) return known;
+    if (this.known.size >= keptTexts) this.known.clear();
     const meaning = text.length > 160 ? emptyMeaning(text, 30) : understand(text, this.vocabulary);
     this.known.set(text, meaning);
     return meaning;

@@ -4,7 +4,7 @@ import { understandDate } from '../parse-date';
 import { plainText } from '../plain-text';
 import { placeOf } from '../reading-log';
 import type { TableRow } from './find-tables';
-import type { TableContext } from './read-table';
+import type { TableContext } from './table-context';
 
 type DateName = 'date' | 'validTo';
 

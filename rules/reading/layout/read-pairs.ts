@@ -7,12 +7,14 @@ import { submittalFacts } from '../submittal-facts';
 import { understandAttribute } from '../understand-attribute';
 import { unreadReasons } from '../unread-reason';
 import type { TableRow } from './find-tables';
+import { bareCandidate } from './heading-candidates';
 import type { LabelMeaning } from './label-meaning';
 import { keyConditions } from './name-conditions';
 import { readDocumentPair } from './read-document-row';
-import { bareCandidate, mark, roleReasons, saysOutcome, type TableContext } from './read-table';
+import { roleReasons, saysOutcome } from './read-value';
 import { readWritten } from './read-written';
 import { isConditionKey } from './table-columns';
+import { mark, type TableContext } from './table-context';
 import { isRowLabel } from './table-rows';
 
 /** A list of labels with what they say beside or under them; the label nearest to the left, else above, speaks. */

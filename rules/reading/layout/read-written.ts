@@ -1,8 +1,9 @@
 import type { Cell } from '../cell-grid';
 import { plainText } from '../plain-text';
 import { readsAsNumber } from './cell-kind';
+import { bareCandidate } from './heading-candidates';
 import { readAttributeCell, setAmbient } from './read-pairs';
-import { bareCandidate, type TableContext } from './read-table';
+import type { TableContext } from './table-context';
 
 /** A label and its value in one cell: "Gb = 1.028", "Design traffic: 10 million ESAL", "Passes: 20,000". */
 export function readWritten(cell: Cell, context: TableContext): boolean {

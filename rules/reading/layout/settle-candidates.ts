@@ -30,7 +30,8 @@ export interface SettleOptions {
 export function settleCandidates(candidates: Candidate[], options: SettleOptions): void {
   const neighbours = domainsOfTables(candidates, options.find);
   const assigned = candidates.map((each): Assigned => {
-    const candidate = { ...each, domains: [...each.domains, ...(neighbours.get(each.table) ?? [])] };
+    const beside = neighbours.get(each.table) ?? [];
+    const candidate = beside.length === 0 ? each : { ...each, domains: [...each.domains, ...beside] };
     const choices = resolveQuantities(candidate, options.find);
     const [first] = choices;
     return { ...candidate, choices, conditions: first ? acceptedConditions(candidate, first) : {} };

@@ -33,6 +33,8 @@ export interface TableColumn {
   onAggregate: boolean;
   onMix: boolean;
   domains: Domain[];
+  /** With those of its table, for values that no label of their own says more of. */
+  allDomains: Domain[];
   /** A heading that names whose the column is, without saying of what kind that is. */
   name: string | null;
   nameCell: Cell | null;
@@ -250,6 +252,7 @@ function columnUnder(column: number, heads: Cell[], { kinds, labels }: Surroundi
     onAggregate: false,
     onMix: false,
     domains: [],
+    allDomains: [],
     name: null,
     nameCell: null,
     nameKey: null,

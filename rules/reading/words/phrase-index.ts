@@ -122,6 +122,10 @@ export interface Vocabulary {
 }
 
 export function vocabularyOf(edition: ReadingEdition): Vocabulary {
+  return { shared: sharedIndex(), own: ownIndex(edition) };
+}
+
+function ownIndex(edition: ReadingEdition): PhraseIndex {
   const own = new PhraseIndex();
   for (const { id, label, symbol, aliases } of edition.quantities) {
     for (const name of [label, symbol, ...aliases].filter(isTelling))
@@ -136,7 +140,7 @@ export function vocabularyOf(edition: ReadingEdition): Vocabulary {
       own.add(phrase, { kind: 'document', name: type });
     if (documentWords[type]) own.addAll(documentWords[type], { kind: 'document', name: type });
   }
-  return { shared: sharedIndex(), own };
+  return own;
 }
 
 /** The longest phrase of either index; where both know it, all that it can mean. */
