@@ -1,7 +1,7 @@
 import tQuantile from '@stdlib/stats-base-dists-t-quantile';
-import { mean } from './mean';
+import { decimalDifference } from './decimal-sum';
 import { cannot, known, type NumericResult } from './numeric-result';
-import { sampleStandardDeviation } from './spread';
+import { unroundedSpread } from './spread';
 
 export interface OutlierTest {
   /** (largest − mean)/s and (mean − smallest)/s. */
@@ -26,13 +26,12 @@ export function outlierTest(
 ): { ok: true; test: OutlierTest } | { ok: false; reason: string } {
   const critical = criticalOutlier(values.length, significance);
   if (!critical.ok) return critical;
-  const centre = mean(values);
-  if (!centre.ok) return centre;
-  const deviation = sampleStandardDeviation(values);
-  if (!deviation.ok) return deviation;
-  if (deviation.value === 0) return cannot('values without spread have no outlier');
-  const high = (Math.max(...values) - centre.value) / deviation.value;
-  const low = (centre.value - Math.min(...values)) / deviation.value;
+  if (!values.every(Number.isFinite)) return cannot('one of the values is not a number');
+  const first = values[0] ?? Number.NaN;
+  const { meanFromFirst, deviation } = unroundedSpread(values);
+  if (deviation === 0) return cannot('values without spread have no outlier');
+  const high = (decimalDifference(Math.max(...values), first) - meanFromFirst) / deviation;
+  const low = (meanFromFirst - decimalDifference(Math.min(...values), first)) / deviation;
   const isBeyond = Math.max(high, low) > critical.value;
   const outlier = isBeyond ? (high >= low ? 'high' : 'low') : null;
   return { ok: true, test: { high, low, critical: critical.value, outlier } };

@@ -1,7 +1,7 @@
 import betaDistribution from '@stdlib/stats-base-dists-beta-cdf';
-import { mean } from './mean';
+import { decimalDifference } from './decimal-sum';
 import { cannot, known, type NumericResult } from './numeric-result';
-import { sampleStandardDeviation } from './spread';
+import { unroundedSpread } from './spread';
 
 export interface QualityOptions {
   values: readonly number[];
@@ -30,15 +30,14 @@ export function percentWithinLimits({ values, lower, upper }: QualityOptions): N
   if (lower !== null && upper !== null && lower > upper)
     return cannot('the lower limit lies above the upper');
   if (values.length < 3) return cannot('percent within limits needs at least three values');
-  const centre = mean(values);
-  if (!centre.ok) return centre;
-  const deviation = sampleStandardDeviation(values);
-  if (!deviation.ok) return deviation;
-  const x = centre.value;
-  const s = deviation.value;
-  if (s === 0) return known((lower === null || x >= lower) && (upper === null || x <= upper) ? 100 : 0);
-  const above = lower === null ? 100 : percentOneSided((x - lower) / s, values.length);
-  const below = upper === null ? 100 : percentOneSided((upper - x) / s, values.length);
+  if (!values.every(Number.isFinite)) return cannot('one of the values is not a number');
+  const first = values[0] ?? Number.NaN;
+  const { meanFromFirst, deviation: s } = unroundedSpread(values);
+  const overLower = lower === null ? 0 : decimalDifference(first, lower) + meanFromFirst;
+  const underUpper = upper === null ? 0 : decimalDifference(upper, first) - meanFromFirst;
+  if (s === 0) return known(overLower >= 0 && underUpper >= 0 ? 100 : 0);
+  const above = lower === null ? 100 : percentOneSided(overLower / s, values.length);
+  const below = upper === null ? 100 : percentOneSided(underUpper / s, values.length);
   return known(above + below - 100);
 }
 

@@ -1,3 +1,4 @@
+import { decimalDifference } from './decimal-sum';
 import { mean } from './mean';
 import { cannot, known, type NumericResult } from './numeric-result';
 
@@ -11,10 +12,24 @@ import { cannot, known, type NumericResult } from './numeric-result';
  */
 export function sampleStandardDeviation(values: readonly number[]): NumericResult {
   if (values.length < 2) return cannot('a standard deviation needs at least two values');
-  const centre = mean(values);
-  if (!centre.ok) return centre;
-  const squares = values.reduce((sum, value) => sum + (value - centre.value) ** 2, 0);
-  return known(Math.sqrt(squares / (values.length - 1)));
+  if (!values.every(Number.isFinite)) return cannot('one of the values is not a number');
+  return known(unroundedSpread(values).deviation);
+}
+
+/**
+ * Sample standard deviation, and the mean as a distance from the first value: steps of a further calculation, which a
+ * rounding in between would cost half its digits. Counted from the first value, equal values have no spread at all.
+ *
+ * Source: textbook definition. Domain: at least two finite values.
+ *
+ * @example unroundedSpread([4, 4, 7]) // the mean is 4 + 1, the deviation √3
+ */
+export function unroundedSpread(values: readonly number[]): { meanFromFirst: number; deviation: number } {
+  const first = values[0] ?? Number.NaN;
+  const distances = values.map((value) => decimalDifference(value, first));
+  const meanFromFirst = distances.reduce((sum, distance) => sum + distance, 0) / values.length;
+  const squares = distances.reduce((sum, distance) => sum + (distance - meanFromFirst) ** 2, 0);
+  return { meanFromFirst, deviation: Math.sqrt(squares / (values.length - 1)) };
 }
 
 /**

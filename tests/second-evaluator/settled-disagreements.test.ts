@@ -79,6 +79,24 @@ describe('the ends of a censored minimum or maximum', () => {
   });
 });
 
+describe('percent within limits', () => {
+  // By hand: the mean lies 2/3 of 0.38 above the smallest, s is 0.38/√3, so Q of the upper limit is 1/√3, X 1/4, and
+  // the share of the arcsine distribution below 1/4 is 2/π·asin 1/2, a third; nothing lies below the lower limit.
+  it('loses no digits to a mean that does not end', () => {
+    const within = { min: '99.0', max: '100.0' };
+    const measure = {
+      kind: 'reading' as const,
+      quantity: 'coating',
+      statistic: 'percent-within-limits' as const,
+      within,
+    };
+    const readings = coatings({ value: 100 }, { value: 99.62 }, { value: 100 });
+    const drawn = aCase({ measure, limit: { min: 60 } }, { readings });
+    expect(engineFindings(drawn)[0]?.observed?.value).toBeCloseTo(200 / 3, 9);
+    expectOutcome(drawn, 'pass');
+  });
+});
+
 describe('two conditions on a specimen', () => {
   const unknown = { quantity: 'permeability', min: 5 };
   const unmet = { quantity: 'overlay-cycles', min: 300 };

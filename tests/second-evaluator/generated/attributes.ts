@@ -1,7 +1,7 @@
 import type { MixRecordInput } from '#rules/record';
 import type { RuleInput, RuleSetInput } from '#rules/rule-sets/schema';
 import type { Draw } from './draw';
-import type { DoubtInput } from './parts';
+import type { DoubtInput, ReadingInput } from './parts';
 
 type Scalar = number | string | boolean;
 type Condition = NonNullable<RuleInput['when']>;
@@ -152,6 +152,7 @@ export function drawWhen(draw: Draw, meant: Record<string, Scalar>, depth = 0): 
 }
 
 function drawComparison(draw: Draw, meant: Record<string, Scalar>): Condition {
+  if (draw.chance(15)) return ofQuantity(draw);
   const choice = draw.oneOf(CHOICES);
   const fact = choice.name;
   const value = draw.chance(60) ? meant[fact]! : draw.oneOf(choice.values);
@@ -164,6 +165,53 @@ function drawComparison(draw: Draw, meant: Record<string, Scalar>): Condition {
     return { fact, operator: draw.oneOf(['in', 'notIn'] as const), value: list };
   }
   return { fact, operator: draw.oneOf(['equal', 'notEqual'] as const), value };
+}
+
+/** Only conditions compare it. */
+const COMPARED = 'lime-content';
+
+function ofQuantity(draw: Draw): Condition {
+  const orders = [
+    'lessThan',
+    'lessThanInclusive',
+    'greaterThan',
+    'greaterThanInclusive',
+    'equal',
+    'notEqual',
+  ] as const;
+  const params = { quantity: COMPARED, ...(draw.chance(25) ? { at: { aging: 'none' } } : {}) };
+  return { fact: 'quantity', params, operator: draw.oneOf(orders), value: draw.oneOf([1, 1.5, 2]) };
+}
+
+/** What is stated of the compared quantity: once or of specimens, censored, in doubt, of another trial, or nothing. */
+export function drawCompared(draw: Draw): { readings: ReadingInput[]; doubts: DoubtInput[] } {
+  const how = draw.weighed([
+    [60, 'once'],
+    [12, 'of specimens'],
+    [6, 'of another trial'],
+    [6, 'censored'],
+    [6, 'in doubt'],
+    [10, 'nothing'],
+  ] as const);
+  const at = draw.chance(30) ? { aging: 'none' } : {};
+  const value = draw.oneOf([1, 1.5, 2, 1.25]);
+  const reading: ReadingInput = { quantity: COMPARED, value, unit: '%', at, origin: 'measured' };
+  const cell = { sheet: 'Tests', cell: 'E30', text: '?', reason: 'The cell cannot be read.' };
+  const doubt = { ...cell, alternatives: [], about: { quantity: COMPARED, at } };
+  if (how === 'in doubt') return { readings: [], doubts: [doubt] };
+  const specimens = ['1', '2'].map((specimen, i) => ({
+    ...reading,
+    value: value + i,
+    at: { ...at, specimen },
+  }));
+  const readings: Record<typeof how, ReadingInput[]> = {
+    once: [reading],
+    'of specimens': specimens,
+    'of another trial': [{ ...reading, at: { ...at, trial: 'B' } }],
+    censored: [{ ...reading, qualifier: '<' }],
+    nothing: [],
+  };
+  return { readings: readings[how], doubts: [] };
 }
 
 export function drawAllowed(draw: Draw): { attribute: string; values: readonly Scalar[]; isNumber: boolean } {

@@ -1,5 +1,5 @@
 import type { LayerInput, RuleInput, RuleSetInput } from '#rules/rule-sets/schema';
-import { DECLARED, drawAttributes, drawWhen } from './attributes';
+import { DECLARED, drawAttributes, drawCompared, drawWhen } from './attributes';
 import { creepPart } from './creep-part';
 import type { Draw } from './draw';
 import { formulaPart } from './formula-part';
@@ -18,6 +18,7 @@ const HEAD = {
 /** A record and a rule set, with or without layers, in which each kind of measure comes up alike. */
 export function drawCase(draw: Draw): GeneratedCase {
   const stated = drawAttributes(draw);
+  const compared = drawCompared(draw);
   const parts = drawParts(draw);
   const rules = parts.flatMap((part) => part.rules);
   for (const rule of rules) if (draw.chance(45)) rule.when = drawWhen(draw, stated.meant);
@@ -28,9 +29,9 @@ export function drawCase(draw: Draw): GeneratedCase {
     layers,
     record: {
       attributes: stated.attributes,
-      readings: parts.flatMap((part) => part.readings),
+      readings: [...compared.readings, ...parts.flatMap((part) => part.readings)],
       documents: parts.flatMap((part) => part.documents),
-      doubts: [...stated.doubts, ...parts.flatMap((part) => part.doubts)],
+      doubts: [...stated.doubts, ...compared.doubts, ...parts.flatMap((part) => part.doubts)],
     },
     context: {
       submittedOn: draw.chance(8) ? null : '2026-03-09',

@@ -5,6 +5,7 @@ import { drawLimit, drawRounding } from './limits';
 import { type DocumentInput, emptyPart, type Part } from './parts';
 import { type Candidate, measuredAt } from './quantities';
 import { drawReadings } from './readings';
+import { drawWhere } from './where';
 
 /** An attribute that is stated, among allowed values from a list or a table, or a number within limits. */
 export function attributePart(draw: Draw, id: string): Part {
@@ -140,10 +141,15 @@ export function differencePart(draw: Draw, id: string, candidate: Candidate): Pa
     ...(statistic === 'count' ? limit.tables.map(withoutUnits) : limit.tables),
     ...rounding.tables,
   );
+  const where: NonNullable<RuleInput['measure']['where']> = [];
   for (const laboratory of ['contractor', 'agency'] as const) {
     const stated = laboratory === 'agency' ? { laboratory } : {};
     const wanted = { rule: {}, readings: () => stated, beside: [] };
     const count = draw.whole(1, 4);
+    const met = drawWhere(draw, candidate, wanted, count, where.length > 0);
+    if (laboratory === 'contractor') where.push(...met.where);
+    else if (where.length === 0) met.readings = [];
+    part.readings.push(...met.readings);
     const drawn = drawReadings(draw, { candidate, wanted, count, scale, statistic });
     part.readings.push(...drawn.readings);
     part.doubts.push(...drawn.doubts);
@@ -153,7 +159,13 @@ export function differencePart(draw: Draw, id: string, candidate: Candidate): Pa
     clause: '5',
     title: candidate.id,
     severity: 'required',
-    measure: { kind: 'difference', quantity: candidate.id, between: ['contractor', 'agency'], statistic },
+    measure: {
+      kind: 'difference',
+      quantity: candidate.id,
+      between: ['contractor', 'agency'],
+      statistic,
+      ...(where.length > 0 ? { where } : {}),
+    },
     limit: limit.limit,
     ...roundingOf(rounding),
     ...(draw.chance(30) ? { precision: { value: decimal(draw.whole(0, 3), scale.decimals) } } : {}),

@@ -27,7 +27,7 @@ export const CANDIDATES: Candidate[] = [
   { id: 'lift-thickness', least: 40, most: 60, ...length },
   { id: 'retained-stability', least: 70, most: 90, ...percent },
   { id: 'proportional-rut-depth', least: 5, most: 9, ...percent },
-  { id: 'maximum-specific-gravity', least: 2, most: 3, unit: '1', others: [], wrong: 'mm' },
+  { id: 'water-absorption', least: 1, most: 2, ...percent, isOfAggregate: true },
   { id: 'wheel-track-rut-depth', least: 5, most: 12, ...length },
   { id: 'loaded-wheel-rut-depth', least: 4, most: 8, ...length },
   {

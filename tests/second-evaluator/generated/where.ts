@@ -15,10 +15,11 @@ export function drawWhere(
   candidate: Candidate,
   wanted: Wanted,
   count: number,
+  isAsked = false,
 ): { where: Wheres; readings: ReadingInput[] } {
   const where: Wheres = [];
   const readings: ReadingInput[] = [];
-  if (candidate.isOfAggregate || !draw.chance(16)) return { where, readings };
+  if (candidate.isOfAggregate || !(draw.chance(16) || isAsked)) return { where, readings };
   for (const quantity of draw.chance(25) ? ON_SPECIMENS : ON_SPECIMENS.slice(0, 1)) {
     const min = draw.whole(60, 70);
     const max = min + draw.whole(0, 20);

@@ -4,11 +4,12 @@ import { type Exact, exact, magnitude, minus, over, times } from './exact';
 import { isOne, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
-import { meanAt, valuesOf } from './quantity-value';
+import { haveUnits, meanAt, valuesOf } from './quantity-value';
 import { isDoubted, select } from './selection';
 import { statisticOf } from './statistic-of';
 import { subjectOf } from './subject';
 import { converted } from './units';
+import { countingReadings } from './where';
 import { type Verdict, type World, without } from './world';
 
 export type DifferenceRule = Rule & { measure: DifferenceMeasure };
@@ -51,12 +52,16 @@ function sidesOf(world: World, measure: DifferenceMeasure): Side[] {
 /** One number a side: a censored one leaves the distance open. */
 function sideOfLaboratory(
   world: World,
-  { quantity, statistic }: DifferenceMeasure,
+  { quantity, statistic, where }: DifferenceMeasure,
   laboratory: 'contractor' | 'agency',
 ): Side {
   const chosen = select(world, quantity, { laboratory });
   if (chosen.is !== 'readings') return chosen;
-  const values = valuesOf(quantity, chosen.readings, knownOf(quantity).unit, true);
+  if (!haveUnits(quantity, chosen.readings)) return { is: 'doubtful' };
+  const counting = countingReadings(world, chosen.readings, where ?? []);
+  if (counting === null) return { is: 'doubtful' };
+  if (counting.length === 0) return { is: 'missing' };
+  const values = valuesOf(quantity, counting, knownOf(quantity).unit, true);
   if (values.is !== 'values') return values;
   const value = statisticOf(values.values, statistic, null);
   return value === null || !isOne(value) ? { is: 'doubtful' } : { is: 'value', value: value.low };
