@@ -147,6 +147,11 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
     const whole = longestPhrase(vocabulary, [...tokens, '%'], 0);
     if (whole?.to === tokens.length + 1) addSenses(meaning, [whole], [...tokens, '%']);
   }
+  const numbered = numberedSpecimen(meaning);
+  if (numbered !== null) {
+    meaning.at = { ...meaning.at, specimen: numbered };
+    meaning.unknown = [];
+  }
   if (meaning.percent && meaning.unit === null) meaning.unit = '%';
   if (
     sieve &&
@@ -157,6 +162,15 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
     meaning.quantities = ['percent-passing'];
   }
   return meaning;
+}
+
+/** "Height 2" and "Strain 3" number the specimen behind the name; "Nini (8)" states a number of gyrations. */
+function numberedSpecimen({ quantities, unknown, at, text }: LabelMeaning): string | null {
+  const [only, ...more] = unknown;
+  if (only === undefined || more.length > 0 || quantities.length === 0 || at.specimen !== undefined)
+    return null;
+  if (quantities.some((id) => id.startsWith('gyrations-') || id.startsWith('coarse-aggregate'))) return null;
+  return /^\d$/.test(only) && new RegExp(`\\s#?${only}\\s*(?:[(\\[,].*)?$`).test(text) ? only : null;
 }
 
 function subsetIn(text: string): 'dry' | 'conditioned' | null {
@@ -221,6 +235,7 @@ function addSense(meaning: LabelMeaning, sense: Sense, { isWhole }: { isWhole: b
       break;
     case 'role':
       // A limit beside a name makes the whole a limit; an average gives way to it.
+      if (sense.name === 'total' && meaning.quantities.length > 0) break;
       if (meaning.role === null || meaning.role === 'average') meaning.role = sense.name;
       break;
     case 'design':

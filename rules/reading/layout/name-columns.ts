@@ -12,6 +12,7 @@ import { binderText } from './trials-by-binder';
 export function nameColumns(context: TableContext): void {
   const { columns, labels, decimal, nameKey, table, kinds } = context;
   nameByCorners(context);
+  nameByGroups(context);
   for (const column of columns.values()) {
     if (column.kind !== 'value' || column.name === null || column.nameCell === null) continue;
     const key = column.nameKey ?? nameKey;
@@ -134,5 +135,17 @@ function nameByBinder(context: TableContext): void {
     if (new Set(values.map(({ cell }) => cell.text)).size < 2) continue;
     for (const { column, cell } of values) column.at = { ...column.at, trial: binderText(cell) };
     return;
+  }
+}
+
+/** Under sieves a group heading that is only a name is a stockpile's. */
+function nameByGroups({ columns, labels, decimal }: TableContext): void {
+  if (![...columns.values()].some(({ key }) => key === 'sieve')) return;
+  for (const column of columns.values()) {
+    if (column.kind !== 'value' || column.groupName === null || column.at.stockpile !== undefined) continue;
+    // A name under it says more than the group's.
+    if (column.nameCell !== null && labels.read(column.nameCell.text).quantities.length === 0) continue;
+    const understood = keyConditions('stockpile', column.groupName, { labels, unit: null, decimal });
+    if (understood.state === 'value') column.at = { ...understood.value, ...column.at };
   }
 }

@@ -18,6 +18,7 @@ export function suspicions(assigned: Assigned[], _options: SettleOptions): Map<A
   for (const table of tables.values()) {
     swappedGravities(table, found);
     fractions(table, found);
+    sameHeadings(table, found);
   }
   return found;
 }
@@ -93,4 +94,37 @@ function fractions(table: Assigned[], found: Map<Assigned, Suspicion>): void {
 function runKey(each: Assigned, quantity: Quantity): string {
   const { sieve: _, specimen: _1, trial: _2, stockpile, ...rest } = each.conditions;
   return `${quantity.id}|${conditionsKey({ ...rest, ...(each.conditions.sieve !== undefined && stockpile !== undefined ? { stockpile } : {}) })}`;
+}
+
+/**
+ * Two columns that their headings do not tell apart: where they differ anywhere, neither is known to be whose, so a
+ * row in which they happen to agree says no more.
+ */
+function sameHeadings(table: Assigned[], found: Map<Assigned, Suspicion>): void {
+  const byKey = new Map<string, Assigned[]>();
+  for (const each of table) {
+    const [quantity] = each.choices;
+    if (!quantity || each.choices.length > 1 || !each.isHeaded) continue;
+    const key = `${quantity.id}|${conditionsKey(each.conditions)}`;
+    const group = byKey.get(key);
+    if (group) group.push(each);
+    else byKey.set(key, [each]);
+  }
+  const clashing = new Set<string>();
+  const groups = [...byKey.values()].filter(
+    (group) => new Set(group.map(({ cell }) => cell.column)).size > 1,
+  );
+  for (const group of groups) {
+    if (new Set(group.map(({ cell }) => cell.value)).size === 1) continue;
+    for (const { choices, cell } of group) clashing.add(`${choices[0]?.id}|${cell.column}`);
+  }
+  for (const group of groups) {
+    for (const each of group) {
+      if (!clashing.has(`${each.choices[0]?.id}|${each.cell.column}`) || found.has(each)) continue;
+      found.set(each, {
+        reason: 'stands under a heading that another column has too, and nothing says whose each is',
+        alternatives: [],
+      });
+    }
+  }
 }

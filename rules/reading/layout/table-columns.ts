@@ -39,6 +39,8 @@ export interface TableColumn {
   name: string | null;
   nameCell: Cell | null;
   nameKey: ConditionName | null;
+  /** An upper heading that only names: "Stockpile A" over "% retained" and "% passing". */
+  groupName: Cell | null;
   /** What its heading says of the heads beside it, where that is not what stands under it. */
   corner: ConditionName | null;
   /** Binder content by which a trial is named, and the cell that says so. */
@@ -256,6 +258,7 @@ function columnUnder(column: number, heads: Cell[], { kinds, labels }: Surroundi
     name: null,
     nameCell: null,
     nameKey: null,
+    groupName: null,
     corner: null,
     binder: null,
   };
@@ -274,6 +277,11 @@ function columnUnder(column: number, heads: Cell[], { kinds, labels }: Surroundi
   for (const cell of heads)
     if (kinds.of(cell) === 'unit')
       result.unit = unitText(cell, labels.read(`x (${cell.text.replace(/[()[\]]/g, '')})`)) ?? result.unit;
+  for (const [at, meaning] of meanings.entries()) {
+    const isName = at < meanings.length - 1 && meaning.unknown.length > 0 && meaning.quantities.length === 0;
+    if (isName && meaning.role === null && Object.keys(meaning.at).length === 0)
+      result.groupName = texts[at] ?? null;
+  }
   nameQuantity(result, meanings, { kinds, labels });
   nameColumn(result, heads, meanings, { kinds, labels });
   return result;
@@ -381,6 +389,18 @@ function decideKind(
     if (meaning.unknown.length > 0 && keys.some(isConditionKey)) return false;
     return meaning.quantities.length > 0 || meaning.attribute !== null || meaning.furniture || meaning.raw;
   });
+  // Over a run of counts beside heights or densities it is where those were taken.
+  const isCount =
+    result.quantities.length === 1 && result.quantities[0] === 'gyrations-design' && sample.length > 1;
+  if (
+    isCount &&
+    isFirst &&
+    /^(?:no\.? of |number of )?(?:gyr|giros|girat|dreh|umdreh|n$)/i.test(last?.text ?? '')
+  ) {
+    result.kind = 'key';
+    result.key = 'gyrations';
+    return;
+  }
   if (hasDocuments) {
     const part = keys.find((key) => documentParts.has(key));
     if (part) {

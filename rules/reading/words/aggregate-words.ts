@@ -35,7 +35,7 @@ export const aggregateWords: Record<string, string> = {
     Kantigkeit feine Gesteinskornung | angularite du sable | angularite des sables | angularite du granulat fin | angularidad del agregado fino | angularidad agregado fino | vacios no compactados`,
   'flat-and-elongated': `F&E | flat and elongated | flat & elongated | flat and elongated particles | flat elongated | flat elongated particles | flat or elongated | F and E | plattige und langliche Korner |
     particules plates et allongees | plates et allongees | particulas planas y alargadas | planas y alargadas | chatas y alargadas | particulas chatas y alargadas`,
-  'sand-equivalent': `SE | sand equivalent | sand equivalent value | clay content sand equivalent | Sandaquivalent | equivalent de sable | equivalente de arena`,
+  'sand-equivalent': `SE | sand equiv | sand eq | sand equivalent | sand equivalent value | clay content sand equivalent | Sandaquivalent | equivalent de sable | equivalente de arena`,
   'abrasion-loss': `LA abrasion | L.A. abrasion | Los Angeles abrasion | Los Angeles | LA | LAR | LA wear | L.A. wear | abrasion loss | abrasion | LA loss | Los Angeles wear | Los Angeles loss | LA abrasion loss | Los Angeles abrasion loss |
     Los-Angeles-Koeffizient | Los Angeles Koeffizient | coefficient Los Angeles | desgaste Los Angeles | abrasion Los Angeles | coeficiente Los Angeles | desgaste de Los Angeles`,
   'micro-deval-loss': `Micro-Deval | micro deval | micro deval loss | micro deval abrasion | microdeval | MDE | MD loss | Micro-Deval-Koeffizient | coefficient micro-Deval | coeficiente micro-Deval | desgaste micro deval`,
