@@ -6,6 +6,7 @@ import { type Obstacle, undecided } from './obstacle';
 import type { Sample, SampleRequest } from './sample';
 import { isPerTrial } from './scope';
 import { allowanceOf } from './select';
+import { statedGyrations } from './stated-gyrations';
 import type { World } from './world';
 
 /**
@@ -103,17 +104,24 @@ function couldBe(world: World, doubted: Subject, wanted: Conditions, trials: Set
   const belongsToTrial = isPerTrial(world, doubted.quantity)
     ? trials.has(trial ?? 'design')
     : trial === undefined || trials.has(trial);
-  return belongsToTrial && TEST_CONDITIONS.every((name) => agree(name, doubted.at[name], wanted[name]));
+  return (
+    belongsToTrial && TEST_CONDITIONS.every((name) => agree(world, name, doubted.at[name], wanted[name]))
+  );
 }
 
 function agree(
+  world: World,
   name: (typeof TEST_CONDITIONS)[number],
   doubted: string | number | undefined,
   wanted: string | number | undefined,
 ): boolean {
   if (doubted === undefined || wanted === undefined) return true;
-  // A name and a number of gyrations may be the same: not knowing counts as a doubt.
-  if (typeof doubted !== typeof wanted) return true;
+  if (typeof doubted !== typeof wanted) {
+    const [named, number] = typeof doubted === 'string' ? [doubted, wanted] : [wanted, doubted];
+    const resolved = statedGyrations(world, String(named));
+    // Not knowing whether a name and a number are the same counts as a doubt.
+    return resolved === null || resolved === number;
+  }
   if (typeof doubted === 'number' && typeof wanted === 'number') {
     return Math.abs(doubted - wanted) <= allowanceOf(name, wanted);
   }

@@ -1,8 +1,8 @@
 import { evaluate } from '#rules/engine/evaluate';
 import type { Finding, Outcome } from '#rules/engine/finding';
-import { mixRecordSchema } from '#rules/record';
-import { type ResolvedEdition, resolveEdition } from '#rules/rule-sets/resolve';
-import { layerSchema, ruleSetSchema } from '#rules/rule-sets/schema';
+import { type MixRecord, mixRecordSchema } from '#rules/record';
+import { resolveEdition } from '#rules/rule-sets/resolve';
+import { type Layer, layerSchema, type RuleSet, ruleSetSchema } from '#rules/rule-sets/schema';
 import type { GeneratedCase } from './generated/parts';
 import { verdictsOf } from './own/verdicts';
 import { type Verdict, worldOf } from './own/world';
@@ -14,16 +14,36 @@ export interface JudgedTwice {
   findings: { kind: string; outcome: Outcome; borderline: boolean }[];
 }
 
+/** A case as schemas leave it, which both evaluators are given. */
+interface Parsed {
+  base: RuleSet;
+  layers: Layer[];
+  record: MixRecord;
+  context: GeneratedCase['context'];
+}
+
+function parsedCase({ base, layers, record, context }: GeneratedCase): Parsed {
+  return {
+    base: ruleSetSchema.parse(base),
+    layers: layers.map((layer) => layerSchema.parse(layer)),
+    record: mixRecordSchema.parse(record),
+    context,
+  };
+}
+
 /** One case judged by the engine and by the second evaluator, finding by finding. */
 export function judgeTwice(drawn: GeneratedCase): JudgedTwice {
-  const findings = engineFindings(drawn);
-  const base = ruleSetSchema.parse(drawn.base);
-  const layers = drawn.layers.map((layer) => layerSchema.parse(layer));
-  const world = worldOf(mixRecordSchema.parse(drawn.record), base, layers, drawn.context);
+  const parsed = parsedCase(drawn);
+  const findings = ofEngine(parsed);
   return {
-    disagreements: compared(findings.map(asVerdict), verdictsOf(world)),
+    disagreements: compared(findings.map(asVerdict), ownVerdicts(parsed)),
     findings: findings.map(({ kind, outcome, borderline }) => ({ kind, outcome, borderline })),
   };
+}
+
+/** What the second evaluator says of a case. */
+export function expectedOf(drawn: GeneratedCase): Verdict[] {
+  return ownVerdicts(parsedCase(drawn));
 }
 
 /** Where the engine parts with what was expected of a case. */
@@ -33,16 +53,19 @@ export function disagreementsWith(drawn: GeneratedCase, expected: Verdict[]): st
 
 /** The engine's findings on rules; what does not add up in the data is no part of the comparison. */
 export function engineFindings(drawn: GeneratedCase): Finding[] {
-  const record = mixRecordSchema.parse(drawn.record);
-  const result = evaluate(record, editionOf(drawn), drawn.context);
-  return result.findings.filter(({ clause }) => clause !== null);
+  return ofEngine(parsedCase(drawn));
 }
 
-function editionOf({ base, layers }: GeneratedCase): ResolvedEdition {
-  const parsed = layers.map((layer) => layerSchema.parse(layer));
-  const resolution = resolveEdition(ruleSetSchema.parse(base), parsed);
-  if (resolution.ok) return resolution.edition;
-  throw new Error(`A drawn edition does not resolve: ${JSON.stringify(resolution.problems)}`);
+function ofEngine({ base, layers, record, context }: Parsed): Finding[] {
+  const resolution = resolveEdition(base, layers);
+  if (!resolution.ok) {
+    throw new Error(`A drawn edition does not resolve: ${JSON.stringify(resolution.problems)}`);
+  }
+  return evaluate(record, resolution.edition, context).findings.filter(({ clause }) => clause !== null);
+}
+
+function ownVerdicts({ base, layers, record, context }: Parsed): Verdict[] {
+  return verdictsOf(worldOf(record, base, layers, context));
 }
 
 function asVerdict(finding: Finding): Verdict {

@@ -97,6 +97,40 @@ describe('percent within limits', () => {
   });
 });
 
+describe('a range', () => {
+  it('is the difference of the decimals as they are written', () => {
+    const measure = { kind: 'reading' as const, quantity: 'coating', statistic: 'range' as const };
+    const readings = coatings({ value: 66.15 }, { value: 66.16 });
+    expectOutcome(aCase({ measure, limit: { min: '0.01' } }, { readings }), 'pass');
+    expectOutcome(
+      aCase({ measure, limit: { max: { value: '0.01', exclusive: true } } }, { readings }),
+      'fail',
+    );
+  });
+});
+
+describe('a doubt at a number of gyrations', () => {
+  it('is none about the maximum gyrations where these are stated as another number', () => {
+    const measure = { kind: 'reading' as const, quantity: 'coating', at: { gyrations: 'maximum' as const } };
+    const stated: ReadingInput = {
+      quantity: 'gyrations-maximum',
+      value: 160,
+      unit: 'gyrations',
+      origin: 'measured',
+    };
+    const doubt = {
+      sheet: 'Tests',
+      cell: 'E12',
+      text: '?',
+      reason: 'The cell cannot be read.',
+      alternatives: [],
+      about: { quantity: 'coating', at: { gyrations: 115 } },
+    };
+    const drawn = aCase({ measure, limit: { min: 90 } }, { readings: [stated] });
+    expectOutcome({ ...drawn, record: { ...drawn.record, doubts: [doubt] } }, 'not shown');
+  });
+});
+
 describe('two conditions on a specimen', () => {
   const unknown = { quantity: 'permeability', min: 5 };
   const unmet = { quantity: 'overlay-cycles', min: 300 };

@@ -41,13 +41,13 @@ export function drawCase(draw: Draw): GeneratedCase {
   };
 }
 
-/** One to four rules of different quantities, so that no rule's readings are in another's way. */
+/** Some rules of different quantities, so that no rule's readings are in another's way. */
 function drawParts(draw: Draw): Part[] {
   const first = draw.whole(0, CANDIDATES.length - 1);
   const candidate = (i: number) => CANDIDATES[(first + i * 7) % CANDIDATES.length]!;
   const parts: Part[] = [];
   let usesGravity = false;
-  const count = draw.whole(1, 3);
+  const count = draw.whole(2, 5);
   for (let i = 0; i < count; i += 1) {
     const id = `rule-${i}`;
     const kind = draw.weighed([
@@ -59,7 +59,7 @@ function drawParts(draw: Draw): Part[] {
       [12, 'difference'],
       [5, 'recomputed'],
       [12, 'formula'],
-      [12, 'creep'],
+      [10, 'creep'],
     ] as const);
     // Gradations, formulas and gravities are shared by several kinds: one of them a case is enough.
     const isAlone = ['sieve', 'gradation', 'formula', 'recomputed', 'creep'].includes(kind);

@@ -9,7 +9,7 @@ export interface Draw {
   weighed: <T>(options: readonly (readonly [weight: number, option: T])[]) => T;
 }
 
-export const CHOICES = 360;
+export const CHOICES = 480;
 
 export function drawFrom(choices: readonly number[]): Draw {
   let taken = 0;

@@ -2,7 +2,7 @@ import type { Reading } from '#rules/record';
 import type { CreepComplianceMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
 import { isSameCondition } from './conditions';
-import { asNumber, exact, over } from './exact';
+import { asNumber, exact, greatest, over } from './exact';
 import { type Allowed, isOne, meanOf, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
@@ -79,7 +79,10 @@ function valueBy(reading: Reading): Allowed | null {
     return stress === undefined ? null : one(over(exact(reading.value), exact(stress)));
   }
   const values = valuesOf(reading.quantity, [reading], knownOf(reading.quantity).unit, true);
-  return values.is === 'values' ? values.values[0]!.allowed : null;
+  if (values.is !== 'values') return null;
+  const { low, high } = values.values[0]!.allowed;
+  // Nothing is stiffer than not to give at all.
+  return { low: greatest([low, exact(0)]), high };
 }
 
 /** The mean over specimens, of each the mean of its own points. */
