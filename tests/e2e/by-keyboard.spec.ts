@@ -63,6 +63,7 @@ test('doubts are answered, a mix is submitted, annotated and handed on to sign w
 
   const reviewer = await asPerson(browser, null);
   await signInByKeyboard(reviewer, 'Ines Tordoff');
+  await expect(reviewer.getByRole('heading', { name: /Review queue/ })).toBeVisible();
   await reviewer.keyboard.press('/');
   await reviewer.keyboard.type(mix);
   await expect(reviewer.getByRole('option', { name: new RegExp(mix) }).first()).toBeVisible();

@@ -1,6 +1,6 @@
 // @vitest-environment happy-dom
 import { act, fireEvent, screen, waitFor, within } from '@testing-library/react';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { cautions } from '#shared/cautions';
 import { aReturnView } from '#tests/builders/a-return-view';
 import { aRevision, noAbilities } from '#tests/builders/a-revision';
@@ -55,6 +55,23 @@ describe('deciding on a return', () => {
     fireEvent.click(screen.getByRole('button', { name: 'Sign and send' }));
     await waitFor(() => expect(acts(sent)).toEqual(['PUT /return', 'POST /return/sending']));
     expect(sent.find(({ path }) => path.endsWith('/sending'))?.headers.get('If-Match')).toBe('"8"');
+  });
+
+  it('keeps once where the typing rests while a slow server still keeps what is to be signed', async () => {
+    const { sent } = await open({
+      [`PUT ${base}/return`]: aReturnView({ version: 8 }),
+      [`POST ${base}/return/sending`]: aReturnView({ version: 9 }),
+    });
+    const answer = globalThis.fetch;
+    vi.stubGlobal('fetch', async (input: string, init?: RequestInit) => {
+      if (init?.method === 'PUT') await new Promise((resolve) => setTimeout(resolve, 1400));
+      return answer(input, init);
+    });
+    fireEvent.change(reason(), { target: { value: 'The mix is close.' } });
+    fireEvent.click(screen.getByRole('button', { name: 'Sign and send' }));
+    await waitFor(() => expect(acts(sent)).toContain('POST /return/sending'), { timeout: 4000 });
+    await new Promise((resolve) => setTimeout(resolve, 300));
+    expect(acts(sent)).toEqual(['PUT /return', 'POST /return/sending']);
   });
 
   it('does not send a decision against the recommendation without a reason, and says so at the field', async () => {

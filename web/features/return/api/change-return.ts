@@ -14,6 +14,8 @@ export function useChangeReturn(params: RevisionParams) {
     },
     // One after the other: each keeps the version that the one before it brought.
     scope: { id: JSON.stringify(options.queryKey) },
+    // A view that was asked for before this change would put the old version back.
+    onMutate: () => client.cancelQueries({ queryKey: options.queryKey }),
     onSuccess: (view) => client.setQueryData(options.queryKey, view),
   });
 }

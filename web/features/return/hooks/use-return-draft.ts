@@ -29,7 +29,7 @@ export function useReturnDraft(params: RevisionParams, view: ReturnView) {
     shouldFocusError: false,
   });
 
-  const keep = async (): Promise<number | null> => {
+  const keepNow = async (): Promise<number | null> => {
     const values = form.getValues();
     if (sameValues(values, kept.current)) return client.getQueryData(queryKey)?.version ?? view.version;
     const parsed = returnFieldsSchema.safeParse(values);
@@ -48,6 +48,12 @@ export function useReturnDraft(params: RevisionParams, view: ReturnView) {
     }
   };
 
+  // One after the other, so that what the first has kept is not kept again, behind the back of what is being signed.
+  const last = useRef<Promise<number | null>>(Promise.resolve(null));
+  const keep = (): Promise<number | null> => {
+    last.current = last.current.then(keepNow);
+    return last.current;
+  };
   const latestKeep = useRef(keep);
   latestKeep.current = keep;
   const canChange = view.abilities.change;
