@@ -1,8 +1,8 @@
 import { conditionsKey } from '../reading-log';
 import { acceptedConditions } from './accepted-conditions';
+import type { Assigned } from './assigned';
 import { gradationKind } from './gradation-kind';
 import type { FindQuantity } from './resolve-quantity';
-import type { Assigned } from './settle-candidates';
 
 const kinds = ['percent-passing', 'percent-retained', 'cumulative-percent-retained'];
 

@@ -4,7 +4,7 @@ import { placeOf } from '../reading-log';
 import { keyConditions } from './name-conditions';
 import { givesWay } from './name-key';
 import { keepScoped } from './scoped-conditions';
-import { isConditionKey, type TableColumn } from './table-columns';
+import { isConditionKey, type TableColumn } from './table-column';
 import { type TableContext, unitBeside } from './table-context';
 import { binderText } from './trials-by-binder';
 

@@ -3,7 +3,7 @@ import { sieveFromName } from '../../quantities/sieves';
 import type { Cell } from '../cell-grid';
 import type { ConditionName } from '../mapping';
 import { isMaterial } from './materials';
-import { isConditionKey, type TableColumn } from './table-columns';
+import { isConditionKey, type TableColumn } from './table-column';
 import type { TableContext } from './table-context';
 
 export function nameKeyOf({

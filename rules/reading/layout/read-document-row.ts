@@ -3,7 +3,7 @@ import type { Cell } from '../cell-grid';
 import { understandDate } from '../parse-date';
 import { plainText } from '../plain-text';
 import { placeOf } from '../reading-log';
-import type { TableRow } from './find-tables';
+import type { TableRow } from './table';
 import type { TableContext } from './table-context';
 
 type DateName = 'date' | 'validTo';

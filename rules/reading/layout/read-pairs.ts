@@ -6,14 +6,14 @@ import { placeOf } from '../reading-log';
 import { submittalFacts } from '../submittal-facts';
 import { understandAttribute } from '../understand-attribute';
 import { unreadReasons } from '../unread-reason';
-import type { TableRow } from './find-tables';
 import { bareCandidate } from './heading-candidates';
 import type { LabelMeaning } from './label-meaning';
 import { keyConditions } from './name-conditions';
 import { readDocumentPair } from './read-document-row';
 import { roleReasons, saysOutcome } from './read-value';
 import { readWritten } from './read-written';
-import { isConditionKey } from './table-columns';
+import type { TableRow } from './table';
+import { isConditionKey } from './table-column';
 import { mark, type TableContext } from './table-context';
 import { isRowLabel } from './table-rows';
 

@@ -2,9 +2,9 @@ import type { Cell } from '../cell-grid';
 import { plainText } from '../plain-text';
 import { placeOf } from '../reading-log';
 import { unreadReasons } from '../unread-reason';
-import type { TableRow } from './find-tables';
 import type { LabelMeaning } from './label-meaning';
 import { type Group, passOver, readValue, roleReasons, saysOutcome } from './read-value';
+import type { TableRow } from './table';
 import type { TableContext } from './table-context';
 import type { RowFacts } from './table-rows';
 

@@ -1,6 +1,5 @@
 import type { Cell } from '../cell-grid';
 import { placeOf } from '../reading-log';
-import type { Table, TableRow } from './find-tables';
 import { readHeadBinders, readTitleBinder } from './heading-candidates';
 import type { LabelMeaning } from './label-meaning';
 import { nameColumns } from './name-columns';
@@ -11,6 +10,7 @@ import type { Group } from './read-value';
 import { readWritten } from './read-written';
 import { rowLabels } from './row-labels';
 import type { SheetContext } from './sheet-context';
+import type { Table, TableRow } from './table';
 import { farConditions, mark, type TableContext, tableContext } from './table-context';
 import { RowKeys } from './table-rows';
 import { trialsByBinder } from './trials-by-binder';

@@ -8,7 +8,7 @@ import type { LabelMeaning } from './label-meaning';
 import { quantitiesOf } from './quantities-of';
 import { readAttributeCell } from './read-pairs';
 import { scopedConditions } from './scoped-conditions';
-import type { TableColumn } from './table-columns';
+import type { TableColumn } from './table-column';
 import type { TableContext } from './table-context';
 import type { RowFacts } from './table-rows';
 

@@ -1,6 +1,6 @@
 import { placeOf } from '../reading-log';
-import type { TableRow } from './find-tables';
 import type { LabelMeaning } from './label-meaning';
+import type { TableRow } from './table';
 import type { TableContext } from './table-context';
 
 export function rowLabels(row: TableRow, context: TableContext, outer: LabelledRow['outer']): LabelledRow {

@@ -2,9 +2,9 @@ import type { Conditions } from '../../record';
 import type { Cell } from '../cell-grid';
 import type { ConditionName } from '../mapping';
 import { placeOf } from '../reading-log';
-import type { TableRow } from './find-tables';
 import type { LabelMeaning } from './label-meaning';
 import { keyConditions } from './name-conditions';
+import type { TableRow } from './table';
 import { type TableContext, unitBeside } from './table-context';
 
 /** In a list of properties a condition belongs to the test that it stands with. */

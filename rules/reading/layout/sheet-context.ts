@@ -4,7 +4,7 @@ import type { ReadingContext } from '../reading-log';
 import type { SheetIndex } from '../sheet-index';
 import type { Domain } from '../words/context-words';
 import type { Candidate } from './candidate';
-import type { Surroundings } from './find-tables';
+import type { Surroundings } from './table';
 
 /** What is known while one sheet is read. */
 export interface SheetContext extends Surroundings {

@@ -1,7 +1,7 @@
 import type { Quantity } from '../../quantities/quantity';
 import { conditionsKey } from '../reading-log';
 import { isPercent } from '../understand-number';
-import type { Assigned, SettleOptions } from './settle-candidates';
+import type { Assigned, SettleOptions } from './assigned';
 
 export type Suspicion = { reason: string; alternatives: number[] } | 'fraction';
 

@@ -4,12 +4,13 @@ import type { ConditionName } from '../mapping';
 import { plainText } from '../plain-text';
 import { placeOf } from '../reading-log';
 import type { Domain } from '../words/context-words';
-import type { Table, TableRow } from './find-tables';
 import type { LabelMeaning } from './label-meaning';
 import { keyConditions } from './name-conditions';
 import { nameKeyOf } from './name-key';
 import type { SheetContext } from './sheet-context';
-import { isConditionKey, type TableColumn, tableColumns } from './table-columns';
+import type { Table, TableRow } from './table';
+import { isConditionKey, type TableColumn } from './table-column';
+import { tableColumns } from './table-columns';
 import { hasWeighings, weighingOf } from './weighings';
 
 /** Everything that speaks for a whole table. */

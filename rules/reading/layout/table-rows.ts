@@ -5,12 +5,12 @@ import { plainText } from '../plain-text';
 import { placeOf } from '../reading-log';
 import { unreadReasons } from '../unread-reason';
 import type { Role } from '../words/key-words';
-import type { TableRow } from './find-tables';
 import { isHeading, type LabelMeaning } from './label-meaning';
 import { isMaterial } from './materials';
 import { keyConditions } from './name-conditions';
 import type { SheetContext } from './sheet-context';
-import type { TableColumn } from './table-columns';
+import type { TableRow } from './table';
+import type { TableColumn } from './table-column';
 
 /** What the keys and labels of one row say of the values in it. */
 export interface RowFacts {

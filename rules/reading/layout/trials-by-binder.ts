@@ -2,7 +2,7 @@ import type { Conditions } from '../../record';
 import type { Cell } from '../cell-grid';
 import { plainText } from '../plain-text';
 import type { Role } from '../words/key-words';
-import type { TableRow } from './find-tables';
+import type { TableRow } from './table';
 import type { TableContext } from './table-context';
 
 /**

@@ -1,5 +1,5 @@
 import { plainText } from '../plain-text';
-import type { Surroundings, Table } from './find-tables';
+import type { Surroundings, Table } from './table';
 
 const shortNames: [RegExp, string][] = [
   [
