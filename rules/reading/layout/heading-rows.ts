@@ -104,6 +104,10 @@ export function belongsToHeading(
       answers.every((meaning) => !isHeading(meaning) && /\d/.test(meaning.text));
     if (isAnswered) return false;
     if (meanings.some((meaning) => isHeading(meaning))) return true;
+    // Names over a wider row of headings, with nothing in the corner.
+    const isOver =
+      (row.cells[0]?.column ?? 0) > table.firstColumn && (next?.cells.length ?? 0) > row.cells.length;
+    if (isOver && table.rows.length === 0 && table.headings.length === 0) return true;
     // Names of stockpiles or specimens over columns of values.
     return next?.cells.some((cell) => kinds.of(cell) === 'value' || kinds.of(cell) === 'unit') ?? false;
   }

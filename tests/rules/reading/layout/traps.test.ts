@@ -293,6 +293,39 @@ describe('whose a result is', () => {
   });
 });
 
+describe('columns that only their group tells apart', () => {
+  it('belong to the stockpile that the group names', () => {
+    const { said } = read(
+      ' | Stone {2} | | Sand {2}\nSieve | % Ret. | % Pass. | % Ret. | % Pass.\n19 mm | 0 | 100 | 0 | 100\n4.75 mm | 88 | 12 | 2 | 98',
+    );
+    expect(said).toContain('percent-passing sieve=4.75 stockpile=Stone 12');
+    expect(said).toContain('percent-retained sieve=4.75 stockpile=Sand 2');
+  });
+  it('are doubts throughout where nothing tells them apart, also where they agree', () => {
+    const { said, doubted } = read('Sieve (mm) | % Passing | % Passing\n19 | 100 | 100\n4.75 | 12 | 98');
+    expect([said, doubted]).toEqual([[], ['B2', 'C2', 'B3', 'C3']]);
+  });
+  it('are specimens by the figure behind their name, at the gyrations beside them', () => {
+    expect(
+      read('Gyrations | Height 1 (mm) | Height 2 (mm)\n8 | 130.1 | 129.8\n100 | 115.2 | 114.9').said,
+    ).toEqual([
+      'specimen-height gyrations=8 specimen=1 130.1',
+      'specimen-height gyrations=8 specimen=2 129.8',
+      'specimen-height gyrations=100 specimen=1 115.2',
+      'specimen-height gyrations=100 specimen=2 114.9',
+    ]);
+  });
+});
+
+describe('a machine’s log', () => {
+  it('of more values of one thing than anybody states is raw data and no doubt', () => {
+    const rows = Array.from({ length: 40 }, (_, at) => `${at} | ${10 + at / 10}`).join('\n');
+    const { said, doubts, unused } = read(`Index | Load (kN)\n${rows}`);
+    expect([said, doubts]).toEqual([[], []]);
+    expect(unused.B2).toBe(unreadReasons.rawData);
+  });
+});
+
 describe('weighings', () => {
   it('under short names stand together as dry, surface-dry and in water', () => {
     expect(read('Specimen | Dry | SSD | Water\n1 | 4721.1 | 4730.2 | 2740.5').said).toEqual([
