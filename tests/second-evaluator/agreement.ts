@@ -104,15 +104,15 @@ function isSame(engine: Verdict, own: Verdict): boolean {
   if (!own.figuresAreLaidDown) return true;
   return (
     isNear(engine.rounded, own.rounded) &&
-    isNear(engine.margin, own.margin) &&
+    isNear(engine.margin, own.margin, own.rounded ?? 0) &&
     engine.borderline === own.borderline
   );
 }
 
-/** Equal to nine digits: what an unrounded quotient is written with is no part of the contract. */
-function isNear(left: number | null, right: number | null): boolean {
+/** Equal to nine digits of the judged value: what an unrounded quotient is written with is no part of the contract. */
+function isNear(left: number | null, right: number | null, judged = 0): boolean {
   if (left === null || right === null) return left === right;
-  return Math.abs(left - right) <= 1e-9 * Math.max(1, Math.abs(left), Math.abs(right));
+  return Math.abs(left - right) <= 1e-9 * Math.max(1, Math.abs(judged), Math.abs(left), Math.abs(right));
 }
 
 function words({ outcome, rounded, margin, borderline }: Verdict): string {

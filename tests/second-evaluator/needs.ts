@@ -1,6 +1,6 @@
 import { mixRecordSchema } from '#rules/record';
 import { layerSchema, type RuleInput, ruleSetSchema } from '#rules/rule-sets/schema';
-import type { Condition } from '#rules/rule-sets/when';
+import { type Condition, conditionSchema } from '#rules/rule-sets/when';
 import type { GeneratedCase } from './generated/parts';
 import { namesIn } from './own/formula';
 import { symbolOf } from './own/formula-rule';
@@ -64,19 +64,21 @@ function referred(drawn: GeneratedCase, { limit, measure }: RuleInput): Need[] {
 /** Attributes without which it is not known whether the rule applies. */
 function decisive(drawn: GeneratedCase, { when }: RuleInput): string[] {
   if (when === undefined) return [];
+  const condition = conditionSchema.parse(when);
   const record = mixRecordSchema.parse(drawn.record);
   const base = ruleSetSchema.parse(drawn.base);
   const layers = drawn.layers.map((layer) => layerSchema.parse(layer));
-  return factsIn(when as Condition).filter((name) => {
+  return factsIn(condition).filter((name) => {
     const { [name]: _stated, ...attributes } = record.attributes;
     const { [name]: _fact, ...facts } = drawn.context.facts;
     const world = worldOf({ ...record, attributes }, base, layers, { ...drawn.context, facts });
-    return truthOf(world, when as Condition) === 'unknown';
+    return truthOf(world, condition) === 'unknown';
   });
 }
 
 function factsIn(condition: Condition): string[] {
   if ('not' in condition) return factsIn(condition.not);
   if ('all' in condition) return condition.all.flatMap(factsIn);
-  return 'any' in condition ? condition.any.flatMap(factsIn) : [condition.fact];
+  if ('any' in condition) return condition.any.flatMap(factsIn);
+  return condition.fact === 'quantity' ? [] : [condition.fact];
 }
