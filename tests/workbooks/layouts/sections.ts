@@ -50,8 +50,6 @@ export const volumetric: [
   ['gse', 'effective-specific-gravity-aggregate', 'gse', '1'],
 ];
 
-export const unitText = (unit: string) => (unit === '1' ? '' : unit);
-
 /** Cover: label in A, value in B, unit in the label. */
 export const coverBeside: Section = (book, mix, { words, us }) => {
   const sheet = book.sheet('Cover');
