@@ -96,7 +96,7 @@ export function fitOf(
   if (wanted.stockpile === undefined) {
     if (stated.stockpile !== undefined) return 'no';
   } else if (stated.stockpile === undefined) fit = 'perhaps';
-  else if (stated.stockpile !== wanted.stockpile) return 'no';
+  else if (stated.stockpile !== wanted.stockpile && wanted.stockpile !== 'each') return 'no';
   let isUnresolved = false;
   for (const name of CONDITIONS) {
     const value = wanted[name];
