@@ -24,10 +24,8 @@ export function decimalDifference(a: number, b: number): number {
 export function decimalMean(values: readonly number[]): number {
   const scale = commonScale(values);
   if (scale === null) {
-    return values
-      .reduce((total, value) => total.plus(value), new Exact(0))
-      .div(values.length)
-      .toNumber();
+    const sum = values.reduce((total, value) => total.plus(value), new Exact(0));
+    return sum.div(values.length).toNumber() + 0;
   }
   // One division of two exact integers: the nearest number to the true mean.
   return values.reduce((total, value) => total + Math.round(value * scale), 0) / (scale * values.length) + 0;

@@ -21,6 +21,11 @@ describe('decimal arithmetic', () => {
     expect(decimalMean([0.1, 0.2, 0.3])).toBe(0.2);
   });
 
+  it('has no negative zero, even where the mean is too small for a number', () => {
+    expect(decimalMean([0, 5e-324, -1e-323])).toBe(0);
+    expect(decimalDifference(-0, 0)).toBe(0);
+  });
+
   it('agrees with a decimal library on every difference and mean', () => {
     fc.assert(
       fc.property(cell, cell, cell, (a, b, c) => {
