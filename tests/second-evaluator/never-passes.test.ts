@@ -1,7 +1,7 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { MixRecordInput } from '#rules/record';
 import type { RuleInput } from '#rules/rule-sets/schema';
+import fc from '#tests/builders/seeded-fast-check';
 import { engineFindings } from './agreement';
 import { drawCase } from './generated/case';
 import { drawFrom } from './generated/draw';

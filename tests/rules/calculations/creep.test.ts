@@ -1,4 +1,3 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { creepBandAt } from '#rules/calculations/creep-band';
 import {
@@ -31,6 +30,7 @@ import {
 } from '#rules/calculations/creep-relaxation';
 import { strainUnderSteps } from '#rules/calculations/creep-superposition';
 import { TEST_TIMES } from '#tests/builders/a-creep-test';
+import fc from '#tests/builders/seeded-fast-check';
 import { numberOf } from '#tests/reference/reference-record';
 
 const solid = { D0: 0.045, Dinf: 1.2, tau: 900, n: 0.55 };

@@ -1,9 +1,9 @@
-import fc from 'fast-check';
 import { expect, it } from 'vitest';
 import { checkConsistency } from '#rules/consistency/check-consistency';
 import { analyse } from '#rules/engine/analyse';
 import { allQuantities } from '#rules/quantities/registry';
 import { type Conditions, mixRecordSchema } from '#rules/record';
+import fc from '#tests/builders/seeded-fast-check';
 import { reading } from './analysis-record';
 
 const maybe = <T>(arbitrary: fc.Arbitrary<T>) => fc.option(arbitrary, { nil: undefined });

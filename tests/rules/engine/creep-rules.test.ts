@@ -1,4 +1,3 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { fitCreep } from '#rules/calculations/creep-fit';
 import { evidenceSchema, type Finding, findingSchema } from '#rules/engine/finding';
@@ -6,6 +5,7 @@ import type { MixRecordInput, Reading } from '#rules/record';
 import type { RuleInput } from '#rules/rule-sets/schema';
 import { aCreepTest, curveAtMinusTen, TEST_TIMES } from '#tests/builders/a-creep-test';
 import { aReading } from '#tests/builders/a-reading';
+import fc from '#tests/builders/seeded-fast-check';
 import { checkWith, findingOf } from './check-with';
 
 type CreepMeasure = Extract<RuleInput['measure'], { kind: 'creep-compliance' }>;

@@ -1,8 +1,8 @@
-import fc from 'fast-check';
 import { Engine } from 'json-rules-engine';
 import { describe, expect, it } from 'vitest';
 import { addOperators, decide, type Fact, type LeafComparison, type Truth } from '#rules/engine/decide';
 import type { Condition } from '#rules/rule-sets/when';
+import fc from '#tests/builders/seeded-fast-check';
 
 const facts: Record<string, Fact> = {
   yes: { kind: 'value', value: true },

@@ -1,4 +1,3 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { evaluate } from '#rules/engine/evaluate';
 import { explainFindings } from '#rules/engine/explain';
@@ -12,6 +11,7 @@ import edition2026 from '#rules/sets/cvra-412-2026.json';
 import { shippedRuleSets } from '#rules/sets/shipped-rule-sets';
 import { aContext, aRecord, attributes } from '#tests/builders/a-record';
 import { aLayer, anEdition, aRule } from '#tests/builders/a-rule-set';
+import fc from '#tests/builders/seeded-fast-check';
 import { aggregateReadings, reading, trialReadings } from './analysis-record';
 
 interface Asked {

@@ -1,4 +1,3 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Analysis } from '#rules/engine/analysis';
 import { addMonths } from '#rules/engine/calendar';
@@ -15,6 +14,7 @@ import { aFinding } from '#tests/builders/a-finding';
 import { aReading, replicates } from '#tests/builders/a-reading';
 import { aContext, aRecord, attributes } from '#tests/builders/a-record';
 import { anEdition, aRule } from '#tests/builders/a-rule-set';
+import fc from '#tests/builders/seeded-fast-check';
 import { checkWith } from './check-with';
 
 const nothingComputed: Analysis = {

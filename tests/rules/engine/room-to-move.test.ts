@@ -1,4 +1,3 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { propertyAt } from '#rules/calculations/design-point';
 import type { RoomToMove } from '#rules/engine/room';
@@ -8,6 +7,7 @@ import type { Reading } from '#rules/record';
 import type { RuleInput, RuleSetInput } from '#rules/rule-sets/schema';
 import { attributes } from '#tests/builders/a-record';
 import { aRule } from '#tests/builders/a-rule-set';
+import fc from '#tests/builders/seeded-fast-check';
 import { reading } from './analysis-record';
 import { checkWith } from './check-with';
 

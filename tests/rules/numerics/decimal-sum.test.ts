@@ -1,8 +1,8 @@
 import Decimal from 'decimal.js';
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { decimalDifference, decimalMean } from '#rules/numerics/decimal-sum';
 import { formatDecimals, roundTo } from '#rules/numerics/round';
+import fc from '#tests/builders/seeded-fast-check';
 
 const Exact = Decimal.clone({ precision: 60 });
 /** What stands in cells: few decimals, or a computed number with all its digits. */

@@ -1,6 +1,6 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { decimalsOf, formatDecimals, type RoundingMethod, roundTo } from '#rules/numerics/round';
+import fc from '#tests/builders/seeded-fast-check';
 
 const methods: RoundingMethod[] = ['rounding', 'half-up', 'truncate', 'absolute'];
 

@@ -1,8 +1,8 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { mean, trimmedMean } from '#rules/numerics/mean';
 import { percentOneSided, percentWithinLimits } from '#rules/numerics/percent-within-limits';
 import { coefficientOfVariation, range, sampleStandardDeviation } from '#rules/numerics/spread';
+import fc from '#tests/builders/seeded-fast-check';
 
 // Descriptive figures by hand for these six (n − 1 divisor); the same set as the reference record QA-20.
 const six = [4.2, 4.6, 3.9, 5.1, 4.4, 4];

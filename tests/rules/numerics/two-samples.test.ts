@@ -1,8 +1,8 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { comparePairs, compareSamples } from '#rules/numerics/compare-samples';
 import { differenceLimit, rangeMultiplier } from '#rules/numerics/difference-limit';
 import { criticalOutlier, outlierTest } from '#rules/numerics/outlier-test';
+import fc from '#tests/builders/seeded-fast-check';
 
 const first = [5.42, 5.51, 5.37, 5.6, 5.48];
 const second = [5.36, 5.47, 5.35, 5.52, 5.45];

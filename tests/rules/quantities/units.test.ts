@@ -1,6 +1,6 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { convert, normaliseUnit } from '#rules/quantities/units';
+import fc from '#tests/builders/seeded-fast-check';
 
 describe('names of units', () => {
   it.each([

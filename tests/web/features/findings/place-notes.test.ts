@@ -1,5 +1,5 @@
-import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import fc from '#tests/builders/seeded-fast-check';
 import { placeNotes } from '../../../../web/features/findings/lib/place-notes';
 
 describe('notes in the margin', () => {
