@@ -25,7 +25,8 @@ const instance = (port: number, { demo }: { demo: boolean }) => ({
 export default defineConfig({
   testDir: 'e2e',
   outputDir: '../test-results/browser',
-  workers: 1,
+  // Two people at work at once, as on the real thing; each journey keeps to its own mix.
+  workers: 2,
   timeout: 120_000,
   expect: { timeout: 15_000 },
   forbidOnly: Boolean(process.env.CI),
