@@ -4,8 +4,11 @@ import { conditionsKey, type Place, type ReadingLog, type TakenReading } from '.
 import { doubtOf } from './settled';
 import { unreadReasons } from './unread-reason';
 
-/** One reading of one quantity under the same conditions: equal ones are one, unequal ones are a doubt. */
-export function joinReadings(log: ReadingLog): Reading[] {
+/**
+ * One reading of one quantity under the same conditions: equal ones are one, unequal ones are a doubt. Only where the
+ * meaning of a place was found out, not told by a mapping, may a long series be taken for what a machine logged.
+ */
+export function joinReadings(log: ReadingLog, { mayLog = false } = {}): Reading[] {
   const groups = new Map<string, TakenReading[]>();
   for (const taken of log.readings) {
     const key = `${taken.reading.quantity}|${conditionsKey(taken.reading.at)}`;
@@ -14,8 +17,8 @@ export function joinReadings(log: ReadingLog): Reading[] {
     else groups.set(key, [taken]);
   }
   return [...groups.values()].flatMap((group) => {
-    const distinct = distinctOf(group);
-    if (distinct.length > mostAlternatives) return passOverSeries(log, group);
+    const distinct = distinctOf(group, mayLog ? mostAlternatives + 1 : Number.POSITIVE_INFINITY);
+    if (mayLog && distinct.length > mostAlternatives) return passOverSeries(log, group);
     const [only] = distinct;
     if (distinct.length === 1 && only) {
       for (const { place, taken } of group) log.use(place, 'read', taken);
@@ -32,10 +35,10 @@ function passOverSeries(log: ReadingLog, group: TakenReading[]): Reading[] {
 }
 
 /** Values that differ beyond their displayed digits; of two that agree the finer one stands. */
-function distinctOf(group: TakenReading[]): TakenReading[] {
+function distinctOf(group: TakenReading[], most: number): TakenReading[] {
   const distinct: TakenReading[] = [];
   for (const taken of group) {
-    if (distinct.length > mostAlternatives) break;
+    if (distinct.length >= most) break;
     const at = distinct.findIndex((known) => agree(known, taken));
     const known = distinct[at];
     if (!known) distinct.push(taken);
@@ -72,7 +75,7 @@ function settleConflict(log: ReadingLog, group: TakenReading[], distinct: TakenR
   const first = distinct.find((taken) => taken.place !== last.place) as TakenReading;
   const { quantity, at } = last.reading;
   const reason = `says ${last.place.text} where ${whereOf(first.place, last.place)} says ${first.place.text} for the same thing`;
-  const alternatives = distinct.slice(0, mostAlternatives).map((taken) => ({
+  const alternatives = distinct.map((taken) => ({
     answer: `${taken.reading.value} ${taken.reading.unit}`,
     label: `${taken.place.text}, as in ${whereOf(taken.place, last.place)}`,
     value: taken,

@@ -75,7 +75,7 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
     decimalOf: (sheet) => decimals.get(sheet) ?? '.',
   });
   dropMeans(log);
-  const readings = joinReadings(log);
+  const readings = joinReadings(log, { mayLog: true });
   const attributes = joinAttributes(log);
   for (const index of indexes) passOverRest(index, reading);
   return {
