@@ -12,8 +12,6 @@ export function useChangeReturn(params: RevisionParams) {
       const { version } = await client.ensureQueryData(options);
       return call(changeReturn, { params, body: fields, version });
     },
-    // One after the other: each keeps the version that the one before it brought.
-    scope: { id: JSON.stringify(options.queryKey) },
     // A view that was asked for before this change would put the old version back.
     onMutate: () => client.cancelQueries({ queryKey: options.queryKey }),
     onSuccess: (view) => client.setQueryData(options.queryKey, view),

@@ -51,7 +51,7 @@ export function useReturnDraft(params: RevisionParams, view: ReturnView) {
   // One after the other, so that what the first has kept is not kept again, behind the back of what is being signed.
   const last = useRef<Promise<number | null>>(Promise.resolve(null));
   const keep = (): Promise<number | null> => {
-    last.current = last.current.then(keepNow);
+    last.current = last.current.then(keepNow, keepNow);
     return last.current;
   };
   const latestKeep = useRef(keep);
