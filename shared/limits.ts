@@ -13,5 +13,6 @@ export const limits = {
   searchCharacters: 80,
   workbookBytes: 25 * 1024 * 1024,
   documentBytes: 15 * 1024 * 1024,
+  changesAtOnce: 500,
   pageRows: 100,
 } as const;

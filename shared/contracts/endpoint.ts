@@ -22,6 +22,7 @@ export interface Endpoint<
   sends?:
     | 'application/pdf'
     | 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet'
+    | 'application/json'
     | 'text/plain'
     | '*/*';
   status?: 200 | 201 | 202 | 204;

@@ -84,6 +84,11 @@ export const problemTypes = {
     fix: 'Send a workbook saved as .xlsx, or a .csv or .tsv.',
   },
   'rule-set-refused': { status: 422, title: 'The rule set cannot be used', fix: 'Correct the named places.' },
+  'draft-conflict': {
+    status: 409,
+    title: 'Somebody else changed the same part of the draft',
+    fix: 'Look at both versions and keep one of them.',
+  },
   'not-immutable': {
     status: 409,
     title: 'A published edition does not change',
@@ -118,7 +123,7 @@ export const problemSchema = z.strictObject({
   instance: z.string().optional(),
   errors: z.array(problemErrorSchema).optional(),
   requestId: z.string(),
-  /** With `version-stale`: the present state. */
+  /** With `version-stale` and `draft-conflict`: the present state. */
   present: z.unknown().optional(),
 });
 

@@ -1,6 +1,5 @@
 import { boolean, date, index, int, mysqlTable, text, uniqueIndex, varchar } from 'drizzle-orm/mysql-core';
 import { z } from 'zod';
-import { mixRecordSchema } from '#rules/record';
 import { limits } from '#shared/limits';
 import { choice, id, instant, json, reference, sha256, version } from '../columns';
 import { organisations, people } from './people';
@@ -24,7 +23,7 @@ export const ruleSets = mysqlTable(
   ],
 );
 
-/** An edition being written. Publishing copies it into `editions`. */
+/** An edition being written, its cases with it. Publishing copies it into `editions`. */
 export const editionDrafts = mysqlTable(
   'edition_drafts',
   {
@@ -36,6 +35,11 @@ export const editionDrafts = mysqlTable(
     document: json('document', ruleSetDocumentSchema).notNull(),
     /** The published edition that it started from. */
     basedOnId: id('based_on_id'),
+    /** Made from a shipped starting point, or from an edition that is one still. */
+    startingPoint: boolean('starting_point').notNull().default(false),
+    /** Who asked for the review; null while it is being written. */
+    sentById: id('sent_by_id'),
+    sentAt: instant('sent_at'),
     createdById: id('created_by_id').notNull(),
     createdAt: instant('created_at').notNull(),
     updatedAt: instant('updated_at').notNull(),
@@ -48,6 +52,7 @@ export const editionDrafts = mysqlTable(
     reference('edition_drafts_rule_set_fk', table.ruleSetId, ruleSets.id),
     reference('edition_drafts_based_on_fk', table.basedOnId, editions.id),
     reference('edition_drafts_created_by_fk', table.createdById, people.id),
+    reference('edition_drafts_sent_by_fk', table.sentById, people.id),
   ],
 );
 
@@ -114,28 +119,6 @@ export const resolvedEditions = mysqlTable('resolved_editions', {
   document: json('document', ruleSetDocumentSchema).notNull(),
   createdAt: instant('created_at').notNull(),
 });
-
-/** The proof of a draft; publishing writes them into the edition's document. */
-export const cases = mysqlTable(
-  'cases',
-  {
-    id: id('id').primaryKey(),
-    agencyId: id('agency_id').notNull(),
-    draftId: id('draft_id').notNull(),
-    /** The case's own id within the document. */
-    key: varchar('case_key', { length: 120 }).notNull(),
-    title: varchar('title', { length: 200 }).notNull(),
-    record: json('record', mixRecordSchema).notNull(),
-    context: json('context', z.record(z.string(), z.unknown())).notNull(),
-    expected: json('expected', z.array(z.record(z.string(), z.unknown()))).notNull(),
-    version: version(),
-  },
-  (table) => [
-    uniqueIndex('cases_key').on(table.draftId, table.key),
-    reference('cases_agency_fk', table.agencyId, organisations.id),
-    reference('cases_draft_fk', table.draftId, editionDrafts.id).onDelete('cascade'),
-  ],
-);
 
 export const draftComments = mysqlTable(
   'draft_comments',

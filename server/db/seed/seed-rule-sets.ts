@@ -5,7 +5,7 @@ import {
   shippedSets,
 } from '../../commands/rule-sets/publish-starting-points';
 import type { Database } from '../client';
-import { cases, editionDrafts } from '../schema/rule-sets';
+import { editionDrafts } from '../schema/rule-sets';
 import { demoId, demoMadeAt } from './demo-id';
 import { demoOrganisations, demoPerson } from './demo-people';
 
@@ -37,25 +37,12 @@ async function keepDraft(tx: Database, { document, parsed }: Shipped): Promise<v
     edition: parsed.edition,
     state: 'draft',
     document,
+    startingPoint: true,
     basedOnId: demoEditionId(parsed.id, '2026'),
     createdById: demoPerson('Tamsin Brook').id,
     createdAt: demoMadeAt,
     updatedAt: demoMadeAt,
   });
-  const proofs = parsed.cases ?? [];
-  if (proofs.length === 0) return;
-  await tx.insert(cases).values(
-    proofs.map((proof) => ({
-      id: demoId(`case/${draftId}/${proof.id}`),
-      agencyId,
-      draftId,
-      key: proof.id,
-      title: proof.title,
-      record: proof.record,
-      context: { ...proof.context },
-      expected: proof.expected.map((finding) => ({ ...finding })),
-    })),
-  );
 }
 
 /** Six weeks before the first day, at noon: notice for those who build by it. */
