@@ -57,6 +57,7 @@ export function readWorkbook({ grid, mapping, edition, answers }: ReadWorkbookIn
     uses: log.uses(),
     answered: log.answered,
     stale: answers.filter((answer) => !log.answered.includes(answer)),
+    departures: [],
   };
 }
 

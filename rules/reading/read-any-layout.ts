@@ -85,6 +85,7 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
     uses: log.uses(),
     answered: log.answered,
     stale: answers.filter((answer) => !log.answered.includes(answer)),
+    departures: [],
   };
 }
 

@@ -26,6 +26,18 @@ export const answerSchema = z.strictObject({
   answer: z.string(),
 });
 
+/** Where a workbook is not as the layout that its mapping was learned from. */
+export const departureSchema = z.strictObject({
+  /** Id of the mapping's rule. */
+  rule: z.string(),
+  kind: z.enum(['gone', 'moved', 'unit']),
+  /** Where it shows; null where a heading is nowhere to be found. */
+  sheet: z.string().nullable(),
+  cell: z.string().nullable(),
+  /** "The heading “Bulk SG” is nowhere in this workbook." */
+  text: z.string(),
+});
+
 export const readingResultSchema = z.strictObject({
   record: mixRecordSchema,
   doubts: z.array(doubtSchema),
@@ -34,9 +46,11 @@ export const readingResultSchema = z.strictObject({
   /** Answers that still hold, and those whose cell has changed. */
   answered: z.array(answerSchema),
   stale: z.array(answerSchema),
+  departures: z.array(departureSchema).default([]),
 });
 
 export type Unread = z.infer<typeof unreadSchema>;
 export type CellUse = z.infer<typeof cellUseSchema>;
 export type Answer = z.infer<typeof answerSchema>;
+export type Departure = z.infer<typeof departureSchema>;
 export type ReadingResult = z.infer<typeof readingResultSchema>;

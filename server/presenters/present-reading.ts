@@ -55,6 +55,10 @@ export function presentReading(parts: ReadingParts): ReadingView {
     understood: understoodGroups(record.readings),
     asked: askedAttributes({ edition, workbook: reading.record.attributes, facts, typed }),
     documents: documents.map((row) => presentDocument(row, parts.documentTypes)),
+    mapping: null,
+    learned: null,
+    corrections: [],
+    typed: [],
     abilities: { answer: parts.mayAnswer, attach: parts.mayAnswer },
   };
 }

@@ -21,6 +21,7 @@ export interface Endpoint<
   /** A response that is not JSON. */
   sends?:
     | 'application/pdf'
+    | 'application/json'
     | 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet'
     | 'application/json'
     | 'text/plain'

@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { sheetGridSchema } from '#rules/reading/cell-grid';
-import { answerSchema, cellUseSchema, unreadSchema } from '#rules/reading/reading-result';
-import { documentRecordSchema, doubtSchema } from '#rules/record';
+import { correctionSchema } from '#rules/reading/correction';
+import { answerSchema, cellUseSchema, departureSchema, unreadSchema } from '#rules/reading/reading-result';
+import { documentRecordSchema, doubtSchema, readingSchema } from '#rules/record';
 import { limits } from '../limits';
 import { dateSchema, idSchema, instantSchema } from './common';
 import { endpoint } from './endpoint';
@@ -29,6 +30,8 @@ export const documentRowSchema = documentRecordSchema.extend({
   added: z.boolean(),
   version: z.number().int(),
 });
+
+const actFields = { by: z.string(), at: instantSchema };
 
 export const readingViewSchema = z.strictObject({
   version: z.number().int(),
@@ -60,6 +63,33 @@ export const readingViewSchema = z.strictObject({
   ),
   asked: z.array(askedAttributeSchema),
   documents: z.array(documentRowSchema),
+  /** The laboratory's mapping that the workbook was read with; null where it was read by its headings alone. */
+  mapping: z
+    .strictObject({
+      id: idSchema,
+      name: z.string(),
+      number: z.number().int(),
+      /** Where the workbook departs from the layout that was learned. */
+      departures: z.array(departureSchema),
+    })
+    .nullable(),
+  /** What the newest version of the laboratory's mapping has learned from this revision; null where nothing. */
+  learned: z
+    .strictObject({ id: idSchema, name: z.string(), number: z.number().int(), rules: z.number().int() })
+    .nullable(),
+  /** Corrections that hold, oldest first; the last one is what undo takes back. */
+  corrections: z.array(correctionSchema.extend({ id: idSchema, ...actFields })),
+  /** Readings entered by hand. */
+  typed: z.array(
+    z.strictObject({
+      id: idSchema,
+      reading: readingSchema,
+      label: z.string(),
+      /** Why it does not count: the workbook states the same thing by now. Null while it counts. */
+      overruled: z.string().nullable(),
+      ...actFields,
+    }),
+  ),
   abilities: z.strictObject({ answer: z.boolean(), attach: z.boolean() }),
 });
 

@@ -43,6 +43,10 @@ export function aReadingView(overrides: Partial<ReadingView> = {}): ReadingView 
     understood: [{ label: 'binder content', count: 5, sheet: 'Submittal', cell: 'B14' }],
     asked: [],
     documents: [],
+    mapping: null,
+    learned: null,
+    corrections: [],
+    typed: [],
     abilities: { answer: true, attach: true },
     ...overrides,
   } satisfies ReadingView);
