@@ -66,6 +66,14 @@ const patterns: [RegExp, Take][] = [
     },
   ],
   [
+    /(?:@|\bat\b|\bafter\b|\bbei\b|\bnach\b|\bà\b|\baprès\b|\ba\b)\s*(\d{1,3}[,. ]?000)\s*(?=$|\)|,|\()/i,
+    (match, found) => {
+      if (!/\brut|hwt|hamburg|spur|orni[eè]r|rodera|ahuella|huella/i.test(found.rest)) return false;
+      found.at.passes = Number((match[1] ?? '').replace(/[,. ]/g, ''));
+      return true;
+    },
+  ],
+  [
     new RegExp(String.raw`(${number})\s*hz\b`, 'i'),
     (match, found) => setNumber(found, 'frequency', match[1] ?? '', 'Hz', 'Hz'),
   ],

@@ -9,7 +9,7 @@ import {
   type Sense,
   type Vocabulary,
 } from '../words/phrase-index';
-import { tokensOf } from '../words/tokens';
+import { markedTokensOf, tokensOf, withoutMark } from '../words/tokens';
 import { sieveInLabel, statedConditions } from './label-conditions';
 import { labelUnit } from './label-unit';
 
@@ -79,20 +79,20 @@ export class LabelReader {
 }
 
 /** Words that turn a name into something else than the result itself. */
-const changing = new Set(
+const changing = wordsOf(
   `dust virgin loss tolerance difference change ratio correction factor uncorrected rap ras added additional recovered extracted increase decrease slope intercept residual lost error deviation estimated assumed guess previous old
-  cost price vol volume equation coefficient r2 rsq regression confidence uncertainty trial1 supplier source type name brand origin lot tank sample identification number id grade class classification level category limit limits`.split(
-    /\s+/,
-  ),
+  cost price vol volume equation coefficient r2 rsq regression confidence uncertainty trial1 supplier source type name brand origin lot tank sample identification number id grade class classification level category limit limits`,
 );
 
-const weakWords = new Set(
+const weakWords = wordsOf(
   `binder asphalt bitumen bitume liant ligante betun asfalto bindemittel voids bulk apparent density strain strength flow load height thickness absorption rut lime abrasion percentage share part formule dosage dosierung anteil slope compliance
   flash coating retained passing gradation proportion durabilidad soundness strength viscosity flujo compactacion compactacion porosite densidad hohlraum vides vacios huecos las se fm fi pi sa la ac pen ri rice impression los angeles stability penetration stripping shingles deleterious refus
-  ruckstand durchgang passant retenido pasa permeability saturation saturacion diameter dia espesor altura hauteur hohe dicke durchmesser height gyrations girations drehungen umdrehungen component dust ef e* cantabro dct rap ras gtr`.split(
-    /\s+/,
-  ),
+  ruckstand durchgang passant retenido pasa permeability saturation saturacion diameter dia espesor altura hauteur hohe dicke durchmesser height gyrations girations drehungen umdrehungen component dust ef e* cantabro dct rap ras gtr`,
 );
+
+function wordsOf(list: string): ReadonlySet<string> {
+  return new Set(tokensOf(list));
+}
 
 /** "VMA (min. 14.0), %", "VFA (65-75)": the limit in brackets is no part of the name. */
 const bracketedLimit =
@@ -100,8 +100,10 @@ const bracketedLimit =
 
 function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   const domains = domainsIn(text);
-  const stated = statedConditions(text.replace(bracketedLimit, ' '));
+  const stated = statedConditions(withoutCycles(text.replace(bracketedLimit, ' ')));
+  const isRatio = /\/\s*P\s?be?\b|dust|ratio|proportion\b.*\/|polvo/i.test(text);
   const namesSieve =
+    !isRatio &&
     /pass|pasa|p[ _-]?0|p[ _-]?\d{2,3}\b|retain|reten|refus|durchgang|rückstand|minus|tamis|finer|^\s*-\s*(?:no|#)?\s*200/i.test(
       text,
     );
@@ -126,11 +128,12 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
       ),
   };
   if (sieve) meaning.at = { ...meaning.at, sieve: sieve.sieve };
-  const tokens = tokensOf(taken.rest);
+  const marked = markedTokensOf(taken.rest);
+  const tokens = marked.map(withoutMark);
   meaning.words = tokens.length;
   const matches: PhraseMatch[] = [];
   for (let at = 0; at < tokens.length; ) {
-    const match = longestPhrase(vocabulary, tokens, at);
+    const match = longestPhrase(vocabulary, marked, at);
     if (match) {
       matches.push(match);
       at = match.to;
@@ -145,8 +148,12 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   if (meaning.quantities.length === 0 && meaning.unit === '%' && !tokens.includes('%')) {
     // "Blend, %" and "Blend %" are one name.
     const whole = longestPhrase(vocabulary, [...tokens, '%'], 0);
-    if (whole?.to === tokens.length + 1) addSenses(meaning, [whole], [...tokens, '%']);
+    if (whole?.to === tokens.length + 1) {
+      meaning.unknown = [];
+      addSenses(meaning, [whole], [...tokens, '%']);
+    }
   }
+  addSymbol(meaning, tokens);
   const numbered = numberedSpecimen(meaning);
   if (numbered !== null) {
     meaning.at = { ...meaning.at, specimen: numbered };
@@ -162,6 +169,53 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
     meaning.quantities = ['percent-passing'];
   }
   return meaning;
+}
+
+/** "Soundness (5 cycles), %": how often the test was run is no unit of its result. */
+function withoutCycles(text: string): string {
+  if (!/soundness|so4|sulf|sulph/i.test(text)) return text;
+  return text.replace(/[,(]?\s*\(?\b\d{1,2}\s*cyc(?:les?|\.)?\)?/i, ' ');
+}
+
+/** Symbols that stand alone before their unit: "h (mm)", "P [kN]", "T (°C)". Without the unit they name columns. */
+const symbols: { symbol: RegExp; unit: RegExp; means: Sense }[] = [
+  { symbol: /^h$/i, unit: /^(?:mm|cm|in)$/, means: { kind: 'quantity', name: 'specimen-height' } },
+  { symbol: /^[dø]$/i, unit: /^(?:mm|cm|in)$/, means: { kind: 'quantity', name: 'specimen-diameter' } },
+  { symbol: /^t$/, unit: /^(?:mm|cm|in)$/, means: { kind: 'quantity', name: 'specimen-thickness' } },
+  { symbol: /^[pf]$/i, unit: /^(?:N|kN|lbf|lb)$/, means: { kind: 'quantity', name: 'failure-load' } },
+  { symbol: /^s$/i, unit: /^(?:N|kN|lbf|lb)$/, means: { kind: 'quantity', name: 'marshall-stability' } },
+  {
+    symbol: /^f$/i,
+    unit: /^(?:mm|0\.1 mm|0\.25 mm|0\.01 in)$/,
+    means: { kind: 'quantity', name: 'marshall-flow' },
+  },
+  {
+    symbol: /^(?:s1|std)$/i,
+    unit: /^(?:kPa|MPa|psi)$/,
+    means: { kind: 'quantity', name: 'tensile-strength-dry' },
+  },
+  {
+    symbol: /^(?:s2|stm|stc)$/i,
+    unit: /^(?:kPa|MPa|psi)$/,
+    means: { kind: 'quantity', name: 'tensile-strength-conditioned' },
+  },
+  { symbol: /^(?:deformation|ε)$/i, unit: /^µε$/, means: { kind: 'quantity', name: 'creep-strain' } },
+  { symbol: /^[dj]$/i, unit: /^1\/[kMG]?(?:Pa|psi)$/, means: { kind: 'quantity', name: 'creep-compliance' } },
+  { symbol: /^t$/i, unit: /^(?:°C|°F)$/, means: { kind: 'key', name: 'temperature' } },
+  { symbol: /^(?:σ|s|tension)$/i, unit: /^(?:kPa|MPa|psi)$/, means: { kind: 'key', name: 'stress' } },
+];
+
+function addSymbol(meaning: LabelMeaning, tokens: string[]): void {
+  const [only, ...more] = tokens;
+  const { unit } = meaning;
+  if (only === undefined || more.length > 0 || unit === null || meaning.quantities.length > 0) return;
+  const found = symbols.find((each) => each.symbol.test(only) && each.unit.test(unit));
+  if (!found) return;
+  meaning.unknown = [];
+  meaning.keys = [];
+  meaning.role = null;
+  if (found.means.kind === 'quantity') meaning.quantities = [found.means.name];
+  else addSense(meaning, found.means, { isWhole: true });
 }
 
 /** "Height 2" and "Strain 3" number the specimen behind the name; "Nini (8)" states a number of gyrations. */
@@ -222,10 +276,8 @@ function told(ids: string[], text: string): string[] {
   return [/\//.test(text) ? 'rutting-parameter' : 'fatigue-parameter'];
 }
 
-const designBinder = new Set(
-  'optimum optimal optimaler optimale optimo optima design jmf oac obc selected diseno proposed retenue recommended'.split(
-    ' ',
-  ),
+const designBinder = wordsOf(
+  'optimum optimal optimaler optimale optimo optima design jmf oac obc selected diseno proposed retenue recommended',
 );
 
 function addSense(meaning: LabelMeaning, sense: Sense, { isWhole }: { isWhole: boolean }): void {

@@ -74,7 +74,10 @@ export function unitOf(text: string): string | null {
   const plain = text.trim();
   // `min` beside a name is a limit, and `h`, `t`, `m` repeat the symbol of the name itself.
   if (/^(?:|[-–]|min|h|t|m|j|p|k|d|number|ratio|none)$/i.test(plain)) return null;
-  const known = foreignUnits.get(plain.toLowerCase().replace(/\s+/g, ' ')) ?? normaliseUnit(plain);
+  const known =
+    foreignUnits.get(plain.toLowerCase().replace(/\s+/g, ' ')) ??
+    normaliseUnit(plain) ??
+    normaliseUnit(plain.replace(/^(\d),(\d)/, '$1.$2'));
   // Single capitals name trials and specimens more often than coulombs and kelvins.
   if (known !== null && /^[A-Z]$/.test(plain) && plain !== 'N')
     return plain === 'C' ? '°C' : plain === 'F' ? '°F' : null;

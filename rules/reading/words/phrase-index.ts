@@ -18,7 +18,8 @@ import {
   roleWords,
 } from './key-words';
 import { performanceWords } from './performance-words';
-import { tokensOf } from './tokens';
+import { shortWords } from './short-words';
+import { tokensOf, withoutMark } from './tokens';
 import { volumetricWords } from './volumetric-words';
 
 /** One thing that a phrase can mean; a phrase may mean several. */
@@ -61,24 +62,46 @@ export class PhraseIndex {
       }
       node = next;
     }
-    if (!node.senses.some((known) => known.kind === sense.kind && nameOf(known) === nameOf(sense)))
-      node.senses.push(sense);
+    if (!node.senses.some((known) => isSame(known, sense))) node.senses.push(sense);
   }
 
   addAll(phrases: string, sense: Sense): void {
     for (const phrase of phrases.split('|')) this.add(phrase, sense);
   }
 
+  /** A token with a point behind it is a word cut short, and stands for the words that begin so where none is it. */
   longestAt(tokens: readonly string[], from: number): PhraseMatch | null {
-    let node: PhraseNode | undefined = this.root;
+    let nodes = [this.root];
     let best: PhraseMatch | null = null;
-    for (let at = from; at < tokens.length; at += 1) {
-      node = node.next.get(tokens[at] as string);
-      if (!node) break;
-      if (node.senses.length > 0) best = { from, to: at + 1, senses: node.senses };
+    for (let at = from; at < tokens.length && nodes.length > 0; at += 1) {
+      const token = tokens[at] as string;
+      nodes = nodes.flatMap((node) => follow(node, token));
+      const senses = sensesOf(nodes);
+      if (senses.length > 0) best = { from, to: at + 1, senses };
     }
     return best;
   }
+}
+
+function follow(node: PhraseNode, token: string): PhraseNode[] {
+  const bare = withoutMark(token);
+  const exact = node.next.get(bare);
+  if (exact) return [exact];
+  if (bare === token || bare.length < 3) return [];
+  return [...node.next].flatMap(([word, next]) => (word.startsWith(bare) ? [next] : []));
+}
+
+/** What one word cut short may stand for is known only where all that it can be mean one thing. */
+function sensesOf(nodes: readonly PhraseNode[]): Sense[] {
+  const [first, ...others] = nodes.filter(({ senses }) => senses.length > 0);
+  if (!first || others.length === 0) return first?.senses ?? [];
+  return first.senses.filter((sense) =>
+    others.every(({ senses }) => senses.some((each) => isSame(each, sense))),
+  );
+}
+
+function isSame(a: Sense, b: Sense): boolean {
+  return a.kind === b.kind && nameOf(a) === nameOf(b);
 }
 
 function nameOf(sense: Sense): string {
@@ -97,7 +120,7 @@ function sharedIndex(): PhraseIndex {
     for (const name of [label, symbol, ...aliases].filter(isTelling))
       index.add(name, { kind: 'quantity', name: id });
   }
-  for (const words of [volumetricWords, aggregateWords, performanceWords]) {
+  for (const words of [volumetricWords, aggregateWords, performanceWords, shortWords]) {
     for (const [id, phrases] of Object.entries(words)) index.addAll(phrases, { kind: 'quantity', name: id });
   }
   for (const [name, phrases] of Object.entries(keyWords))

@@ -84,7 +84,7 @@ export const volumetricWords: Record<string, string> = {
     masse SSS | masse saturee superficiellement seche | poids SSS | masse saturee | masa saturada superficie seca | masa sss | peso sss | peso saturado superficialmente seco |
     masa saturada superficialmente seca | peso saturado superficie seca | peso saturado | masa saturada`,
   'mass-in-water': `mass in water | wt water | W water | weight water | mass water | water wt | specimen weight in water | wt submerged | wt sub | weight sub | weight in water | wt in water | submerged mass | submerged weight | immersed mass | immersed weight | mass submerged | weight submerged |
-    submerged | in water | submerged wt | mass of specimen in water | weight of specimen in water | W water | mass C | C water |
+    submerged | submerged wt | mass of specimen in water | weight of specimen in water | W water | mass C | C water |
     Masse unter Wasser | Masse in Wasser | Gewicht unter Wasser | Unterwassergewicht | Unterwassermasse | Tauchmasse | masse dans l'eau | masse immergee | poids immerge | poids dans l'eau |
     masse hydrostatique | masa sumergida | masa en agua | peso sumergido | peso en agua | peso en el agua | masa en el agua`,
   'specimen-absorption': `specimen absorption | abs | abs % | specimen water absorption | water absorbed | % water absorbed | % water absorbed by volume | absorption | water absorption | absorption by volume |
