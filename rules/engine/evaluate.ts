@@ -13,6 +13,7 @@ import { type CheckResult, type Finding, findingKey, type RecomputedReading } fr
 import { byClauseThenSubject } from './order';
 import { roomToMove } from './room-to-move';
 import { sealOf } from './seal';
+import { sharesSpecimens, unsettledByTests } from './specimens-of-tests';
 import { type World, worldOf } from './world';
 
 /**
@@ -53,15 +54,23 @@ function settledWorld(input: {
 }): World {
   const world = worldOf(input);
   const { record, edition, context } = input;
-  if (!record.doubts.some(({ alternatives }) => alternatives.length > 0)) return world;
-  const unsettled = unsettledBy({
-    record,
-    findings: edition.rules.flatMap((rule) => evaluateRule(world, rule)),
-    evaluate: (other) => {
-      const otherWorld = worldOf({ record: other, edition, context, analysis: analysisOf(other, edition) });
-      return edition.rules.flatMap((rule) => evaluateRule(otherWorld, rule));
-    },
-  });
+  const isDoubted = record.doubts.some(({ alternatives }) => alternatives.length > 0);
+  if (!isDoubted && !sharesSpecimens(record)) return world;
+  const findings = edition.rules.flatMap((rule) => evaluateRule(world, rule));
+  const evaluateOther = (other: MixRecord, rules = edition.rules) => {
+    const otherWorld = worldOf({ record: other, edition, context, analysis: analysisOf(other, edition) });
+    return rules.flatMap((rule) => evaluateRule(otherWorld, rule));
+  };
+  const unsettled = new Map([
+    ...unsettledByTests({
+      record,
+      rules: edition.rules,
+      view: world.view,
+      findings,
+      evaluate: evaluateOther,
+    }),
+    ...unsettledBy({ record, findings, evaluate: (other) => evaluateOther(other) }),
+  ]);
   return worldOf({ ...input, unsettled });
 }
 

@@ -7,13 +7,16 @@ import type { ReadingEdition } from './edition-contents';
 export interface MeasuredQuantity {
   quantity: string;
   at: Conditions;
+  /** What is measured on the same specimens, where a rule asks it to tell which of them count. */
+  besides?: string;
 }
 
 /** Every quantity that an edition's rules look at, with the conditions that they name, each once. */
 export function measuredQuantities(edition: ReadingEdition): MeasuredQuantity[] {
   const found: MeasuredQuantity[] = [];
   for (const { measure, limit, when } of edition.rules) {
-    for (const { quantity, at } of measure.where ?? []) found.push({ quantity, at });
+    const besides = 'quantity' in measure ? { besides: measure.quantity } : {};
+    for (const { quantity, at } of measure.where ?? []) found.push({ quantity, at, ...besides });
     for (const bound of [limit.min, limit.max, limit.target]) {
       if (typeof bound === 'object' && 'quantity' in bound)
         found.push({ quantity: bound.quantity, at: bound.at });
@@ -50,7 +53,7 @@ export function measuredQuantities(edition: ReadingEdition): MeasuredQuantity[] 
         break;
     }
   }
-  const keyed = new Map(found.map((each) => [JSON.stringify([each.quantity, each.at]), each]));
+  const keyed = new Map(found.map((each) => [JSON.stringify([each.quantity, each.at, each.besides]), each]));
   return [...keyed.values()];
 }
 

@@ -67,14 +67,19 @@ const sheetOf: Record<string, string> = {
 };
 
 /** The sheet on which a measured quantity has its place. */
-export function placeOfQuantity({ quantity, at }: MeasuredQuantity, find: Find): string {
+export function placeOfQuantity({ quantity, at, besides }: MeasuredQuantity, find: Find): string {
   const { trial: _trial, laboratory, ...conditions } = at;
   const named = sheetOf[quantity];
+  if (named === 'Trials' && besides !== undefined && isOnPerformance(besides, find)) return 'Performance';
   const isScalar = Object.keys(conditions).length === 0 && laboratory === undefined;
   if (named === 'Submittal' && !isScalar) return 'Performance';
   if (named === 'Stockpiles' && laboratory !== undefined) return 'Aggregates';
   if (named !== undefined) return named;
   return find(quantity)?.subject === 'aggregate' ? 'Aggregates' : 'Performance';
+}
+
+function isOnPerformance(quantity: string, find: Find): boolean {
+  return placeOfQuantity({ quantity, at: {} }, find) === 'Performance';
 }
 
 /** Conditions by which the tests of a sheet differ, and so need a column of their own. */
@@ -196,11 +201,23 @@ export function valueColumns(
     );
     columns.set(`${id}|${JSON.stringify(stated)}`, valueColumn(quantity, stated));
   };
-  for (const { quantity, at } of measured) add(quantity, at);
+  for (const { quantity, at, besides } of measured) {
+    if (besides === undefined || sheetOf[quantity] !== 'Trials') add(quantity, at);
+    else {
+      const ofSpecimen = find(quantity);
+      if (ofSpecimen) columns.set(`${quantity}|`, ofTestedSpecimen(ofSpecimen));
+    }
+  }
   for (const id of usual) if (![...columns.keys()].some((known) => known.startsWith(`${id}|`))) add(id, {});
   const order = (column: TemplateColumn) => {
     const at = usual.indexOf(column.quantity ?? '');
     return at < 0 ? usual.length : at;
   };
   return [...columns.values()].toSorted((a, b) => order(a) - order(b));
+}
+
+/** Voids of specimens that were compacted for a test are told apart from those of the design by the test's form. */
+function ofTestedSpecimen(quantity: Quantity): TemplateColumn {
+  const header = `${sentenceCase(quantity.label)} of the tested specimen`;
+  return { ...valueColumn(quantity, { variant: 'performance' }, header), without: ['variant'] };
 }

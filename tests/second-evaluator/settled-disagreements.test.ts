@@ -171,3 +171,31 @@ describe('two documents of one date', () => {
     expectOutcome(aCase({ measure, limit: { present: true } }, { documents }), 'pass');
   });
 });
+
+describe('a volumetric reading whose specimen has a result of a test as well', () => {
+  const measure = { kind: 'reading' as const, quantity: 'bulk-specific-gravity-mix', minimumCount: 2 };
+  const gravity = (value: number, specimen: string): ReadingInput => ({
+    quantity: 'bulk-specific-gravity-mix',
+    value,
+    unit: '1',
+    at: { trial: 'design', specimen },
+    origin: 'measured',
+  });
+  const cycles: ReadingInput = {
+    quantity: 'overlay-cycles',
+    value: 400,
+    unit: 'cycles',
+    at: { specimen: '2' },
+    origin: 'measured',
+  };
+
+  it('leaves open what would be decided otherwise without it, however few are left', () => {
+    const readings = [gravity(2.4, '1'), gravity(2.3, '2'), cycles];
+    expectOutcome(aCase({ measure, limit: { max: '2.36' } }, { readings }), 'undecided');
+  });
+
+  it('counts where it makes no difference', () => {
+    const readings = [gravity(2.35, '1'), gravity(2.3, '2'), cycles];
+    expectOutcome(aCase({ measure, limit: { max: '2.36' } }, { readings }), 'pass');
+  });
+});

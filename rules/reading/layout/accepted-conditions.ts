@@ -1,5 +1,6 @@
 import type { Quantity } from '../../quantities/quantity';
 import type { Conditions } from '../../record';
+import type { Domain } from '../words/context-words';
 import type { Candidate } from './candidate';
 
 const gradation = new Set(['percent-passing', 'percent-retained', 'cumulative-percent-retained']);
@@ -65,6 +66,27 @@ const subsets = new Set([
   'specimen-absorption',
   'marshall-stability',
 ]);
+/** Tests whose specimens are compacted for them alone, by the kind of test that a title or a heading speaks of. */
+const testsOfTheirOwn: Partial<Record<Domain, string>> = {
+  hamburg: 'wheel tracking',
+  'loaded-wheel': 'loaded wheel',
+  disk: 'disk-shaped',
+  cracking: 'cracking',
+  modulus: 'modulus',
+  creep: 'creep',
+};
+const ofSpecimensAlone = new Set([
+  'air-voids',
+  'voids-in-mineral-aggregate',
+  'voids-filled-with-asphalt',
+  'relative-density',
+  'mass-in-air',
+  'mass-in-water',
+  'mass-saturated-surface-dry',
+  'bulk-specific-gravity-mix',
+  'bulk-density-mix',
+  'specimen-absorption',
+]);
 const strengths = new Set(['tensile-strength-dry', 'tensile-strength-conditioned']);
 
 /** The conditions that a reading of this quantity is told apart by, out of all that the layout states around it. */
@@ -85,6 +107,10 @@ export function acceptedConditions(candidate: Candidate, quantity: Quantity): Co
     isMoisture(candidate)
   )
     at.variant = candidate.subset;
+  if (ofSpecimensAlone.has(quantity.id) && at.variant === undefined) {
+    const test = testOf(candidate);
+    if (test !== undefined) at.variant = test;
+  }
   if (strengths.has(quantity.id)) delete at.variant;
   if (quantity.id === 'tensile-strength-ratio') {
     delete at.variant;
@@ -94,6 +120,14 @@ export function acceptedConditions(candidate: Candidate, quantity: Quantity): Co
     delete at.specimen;
   return at;
 }
+
+/** For which test the specimens of a table were made, where what stands nearest speaks of one. */
+function testOf({ domains }: Candidate): string | undefined {
+  const nearest = domains.find((domain) => domain in testsOfTheirOwn || OF_THE_DESIGN.has(domain));
+  return nearest === undefined ? undefined : testsOfTheirOwn[nearest];
+}
+
+const OF_THE_DESIGN = new Set<Domain>(['mix', 'marshall', 'moisture', 'field']);
 
 export function isMoisture(candidate: Candidate): boolean {
   return (

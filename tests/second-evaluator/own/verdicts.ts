@@ -7,6 +7,7 @@ import { type DocumentRule, documentVerdicts } from './document-rule';
 import { type FormulaRule, formulaSubject, formulaVerdicts } from './formula-rule';
 import { type GradationRule, gradationVerdicts, wholeGradation } from './gradation-rule';
 import { type ReadingRule, readingVerdicts } from './reading-rule';
+import { specimensPart } from './shared-specimens';
 import { subjectOf } from './subject';
 import { truthOf } from './truth';
 import { type Verdict, type World, without } from './world';
@@ -16,7 +17,9 @@ export function verdictsOf(world: World): Verdict[] {
   const all: Verdict[] = [];
   for (const rule of world.edition.rules) {
     for (const verdict of ruleVerdicts(world, rule)) {
-      const isOpen = alternativesPart(world, verdict, (other) => ruleVerdicts(other, rule));
+      const isOpen =
+        alternativesPart(world, verdict, (other) => ruleVerdicts(other, rule)) ||
+        specimensPart(world, verdict, rule, ruleVerdicts);
       all.push(isOpen ? { ...verdict, ...without('undecided') } : verdict);
     }
   }
