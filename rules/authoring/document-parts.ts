@@ -1,7 +1,20 @@
+import { z } from 'zod';
 import { hashOf } from '../engine/seal';
 
 /** A rule set as it is being written: it may be unfinished, so nothing is known of its fields yet. */
 export type DraftDocument = Record<string, unknown>;
+
+/** What a draft is found and listed by, however unfinished it is otherwise. */
+export const headFields = z.looseObject({
+  id: z.string().min(1).max(80),
+  title: z.string().min(1).max(200),
+  edition: z.string().min(1).max(40),
+  effective: z.object({
+    from: z.iso.date().nullable().default(null),
+    to: z.iso.date().nullable().default(null),
+  }),
+  layerOf: z.object({ id: z.string(), edition: z.string() }).nullable().default(null),
+});
 
 /**
  * One thing in a draft that is changed as a whole: `head`, an entry of a list as `rules/vma`, or the order of a list as
@@ -80,6 +93,11 @@ export function changeParts(document: DraftDocument, changes: readonly PartChang
   return { ok: true, document: changed };
 }
 
+/** The document with some of its entries put in place of those of the same name. */
+export function withParts(document: DraftDocument, entries: ReadonlyMap<string, unknown>): DraftDocument {
+  return [...entries].reduce((changed, [part, after]) => withPart(changed, { part, after }), document);
+}
+
 function faultOf({ part, after }: PartChange): { part: string; detail: string; fix: string }[] {
   const { list, name } = placeOf(part);
   const told = (detail: string, fix: string) => [{ part, detail, fix }];
@@ -104,7 +122,10 @@ function faultOf({ part, after }: PartChange): { part: string; detail: string; f
       );
 }
 
-function withPart(document: DraftDocument, { part, after, position }: PartChange): DraftDocument {
+function withPart(
+  document: DraftDocument,
+  { part, after, position }: Omit<PartChange, 'before'>,
+): DraftDocument {
   const { list, name } = placeOf(part);
   if (part === 'head') return { ...(after as Entry), ...listsOf(document) };
   if (part.startsWith('order/')) return withList(document, name, inOrder(document, name, after as unknown[]));

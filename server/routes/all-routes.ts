@@ -3,6 +3,7 @@ import { caughtMailRoutes } from './caught-mail/caught-mail-routes';
 import { addContractorRoute } from './contractors/add-contractor';
 import { listContractorsRoute } from './contractors/list-contractors';
 import type { Route } from './define-route';
+import { draftRoutes } from './drafts/draft-routes';
 import { getHomeRoute } from './home/home';
 import { acceptInvitationRoute } from './invitations/accept-invitation';
 import { getInvitationRoute } from './invitations/get-invitation';
@@ -49,6 +50,7 @@ export function allRoutes(settings: Settings): Route[] {
     ...[listProjectsRoute, getProjectRoute, addProjectRoute, changeProjectRoute],
     ...[confirmSectionRoute, changeSectionRoute, getSectionTemplateRoute],
     ...[listRuleSetsRoute, getRuleSetTemplateRoute, getRuleSetRoute],
+    ...draftRoutes,
     ...[getHomeRoute, getQueueRoute, getQueueItemRoute, searchRoute],
     ...submittalRoutes,
     ...returnRoutes,

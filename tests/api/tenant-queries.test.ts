@@ -5,6 +5,7 @@ import { ownResolvedEdition } from '#server/commands/projects/own-edition';
 import * as cellGrids from '#server/db/queries/cell-grids';
 import * as checks from '#server/db/queries/checks';
 import * as contractors from '#server/db/queries/contractors';
+import * as drafts from '#server/db/queries/drafts';
 import * as editions from '#server/db/queries/editions';
 import * as home from '#server/db/queries/home';
 import * as jobs from '#server/db/queries/jobs';
@@ -24,6 +25,7 @@ import * as sectionSnapshot from '#server/db/queries/section-snapshot';
 import { checks as checkRows, notes as noteRows, waivers } from '#server/db/schema/checks';
 import { invitations } from '#server/db/schema/people';
 import * as rows from '#server/db/schema/submittals';
+import { demoId } from '#server/db/seed/demo-id';
 import { demoOrganisations, demoPerson } from '#server/db/seed/demo-people';
 import { demoProjectId, demoSectionId } from '#server/db/seed/seed-projects';
 import { aSubmitted, type DemoWorld, expectStatus, pathOf, startDemoWorld } from './harness/demo-world';
@@ -122,7 +124,19 @@ async function namesOf({ submittalId, number }: { submittalId: string; number: n
   const [member] = await people.listMembers(db, contractor.organisationId);
   const [edition] = await editions.listEditions(db, agency.organisationId);
   if (!note || !waiver || !job || !member || !edition) throw new Error('Something was not made.');
-  return { submittalId, revisionId, row, kept, note, waiver, job, member, edition };
+  const draftId = await aDraftWithComment();
+  return { submittalId, revisionId, row, kept, note, waiver, job, member, edition, draftId };
+}
+
+/** The demo's draft, with a change and a comment. */
+async function aDraftWithComment(): Promise<string> {
+  const tamsin = await world.as('Tamsin Brook');
+  const draftId = demoId('draft/cvra-412/2027');
+  const change = { part: 'rules/new', before: null, after: { id: 'new' } };
+  expectStatus(await tamsin.post(`/api/drafts/${draftId}/changes`).send({ changes: [change] }), 200);
+  const comment = { rule: null, text: 'To be written.' };
+  expectStatus(await tamsin.post(`/api/drafts/${draftId}/comments`).send(comment), 201);
+  return draftId;
 }
 
 type Named = Awaited<ReturnType<typeof namesOf>>;
@@ -183,6 +197,18 @@ const queries: Record<string, Record<string, Query>> = {
           agencyId: reader.organisationId,
           contractorId: contractor.organisationId,
         }),
+    ],
+  },
+  drafts: {
+    findDraft: ['agency', (reader) => drafts.findDraft(db(), reader.organisationId, named.draftId)],
+    lockDraft: ['agency', (reader) => drafts.lockDraft(db(), reader.organisationId, named.draftId)],
+    listDraftComments: [
+      'agency',
+      (reader) => drafts.listDraftComments(db(), reader.organisationId, named.draftId),
+    ],
+    listDraftChanges: [
+      'agency',
+      (reader) => drafts.listDraftChanges(db(), reader.organisationId, named.draftId),
     ],
   },
   editions: {

@@ -1,9 +1,9 @@
 import { describe, expect, it } from 'vitest';
-import { evaluate } from '#rules/engine/evaluate';
+import { runCase } from '#rules/authoring/run-case';
 import type { Finding, Outcome } from '#rules/engine/finding';
 import { outcomeSchema } from '#rules/engine/finding';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
-import type { ExpectedFinding, Layer, RuleSet, RuleSetCase } from '#rules/rule-sets/schema';
+import type { Layer, RuleSet, RuleSetCase } from '#rules/rule-sets/schema';
 import { isLayer } from '#rules/rule-sets/schema';
 import { shippedEditions } from '#tests/builders/shipped-editions';
 import impossible from './impossible-outcomes.json';
@@ -37,41 +37,15 @@ describe.each(shippedEditions())('$file', ({ ruleSet, edition }) => {
   });
 });
 
-/**
- * What a case expects and did not get, and findings of its rules that it does not list. A case that names subjects
- * may leave out those that its small record does not show.
- */
 function differences(each: RuleSetCase, edition: ResolvedEdition): string[] {
-  const { findings } = evaluate(each.record, edition, each.context);
-  const rules = [...new Set(each.expected.map(({ rule }) => rule))];
-  return rules.flatMap((rule) => {
-    const found = findings.filter((finding) => finding.rule === rule);
-    const expected = each.expected.filter((expectation) => expectation.rule === rule);
-    const unmet = expected
-      .filter((expectation) => !found.some((finding) => meets(finding, expectation)))
-      .map(
-        (expectation) => `expected ${JSON.stringify(expectation)}, found ${found.map(inShort).join(' | ')}`,
-      );
-    const namesSubjects = expected.every(({ subject }) => subject !== undefined);
-    const unlisted = found
-      .filter(({ outcome }) => !(namesSubjects && outcome === 'not shown'))
-      .filter((finding) => !expected.some((expectation) => meets(finding, expectation)))
-      .map((finding) => `not listed: ${inShort(finding)}`);
-    return [...unmet, ...unlisted];
-  });
-}
-
-function meets(finding: Finding, expected: ExpectedFinding): boolean {
-  const { subject, outcome, borderline, rounded, margin, limit } = expected;
-  return (
-    finding.outcome === outcome &&
-    (subject === undefined || finding.subject === subject) &&
-    (borderline === undefined || finding.borderline === borderline) &&
-    (rounded === undefined || (finding.observed?.rounded ?? null) === rounded) &&
-    (margin === undefined || finding.margin === margin) &&
-    (limit?.min === undefined || (finding.limit?.min ?? null) === limit.min) &&
-    (limit?.max === undefined || (finding.limit?.max ?? null) === limit.max)
-  );
+  const { unmet, unlisted } = runCase(each, edition);
+  return [
+    ...unmet.map(
+      ({ expected, found }) =>
+        `expected ${JSON.stringify(expected)}, found ${found.map(inShort).join(' | ')}`,
+    ),
+    ...unlisted.map((finding) => `not listed: ${inShort(finding)}`),
+  ];
 }
 
 function inShort(finding: Finding): string {

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { and, eq, ne } from 'drizzle-orm';
 import { z } from 'zod';
 import type { Database } from '../client';
 import { organisations } from '../schema/people';
@@ -37,7 +37,7 @@ export async function listAgencyEditions(db: Database, agencyId: string): Promis
     .select({ draft: editionDrafts, key: ruleSets.key })
     .from(editionDrafts)
     .innerJoin(ruleSets, eq(ruleSets.id, editionDrafts.ruleSetId))
-    .where(eq(editionDrafts.agencyId, agencyId));
+    .where(and(eq(editionDrafts.agencyId, agencyId), ne(editionDrafts.state, 'published')));
   return [
     ...published.map((row) => ({ ...row, draftState: null, document: null })),
     ...drafts.map(({ draft, key }) => {
@@ -55,7 +55,8 @@ export async function listAgencyEditions(db: Database, agencyId: string): Promis
         ruleCount: head.rules.length,
         startingPoint: false,
         withdrawn: false,
-        draftState: draft.state,
+        // The query leaves published ones out; their edition stands in the list by itself.
+        draftState: draft.state === 'in review' ? ('in review' as const) : ('draft' as const),
         document: draft.document,
       };
     }),

@@ -31,7 +31,7 @@ export const editionDrafts = mysqlTable(
     agencyId: id('agency_id').notNull(),
     ruleSetId: id('rule_set_id').notNull(),
     edition: varchar('edition', { length: 40 }).notNull(),
-    state: choice('state', ['draft', 'in review']).notNull(),
+    state: choice('state', ['draft', 'in review', 'published']).notNull(),
     document: json('document', ruleSetDocumentSchema).notNull(),
     /** The published edition that it started from. */
     basedOnId: id('based_on_id'),
