@@ -52,9 +52,9 @@ function ofSubject(subject: Subject): Finding {
   const limit = resolveLimit(world, rule, at);
   const shown = limit.ok ? limit.limit : null;
   if (!taken.ok) {
-    const { outcome, reason } = taken;
+    const { outcome, reason, wouldDecide } = taken;
     const evidence = taken.inputs.map((input) => input.evidence);
-    return makeFinding(world, rule, { ...base, outcome, reason, limit: shown, evidence });
+    return makeFinding(world, rule, { ...base, outcome, reason, wouldDecide, limit: shown, evidence });
   }
   const value = computed(formula, taken.inputs);
   const evidence = [evidenceOf(subject, taken.inputs, value.ok ? value.value : null)];

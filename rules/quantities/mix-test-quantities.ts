@@ -246,7 +246,7 @@ export const mixTestQuantities: QuantityInput[] = [
     symbol: 'k',
     label: 'permeability',
     unit: '10⁻⁵ cm/s',
-    acceptedUnits: ['10⁻⁵ cm/s'],
+    acceptedUnits: ['10⁻⁵ cm/s', 'cm/s', 'm/day'],
     decimals: 0,
     plausible: { min: 0, max: 100000 },
     gaugeSpan: 50,

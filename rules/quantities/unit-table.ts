@@ -96,6 +96,8 @@ export const unitTable: UnitEntry[] = [
     expression: 'permeabilityUnit',
     aliases: ['10^-5 cm/s', '1e-5 cm/s', 'x10^-5 cm/s', '10-5 cm/s'],
   },
+  { unit: 'm/day', expression: 'm/day', aliases: ['m/d', 'metres per day', 'meters per day'] },
+  { unit: 'cm/s', expression: 'cm/s', aliases: ['cm/sec', 'cm/second'] },
   {
     unit: 'mm/1000',
     expression: 'mmPerThousand',

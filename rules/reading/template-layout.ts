@@ -25,7 +25,7 @@ import {
 } from './template-places';
 
 /** Raised when the template's places change. */
-export const templateVersion = 1;
+export const templateVersion = 2;
 
 /** One line of the sheet of labels: what is asked, and where its value and unit stand. */
 export interface TemplateEntry {
@@ -215,7 +215,7 @@ export function templateLayout(edition: ReadingEdition): TemplateLayout {
       ),
       table(
         'Creep',
-        'One row a loading time. Give strain and stress, or compliance, or the deformations.',
+        'One row a loading time. Give strain and stress, or compliance, or the deformations of each face with thickness, diameter and load.',
         creepColumns(find),
         120,
       ),

@@ -139,17 +139,26 @@ export function trialColumns(measured: MeasuredQuantity[], find: Find): Template
   return columns;
 }
 
+/** Deformations are read on both faces of a specimen; its dimensions and load stand once, in any of its rows. */
 export function creepColumns(find: Find): TemplateColumn[] {
-  const values = ['creep-strain', 'creep-compliance', 'horizontal-deformation', 'vertical-deformation'];
+  const value = (id: string, without: string[]): TemplateColumn[] => {
+    const quantity = find(id);
+    return quantity ? [{ ...valueColumn(quantity), list: [], without }] : [];
+  };
+  const ofSpecimen = ['variant', 'stress', 'time'];
   return [
     conditionKey('temperature', true),
     key('Specimen', 'specimen'),
+    key('Face', 'variant', ['front', 'rear']),
     conditionKey('stress'),
     conditionKey('time', true),
-    ...values.flatMap((id) => {
-      const quantity = find(id);
-      return quantity ? [{ ...valueColumn(quantity, {}, sentenceCase(quantity.label)), list: [] }] : [];
-    }),
+    ...value('creep-strain', ['variant']),
+    ...value('creep-compliance', ['variant']),
+    ...value('horizontal-deformation', []),
+    ...value('vertical-deformation', []),
+    ...value('specimen-thickness', [...ofSpecimen, 'temperature']),
+    ...value('specimen-diameter', [...ofSpecimen, 'temperature']),
+    ...value('creep-load', ofSpecimen),
   ];
 }
 

@@ -172,6 +172,7 @@ describe('the sections of a project', () => {
     expect(before.proposals.map((proposal: { base: object }) => proposal.base)).toEqual([
       expect.objectContaining(base),
       expect.objectContaining({ ruleSet: 'cvra-421', edition: '2026' }),
+      expect.objectContaining({ ruleSet: 'cvra-431', edition: '2026' }),
     ]);
     expect(before.proposals[0].layers).toEqual([]);
     const onTheDay = await addProject({ lettingOn: '2026-02-01' });

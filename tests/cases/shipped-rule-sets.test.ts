@@ -7,6 +7,7 @@ import { shippedRuleSets } from '#rules/sets/shipped-rule-sets';
 const sections = [
   ...['2024', '2026', '2027'].map((edition) => ({ section: '412', edition, base: editionOf(edition) })),
   { section: '421', edition: '2026', base: ruleSetSchema.parse(documentOf('cvra-421-2026.json')) },
+  { section: '431', edition: '2026', base: ruleSetSchema.parse(documentOf('cvra-431-2026.json')) },
 ];
 const supplement = layerSchema.parse(documentOf('cvra-412-s07-2026.json'));
 

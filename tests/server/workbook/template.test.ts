@@ -202,8 +202,8 @@ describe.each(editions)('the template of %s', (_, edition) => {
 
   it('is recognised by its stamp, with its version and its edition', async () => {
     const { grid } = await readBack(await writeTemplate(edition, { editionHash }), edition);
-    expect(recogniseTemplate(grid)).toEqual({ version: 1, editionHash });
-    expect(recogniseTemplate({ ...grid, properties: {} })).toEqual({ version: 1, editionHash });
+    expect(recogniseTemplate(grid)).toEqual({ version: 2, editionHash });
+    expect(recogniseTemplate({ ...grid, properties: {} })).toEqual({ version: 2, editionHash });
   });
 
   it('has no two headers on one sheet that could be taken for each other', () => {
