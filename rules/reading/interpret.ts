@@ -1,10 +1,17 @@
 import type { Quantity } from '../quantities/quantity';
 import { allQuantities } from '../quantities/registry';
+import type { Conditions } from '../record';
 import { withStandardAttributes } from '../rule-sets/attribute';
 import { withStandardDocuments } from '../rule-sets/document-types';
 import type { Cell, CellGrid, SheetGrid } from './cell-grid';
+import type { Correction } from './correction';
 import type { ReadingEdition } from './edition-contents';
 import { joinAttributes, joinReadings } from './join-duplicates';
+import { CellKinds } from './layout/cell-kind';
+import { settleCandidates } from './layout/settle-candidates';
+import { settleTold } from './layout/settle-told';
+import { tellCorrections } from './layout/tell-corrections';
+import { ToldCells } from './layout/told';
 import {
   attributePrefix,
   documentQuantity,
@@ -18,7 +25,7 @@ import { readAttribute } from './read-attribute';
 import { readDocument } from './read-documents';
 import { type FindQuantity, readValues } from './read-readings';
 import { bindRule, markLabels, type RuleAtAnchor } from './read-rule';
-import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
+import { createReadingLog, placeKey, placeOf, type ReadingContext } from './reading-log';
 import type { Answer, ReadingResult } from './reading-result';
 import { SheetIndex } from './sheet-index';
 import { submittalFacts } from './submittal-facts';
@@ -32,13 +39,23 @@ export interface ReadWorkbookInput {
   /** Which attributes, documents and quantities there are words for. */
   edition: ReadingEdition;
   answers: Answer[];
+  /** What people said of cells of this workbook; it stands over the mapping. */
+  corrections?: readonly Correction[];
 }
 
 /** Reads a decoded workbook through a mapping: every filled cell ends as read, doubted, a label or unused. */
-export function readWorkbook({ grid, mapping, edition, answers }: ReadWorkbookInput): ReadingResult {
-  const context: ReadingContext = { grid, log: createReadingLog(answers) };
-  const { log } = context;
+export function readWorkbook({
+  grid,
+  mapping,
+  edition,
+  answers,
+  corrections = [],
+}: ReadWorkbookInput): ReadingResult {
+  const log = createReadingLog(answers);
   const indexes = grid.sheets.map((sheet) => new SheetIndex(sheet));
+  const told = new ToldCells();
+  tellCorrections(told, corrections, { indexes, kinds: new CellKinds() });
+  const context: ReadingContext = { grid, log: told.quieten(log) };
   const findQuantity = quantityFinder(edition.quantities);
   for (const rule of mapping.rules) {
     for (const index of indexes) {
@@ -47,9 +64,14 @@ export function readWorkbook({ grid, mapping, edition, answers }: ReadWorkbookIn
       }
     }
   }
+  if (told.size > 0) {
+    const plain = readWorkbook({ grid, mapping, edition, answers });
+    const left = settleTold(told, [], { grid, log, edition, indexes, atOf: conditionsIn(plain) });
+    settleCandidates(left, { log, find: findQuantity, decimalOf: () => '.' });
+  }
   const readings = joinReadings(log);
   const attributes = joinAttributes(log);
-  for (const index of indexes) passOverRest(index, context);
+  for (const index of indexes) passOverRest(index, { grid, log });
   return {
     record: { attributes, readings, documents: log.documents, doubts: log.doubts },
     doubts: log.doubts,
@@ -59,6 +81,16 @@ export function readWorkbook({ grid, mapping, edition, answers }: ReadWorkbookIn
     stale: answers.filter((answer) => !log.answered.includes(answer)),
     departures: [],
   };
+}
+
+/** Whose a value is, as the mapping alone reads it. */
+function conditionsIn({
+  record,
+  doubts,
+}: ReadingResult): (place: { sheet: string; cell: string }) => Conditions {
+  const at = new Map(doubts.map((doubt) => [placeKey(doubt), doubt.about.at ?? {}]));
+  for (const reading of record.readings) if (reading.source) at.set(placeKey(reading.source), reading.at);
+  return (place) => at.get(placeKey(place)) ?? {};
 }
 
 function readRule(

@@ -31,6 +31,14 @@ export const mappingRuleSchema = z.strictObject({
     sheet: z.string().nullable(),
     /** Header texts from the top row to the lowest; a unit behind a comma or in brackets may follow each. */
     header: z.array(z.string()).min(1),
+    /** Of values beside a label: the heads of the columns that are meant; without it all of them. */
+    under: z.array(z.string()).optional(),
+    /** Unit that the heading stated when the rule was learned; another one now is a doubt. */
+    unit: z.string().nullable().optional(),
+    /** Headings before and behind it then: where neither stands there now, it is a doubt that it is the same one. */
+    between: z.tuple([z.string().nullable(), z.string().nullable()]).optional(),
+    /** How often it stood in the workbook that it was learned from. */
+    times: z.number().int().positive().optional(),
   }),
   range: z
     .strictObject({
@@ -43,8 +51,8 @@ export const mappingRuleSchema = z.strictObject({
   /** `down`: values under the anchor; `right`: beside it; `cross`: under each column of a merged anchor. */
   axis: z.enum(['down', 'right', 'cross']),
   /**
-   * A quantity's id, where it stands as a reference, `attribute:<name>`, `document`, or `label` for text
-   * that is furniture of the layout.
+   * A quantity's id, where it stands as a reference, `attribute:<name>`, `document`, `label` for text that is
+   * furniture of the layout, `not-a-reading`, or a document's date, `document-date:<type>`, `document-validTo:<type>`.
    */
   quantity: z.union([z.string().min(1), referenceSchema]),
   unit: z.union([z.string(), referenceSchema]).nullable().default(null),
@@ -54,6 +62,8 @@ export const mappingRuleSchema = z.strictObject({
       error: `names a condition that is not known; known are ${atNames.join(', ')}`,
     })
     .default({}),
+  /** Conditions that headings and keys seem to state and that do not hold. */
+  without: z.array(z.string()).optional(),
   decimal: z.enum(['.', ',']).nullable().default(null),
 });
 
@@ -62,6 +72,8 @@ export const mappingSchema = z.strictObject({
   laboratory: z.string(),
   fingerprint: z.string(),
   version: z.number().int().positive(),
+  /** What reads the cells that no rule speaks of: nothing, or their headings as in a layout that nobody described. */
+  rest: z.enum(['unused', 'headings']).default('unused'),
   rules: z.array(mappingRuleSchema),
 });
 
@@ -74,6 +86,7 @@ export type ConditionName = keyof typeof conditionsSchema.shape;
 export const attributePrefix = 'attribute:';
 export const documentQuantity = 'document';
 export const labelQuantity = 'label';
+export const notAReading = 'not-a-reading';
 
 export function isReference(value: unknown): value is MappingReference {
   return typeof value === 'object' && value !== null;

@@ -2,19 +2,26 @@ import { allQuantities } from '../quantities/registry';
 import { convert } from '../quantities/units';
 import type { Conditions } from '../record';
 import type { CellGrid } from './cell-grid';
+import type { Correction } from './correction';
 import type { ReadingEdition } from './edition-contents';
 import { joinAttributes, joinReadings } from './join-duplicates';
 import { CellKinds } from './layout/cell-kind';
 import { decimalMark } from './layout/decimal-mark';
 import { findTables } from './layout/find-tables';
 import { LabelReader } from './layout/label-meaning';
+import { layoutLines } from './layout/layout-lines';
 import { dropMeans } from './layout/means-of-specimens';
 import { readTable } from './layout/read-table';
 import { settleCandidates } from './layout/settle-candidates';
+import { settleTold } from './layout/settle-told';
 import type { SheetContext } from './layout/sheet-context';
 import { farConditions } from './layout/table-context';
+import { tellCorrections } from './layout/tell-corrections';
+import { tellMapping } from './layout/tell-mapping';
+import { ToldCells } from './layout/told';
+import type { Mapping } from './mapping';
 import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
-import type { Answer, ReadingResult } from './reading-result';
+import type { Answer, Departure, ReadingResult } from './reading-result';
 import { SheetIndex } from './sheet-index';
 import { unreadReasons } from './unread-reason';
 import { vocabularyOf } from './words/phrase-index';
@@ -24,6 +31,10 @@ export interface ReadAnyLayoutInput {
   /** Which attributes, documents and quantities there are words for. */
   edition: ReadingEdition;
   answers: Answer[];
+  /** What people said of cells of this workbook. */
+  corrections?: readonly Correction[];
+  /** What the laboratory's workbooks of this layout were said to hold before. */
+  mapping?: Mapping | null;
 }
 
 /**
@@ -31,13 +42,26 @@ export interface ReadAnyLayoutInput {
  * Cells become numbers and words, words become headings of tables, headings say what each number is; what
  * they leave open is a doubt, and what nothing speaks for is listed as unused.
  */
-export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): ReadingResult {
-  const reading: ReadingContext = { grid, log: createReadingLog(answers) };
-  const { log } = reading;
+export function readAnyLayout({
+  grid,
+  edition,
+  answers,
+  corrections = [],
+  mapping = null,
+}: ReadAnyLayoutInput): ReadingResult {
+  const log = createReadingLog(answers);
   const kinds = new CellKinds();
   const labels = labelReaderOf(edition);
   const indexes = grid.sheets.map((sheet) => new SheetIndex(sheet));
   const decimals = new Map(grid.sheets.map((sheet) => [sheet.name, decimalMark(sheet)]));
+  const told = new ToldCells();
+  const departures: Departure[] = [];
+  tellCorrections(told, corrections, { indexes, kinds });
+  if (mapping !== null) {
+    const lines = indexes.flatMap((index) => layoutLines(index, { kinds, labels }));
+    tellMapping(mapping, { told, lines, labels, log, departures, decided: [] });
+  }
+  const reading: ReadingContext = { grid, log: told.quieten(log) };
   const candidates: SheetContext['candidates'] = [];
   let nextTable = 0;
   for (const index of indexes) {
@@ -58,6 +82,7 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
       subset: name.subset,
       domains: [...name.domains, ...dashed.domains],
       candidates,
+      told,
       nextTable,
     };
     for (const table of findTables(index.sheet, { kinds, labels })) {
@@ -69,7 +94,8 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
   const byId = new Map(
     [...allQuantities(), ...edition.quantities].map((quantity) => [quantity.id, quantity]),
   );
-  settleCandidates(candidates, {
+  const left = settleTold(told, candidates, { grid, log, edition, indexes });
+  settleCandidates(left, {
     log,
     find: (id) => byId.get(id),
     decimalOf: (sheet) => decimals.get(sheet) ?? '.',
@@ -77,7 +103,7 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
   dropMeans(log);
   const readings = joinReadings(log, { mayLog: true });
   const attributes = joinAttributes(log);
-  for (const index of indexes) passOverRest(index, reading);
+  for (const index of indexes) passOverRest(index, { grid, log });
   return {
     record: { attributes, readings, documents: log.documents, doubts: log.doubts },
     doubts: log.doubts,
@@ -85,7 +111,7 @@ export function readAnyLayout({ grid, edition, answers }: ReadAnyLayoutInput): R
     uses: log.uses(),
     answered: log.answered,
     stale: answers.filter((answer) => !log.answered.includes(answer)),
-    departures: [],
+    departures,
   };
 }
 
@@ -101,7 +127,7 @@ function sheetTemperature(name: string): Conditions {
 
 const readers = new WeakMap<ReadingEdition, LabelReader>();
 
-function labelReaderOf(edition: ReadingEdition): LabelReader {
+export function labelReaderOf(edition: ReadingEdition): LabelReader {
   const known = readers.get(edition);
   if (known) return known;
   const reader = new LabelReader(vocabularyOf(edition));

@@ -6,6 +6,7 @@ export const unreadReasons = {
   spread: 'A spread or count of specimens, not a reading.',
   noValue: 'Says that there is no value.',
   leftOut: 'Left out by an answer.',
+  saidToBeNone: 'Said not to be a reading.',
   keyInDoubt: 'What it belongs to is in doubt; answer that cell first.',
   limit: 'A limit, target or tolerance, not a reading.',
   total: 'A total; it is recomputed.',

@@ -1,5 +1,6 @@
 import type { Conditions } from '../../record';
 import type { Cell } from '../cell-grid';
+import type { Said } from '../correction';
 import type { SheetIndex } from '../sheet-index';
 import type { Domain } from '../words/context-words';
 
@@ -35,4 +36,8 @@ export interface Candidate {
   written: string | null;
   /** Why the cell cannot be taken although it is headed. */
   conflict: string | null;
+  /** What a person or a mapping says that it is; its headings then only say whose it is. */
+  told?: ToldReading;
 }
+
+export type ToldReading = Extract<Said, { kind: 'reading' }>;

@@ -16,6 +16,7 @@ export function decideGradations(assigned: Assigned[], find: FindQuantity): void
   for (const each of assigned) {
     const isOpen = each.choices.length > 1 && each.choices.every(({ id }) => kinds.includes(id));
     const isRetained =
+      !each.told &&
       each.choices.length === 1 &&
       each.choices[0]?.id === 'percent-retained' &&
       !/indiv|parti|einzel|fraction/i.test(each.heading);

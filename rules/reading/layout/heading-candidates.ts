@@ -3,7 +3,10 @@ import type { Candidate } from './candidate';
 import type { LabelMeaning } from './label-meaning';
 import type { TableContext } from './table-context';
 
-export function bareCandidate(context: TableContext, cell: Cell): Candidate {
+export function bareCandidate(
+  context: Pick<TableContext, 'index' | 'far' | 'tableSubset' | 'tableDomains' | 'number'>,
+  cell: Cell,
+): Candidate {
   return {
     index: context.index,
     cell,

@@ -13,7 +13,7 @@ export function withoutOtherMasses(assigned: Assigned[], log: ReadingLog): Assig
     tables.set(table, known);
   }
   return assigned.filter((each) => {
-    if (!isMass(each)) return true;
+    if (!isMass(each) || each.told) return true;
     const beside = tables.get(each.table) ?? new Set();
     const isRice =
       beside.has('maximum-specific-gravity') &&

@@ -15,6 +15,11 @@ export function readRow(row: TableRow, { facts, group, labelsAt }: RowReading, c
     const place = placeOf(index.sheet, cell);
     if (!column || reading.log.isUsed(place)) continue;
     const kind = kinds.of(cell);
+    if (context.told.at(index.sheet.name, cell)?.says.kind === 'reading') {
+      const labels = labelsAt(cell.column);
+      readValue(cell, { column, facts, group, labels, unit: facts.unit }, context);
+      continue;
+    }
     if (kind === 'none' && !(column.kind === 'value' && saysOutcome(cell))) {
       reading.log.passOver(place, unreadReasons.noValue);
       continue;

@@ -13,11 +13,13 @@ import type { SheetContext } from './sheet-context';
 import type { Table, TableRow } from './table';
 import { farConditions, mark, type TableContext, tableContext } from './table-context';
 import { RowKeys } from './table-rows';
+import { tellColumns } from './tell-columns';
 import { trialsByBinder } from './trials-by-binder';
 
 /** Reads one table: the keys of its rows and columns, then each value under what they say. */
 export function readTable(table: Table, sheet: SheetContext): void {
   const context = tableContext(table, sheet);
+  tellColumns(context);
   for (const cell of table.titles) {
     mark(context, cell, 'A title.');
     readWritten(cell, context);

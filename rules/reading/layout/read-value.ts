@@ -12,14 +12,16 @@ import type { TableColumn } from './table-column';
 import type { TableContext } from './table-context';
 import type { RowFacts } from './table-rows';
 
-export function readValue(
-  cell: Cell,
-  { column, facts, group, labels, unit }: ValueReading,
-  context: TableContext,
-): void {
+export function readValue(cell: Cell, reading: ValueReading, context: TableContext): void {
+  const { column, facts, group, labels, unit } = reading;
   const isText = context.kinds.of(cell) === 'text' || context.kinds.of(cell) === 'none';
   const label = labels.at(-1) ?? null;
   const role = facts.role ?? roleOf(labels) ?? column.role ?? group.meaning?.role ?? null;
+  const told = toldReading(cell, { role, inDoubt: facts.inDoubt }, context);
+  if (told !== null) {
+    pushCandidate(cell, { ...reading, chosen: [told], isAverage: role === 'average' }, context);
+    return;
+  }
   const attribute = label ? label.attribute : column.attribute;
   const namesNumber = (label?.quantities.length ?? 0) + column.quantities.length > 0;
   if (attribute && role === null && (isText || !namesNumber) && (isText || !label?.furniture)) {
@@ -29,8 +31,7 @@ export function readValue(
     passOver(cell, isText ? unreadReasons.remark : roleReasons[role], context);
     return;
   }
-  const isOwnLine = facts.label !== null && facts.label.quantities.length > 0;
-  const chosen = isOwnLine
+  const chosen = isOwnLine(facts)
     ? (facts.label?.quantities ?? null)
     : quantitiesOf({ column, group, labels }, context);
   if (chosen === null) {
@@ -57,6 +58,45 @@ export function readValue(
     passOver(cell, unreadReasons.keyInDoubt, context);
     return;
   }
+  pushCandidate(cell, { ...reading, chosen, isAverage: role === 'average' }, context);
+}
+
+function isOwnLine({ label }: RowFacts): boolean {
+  return label !== null && label.quantities.length > 0;
+}
+
+/**
+ * The quantity that was said of a cell beforehand. A mapping means the results of its column: not its limits, and no
+ * value of which it is not known whose it is.
+ */
+function toldReading(
+  cell: Cell,
+  { role, inDoubt }: { role: Role | null; inDoubt: boolean },
+  { told, index }: TableContext,
+): string | null {
+  const of = told.at(index.sheet.name, cell);
+  if (of?.says.kind !== 'reading') return null;
+  const isMeant = of.by === 'correction' || role === null || role === 'average';
+  const isKnown = !inDoubt || (of.by === 'correction' && Object.keys(of.says.at).length > 0);
+  if (isMeant && isKnown) return of.says.quantity;
+  told.forget(index.sheet.name, cell);
+  return null;
+}
+
+function pushCandidate(
+  cell: Cell,
+  {
+    column,
+    facts,
+    group,
+    labels,
+    unit,
+    chosen,
+    isAverage,
+  }: ValueReading & { chosen: string[]; isAverage: boolean },
+  context: TableContext,
+): void {
+  const label = labels.at(-1) ?? null;
   const at: Conditions = { ...group.at, ...scopedConditions(labels, context), ...column.at };
   for (const each of labels) Object.assign(at, each.at);
   Object.assign(
@@ -76,14 +116,14 @@ export function readValue(
     unit:
       unit ??
       nearest?.unit ??
-      (isOwnLine ? null : column.unit) ??
+      (isOwnLine(facts) ? null : column.unit) ??
       group.meaning?.unit ??
       context.titles.findLast((title) => title.unit !== null)?.unit ??
       null,
     unknownUnit: nearest?.unknownUnit ?? column.unknownUnit,
     method: facts.method ?? label?.method ?? column.method ?? group.meaning?.method ?? null,
     testedOn: facts.testedOn,
-    isAverage: role === 'average',
+    isAverage,
     isHeaded: context.table.headings.length > 0,
     specimenOfRow: facts.at.specimen !== undefined,
     subset:

@@ -34,6 +34,7 @@ export function freeFromSpecimen(assigned: Assigned[]): void {
   for (const each of assigned) {
     const [quantity] = each.choices;
     if (!quantity || each.conditions.specimen === undefined || each.specimenOfRow) continue;
+    if (each.told?.at.specimen !== undefined) continue;
     const isMerged = each.index.spanOf(each.cell).columns > 1;
     const isShared = quantity.kind === 'derived' || quantity.id === 'maximum-specific-gravity';
     const isAlone = lines.get(lineOf(each)) === 1 && (specimens.get(each.table)?.size ?? 0) > 1;

@@ -1,7 +1,7 @@
 import type { Domain } from '../words/context-words';
 import { acceptedConditions } from './accepted-conditions';
 import type { Assigned, SettleOptions } from './assigned';
-import type { Candidate } from './candidate';
+import type { Candidate, ToldReading } from './candidate';
 import { decideGradations } from './decide-gradations';
 import { emit } from './emit-candidate';
 import { withoutOtherMasses } from './other-masses';
@@ -15,6 +15,7 @@ export function settleCandidates(candidates: Candidate[], options: SettleOptions
   const assigned = candidates.map((each): Assigned => {
     const beside = neighbours.get(each.table) ?? [];
     const candidate = beside.length === 0 ? each : { ...each, domains: [...each.domains, ...beside] };
+    if (candidate.told) return toldAssigned(candidate, candidate.told, options);
     const choices = resolveQuantities(candidate, options.find);
     const [first] = choices;
     return { ...candidate, choices, conditions: first ? acceptedConditions(candidate, first) : {} };
@@ -26,6 +27,21 @@ export function settleCandidates(candidates: Candidate[], options: SettleOptions
   const suspected = suspicions(kept, options);
   const formulas = new Set<string>();
   for (const each of kept) emit(each, { ...options, suspected, formulas });
+}
+
+/** What was said of it stands over what its row and column say of it. */
+function toldAssigned(candidate: Candidate, told: ToldReading, { find }: SettleOptions): Assigned {
+  const quantity = find(told.quantity);
+  const around = quantity ? acceptedConditions(candidate, quantity) : {};
+  const without = new Set<string>(told.without);
+  const kept = Object.fromEntries(Object.entries(around).filter(([name]) => !without.has(name)));
+  return {
+    ...candidate,
+    unit: told.unit ?? candidate.unit,
+    unknownUnit: told.unit === null ? candidate.unknownUnit : null,
+    choices: quantity ? [quantity] : [],
+    conditions: { ...kept, ...told.at },
+  };
 }
 
 /** What the unmistakable headings of a table say about its others. */

@@ -5,6 +5,7 @@ import type { SheetIndex } from '../sheet-index';
 import type { Domain } from '../words/context-words';
 import type { Candidate } from './candidate';
 import type { Surroundings } from './table';
+import type { ToldCells } from './told';
 
 /** What is known while one sheet is read. */
 export interface SheetContext extends Surroundings {
@@ -17,5 +18,6 @@ export interface SheetContext extends Surroundings {
   subset: 'dry' | 'conditioned' | null;
   domains: Domain[];
   candidates: Candidate[];
+  told: ToldCells;
   nextTable: number;
 }

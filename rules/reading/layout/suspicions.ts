@@ -71,7 +71,8 @@ function fractions(table: Assigned[], found: Map<Assigned, Suspicion>): void {
   const runs = new Map<string, Assigned[]>();
   for (const each of table) {
     const [quantity] = each.choices;
-    if (!quantity || each.choices.length > 1 || quantity.unit !== '%') continue;
+    if (!quantity || each.choices.length > 1 || quantity.unit !== '%' || (each.told?.unit ?? null) !== null)
+      continue;
     const key = runKey(each, quantity);
     const run = runs.get(key);
     if (run) run.push(each);

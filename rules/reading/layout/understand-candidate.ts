@@ -1,3 +1,4 @@
+import { Decimal } from 'decimal.js';
 import type { Quantity } from '../../quantities/quantity';
 import { convert } from '../../quantities/units';
 import type { Cell } from '../cell-grid';
@@ -13,6 +14,11 @@ export function understandAs(
 ): Understood<NumberValue> {
   const cell: Cell = each.written === null ? each.cell : writtenCell(each.cell, each.written);
   const decimal = decimalOf(each.index.sheet.name);
+  if (each.told?.unit === '1' && quantity.unit === '%' && cell.kind === 'number') {
+    const percent = new Decimal(cell.value).times(100).toString();
+    const asPercent: Cell = { ...cell, value: percent, format: null };
+    return understandNumber(asPercent, { quantity, unit: '%', unknownUnit: null, decimal });
+  }
   const fits = each.unit !== null && convert(1, each.unit, quantity.unit).ok;
   const unclear = unitUnclear(each, quantity, cell, decimal);
   if (unclear) return unclear;
@@ -82,6 +88,7 @@ export function suspicious(
       { answer: `as it stands`, label: 'As it stands', value: understood.value },
     ]);
   }
+  if (each.told) return understood;
   const needsBasis = quantity.id === 'rap-content' || quantity.id === 'ras-content';
   if (needsBasis && !each.onMix)
     return doubtOf('does not say of what mass it is a percentage', [
