@@ -3,6 +3,7 @@ import { type EditionView, viewOf } from '#rules/rule-sets/edition-view';
 import type { ResolvedEdition, ResolvedRule, ResolvedTable } from '#rules/rule-sets/resolve';
 import type { Rule } from '#rules/rule-sets/schema';
 import { cellWords, conditionClause, roundingClause, ruleSentence } from '#rules/rule-sets/sentences';
+import { tablesOf } from '#rules/rule-sets/tables-of';
 import { capitalised, numberWords, withUnit } from '#rules/rule-sets/words';
 import type { RuleSetView, RuleView, TableView } from '#shared/contracts/rule-sets';
 
@@ -84,24 +85,6 @@ function precisionWords({ precision, measure }: Rule, view: EditionView): string
   const unit = measure.kind === 'reading' ? (view.quantity(measure.quantity)?.unit ?? '') : '';
   const source = precision.source == null ? '' : `, ${precision.source}`;
   return `± ${withUnit(numberWords(precision.value), unit)}${source}`;
-}
-
-/** Ids of the tables that a rule names anywhere: as its measure, in a limit, as its rounding step. */
-export function tablesOf({
-  measure,
-  limit,
-  rounding,
-}: Pick<Rule, 'measure' | 'limit' | 'rounding'>): Set<string> {
-  const found = new Set<string>();
-  const look = (value: unknown): void => {
-    if (typeof value !== 'object' || value === null) return;
-    for (const [name, part] of Object.entries(value)) {
-      if (name === 'table' && typeof part === 'string') found.add(part);
-      else look(part);
-    }
-  };
-  look([measure, limit, rounding]);
-  return found;
 }
 
 function tableView(table: ResolvedTable, edition: ResolvedEdition): Omit<TableView, 'usedBy'> {

@@ -69,7 +69,8 @@ async function inReview(from = '2030-01-01', document: object = {}): Promise<Dra
   return expectStatus(answer, 200).body;
 }
 
-const publish = (person: Browser, draft: Draft) => act(person, draft, 'post', '/publication', { word: null });
+const publish = (person: Browser, draft: Draft, word: string | null = 'The source follows in print.') =>
+  act(person, draft, 'post', '/publication', { word });
 
 describe('a draft begins', () => {
   it('from a published edition, with its rules and without its dates', async () => {
@@ -204,6 +205,8 @@ describe('a draft in review', () => {
     const draft = await inReview();
     expect(draft.abilities.publish).toBe(false);
     expectStatus(await publish(tamsin, draft), 403);
+    const wordless = expectStatus(await publish(joaquim, draft, null), 422).body;
+    expect(wordless.errors[0]).toMatchObject({ pointer: '/word', detail: 'The draft has 2 warnings.' });
     const { body } = expectStatus(await publish(joaquim, draft), 200);
     expect(body).toMatchObject({ ruleSet: draft.ruleSet, edition: '2030' });
     expectStatus(await tamsin.get(pathOf(draft)), 404);
@@ -228,7 +231,9 @@ describe('a draft in review', () => {
     const failing = await inReview('2030-01-01', { cases: [proof] });
     expect(expectStatus(await publish(joaquim, failing), 422).body).toMatchObject({
       type: '/problems/rule-set-refused',
-      errors: [{ pointer: '/cases/0', detail: 'The case “Nothing is read” does not give what it expects.' }],
+      errors: [
+        { pointer: '/cases/proof', detail: 'The case “Nothing is read” does not give what it expects.' },
+      ],
     });
     const unfinished = await aDraft();
     const head = headOf(unfinished, { effective: { from: '2030-01-01', to: null } });

@@ -1,10 +1,12 @@
 import { and, eq } from 'drizzle-orm';
 import { type DraftDocument, headFields } from '#rules/authoring/document-parts';
-import { caseHolds, runCase } from '#rules/authoring/run-case';
+import { lintEdition } from '#rules/authoring/lint/lint-edition';
+import type { LintRemark } from '#rules/authoring/lint/remark';
 import { hashOf } from '#rules/engine/seal';
 import type { DocumentProblem } from '#rules/rule-sets/problem';
-import { resolveEdition } from '#rules/rule-sets/resolve';
+import { documentName, resolveEdition } from '#rules/rule-sets/resolve';
 import { isLayer, type Layer, parseRuleSet, type RuleSet } from '#rules/rule-sets/schema';
+import { plural } from '#rules/rule-sets/words';
 import { formatDate } from '#shared/format/dates';
 import type { Database } from '../../db/client';
 import { lockDraft } from '../../db/queries/drafts';
@@ -42,7 +44,7 @@ export async function publishDraft(deps: Deps, publishing: Publishing) {
     const head = headFields.parse(document);
     const others = published.filter((each) => each.ruleSetId === draft.ruleSetId && !each.withdrawn);
     const dates = expectDates(head.effective, others);
-    const parsed = await expectSound(tx, { agencyId, document, published });
+    const parsed = await expectSound(tx, { agencyId, document, published, word });
     const id = deps.newId();
     const row = {
       id,
@@ -135,11 +137,12 @@ interface Sounding {
   agencyId: string;
   document: DraftDocument;
   published: readonly EditionRow[];
+  word: string | null;
 }
 
 async function expectSound(
   tx: Database,
-  { agencyId, document, published }: Sounding,
+  { agencyId, document, published, word }: Sounding,
 ): Promise<RuleSet | Layer> {
   const parsed = parseRuleSet(document);
   if (!parsed.ok) throw unsound(parsed.problems);
@@ -147,18 +150,12 @@ async function expectSound(
   const base = isLayer(ruleSet) ? await baseOf(tx, { agencyId, layer: ruleSet, published }) : ruleSet;
   const resolution = resolveEdition(base, isLayer(ruleSet) ? [ruleSet] : []);
   if (!resolution.ok) throw unsound(resolution.problems);
-  const failing = resolution.edition.cases.flatMap((each, index) =>
-    caseHolds(runCase(each, resolution.edition)) ? [] : [{ each, index }],
-  );
-  if (failing.length > 0) {
-    throw unsound(
-      failing.map(({ each, index }) => ({
-        pointer: `/cases/${index}`,
-        detail: `The case “${each.title}” does not give what it expects.`,
-        fix: 'Correct the rule or the case.',
-      })),
-    );
+  const remarks = lintEdition(resolution.edition, { own: documentName(ruleSet) });
+  const errors = remarks.filter(({ level }) => level === 'error');
+  if (errors.length > 0) {
+    throw unsound(errors.map(({ part, detail, fix }) => ({ pointer: `/${part}`, detail, fix })));
   }
+  if (remarks.length > 0 && !word) throw unexplained(remarks);
   return ruleSet;
 }
 
@@ -172,6 +169,21 @@ async function baseOf(
   if (base !== null) return base;
   const detail = `Its base, edition ${edition} of ${id}, is not published.`;
   throw unsound([{ pointer: '/layerOf', detail, fix: 'Publish the base first.' }]);
+}
+
+/** A warning does not bar publishing, but whoever publishes with it says why. */
+function unexplained(warnings: readonly LintRemark[]): Problem {
+  const count = plural(warnings.length, 'warning');
+  const detail = `The draft has ${count}.`;
+  const fix = 'Clear them, or write a word on why it is published with them.';
+  return new Problem('invalid-input', {
+    detail,
+    fix,
+    errors: [
+      { pointer: '/word', detail, fix },
+      ...warnings.map((each) => ({ pointer: `/${each.part}`, detail: each.detail, fix: each.fix })),
+    ],
+  });
 }
 
 function unsound(problems: DocumentProblem[]): Problem {
