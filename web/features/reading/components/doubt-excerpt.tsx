@@ -4,7 +4,7 @@ import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { useSheetRows } from '../hooks/use-sheet-rows';
 import { parseAddress } from '../lib/cell-address';
 import type { ReadingDoubt } from '../lib/doubt-answers';
-import { mergedCells } from '../lib/merged-cells';
+import { mergesInSight, mergesOf } from '../lib/merges';
 import { ColumnHeads, numbersBetween, SheetRow } from './sheet-rows';
 
 const rowsBefore = 3;
@@ -24,14 +24,10 @@ export function DoubtExcerpt({ params, doubt }: { params: RevisionParams; doubt:
   if (!sheet) return rows.error ? null : <LoadingBars what="Opening the rows around it." rows={2} />;
   const fromColumn = Math.max(place.column - columnsBefore, 1);
   const toColumn = Math.max(Math.min(place.column + columnsAfter, sheet.columnCount), place.column);
-  const drawing = {
-    ...rows,
-    sheet,
-    merged: mergedCells([], sheet),
-    letters,
-    selected: doubt.cell,
-    idPrefix,
-  };
+  const merges = mergesInSight(mergesOf(sheet), {
+    from: { row: first, column: fromColumn },
+    to: { row: last, column: toColumn },
+  });
   return (
     <div className="sideways">
       <table className="sheet sheet-excerpt" aria-label={`Sheet ${doubt.sheet} around ${doubt.cell}`}>
@@ -45,8 +41,13 @@ export function DoubtExcerpt({ params, doubt }: { params: RevisionParams; doubt:
               row={row}
               fromColumn={fromColumn}
               toColumn={toColumn}
-              lastRow={last}
-              drawing={drawing}
+              content={rows.rowAt(row)}
+              merges={merges.get(row)}
+              isHidden={sheet.hiddenRows.includes(row)}
+              letters={letters}
+              cursorColumn={row === place.row ? place.column : null}
+              block={null}
+              idPrefix={idPrefix}
             />
           ))}
         </tbody>

@@ -19,7 +19,7 @@ import { usePageTitle } from '../../../lib/use-page-title';
 import { useReading } from '../api/get-reading';
 import { useKeepAnswers } from '../api/keep-answers';
 import { useKeepAttributes } from '../api/keep-attributes';
-import { useCellCursor } from '../hooks/use-cell-cursor';
+import { useChosenCells } from '../hooks/use-chosen-cells';
 import { useReadingKeys } from '../hooks/use-reading-keys';
 import { doubtsLeftWords, type ReadingDoubt } from '../lib/doubt-answers';
 import { firstPlace } from '../lib/first-place';
@@ -39,7 +39,8 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   const revision = useRevision(params);
   usePageTitle(`Reading of ${revision.mixDesignation} revision ${revision.number}`);
   usePrintedRevision(revision);
-  const [cursor, setCursor] = useCellCursor(firstPlace(reading));
+  const chosen = useChosenCells(params, firstPlace(reading));
+  const { cursor, setCursor } = chosen;
   // At hand before anything is changed, so that the page can say which outcomes a change moved.
   const check = useQuery({ ...checkQuery(params), enabled: revision.hasCheck });
   const answers = useKeepAnswers(params);
@@ -97,7 +98,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       {revision.abilities.replaceWorkbook ? <ReplaceWorkbook revision={revision} /> : null}
     </>
   );
-  const sheet = <SheetView params={params} reading={reading} cursor={cursor} onCursor={setCursor} />;
+  const sheet = <SheetView params={params} reading={reading} chosen={chosen} onOpen={() => undefined} />;
   const foot = (
     <RunningFoot
       texts={[

@@ -1,83 +1,87 @@
-import { type KeyboardEvent, useEffect, useId, useMemo, useRef, useState } from 'react';
+import { useId, useMemo, useRef, useState } from 'react';
 import { LoadingBars } from '../../../components/ui/loading-bars';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { asProblem } from '../../../lib/problem';
+import { useCursorInSight, useRowPx } from '../hooks/use-cursor-in-sight';
+import { useGridKeys } from '../hooks/use-grid-keys';
+import { useGridPointer } from '../hooks/use-grid-pointer';
 import type { SheetRows } from '../hooks/use-sheet-rows';
-import { addressOf, parseAddress } from '../lib/cell-address';
+import { type CellRange, parseAddress } from '../lib/cell-address';
 import { columnWidths } from '../lib/column-widths';
+import { type ColumnWindow, columnWindow } from '../lib/column-window';
 import type { Place } from '../lib/first-place';
-import { mergedCells } from '../lib/merged-cells';
-import { isCursorKey, moveCursor } from '../lib/move-cursor';
+import { mergesInSight, mergesOf } from '../lib/merges';
 import { type RowWindow, rowWindow } from '../lib/row-window';
+import { rowNumberRem, rowRem } from '../lib/sheet-measures';
 import { ColumnHeads, numbersBetween, SheetRow } from './sheet-rows';
 
-const rowRem = 26 / 14;
-const rowNumberRem = 36 / 14;
 const fewestRows = 12;
 
-/** A sheet in place with its own letters and numbers. Only the rows in sight are drawn, so a long sheet stays fast. */
+export interface GridActs {
+  onCursor: (place: Place) => void;
+  /** The far end of a block that begins at the cursor; null for none. */
+  onReach: (cell: string | null) => void;
+  /** Asks what the cell or block at the cursor is. */
+  onOpen: () => void;
+}
+
+/** A sheet in place with its own letters and numbers. Only what is in sight is drawn, so a long sheet stays fast. */
 export function SheetGridView({
   rows,
   window: shown,
   onWindow,
   cursor,
-  onCursor,
+  reach,
+  block,
   letters,
+  acts,
 }: {
   rows: SheetRows;
   window: RowWindow;
   onWindow: (window: RowWindow) => void;
   cursor: Place;
-  onCursor: (place: Place) => void;
+  reach: string | null;
+  /** What is chosen beyond the cell at the cursor. */
+  block: CellRange | null;
   letters: ReadonlyMap<string, string>;
+  acts: GridActs;
 }) {
   const scroller = useRef<HTMLDivElement>(null);
   const idPrefix = `${useId()}-`;
   const { sheet } = rows;
   const rowCount = Math.max(sheet?.rowCount ?? 0, fewestRows);
-  const widths = columnWidths(sheet ?? { columnCount: 0, columnWidths: {} });
+  const widths = useMemo(() => columnWidths(sheet ?? { columnCount: 0, columnWidths: {} }), [sheet]);
   const columnCount = widths.length;
-  const merged = useMemo(
-    () =>
-      mergedCells(sheet?.merges ?? [], {
-        rowCount: sheet?.rowCount ?? 0,
-        columnCount: sheet?.columnCount ?? 0,
-      }),
-    [sheet],
-  );
+  const merges = useMemo(() => (sheet ? mergesOf(sheet) : []), [sheet]);
+  const hiddenRows = useMemo(() => new Set(sheet?.hiddenRows), [sheet]);
   const rowPx = useRowPx();
-  useCursorInSight(scroller, cursor, rowPx);
+  const [seen, setSeen] = useState<ColumnWindow | null>(null);
+  useCursorInSight({ scroller, cursor, reach, rowPx, widths });
+  const size = { rowCount, columnCount };
+  const onKeyDown = useGridKeys({ cursor, reach, size, merges, acts });
+  const pointer = useGridPointer(cursor, acts);
   if (!sheet) return <WithoutSheet rows={rows} name={cursor.sheet} />;
 
   const last = Math.min(shown.last, rowCount);
   const first = Math.min(shown.first, last);
-  const onKeyDown = (event: KeyboardEvent) => {
-    if (!isCursorKey(event.key) || event.altKey || event.ctrlKey || event.metaKey) return;
-    event.preventDefault();
-    const from = parseAddress(cursor.cell) ?? { row: 1, column: 1 };
-    const next = moveCursor({ from, key: event.key, sheet: { rowCount, columnCount }, merged });
-    onCursor({ sheet: cursor.sheet, cell: addressOf(next) });
+  const columns = seen ?? columnWindow({ widthsPx: widths, scrollPx: 0, sightPx: 1600 });
+  const inSight = mergesInSight(merges, {
+    from: { row: first, column: columns.first },
+    to: { row: last, column: columns.last },
+  });
+  const at = parseAddress(cursor.cell);
+  const onScroll = ({ currentTarget }: React.UIEvent<HTMLElement>) => {
+    const { scrollTop, scrollLeft, clientHeight, clientWidth } = currentTarget;
+    onWindow(rowWindow({ scrollPx: scrollTop, heightPx: clientHeight, rowPx, rowCount }));
+    const next = columnWindow({ widthsPx: widths, scrollPx: scrollLeft, sightPx: clientWidth });
+    setSeen((now) => (now?.first === next.first && now.last === next.last ? now : next));
   };
-  const drawing = { ...rows, sheet, merged, letters, selected: cursor.cell, idPrefix };
   return (
     <>
       <p className="print-only small py-1">
         Printed: rows {first} to {last} of the {rowCount} of sheet {sheet.name}.
       </p>
-      <div
-        ref={scroller}
-        className="sheet-scroll"
-        onScroll={({ currentTarget }) =>
-          onWindow(
-            rowWindow({
-              scrollPx: currentTarget.scrollTop,
-              heightPx: currentTarget.clientHeight,
-              rowPx,
-              rowCount,
-            }),
-          )
-        }
-      >
+      <div ref={scroller} className="sheet-scroll" onScroll={onScroll}>
         <table
           className="sheet sheet-whole"
           // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the sheet is a grid whose cursor the arrow keys move.
@@ -85,10 +89,12 @@ export function SheetGridView({
           aria-label={`Sheet ${sheet.name}`}
           aria-rowcount={rowCount + 1}
           aria-colcount={columnCount + 1}
-          aria-activedescendant={`${idPrefix}${cursor.cell}`}
+          aria-multiselectable="true"
+          aria-activedescendant={`${idPrefix}${reach ?? cursor.cell}`}
           tabIndex={0}
           onKeyDown={onKeyDown}
-          style={{ minWidth: `${rowNumberRem + widths.reduce((sum, width) => sum + width, 0) / 14}rem` }}
+          {...pointer}
+          style={{ width: `${rowNumberRem + widths.reduce((sum, width) => sum + width, 0) / 14}rem` }}
         >
           <colgroup>
             <col style={{ width: `${rowNumberRem}rem` }} />
@@ -98,7 +104,7 @@ export function SheetGridView({
             ))}
           </colgroup>
           <thead>
-            <ColumnHeads sheet={sheet} to={columnCount} />
+            <ColumnHeads sheet={sheet} from={columns.first} to={columns.last} isGrid />
           </thead>
           <tbody>
             <Spacer rows={first - 1} />
@@ -106,10 +112,16 @@ export function SheetGridView({
               <SheetRow
                 key={row}
                 row={row}
-                toColumn={columnCount}
-                lastRow={last}
-                drawing={drawing}
-                onCell={(cell) => onCursor({ sheet: cursor.sheet, cell })}
+                fromColumn={columns.first}
+                toColumn={columns.last}
+                content={rows.rowAt(row)}
+                merges={inSight.get(row)}
+                isHidden={hiddenRows.has(row)}
+                letters={letters}
+                cursorColumn={at?.row === row ? at.column : null}
+                block={block && row >= block.from.row && row <= block.to.row ? block : null}
+                idPrefix={idPrefix}
+                isGrid
               />
             ))}
             <Spacer rows={rowCount - last} />
@@ -135,34 +147,4 @@ function WithoutSheet({ rows, name }: { rows: SheetRows; name: string }) {
     return <ProblemNotice problem={asProblem(rows.error)} unaffected="What was read of it still stands." />;
   }
   return <LoadingBars what={`Opening sheet ${name}.`} rows={8} />;
-}
-
-function useRowPx(): number {
-  const [rowPx, setRowPx] = useState(26);
-  useEffect(() => {
-    const rootPx = Number.parseFloat(getComputedStyle(document.documentElement).fontSize);
-    if (Number.isFinite(rootPx)) setRowPx(rowRem * rootPx);
-  }, []);
-  return rowPx;
-}
-
-/** The cursor may be sent to a row that is not drawn, so the scroll position is reckoned, not looked up. */
-function useCursorInSight(
-  scroller: React.RefObject<HTMLDivElement | null>,
-  cursor: Place,
-  rowPx: number,
-): void {
-  useEffect(() => {
-    const element = scroller.current;
-    const place = parseAddress(cursor.cell);
-    if (!element || !place) return;
-    const top = (place.row - 1) * rowPx;
-    const head = rowPx;
-    if (top < element.scrollTop) element.scrollTop = Math.max(top - rowPx, 0);
-    const bottom = top + 2 * rowPx + head;
-    if (bottom > element.scrollTop + element.clientHeight) element.scrollTop = bottom - element.clientHeight;
-    element
-      .querySelector('[aria-selected="true"]')
-      ?.scrollIntoView({ block: 'nearest', inline: 'nearest', behavior: 'instant' });
-  }, [scroller, cursor, rowPx]);
 }

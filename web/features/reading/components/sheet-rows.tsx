@@ -1,28 +1,35 @@
+import { memo } from 'react';
 import type { Cell, SheetGrid } from '#rules/reading/cell-grid';
 import type { CellUse } from '#rules/reading/reading-result';
-import { addressOf, columnLetters } from '../lib/cell-address';
-import type { MergedCells } from '../lib/merged-cells';
-
-export interface SheetDrawing {
-  sheet: SheetGrid;
-  cells: ReadonlyMap<string, Cell>;
-  uses: ReadonlyMap<string, CellUse>;
-  merged: MergedCells;
-  /** Letters of doubts by cell. */
-  letters: ReadonlyMap<string, string>;
-  selected: string;
-  /** Prefix of the cells' ids, so that the grid can name the one at the cursor. */
-  idPrefix: string;
-}
+import type { RowContent } from '../hooks/use-sheet-rows';
+import { addressOf, type CellRange, columnLetters } from '../lib/cell-address';
+import { isInBlock } from '../lib/cell-block';
+import type { DrawnMerge } from '../lib/merges';
 
 /** Column letters of the sheet itself. */
-export function ColumnHeads({ sheet, from = 1, to }: { sheet: SheetGrid; from?: number; to: number }) {
+export function ColumnHeads({
+  sheet,
+  from = 1,
+  to,
+  isGrid = false,
+}: {
+  sheet: SheetGrid;
+  from?: number;
+  to: number;
+  isGrid?: boolean;
+}) {
   const hidden = new Set(sheet.hiddenColumns);
   return (
     <tr>
       <td className="row-number" />
+      {isGrid && from > 1 ? <td colSpan={from - 1} /> : null}
       {numbersBetween(from, to).map((column) => (
-        <th key={column} scope="col" className={hidden.has(column) ? 'is-hidden' : undefined}>
+        <th
+          key={column}
+          scope="col"
+          aria-colindex={column + 1}
+          className={hidden.has(column) ? 'is-hidden' : undefined}
+        >
           {columnLetters(column)}
           {hidden.has(column) ? <span className="hidden-text"> hidden</span> : null}
         </th>
@@ -31,109 +38,121 @@ export function ColumnHeads({ sheet, from = 1, to }: { sheet: SheetGrid; from?: 
   );
 }
 
-export function SheetRow({
-  row,
-  fromColumn = 1,
-  toColumn,
-  lastRow,
-  drawing,
-  onCell,
-}: {
+interface RowDrawing {
   row: number;
   fromColumn?: number;
   toColumn: number;
-  /** A merge is drawn no further than the rows that are drawn. */
-  lastRow: number;
-  drawing: SheetDrawing;
-  onCell?: (address: string) => void;
-}) {
-  const isHidden = drawing.sheet.hiddenRows.includes(row);
+  content: RowContent | undefined;
+  merges: ReadonlyMap<number, DrawnMerge | null> | undefined;
+  isHidden: boolean;
+  /** Letters of doubts by cell. */
+  letters: ReadonlyMap<string, string>;
+  /** Column of the cursor, where it stands in this row. */
+  cursorColumn: number | null;
+  /** The chosen block, where it reaches into this row. */
+  block: CellRange | null;
+  /** Prefix of the cells' ids, so that the grid can name the one at the cursor. */
+  idPrefix: string;
+  /** True in the grid that a cursor moves in; an excerpt is a plain table. */
+  isGrid?: boolean;
+}
+
+/** Drawn again only when something of its own has changed: a moving cursor draws two rows, not the sheet. */
+export const SheetRow = memo(function SheetRow(drawing: RowDrawing) {
+  const { row, fromColumn = 1, toColumn, merges, isHidden, isGrid = false } = drawing;
   return (
     <tr aria-rowindex={row + 1}>
       <th scope="row" className={isHidden ? 'row-number is-hidden' : 'row-number'}>
         {row}
         {isHidden ? <span className="hidden-text"> hidden</span> : null}
       </th>
-      {numbersBetween(fromColumn, toColumn).map((column) => {
-        const address = addressOf({ row, column });
-        if (drawing.merged.covered.has(address)) return null;
-        return (
-          <SheetCell
-            key={column}
-            address={address}
-            drawing={drawing}
-            rowsLeft={lastRow - row + 1}
-            columnsLeft={toColumn - column + 1}
-            {...(onCell ? { onCell } : {})}
-          />
-        );
-      })}
+      {isGrid && fromColumn > 1 ? <td colSpan={fromColumn - 1} /> : null}
+      {numbersBetween(fromColumn, toColumn).map((column) =>
+        merges?.get(column) === null ? null : <SheetCell key={column} column={column} {...drawing} />,
+      )}
     </tr>
   );
-}
+});
 
-function SheetCell({
-  address,
-  drawing,
-  rowsLeft,
-  columnsLeft,
-  onCell,
-}: {
-  address: string;
-  drawing: SheetDrawing;
-  rowsLeft: number;
-  columnsLeft: number;
-  onCell?: (address: string) => void;
-}) {
-  const cell = drawing.cells.get(address);
-  const span = drawing.merged.spans.get(address);
+function SheetCell(drawing: RowDrawing & { column: number }) {
+  const { row, column, content, merges, idPrefix, isGrid = false } = drawing;
+  const span = merges?.get(column);
+  const address = addressOf({ row, column });
+  // A merge that begins out of sight is drawn empty: what it says stands where it begins.
+  const isOwn = !span || span.shows === address;
+  const cell = isOwn ? content?.cells.get(column) : undefined;
   const letter = drawing.letters.get(address);
-  const isSelected = drawing.selected === address;
+  const isSelected = drawing.cursorColumn === column;
+  const isChosen = drawing.block !== null && isInBlock(drawing.block, { row, column });
   return (
     <td
-      id={`${drawing.idPrefix}${address}`}
-      className={classOf({
-        cell,
-        use: drawing.uses.get(address),
-        letter,
-        isSelected,
-        runsOn: runsOn(address, drawing),
-      })}
-      {...(span
-        ? { rowSpan: Math.min(span.rows, rowsLeft), colSpan: Math.min(span.columns, columnsLeft) }
+      id={`${idPrefix}${address}`}
+      className={classOf({ ...drawing, cell, letter, isSelected, isChosen })}
+      {...(span ? { rowSpan: span.rows, colSpan: span.columns } : {})}
+      {...(isGrid
+        ? {
+            role: 'gridcell',
+            'aria-selected': isSelected || isChosen,
+            'aria-colindex': column + 1,
+            'data-cell': span?.shows ?? address,
+          }
         : {})}
-      {...(onCell ? { role: 'gridcell', 'aria-selected': isSelected, onClick: () => onCell(address) } : {})}
     >
       {letter ? <span className="tie tie-doubt">{letter}</span> : null}
       <span className="cell-text">{cell?.text ?? ''}</span>
+      {cell?.comment ? <span className="hidden-text">, with a note</span> : null}
     </td>
   );
 }
 
-function classOf(options: {
+interface CellLook extends RowDrawing {
+  column: number;
   cell: Cell | undefined;
-  use: CellUse | undefined;
   letter: string | undefined;
   isSelected: boolean;
-  runsOn: boolean;
-}): string | undefined {
-  const { cell, use, letter, isSelected, runsOn } = options;
+  isChosen: boolean;
+}
+
+function classOf(look: CellLook): string | undefined {
+  const { cell, letter, isSelected, isChosen, content, column } = look;
   const classes = [
-    cell?.kind === 'number' || cell?.kind === 'date' ? 'number' : '',
-    letter ? 'use-doubt' : classOfUse(use),
+    cell ? classOfKind[cell.kind] : '',
+    letter ? 'use-doubt' : classOfUse(content?.uses.get(column)),
     cell?.bold ? 'is-bold' : '',
+    cell?.comment ? 'has-note' : '',
     isSelected ? 'is-selected' : '',
-    runsOn ? 'runs-on' : '',
+    isChosen ? `in-block ${edgesOf(look)}` : '',
+    runsOn(look) ? 'runs-on' : '',
   ].filter((name) => name !== '');
   return classes.length > 0 ? classes.join(' ') : undefined;
 }
 
+/** Where each kind stands in its cell, as spreadsheets set it where nobody chose. */
+const classOfKind: Record<Cell['kind'], string> = {
+  number: 'number',
+  date: 'number',
+  text: '',
+  boolean: 'centred',
+  error: 'centred',
+  'formula-without-result': '',
+};
+
+function edgesOf({ block, row, column, merges }: CellLook): string {
+  if (block === null) return '';
+  const span = merges?.get(column);
+  const last = { row: row + (span?.rows ?? 1) - 1, column: column + (span?.columns ?? 1) - 1 };
+  return [
+    row === block.from.row ? 'edge-top' : '',
+    last.row >= block.to.row ? 'edge-bottom' : '',
+    column === block.from.column ? 'edge-left' : '',
+    last.column >= block.to.column ? 'edge-right' : '',
+  ].join(' ');
+}
+
 /** As in any sheet, a text runs on over empty cells to its right. */
-function runsOn(address: string, { cells, merged }: SheetDrawing): boolean {
-  const cell = cells.get(address);
-  if (cell?.kind !== 'text' || merged.spans.has(address)) return false;
-  const next = addressOf({ row: cell.row, column: cell.column + 1 });
-  return !cells.has(next) && !merged.covered.has(next);
+function runsOn({ cell, content, column, merges }: CellLook): boolean {
+  if (cell?.kind !== 'text' || merges?.has(column)) return false;
+  return !content?.cells.has(column + 1) && !merges?.has(column + 1);
 }
 
 function classOfUse(use: CellUse | undefined): string {

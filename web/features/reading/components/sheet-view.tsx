@@ -1,12 +1,14 @@
 import { useMemo, useState } from 'react';
 import type { ReadingView } from '#shared/contracts/readings';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
-import { useSheetRows } from '../hooks/use-sheet-rows';
+import type { ChosenCells } from '../hooks/use-chosen-cells';
+import { contentAt, useSheetRows } from '../hooks/use-sheet-rows';
 import { parseAddress } from '../lib/cell-address';
 import type { Place } from '../lib/first-place';
 import { type RowWindow, rowWindow } from '../lib/row-window';
 import { FormulaLine } from './formula-line';
 import { SheetGridView } from './sheet-grid';
+import { SheetKey } from './sheet-key';
 import { SheetTabs } from './sheet-tabs';
 
 const rowsBefore = 20;
@@ -16,14 +18,16 @@ const rowsShown = 60;
 export function SheetView({
   params,
   reading,
-  cursor,
-  onCursor,
+  chosen,
+  onOpen,
 }: {
   params: RevisionParams;
   reading: ReadingView;
-  cursor: Place;
-  onCursor: (place: Place) => void;
+  chosen: ChosenCells;
+  /** Asks what the chosen cells are. */
+  onOpen: () => void;
 }) {
+  const { cursor, reach, block, setCursor, setReach } = chosen;
   const [scrolled, setScrolled] = useState<{ sheet: string; window: RowWindow } | null>(null);
   const window = scrolled?.sheet === cursor.sheet ? scrolled.window : windowAround(cursor);
   const rows = useSheetRows(params, cursor.sheet, window);
@@ -36,33 +40,35 @@ export function SheetView({
       ),
     [reading.doubts, cursor.sheet],
   );
+  const onWindow = (next: RowWindow) =>
+    setScrolled((now) =>
+      now?.sheet === cursor.sheet && now.window.first === next.first && now.window.last === next.last
+        ? now
+        : { sheet: cursor.sheet, window: next },
+    );
   return (
     <section className="sheet-view" aria-label="The workbook as uploaded">
       <FormulaLine
         cursor={cursor}
-        onCursor={onCursor}
-        cell={rows.cells.get(cursor.cell)}
-        use={rows.uses.get(cursor.cell)}
+        onCursor={setCursor}
+        block={reach === null ? null : block}
+        content={contentAt(rows, cursor.cell)}
         reading={reading}
+        onOpen={reading.abilities.answer ? onOpen : null}
       />
       <SheetGridView
         key={cursor.sheet}
         rows={rows}
         window={window}
-        onWindow={(next) => setScrolled({ sheet: cursor.sheet, window: next })}
+        onWindow={onWindow}
         cursor={cursor}
-        onCursor={onCursor}
+        reach={reach}
+        block={reach === null ? null : block}
         letters={letters}
+        acts={{ onCursor: setCursor, onReach: setReach, onOpen }}
       />
       <SheetTabs params={params} sheets={reading.sheets} current={cursor.sheet} />
-      <p className="sheet-key">
-        <span className="key-read">read, with certainty</span>
-        <span className="key-doubt">read, in doubt: answer at its letter</span>
-        <span className="key-unused">not used</span>
-        <span className="key-words">
-          Choose any cell to see what it was taken for. Your file is never changed.
-        </span>
-      </p>
+      <SheetKey reading={reading} sheet={cursor.sheet} grid={rows.sheet} />
     </section>
   );
 }

@@ -1,5 +1,5 @@
-import { addressOf, type CellPlace, parseAddress } from './cell-address';
-import type { MergedCells } from './merged-cells';
+import type { CellPlace, CellRange } from './cell-address';
+import { wholeCell } from './merges';
 
 export type CursorKey =
   | 'ArrowUp'
@@ -26,37 +26,30 @@ export function isCursorKey(key: string): key is CursorKey {
   return key in steps || key === 'Home' || key === 'End';
 }
 
-/** Where the cell cursor stands after a key: inside the sheet, past the whole of a merged cell, on the cell that shows. */
-export function moveCursor(options: {
+interface Step {
   from: CellPlace;
   key: CursorKey;
   sheet: { rowCount: number; columnCount: number };
-  merged: MergedCells;
-}): CellPlace {
-  const { from, key, sheet, merged } = options;
-  const wanted = target(from, key, merged.spans.get(addressOf(from)), sheet.columnCount);
-  const inside = {
-    row: clamp(wanted.row, sheet.rowCount),
-    column: clamp(wanted.column, sheet.columnCount),
-  };
-  const shown = merged.covered.get(addressOf(inside));
-  return (shown && parseAddress(shown)) || inside;
 }
 
-function target(
-  from: CellPlace,
-  key: CursorKey,
-  span: { rows: number; columns: number } | undefined,
-  columnCount: number,
-): CellPlace {
-  if (key === 'Home') return { row: from.row, column: 1 };
-  if (key === 'End') return { row: from.row, column: columnCount };
+/** Where the cell cursor stands after a key: inside the sheet, past the whole of a merged cell, on the cell that shows. */
+export function moveCursor({ merges, ...step }: Step & { merges: readonly CellRange[] }): CellPlace {
+  return wholeCell(merges, target(step, wholeCell(merges, step.from))).from;
+}
+
+/** Where the far end of a block stands after a key; what it covers is the block's to say. */
+export function moveReach(step: Step): CellPlace {
+  return target(step, { from: step.from, to: step.from });
+}
+
+function target({ key, sheet }: Step, whole: CellRange): CellPlace {
+  if (key === 'Home') return { row: whole.from.row, column: 1 };
+  if (key === 'End') return { row: whole.from.row, column: Math.max(sheet.columnCount, 1) };
   const step = steps[key];
-  const past = {
-    row: step.row > 0 ? (span?.rows ?? 1) - 1 : 0,
-    column: step.column > 0 ? (span?.columns ?? 1) - 1 : 0,
+  return {
+    row: clamp((step.row > 0 ? whole.to : whole.from).row + step.row, sheet.rowCount),
+    column: clamp((step.column > 0 ? whole.to : whole.from).column + step.column, sheet.columnCount),
   };
-  return { row: from.row + step.row + past.row, column: from.column + step.column + past.column };
 }
 
 function clamp(value: number, last: number): number {
