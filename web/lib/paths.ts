@@ -39,6 +39,8 @@ export const paths = {
   people: '/people',
   settings: '/settings',
   laboratories: '/laboratories',
+  mappings: '/mappings',
+  mapping: (mappingId: string) => `/mappings/${mappingId}`,
   caughtMail: '/caught-mail',
   oneCaughtMail: (mailId: string) => `/caught-mail/${mailId}`,
 } as const;

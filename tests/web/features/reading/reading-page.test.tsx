@@ -1,6 +1,8 @@
 // @vitest-environment happy-dom
 import { fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { describe, expect, it, vi } from 'vitest';
+import type { z } from 'zod';
+import type { previewSchema } from '#shared/contracts/corrections';
 import { aCheckView } from '#tests/builders/a-check-view';
 import { aFinding } from '#tests/builders/a-finding';
 import { aReadingView } from '#tests/builders/a-reading-view';
@@ -47,6 +49,26 @@ const aSheet = {
   ],
 };
 
+const aPreview: z.input<typeof previewSchema> = {
+  counts: { added: 0, removed: 0, changed: 1 },
+  readings: [],
+  attributes: [],
+  doubts: { before: 2, after: 1, raised: [] },
+  findings: [
+    {
+      key: '412.03-vma~mix',
+      clause: '412.03(b)',
+      title: 'Voids in the mineral aggregate',
+      severity: 'required',
+      before: { outcome: 'undecided', borderline: false, sentence: 'Voids are in doubt.' },
+      after: { outcome: 'pass', borderline: false, sentence: 'Voids are 14.3 %, at least 14.0.' },
+    },
+  ],
+  summary: { before: aCheckView().summary, after: aCheckView().summary },
+  learned: [],
+  notLearned: [],
+};
+
 async function open(answers: Record<string, unknown> = {}, reading = aReadingView()) {
   const sent = stubServer(
     Object.assign(answers, {
@@ -65,6 +87,11 @@ async function open(answers: Record<string, unknown> = {}, reading = aReadingVie
   return { ...page, sent };
 }
 
+/** Proposes the choice that a number names for the doubt at the cursor, and keeps it. */
+const answer = (key: string) => {
+  press(key);
+  press('Enter');
+};
 const press = (key: string) => fireEvent.keyDown(document.activeElement ?? document.body, { key });
 const selected = () => screen.getByRole('gridcell', { selected: true }).textContent;
 const kept = (sent: Awaited<ReturnType<typeof open>>['sent']) =>
@@ -77,10 +104,37 @@ describe('the reading page', () => {
     stop();
   });
 
-  it('answers the doubt at the cursor with a number key, for the version that was seen', async () => {
+  it('shows what an answer would change before it is kept', async () => {
+    const { sent, stop } = await open({ [`POST ${base}/reading/preview`]: aPreview });
+    press('2');
+    expect(await screen.findByText('412.03(b)')).toBeTruthy();
+    expect(screen.getByText('One reading changes.')).toBeTruthy();
+    expect(sent.filter(({ method }) => method === 'POST').map(({ body }) => body)).toEqual([
+      {
+        answers: [{ sheet: 'Trials', cell: 'C2', text: '03/04/2026', answer: '2026-03-04' }],
+        corrections: [],
+        typed: [],
+        takeBack: [],
+      },
+    ]);
+    expect(kept(sent)).toEqual([]);
+    stop();
+  });
+
+  it('leaves a proposed answer with Escape', async () => {
+    const { sent, stop } = await open({ [`POST ${base}/reading/preview`]: aPreview });
+    press('2');
+    await screen.findByRole('button', { name: 'Keep the answer' });
+    press('Escape');
+    await waitFor(() => expect(screen.queryByRole('button', { name: 'Keep the answer' })).toBeNull());
+    expect(kept(sent)).toEqual([]);
+    stop();
+  });
+
+  it('keeps the answer that a number key proposed with Enter, for the version that was seen', async () => {
     const answered = aReadingView({ version: 5 });
     const { sent, stop } = await open({ [`PUT ${base}/answers`]: answered });
-    press('2');
+    answer('2');
     await waitFor(() =>
       expect(kept(sent)).toEqual([
         { answers: [{ sheet: 'Trials', cell: 'C2', text: '03/04/2026', answer: '2026-03-04' }] },
@@ -99,7 +153,7 @@ describe('the reading page', () => {
     const { client, stop } = await open(answers);
     await waitFor(() => expect(client.getQueryData(checkQuery(params).queryKey)).toBeDefined());
     answers[`GET ${base}/check`] = aCheckView({ findings: [aFinding({ outcome: 'fail' })] });
-    press('2');
+    answer('2');
     await waitFor(() => expect(said).toContain('Checked again. Changed: one outcome, 412.03(b) fail.'));
     stop();
   });
@@ -107,20 +161,18 @@ describe('the reading page', () => {
   it('shows the answer at once, before the server has checked again', async () => {
     const { stop } = await open();
     vi.stubGlobal('fetch', () => new Promise(() => undefined));
-    press('1');
-    await waitFor(() =>
-      expect(screen.getByRole<HTMLInputElement>('radio', { name: '3 April 2026' }).checked).toBe(true),
-    );
+    answer('1');
+    await waitFor(() => expect(screen.getByText('2 cells, 1 answered')).toBeTruthy());
     stop();
   });
 
   it('keeps showing an answer that waits for the one before it', async () => {
     const { stop } = await open();
-    const answer = vi.fn<() => void>();
+    const release = vi.fn<() => void>();
     vi.stubGlobal('fetch', (_input: string, init?: RequestInit) =>
       init?.method === 'PUT'
         ? new Promise<Response>((resolve) => {
-            answer.mockImplementationOnce(() =>
+            release.mockImplementationOnce(() =>
               resolve(
                 new Response(JSON.stringify(aReadingView({ version: 5 })), {
                   headers: { 'Content-Type': 'application/json' },
@@ -130,27 +182,46 @@ describe('the reading page', () => {
           })
         : new Promise(() => undefined),
     );
-    press('1');
-    press('j');
-    press('1');
-    const second = () => screen.getByRole<HTMLInputElement>('radio', { name: '4721.5 g' });
-    await waitFor(() => expect(second().checked).toBe(true));
-    answer();
+    answer('1');
+    answer('1');
+    await waitFor(() => expect(screen.getByText('2 cells, 2 answered')).toBeTruthy());
+    release();
     await new Promise((resolve) => setTimeout(resolve, 20));
-    expect(second().checked).toBe(true);
+    expect(screen.getByRole<HTMLInputElement>('radio', { name: '4721.5 g' }).checked).toBe(true);
     stop();
   });
 
-  it('stays at the doubt that was answered until J goes on', async () => {
+  it('goes on to the next doubt without an answer once one is kept', async () => {
     const { stop } = await open();
     vi.stubGlobal('fetch', () => new Promise(() => undefined));
     press('1');
-    await waitFor(() =>
-      expect(screen.getByRole<HTMLInputElement>('radio', { name: '3 April 2026' }).checked).toBe(true),
-    );
     expect(selected()).toContain('03/04/2026');
-    press('j');
-    expect(selected()).toContain('4721,5');
+    press('Enter');
+    await waitFor(() => expect(selected()).toContain('4721,5'));
+    stop();
+  });
+
+  it('takes a kept answer back with U and gives it again with R', async () => {
+    const answered = (answer: string | null, version: number) => {
+      const [first, ...others] = aReadingView().doubts;
+      return aReadingView({ version, doubts: first ? [{ ...first, answer }, ...others] : others });
+    };
+    const answers: Record<string, unknown> = { [`PUT ${base}/answers`]: answered('2026-03-04', 5) };
+    const { sent, stop } = await open(answers);
+    answer('2');
+    await screen.findByRole('button', { name: 'Undo the answer at Trials C2' });
+    answers[`PUT ${base}/answers`] = answered(null, 6);
+    press('u');
+    await screen.findByRole('button', { name: 'Do the answer at Trials C2 again' });
+    answers[`PUT ${base}/answers`] = answered('2026-03-04', 7);
+    press('r');
+    await screen.findByRole('button', { name: 'Undo the answer at Trials C2' });
+    const given = { sheet: 'Trials', cell: 'C2', text: '03/04/2026' };
+    expect(kept(sent)).toEqual([
+      { answers: [{ ...given, answer: '2026-03-04' }] },
+      { answers: [{ ...given, answer: null }] },
+      { answers: [{ ...given, answer: '2026-03-04' }] },
+    ]);
     stop();
   });
 
@@ -158,7 +229,7 @@ describe('the reading page', () => {
     const { sent, stop } = await open({ [`PUT ${base}/answers`]: aReadingView({ version: 5 }) });
     press('j');
     expect(selected()).toContain('4721,5');
-    press('1');
+    answer('1');
     await waitFor(() =>
       expect(kept(sent)).toEqual([
         { answers: [{ sheet: 'Trials', cell: 'C4', text: '4721,5', answer: '4721.5' }] },
@@ -203,7 +274,7 @@ describe('the reading page', () => {
   it('says why an answer was not kept and shows the present state again', async () => {
     const stale = aProblemResponse('version-stale', 412, { title: 'It has changed since you saw it' });
     const { stop } = await open({ [`PUT ${base}/answers`]: stale });
-    press('1');
+    answer('1');
     const notice = await screen.findByRole('alert');
     expect(within(notice).getByText(/It has changed since you saw it/)).toBeTruthy();
     await waitFor(() =>
@@ -216,6 +287,7 @@ describe('the reading page', () => {
     const { sent, stop } = await open({}, aReadingView({ abilities: { answer: false, attach: false } }));
     press('1');
     expect(kept(sent)).toEqual([]);
+    expect(screen.queryByRole('button', { name: 'Keep the answer' })).toBeNull();
     expect(screen.getByRole<HTMLInputElement>('radio', { name: '3 April 2026' }).disabled).toBe(true);
     expect(screen.queryByRole('button', { name: 'Add a certificate or report' })).toBeNull();
     stop();

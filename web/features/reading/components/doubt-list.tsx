@@ -1,7 +1,13 @@
 import { type ReactNode, useId } from 'react';
 import { Radio, RadioGroup } from 'react-aria-components';
 import { RichText } from '../../../components/ui/rich-text';
-import { choicesOf, doubtCountWords, isAt, type ReadingDoubt } from '../lib/doubt-answers';
+import {
+  choicesOf,
+  doubtCountWords,
+  isAt,
+  type ProposedAnswer,
+  type ReadingDoubt,
+} from '../lib/doubt-answers';
 import type { Place } from '../lib/first-place';
 
 /** Every doubt with its letter, its cell and what the cell may mean; one answer each, which can be changed. */
@@ -9,14 +15,19 @@ export function DoubtList({
   doubts,
   cursor,
   onCursor,
-  onAnswer,
+  proposed,
+  onPropose,
+  proposalOf,
   canAnswer,
   excerptOf,
 }: {
   doubts: readonly ReadingDoubt[];
   cursor: Place;
   onCursor: (place: Place) => void;
-  onAnswer: (doubt: ReadingDoubt, answer: string | null) => void;
+  /** The answer that is shown with what it would change, before it is kept. */
+  proposed: ProposedAnswer | null;
+  onPropose: (doubt: ReadingDoubt, answer: string | null) => void;
+  proposalOf: (proposed: ProposedAnswer) => ReactNode;
   canAnswer: boolean;
   /** On a narrow page each doubt carries the rows around its cell. */
   excerptOf?: (doubt: ReadingDoubt) => ReactNode;
@@ -38,7 +49,9 @@ export function DoubtList({
               isCurrent={isAt(doubt, cursor)}
               cursorSheet={cursor.sheet}
               onCursor={() => onCursor({ sheet: doubt.sheet, cell: doubt.cell })}
-              onAnswer={(answer) => onAnswer(doubt, answer)}
+              proposed={proposed && isAt(doubt, proposed.doubt) ? proposed : null}
+              onPropose={(answer) => onPropose(doubt, answer)}
+              proposalOf={proposalOf}
               canAnswer={canAnswer}
               excerpt={excerptOf?.(doubt)}
             />
@@ -54,7 +67,9 @@ function DoubtItem({
   isCurrent,
   cursorSheet,
   onCursor,
-  onAnswer,
+  proposed,
+  onPropose,
+  proposalOf,
   canAnswer,
   excerpt,
 }: {
@@ -62,7 +77,9 @@ function DoubtItem({
   isCurrent: boolean;
   cursorSheet: string;
   onCursor: () => void;
-  onAnswer: (answer: string | null) => void;
+  proposed: ProposedAnswer | null;
+  onPropose: (answer: string | null) => void;
+  proposalOf: (proposed: ProposedAnswer) => ReactNode;
   canAnswer: boolean;
   excerpt: ReactNode;
 }) {
@@ -80,8 +97,8 @@ function DoubtItem({
       <RadioGroup
         aria-labelledby={questionId}
         className="doubt-choices"
-        value={doubt.answer}
-        onChange={onAnswer}
+        value={proposed ? proposed.answer : doubt.answer}
+        onChange={onPropose}
         onFocus={onCursor}
         isDisabled={!canAnswer}
         orientation="horizontal"
@@ -92,8 +109,9 @@ function DoubtItem({
           </Radio>
         ))}
       </RadioGroup>
-      {doubt.answer !== null && canAnswer ? (
-        <button type="button" className="cell-link small" onClick={() => onAnswer(null)}>
+      {proposed ? proposalOf(proposed) : null}
+      {doubt.answer !== null && canAnswer && !proposed ? (
+        <button type="button" className="cell-link small" onClick={() => onPropose(null)}>
           Take the answer back
         </button>
       ) : null}

@@ -1,12 +1,11 @@
 import { useState } from 'react';
-import { Link } from 'react-router-dom';
 import type { ReadingView } from '#shared/contracts/readings';
 import { countInFigures } from '#shared/format/numbers';
 import { Button } from '../../../components/ui/button';
 import { RichText } from '../../../components/ui/rich-text';
-import { paths } from '../../../lib/paths';
 import type { RevisionParams } from '../../../lib/queries/revision-query';
 import { groupUnread } from '../lib/group-unread';
+import { CellLink } from './cell-link';
 
 const kindsAtFirst = 6;
 
@@ -75,14 +74,6 @@ export function NotUsed({ params, reading }: { params: RevisionParams; reading: 
         </ul>
       )}
     </section>
-  );
-}
-
-function CellLink({ params, sheet, cell }: { params: RevisionParams; sheet: string; cell: string }) {
-  return (
-    <Link to={paths.reading(params.submittalId, params.number, { sheet, cell })} replace preventScrollReset>
-      {`${sheet} ${cell}`.trim()}
-    </Link>
   );
 }
 

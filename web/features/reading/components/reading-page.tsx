@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { checkCautions } from '#shared/cautions';
 import type { ReadingView } from '#shared/contracts/readings';
@@ -8,7 +9,6 @@ import { MarginPage } from '../../../components/ui/margin-page';
 import { PageHead } from '../../../components/ui/page-head';
 import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { RunningFoot } from '../../../components/ui/running-foot';
-import { announce } from '../../../lib/announce';
 import { paths } from '../../../lib/paths';
 import { usePrintedRevision } from '../../../lib/print-frame';
 import { asProblem } from '../../../lib/problem';
@@ -17,21 +17,31 @@ import { type RevisionParams, useRevision } from '../../../lib/queries/revision-
 import { useMediaQuery } from '../../../lib/use-media-query';
 import { usePageTitle } from '../../../lib/use-page-title';
 import { useReading } from '../api/get-reading';
-import { useKeepAnswers } from '../api/keep-answers';
 import { useKeepAttributes } from '../api/keep-attributes';
 import { useChosenCells } from '../hooks/use-chosen-cells';
+import { answerAct, useProposedAnswer } from '../hooks/use-proposed-answer';
+import { useReadingActs } from '../hooks/use-reading-acts';
 import { useReadingKeys } from '../hooks/use-reading-keys';
-import { doubtsLeftWords, type ReadingDoubt } from '../lib/doubt-answers';
+import { doubtsLeftWords } from '../lib/doubt-answers';
 import { firstPlace } from '../lib/first-place';
+import { focusSoon } from '../lib/focus-soon';
+import { learnedWords } from '../lib/learned-words';
+import { sheetGridId } from '../lib/sheet-measures';
 import { AskedAttributes } from './asked-attributes';
+import { CellPanel } from './cell-panel';
 import { DocumentList } from './document-list';
 import { DoubtExcerpt } from './doubt-excerpt';
 import { DoubtList } from './doubt-list';
+import { FindingsBeside } from './findings-beside';
+import { MappingNotice } from './mapping-notice';
+import { Proposal } from './proposal';
 import { NotUsed, Understood } from './reading-lists';
 import { ReadingSteps } from './reading-steps';
 import { ReplaceWorkbook } from './replace-workbook';
+import { SaidList } from './said-list';
 import { SheetView } from './sheet-view';
 import { StaleAnswers } from './stale-answers';
+import { TypedList } from './typed-list';
 import '../reading.css';
 
 export function ReadingPage({ params }: { params: RevisionParams }) {
@@ -43,20 +53,31 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   const { cursor, setCursor } = chosen;
   // At hand before anything is changed, so that the page can say which outcomes a change moved.
   const check = useQuery({ ...checkQuery(params), enabled: revision.hasCheck });
-  const answers = useKeepAnswers(params);
+  const acts = useReadingActs(params);
   const attributes = useKeepAttributes(params);
-  const answer = (doubt: ReadingDoubt, value: string | null) => {
+  const answering = useProposedAnswer({ reading, acts, onCursor: setCursor });
+  const [isAsking, setIsAsking] = useState(false);
+  const ask = () => {
     if (!reading.abilities.answer) return;
-    const { sheet, cell, text } = doubt;
-    answers.mutate([{ sheet, cell, text, answer: value }], {
-      onSuccess: (kept) => announce(doubtsLeftWords(kept.doubts)),
-    });
+    setIsAsking(true);
+    focusSoon('cell-panel');
   };
-  const openFindings = useOpenFindings(params);
-  useReadingKeys({ reading, cursor, onCursor: setCursor, onAnswer: answer, onFindings: openFindings });
+  const stopAsking = () => {
+    setIsAsking(false);
+    focusSoon(sheetGridId);
+  };
+  useReadingKeys({
+    reading,
+    cursor,
+    onCursor: setCursor,
+    onPropose: answering.propose,
+    proposal: answering.proposed ? answering : null,
+    acts,
+    onFindings: useOpenFindings(params),
+  });
   const isNarrow = useMediaQuery('screen and (max-width: 759px)');
 
-  const problem = answers.error ?? attributes.error;
+  const problem = acts.error ?? attributes.error;
   const head = (
     <>
       <PageHead
@@ -66,6 +87,9 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       >
         <ReadingSteps params={params} hasCheck={revision.hasCheck} />
       </PageHead>
+      {reading.mapping ? (
+        <MappingNotice params={params} mapping={reading.mapping} laboratory={revision.laboratory.name} />
+      ) : null}
       {problem ? (
         <ProblemNotice problem={asProblem(problem)} unaffected="Answers kept before still hold." />
       ) : null}
@@ -73,11 +97,27 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
   );
   const questions = (
     <>
+      {isAsking ? (
+        <CellPanel params={params} reading={reading} chosen={chosen} acts={acts} onClose={stopAsking} />
+      ) : null}
       <DoubtList
         doubts={reading.doubts}
         cursor={cursor}
         onCursor={setCursor}
-        onAnswer={answer}
+        proposed={answering.proposed}
+        onPropose={answering.propose}
+        proposalOf={({ doubt, answer }) => (
+          <Proposal
+            params={params}
+            version={reading.version}
+            act={answerAct(doubt, answer)}
+            keepLabel={answer === null ? 'Take it back' : 'Keep the answer'}
+            keyHint="Enter"
+            onKeep={answering.keep}
+            onLeave={answering.leave}
+            isKeeping={acts.isPending}
+          />
+        )}
         canAnswer={reading.abilities.answer}
         {...(isNarrow ? { excerptOf: (doubt) => <DoubtExcerpt params={params} doubt={doubt} /> } : {})}
       />
@@ -87,6 +127,8 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
         onKeep={(name, value) => attributes.mutate({ [name]: value })}
         canAnswer={reading.abilities.answer}
       />
+      <SaidList params={params} reading={reading} acts={acts} />
+      {check.data ? <FindingsBeside params={params} check={check.data} /> : null}
       <Onward params={params} reading={reading} laboratory={revision.laboratory.name} />
     </>
   );
@@ -94,11 +136,12 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
     <>
       <Understood params={params} reading={reading} />
       <NotUsed params={params} reading={reading} />
+      <TypedList params={params} reading={reading} acts={acts} />
       <DocumentList params={params} reading={reading} />
       {revision.abilities.replaceWorkbook ? <ReplaceWorkbook revision={revision} /> : null}
     </>
   );
-  const sheet = <SheetView params={params} reading={reading} chosen={chosen} onOpen={() => undefined} />;
+  const sheet = <SheetView params={params} reading={reading} chosen={chosen} onOpen={ask} />;
   const foot = (
     <RunningFoot
       texts={[
@@ -156,7 +199,7 @@ function Onward({
         See the findings
       </LinkButton>
       <span className="small mute">
-        {doubtsLeftWords(reading.doubts)} Read for {laboratory}.
+        {doubtsLeftWords(reading.doubts)} {learnedWords(reading, laboratory)}
       </span>
     </div>
   );

@@ -12,7 +12,7 @@ import { type ColumnWindow, columnWindow } from '../lib/column-window';
 import type { Place } from '../lib/first-place';
 import { mergesInSight, mergesOf } from '../lib/merges';
 import { type RowWindow, rowWindow } from '../lib/row-window';
-import { rowNumberRem, rowRem } from '../lib/sheet-measures';
+import { rowNumberRem, rowRem, sheetGridId } from '../lib/sheet-measures';
 import { ColumnHeads, numbersBetween, SheetRow } from './sheet-rows';
 
 const fewestRows = 12;
@@ -83,6 +83,7 @@ export function SheetGridView({
       </p>
       <div ref={scroller} className="sheet-scroll" onScroll={onScroll}>
         <table
+          id={sheetGridId}
           className="sheet sheet-whole"
           // biome-ignore lint/a11y/noNoninteractiveElementToInteractiveRole: the sheet is a grid whose cursor the arrow keys move.
           role="grid"

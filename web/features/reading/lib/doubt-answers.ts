@@ -3,6 +3,12 @@ import { countInFigures } from '#shared/format/numbers';
 
 export type ReadingDoubt = ReadingView['doubts'][number];
 
+export interface ProposedAnswer {
+  doubt: ReadingDoubt;
+  /** Null: the answer that is kept would be taken back. */
+  answer: string | null;
+}
+
 export const leaveOut = 'leave out';
 
 export interface DoubtChoice {
@@ -34,6 +40,16 @@ export function nextDoubt(
   const index = at ? doubts.findIndex((doubt) => isAt(doubt, at)) : -1;
   if (index < 0) return doubts.find((doubt) => doubt.answer === null) ?? doubts[0] ?? null;
   return doubts[(index + step + doubts.length) % doubts.length] ?? null;
+}
+
+/** The next doubt without an answer after the one at hand, round the end; null where every other one is answered. */
+export function nextOpenDoubt(
+  doubts: readonly ReadingDoubt[],
+  at: { sheet: string; cell: string },
+): ReadingDoubt | null {
+  const index = doubts.findIndex((doubt) => isAt(doubt, at));
+  const inTurn = [...doubts.slice(index + 1), ...doubts.slice(0, Math.max(index, 0))];
+  return inTurn.find((doubt) => doubt.answer === null && !isAt(doubt, at)) ?? null;
 }
 
 export function isAt(doubt: { sheet: string; cell: string }, at: { sheet: string; cell: string }): boolean {
