@@ -116,6 +116,7 @@ export function SheetGridView({
                 fromColumn={columns.first}
                 toColumn={columns.last}
                 content={rows.rowAt(row)}
+                widths={widths}
                 merges={inSight.get(row)}
                 isHidden={hiddenRows.has(row)}
                 letters={letters}

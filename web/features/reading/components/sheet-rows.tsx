@@ -43,6 +43,8 @@ interface RowDrawing {
   fromColumn?: number;
   toColumn: number;
   content: RowContent | undefined;
+  /** Of every column of the sheet, in px at the default text size; an excerpt sets its own. */
+  widths?: readonly number[];
   merges: ReadonlyMap<number, DrawnMerge | null> | undefined;
   isHidden: boolean;
   /** Letters of doubts by cell. */
@@ -83,11 +85,12 @@ function SheetCell(drawing: RowDrawing & { column: number }) {
   const cell = isOwn ? content?.cells.get(column) : undefined;
   const letter = drawing.letters.get(address);
   const isSelected = drawing.cursorColumn === column;
+  const runsOnPx = runsOn({ ...drawing, cell });
   const isChosen = drawing.block !== null && isInBlock(drawing.block, { row, column });
   return (
     <td
       id={`${idPrefix}${address}`}
-      className={classOf({ ...drawing, cell, letter, isSelected, isChosen })}
+      className={classOf({ ...drawing, cell, letter, isSelected, isChosen, runsOnPx })}
       {...(span ? { rowSpan: span.rows, colSpan: span.columns } : {})}
       {...(isGrid
         ? {
@@ -99,7 +102,9 @@ function SheetCell(drawing: RowDrawing & { column: number }) {
         : {})}
     >
       {letter ? <span className="tie tie-doubt">{letter}</span> : null}
-      <span className="cell-text">{cell?.text ?? ''}</span>
+      <span className="cell-text" style={runsOnPx ? { maxWidth: `${runsOnPx / 14}rem` } : undefined}>
+        {cell?.text ?? ''}
+      </span>
       {cell?.comment ? <span className="hidden-text">, with a note</span> : null}
     </td>
   );
@@ -111,6 +116,7 @@ interface CellLook extends RowDrawing {
   letter: string | undefined;
   isSelected: boolean;
   isChosen: boolean;
+  runsOnPx: number | null;
 }
 
 function classOf(look: CellLook): string | undefined {
@@ -122,7 +128,7 @@ function classOf(look: CellLook): string | undefined {
     cell?.comment ? 'has-note' : '',
     isSelected ? 'is-selected' : '',
     isChosen ? `in-block ${edgesOf(look)}` : '',
-    runsOn(look) ? 'runs-on' : '',
+    look.runsOnPx === null ? '' : 'runs-on',
   ].filter((name) => name !== '');
   return classes.length > 0 ? classes.join(' ') : undefined;
 }
@@ -149,10 +155,20 @@ function edgesOf({ block, row, column, merges }: CellLook): string {
   ].join(' ');
 }
 
-/** As in any sheet, a text runs on over empty cells to its right. */
-function runsOn({ cell, content, column, merges }: CellLook): boolean {
-  if (cell?.kind !== 'text' || merges?.has(column)) return false;
-  return !content?.cells.has(column + 1) && !merges?.has(column + 1);
+/** As in any sheet, a text runs on over empty cells to its right, up to the next that holds something. */
+function runsOn({
+  cell,
+  content,
+  column,
+  toColumn,
+  merges,
+  widths = [],
+}: RowDrawing & { column: number; cell: Cell | undefined }): number | null {
+  if (cell?.kind !== 'text' || merges?.has(column)) return null;
+  let end = column;
+  while (end < toColumn && !content?.cells.has(end + 1) && !merges?.has(end + 1)) end += 1;
+  if (end === column) return null;
+  return widths.slice(column - 1, end).reduce((sum, width) => sum + width, 0);
 }
 
 function classOfUse(use: CellUse | undefined): string {
