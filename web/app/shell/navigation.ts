@@ -17,6 +17,7 @@ export function navigationOf(session: Session): NavigationItem[] {
     { label: 'Projects', to: paths.projects },
     { label: 'Rule sets', to: paths.ruleSets },
     active.kind === 'contractor' && { label: 'Laboratories', to: paths.laboratories },
+    active.kind === 'contractor' && { label: 'Mappings', to: paths.mappings },
     abilities.managePeople && { label: 'People', to: paths.people },
     abilities.manageOrganisation && active.kind === 'agency' && { label: 'Settings', to: paths.settings },
     abilities.seeCaughtMail && { label: 'Caught mail', to: paths.caughtMail },

@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom';
 import { addLaboratory } from '#shared/contracts/people';
 import { formatDate } from '#shared/format/dates';
 import { Button } from '../../../components/ui/button';
@@ -9,6 +10,7 @@ import { ProblemNotice } from '../../../components/ui/problem-notice';
 import { SectionHead } from '../../../components/ui/section-head';
 import { announce } from '../../../lib/announce';
 import { useContractForm } from '../../../lib/form';
+import { paths } from '../../../lib/paths';
 import { useLaboratories } from '../../../lib/queries/laboratories-query';
 import { useSession } from '../../../lib/queries/session-query';
 import { usePageTitle } from '../../../lib/use-page-title';
@@ -45,7 +47,9 @@ export function LaboratoriesPage() {
               <tr key={laboratory.id}>
                 <th scope="row">{laboratory.name}</th>
                 <td>{laboratory.accreditation ?? <span className="mute">none stated</span>}</td>
-                <td className="number">{laboratory.mappings}</td>
+                <td className="number">
+                  {laboratory.mappings === 0 ? '·' : <Link to={paths.mappings}>{laboratory.mappings}</Link>}
+                </td>
                 <td>{formatDate(laboratory.since)}</td>
               </tr>
             ))}
