@@ -2,7 +2,7 @@ import { getReading, getSheet, keepAnswer, keepAttributes } from '#shared/contra
 import { keepAnswers as keep } from '../../commands/readings/keep-answers';
 import { keepAttributes as keepTyped } from '../../commands/readings/keep-attributes';
 import { gridOf, loadSheet } from '../../db/queries/cell-grids';
-import { findMixRecord } from '../../db/queries/records';
+import { usesOfSheet } from '../../db/queries/cell-uses';
 import { Problem } from '../../problem';
 import { route } from '../define-route';
 import { expectRevision } from '../submittals/load-revision';
@@ -23,9 +23,8 @@ export const getSheetRoute = route(getSheet, async ({ deps, params, query, actor
   const sheet = await loadSheet(deps.db, actor, { fileId: row.workbook.id, name: query.sheet, from, to });
   if (sheet === null)
     throw noSheet(query.sheet, (await gridOf(deps.db, actor, row.workbook.id))?.sheets ?? []);
-  const kept = await findMixRecord(deps.db, actor, row.revision.id);
-  const shown = new Set(sheet.cells.map(({ address }) => address));
-  const uses = (kept?.reading.uses ?? []).filter((use) => use.sheet === sheet.name && shown.has(use.cell));
+  const known = await usesOfSheet(deps.db, actor, { revisionId: row.revision.id, sheet: sheet.name });
+  const uses = sheet.cells.flatMap(({ address }) => known.get(address) ?? []);
   return { sheet, uses };
 });
 
