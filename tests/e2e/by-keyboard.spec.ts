@@ -39,8 +39,9 @@ test('doubts are answered, a mix is submitted, annotated and handed on to sign w
   await expect(manager.getByText('4 cells', { exact: true })).toBeVisible();
   for (const answered of [1, 2, 3, 4]) {
     await manager.keyboard.press('1');
+    await expect(manager.getByRole('button', { name: 'Keep the answer' })).toBeVisible();
+    await manager.keyboard.press('Enter');
     await expect(manager.getByText(`4 cells, ${answered} answered`)).toBeVisible();
-    await manager.keyboard.press('j');
   }
   await expectAccessible(manager);
   await manager.keyboard.press('Enter');

@@ -55,6 +55,7 @@ test('a mix design goes from upload to approval, with a return and a revision in
   for (const meaning of ['3 April 2026', '4721.5 g', '2.4', '72.1 %']) {
     const kept = manager.waitForResponse((answer) => answer.url().endsWith('/answers'));
     await manager.getByRole('radio', { name: meaning, exact: true }).check({ force: true });
+    await manager.getByRole('button', { name: 'Keep the answer' }).click();
     await kept;
   }
   await expect(manager.getByText('4 cells, 4 answered')).toBeVisible();

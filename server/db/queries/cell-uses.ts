@@ -22,17 +22,25 @@ export async function usesOfSheet(
     .where(and(eq(mixRecords.revisionId, revisionId), ofTenant(mixRecords, reader)));
   if (head === undefined) return noUses;
   const key = `${revisionId} ${head.readAt.toISOString()} ${head.recordHash}`;
-  const known = kept.get(key) ?? indexUses((await findMixRecord(db, reader, revisionId))?.reading.uses ?? []);
+  const known = kept.get(key) ?? loadUses(db, reader, revisionId);
   keep(key, known);
-  return known.get(sheet) ?? noUses;
+  // What could not be loaded is asked for anew the next time.
+  known.catch(() => kept.delete(key));
+  return (await known).get(sheet) ?? noUses;
 }
 
 const noUses: ReadonlyMap<string, CellUse> = new Map();
 const mostKept = 4;
-const kept = new Map<string, UsesBySheet>();
+/** Several blocks are asked for at once; the first asks the database for all of them. */
+const kept = new Map<string, Promise<UsesBySheet>>();
+
+async function loadUses(db: Database, reader: Reader, revisionId: string): Promise<UsesBySheet> {
+  const record = await findMixRecord(db, reader, revisionId);
+  return indexUses(record?.reading.uses ?? []);
+}
 
 /** Asked for last, dropped last. */
-function keep(key: string, uses: UsesBySheet): void {
+function keep(key: string, uses: Promise<UsesBySheet>): void {
   kept.delete(key);
   kept.set(key, uses);
   for (const oldest of kept.keys()) {
