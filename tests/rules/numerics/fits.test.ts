@@ -43,6 +43,21 @@ describe('least squares', () => {
     expect(leastSquares(x, y, degree)).toEqual({ ok: false, reason: expect.stringMatching(/\w/) });
   });
 
+  it('tells the residuals in the order given, the share explained and the range tested', () => {
+    // By hand: x̄ = 2, ȳ = 2, slope 1/2, so 1.5, 2, 2.5 at 1, 2, 3; Σr² = 1.5 of Σ(y − ȳ)² = 2.
+    const fit = leastSquares([2, 1, 3], [3, 1, 2], 1);
+    if (!fit.ok) throw new Error(fit.reason);
+    expect(fit.residuals.map((each) => Number(each.toFixed(12)))).toEqual([1, -0.5, -0.5]);
+    expect(fit.rSquared).toBeCloseTo(0.25, 12);
+    expect([fit.from, fit.to]).toEqual([1, 3]);
+    expect(fit.coefficients[0]).toBeCloseTo(1, 12);
+    expect(fit.coefficients[1]).toBeCloseTo(0.5, 12);
+  });
+
+  it('explains everything where there is nothing to explain', () => {
+    expect(leastSquares([1, 2, 3], [0, 0, 0], 1)).toMatchObject({ ok: true, rSquared: 1 });
+  });
+
   it('fits a straight line to two points exactly', () => {
     const fit = leastSquares([1, 3], [2, 6], 1);
     // y = 2·x.
@@ -55,6 +70,14 @@ describe('interpolation', () => {
     expect(interpolate([5, 4.5], [3.9, 5.1], 4.75)).toEqual({ ok: true, value: 4.5 });
     expect(interpolate([4.5, 5], [5.1, 3.9], 5)).toEqual({ ok: true, value: 3.9 });
     expect(interpolate([5, 5], [3.9, 4.1], 5)).toEqual({ ok: true, value: 4 });
+  });
+
+  it('goes between the nearest places, in any order, and by the mean of several values at one place', () => {
+    // Between 4.5 (1) and 5 (3), not between 4 and 6.
+    expect(interpolate([6, 4, 5, 4.5], [100, -100, 3, 1], 4.75)).toEqual({ ok: true, value: 2 });
+    // (1 + 3)/2 = 2 at 4, 4 at 5 (by hand: halfway is 3).
+    expect(interpolate([4, 4, 5], [1, 3, 4], 4.5)).toEqual({ ok: true, value: 3 });
+    expect(interpolate([4, 5, 5], [2, 3, 5], 4.5)).toEqual({ ok: true, value: 3 });
   });
 
   it('never goes beyond the points', () => {
@@ -79,6 +102,31 @@ describe('roots at a target', () => {
     expect(rootsAtTarget([24, -10, 1], 0, 4.1, 5.9)).toEqual([]);
     expect(fallingRoot([24, -10, 1], [4, 6])).toBe(4);
     expect(fallingRoot([24, -10, 1], [6])).toBeNull();
+  });
+
+  it('come in rising order, whichever way the curve opens', () => {
+    // 2·(x − 1)·(x − 3) and −(x − 1)·(x − 3).
+    expect(rootsAtTarget([6, -8, 2], 0, 0, 10)).toEqual([1, 3]);
+    expect(rootsAtTarget([-3, 4, -1], 0, 0, 10)).toEqual([1, 3]);
+    expect(rootsAtTarget([-4, 0, 1], 0, -10, 10)).toEqual([-2, 2]);
+    // The vertex touches the target once: (x − 2)², and x².
+    expect(rootsAtTarget([4, -4, 1], 0, 0, 10)).toEqual([2]);
+    expect(rootsAtTarget([0, 0, 1], 0, -10, 10)).toEqual([0]);
+    expect(rootsAtTarget([7, -4, 1], 3, 0, 10)).toEqual([2]);
+  });
+
+  it('keep the digits of a small root beside a large one', () => {
+    // x² − (10⁸ + 10⁻⁸)·x + 1 = (x − 10⁸)·(x − 10⁻⁸).
+    const [small, large] = rootsAtTarget([1, -(1e8 + 1e-8), 1], 0, 0, 1e9);
+    expect(small! * 1e8).toBeCloseTo(1, 9);
+    expect(large! / 1e8).toBeCloseTo(1, 9);
+  });
+
+  it('are held within a range that they miss by binary noise only', () => {
+    // 0.3/0.1 is 2.9999999999999996 in doubles.
+    expect(rootsAtTarget([-0.3, 0.1], 0, 3, 6)).toEqual([3]);
+    expect(rootsAtTarget([-0.3, 0.1], 0, 3.000001, 6)).toEqual([]);
+    expect(rootsAtTarget([-6.000001, 1], 0, 3, 6)).toEqual([]);
   });
 
   it('has none where the curve misses the target or is constant', () => {

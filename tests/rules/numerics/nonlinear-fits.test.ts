@@ -164,6 +164,13 @@ describe('the covariance of fitted parameters', () => {
     expect(deviationAlong(factor, [1, 2])).toBeCloseTo(0.5, 10);
   });
 
+  it('is a number, too, of a parameter that nothing moves with', () => {
+    const factor = covarianceFactor(Float64Array.of(1, 0, 1, 0, 1, 0, 1, 0), 2, 4);
+    expect(covarianceOf(factor).flat().every(Number.isFinite)).toBe(true);
+    // The other is a mean of four.
+    expect(covarianceOf(factor)[0]![0]).toBeCloseTo(1, 9);
+  });
+
   it('is very large, and a number, along a direction that the points say nothing about', () => {
     const factor = covarianceFactor(Float64Array.of(1, 1, 1, 1, 1, 1), 2, 1);
     expect(deviationAlong(factor, [1, -1])).toBeGreaterThan(1e5);

@@ -67,6 +67,41 @@ describe('comparing two laboratories', () => {
     expect(compareSamples(one, other, significance).ok).toBe(false);
   });
 
+  it('puts the first on top where both spread alike, and no probability above 1', () => {
+    // Both have s² = 1 (Σ(x − 2)² is 2 of three and 4 of five values): F is 1 whichever comes first.
+    const three = [1, 2, 3];
+    const five = [1, 1, 2, 3, 3];
+    expect(compareSamples(three, five, 0.05)).toMatchObject({ comparison: { F: 1, degreesOfF: [2, 4] } });
+    // P(F(4, 2) ≥ 1) is more than a half, and twice that is no probability.
+    expect(compareSamples(five, three, 0.05)).toMatchObject({
+      comparison: { F: 1, degreesOfF: [4, 2], probabilityF: 1 },
+    });
+  });
+
+  it('takes them for the same only where the probability lies above the significance, not on it', () => {
+    const compared = compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], 0.5);
+    if (!compared.ok) throw new Error(compared.reason);
+    const { probabilityF, probabilityT } = compared.comparison;
+    expect(compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], probabilityF)).toMatchObject({
+      comparison: { sameVariance: false },
+    });
+    expect(compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], probabilityT)).toMatchObject({
+      comparison: { sameMean: false },
+    });
+    const paired = comparePairs(first, second, 0.5);
+    if (!paired.ok) throw new Error(paired.reason);
+    expect(comparePairs(first, second, paired.comparison.probabilityT)).toMatchObject({
+      comparison: { sameMean: false },
+    });
+  });
+
+  it('cannot where the values are too large to be added', () => {
+    const large = [1.7e308, 1.7e308];
+    const reason = expect.stringMatching(/finite/);
+    expect(compareSamples(large, second, 0.05)).toEqual({ ok: false, reason });
+    expect(compareSamples(first, large, 0.05)).toEqual({ ok: false, reason });
+  });
+
   it('compares pairs: t 4.271 with 4 degrees (by hand: 0.046/(0.02408/√5))', () => {
     const compared = comparePairs(first, second, 0.01);
     if (!compared.ok) throw new Error(compared.reason);
@@ -121,6 +156,21 @@ describe('a single outlier', () => {
         expect(tested.test.critical).toBeLessThan(most);
       }),
     );
+  });
+
+  it('names the farther end, the high one where both are as far, and none on the critical value itself', () => {
+    // Six values: x̄ = 2, s² = 2·9/5; both ends lie 3/√3.6 = 1.5811 from it, critical at 10 % each is below 1.73.
+    const tied = outlierTest([2, -1, 2, 5, 2, 2], 0.2);
+    if (!tied.ok) throw new Error(tied.reason);
+    expect(tied.test.high).toBeCloseTo(3 / Math.sqrt(3.6), 9);
+    expect(tied.test.low).toBeCloseTo(3 / Math.sqrt(3.6), 9);
+    const critical = criticalOutlier(3, 0.5);
+    if (!critical.ok) throw new Error(critical.reason);
+    // (n − 1)/√n = 2/√3 is the farthest that one of three values can lie.
+    expect(outlierTest([0, 0, 1], 0.05)).toMatchObject({
+      ok: true,
+      test: { high: expect.closeTo(2 / Math.sqrt(3), 9) },
+    });
   });
 
   it('asks for a whole number of values', () => {
