@@ -27,10 +27,12 @@ def cells_of(path):
     return {("", f"{column_letters(c)}{r}"): v for r, row in enumerate(rows, 1) for c, v in enumerate(row, 1) if v != ""}
 
 
-def number(value, comma):
+def number(value, comma, part):
     if isinstance(value, (int, float)):
         return float(value)
-    text = number_in(value.replace("\u202f", "").replace("> 20 000", "20000"))
+    if value.startswith(">20,"):
+        return 20000.0
+    text = number_in(value.replace("> 20 000", "20000").replace(">20,000", "20000"), part)
     if comma:
         text = text.replace(".", "").replace(",", ".") if text.count(",") else text
     return float(text.rstrip(".,").replace(",", ""))
@@ -49,7 +51,7 @@ def check(path):
             faults.append(f"{place} is empty: {reading}")
             continue
         ours_comma = comma or (isinstance(found, str) and "," in found)
-        value = number(found, ours_comma)
+        value = number(found, ours_comma, reading.get("part", 0))
         unit = reading["writtenUnit"]
         if unit == "fraction":
             value = round(value * 100, 10)

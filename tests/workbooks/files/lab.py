@@ -41,6 +41,16 @@ FACTORS = {
 }
 
 
+# Quantities that are told apart without the temperature of the test: it may be recorded or not.
+WITHOUT_TEMPERATURE = {
+    "flow-number",
+    "stripping-inflection-point",
+    "passes-to-rut-depth",
+    "wheel-track-slope",
+    "proportional-rut-depth",
+}
+
+
 def canonical(value, written, unit):
     if written == unit:
         return value
@@ -104,20 +114,25 @@ class Sheet:
         return self
 
     def read(self, row, column, quantity, value, at=None, unit=None, text=None, may=None, optional=False,
-             qualifier=None, **style):
+             qualifier=None, part=None, **style):
         """A figure that is a reading: `unit` as written, `text` what stands in the cell where that is no number."""
         own = self.book.units[quantity]
+        at = dict(at or {})
+        if quantity in WITHOUT_TEMPERATURE and "temperature" in at:
+            may = {**(may or {}), "temperature": at.pop("temperature")}
         unit = unit or own
         self.put(row, column, value if text is None else text, **style)
         if unit == "fraction" and text is None:
             true = round(value * 100, 10)
         else:
             true = canonical(value, unit, own)
-        reading = {"quantity": quantity, "value": true, "unit": own, "at": dict(at or {})}
+        reading = {"quantity": quantity, "value": true, "unit": own, "at": at}
         if qualifier:
             reading["qualifier"] = qualifier
         if may:
             reading["may"] = may
+        if part is not None:
+            reading["part"] = part
         reading["sheet"] = "" if self.book.flat else self.name
         reading["cell"] = address(row, column)
         reading["written"] = value if text is None else text
@@ -178,6 +193,6 @@ class Book:
         }
 
 
-def number_in(text):
-    found = re.search(r"[-+]?\d[\d.,]*(?:[eE][-+]?\d+)?", str(text).replace("\u00a0", ""))
-    return found.group(0) if found else None
+def number_in(text, part=0):
+    found = re.findall(r"[-+−]?\d[\d.,]*(?:[eE][-+]?\d+)?", str(text).replace("\u00a0", "").replace("\u202f", ""))
+    return found[part].replace("−", "-") if found else None

@@ -1,6 +1,7 @@
 """Laboratories that write German, French and Spanish."""
 
 import datetime
+import math
 
 from files import UNITS, with_office, with_openpyxl, with_text
 from lab import Book
@@ -219,7 +220,6 @@ def french_press(book, mix):
     offsets = [mix.noise(0.3) for _ in range(3)]
     for r, n in enumerate([5, 10, 20, 30, 40, 60, 80, 100, 120, 150, 200], 5):
         s.put(r, 1, n)
-        import math
         values = [rounded(21.9 - 3.55 * math.log(n / 5) * 1.15 + 0.0 + offsets[k] + mix.noise(0.03), 1) for k in range(3)]
         for k, value in enumerate(values):
             s.read(r, 2 + k, "air-voids", value, {"specimen": str(k + 1), "gyrations": n}, fmt="0.0")

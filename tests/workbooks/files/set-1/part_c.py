@@ -1,6 +1,6 @@
 """Low-temperature laboratories, an airfield's Marshall design, and a file whose formulas were never computed."""
 
-from files import UNITS, with_office, with_openpyxl, with_text, with_xlsxwriter
+from files import UNITS, with_office, with_openpyxl, with_text
 from lab import PSI, Book
 from mixes import Mix, mean, rounded
 

@@ -1,8 +1,7 @@
 """A one-page form, a performance report and a bench book with a sheet for each binder content."""
 
-import datetime
 
-from files import UNITS, with_office, with_openpyxl, with_xlsxwriter
+from files import UNITS, with_office, with_xlsxwriter
 from lab import Book
 from mixes import Mix, mean, rounded
 
