@@ -51,7 +51,8 @@ interface Member {
 
 /** Objects of a few shapes come by the thousand: each shape is sorted once. */
 function sortedMembers(names: string[]): Member[] {
-  const shape = names.join('\n');
+  // With their number before them, names with a line break of their own are never taken for several names.
+  const shape = `${names.length}\n${names.join('\n')}`;
   const kept = shapes.get(shape);
   if (kept) return kept;
   const members = names.toSorted(byCodeUnit).map((name) => ({ name, opening: `${quoted(name)}:` }));
