@@ -120,9 +120,13 @@ export function meanNode(
   return node === null ? null : { ...node, unit: first.unit, count, specimens };
 }
 
-/** The value as it would be with another number for one of its inputs; null where that allows none. */
-export function valueWith(node: AnalysisNode, moved: AnalysisNode, value: number): number | null {
-  if (node === moved) return value;
+/** The value as it would be with another number for one of its inputs, wherever that stands; null where there is none. */
+export function valueWith(
+  node: AnalysisNode,
+  moved: ReadonlySet<AnalysisNode>,
+  value: number,
+): number | null {
+  if (moved.has(node)) return value;
   if (node.compute === null) return node.value;
   const inputs: number[] = [];
   for (const input of node.inputs) {

@@ -13,6 +13,17 @@ export function addMonths(date: string, months: number): string {
   return [String(newYear).padStart(4, '0'), pad(newMonth), pad(newDay)].join('-');
 }
 
+/**
+ * The earliest date that reaches a day in so many months, by `addMonths`: the same day of the earlier month, or the first
+ * of the month after where that month is too short to have it.
+ *
+ * @example earliestDate('2026-03-31', 1) // '2026-03-01': 28 February + 1 month is 28 March
+ */
+export function earliestDate(on: string, months: number): string {
+  const back = addMonths(on, -months);
+  return back.slice(8) === on.slice(8) ? back : `${addMonths(back, 1).slice(0, 8)}01`;
+}
+
 function daysInMonth(year: number, month: number): number {
   if (month === 2) return isLeapYear(year) ? 29 : 28;
   return month === 4 || month === 6 || month === 9 || month === 11 ? 30 : 31;

@@ -114,7 +114,7 @@ function ageVerdict(
 }
 
 /** The newest by date, of two of one day the one that holds longer; undated ones only where there is none with a date. */
-function newestOf(documents: DocumentRecord[]): DocumentRecord | null {
+export function newestOf(documents: DocumentRecord[]): DocumentRecord | null {
   const dated = documents.filter(({ date }) => date !== null);
   const [newest] = dated.toSorted(
     (a, b) => compareText(b.date ?? '', a.date ?? '') || compareText(heldTo(b), heldTo(a)),
@@ -130,7 +130,7 @@ function compareText(a: string, b: string): number {
   return a < b ? -1 : a > b ? 1 : 0;
 }
 
-function statedDate(world: World, measure: DocumentMeasure): string | null {
+export function statedDate(world: World, measure: DocumentMeasure): string | null {
   if (measure.on === undefined && measure.maximumAgeMonths === undefined) return null;
   const on = measure.on ?? 'submitted';
   if (on === 'submitted') return world.context.submittedOn;

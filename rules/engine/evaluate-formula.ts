@@ -23,11 +23,13 @@ export function evaluateFormula(world: World, rule: ResolvedRule, measure: Formu
   // An edition with such a rule is refused when it is read; here it can only be a defect of ours.
   if (!result.ok) throw new Error(`The formula of rule ${rule.id} cannot be used: ${result.detail}`);
   const { formula } = result;
-  return subjectsOf(world, measure, formula).map((at) => ofSubject({ world, rule, measure, formula, at }));
+  return formulaSubjects(world, measure, formula).map((at) =>
+    ofSubject({ world, rule, measure, formula, at }),
+  );
 }
 
 /** Every stockpile that any of the symbols has a reading of. */
-function subjectsOf(world: World, { at }: FormulaMeasure, { symbols }: Formula): Conditions[] {
+export function formulaSubjects(world: World, { at }: FormulaMeasure, { symbols }: Formula): Conditions[] {
   if (at.stockpile !== 'each') return [at];
   const ofSymbols = symbols.flatMap((symbol) =>
     conditionsOfSubjects(world, { quantity: symbol.quantity, at: conditionsOfSymbol(symbol, at) }),

@@ -1,13 +1,15 @@
 import { z } from 'zod';
 
-/** One reading that would have to move, alone, for a failing finding to pass. */
+/** What would have to be otherwise, alone, for a failing finding to pass: a reading, an attribute or a document. */
 export const toPassSchema = z.strictObject({
+  /** Id of the quantity; of an attribute its name, of a document its type. */
   quantity: z.string(),
   /** As the laboratory writes it: "Gmb", "sand equivalent". */
   name: z.string(),
   unit: z.string(),
-  present: z.number(),
-  /** Ends of what would pass, both included; null where that side is open. */
+  /** Null where it is no number. */
+  present: z.number().nullable(),
+  /** Ends of what would pass, both included; null where that side is open or it is no number. */
   from: z.number().nullable(),
   to: z.number().nullable(),
   /** "Gmb of 2.431 or less instead of 2.442 (mean of 3)" */
