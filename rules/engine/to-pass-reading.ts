@@ -8,6 +8,7 @@ import { fittedQuantities } from './analysis-design';
 import { conditionsOfSubjects } from './evaluate-reading';
 import type { ToPass } from './explanation';
 import type { Finding } from './finding';
+import { resolveInterval } from './resolve-limit';
 import { roomOfRule } from './room-of-rule';
 import { type Sample, type SampleItem, takeSample } from './sample';
 import { sideOf } from './side-of-limit';
@@ -35,15 +36,42 @@ export function forValue(
   if (!taken.ok || !judging) return [];
   const { sample } = taken;
   const statistic = measure.kind === 'reading' ? measure.statistic : 'mean';
-  if (measure.kind === 'reading' && measure.alsoEach !== undefined) return [];
   if (statistic === 'count') return moreResults(judging, sample);
   if (sample.items.some(({ value, qualifier }) => value === null || qualifier !== null)) return [];
+  if (measure.kind === 'reading' && measure.alsoEach !== undefined)
+    return ofEachBeside(asked, rule, { judging, quantity, sample, at, interval: measure.alsoEach });
   if (statistic === 'mean') return ofMean(asked, rule, judging, quantity, sample);
   if (sample.recomputed !== null) return [];
   if (statistic === 'range') return ofRange(judging, quantity, sample.items);
   return statistic === 'each' || statistic === 'min' || statistic === 'max'
-    ? ofSpecimens(judging, quantity, sample.items)
+    ? together(judging, quantity, outsideOf(judging, statistic, sample.items))
     : [];
+}
+
+/** The mean where every single value is inside its own limits, else the single values where the mean is. */
+function ofEachBeside(
+  asked: Asked,
+  rule: ResolvedRule,
+  given: {
+    judging: Judging;
+    quantity: string;
+    sample: Sample;
+    at: Conditions;
+    interval: NonNullable<ReadingMeasure['alsoEach']>;
+  },
+): ToPass[] {
+  const { judging, quantity, sample, at } = given;
+  const { limit, own } = judging;
+  const units = { written: own, wanted: limit.unit };
+  const resolved = resolveInterval(judging.world, given.interval, at, units);
+  if (!resolved.ok || sample.recomputed !== null) return [];
+  const each = { ...judging, limit: { ...limit, ...resolved.interval } };
+  const outside = outsideOf(each, 'each', sample.items);
+  const values = sample.items.map(({ value }) => value ?? Number.NaN);
+  const isMeanInside =
+    sideIn(judging, values.reduce((sum, value) => sum + value, 0) / values.length) === 'inside';
+  if (isMeanInside === (outside.length === 0)) return [];
+  return isMeanInside ? together(each, quantity, outside) : ofMean(asked, rule, judging, quantity, sample);
 }
 
 function conditionsOf(
@@ -81,16 +109,33 @@ function ofMean(
   return [...ways, ...ofContent];
 }
 
-function ofSpecimens(judging: Judging, quantity: string, items: readonly SampleItem[]): ToPass[] {
-  const outside = items.filter(({ value }) => sideIn(judging, value) !== 'inside');
-  return outside
-    .slice(0, MOST_SPECIMENS)
-    .flatMap(({ at, value }) =>
-      value === null ? [] : wayOfReadings(judging, { kind: 'read', quantity, at, value, count: 1 }),
-    );
+/** The single values that keep the statistic outside. */
+function outsideOf(
+  judging: Judging,
+  statistic: 'each' | 'min' | 'max',
+  items: readonly SampleItem[],
+): SampleItem[] {
+  if (statistic === 'each') return items.filter(({ value }) => sideIn(judging, value) !== 'inside');
+  const sorted = items.toSorted((a, b) => (a.value ?? 0) - (b.value ?? 0));
+  const judged = statistic === 'max' ? sorted.at(-1) : sorted[0];
+  const side = sideIn(judging, judged?.value ?? null);
+  const outermost = statistic === 'max' ? 'above' : 'below';
+  // The greatest alone raises a maximum; to lower it everything above has to come down.
+  if (side === outermost) return items.filter(({ value }) => sideIn(judging, value) === side);
+  return judged === undefined || side === 'inside' ? [] : [judged];
 }
 
-const MOST_SPECIMENS = 3;
+/** All of them at once: one way, and none where one of them cannot be mended. */
+function together(judging: Judging, quantity: string, outside: readonly SampleItem[]): ToPass[] {
+  const ways = outside.flatMap(({ at, value }) =>
+    value === null ? [] : wayOfReadings(judging, { kind: 'read', quantity, at, value, count: 1 }),
+  );
+  const [first] = ways;
+  if (first === undefined || ways.length < outside.length) return [];
+  if (ways.length === 1) return ways;
+  const words = ways.map((way) => way.words).join(' and ');
+  return [{ ...first, present: null, from: null, to: null, words }];
+}
 
 /** Of a range only its ends make it wide: each is brought towards the others. */
 function ofRange(judging: Judging, quantity: string, items: readonly SampleItem[]): ToPass[] {

@@ -363,3 +363,52 @@ it('counts only specimens that the rule’s conditions admit', () => {
     'flow number of 190 cycles or more instead of 185 (mean of 2)',
   ]);
 });
+
+describe('single values', () => {
+  const of = (measure: object, limit: RuleInput['limit'], values: number[]) => {
+    const rule = aRule({
+      id: 'single',
+      measure: { kind: 'reading', quantity: 'flow-number', at: { trial: 'design' }, ...measure },
+      limit,
+      rounding: { method: 'rounding', to: 1 },
+    });
+    const readings = values.map((value, place) =>
+      reading('flow-number', value, { trial: 'design', specimen: `${place + 1}` }),
+    );
+    const { finding, ways } = asked(rule, { readings });
+    return [finding.outcome, words(ways)];
+  };
+
+  it('that are outside have to move together', () => {
+    expect(of({ statistic: 'each' }, { min: '50' }, [40, 60, 45])).toEqual([
+      'fail',
+      [
+        'flow number, specimen 1 of 50 cycles or more instead of 40 and flow number, specimen 3 of 50 cycles or more instead of 45',
+      ],
+    ]);
+    expect(of({ statistic: 'max' }, { max: '50' }, [60, 40, 55])[1]).toEqual([
+      'flow number, specimen 1 of 50 cycles or less instead of 60 and flow number, specimen 3 of 50 cycles or less instead of 55',
+    ]);
+  });
+
+  it('of a least or a greatest are moved alone where one suffices', () => {
+    expect(of({ statistic: 'max' }, { min: '70' }, [60, 40])[1]).toEqual([
+      'flow number, specimen 1 of 70 cycles or more instead of 60',
+    ]);
+    expect(of({ statistic: 'min' }, { max: '30' }, [60, 40])[1]).toEqual([
+      'flow number, specimen 2 of 30 cycles or less instead of 40',
+    ]);
+  });
+
+  it('beside a mean are named where the mean itself holds, and nothing where both are outside', () => {
+    const beside = { statistic: 'mean', alsoEach: { min: '20' } };
+    expect(of(beside, { min: '50' }, [10, 90, 80])).toEqual([
+      'fail',
+      ['flow number, specimen 1 of 20 cycles or more instead of 10'],
+    ]);
+    expect(of(beside, { min: '50' }, [30, 40, 50])[1]).toEqual([
+      'flow number of 50 cycles or more instead of 40 (mean of 3)',
+    ]);
+    expect(of(beside, { min: '50' }, [10, 20, 30])[1]).toEqual([]);
+  });
+});
