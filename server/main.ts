@@ -16,6 +16,7 @@ import { createHousekeeping } from './jobs/housekeeping';
 import { jobHandlers } from './jobs/job-handlers';
 import { createJobRunner } from './jobs/job-runner';
 import { listen } from './listen';
+import './lend-digest';
 import { createLog } from './log';
 import { createOutboxSender } from './mail/outbox-sender';
 import { createMailTransport } from './mail/transport';

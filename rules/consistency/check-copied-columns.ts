@@ -57,9 +57,10 @@ interface Kind {
 function copies(readings: readonly Reading[], kind: Kind): ConsistencyObservation[] {
   const columns = new Map<string, Reading[]>();
   for (const reading of readings) {
-    const { [kind.without]: _running, ...head } = reading.at;
-    const key = conditionsKey(head);
-    columns.set(key, [...(columns.get(key) ?? []), reading]);
+    const key = conditionsKey(reading.at, kind.without);
+    const column = columns.get(key);
+    if (column) column.push(reading);
+    else columns.set(key, [reading]);
   }
   const all = [...columns.values()];
   return all.flatMap((column, place) =>

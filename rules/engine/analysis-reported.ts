@@ -5,9 +5,9 @@ import { causeInputsOf } from './analysis-cause-inputs';
 import { causeOf } from './analysis-causes';
 import { halfDisplayedUnit } from './analysis-digits';
 import { designTrial, isSpecial, type RecordIndex, specialKey, withoutGaps } from './analysis-index';
-import { type AnalysisNode, evidenceOf } from './analysis-node';
+import type { AnalysisNode } from './analysis-node';
 import { propagatedHalfUnits } from './analysis-slopes';
-import type { Evidence } from './finding';
+import { recomputedValueOf } from './recomputed-value';
 
 /** Finds what the workbook itself states for a computed value and keeps it with the value. */
 export function attachReported(node: AnalysisNode, index: RecordIndex): void {
@@ -61,35 +61,26 @@ function recomputedValue(
   const allowed = reported === null ? null : toleranceOf(node, reported);
   const agrees = reported === null || allowed === null ? null : allowed.includes();
   const laboratory = index.laboratory === 'agency' ? ('agency' as const) : undefined;
-  // The thread to the cells and the search for a cause are dear, and most values are never asked for either.
-  let inputs: Evidence[] | undefined;
-  let cause: NamedCause | null | undefined;
-  return {
-    quantity: node.quantity,
-    at: withoutGaps({ ...node.at, laboratory }),
-    value: node.value,
-    unit: node.unit,
-    origin: node.origin === 'interpolated' || node.origin === 'converted' ? node.origin : 'recomputed',
-    symbol: node.symbol,
-    formula: node.formula ?? '',
-    get inputs() {
-      inputs ??= node.inputs.map(evidenceOf);
-      return inputs;
+  return recomputedValueOf(
+    {
+      quantity: node.quantity,
+      at: withoutGaps({ ...node.at, laboratory }),
+      value: node.value,
+      unit: node.unit,
+      origin: node.origin === 'interpolated' || node.origin === 'converted' ? node.origin : 'recomputed',
+      symbol: node.symbol,
+      formula: node.formula ?? '',
+      count: node.count ?? 1,
+      specimens: node.specimens.map(({ at, value }) => ({ specimen: at.specimen ?? '', value })),
+      reported,
+      agrees,
+      node,
     },
-    count: node.count ?? 1,
-    specimens: node.specimens.map(({ at, value }) => ({ specimen: at.specimen ?? '', value })),
-    reported,
-    get tolerance() {
-      return allowed === null ? null : allowed.tolerance();
+    {
+      tolerance: () => (allowed === null ? null : allowed.tolerance()),
+      cause: () => (agrees === false ? causeFor(node, reported!, trialNodes, ofSpecimens) : null),
     },
-    agrees,
-    get cause() {
-      if (cause === undefined)
-        cause = agrees === false ? causeFor(node, reported!, trialNodes, ofSpecimens) : null;
-      return cause;
-    },
-    node,
-  };
+  );
 }
 
 /** A mean of stated values shows no digits of its own: its cause is the one that all its specimens share. */

@@ -36,6 +36,11 @@ export interface RecomputedValue {
   cause: NamedCause | null;
   /** The calculation itself, to be repeated with another input. */
   node: AnalysisNode;
+  /** The same value otherwise told: in another unit, or by another tolerance. */
+  with(
+    changes: Partial<Pick<RecomputedValue, 'value' | 'agrees'>>,
+    later?: { tolerance?: () => number | null; cause?: () => NamedCause | null },
+  ): RecomputedValue;
 }
 
 export interface DesignPoint {

@@ -36,9 +36,9 @@ function arrayJson(values: readonly unknown[]): string {
 /** RFC 8785, section 3.2.3: sorted by UTF-16 code units, which is how sort() compares strings. */
 function membersJson(value: Record<string, unknown>): string {
   let json = '';
-  for (const { name, opening } of sortedMembers(Object.keys(value))) {
+  for (const { name, opening, following } of sortedMembers(Object.keys(value))) {
     const member = value[name];
-    if (member !== undefined) json += `${json === '' ? '' : ','}${opening}${canonicalText(member)}`;
+    if (member !== undefined) json += (json === '' ? opening : following) + canonicalText(member);
   }
   return `{${json}}`;
 }
@@ -47,19 +47,38 @@ interface Member {
   name: string;
   /** `"name":` */
   opening: string;
+  /** `,"name":` */
+  following: string;
+}
+
+interface Shape {
+  names: readonly string[];
+  members: readonly Member[];
 }
 
 /** Objects of a few shapes come by the thousand: each shape is sorted once. */
-function sortedMembers(names: string[]): Member[] {
-  // With their number before them, names with a line break of their own are never taken for several names.
-  const shape = `${names.length}\n${names.join('\n')}`;
-  const kept = shapes.get(shape);
-  if (kept) return kept;
-  const members = names.toSorted(byCodeUnit).map((name) => ({ name, opening: `${quoted(name)}:` }));
+function sortedMembers(names: readonly string[]): readonly Member[] {
+  const first = names[0] ?? '';
+  const alike = shapes.get(first) ?? [];
+  for (const shape of alike) if (isSame(shape.names, names)) return shape.members;
+  const members = names.toSorted(byCodeUnit).map((name) => {
+    const opening = `${quoted(name)}:`;
+    return { name, opening, following: `,${opening}` };
+  });
   // A name of a record may be anything, so the shapes of a long-lived server must not pile up.
-  if (shapes.size >= KEPT_SHAPES) shapes.clear();
-  if (!names.some((name) => name.includes('\n'))) shapes.set(shape, members);
+  if (keptShapes >= KEPT_SHAPES) {
+    shapes.clear();
+    keptShapes = 0;
+  }
+  shapes.set(first, [...(shapes.get(first) ?? []), { names, members }]);
+  keptShapes += 1;
   return members;
+}
+
+function isSame(left: readonly string[], right: readonly string[]): boolean {
+  if (left.length !== right.length) return false;
+  for (let place = 0; place < left.length; place += 1) if (left[place] !== right[place]) return false;
+  return true;
 }
 
 function byCodeUnit(left: string, right: string): number {
@@ -67,7 +86,9 @@ function byCodeUnit(left: string, right: string): number {
 }
 
 const KEPT_SHAPES = 500;
-const shapes = new Map<string, Member[]>();
+let keptShapes = 0;
+/** By the first name. */
+const shapes = new Map<string, Shape[]>();
 
 function quoted(text: string): string {
   return NEEDS_ESCAPE.test(text) ? JSON.stringify(text) : `"${text}"`;

@@ -10,10 +10,10 @@ import type { CreepAnalysis } from './creep-analysis';
 import { summarise } from './disposition';
 import { evaluateRule } from './evaluate-rule';
 import { type CheckResult, type Finding, findingKey, type RecomputedReading } from './finding';
-import { byClauseThenSubject } from './order';
+import { inOrder } from './order';
 import { roomToMove } from './room-to-move';
 import { sealOf } from './seal';
-import { sharesSpecimens, unsettledByTests } from './specimens-of-tests';
+import { unsettledByTests } from './specimens-of-tests';
 import { type World, worldOf } from './world';
 
 /**
@@ -22,8 +22,8 @@ import { type World, worldOf } from './world';
  */
 export function evaluate(record: MixRecord, edition: ResolvedEdition, context: CheckContext): CheckResult {
   const analysis = analysisOf(record, edition);
-  const world = settledWorld({ record, edition, context, analysis });
-  const judged = edition.rules.flatMap((rule) => evaluateRule(world, rule)).toSorted(byClauseThenSubject);
+  const world = worldOf({ record, edition, context, analysis });
+  const judged = inOrder(settledFindings(world), edition);
   const creep = analyseCreep(world);
   const findings = [...judged, ...dataFindings(world, judged, creep)];
   assertUniqueKeys(findings);
@@ -45,33 +45,26 @@ export function evaluate(record: MixRecord, edition: ResolvedEdition, context: C
   };
 }
 
-/** The world in which rules are judged, with the findings that unanswered doubts leave open. */
-function settledWorld(input: {
-  record: MixRecord;
-  edition: ResolvedEdition;
-  context: CheckContext;
-  analysis: Analysis;
-}): World {
-  const world = worldOf(input);
-  const { record, edition, context } = input;
-  const isDoubted = record.doubts.some(({ alternatives }) => alternatives.length > 0);
-  if (!isDoubted && !sharesSpecimens(record)) return world;
-  const findings = edition.rules.flatMap((rule) => evaluateRule(world, rule));
-  const evaluateOther = (other: MixRecord, rules = edition.rules) => {
+/** Findings of all rules. Those that an unanswered doubt or a shared label leaves open are made again, as open ones. */
+function settledFindings(world: World): Finding[] {
+  const { record, edition, context, view } = world;
+  const { rules } = edition;
+  const ofRules = rules.map((rule) => evaluateRule(world, rule));
+  const findings = ofRules.flat();
+  const evaluateOther = (other: MixRecord, some = rules) => {
     const otherWorld = worldOf({ record: other, edition, context, analysis: analysisOf(other, edition) });
-    return rules.flatMap((rule) => evaluateRule(otherWorld, rule));
+    return some.flatMap((rule) => evaluateRule(otherWorld, rule));
   };
   const unsettled = new Map([
-    ...unsettledByTests({
-      record,
-      rules: edition.rules,
-      view: world.view,
-      findings,
-      evaluate: evaluateOther,
-    }),
+    ...unsettledByTests({ record, rules, view, findings, evaluate: evaluateOther }),
     ...unsettledBy({ record, findings, evaluate: (other) => evaluateOther(other) }),
   ]);
-  return worldOf({ ...input, unsettled });
+  if (unsettled.size === 0) return findings;
+  const open = { ...world, unsettled };
+  return rules.flatMap((rule, place) => {
+    const own = ofRules[place] ?? [];
+    return own.some((finding) => unsettled.has(findingKey(finding))) ? evaluateRule(open, rule) : own;
+  });
 }
 
 /** The analysis with the edition's own tolerances between reported and recomputed values. */
@@ -101,7 +94,7 @@ function withTolerance(value: RecomputedValue, tolerances: Record<string, number
   const tolerance = tolerances[value.quantity];
   if (tolerance === undefined || value.reported === null || value.reported.value === null) return value;
   const agrees = Math.abs(value.reported.value - value.value) <= tolerance * (1 + 1e-12);
-  return { ...value, tolerance, agrees, cause: agrees ? null : value.cause };
+  return value.with({ agrees }, { tolerance: () => tolerance, cause: () => (agrees ? null : value.cause) });
 }
 
 function dataFindings(world: World, judged: readonly Finding[], creep: CreepAnalysis): Finding[] {
@@ -122,9 +115,7 @@ function recomputedReading(value: RecomputedValue): RecomputedReading {
     origin: value.origin,
     source: null,
     formula: value.formula,
-    get inputs() {
-      return value.inputs;
-    },
+    inputs: value.inputs,
     reported: value.reported?.value ?? null,
   };
 }

@@ -1,8 +1,7 @@
-import { sha256 } from '@noble/hashes/sha2.js';
-import { bytesToHex, utf8ToBytes } from '@noble/hashes/utils.js';
 import type { CheckContext, MixRecord, Reading } from '../record';
 import type { ResolvedEdition } from '../rule-sets/resolve';
 import { canonicalText } from './canonical-text';
+import { digest } from './digest';
 import { ENGINE_VERSION } from './engine-version';
 import type { Evidence, Finding, Seal } from './finding';
 
@@ -55,7 +54,7 @@ export function resolvedEditionHash(edition: ResolvedEdition): string {
 }
 
 export function hashOf(value: unknown): string {
-  return bytesToHex(sha256(utf8ToBytes(canonicalText(value))));
+  return digest(canonicalText(value));
 }
 
 /** A resolved edition does not change, and many records are judged by it. */

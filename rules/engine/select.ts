@@ -84,9 +84,10 @@ function leaveUnnamed<T extends Candidate>(
   candidates: T[],
   selector: Selector,
 ): { ok: true; chosen: T[] } | Obstacle {
-  if (selector === 'specimen') return { ok: true, chosen: candidates };
+  if (selector === 'specimen' || candidates.every((each) => each.at[selector] === undefined)) {
+    return { ok: true, chosen: candidates };
+  }
   const plain = candidates.filter((each) => each.at[selector] === undefined);
-  if (plain.length === candidates.length) return { ok: true, chosen: candidates };
   if (plain.length > 0 && preferPlain) return { ok: true, chosen: plain };
   const first = candidates.find((each) => each.at[selector] !== undefined)?.at[selector];
   const areAlike =

@@ -24,21 +24,21 @@ export function unsettledByTests(input: {
   if (shared.readings.size === 0) return unsettled;
   const readings = input.record.readings.filter((reading) => !shared.readings.has(reading));
   // How many are left says nothing about what they would be judged as.
-  const rules = input.rules.map(withoutLeastCount);
+  const decided = new Set(input.findings.filter(isDecided).map(({ rule }) => rule));
+  const rules = input.rules.filter(({ id }) => decided.has(id)).map(withoutLeastCount);
   const others = input.evaluate({ ...input.record, readings }, rules);
   const outcomes = new Map(others.map((finding) => [findingKey(finding), finding.outcome]));
   for (const finding of input.findings) {
     const outcome = outcomes.get(findingKey(finding));
     if (outcome === undefined || outcome === finding.outcome || !DECIDED.has(outcome)) continue;
-    if (!DECIDED.has(finding.outcome)) continue;
+    if (!isDecided(finding)) continue;
     unsettled.set(findingKey(finding), undecided(reasonOf(input.view, shared, outcome), REMEDY));
   }
   return unsettled;
 }
 
-/** Whether a volumetric specimen has the label of one that was tested otherwise. */
-export function sharesSpecimens(record: MixRecord): boolean {
-  return sharedSpecimens(record).readings.size > 0;
+function isDecided({ outcome }: Finding): boolean {
+  return DECIDED.has(outcome);
 }
 
 const DECIDED = new Set<string>(['pass', 'fail', 'not applicable']);
@@ -78,10 +78,17 @@ function keyOf({ trial = 'design', laboratory = 'contractor', specimen }: Condit
 }
 
 function withoutLeastCount(rule: ResolvedRule): ResolvedRule {
-  if (rule.measure.kind !== 'reading') return rule;
+  if (rule.measure.kind !== 'reading' || rule.measure.minimumCount === undefined) return rule;
+  const kept = withoutCounts.get(rule);
+  if (kept) return kept;
   const { minimumCount: _minimumCount, ...measure } = rule.measure;
-  return { ...rule, measure };
+  const without = { ...rule, measure };
+  withoutCounts.set(rule, without);
+  return without;
 }
+
+/** One and the same for every record, so that it is put into words once. */
+const withoutCounts = new WeakMap<ResolvedRule, ResolvedRule>();
 
 function reasonOf(view: EditionView, { specimens, tests }: Shared, outcome: string): string {
   const [only, ...others] = specimens;

@@ -1,3 +1,4 @@
+import '../lend-digest';
 import { runCheck } from './run-check';
 
 process.exitCode = await runCheck(process.argv.slice(2), {

@@ -2,6 +2,7 @@ import { parseArgs } from 'node:util';
 import { evaluate } from '#rules/engine/evaluate';
 import { readWorkbook } from '#rules/reading/interpret';
 import { templateMapping } from '#rules/reading/template-mapping';
+import '#server/lend-digest';
 import { decodeWorkbook } from '#server/workbook/decode';
 import { demoEdition, demoWorkbooks } from '#tests/workbooks/demo/write-demo-workbooks';
 import { benchCreepFit } from './creep-fit';
