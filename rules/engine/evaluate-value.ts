@@ -122,7 +122,7 @@ function judgedFinding(request: ValueRequest, sample: Sample, limit: ResolvedLim
     .filter(Boolean)
     .join(' ');
   return makeFinding(world, rule, {
-    // Member by member: a spread here costs as much as all the judging, for every finding.
+    // Member by member: most findings come this way, and spreads stood out among their costs.
     subject,
     at,
     quantity,

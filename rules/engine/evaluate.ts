@@ -10,7 +10,7 @@ import type { CreepAnalysis } from './creep-analysis';
 import { summarise } from './disposition';
 import { evaluateRule } from './evaluate-rule';
 import { type CheckResult, type Finding, findingKey, type RecomputedReading } from './finding';
-import { inOrder } from './order';
+import { byClauseThenSubject } from './order';
 import { roomToMove } from './room-to-move';
 import { sealOf } from './seal';
 import { unsettledByTests } from './specimens-of-tests';
@@ -23,7 +23,7 @@ import { type World, worldOf } from './world';
 export function evaluate(record: MixRecord, edition: ResolvedEdition, context: CheckContext): CheckResult {
   const analysis = analysisOf(record, edition);
   const world = worldOf({ record, edition, context, analysis });
-  const judged = inOrder(settledFindings(world), edition);
+  const judged = settledFindings(world).toSorted(byClauseThenSubject);
   const creep = analyseCreep(world);
   const findings = [...judged, ...dataFindings(world, judged, creep)];
   assertUniqueKeys(findings);
