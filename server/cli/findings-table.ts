@@ -11,6 +11,10 @@ export function findingsTable(check: CheckResult, reading: ReadingResult): strin
     ...lines,
     ...(folded > 0 ? ['', `${folded} findings are not applicable.`] : []),
     ...section(
+      'Not as the mapping knows it',
+      reading.departures.map(({ sheet, cell, text }) => `${placeOf(sheet ?? '', cell ?? '')}  ${text}`.trim()),
+    ),
+    ...section(
       'In doubt',
       reading.doubts.map(({ sheet, cell, text, reason }) => `${placeOf(sheet, cell)}  ${text}  ${reason}`),
     ),

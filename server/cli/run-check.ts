@@ -35,8 +35,8 @@ async function check(argv: string[], output: Output): Promise<0 | 1> {
   const grid = await loadGrid(given.workbook);
   const mapping = await loadMapping(given.mapping, grid, edition);
   const read =
-    mapping === null
-      ? readAnyLayout({ grid, edition, answers: [] })
+    mapping === null || mapping.rest === 'headings'
+      ? readAnyLayout({ grid, edition, answers: [], mapping })
       : readWorkbook({ grid, mapping, edition, answers: [] });
   const reading = withAttributes(read, attributes);
   const context = { submittedOn: given.submittedOn, lettingOn: given.lettingOn, facts: {} };
@@ -58,9 +58,9 @@ function withAttributes(reading: ReadingResult, attributes: Record<string, Attri
   return { ...reading, record, doubts };
 }
 
-function asJson({ record, unread, doubts }: ReadingResult, check: CheckResult): string {
+function asJson({ record, unread, doubts, departures }: ReadingResult, check: CheckResult): string {
   const { analysis, summary, findings, seal } = check;
-  return JSON.stringify({ record, reading: { unread, doubts }, analysis, summary, findings, seal }, null, 2);
+  return JSON.stringify({ record, reading: { unread, doubts, departures }, analysis, summary, findings, seal }, null, 2);
 }
 
 function hasOpenRequirement({ findings }: CheckResult): boolean {

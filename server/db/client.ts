@@ -4,6 +4,8 @@ import { drizzle, type MySql2PreparedQueryHKT, type MySql2QueryResultHKT } from 
 import mysql from 'mysql2/promise';
 import * as checks from './schema/checks';
 import * as files from './schema/files';
+import * as learning from './schema/learning';
+import * as mappings from './schema/mappings';
 import * as people from './schema/people';
 import * as projects from './schema/projects';
 import * as returns from './schema/returns';
@@ -14,6 +16,8 @@ import * as work from './schema/work';
 export const schema = {
   ...checks,
   ...files,
+  ...learning,
+  ...mappings,
   ...people,
   ...projects,
   ...returns,

@@ -5,7 +5,14 @@ import { connectionOptions } from './client';
 import { underLease } from './lease';
 
 /** Tables that the application may only add to. The triggers of the migrations refuse it once more. */
-export const appendOnlyTables = ['audit', 'edition_events', 'editions', 'resolved_editions'] as const;
+export const appendOnlyTables = [
+  'audit',
+  'edition_events',
+  'editions',
+  'mapping_versions',
+  'reading_acts',
+  'resolved_editions',
+] as const;
 /** Stored bytes never change either; only whoever resets the database removes them. */
 const insertOnlyTables: readonly string[] = [...appendOnlyTables, 'files'];
 const ownersTables: readonly string[] = ['__drizzle_migrations', 'leases'];

@@ -1,10 +1,13 @@
 import { and, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import type { CellGrid } from '#rules/reading/cell-grid';
+import { correctionsInForce } from '../commands/readings/acts-in-force';
 import { keepReading } from '../commands/readings/keep-reading';
 import { readGrid } from '../commands/readings/read-grid';
+import { recogniseLayout } from '../commands/readings/recognise-layout';
 import { loadGrid, storeGrid } from '../db/queries/cell-grids';
 import { type Reader, revisionsOf } from '../db/queries/reader';
+import { listReadingActs } from '../db/queries/reading-acts';
 import { listAnswers, loadFile } from '../db/queries/records';
 import { findRevision, lockRevision, type RevisionRow } from '../db/queries/revisions';
 import { snapshotOfSection } from '../db/queries/section-snapshot';
@@ -36,12 +39,20 @@ export async function readWorkbookJob(context: JobContext): Promise<void> {
   }
   await context.report({ text: `${row.workbook.fileName}: taking readings and checking them.` });
   const edition = await loadResolvedEdition(deps.db, section.resolvedHash);
+  const acts = await listReadingActs(deps.db, reader, revisionId);
   const { read, mapping } = await readGrid(deps.db, {
     grid,
     edition,
     resolvedHash: section.resolvedHash,
     agencyId: row.agency.id,
     answers: await listAnswers(deps.db, reader, revisionId),
+    corrections: correctionsInForce(acts, fileId).map(({ correction }) => correction),
+    learned: await recogniseLayout(deps.db, {
+      grid,
+      edition,
+      organisationId: reader.organisationId,
+      laboratoryId: row.revision.laboratoryId,
+    }),
   });
   await deps.db.transaction(async (tx) => {
     const locked = await lockRevision(tx, reader, revisionId);

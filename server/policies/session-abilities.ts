@@ -40,6 +40,11 @@ export function confirmsSections(actor: Pick<Actor, 'kind' | 'roles'>): boolean 
   return actor.kind === 'agency' && hasRole(actor, 'rule author', 'administrator');
 }
 
+/** How a laboratory's workbooks are read is its own and the quality manager's to say. */
+export function changesMappings(actor: Pick<Actor, 'roles'>): boolean {
+  return hasRole(actor, 'laboratory', 'quality manager');
+}
+
 /** A laboratory is a record of its organisation, kept by those who work with it. */
 export function keepsLaboratories(actor: Pick<Actor, 'roles'>): boolean {
   return hasRole(actor, 'administrator', 'laboratory', 'quality manager');

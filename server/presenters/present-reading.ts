@@ -1,12 +1,16 @@
 import type { SheetGrid } from '#rules/reading/cell-grid';
+import type { Correction } from '#rules/reading/correction';
+import type { WordsFor } from '#rules/reading/mapping-sentence';
 import type { Answer, ReadingResult } from '#rules/reading/reading-result';
-import type { MixRecord } from '#rules/record';
+import type { MixRecord, Reading } from '#rules/record';
 import type { Scalar } from '#rules/rule-sets/attribute';
 import type { DocumentType } from '#rules/rule-sets/document-types';
 import type { DocumentRow, ReadingView } from '#shared/contracts/readings';
 import type { DocumentRow as StoredDocument } from '../db/queries/records';
 import { type AttributeSources, askedAttributes } from './asked-attributes';
 import { doubtLetter } from './doubt-letter';
+import { overrulingReading } from './overruling-reading';
+import { readingLabel } from './present-preview';
 import { understoodGroups } from './understood-groups';
 
 interface ReadingParts {
@@ -24,6 +28,11 @@ interface ReadingParts {
   edition: AttributeSources['edition'];
   documents: StoredDocument[];
   documentTypes: DocumentType[];
+  mapping: { id: string; name: string; number: number } | null;
+  learned: ReadingView['learned'];
+  corrections: { id: string; by: string; at: Date; correction: Correction }[];
+  typedReadings: { id: string; by: string; at: Date; reading: Reading }[];
+  words: WordsFor;
   mayAnswer: boolean;
 }
 
@@ -55,12 +64,31 @@ export function presentReading(parts: ReadingParts): ReadingView {
     understood: understoodGroups(record.readings),
     asked: askedAttributes({ edition, workbook: reading.record.attributes, facts, typed }),
     documents: documents.map((row) => presentDocument(row, parts.documentTypes)),
-    mapping: null,
-    learned: null,
-    corrections: [],
-    typed: [],
+    mapping: parts.mapping && { ...parts.mapping, departures: reading.departures },
+    learned: parts.learned,
+    corrections: parts.corrections.map(({ id, by, at, correction }) => ({
+      ...correction,
+      id,
+      by,
+      at: at.toISOString(),
+    })),
+    typed: parts.typedReadings.map(({ id, by, at, reading: typedReading }) => ({
+      id,
+      reading: typedReading,
+      label: readingLabel(typedReading, parts.words),
+      overruled: overruledBy(typedReading, reading),
+      by,
+      at: at.toISOString(),
+    })),
     abilities: { answer: parts.mayAnswer, attach: parts.mayAnswer },
   };
+}
+
+function overruledBy(typed: Reading, { record }: ReadingResult): string | null {
+  const stated = overrulingReading(typed, record);
+  if (stated === null) return null;
+  const { sheet = '', cell = '', text = '' } = stated.source ?? {};
+  return `The workbook says ${text} in ${sheet === '' ? cell : `${sheet} ${cell}`}.`;
 }
 
 function countsOf(sheet: string, { uses, doubts, unread }: ReadingResult) {

@@ -11,6 +11,7 @@ import { invitePersonRoute } from './invitations/invite-person';
 import { withdrawInvitationRoute } from './invitations/withdraw-invitation';
 import { addLaboratoryRoute } from './laboratories/add-laboratory';
 import { listLaboratoriesRoute } from './laboratories/list-laboratories';
+import { mappingRoutes } from './mappings/mappings';
 import { changeOrganisationRoute } from './organisation/change-organisation';
 import { getOrganisationRoute } from './organisation/get-organisation';
 import { changePersonRoute } from './people/change-person';
@@ -53,6 +54,7 @@ export function allRoutes(settings: Settings): Route[] {
     ...draftRoutes,
     ...[getHomeRoute, getQueueRoute, getQueueItemRoute, searchRoute],
     ...submittalRoutes,
+    ...mappingRoutes,
     ...returnRoutes,
     ...(settings.smtpUrl === null ? caughtMailRoutes : []),
   ];

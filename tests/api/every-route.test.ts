@@ -90,6 +90,8 @@ const unguarded: Record<string, string> = {
   'POST /api/password-resets/:token': 'the link works once',
   'POST /api/invitation-links/:token': 'the link works once',
   'POST /api/set-up/:token': 'the link works once',
+  'POST /api/submittals/:submittalId/revisions/:number/reading/preview': 'nothing is kept',
+  'POST /api/mappings/import/preview': 'nothing is kept',
 };
 
 describe('every write', () => {

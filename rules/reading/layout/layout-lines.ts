@@ -70,8 +70,9 @@ function rightLines(
   around: Surroundings,
 ): LayoutLine[] {
   const isHeaded = table.headings.length > 0;
-  const found = table.rows.flatMap((row) =>
-    labelledRuns(row, around).map((run) => ({ ...run, titles: titlesOf(table, around) })),
+  const titles = titlesOf(table, around);
+  const found = table.rows.flatMap((row, at) =>
+    labelledRuns(row, around).map((run) => ({ ...run, isApart: standsApart(row, table.rows[at - 1]) })),
   );
   const heads = new Map(
     [...columns.values()].flatMap((column) => {
@@ -79,7 +80,7 @@ function rightLines(
       return head ? [[column.column, headingText(head.text)] as const] : [];
     }),
   );
-  return found.map(({ label, cells, titles }, at): LayoutLine => {
+  return found.map(({ label, cells, isApart }, at): LayoutLine => {
     const beside = (other: (typeof found)[number] | undefined) =>
       other && other.label.column === label.column ? nameOf(other.label) : null;
     return {
@@ -92,9 +93,14 @@ function rightLines(
       between: [beside(found[at - 1]), beside(found[at + 1])],
       anchor: label,
       cells,
-      isLabel: !isHeaded || columns.get(label.column)?.kind === 'label',
+      isLabel: !isHeaded || isApart || columns.get(label.column)?.kind === 'label',
     };
   });
+}
+
+/** A label and its value under a blank row are no row of the table over it. */
+function standsApart({ row, cells }: TableRow, before: TableRow | undefined): boolean {
+  return cells.length === 2 && before !== undefined && row > before.row + 1;
 }
 
 /** The texts of a row, each with the values that follow it up to the next text. */

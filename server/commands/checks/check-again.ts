@@ -10,6 +10,7 @@ import { writeAudit } from '../../db/write-audit';
 import type { Deps } from '../../deps';
 import type { Actor } from '../../policies/actor';
 import { Problem } from '../../problem';
+import { learnedOf } from '../readings/change-draft';
 import { keepReading } from '../readings/keep-reading';
 import { storeCheck } from './store-check';
 
@@ -42,7 +43,7 @@ export async function checkAgain(deps: Deps, { actor, requestId, row, version }:
         section,
         edition,
         read: kept.reading,
-        mapping: { name: kept.mappingName, document: kept.mapping },
+        mapping: { name: kept.mappingName, document: kept.mapping, learned: learnedOf(locked) },
         madeById: actor.personId,
       });
       return;

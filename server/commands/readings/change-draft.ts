@@ -1,5 +1,7 @@
 import { and, eq } from 'drizzle-orm';
+import type { CheckResult } from '#rules/engine/finding';
 import type { ReadingResult } from '#rules/reading/reading-result';
+import type { CheckContext, MixRecord } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import type { Database } from '../../db/client';
 import { findMixRecord } from '../../db/queries/records';
@@ -12,6 +14,7 @@ import { expectWritten } from '../../middleware/if-match';
 import type { Actor } from '../../policies/actor';
 import { Problem } from '../../problem';
 import { keepReading } from './keep-reading';
+import type { MappingUsed } from './read-grid';
 
 export interface DraftChange {
   actor: Actor;
@@ -20,7 +23,10 @@ export interface DraftChange {
 
 export interface KeptDraft {
   read: ReadingResult;
-  mapping: { name: string; document: Record<string, unknown> };
+  mapping: MappingUsed;
+  record: MixRecord;
+  /** The workbook's file; it may have been replaced since the page was opened. */
+  fileId: string;
   section: SectionSnapshot;
   edition: ResolvedEdition;
 }
@@ -33,9 +39,9 @@ export async function changeDraft(
   deps: Deps,
   { actor, row }: DraftChange,
   change: (tx: Database, kept: KeptDraft) => Promise<Pick<KeptDraft, 'read' | 'mapping'> | undefined>,
-): Promise<void> {
+): Promise<ChangedDraft> {
   const { revision, submittal } = row;
-  await deps.db.transaction(async (tx) => {
+  return deps.db.transaction(async (tx) => {
     const locked = await lockRevision(tx, actor, revision.id);
     if (locked?.state !== 'draft') {
       throw new Problem('wrong-state', { detail: 'Only a draft can be changed.' });
@@ -48,12 +54,14 @@ export async function changeDraft(
     const edition = await loadResolvedEdition(tx, section.resolvedHash);
     const kept = {
       read: record.reading,
-      mapping: { name: record.mappingName, document: record.mapping },
+      mapping: { name: record.mappingName, document: record.mapping, learned: learnedOf(locked) },
+      record: record.record,
+      fileId: locked.workbookFileId,
       section,
       edition,
     };
     const reread = (await change(tx, kept)) ?? kept;
-    await keepReading(tx, deps, {
+    const changed = await keepReading(tx, deps, {
       reader: actor,
       row: { ...row, revision: locked },
       section,
@@ -68,5 +76,21 @@ export async function changeDraft(
         .set({ version: revision.version + 1 })
         .where(and(eq(revisions.id, revision.id), eq(revisions.version, revision.version))),
     );
+    return { before: kept, ...changed };
   });
+}
+
+interface ChangedDraft {
+  before: KeptDraft;
+  record: MixRecord;
+  result: CheckResult;
+  context: CheckContext;
+}
+
+/** The laboratory's mapping that a revision's workbook was read with, where it was one. */
+export function learnedOf({
+  mappingId,
+  mappingNumber,
+}: Pick<RevisionRow['revision'], 'mappingId' | 'mappingNumber'>): MappingUsed['learned'] {
+  return mappingId === null || mappingNumber === null ? null : { id: mappingId, number: mappingNumber };
 }

@@ -1,8 +1,9 @@
 import type { ReadingResult } from '#rules/reading/reading-result';
-import type { DocumentRecord, MixRecord } from '#rules/record';
+import type { DocumentRecord, MixRecord, Reading } from '#rules/record';
 import { type Scalar, withStandardAttributes } from '#rules/rule-sets/attribute';
 import { sameValue } from '#rules/rule-sets/match-value';
 import { type AttributeSources, askedAttributes, conflictDoubts } from '../../presenters/asked-attributes';
+import { overrulingReading } from '../../presenters/overruling-reading';
 
 export interface TypedAttribute {
   name: string;
@@ -15,6 +16,7 @@ export interface TypedAttribute {
 export interface RecordParts {
   read: Pick<ReadingResult, 'record'>;
   typed: readonly TypedAttribute[];
+  typedReadings?: readonly Reading[];
   /** In place of those that were read: with their files, and with those added on the page. */
   documents: DocumentRecord[];
   edition: AttributeSources['edition'];
@@ -46,7 +48,13 @@ export function composeRecord({ read, documents, edition, facts, ...parts }: Rec
     typed: Object.fromEntries(typed.map(({ name, value }) => [name, value])),
   });
   const doubts = record.doubts.filter(({ about }) => !answered.has(about.attribute ?? ''));
-  return { attributes, readings: record.readings, documents, doubts: [...doubts, ...conflicts] };
+  const byHand = (parts.typedReadings ?? []).filter((each) => overrulingReading(each, record) === null);
+  return {
+    attributes,
+    readings: [...record.readings, ...byHand],
+    documents,
+    doubts: [...doubts, ...conflicts],
+  };
 }
 
 /**

@@ -3,33 +3,21 @@ import type { Answer } from '#rules/reading/reading-result';
 import type { Doubt } from '#rules/record';
 import type { ProblemError } from '#shared/contracts/problems';
 import type { Database } from '../../db/client';
-import { loadGrid } from '../../db/queries/cell-grids';
-import { listAnswers } from '../../db/queries/records';
 import { answers } from '../../db/schema/submittals';
 import type { Deps } from '../../deps';
 import { Problem } from '../../problem';
-import { changeDraft, type DraftChange } from './change-draft';
-import { readGrid } from './read-grid';
+import type { DraftChange } from './change-draft';
 
 type GivenAnswer = Omit<Answer, 'answer'> & { answer: string | null };
 
-/** Keeps answers to doubts, takes those back that are null, and reads the workbook again from its stored cells. */
-export async function keepAnswers(deps: Deps, act: DraftChange & { given: GivenAnswer[] }): Promise<void> {
-  const { row, actor, given } = act;
-  await changeDraft(deps, act, async (tx, kept) => {
-    refuseUnknown(kept.read.doubts, given);
-    for (const answer of given) await keepAnswer(tx, deps, act, answer);
-    const grid = await loadGrid(tx, actor, row.workbook.id);
-    if (grid === null) throw new Error(`The cells of ${row.workbook.id} are not stored.`);
-    const { read, mapping } = await readGrid(tx, {
-      grid,
-      edition: kept.edition,
-      resolvedHash: kept.section.resolvedHash,
-      agencyId: row.agency.id,
-      answers: await listAnswers(tx, actor, row.revision.id),
-    });
-    return { read, mapping };
-  });
+/** Keeps answers to doubts and takes those back that are null. */
+export async function keepAnswers(
+  tx: Database,
+  deps: Deps,
+  act: DraftChange & { given: readonly GivenAnswer[]; doubts: readonly Doubt[] },
+): Promise<void> {
+  refuseUnknown(act.doubts, act.given);
+  for (const answer of act.given) await keepAnswer(tx, deps, act, answer);
 }
 
 /** Every fault at once: a cell without a doubt, a text that has changed, an answer that was not offered. */

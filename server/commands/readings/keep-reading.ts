@@ -2,11 +2,12 @@ import { and, eq, lt, ne } from 'drizzle-orm';
 import { evaluate } from '#rules/engine/evaluate';
 import type { CheckResult } from '#rules/engine/finding';
 import type { ReadingResult } from '#rules/reading/reading-result';
-import type { MixRecord } from '#rules/record';
+import type { CheckContext, MixRecord } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import { dateOfInstant } from '#shared/format/dates';
 import type { Database } from '../../db/client';
 import { type Reader, revisionsOf } from '../../db/queries/reader';
+import { listReadingActs } from '../../db/queries/reading-acts';
 import { listTypedAttributes } from '../../db/queries/records';
 import type { RevisionRow } from '../../db/queries/revisions';
 import type { SectionSnapshot } from '../../db/queries/section-snapshot';
@@ -15,8 +16,10 @@ import type { Deps } from '../../deps';
 import { changeSummary } from '../../presenters/change-summary';
 import { mixDescription } from '../../presenters/mix-description';
 import { storeCheck } from '../checks/store-check';
+import { typedInForce } from './acts-in-force';
 import { composeRecord } from './compose-record';
 import { keepDocuments } from './keep-documents';
+import type { MappingUsed } from './read-grid';
 
 export interface KeptReading {
   reader: Reader;
@@ -25,7 +28,7 @@ export interface KeptReading {
   section: SectionSnapshot;
   edition: ResolvedEdition;
   read: ReadingResult;
-  mapping: { name: string; document: Record<string, unknown> };
+  mapping: MappingUsed;
   /** Null where the product itself reads it. */
   madeById: string | null;
 }
@@ -35,11 +38,12 @@ export async function keepReading(
   tx: Database,
   deps: Pick<Deps, 'now' | 'newId'>,
   { reader, row, section, edition, read, mapping, madeById }: KeptReading,
-): Promise<CheckResult> {
+): Promise<{ record: MixRecord; result: CheckResult; context: CheckContext }> {
   const { revision, project, agency } = row;
   const record = composeRecord({
     read,
     typed: await listTypedAttributes(tx, reader, revision.id),
+    typedReadings: typedInForce(await listReadingActs(tx, reader, revision.id)).map(({ reading }) => reading),
     documents: await keepDocuments(tx, deps, { reader, revision, stated: read.record.documents }),
     edition,
     facts: project.facts,
@@ -57,11 +61,13 @@ export async function keepReading(
       doubtCount: record.doubts.length,
       changes: await changesSinceBefore(tx, reader, { revision, record }),
       section,
+      mappingId: mapping.learned?.id ?? null,
+      mappingNumber: mapping.learned?.number ?? null,
       updatedAt: now,
     })
     .where(eq(revisions.id, revision.id));
   await tx.update(submittals).set({ updatedAt: now }).where(eq(submittals.id, revision.submittalId));
-  return result;
+  return { record, result, context };
 }
 
 interface StoreRecord {

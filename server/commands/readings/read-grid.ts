@@ -1,4 +1,5 @@
 import type { CellGrid } from '#rules/reading/cell-grid';
+import type { Correction } from '#rules/reading/correction';
 import { readWorkbook } from '#rules/reading/interpret';
 import { type Mapping, mappingSchema } from '#rules/reading/mapping';
 import { readAnyLayout } from '#rules/reading/read-any-layout';
@@ -18,14 +19,34 @@ interface ReadGrid {
   resolvedHash: string;
   agencyId: string;
   answers: Answer[];
+  corrections: readonly Correction[];
+  /** The version of the laboratory's mapping that the revision is read with. */
+  learned: LearnedMapping | null;
+}
+
+export interface LearnedMapping {
+  id: string;
+  name: string;
+  number: number;
+  document: Mapping;
+}
+
+/** What a workbook was read with; `learned` names the laboratory's mapping where it was one. */
+export interface MappingUsed {
+  name: string;
+  document: Record<string, unknown>;
+  learned: { id: string; number: number } | null;
 }
 
 export interface GridRead {
   read: ReadingResult;
-  mapping: { name: string; document: Mapping };
+  mapping: MappingUsed;
 }
 
-/** Reads a stored grid: the template through its own mapping, any other layout by what its headings say. */
+/**
+ * Reads a stored grid: the template through its own mapping, any other layout by what its headings say and by what the
+ * laboratory's mapping knows of them.
+ */
 export async function readGrid(db: Database, of: ReadGrid): Promise<GridRead> {
   const { mapping, read } = await readerOf(db, of);
   const unanswered = read([]);
@@ -37,19 +58,27 @@ export async function readGrid(db: Database, of: ReadGrid): Promise<GridRead> {
 }
 
 interface GridReader {
-  mapping: GridRead['mapping'];
+  mapping: MappingUsed;
   read: (answers: Answer[]) => ReadingResult;
 }
 
 async function readerOf(
   db: Database,
-  { grid, edition, resolvedHash, agencyId }: ReadGrid,
+  { grid, edition, resolvedHash, agencyId, corrections, learned }: ReadGrid,
 ): Promise<GridReader> {
   const stamp = recogniseTemplate(grid);
   if (stamp === null) {
     return {
-      mapping: { name: 'Read by its headings', document: noMapping },
-      read: (answers) => readAnyLayout({ grid, edition, answers }),
+      mapping:
+        learned === null
+          ? { name: 'Read by its headings', document: noMapping, learned: null }
+          : {
+              name: `${learned.name}, version ${learned.number}`,
+              document: learned.document,
+              learned: { id: learned.id, number: learned.number },
+            },
+      read: (answers) =>
+        readAnyLayout({ grid, edition, answers, corrections, mapping: learned?.document ?? null }),
     };
   }
   // A template of an earlier edition keeps its own places; what they mean is the section's to say.
@@ -58,8 +87,12 @@ async function readerOf(
   const made = earlier ?? edition;
   const mapping = templateMapping(made);
   return {
-    mapping: { name: `Template of ${made.title}, edition ${made.edition}`.slice(0, 200), document: mapping },
-    read: (answers) => readWorkbook({ grid, mapping, edition, answers }),
+    mapping: {
+      name: `Template of ${made.title}, edition ${made.edition}`.slice(0, 200),
+      document: mapping,
+      learned: null,
+    },
+    read: (answers) => readWorkbook({ grid, mapping, edition, answers, corrections }),
   };
 }
 

@@ -1,7 +1,7 @@
 import { asc, count, eq } from 'drizzle-orm';
 import type { Database } from '../client';
+import { mappings } from '../schema/mappings';
 import { laboratories } from '../schema/people';
-import { mappings } from '../schema/submittals';
 
 export async function listLaboratoriesOf(db: Database, organisationId: string) {
   const rows = await db

@@ -7,6 +7,7 @@ import { revisionStateSchema } from '#shared/contracts/submittals';
 import { limits } from '#shared/limits';
 import { choice, id, instant, json, reference, sha256, version } from '../columns';
 import { files } from './files';
+import { mappings } from './mappings';
 import { laboratories, organisations, people } from './people';
 import { projects, sections } from './projects';
 
@@ -87,7 +88,9 @@ export const revisions = mysqlTable(
     workbookFileId: id('workbook_file_id').notNull(),
     uploadedById: id('uploaded_by_id').notNull(),
     uploadedAt: instant('uploaded_at').notNull(),
+    /** The laboratory's mapping that its workbook was read with, and which version of it; null where none was. */
     mappingId: id('mapping_id'),
+    mappingNumber: int('mapping_number'),
     /** "12.5 mm dense-graded surface course · PG 64-22 · 12 million ESAL", from this revision's record. */
     description: varchar('description', { length: 300 }).notNull().default(''),
     doubtCount: int('doubt_count').notNull().default(0),
@@ -189,28 +192,6 @@ export const readings = mysqlTable(
     uniqueIndex('readings_position').on(table.revisionId, table.position),
     index('readings_agency_quantity').on(table.agencyId, table.quantity),
     reference('readings_revision_fk', table.revisionId, revisions.id),
-  ],
-);
-
-/** How a laboratory's layout is read; a later version is a new row. */
-export const mappings = mysqlTable(
-  'mappings',
-  {
-    id: id('id').primaryKey(),
-    organisationId: id('organisation_id').notNull(),
-    laboratoryId: id('laboratory_id').notNull(),
-    name: varchar('name', { length: 200 }).notNull(),
-    fingerprint: varchar('fingerprint', { length: 128 }).notNull(),
-    number: int('number').notNull(),
-    document: json('document', mappingDocumentSchema).notNull(),
-    createdById: id('created_by_id').notNull(),
-    createdAt: instant('created_at').notNull(),
-  },
-  (table) => [
-    uniqueIndex('mappings_number').on(table.laboratoryId, table.fingerprint, table.number),
-    reference('mappings_organisation_fk', table.organisationId, organisations.id),
-    reference('mappings_laboratory_fk', table.laboratoryId, laboratories.id),
-    reference('mappings_created_by_fk', table.createdById, people.id),
   ],
 );
 

@@ -1,11 +1,11 @@
 import { getReading, getSheet, keepAnswer, keepAttributes } from '#shared/contracts/readings';
-import { keepAnswers as keep } from '../../commands/readings/keep-answers';
 import { keepAttributes as keepTyped } from '../../commands/readings/keep-attributes';
 import { gridOf, loadSheet } from '../../db/queries/cell-grids';
 import { usesOfSheet } from '../../db/queries/cell-uses';
 import { Problem } from '../../problem';
 import { route } from '../define-route';
 import { expectRevision } from '../submittals/load-revision';
+import { changeAndView } from './corrections';
 import { expectDraft } from './expect-draft';
 import { viewReading } from './view-reading';
 
@@ -28,11 +28,9 @@ export const getSheetRoute = route(getSheet, async ({ deps, params, query, actor
   return { sheet, uses };
 });
 
-export const keepAnswerRoute = route(keepAnswer, async ({ deps, params, body, version, actor }) => {
-  const row = await expectDraft(deps, actor, params, version);
-  await keep(deps, { actor, row, given: body.answers });
-  return viewReading(deps, actor, await expectRevision(deps, actor, params));
-});
+export const keepAnswerRoute = route(keepAnswer, async ({ body, ...exchange }) =>
+  changeAndView(exchange, { answers: body.answers }),
+);
 
 export const keepAttributesRoute = route(keepAttributes, async ({ deps, params, body, version, actor }) => {
   const row = await expectDraft(deps, actor, params, version);

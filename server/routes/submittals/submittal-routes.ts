@@ -12,6 +12,7 @@ import {
 } from '../documents/documents';
 import { cancelJobRoute } from '../jobs/cancel-job';
 import { changeNoteRoute, removeNoteRoute, writeNoteRoute } from '../notes/notes';
+import { correctionRoutes } from '../readings/corrections';
 import { getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute } from '../readings/readings';
 import { removeWaiverRoute, waiveRoute } from '../waivers/waivers';
 import {
@@ -31,6 +32,7 @@ export const submittalRoutes: Route[] = [
   ...[listSubmittalsRoute, uploadSubmittalRoute, getSubmittalRoute, getRevisionRoute],
   ...[startRevisionRoute, replaceWorkbookRoute, getWorkbookRoute, getReplacedWorkbookRoute, cancelJobRoute],
   ...[getReadingRoute, getSheetRoute, keepAnswerRoute, keepAttributesRoute],
+  ...correctionRoutes,
   ...[addDocumentRoute, attachFileRoute, removeDocumentRoute, getDocumentFileRoute, getDocumentTypesRoute],
   ...[
     getCheckRoute,
