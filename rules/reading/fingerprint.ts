@@ -1,9 +1,9 @@
 import type { CellGrid } from './cell-grid';
 import type { ReadingEdition } from './edition-contents';
+import { labelReaderOf } from './label-reader-of';
 import { CellKinds } from './layout/cell-kind';
 import { type LayoutLine, layoutLines } from './layout/layout-lines';
 import { labelKey } from './plain-text';
-import { labelReaderOf } from './read-any-layout';
 import { SheetIndex } from './sheet-index';
 
 const prefix = 'layout-1:';
@@ -25,6 +25,15 @@ export function fingerprintOfLines(lines: readonly LayoutLine[]): string {
   );
   const hashes = [...new Set([...headings].map(hashOf))].sort();
   return `${prefix}${hashes.slice(0, sampleSize).join('.')}`;
+}
+
+/**
+ * Whether a layout has a heading. Of a large layout only a sample is kept, so what is not in it may still be one; it is
+ * then taken for one, which asks more and assumes less.
+ */
+export function knowsHeading(fingerprint: string, heading: string): boolean {
+  const sample = sampleOf(fingerprint);
+  return sample.has(hashOf(labelKey(heading))) || sample.size >= sampleSize;
 }
 
 /** How much of two layouts is the same, from 0 to 1. */

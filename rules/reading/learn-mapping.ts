@@ -3,7 +3,8 @@ import { allQuantities } from '../quantities/registry';
 import type { Cell, CellGrid } from './cell-grid';
 import type { Correction, Said } from './correction';
 import type { ReadingEdition } from './edition-contents';
-import { fingerprintOfLines } from './fingerprint';
+import { fingerprintOfLines, knowsHeading } from './fingerprint';
+import { labelReaderOf } from './label-reader-of';
 import { CellKinds } from './layout/cell-kind';
 import { type LayoutLine, layoutLines } from './layout/layout-lines';
 import { tellCorrections } from './layout/tell-corrections';
@@ -11,7 +12,6 @@ import { type DecidedLine, tellMapping } from './layout/tell-mapping';
 import { ToldCells } from './layout/told';
 import { lineRules } from './line-rules';
 import type { Mapping, MappingRule } from './mapping';
-import { labelReaderOf } from './read-any-layout';
 import { createReadingLog } from './reading-log';
 import type { ReadingResult } from './reading-result';
 import { saidByAnswer } from './said-by-answer';
@@ -77,7 +77,8 @@ function decidedLines(
 ): DecidedLine[] {
   const decided: DecidedLine[] = [];
   const log = createReadingLog(read.answered);
-  tellMapping(base, { told: new ToldCells(), lines, labels, log, departures: [], decided });
+  const knows = (heading: string) => knowsHeading(base.fingerprint, heading);
+  tellMapping(base, { told: new ToldCells(), lines, labels, log, departures: [], decided, knows });
   return decided;
 }
 

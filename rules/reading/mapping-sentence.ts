@@ -6,7 +6,7 @@ import type { MappingRule } from './mapping';
 import { conditionsInWords } from './take-words';
 
 export interface WordsFor {
-  quantity: (id: string) => Pick<Quantity, 'symbol'> | undefined;
+  quantity: (id: string) => Pick<Quantity, 'symbol' | 'unit'> | undefined;
   attribute: (name: string) => AttributeDefinition | undefined;
   document: (type: string) => string | undefined;
 }
@@ -26,8 +26,9 @@ export function mappingSentence(rule: MappingRule, words: WordsFor): string {
 export function saidInWords(said: Said, words: WordsFor): string {
   switch (said.kind) {
     case 'reading': {
-      const name = words.quantity(said.quantity)?.symbol ?? said.quantity;
-      const unit = said.unit === null ? [] : [said.unit === '1' ? 'as a fraction of one' : `in ${said.unit}`];
+      const quantity = words.quantity(said.quantity);
+      const name = quantity?.symbol ?? said.quantity;
+      const unit = unitInWords(said.unit, quantity?.unit ?? null);
       const without = said.without.map((name) => `without ${name}`);
       return [name, ...conditionsInWords(said.at), ...unit, ...without].join(', ');
     }
@@ -44,4 +45,11 @@ export function saidInWords(said: Said, words: WordsFor): string {
     case 'not a reading':
       return 'not a reading';
   }
+}
+
+/** A percentage that stands as 0.05 is written as a fraction; a number without a unit has none to be told. */
+function unitInWords(unit: string | null, canonical: string | null): string[] {
+  if (unit === null) return [];
+  if (unit !== '1') return [`in ${unit}`];
+  return canonical === '%' ? ['as a fraction of one'] : [];
 }

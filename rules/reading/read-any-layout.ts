@@ -4,11 +4,12 @@ import type { Conditions } from '../record';
 import type { CellGrid } from './cell-grid';
 import type { Correction } from './correction';
 import type { ReadingEdition } from './edition-contents';
+import { knowsHeading } from './fingerprint';
 import { joinAttributes, joinReadings } from './join-duplicates';
+import { labelReaderOf } from './label-reader-of';
 import { CellKinds } from './layout/cell-kind';
 import { decimalMark } from './layout/decimal-mark';
 import { findTables } from './layout/find-tables';
-import { LabelReader } from './layout/label-meaning';
 import { layoutLines } from './layout/layout-lines';
 import { dropMeans } from './layout/means-of-specimens';
 import { readTable } from './layout/read-table';
@@ -24,7 +25,6 @@ import { createReadingLog, placeOf, type ReadingContext } from './reading-log';
 import type { Answer, Departure, ReadingResult } from './reading-result';
 import { SheetIndex } from './sheet-index';
 import { unreadReasons } from './unread-reason';
-import { vocabularyOf } from './words/phrase-index';
 
 export interface ReadAnyLayoutInput {
   grid: CellGrid;
@@ -59,7 +59,8 @@ export function readAnyLayout({
   tellCorrections(told, corrections, { indexes, kinds });
   if (mapping !== null) {
     const lines = indexes.flatMap((index) => layoutLines(index, { kinds, labels }));
-    tellMapping(mapping, { told, lines, labels, log, departures, decided: [] });
+    const knows = (heading: string) => knowsHeading(mapping.fingerprint, heading);
+    tellMapping(mapping, { told, lines, labels, log, departures, decided: [], knows });
   }
   const reading: ReadingContext = { grid, log: told.quieten(log) };
   const candidates: SheetContext['candidates'] = [];
@@ -123,16 +124,6 @@ function sheetTemperature(name: string): Conditions {
   const degrees = Number(match[1].replace(/^(?:minus |neg |m)/i, '-').replace(',', '.'));
   const converted = convert(degrees, `°${match[2].toUpperCase()}`, '°C');
   return converted.ok ? { temperature: converted.value } : {};
-}
-
-const readers = new WeakMap<ReadingEdition, LabelReader>();
-
-export function labelReaderOf(edition: ReadingEdition): LabelReader {
-  const known = readers.get(edition);
-  if (known) return known;
-  const reader = new LabelReader(vocabularyOf(edition));
-  readers.set(edition, reader);
-  return reader;
 }
 
 /** A sheet called "JMF" holds the submittal; what is told apart as the design on it says so itself. */

@@ -26,6 +26,19 @@ beforeAll(async () => {
     const entry = { actor: null, act: 'seeded', subject: { kind: 'demo', id: 'demo' }, requestId: null };
     await writeAudit(tx, { now: () => new Date(), newId }, entry);
   });
+  await owner.query('SET FOREIGN_KEY_CHECKS = 0');
+  const [one, at] = [newId(), '2026-03-09 09:00:00'];
+  await owner.query(
+    `INSERT INTO mapping_versions
+       (id, mapping_id, organisation_id, number, document, fingerprint, origin, learned, person_id, at)
+     VALUES (?, ?, ?, 1, '{}', '', 'Imported', '[]', ?, ?)`,
+    [one, one, one, one, at],
+  );
+  await owner.query(
+    `INSERT INTO reading_acts (id, revision_id, contractor_id, act, person_id, at) VALUES (?, ?, ?, '{}', ?, ?)`,
+    [one, one, one, one, at],
+  );
+  await owner.query('SET FOREIGN_KEY_CHECKS = 1');
 });
 
 afterAll(async () => {

@@ -1,6 +1,7 @@
 import { readdirSync } from 'node:fs';
 import { eq } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { mappingSchema } from '#rules/reading/mapping';
 import { ownResolvedEdition } from '#server/commands/projects/own-edition';
 import * as cellGrids from '#server/db/queries/cell-grids';
 import * as checks from '#server/db/queries/checks';
@@ -11,11 +12,13 @@ import * as home from '#server/db/queries/home';
 import * as jobs from '#server/db/queries/jobs';
 import * as laboratories from '#server/db/queries/laboratories';
 import * as submittalLists from '#server/db/queries/list-submittals';
+import * as mappings from '#server/db/queries/mappings';
 import * as notes from '#server/db/queries/notes';
 import * as people from '#server/db/queries/people';
 import * as projects from '#server/db/queries/projects';
 import * as queue from '#server/db/queries/queue';
 import type { Reader } from '#server/db/queries/reader';
+import * as readingActs from '#server/db/queries/reading-acts';
 import * as records from '#server/db/queries/records';
 import * as returns from '#server/db/queries/returns';
 import * as revisions from '#server/db/queries/revisions';
@@ -23,6 +26,8 @@ import * as ruleSets from '#server/db/queries/rule-sets';
 import * as search from '#server/db/queries/search';
 import * as sectionSnapshot from '#server/db/queries/section-snapshot';
 import { checks as checkRows, notes as noteRows, waivers } from '#server/db/schema/checks';
+import { readingActs as actRows, mappingVersions } from '#server/db/schema/learning';
+import { mappings as mappingRows } from '#server/db/schema/mappings';
 import { invitations } from '#server/db/schema/people';
 import * as rows from '#server/db/schema/submittals';
 import { demoId } from '#server/db/seed/demo-id';
@@ -125,7 +130,56 @@ async function namesOf({ submittalId, number }: { submittalId: string; number: n
   const [edition] = await editions.listEditions(db, agency.organisationId);
   if (!note || !waiver || !job || !member || !edition) throw new Error('Something was not made.');
   const draftId = await aDraftWithComment();
-  return { submittalId, revisionId, row, kept, note, waiver, job, member, edition, draftId };
+  const mappingId = await aMapping({ ...by, laboratoryId: row.revision.laboratoryId });
+  return {
+    mappingId,
+    laboratoryId: row.revision.laboratoryId,
+    submittalId,
+    revisionId,
+    row,
+    kept,
+    note,
+    waiver,
+    job,
+    member,
+    edition,
+    draftId,
+  };
+}
+
+/** A mapping that a revision taught and was read with. */
+async function aMapping({
+  revisionId,
+  personId,
+  laboratoryId,
+}: {
+  revisionId: string;
+  personId: string;
+  laboratoryId: string;
+}): Promise<string> {
+  const { db, newId } = world.deps;
+  const id = newId();
+  const organisationId = contractor.organisationId;
+  const fingerprint = 'layout-1:00000001';
+  const own = { organisationId, fingerprint, number: 1 };
+  await db
+    .insert(mappingRows)
+    .values({ id, ...own, laboratoryId, name: 'Plant sheet', createdById: personId, createdAt: now });
+  const document = mappingSchema.parse({ laboratory: 'Plant', fingerprint, version: 1, rules: [] });
+  const version = { document, origin: 'Imported', revisionId, learned: [], personId, at: now };
+  await db.insert(mappingVersions).values({ id: newId(), mappingId: id, ...own, ...version });
+  await db.update(rows.revisions).set({ mappingId: id }).where(eq(rows.revisions.id, revisionId));
+  const says = { kind: 'not a reading' } as const;
+  const correction = { sheet: 'Trials', range: 'B2', says };
+  await db.insert(actRows).values({
+    id: newId(),
+    revisionId,
+    contractorId: organisationId,
+    act: { kind: 'correction', correction },
+    personId,
+    at: now,
+  });
+  return id;
 }
 
 /** The demo's draft, with a change and a comment. */
@@ -242,6 +296,34 @@ const queries: Record<string, Record<string, Query>> = {
   'list-submittals': {
     listSubmittals: ['both', (reader) => submittalLists.listSubmittals(db(), reader, { rows: 10 })],
   },
+  mappings: {
+    listMappings: ['contractor', (reader) => mappings.listMappings(db(), reader.organisationId)],
+    findMapping: [
+      'contractor',
+      (reader) => mappings.findMapping(db(), reader.organisationId, named.mappingId),
+    ],
+    listMappingVersions: [
+      'contractor',
+      (reader) => mappings.listMappingVersions(db(), reader.organisationId, named.mappingId),
+    ],
+    findMappingVersion: [
+      'contractor',
+      (reader) =>
+        mappings.findMappingVersion(db(), reader.organisationId, { mappingId: named.mappingId, number: 1 }),
+    ],
+    layoutsInUse: [
+      'contractor',
+      (reader) => mappings.layoutsInUse(db(), reader.organisationId, named.laboratoryId),
+    ],
+    lastLearnedFrom: [
+      'contractor',
+      (reader) => mappings.lastLearnedFrom(db(), reader.organisationId, named.revisionId),
+    ],
+    lockMapping: [
+      'contractor',
+      (reader) => mappings.lockMapping(db(), reader.organisationId, named.mappingId),
+    ],
+  },
   notes: {
     listNotes: ['both', (reader) => notes.listNotes(db(), reader, named.submittalId)],
     findOwnNote: ['agency', (reader) => notes.findOwnNote(db(), reader.organisationId, named.note.id)],
@@ -274,6 +356,9 @@ const queries: Record<string, Record<string, Query>> = {
       'agency',
       (reader) => queue.internalNotes(db(), reader.organisationId, named.submittalId),
     ],
+  },
+  'reading-acts': {
+    listReadingActs: ['both', (reader) => readingActs.listReadingActs(db(), reader, named.revisionId)],
   },
   records: {
     findMixRecord: ['both', (reader) => records.findMixRecord(db(), reader, named.revisionId)],

@@ -93,7 +93,7 @@ function nameByCorners({ table, columns, kinds, labels, decimal }: TableContext)
     // Where the figures under it are such keys, it speaks of them and not of the heads beside it.
     if (key === undefined || under?.key === key) continue;
     for (const column of columns.values()) {
-      if (column.kind !== 'value') continue;
+      if (column.kind !== 'value' || column.isTold) continue;
       const head = column.heads.find(
         (cell) => cell.row === row || (cell.row < row && cell === column.nameCell),
       );

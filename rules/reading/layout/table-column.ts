@@ -38,6 +38,8 @@ export interface TableColumn {
   corner: ConditionName | null;
   /** Binder content by which a trial is named, and the cell that says so. */
   binder: { text: string; cell: Cell } | null;
+  /** It was said what stands under it, so its heading is the name of that and of nothing else. */
+  isTold?: boolean;
 }
 
 const conditionKeys = new Set<KeyName>([

@@ -27,6 +27,7 @@ export function tellColumns({ table, columns, kinds, told, index }: TableContext
       name: null,
       nameCell: null,
       nameKey: null,
+      isTold: true,
     });
   }
 }

@@ -17,6 +17,8 @@ interface Telling {
   labels: Pick<LabelReader, 'read'>;
   log: ReadingLog;
   departures: Departure[];
+  /** Whether the layout that was learned has such a heading, as far as is kept of it. */
+  knows: (heading: string) => boolean;
   /** What an answer made of a departure, for the mapping to learn; `says` is null where the headings win. */
   decided: DecidedLine[];
 }
@@ -194,21 +196,36 @@ function statesUnit(unit: string | null): string {
   return unit === null ? 'states no unit' : `states ${unit}`;
 }
 
-/** Neither of its neighbours is there any more: it may be another column of the same name. */
-function movedDeparture({ rule, says, line, isMore }: RuleAtLine, { labels }: Telling): LineDeparture | null {
+/** Other headings of the layout stand beside it now: it may be another column of the same name. */
+function movedDeparture(
+  { rule, says, line, isMore }: RuleAtLine,
+  { labels, knows }: Telling,
+): LineDeparture | null {
   const { between } = rule.anchor;
-  const [before, behind] = between ?? [null, null];
-  const isSame =
-    between === undefined ||
-    (before === null && behind === null) ||
-    (before !== null && sameHeading(before, line.between[0])) ||
-    (behind !== null && sameHeading(behind, line.between[1]));
+  const isSame = between === undefined || standsBetween(between, line.between, knows);
   if (isSame && !isMore) return null;
   if (!isMore && saysByItself(says, line, labels)) return null;
   const text = isMore
     ? `“${line.header.at(-1)}” stands here once more than in the layout that the mapping knows`
     : `“${line.header.at(-1)}” stands beside other headings than in the layout that the mapping knows`;
   return { kind: 'moved', text, choices: [asMapping(says), byHeadings] };
+}
+
+/**
+ * A heading that is new to the layout may have come between; one that the layout knows stands where it did not, so that
+ * headings have changed places, with what is under them or without.
+ */
+function standsBetween(
+  then: [string | null, string | null],
+  now: [string | null, string | null],
+  knows: (heading: string) => boolean,
+): boolean {
+  const same = [sameHeading(then[0], now[0]), sameHeading(then[1], now[1])];
+  if (!same.includes(true)) return false;
+  return same.every((isSame, side) => {
+    const other = now[side] ?? null;
+    return isSame || (other !== null && !knows(other));
+  });
 }
 
 /** The heading alone says what the mapping says, so nothing hangs on where it stands. */
