@@ -36,7 +36,7 @@ const corrected = () =>
 
 /** Opens the panel at the cursor with the key of the grid. */
 async function ask(answers: Record<string, unknown> = {}, reading = aReadingView()) {
-  const page = await openReading({ [preview]: aPreview, ...answers }, reading);
+  const page = await openReading(Object.assign(answers, { [preview]: aPreview }), reading);
   screen.getByRole('grid').focus();
   press('Enter');
   return page;

@@ -40,7 +40,7 @@ export function CellFacts({
           </dd>
         </>
       ) : null}
-      {use?.taken ? (
+      {use?.taken && use.use !== 'doubt' ? (
         <>
           <dt>{isOne ? 'Taken for' : `${addressOf(block.from)} was`}</dt>
           <dd>

@@ -30,7 +30,7 @@ export function SaidList({
     <section aria-labelledby="said">
       <div className="side-head">
         <h2 id="said">Said by people</h2>
-        <span>{corrections.length === 0 ? 'nothing' : countInFigures(corrections.length, 'block')}</span>
+        <span>{corrections.length === 0 ? '' : countInFigures(corrections.length, 'block')}</span>
       </div>
       <UndoLine acts={acts} />
       <ul>
