@@ -95,11 +95,11 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       ) : null}
     </>
   );
+  const panel = isAsking ? (
+    <CellPanel params={params} reading={reading} chosen={chosen} acts={acts} onClose={stopAsking} />
+  ) : null;
   const questions = (
     <>
-      {isAsking ? (
-        <CellPanel params={params} reading={reading} chosen={chosen} acts={acts} onClose={stopAsking} />
-      ) : null}
       <DoubtList
         doubts={reading.doubts}
         cursor={cursor}
@@ -162,6 +162,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
         {head}
         {questions}
         {sheet}
+        {panel}
         {lists}
         {foot}
       </MarginPage>
@@ -172,6 +173,7 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       marginWidthPx={380}
       aside={
         <div className="reading-side">
+          {panel}
           {questions}
           {lists}
         </div>
