@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { blockStart, blocksOf, rowWindow } from '../../../../web/features/reading/lib/row-window';
+import { blockStart, blocksOf, inSteps, rowWindow } from '../../../../web/features/reading/lib/row-window';
 
 describe('the window of rows', () => {
   it('starts at the first row and ends with the sheet', () => {
@@ -18,6 +18,12 @@ describe('the window of rows', () => {
       beyondRows: 10,
     });
     expect(window).toEqual({ first: 4991, last: 5032 });
+  });
+
+  it('moves on in steps that hold all that is in sight', () => {
+    expect(inSteps({ first: 4991, last: 5032 })).toEqual({ first: 4991, last: 5040 });
+    expect(inSteps({ first: 4992, last: 5033 })).toEqual({ first: 4991, last: 5040 });
+    expect(inSteps({ first: 1, last: 23 })).toEqual({ first: 1, last: 30 });
   });
 
   it('names the one block of a short sheet', () => {

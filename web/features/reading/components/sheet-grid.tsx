@@ -11,7 +11,7 @@ import { columnWidths } from '../lib/column-widths';
 import { type ColumnWindow, columnWindow } from '../lib/column-window';
 import type { Place } from '../lib/first-place';
 import { mergesInSight, mergesOf } from '../lib/merges';
-import { type RowWindow, rowWindow } from '../lib/row-window';
+import { inSteps, type RowWindow, rowWindow } from '../lib/row-window';
 import { rowNumberRem, rowRem, sheetGridId } from '../lib/sheet-measures';
 import { ColumnHeads, numbersBetween, SheetRow } from './sheet-rows';
 
@@ -72,7 +72,7 @@ export function SheetGridView({
   const at = parseAddress(cursor.cell);
   const onScroll = ({ currentTarget }: React.UIEvent<HTMLElement>) => {
     const { scrollTop, scrollLeft, clientHeight, clientWidth } = currentTarget;
-    onWindow(rowWindow({ scrollPx: scrollTop, heightPx: clientHeight, rowPx, rowCount }));
+    onWindow(inSteps(rowWindow({ scrollPx: scrollTop, heightPx: clientHeight, rowPx, rowCount })));
     const next = columnWindow({ widthsPx: widths, scrollPx: scrollLeft, sightPx: clientWidth });
     setSeen((now) => (now?.first === next.first && now.last === next.last ? now : next));
   };

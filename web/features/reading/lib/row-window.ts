@@ -24,6 +24,16 @@ export function rowWindow(options: {
   };
 }
 
+const rowsAStep = 10;
+
+/** The window in whole steps: drawing rows costs more than scrolling them, so most frames of a scroll draw none. */
+export function inSteps({ first, last }: RowWindow): RowWindow {
+  return {
+    first: Math.floor((first - 1) / rowsAStep) * rowsAStep + 1,
+    last: Math.ceil(last / rowsAStep) * rowsAStep,
+  };
+}
+
 /** First rows of the blocks that a window touches: rows 1 to 200 are block 1, 201 to 400 block 201. */
 export function blocksOf(window: RowWindow): number[] {
   const blocks: number[] = [];
