@@ -12,7 +12,9 @@ export function findingsTable(check: CheckResult, reading: ReadingResult): strin
     ...(folded > 0 ? ['', `${folded} findings are not applicable.`] : []),
     ...section(
       'Not as the mapping knows it',
-      reading.departures.map(({ sheet, cell, text }) => `${placeOf(sheet ?? '', cell ?? '')}  ${text}`.trim()),
+      reading.departures.map(({ sheet, cell, text }) =>
+        `${placeOf(sheet ?? '', cell ?? '')}  ${text}`.trim(),
+      ),
     ),
     ...section(
       'In doubt',

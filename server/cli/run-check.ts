@@ -60,7 +60,11 @@ function withAttributes(reading: ReadingResult, attributes: Record<string, Attri
 
 function asJson({ record, unread, doubts, departures }: ReadingResult, check: CheckResult): string {
   const { analysis, summary, findings, seal } = check;
-  return JSON.stringify({ record, reading: { unread, doubts, departures }, analysis, summary, findings, seal }, null, 2);
+  return JSON.stringify(
+    { record, reading: { unread, doubts, departures }, analysis, summary, findings, seal },
+    null,
+    2,
+  );
 }
 
 function hasOpenRequirement({ findings }: CheckResult): boolean {

@@ -100,7 +100,7 @@ function countsOf(sheet: string, { uses, doubts, unread }: ReadingResult) {
 }
 
 function presentDocument({ document, file }: StoredDocument, types: readonly DocumentType[]): DocumentRow {
-  const { id, type, issuer, reference, date, validTo, source, added, version } = document;
+  const { id, type, issuer, reference, date, validTo, source, added } = document;
   return {
     id,
     type,
@@ -116,7 +116,6 @@ function presentDocument({ document, file }: StoredDocument, types: readonly Doc
         ? null
         : { id: file.id, fileName: file.fileName, mediaType: file.mediaType, bytes: file.sizeBytes },
     added,
-    version,
   };
 }
 

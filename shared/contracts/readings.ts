@@ -28,7 +28,6 @@ export const documentRowSchema = documentRecordSchema.extend({
     .nullable(),
   /** True where the row was added on the page, not read from the workbook. */
   added: z.boolean(),
-  version: z.number().int(),
 });
 
 const actFields = { by: z.string(), at: instantSchema };

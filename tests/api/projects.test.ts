@@ -79,6 +79,26 @@ describe('a project', () => {
     expect(kept.facts).toEqual(made.facts);
   });
 
+  it('is judged by a section in what it stated before, in its words or not at all', async () => {
+    const made = await addProject({ facts: { designTraffic: 5 } });
+    const state = (facts: object) =>
+      world.deps.db
+        .update(projects)
+        .set({ facts: { ...facts } })
+        .where(eq(projects.id, made.id));
+    await state({ course: 'roof', designTraffic: 5 });
+    const refused = await author.post(`/api/projects/${made.id}/sections`).send({ base, layers: [] });
+    expect(refused.status).toBe(422);
+    expect(refused.body.errors).toMatchObject([{ pointer: '/facts/course' }]);
+    await state({ course: 'Wearing course', designTraffic: 5 });
+    const { body } = await author
+      .post(`/api/projects/${made.id}/sections`)
+      .send({ base, layers: [] })
+      .expect(201);
+    expect(body.sections).toHaveLength(1);
+    expect(body.facts).toEqual({ course: 'surface', designTraffic: 5 });
+  });
+
   it('has a number that no other project of the agency has', async () => {
     const answer = await administrator.post('/api/projects').send(aProject({ number: 'CV-2031' }));
     expect(answer.status).toBe(409);

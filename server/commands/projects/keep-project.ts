@@ -2,9 +2,6 @@ import { and, eq, inArray, notInArray } from 'drizzle-orm';
 import type { Project } from '#shared/contracts/projects';
 import type { Database } from '../../db/client';
 import { isDuplicateEntry } from '../../db/duplicate-entry';
-import { listEditions } from '../../db/queries/editions';
-import { sectionsOfProjects } from '../../db/queries/projects';
-import { loadResolvedEdition } from '../../db/resolved-edition';
 import { agencyContractors } from '../../db/schema/people';
 import { contacts, projectContractors, projects } from '../../db/schema/projects';
 import { submittals } from '../../db/schema/submittals';
@@ -13,8 +10,7 @@ import type { Deps } from '../../deps';
 import { expectWritten } from '../../middleware/if-match';
 import type { Actor } from '../../policies/actor';
 import { Problem } from '../../problem';
-import { publishedDocument } from './own-edition';
-import { understandFacts } from './understand-facts';
+import { factsOfProject } from './facts-of-project';
 
 export interface ProjectFields
   extends Pick<Project, 'number' | 'title' | 'lettingOn' | 'facts' | 'contacts'> {
@@ -31,7 +27,7 @@ export async function addProject(deps: Deps, { actor, fields, requestId }: Keepi
   const id = deps.newId();
   const { contractorIds, contacts: people, ...columns } = fields;
   await deps.db.transaction(async (tx) => {
-    const facts = await understood(tx, actor, { facts: fields.facts, projectId: null });
+    const facts = await factsOfProject(tx, actor, { facts: fields.facts, projectId: null });
     const row = { ...columns, facts, id, agencyId: actor.organisationId, createdAt: deps.now() };
     await refuseDuplicateNumber(fields.number, () => tx.insert(projects).values(row));
     await keepContractors(tx, { actor, projectId: id, contractorIds });
@@ -55,7 +51,7 @@ export async function changeProject(
   const { contractorIds, contacts: people, ...columns } = fields;
   await deps.db.transaction(async (tx) => {
     const own = and(eq(projects.id, projectId), eq(projects.agencyId, actor.organisationId));
-    const facts = await understood(tx, actor, { facts: fields.facts, projectId });
+    const facts = await factsOfProject(tx, actor, { facts: fields.facts, projectId });
     const write = () =>
       tx
         .update(projects)
@@ -72,30 +68,6 @@ export async function changeProject(
       requestId,
     });
   });
-}
-
-/** A project's sections judge what it states; before it has any, whichever edition of the agency may become one. */
-async function understood(
-  tx: Database,
-  actor: Actor,
-  { facts, projectId }: Stated,
-): Promise<Project['facts']> {
-  const sections = projectId === null ? [] : await sectionsOfProjects(tx, actor, [projectId]);
-  if (sections.length > 0) {
-    const hashes = sections.map(({ section }) => section.resolvedHash);
-    const editions = await Promise.all(hashes.map((hash) => loadResolvedEdition(tx, hash)));
-    return understandFacts(facts, { editions, by: 'every' });
-  }
-  const { organisationId } = actor;
-  const published = (await listEditions(tx, organisationId)).filter(({ layerOfKey }) => layerOfKey === null);
-  const documents = await Promise.all(published.map((each) => publishedDocument(tx, organisationId, each)));
-  const editions = documents.flatMap((each) => (each !== null && 'attributes' in each ? [each] : []));
-  return understandFacts(facts, { editions: [...editions, { attributes: [] }], by: 'some' });
-}
-
-interface Stated {
-  facts: Project['facts'];
-  projectId: string | null;
 }
 
 async function refuseDuplicateNumber<Result>(number: string, write: () => Promise<Result>): Promise<Result> {

@@ -9,6 +9,7 @@ import type { Deps } from '../../deps';
 import type { RequestActor } from '../../middleware/authenticate';
 import { expectWritten } from '../../middleware/if-match';
 import { Problem } from '../../problem';
+import { judgeFactsAnew } from './facts-of-project';
 import { resolveSection, type SectionChoice } from './resolve-section';
 
 interface Keeping {
@@ -49,6 +50,7 @@ export async function confirmSection(deps: Deps, keeping: Keeping): Promise<void
       confirmedAt: deps.now(),
     });
     await keepLayers(tx, { sectionId: id, editionIds: layers.map((layer) => layer.id) });
+    await judgeFactsAnew(tx, actor, projectId);
     await writeAudit(tx, deps, {
       actor,
       act: 'section confirmed',
@@ -86,6 +88,7 @@ export async function changeSection(
     expectWritten(result);
     await tx.delete(sectionLayers).where(eq(sectionLayers.sectionId, sectionId));
     await keepLayers(tx, { sectionId, editionIds: layers.map((layer) => layer.id) });
+    await judgeFactsAnew(tx, actor, projectId);
     await markChecksStale(tx, {
       sectionId,
       on: dateOfInstant(deps.now().toISOString(), actor.organisation.timeZone),

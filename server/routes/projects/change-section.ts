@@ -18,6 +18,6 @@ export const changeSectionRoute = route(
     allow(confirmsSections(actor));
     if (section.version !== version) throw new Problem('version-stale', { present });
     await changeSection(deps, { actor, projectId, sectionId, version, choice: body, requestId });
-    return viewProject(deps, actor, row);
+    return viewProject(deps, actor, await loadProject(deps, actor, projectId));
   },
 );

@@ -9,9 +9,9 @@ import { viewProject } from './view-project';
 export const confirmSectionRoute = route(
   confirmEndpoint,
   async ({ deps, actor, params: { projectId }, body, requestId }) => {
-    const row = await loadProject(deps, actor, projectId);
+    await loadProject(deps, actor, projectId);
     allow(confirmsSections(actor));
     await confirmSection(deps, { actor, projectId, choice: body, requestId });
-    return viewProject(deps, actor, row);
+    return viewProject(deps, actor, await loadProject(deps, actor, projectId));
   },
 );
