@@ -64,7 +64,11 @@ function aggregateOf(index: RecordIndex, trial: string, blend: BlendChoice): Agg
   const combine = (quantity: string, formula: string, method: typeof combinedGravity) =>
     combinedOf({ quantity, at, formula, shares, readings: select(quantity), method });
   const gravity = '100/Σ(Pi/Gi)';
-  const passing = gradationOf(select);
+  const withoutNumber = (quantity: string) =>
+    index
+      .withoutNumber(quantity)
+      .filter((reading) => (reading.at.trial ?? trial) === trial && inBlend(reading.at, chosen));
+  const passing = gradationOf(select, withoutNumber);
   const combined = combinedGradation(passing, shares, at);
   const atSieve = (sieveMm: number) => passing.stated(sieveMm) ?? combined.get(sieveMm) ?? null;
   return {
@@ -112,7 +116,7 @@ export function blendChoice(record: MixRecord, index: RecordIndex): BlendChoice 
   };
 }
 
-function inBlend(at: Conditions, blend: string | null): boolean {
+function inBlend(at: Conditions, blend: string | null | 'unknown'): boolean {
   return at.blend === undefined || at.blend === blend;
 }
 

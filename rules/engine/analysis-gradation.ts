@@ -17,7 +17,10 @@ export interface Gradation {
   fromRetained: AnalysisNode[];
 }
 
-export function gradationOf(select: (quantity: string) => Reading[]): Gradation {
+export function gradationOf(
+  select: (quantity: string) => Reading[],
+  withoutNumber: (quantity: string) => Reading[],
+): Gradation {
   const stacks = new Map<string | undefined, Map<number, AnalysisNode>>();
   const put = (node: AnalysisNode) => {
     const stack = stacks.get(node.at.stockpile) ?? new Map<number, AnalysisNode>();
@@ -26,7 +29,8 @@ export function gradationOf(select: (quantity: string) => Reading[]): Gradation 
   };
   for (const node of sievedNodes(comparable(select('percent-passing')))) put(node);
   for (const node of sievedNodes(comparable(select('cumulative-percent-retained')))) put(passingFrom(node));
-  for (const node of fromIndividual(sievedNodes(comparable(select('percent-retained'))))) put(node);
+  const individual = sievedNodes(comparable(select('percent-retained')));
+  for (const node of fromIndividual(individual, withoutNumber('percent-retained'))) put(node);
   const at = (stockpile: string | undefined, sieveMm: number) => stacks.get(stockpile)?.get(sieveMm) ?? null;
   const sieves = new Set([...stacks.values()].flatMap((stack) => [...stack.keys()]));
   return {
@@ -69,9 +73,16 @@ function passingFrom(node: AnalysisNode): AnalysisNode {
   })!;
 }
 
-/** A stack of individual percents retained: what passes a sieve is 100 less all that stays on it and above. */
-function fromIndividual(nodes: AnalysisNode[]): AnalysisNode[] {
+/**
+ * A stack of individual percents retained: what passes a sieve is 100 less all that stays on it and above. With one
+ * of these that is no number, too much would seem to pass: such a sieve has no value.
+ */
+function fromIndividual(nodes: AnalysisNode[], withoutNumber: Reading[]): AnalysisNode[] {
   return nodes.flatMap((node) => {
+    const isOpen = withoutNumber.some(
+      ({ at }) => at.stockpile === node.at.stockpile && (at.sieve ?? 0) >= node.at.sieve!,
+    );
+    if (isOpen) return [];
     const above = nodes.filter(
       (other) => other.at.stockpile === node.at.stockpile && other.at.sieve! >= node.at.sieve!,
     );

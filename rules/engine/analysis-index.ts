@@ -10,6 +10,8 @@ export interface RecordIndex {
   laboratory: Laboratory;
   /** Readings of a quantity that belong to a trial. */
   ofTrial(quantity: string, trial: string): Reading[];
+  /** Readings of a quantity that carry no number to calculate with: censored, or in a unit of another kind. */
+  withoutNumber(quantity: string): Reading[];
   /** Every reading of a quantity, whatever its trial. */
   all(quantity: string): Reading[];
   /** Trials that the readings name, `design` left out, in order of appearance. */
@@ -34,10 +36,14 @@ function newIndex(record: MixRecord, laboratory: Laboratory): RecordIndex {
   const byQuantity = new Map<string, Reading[]>();
   const byTrial = new Map<string, Reading[]>();
   const trials = new Set<string>();
+  const unusable: Reading[] = [];
   for (const stated of record.readings) {
-    if ((stated.at.laboratory ?? 'contractor') !== laboratory || !hasNumber(stated)) continue;
-    const reading = inCanonicalUnit(stated);
-    if (reading === null) continue;
+    if ((stated.at.laboratory ?? 'contractor') !== laboratory) continue;
+    const reading = hasNumber(stated) ? inCanonicalUnit(stated) : null;
+    if (reading === null) {
+      unusable.push(stated);
+      continue;
+    }
     const known = byQuantity.get(reading.quantity);
     if (known) known.push(reading);
     else byQuantity.set(reading.quantity, [reading]);
@@ -50,6 +56,7 @@ function newIndex(record: MixRecord, laboratory: Laboratory): RecordIndex {
   return {
     laboratory,
     all,
+    withoutNumber: (quantity) => unusable.filter((reading) => reading.quantity === quantity),
     ofTrial: (quantity, trial) => {
       const key = `${quantity}|${trial}`;
       const known = byTrial.get(key);

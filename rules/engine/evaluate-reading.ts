@@ -24,7 +24,7 @@ export function evaluateGradation(world: World, rule: ResolvedRule, measure: Gra
   const base = { subject: subjectOf(world, measure, at), at, quantity: PASSING };
   const evaluated = (conditions: Conditions) =>
     evaluateValue({ world, rule, measure, quantity: PASSING, statistic: 'mean', at: conditions });
-  const hasNone = conditionsOf(world, PASSING).length === 0;
+  const hasNone = [...GRADATION].every((quantity) => (world.readings.get(quantity) ?? []).length === 0);
   if (hasNone && !world.record.doubts.some((doubt) => isAboutGradation(doubt))) {
     return [makeFinding(world, rule, { ...base, outcome: 'not shown', reason: 'There is no gradation.' })];
   }

@@ -8,6 +8,7 @@ import { notShown, type Obstacle, undecided } from './obstacle';
 import { inScope } from './scope';
 import { select } from './select';
 import { withoutTestedSpecimens } from './tested-specimens';
+import { unusableRetained } from './unusable-retained';
 import { applyWhere } from './where';
 import type { UsableReading, World } from './world';
 
@@ -98,11 +99,13 @@ function bareLabel(world: World, { quantity }: SampleRequest): string {
 
 function takeRecomputed(world: World, request: SampleRequest): SampleResult | null {
   const all = world.recomputed.get(request.quantity) ?? [];
-  const isDesignGradation =
-    request.quantity === 'percent-passing' && request.at.stockpile === undefined && !request.toCompare;
+  const isGradation = request.quantity === 'percent-passing' && !request.toCompare;
+  const isDesignGradation = isGradation && request.at.stockpile === undefined;
   // The job-mix gradation is what the workbook states, as passing or as retained; the blend recomputed from the
   // stockpiles is only compared with it.
   const candidates = isDesignGradation ? all.filter(({ origin }) => origin === 'converted') : all;
+  const open = isGradation ? unusableRetained(world, request.at) : null;
+  if (open !== null) return open;
   if (candidates.length === 0) return null;
   const label = bareLabel(world, request);
   const scope = { world, quantity: request.quantity, label, wanted: request.at, candidates };

@@ -287,6 +287,96 @@ vi.mock(import('#rules/engine/attribute-fact'), async (original) => {
   };
 });
 
+vi.mock(import('#rules/engine/unusable-retained'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    unusableRetained: (...input) =>
+      has('a percent retained without a number is absent') ? null : real.unusableRetained(...input),
+  };
+});
+
+vi.mock(import('#rules/calculations/combined-gravity'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    combinedGravity: (shares) =>
+      has('gravities are shared by mass') ? real.combinedAbsorption(shares) : real.combinedGravity(shares),
+    combinedAbsorption: (shares) =>
+      real.combinedAbsorption(
+        has('stockpiles weigh alike') ? shares.map((each) => ({ ...each, share: 1 })) : shares,
+      ),
+  };
+});
+
+vi.mock(import('#rules/calculations/gradation'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    combinedPassing: (shares) => {
+      if (!has('shares are stretched to 100')) return real.combinedPassing(shares);
+      const all = shares.reduce((sum, { share }) => sum + share, 0);
+      return real.combinedPassing(shares.map((each) => ({ ...each, share: (100 * each.share) / all })));
+    },
+  };
+});
+
+vi.mock(import('#rules/calculations/design-point'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    propertyAt: (points, Pb, method) => {
+      if (has('trials are always joined by lines')) return real.propertyAt(points, Pb, 'linear');
+      const contents = points.map((point) => point.Pb);
+      const inside = Math.min(Math.max(Pb, Math.min(...contents)), Math.max(...contents));
+      return real.propertyAt(points, has('trials reach beyond their ends') ? inside : Pb, method);
+    },
+  };
+});
+
+vi.mock(import('#rules/engine/statistic'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    statisticOf: (request) => {
+      const { sample } = request;
+      const isSingle = has('a value between trials is a specimen') && sample.interpolated;
+      const single = { ...sample, interpolated: false, meanOnly: false };
+      return real.statisticOf(isSingle ? { ...request, sample: single } : request);
+    },
+  };
+});
+
+vi.mock(import('#rules/engine/specimens-of-tests'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    unsettledByTests: (input) =>
+      has('specimens of other tests are the design’s') ? new Map() : real.unsettledByTests(input),
+  };
+});
+
+vi.mock(import('#rules/calculations/creep-fit'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    fitCreep: (...input) => {
+      const result = real.fitCreep(...input);
+      const isKept = has('no fit is rejected') && result.ok;
+      return isKept ? { ok: true, fit: { ...result.fit, rejected: null } } : result;
+    },
+  };
+});
+
+vi.mock(import('#rules/calculations/creep-compliance'), async (original) => {
+  const real = await original();
+  return {
+    ...real,
+    decadesBeyond: (...input) =>
+      has('curves hold at any loading time') ? { ok: true, value: 0 } : real.decadesBeyond(...input),
+  };
+});
+
 const FAULTS = [
   'ties go up',
   'ties go to even always',
@@ -324,6 +414,16 @@ const FAULTS = [
   'what cannot be computed is nought',
   'loading times match to the second',
   'a value that no list has is taken as it stands',
+  'a percent retained without a number is absent',
+  'gravities are shared by mass',
+  'stockpiles weigh alike',
+  'shares are stretched to 100',
+  'trials are always joined by lines',
+  'trials reach beyond their ends',
+  'a value between trials is a specimen',
+  'specimens of other tests are the design’s',
+  'no fit is rejected',
+  'curves hold at any loading time',
 ];
 
 describe('a fault that is planted in the engine', { timeout: 120_000 }, () => {

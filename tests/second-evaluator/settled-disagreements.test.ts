@@ -199,3 +199,39 @@ describe('a volumetric reading whose specimen has a result of a test as well', (
     expectOutcome(aCase({ measure, limit: { max: '2.36' } }, { readings }), 'pass');
   });
 });
+
+describe('a gradation that is stated as retained', () => {
+  const table = {
+    id: 'band',
+    keys: ['sieve'],
+    columns: [{ name: 'min' }, { name: 'max' }],
+    rows: [{ sieve: 4.75, min: 40, max: 60 }],
+  };
+  const measure = { kind: 'gradation' as const, table: 'band' };
+  const limit = { min: { table: 'band', column: 'min' } };
+  const retained = (quantity: string, sieve: number, value: number, more: Partial<ReadingInput> = {}) => ({
+    quantity,
+    value,
+    unit: '%',
+    at: { trial: 'design', sieve },
+    origin: 'measured' as const,
+    ...more,
+  });
+  const judged = (readings: ReadingInput[]): GeneratedCase => {
+    const drawn = aCase({ measure, limit }, { readings });
+    return { ...drawn, base: { ...drawn.base, tables: [table] } };
+  };
+
+  it('passes nothing on the strength of what a coarser sieve retains without a number', () => {
+    // With 30 on 12.5 mm only 35 pass 4.75 mm; without it 65 would seem to.
+    const own = retained('percent-retained', 4.75, 35);
+    expectOutcome(judged([retained('percent-retained', 12.5, 30), own]), 'fail');
+    expectOutcome(judged([retained('percent-retained', 12.5, 30, { qualifier: '<' }), own]), 'undecided');
+    expectOutcome(judged([retained('percent-retained', 12.5, 30, { unit: 'mm' }), own]), 'undecided');
+  });
+
+  it('is there, and undecided, where its only percent is censored', () => {
+    const only = retained('cumulative-percent-retained', 4.75, 50, { qualifier: '<' });
+    expectOutcome(judged([only]), 'undecided');
+  });
+});

@@ -107,9 +107,9 @@ export function drawAttributes(draw: Draw): StatedAttributes {
     result.meant[choice.name] = meant;
     const value = choice.stated(draw, meant);
     const how = draw.weighed([
-      [76, 'stated'],
+      [74, 'stated'],
       [6, 'by the project'],
-      [9, 'missing'],
+      [11, 'missing'],
       [4, 'senseless'],
       [5, 'in doubt'],
     ] as const);

@@ -1,5 +1,6 @@
 import type { LayerInput, RuleInput, RuleSetInput } from '#rules/rule-sets/schema';
 import { DECLARED, drawAttributes, drawCompared, drawWhen } from './attributes';
+import { blendGradationPart, blendPart } from './blend-part';
 import { creepPart } from './creep-part';
 import type { Draw } from './draw';
 import { formulaPart } from './formula-part';
@@ -8,6 +9,7 @@ import { attributePart, differencePart, documentPart, recomputedPart } from './o
 import { emptyPart, type GeneratedCase, type Part, type TableInput } from './parts';
 import { CANDIDATES, PASSING } from './quantities';
 import { readingPart } from './reading-part';
+import { trialsPart } from './trials-part';
 
 const HEAD = {
   format: 'clauseway/rule-set@1' as const,
@@ -24,8 +26,9 @@ export function drawCase(draw: Draw): GeneratedCase {
   for (const rule of rules) if (draw.chance(45)) rule.when = drawWhen(draw, stated.meant);
   const tables = parts.flatMap((part) => part.tables);
   const { base, layers } = draw.chance(25) ? layered(draw, rules, tables) : plain(rules, tables);
+  const designPoint = parts.find((part) => part.designPoint !== undefined)?.designPoint;
   return {
-    base,
+    base: designPoint === undefined ? base : { ...base, designPoint },
     layers,
     record: {
       attributes: stated.attributes,
@@ -59,10 +62,21 @@ function drawParts(draw: Draw): Part[] {
       [12, 'difference'],
       [5, 'recomputed'],
       [12, 'formula'],
-      [10, 'creep'],
+      [7, 'creep'],
+      [10, 'trials'],
+      [6, 'blend'],
+      [4, 'blend gradation'],
     ] as const);
     // Gradations, formulas and gravities are shared by several kinds: one of them a case is enough.
-    const isAlone = ['sieve', 'gradation', 'formula', 'recomputed', 'creep'].includes(kind);
+    const isAlone = [
+      'sieve',
+      'gradation',
+      'formula',
+      'recomputed',
+      'creep',
+      'trials',
+      'blend gradation',
+    ].includes(kind);
     if (isAlone && usesGravity) continue;
     usesGravity ||= isAlone;
     parts.push(partOf(draw, id, kind, candidate(i)));
@@ -88,6 +102,12 @@ function partOf(draw: Draw, id: string, kind: string, candidate: (typeof CANDIDA
       return recomputedPart(draw, id);
     case 'formula':
       return formulaPart(draw, id);
+    case 'trials':
+      return trialsPart(draw, id);
+    case 'blend':
+      return blendPart(draw, id);
+    case 'blend gradation':
+      return blendGradationPart(draw, id);
     default:
       return creepPart(draw, id);
   }

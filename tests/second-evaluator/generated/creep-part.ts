@@ -1,7 +1,10 @@
 import type { RuleInput } from '#rules/rule-sets/schema';
+import { creepCurvePart } from './creep-curve-part';
 import { type Draw, decimal } from './draw';
 import { drawLimit, drawRounding } from './limits';
 import { emptyPart, type Part, type ReadingInput } from './parts';
+import { CANDIDATES } from './quantities';
+import { drawWhere } from './where';
 
 type CreepInput = Extract<RuleInput['measure'], { kind: 'creep-compliance' }>;
 type At = NonNullable<ReadingInput['at']>;
@@ -14,6 +17,7 @@ const STRESS = 200;
  * on one power law exactly and judged between the tested times or beyond them.
  */
 export function creepPart(draw: Draw, id: string): Part {
+  if (draw.chance(20)) return creepCurvePart(draw, id);
   const part = emptyPart();
   const isCurve = draw.chance(35);
   const measure = isCurve ? onCurve(draw) : atTested(draw);
@@ -24,12 +28,15 @@ export function creepPart(draw: Draw, id: string): Part {
   const limit = drawLimit(draw, `${id}-limits`, scale, false);
   const rounding = drawRounding(draw, id, scale, true);
   part.tables.push(...limit.tables, ...rounding.tables);
+  const wanted = { rule: {}, readings: () => ({}), beside: [] };
+  const met = drawWhere(draw, CANDIDATES[0]!, wanted, 3);
+  part.readings.push(...met.readings);
   part.rules.push({
     id,
     clause: '7',
     title: 'Creep compliance',
     severity: 'required',
-    measure,
+    measure: met.where.length > 0 ? { ...measure, where: met.where } : measure,
     limit: limit.limit,
     ...('rounding' in rounding ? { rounding: rounding.rounding } : {}),
     ...(draw.chance(30) ? { precision: { value: decimal(draw.whole(0, 4), scale.decimals) } } : {}),
@@ -45,9 +52,10 @@ function onCurve(draw: Draw): CreepInput {
   return {
     kind: 'creep-compliance',
     temperature: -10,
-    time: draw.oneOf([20, 5, 300, 100, 3000]),
+    time: draw.oneOf([20, 5, 300, 100, 3000, 1005, 10_000, 0.1, 0.5, 20_000]),
     source: draw.oneOf(['either', 'fitted'] as const),
     model: 'power',
+    ...(draw.chance(50) ? { extrapolationDecades: draw.oneOf([1, 0.4, 2]), use: 'estimate' as const } : {}),
   };
 }
 

@@ -3,6 +3,8 @@ import { computed, NoValue } from '../own/formula';
 import { type Draw, decimal, written } from './draw';
 import { drawRounding } from './limits';
 import { emptyPart, type Part, type ReadingInput } from './parts';
+import { CANDIDATES } from './quantities';
+import { drawWhere } from './where';
 
 /** Symbols with their quantities, units and the whole numbers between which they lie. */
 const SYMBOLS: Record<
@@ -39,8 +41,11 @@ export function formulaPart(draw: Draw, id: string): Part {
   const part = emptyPart();
   const { expression, symbols, unit } = draw.oneOf(FORMULAS);
   const values = new Map<string, Exact>();
+  const wanted = { rule: {}, readings: () => ({}), beside: [] };
+  const met = drawWhere(draw, CANDIDATES[0]!, wanted, 2);
+  part.readings.push(...met.readings);
   for (const symbol of symbols) {
-    const value = drawSymbol(draw, part, symbol);
+    const value = drawSymbol(draw, part, symbol, met.where.length > 0);
     values.set(symbol, exact(value));
   }
   const decimals = draw.whole(0, 2);
@@ -62,6 +67,7 @@ export function formulaPart(draw: Draw, id: string): Part {
       expression,
       ...(unit === undefined ? {} : { unit }),
       ...(draw.chance(20) ? { at: { trial: 'design' } } : {}),
+      ...(met.where.length > 0 ? { where: met.where } : {}),
     },
     limit: draw.chance(50) ? { min: bound } : { max: bound },
     ...('rounding' in rounding ? { rounding: rounding.rounding } : {}),
@@ -79,7 +85,7 @@ function valueOrOne(expression: string, values: Map<string, Exact>): number {
   }
 }
 
-function drawSymbol(draw: Draw, part: Part, symbol: string): number {
+function drawSymbol(draw: Draw, part: Part, symbol: string, isOfSpecimens: boolean): number {
   const { quantity, unit, least, most, sieve } = SYMBOLS[symbol]!;
   const decimals = draw.whole(0, 2);
   const power = 10 ** decimals;
@@ -91,7 +97,7 @@ function drawSymbol(draw: Draw, part: Part, symbol: string): number {
     [4, 'censored'],
     [3, 'in doubt'],
     [4, 'of another trial'],
-    [4, 'replicates'],
+    [isOfSpecimens ? 100 : 4, 'replicates'],
   ] as const);
   const reading = (value: number): ReadingInput => ({ quantity, value, unit, at, origin: 'measured' });
   if (how === 'stated') part.readings.push(reading(decimal(steps, decimals)));

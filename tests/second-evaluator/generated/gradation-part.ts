@@ -2,9 +2,10 @@ import type { RuleInput } from '#rules/rule-sets/schema';
 import { SIZES } from './attributes';
 import { type Draw, decimal, written } from './draw';
 import { drawRounding, type Scale } from './limits';
-import { emptyPart, type Part, type TableInput } from './parts';
+import { emptyPart, type Part, type ReadingInput, type TableInput } from './parts';
 import { PASSING } from './quantities';
 import { drawReading } from './readings';
+import { drawWhere } from './where';
 
 const SIEVES = [19, 12.5, 4.75, 0.075];
 const MIDDLES = [90, 70, 40, 5];
@@ -40,17 +41,33 @@ export function gradationPart(draw: Draw, id: string): Part {
   part.tables.push(table);
   const rounding = drawRounding(draw, id, scales[0]!, true);
   part.tables.push(...rounding.tables);
+  const hasReadings = !draw.chance(8);
+  const stated = draw.weighed([
+    [60, 'passing'],
+    [20, 'cumulative'],
+    [20, 'individual'],
+  ] as const);
+  const wanted = { rule: {}, readings: () => ({}), beside: [] };
+  const samples = stated === 'passing' && draw.chance(20) ? 2 : 0;
+  const met = drawWhere(draw, { ...PASSING, isOfAggregate: undefined }, wanted, samples, samples > 0);
+  part.readings.push(...met.readings);
   part.rules.push({
     id,
     clause: '2',
     title: 'Gradation',
     severity: 'required',
-    measure: { kind: 'gradation', table: table.id, ...(draw.chance(20) ? { at: { trial: 'design' } } : {}) },
+    measure: {
+      kind: 'gradation',
+      table: table.id,
+      ...(draw.chance(20) ? { at: { trial: 'design' } } : {}),
+      ...(met.where.length > 0 ? { where: met.where } : {}),
+    },
     limit: limitOf(draw, table.id),
     ...('rounding' in rounding ? { rounding: rounding.rounding } : {}),
     ...(draw.chance(30) ? { precision: { value: decimal(draw.whole(0, 3), decimals) } } : {}),
   });
-  if (!draw.chance(8)) addReadings(draw, part, scales);
+  if (hasReadings && stated === 'passing') addReadings(draw, part, scales, samples);
+  if (hasReadings && stated !== 'passing') addRetained(draw, part, scales, stated);
   return part;
 }
 
@@ -64,7 +81,7 @@ function limitOf(draw: Draw, table: string): RuleInput['limit'] {
   ]);
 }
 
-function addReadings(draw: Draw, part: Part, scales: Scale[]): void {
+function addReadings(draw: Draw, part: Part, scales: Scale[], samples: number): void {
   const trial = draw.weighed([
     [70, { trial: 'design' }],
     [25, {}],
@@ -85,6 +102,62 @@ function addReadings(draw: Draw, part: Part, scales: Scale[]): void {
       });
     }
     if (draw.chance(isInDoubt ? 60 : 9)) return;
-    part.readings.push(drawReading(draw, shape, { ...trial, sieve }, draw.whole(0, 1)));
+    const places = samples === 0 ? [{}] : [{ specimen: '1' }, { specimen: '2' }];
+    for (const place of places) {
+      part.readings.push(drawReading(draw, shape, { ...trial, sieve, ...place }, draw.whole(0, 1)));
+    }
+  });
+}
+
+/**
+ * The same gradation by what stays on its sieves, each alone or with all above; a cell in doubt, censored, in another
+ * unit or left out now and then, and here and there a sieve of which percent passing is stated as well.
+ */
+function addRetained(draw: Draw, part: Part, scales: Scale[], stated: 'cumulative' | 'individual'): void {
+  const trial = draw.weighed([
+    [70, { trial: 'design' }],
+    [25, {}],
+    [5, { trial: 'B' }],
+  ]);
+  const quantity = stated === 'cumulative' ? 'cumulative-percent-retained' : 'percent-retained';
+  let above = 0;
+  SIEVES.forEach((sieve, i) => {
+    const { decimals, min, max } = scales[i]!;
+    const power = 10 ** decimals;
+    const retained = 100 * power - draw.oneOf([min, max, min - 1, max + 1, min, max]);
+    const steps = stated === 'cumulative' ? retained : retained - above;
+    above = retained;
+    const how = draw.weighed([
+      [80, 'stated'],
+      [6, 'left out'],
+      [5, 'in doubt'],
+      [3, 'censored'],
+      [2, 'a wrong unit'],
+      [4, 'passing as well'],
+    ] as const);
+    const at = { ...trial, sieve };
+    const reading: ReadingInput = {
+      quantity,
+      value: decimal(steps, decimals),
+      unit: '%',
+      at,
+      origin: 'measured',
+    };
+    if (how === 'in doubt') {
+      part.doubts.push({
+        sheet: 'Gradation',
+        cell: `D${i + 2}`,
+        text: '?',
+        reason: 'The cell cannot be read.',
+        alternatives: [],
+        about: { quantity, at },
+      });
+    }
+    if (how === 'left out' || how === 'in doubt') return;
+    if (how === 'censored') part.readings.push({ ...reading, qualifier: draw.oneOf(['<', '>'] as const) });
+    else part.readings.push(how === 'a wrong unit' ? { ...reading, unit: 'mm' } : reading);
+    if (how === 'passing as well') {
+      part.readings.push({ ...reading, quantity: PASSING.id, value: decimal(min, decimals) });
+    }
   });
 }

@@ -14,6 +14,8 @@ export interface Part {
   readings: ReadingInput[];
   doubts: DoubtInput[];
   documents: DocumentInput[];
+  /** How the edition reads the design between trials, where the part's rule rests on it. */
+  designPoint?: RuleSetInput['designPoint'];
 }
 
 export interface GeneratedCase {

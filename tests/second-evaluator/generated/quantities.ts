@@ -11,7 +11,7 @@ export interface Candidate {
   /** Other units of the same kind, and one of another. */
   others: string[];
   wrong: string;
-  isOfAggregate?: true;
+  isOfAggregate?: true | undefined;
   bySieve?: true;
 }
 

@@ -2,15 +2,15 @@ import type { Reading } from '#rules/record';
 import type { CreepComplianceMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
 import { isSameCondition } from './conditions';
+import { type TestedPoint, throughPoints } from './creep-curve';
 import { asNumber, exact, greatest, over } from './exact';
 import { type Allowed, isOne, meanOf, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
 import { limitsOf } from './limits';
-import { throughThreePoints } from './power-law';
 import { haveUnits, valuesOf } from './quantity-value';
-import { toTwelveDigits } from './rounding';
 import { isDoubted, select } from './selection';
+import { countingReadings } from './where';
 import { type Verdict, type World, without } from './world';
 
 export type CreepRule = Rule & { measure: CreepComplianceMeasure };
@@ -30,7 +30,7 @@ function judgeCreep(world: World, rule: CreepRule): Judgement {
   const { measure } = rule;
   const { time, source, temperature, stress } = measure;
   const wanted = { temperature, ...(stress === undefined ? {} : { stress }) };
-  const found = pointsOf(world, wanted);
+  const found = countingPoints(world, measure, pointsOf(world, wanted));
   const points = typeof found === 'string' ? [] : found;
   const atTime = points.filter((point) => isSameCondition('time', time, point.time));
   const isMeasured = source === 'measured' || (source === 'either' && atTime.length > 0);
@@ -71,6 +71,28 @@ function pointsOf(
   return isUnsure ? 'undecided' : 'not shown';
 }
 
+/** The points of the specimens that count; those of a specimen that may or may not leave all open. */
+function countingPoints(
+  world: World,
+  { where }: CreepComplianceMeasure,
+  points: Point[] | 'not shown' | 'undecided',
+): typeof points {
+  if (typeof points === 'string' || where === undefined) return points;
+  const specimens = [...new Set(points.map(({ specimen }) => specimen))].map((specimen) => ({
+    quantity: 'creep-compliance',
+    value: null,
+    unit: '1/GPa',
+    at: specimen === undefined ? {} : { specimen },
+    origin: 'measured' as const,
+    source: null,
+  }));
+  const counting = countingReadings(world, specimens, where);
+  if (counting === null) return 'undecided';
+  const left = counting.map(({ at }) => at.specimen);
+  const kept = points.filter(({ specimen }) => left.includes(specimen));
+  return kept.length > 0 ? kept : 'not shown';
+}
+
 /** D in 1/GPa: a strain in µε over a stress in kPa is the same number. */
 function valueBy(reading: Reading): Allowed | null {
   const { stress } = reading.at;
@@ -97,22 +119,21 @@ function meanOfSpecimens(points: Point[]): Allowed | 'undecided' {
   return meanOf(means);
 }
 
-/**
- * Between the tested times the curve, where the points lie on one exactly; outside them undecided, because no rule
- * here allows to extrapolate.
- */
-function fitted(points: Point[], { time }: CreepComplianceMeasure): Allowed | 'undecided' {
-  const first = new Map<number, number>();
-  for (const { time: tested, value } of points) {
+/** Within the tested times, or as far beyond as the rule allows, by a curve that its points hold. */
+function fitted(points: Point[], measure: CreepComplianceMeasure): Allowed | 'undecided' {
+  const tested: TestedPoint[] = [];
+  for (const { time, value } of points) {
     if (value === null || !isOne(value)) return 'undecided';
-    first.set(tested, asNumber(value.low));
+    tested.push({ time, value: asNumber(value.low) });
   }
-  const times = [...first.keys()].sort((left, right) => left - right);
-  if (times.length < 4 || time < times[0]! || time > times.at(-1)!) return 'undecided';
-  const three = times.slice(0, 3).map((each) => ({ time: each, value: first.get(each)! }));
-  for (const [tested, value] of first) {
-    const apart = Math.abs(throughThreePoints(three, tested) - value);
-    if (!(apart <= 1e-8 * value)) throw new Error('The points lie on no power law, and none is fitted here.');
-  }
-  return one(toTwelveDigits(throughThreePoints(three, time)));
+  const ends = tested.map(({ time }) => time);
+  const decades = decadesBeyond(measure.time, Math.min(...ends), Math.max(...ends));
+  if (decades > measure.extrapolationDecades) return 'undecided';
+  return throughPoints(tested, measure);
+}
+
+/** A time within one percent of the first or the last tested one is that one. */
+function decadesBeyond(time: number, first: number, last: number): number {
+  if (isSameCondition('time', first, time) || isSameCondition('time', last, time)) return 0;
+  return Math.max(0, Math.log10(first / time), Math.log10(time / last));
 }

@@ -1,5 +1,6 @@
 import type { DifferenceMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
+import { passingOfStockpiles } from './blend';
 import { type Exact, exact, magnitude, minus, over, times } from './exact';
 import { isOne, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
@@ -17,13 +18,24 @@ type Side = { is: 'value'; value: Exact } | { is: 'missing' } | { is: 'doubtful'
 
 export function differenceVerdicts(world: World, rule: DifferenceRule): Verdict[] {
   const { quantity } = rule.measure;
-  return [{ rule: rule.id, subject: subjectOf(quantity, {}), ...judgeDifference(world, rule) }];
+  if (quantity !== 'percent-passing') {
+    return [{ rule: rule.id, subject: subjectOf(quantity, {}), ...judgeDifference(world, rule) }];
+  }
+  const stated = world.record.readings.filter(
+    (reading) => reading.quantity === quantity && reading.at.stockpile === undefined,
+  );
+  const sieves = [...new Set(stated.map(({ at }) => at.sieve!))];
+  return sieves.map((sieve) => ({
+    rule: rule.id,
+    subject: subjectOf(quantity, { sieve }),
+    ...judgeDifference(world, rule, sieve),
+  }));
 }
 
-function judgeDifference(world: World, rule: DifferenceRule): Judgement {
+function judgeDifference(world: World, rule: DifferenceRule, sieve?: number): Judgement {
   const { quantity } = rule.measure;
   const values: Exact[] = [];
-  const sides = sidesOf(world, rule.measure);
+  const sides = sieve === undefined ? sidesOf(world, rule.measure) : sidesOfSieve(world, sieve);
   const areOfWorkbook = rule.measure.between[0] === 'reported';
   // Of one workbook a doubtful cell may be the missing one; two laboratories are asked one after the other.
   if (areOfWorkbook && sides.some(({ is }) => is === 'doubtful')) return without('undecided');
@@ -47,6 +59,19 @@ function sidesOf(world: World, measure: DifferenceMeasure): Side[] {
     return [sideOfLaboratory(world, measure, 'contractor'), sideOfLaboratory(world, measure, 'agency')];
   }
   return [recomputedVoids(world), reportedVoids(world)];
+}
+
+function sidesOfSieve(world: World, sieve: number): Side[] {
+  const computed = passingOfStockpiles(world, sieve);
+  const ofBlend = world.record.readings.filter(
+    ({ quantity, at }) => quantity === 'percent-passing' && at.stockpile === undefined,
+  );
+  // The job mix's own gradation, where there is one, is all of it: the blend's does not fill its gaps.
+  const ofJobMix = ofBlend.filter(({ at }) => at.trial === 'design');
+  const stated = (ofJobMix.length > 0 ? ofJobMix : ofBlend).find(({ at }) => at.sieve === sieve);
+  return [computed, stated?.value == null ? null : exact(stated.value)].map((value) =>
+    value === null ? { is: 'missing' } : { is: 'value', value },
+  );
 }
 
 /** One number a side: a censored one leaves the distance open. */

@@ -10,6 +10,8 @@ export interface LaidOut {
   rules: Rule[];
   tables: Table[];
   attributes: Attribute[];
+  /** How a property is read between trials. */
+  fit: 'quadratic' | 'linear';
 }
 
 export function layOut(base: RuleSet, layers: Layer[]): LaidOut {
@@ -40,7 +42,7 @@ export function layOut(base: RuleSet, layers: Layer[]): LaidOut {
       });
     }
   }
-  return { rules, tables, attributes };
+  return { rules, tables, attributes, fit: base.designPoint.fit };
 }
 
 function changed<T>(present: T[], add: T[], replace: T[], remove: string[], key: (entry: T) => string): T[] {

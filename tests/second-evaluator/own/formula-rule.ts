@@ -6,6 +6,7 @@ import { isOne, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
 import { meanAt } from './quantity-value';
+import { countingReadings } from './where';
 import { type Verdict, type World, without } from './world';
 
 export type FormulaRule = Rule & { measure: FormulaMeasure };
@@ -41,12 +42,17 @@ export function symbolOf(name: string): { quantity: string; sieve: number | unde
 }
 
 function judgeFormula(world: World, rule: FormulaRule): Judgement {
-  const { expression, at, unit } = rule.measure;
+  const { expression, at, unit, where } = rule.measure;
   const values = new Map<string, Exact>();
   const failures = new Set<string>();
   for (const name of namesIn(expression)) {
     const { quantity, sieve } = symbolOf(name);
-    const found = meanAt(world, quantity, sieve === undefined ? at : { ...at, sieve });
+    const found = meanAt(world, quantity, sieve === undefined ? at : { ...at, sieve }, (readings) =>
+      // A value of no specimen has none that could be left out.
+      readings.some((reading) => reading.at.specimen !== undefined)
+        ? countingReadings(world, readings, where ?? [])
+        : readings,
+    );
     if (found.is === 'missing') failures.add('not shown');
     else if (found.is === 'doubtful' || !isOne(found.value)) failures.add('undecided');
     else values.set(name, found.value.low);

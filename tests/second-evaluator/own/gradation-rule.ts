@@ -1,13 +1,16 @@
 import type { GradationMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
-import { meanOf } from './interval';
+import { meanOf, one } from './interval';
 import { type Judgement, judged, measuresOf, precisionOf } from './judged';
 import { haveUnits, valuesOf } from './quantity-value';
+import { passingFromRetained, RETAINED } from './retained';
 import { select } from './selection';
 import { covers, keyValue, tableOf } from './table';
+import { countingReadings } from './where';
 import { type Verdict, type World, without } from './world';
 
 const PASSING = 'percent-passing';
+const GRADATIONS = [PASSING, ...RETAINED];
 
 export type GradationRule = Rule & { measure: GradationMeasure };
 
@@ -18,8 +21,8 @@ export function gradationVerdicts(world: World, rule: GradationRule): Verdict[] 
   ];
   const { readings, doubts } = world.record;
   const hasAny =
-    readings.some(({ quantity }) => quantity === PASSING) ||
-    doubts.some(({ about }) => about.quantity === PASSING);
+    readings.some(({ quantity }) => GRADATIONS.includes(quantity)) ||
+    doubts.some(({ about }) => GRADATIONS.includes(about.quantity ?? ''));
   if (!hasAny) return alone('not shown');
   const sieves = sievesOf(world, rule.measure.table);
   if (sieves.length === 0) return alone('undecided');
@@ -51,14 +54,39 @@ function sievesOf(world: World, tableId: string): number[] {
 
 function judgeSieve(world: World, rule: GradationRule, sieve: number): Judgement {
   const chosen = select(world, PASSING, { ...rule.measure.at, sieve });
-  if (chosen.is !== 'readings') return without(chosen.is === 'missing' ? 'not shown' : 'undecided');
+  if (chosen.is === 'missing') return judgeRetained(world, rule, sieve);
+  if (chosen.is !== 'readings') return without('undecided');
   if (!haveUnits(PASSING, chosen.readings)) return without('undecided');
+  const counting = countingReadings(world, chosen.readings, rule.measure.where ?? []);
+  if (counting === null) return without('undecided');
+  if (counting.length === 0) return without('not shown');
   const measures = measuresOf({ world, sieve, unit: '%' }, rule);
   if (measures.is !== 'resolved') return without(measures.is);
-  const values = valuesOf(PASSING, chosen.readings, '%', measures.value.limits.min !== null);
+  const values = valuesOf(PASSING, counting, '%', measures.value.limits.min !== null);
   if (values.is !== 'values') return without('undecided');
   const mean = meanOf(values.values.map(({ allowed }) => allowed));
   const judgement = judged(mean, measures.value, precisionOf(rule, undefined, values.values.length));
   const hasWord = values.values.some(({ isWord }) => isWord);
   return hasWord ? { ...judgement, figuresAreLaidDown: false } : judgement;
+}
+
+/** A sieve of which only what it retains is stated. */
+function judgeRetained(world: World, rule: GradationRule, sieve: number): Judgement {
+  const passing = passingFromRetained(world, rule.measure.at, sieve);
+  if (passing.is !== 'value') return without(passing.is === 'missing' ? 'not shown' : 'undecided');
+  const wheres = rule.measure.where ?? [];
+  const stated = {
+    quantity: PASSING,
+    value: null,
+    unit: '%',
+    at: {},
+    origin: 'converted',
+    source: null,
+  } as const;
+  const counting = countingReadings(world, [stated], wheres);
+  if (counting === null) return without('undecided');
+  if (counting.length === 0) return without('not shown');
+  const measures = measuresOf({ world, sieve, unit: '%' }, rule);
+  if (measures.is !== 'resolved') return without(measures.is);
+  return judged(one(passing.value), measures.value, precisionOf(rule, undefined, 1));
 }

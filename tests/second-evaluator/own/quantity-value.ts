@@ -45,15 +45,23 @@ function allowedBy(qualifier: Reading['qualifier'], value: Exact): Allowed {
   return qualifier === '>' ? above(value) : one(value);
 }
 
-/** The mean of a quantity at some conditions, for a limit, a `when` or a formula that refers to it. */
+/**
+ * The mean of a quantity at some conditions, for a limit, a `when` or a formula that refers to it; of a formula only
+ * over the specimens that count.
+ */
 export function meanAt(
   world: World,
   quantity: string,
   at: Conditions,
+  keep: (readings: Reading[]) => Reading[] | null = (readings) => readings,
 ): { is: 'value'; value: Allowed } | { is: 'missing' } | { is: 'doubtful' } {
   const chosen = select(world, quantity, at);
   if (chosen.is !== 'readings') return chosen;
-  const values = valuesOf(quantity, chosen.readings, knownOf(quantity).unit, true);
+  if (!haveUnits(quantity, chosen.readings)) return { is: 'doubtful' };
+  const kept = keep(chosen.readings);
+  if (kept === null) return { is: 'doubtful' };
+  if (kept.length === 0) return { is: 'missing' };
+  const values = valuesOf(quantity, kept, knownOf(quantity).unit, true);
   if (values.is !== 'values' || values.values.some(({ isWord }) => isWord)) return { is: 'doubtful' };
   return { is: 'value', value: meanOf(values.values.map(({ allowed }) => allowed)) };
 }

@@ -1,6 +1,9 @@
 import type { Reading } from '#rules/record';
 import type { ReadingMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
+import { isWithinDigits, OF_BLEND, ofStockpiles } from './blend';
+import { type Exact, exact } from './exact';
+import { one } from './interval';
 import { type Judgement, judged, type Measures, measuresOf, precisionOf } from './judged';
 import { knownOf } from './known';
 import { limitsOf, type Place } from './limits';
@@ -8,6 +11,7 @@ import { haveUnits, type Value, valuesOf } from './quantity-value';
 import { select } from './selection';
 import { statisticOf } from './statistic-of';
 import { subjectOf } from './subject';
+import { designVoids } from './trial-voids';
 import { countingReadings } from './where';
 import { type Verdict, type World, without } from './world';
 
@@ -44,6 +48,8 @@ function statedOf(world: World, quantity: string, wanted: At, name: 'stockpile' 
 
 function judgeReadings(world: World, rule: ReadingRule, at: At): Judgement {
   const { measure } = rule;
+  const ofOthers = judgeComputed(world, rule, at);
+  if (ofOthers !== null) return ofOthers;
   const chosen = select(world, measure.quantity, at);
   if (chosen.is !== 'readings') return without(chosen.is === 'missing' ? 'not shown' : 'undecided');
   if (!haveUnits(measure.quantity, chosen.readings)) return without('undecided');
@@ -59,6 +65,53 @@ function judgeReadings(world: World, rule: ReadingRule, at: At): Judgement {
   return judgeNumbers(place, rule, counting, measures.value);
 }
 
+/** Of what follows from other readings: null where it does not, or where the stated value counts. */
+function judgeComputed(world: World, rule: ReadingRule, at: At): Judgement | null {
+  const { quantity } = rule.measure;
+  if (quantity === 'air-voids') {
+    const voids = designVoids(world);
+    if (voids === null) return null;
+    const specimens = voids.specimens.length > 0 ? voids.specimens : [voids.mean];
+    return judgeValues(world, rule, specimens, voids);
+  }
+  if (!OF_BLEND.includes(quantity) || at.stockpile !== undefined) return null;
+  const computed = ofStockpiles(world, quantity);
+  if (computed === null) return null;
+  const judgement = judgeValues(world, rule, [computed], { count: 1, isInterpolated: false });
+  const stated = world.record.readings.find(
+    (reading) => reading.quantity === quantity && reading.at.stockpile === undefined,
+  );
+  if (stated?.value == null) return judgement;
+  if (isWithinDigits(world, quantity, stated.value)) return null;
+  // Neither stands where the two part.
+  const asStated = judgeValues(world, rule, [exact(stated.value)], { count: 1, isInterpolated: false });
+  return asStated.outcome === judgement.outcome ? judgement : without('undecided');
+}
+
+function judgeValues(
+  world: World,
+  rule: ReadingRule,
+  numbers: Exact[],
+  { count, isInterpolated }: { count: number; isInterpolated: boolean },
+): Judgement {
+  const { measure } = rule;
+  const isShort = count < (measure.minimumCount ?? 1);
+  const place = { world, unit: unitOf(measure) };
+  const measures = measuresOf(place, rule);
+  if (measures.is !== 'resolved') return without(measures.is);
+  if (isShort) return without('undecided');
+  const values = numbers.map((number): Value => ({ allowed: one(number), isWord: false }));
+  if (measure.statistic === 'count')
+    return judged(one(exact(count)), measures.value, precisionOf(rule, undefined, 1));
+  // Of a value between trials nothing is known of single specimens.
+  const knowsSingles = !isInterpolated && numbers.length === count;
+  if (!knowsSingles && measure.statistic !== 'mean') return without('undecided');
+  const { unit, deviation } = knownOf(measure.quantity);
+  if (knowsSingles) return judgeAll(place, rule, values, measures.value, unit);
+  const main = judged(values[0]!.allowed, measures.value, precisionOf(rule, deviation, count));
+  return measure.alsoEach === undefined || main.outcome === 'fail' ? main : without('undecided');
+}
+
 function judgeNumbers(place: Place, rule: ReadingRule, readings: Reading[], measures: Measures): Judgement {
   const { measure } = rule;
   const own = knownOf(measure.quantity).unit;
@@ -66,7 +119,23 @@ function judgeNumbers(place: Place, rule: ReadingRule, readings: Reading[], meas
   const unit = movesToLimit ? (measures.limits.unit ?? own) : own;
   const values = valuesOf(measure.quantity, readings, unit, measures.limits.min !== null);
   if (values.is !== 'values') return without('undecided');
-  const main = judgeStatistic(place, rule, values.values, measures, unit);
+  return judgeAll(place, rule, values.values, measures, unit, (hasMin) =>
+    valuesOf(measure.quantity, readings, unit, hasMin),
+  );
+}
+
+/** The statistic, and each single value where the rule asks for it. */
+function judgeAll(
+  place: Place,
+  rule: ReadingRule,
+  values: Value[],
+  measures: Measures,
+  unit: string,
+  singlesBy: (hasMin: boolean) => ReturnType<typeof valuesOf> = () => ({ is: 'values', values }),
+): Judgement {
+  const { measure } = rule;
+  const own = knownOf(measure.quantity).unit;
+  const main = judgeStatistic(place, rule, values, measures, unit);
   if (measure.alsoEach === undefined || main.outcome === 'fail') return main;
   if (main.outcome !== 'pass' && main.outcome !== 'undecided') return main;
   const also = limitsOf({ ...place, unit: own }, measure.alsoEach);
@@ -75,7 +144,7 @@ function judgeNumbers(place: Place, rule: ReadingRule, readings: Reading[], meas
   const limits = inUnitOf(place, measure, unit);
   if (limits === null) return without('undecided');
   // What none stands for depends on the ends that single values are held to.
-  const singles = valuesOf(measure.quantity, readings, unit, limits.min !== null);
+  const singles = singlesBy(limits.min !== null);
   return singles.is === 'values' ? withEach(main, singles.values, { ...measures, limits }) : main;
 }
 

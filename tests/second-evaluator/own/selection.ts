@@ -39,6 +39,8 @@ export function select(
   // What is stated for this trial goes before what is stated for all.
   const own = fitting.filter(({ at }) => at.trial !== undefined);
   if (knownOf(quantity).of !== 'mix' && own.length > 0) fitting = own;
+  // Of what follows from other readings the plain value is the volumetric specimens' own.
+  if (quantity === 'air-voids') fitting = plainOf(wanted, fitting);
   if (severalConditions(wanted, fitting, pooled)) return { is: 'doubtful' };
   if (pooled.length > 0) return { is: 'readings', readings: fitting };
   const readings = oneASpecimen(fitting);
@@ -60,6 +62,11 @@ export function isDoubted(world: World, quantity: string, wanted: Conditions): b
     if (!isSure) return true;
   }
   return false;
+}
+
+function plainOf(wanted: Conditions, fitting: Reading[]): Reading[] {
+  const plain = fitting.filter(({ at }) => at.variant === undefined);
+  return wanted.variant === undefined && plain.length > 0 ? plain : fitting;
 }
 
 function standsFor(sure: Conditions, doubted: Conditions): boolean {

@@ -427,3 +427,19 @@ describe('documents and attributes', () => {
     expect(read('RAP content (% by mass of mix) | 20').said).toEqual(['rap-content 20']);
   });
 });
+
+describe('air voids under the title of a test of its own', () => {
+  it('say for which test their specimens were made', () => {
+    const { said } = read(
+      'Hamburg wheel tracking at 50 °C\n\nSpecimen | Air voids (%) | Rut depth at 20,000 passes (mm)\n1 | 7.1 | 5.2\n2 | 6.8 | 5.6',
+    );
+    expect(said.filter((each) => each.startsWith('air-voids'))).toEqual([
+      'air-voids specimen=1 variant=wheel tracking 7.1',
+      'air-voids specimen=2 variant=wheel tracking 6.8',
+    ]);
+  });
+  it('are those of the design under a title of the mix', () => {
+    const { said } = read('Mix properties\n\nSpecimen | Air voids (%)\n1 | 4.1\n2 | 3.8');
+    expect(said).toEqual(['air-voids specimen=1 4.1', 'air-voids specimen=2 3.8']);
+  });
+});
