@@ -35,19 +35,46 @@ export interface Selection<T> {
   preferPlain: boolean;
 }
 
-/** The candidates obtained as the rule demands, or why none can be told to be. */
+/**
+ * The candidates obtained as the rule demands, or why none can be told to be. What a rule names is looked at first:
+ * only among what is left could a condition that it leaves unnamed tell one test from another.
+ */
 export function select<T extends Candidate>(selection: Selection<T>): { ok: true; chosen: T[] } | Obstacle {
-  let chosen = selection.candidates;
+  const named = SELECTORS.filter((selector) => selection.wanted[selector] !== undefined);
+  const possible = withoutOthers(selection, named);
+  if (!possible.ok) return possible;
+  let { chosen } = possible;
+  for (const selector of named) {
+    const step = selectNamed(selection, chosen, selector);
+    if (!step.ok) return step;
+    chosen = step.chosen;
+  }
   for (const selector of SELECTORS) {
-    const wanted = selection.wanted[selector];
-    const step =
-      wanted === undefined
-        ? leaveUnnamed(selection, chosen, selector)
-        : selectNamed(selection, chosen, selector);
+    if (named.includes(selector)) continue;
+    const step = leaveUnnamed(selection, chosen, selector);
     if (!step.ok) return step;
     chosen = step.chosen;
   }
   return { ok: true, chosen };
+}
+
+/**
+ * A reading that carries another value of one named condition is out, whatever it leaves unsaid of a second: to say
+ * that would not make it count.
+ */
+function withoutOthers<T extends Candidate>(
+  { world, candidates, wanted, label }: Selection<T>,
+  named: readonly Selector[],
+): { ok: true; chosen: T[] } | Obstacle {
+  if (named.length < 2) return { ok: true, chosen: candidates };
+  const isOther = ({ at }: T, selector: Selector) =>
+    at[selector] !== undefined && sameCondition(world, selector, wanted[selector], at[selector]) === 'other';
+  const chosen = candidates.filter((each) => !named.some((selector) => isOther(each, selector)));
+  if (chosen.length > 0 || candidates.length === 0) return { ok: true, chosen };
+  const wordsOf = (at: Conditions) =>
+    conditionWords(Object.fromEntries(named.map((selector) => [selector, at[selector]]))).trim();
+  const others = [...new Set(candidates.map(({ at }) => wordsOf(at)))];
+  return notShown(`There is no reading of ${label} ${wordsOf(wanted)}, only ${orList(others)}.`);
 }
 
 function selectNamed<T extends Candidate>(

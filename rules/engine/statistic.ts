@@ -65,8 +65,9 @@ export function judgeableOf(item: SampleItem, hasMin: boolean): Judgeable {
   if (qualifier === '<' && value !== null) return { value, text, allowed: { low: -Infinity, high: value } };
   if (qualifier === '>' && value !== null) return { value, text, allowed: { low: value, high: Infinity } };
   if (qualifier === 'none' || qualifier === 'non-plastic' || value === null) {
-    // Nothing found in so many passes: it may come at any number beyond them.
-    if (item.at.passes !== undefined) {
+    // Nothing found in so many passes: what is counted in passes may come at any number beyond them. Of a depth the
+    // passes are only the condition under which there was none.
+    if (item.at.passes !== undefined && item.evidence.unit === 'passes') {
       return { value: item.at.passes, text, isWord: true, allowed: { low: item.at.passes, high: Infinity } };
     }
     // "None" is no amount at all against a most; against a least it has no number to be held to.

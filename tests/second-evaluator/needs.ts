@@ -4,12 +4,14 @@ import { type Condition, conditionSchema } from '#rules/rule-sets/when';
 import type { GeneratedCase } from './generated/parts';
 import { namesIn } from './own/formula';
 import { symbolOf } from './own/formula-rule';
+import { RETAINED } from './own/retained';
 import { truthOf } from './own/truth';
 import { worldOf } from './own/world';
 
 /** One fact without which a rule cannot be known to be met. */
 export interface Need {
-  quantity?: string | undefined;
+  /** Any of these serves. */
+  quantities?: string[];
   attribute?: string | undefined;
   document?: string | undefined;
 }
@@ -17,29 +19,48 @@ export interface Need {
 /** What a rule that passes cannot do without: what it measures, and what its limits and its `when` rest on. */
 export function needsOf(drawn: GeneratedCase, rule: RuleInput): Need[] {
   const needs: Need[] = [...measured(drawn, rule), ...referred(drawn, rule)];
-  for (const { quantity } of rule.measure.where ?? []) needs.push({ quantity });
+  if (hasSpecimens(drawn, rule))
+    for (const { quantity } of rule.measure.where ?? []) needs.push({ quantities: [quantity] });
   for (const attribute of decisive(drawn, rule)) needs.push({ attribute });
   return needs;
 }
 
+/** A formula over values of no specimen has none that a condition could leave out. */
+function hasSpecimens({ record }: GeneratedCase, { measure }: RuleInput): boolean {
+  if (measure.kind !== 'formula') return true;
+  const used = namesIn(measure.expression).map((name) => symbolOf(name).quantity);
+  return (record.readings ?? []).some(
+    ({ quantity, at }) => used.includes(quantity) && at?.specimen !== undefined,
+  );
+}
+
 function measured({ record }: GeneratedCase, { measure }: RuleInput): Need[] {
   switch (measure.kind) {
-    case 'reading':
     case 'difference':
-      return [{ quantity: measure.quantity }];
+      return [{ quantities: [measure.quantity] }];
+    case 'reading':
+      // Air voids are reported, or follow from the gravities.
+      return [
+        {
+          quantities: [
+            measure.quantity,
+            ...(measure.quantity === 'air-voids' ? ['maximum-specific-gravity'] : []),
+          ],
+        },
+      ];
     case 'gradation':
-      return [{ quantity: 'percent-passing' }];
+      return [{ quantities: ['percent-passing', ...RETAINED] }];
     case 'attribute':
       return [{ attribute: measure.attribute }];
     case 'document':
       return [{ document: measure.type }];
     case 'formula':
-      return namesIn(measure.expression).map((name) => ({ quantity: symbolOf(name).quantity }));
+      return namesIn(measure.expression).map((name) => ({ quantities: [symbolOf(name).quantity] }));
     case 'creep-compliance':
       // A drawn test is stated as compliance or as strain, never as both.
       return ['creep-compliance', 'creep-strain']
         .filter((id) => record.readings?.some(({ quantity }) => quantity === id))
-        .map((quantity) => ({ quantity }));
+        .map((quantity) => ({ quantities: [quantity] }));
   }
 }
 
@@ -52,7 +73,7 @@ function referred(drawn: GeneratedCase, { limit, measure }: RuleInput): Need[] {
   for (const bound of bounds) {
     if (typeof bound !== 'object') continue;
     if ('table' in bound) tables.add(bound.table);
-    if ('quantity' in bound) needs.push({ quantity: bound.quantity });
+    if ('quantity' in bound) needs.push({ quantities: [bound.quantity] });
   }
   for (const id of tables) {
     const table = drawn.base.tables?.find((each) => each.id === id);

@@ -24,17 +24,17 @@ type Taking = (record: MixRecordInput, need: Need) => MixRecordInput;
 const missing: Taking = (record, need) => ({
   ...record,
   attributes: withoutKey(record.attributes ?? {}, need.attribute),
-  readings: (record.readings ?? []).filter(({ quantity }) => quantity !== need.quantity),
+  readings: (record.readings ?? []).filter(({ quantity }) => !need.quantities?.includes(quantity)),
   documents: (record.documents ?? []).filter(({ type }) => type !== need.document),
 });
 
 /** As if every cell of it could not be read. */
 const doubtful: Taking = (record, need) => {
   const cells = (record.readings ?? [])
-    .filter(({ quantity }) => quantity === need.quantity)
+    .filter(({ quantity }) => need.quantities?.includes(quantity))
     .map(({ quantity, at }) => ({ quantity, ...(at === undefined ? {} : { at }) }));
   const others = need.attribute === undefined ? { document: need.document } : { attribute: need.attribute };
-  const abouts = need.quantity === undefined ? [others] : cells;
+  const abouts = need.quantities === undefined ? [others] : cells;
   const doubts = abouts.map((about) => ({
     sheet: 'Tests',
     cell: 'E9',

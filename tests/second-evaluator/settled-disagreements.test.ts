@@ -235,3 +235,47 @@ describe('a gradation that is stated as retained', () => {
     expectOutcome(judged([only]), 'undecided');
   });
 });
+
+describe('a reading of two named conditions', () => {
+  const measure = {
+    kind: 'reading' as const,
+    quantity: 'coating',
+    at: { temperature: 25, variant: 'wet' },
+  };
+  const stated = (at: ReadingInput['at']) =>
+    aCase({ measure, limit: { min: 90 } }, { readings: [{ ...coatings({ value: 95 })[0]!, at }] });
+
+  it('is not shown where it has another value of one, whatever it leaves unsaid of the other', () => {
+    expectOutcome(stated({ trial: 'design', temperature: 40 }), 'not shown');
+    expectOutcome(stated({ trial: 'design', variant: 'dry' }), 'not shown');
+  });
+
+  it('is undecided where it only leaves one unsaid', () => {
+    expectOutcome(stated({ trial: 'design', temperature: 25 }), 'undecided');
+  });
+});
+
+describe('a result of none after so many passes', () => {
+  const none = (quantity: string, unit: string): ReadingInput => ({
+    quantity,
+    value: null,
+    qualifier: 'none',
+    unit,
+    at: { trial: 'design', passes: 20_000 },
+    origin: 'measured',
+  });
+
+  it('is no depth at all, not as many millimetres as there were passes', () => {
+    const measure = { kind: 'reading' as const, quantity: 'wheel-track-rut-depth', at: { passes: 20_000 } };
+    const readings = [none('wheel-track-rut-depth', 'mm')];
+    expectOutcome(aCase({ measure, limit: { max: '12.5' } }, { readings }), 'pass');
+    expectOutcome(aCase({ measure, limit: { min: '1.0' } }, { readings }), 'undecided');
+  });
+
+  it('is more than that many of what is counted in passes', () => {
+    const measure = { kind: 'reading' as const, quantity: 'stripping-inflection-point' };
+    const readings = [none('stripping-inflection-point', 'passes')];
+    const drawn = aCase({ measure, limit: { min: 15_000 } }, { readings });
+    expect(engineFindings(drawn).map(({ outcome }) => outcome)).toEqual(['pass']);
+  });
+});

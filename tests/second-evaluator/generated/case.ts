@@ -63,7 +63,7 @@ function drawParts(draw: Draw): Part[] {
       [5, 'recomputed'],
       [12, 'formula'],
       [7, 'creep'],
-      [10, 'trials'],
+      [18, 'trials'],
       [6, 'blend'],
       [4, 'blend gradation'],
     ] as const);

@@ -53,6 +53,17 @@ export function drawConditions(draw: Draw, candidate: Candidate): Wanted {
   if (candidate.isOfAggregate && !candidate.bySieve && draw.chance(15)) return ofStockpiles(draw);
   if (draw.chance(6)) return byName(draw);
   if (!draw.chance(45)) return { rule: {}, readings: () => ({}), beside: [] };
+  const first = drawChoice(draw);
+  if (!draw.chance(25)) return first;
+  const second = drawChoice(draw);
+  return {
+    rule: { ...first.rule, ...second.rule },
+    readings: (place) => ({ ...first.readings(place), ...second.readings(place) }),
+    beside: [],
+  };
+}
+
+function drawChoice(draw: Draw): Wanted {
   const choice = draw.oneOf(CHOICES);
   const beyond = draw.weighed([
     [58, [choice.same]],

@@ -86,7 +86,7 @@ export function drawReading(draw: Draw, shape: Shape, at: At, centre: number): R
     [2, 'a wrong unit'],
   ] as const);
   if (how === 'censored') return { ...reading, qualifier: draw.oneOf(['<', '>'] as const) };
-  if (how === 'a word' && at.passes === undefined) return { ...reading, value: null, qualifier: 'none' };
+  if (how === 'a word') return { ...reading, value: null, qualifier: 'none' };
   if (how === 'another unit') return inAnotherUnit(draw, reading, candidate);
   return how === 'a wrong unit' ? { ...reading, unit: candidate.wrong } : reading;
 }

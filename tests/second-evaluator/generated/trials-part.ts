@@ -14,14 +14,14 @@ const NAMES = ['A', 'B', 'C', 'D', 'E'];
  */
 export function trialsPart(draw: Draw, id: string): Part {
   const part = emptyPart();
-  part.designPoint = { targetAirVoids: 4, fit: draw.oneOf(['quadratic', 'linear'] as const) };
+  part.designPoint = { targetAirVoids: 4, fit: draw.oneOf(['quadratic', 'quadratic', 'linear'] as const) };
   const scale = { decimals: 1, min: draw.whole(28, 40), max: 0, unit: '%' };
   scale.max = scale.min + draw.whole(5, 20);
   const limit = drawLimit(draw, `${id}-limits`, scale, false);
   const rounding = drawRounding(draw, id, scale, true);
   part.tables.push(...limit.tables, ...rounding.tables);
   const statistic = draw.weighed([
-    [60, 'mean'],
+    [110, 'mean'],
     [8, 'each'],
     [8, 'range'],
     [8, 'max'],
@@ -50,7 +50,7 @@ export function trialsPart(draw: Draw, id: string): Part {
   if (draw.chance(6)) return part;
   if (draw.chance(12)) addReported(draw, part, scale.min);
   else addTrials(draw, part, scale);
-  if (draw.chance(25)) addTested(draw, part, scale.min);
+  if (draw.chance(35)) addTested(draw, part, scale.min);
   return part;
 }
 
@@ -60,8 +60,8 @@ export function trialsPart(draw: Draw, id: string): Part {
  */
 function addTested(draw: Draw, part: Part, centre: number): void {
   const at = {
-    trial: draw.oneOf(['design', 'design', 'A', 'B']),
-    specimen: draw.oneOf(['1', '2', 'W1', 'W2']),
+    trial: draw.oneOf(['design', 'design', 'B', 'C']),
+    specimen: draw.oneOf(['1', 'W1', 'W1', 'W2']),
   };
   part.readings.push(reading('loaded-wheel-rut-depth', 4, 'mm', { ...at, temperature: 64 }));
   if (!at.specimen.startsWith('W')) return;
@@ -100,8 +100,8 @@ function addTrials(draw: Draw, part: Part, { min, max }: { min: number; max: num
     [5, 1],
   ]);
   const content = draw.weighed<number | null>([
-    [16, 5.25],
-    [16, 5.2],
+    [40, 5.25],
+    [40, 5.2],
     [12, 5],
     [8, 5.03],
     [8, 5.05],
