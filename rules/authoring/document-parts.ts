@@ -79,6 +79,11 @@ export function partHash(part: unknown): string | null {
   return part === undefined || part === null ? null : hashOf(part);
 }
 
+/** Of what a part says: who encoded and verified a rule is not part of it. */
+export function contentHash(part: unknown): string | null {
+  return isEntry(part) ? partHash({ ...part, encodedBy: null, verifiedBy: null }) : partHash(part);
+}
+
 /** All changes or none: where one part is not as its author saw it, nothing is changed and every conflict is told. */
 export function changeParts(document: DraftDocument, changes: readonly PartChange[]): ChangedDocument {
   const conflicts: PartConflict[] = [];
@@ -87,15 +92,24 @@ export function changeParts(document: DraftDocument, changes: readonly PartChang
   for (const change of faults.length > 0 ? [] : changes) {
     const present = partsOf(changed).get(change.part) ?? null;
     if (partHash(present) !== change.before) conflicts.push({ part: change.part, present });
-    else changed = withPart(changed, change);
+    else changed = putPart(changed, change);
   }
   if (conflicts.length > 0 || faults.length > 0) return { ok: false, conflicts, faults };
   return { ok: true, document: changed };
 }
 
+/** Where an entry stands in its list; null for what is no entry or not there. */
+export function positionOf(document: DraftDocument, part: string): number | null {
+  const { list, name } = placeOf(part);
+  const field = LISTS[list];
+  if (field === undefined) return null;
+  const index = listOf(document, list).findIndex((entry) => entry[field] === name);
+  return index < 0 ? null : index;
+}
+
 /** The document with some of its entries put in place of those of the same name. */
 export function withParts(document: DraftDocument, entries: ReadonlyMap<string, unknown>): DraftDocument {
-  return [...entries].reduce((changed, [part, after]) => withPart(changed, { part, after }), document);
+  return [...entries].reduce((changed, [part, after]) => putPart(changed, { part, after }), document);
 }
 
 function faultOf({ part, after }: PartChange): { part: string; detail: string; fix: string }[] {
@@ -122,7 +136,8 @@ function faultOf({ part, after }: PartChange): { part: string; detail: string; f
       );
 }
 
-function withPart(
+/** The document with one part as its author wants it, whoever changed it since. */
+export function putPart(
   document: DraftDocument,
   { part, after, position }: Omit<PartChange, 'before'>,
 ): DraftDocument {

@@ -1,4 +1,4 @@
-import { type DraftDocument, partHash, partsOf, withParts } from './document-parts';
+import { contentHash, type DraftDocument, partHash, partsOf, withParts } from './document-parts';
 
 const RULE_LISTS = ['rules/', 'add.rules/', 'replace.rules/'];
 const TABLE_LISTS = ['tables/', 'add.tables/', 'replace.tables/'];
@@ -43,12 +43,6 @@ function changedTables(old: Map<string, unknown>, now: Map<string, unknown>): Se
   );
   const changed = names.filter((part) => partHash(old.get(part)) !== partHash(now.get(part)));
   return new Set(changed.map((part) => part.slice(part.indexOf('/') + 1)));
-}
-
-/** Who encoded and verified a rule is not what it says. */
-function contentHash(rule: unknown): string | null {
-  if (typeof rule !== 'object' || rule === null) return null;
-  return partHash({ ...rule, encodedBy: null, verifiedBy: null });
 }
 
 function isVerified(rule: Entry): boolean {

@@ -28,6 +28,12 @@ export interface EditionView {
   readonly symbols: ReadonlyMap<string, readonly string[]>;
   document(type: string): DocumentType | undefined;
   rule(id: string): Rule | undefined;
+  /** Standard attributes and the edition's own, by name. */
+  readonly attributeNames: readonly string[];
+  /** What the edition declares itself. */
+  readonly tables: readonly LimitTable[];
+  readonly ownQuantities: readonly Quantity[];
+  readonly ownDocuments: readonly DocumentType[];
 }
 
 export function viewOf(
@@ -56,6 +62,10 @@ export function viewOf(
     },
     document: (type) => documents.get(type),
     rule: (id) => rules.get(id),
+    attributeNames: [...attributes.keys()],
+    tables: edition.tables,
+    ownQuantities: edition.quantities,
+    ownDocuments: edition.documents,
   };
   views.set(edition, view);
   return view;

@@ -26,9 +26,36 @@ export { conditionClause, conditionSentence } from './when-words';
 
 /** The rule in general terms, naming its table, with how it counts, rounds and when it applies. */
 export function ruleSentence(rule: Rule, view: EditionView): string {
-  const requirement = `${labelOf(rule.measure, generalAt(rule), view)} ${limitClause(rule, view)}`;
-  const parts = [requirement, ...countClauses(rule, view), roundingClause(rule, view)].filter(Boolean);
-  return `${parts.join('; ')}.${rule.when ? ` ${conditionSentence(rule.when, view)}` : ''}`;
+  return ruleSentenceParts(rule, view)
+    .map(({ text }) => text)
+    .join('');
+}
+
+/** A stretch of the rule's sentence, and the field of the rule that it comes from; joined they are the sentence. */
+export interface SentencePart {
+  field: 'measure' | 'limit' | 'rounding' | 'when' | null;
+  text: string;
+}
+
+export function ruleSentenceParts(rule: Rule, view: EditionView): SentencePart[] {
+  const rounding = roundingClause(rule, view);
+  const clauses: SentencePart[] = [
+    ...countClauses(rule, view).map((text): SentencePart => ({ field: 'measure', text })),
+    ...(rounding === '' ? [] : [{ field: 'rounding' as const, text: rounding }]),
+  ];
+  return [
+    { field: 'measure', text: labelOf(rule.measure, generalAt(rule), view) },
+    { field: null, text: ' ' },
+    { field: 'limit', text: limitClause(rule, view) },
+    ...clauses.flatMap((clause): SentencePart[] => [{ field: null, text: '; ' }, clause]),
+    { field: null, text: '.' },
+    ...(rule.when === undefined
+      ? []
+      : [
+          { field: null, text: ' ' },
+          { field: 'when' as const, text: conditionSentence(rule.when, view) },
+        ]),
+  ];
 }
 
 /** Only the limit of a rule in general terms: "at least the value in Minimum VMA". */

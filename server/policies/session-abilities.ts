@@ -1,5 +1,6 @@
 import type { Session } from '#shared/contracts/session';
 import { type Actor, hasRole, preparesSubmittals } from './actor';
+import { writesRules } from './draft-abilities';
 
 type Abilities = Session['abilities'];
 
@@ -15,6 +16,7 @@ export function sessionAbilities(
     manageProjects: actor !== null && managesProjects(actor),
     manageOrganisation: actor !== null && managesOrganisation(actor),
     confirmSections: actor !== null && confirmsSections(actor),
+    writeRules: actor !== null && writesRules(actor),
     seeCaughtMail: actor !== null && mailIsCaught,
   };
 }

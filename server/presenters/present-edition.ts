@@ -20,6 +20,7 @@ export function presentEdition(
         ? null
         : { ruleSet: edition.layerOfKey, edition: edition.layerOfEdition },
     startingPoint: edition.startingPoint,
+    draftId: edition.draftState === null ? null : edition.id,
   };
 }
 

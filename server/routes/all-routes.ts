@@ -26,7 +26,13 @@ import { getSectionTemplateRoute } from './projects/get-section-template';
 import { listProjectsRoute } from './projects/list-projects';
 import { getQueueItemRoute, getQueueRoute } from './queue/queue';
 import { returnRoutes } from './returns/return-routes';
-import { getRuleSetRoute, getRuleSetTemplateRoute, listRuleSetsRoute } from './rule-sets/rule-sets';
+import {
+  exportRuleSetRoute,
+  getRuleSetDocumentRoute,
+  getRuleSetRoute,
+  getRuleSetTemplateRoute,
+  listRuleSetsRoute,
+} from './rule-sets/rule-sets';
 import { searchRoute } from './search/search';
 import { chooseOrganisationRoute } from './session/choose-organisation';
 import { getSessionRoute } from './session/get-session';
@@ -51,6 +57,7 @@ export function allRoutes(settings: Settings): Route[] {
     ...[listProjectsRoute, getProjectRoute, addProjectRoute, changeProjectRoute],
     ...[confirmSectionRoute, changeSectionRoute, getSectionTemplateRoute],
     ...[listRuleSetsRoute, getRuleSetTemplateRoute, getRuleSetRoute],
+    ...[getRuleSetDocumentRoute, exportRuleSetRoute],
     ...draftRoutes,
     ...[getHomeRoute, getQueueRoute, getQueueItemRoute, searchRoute],
     ...submittalRoutes,

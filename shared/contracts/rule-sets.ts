@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { severitySchema } from '#rules/engine/finding';
 import { quantitySchema } from '#rules/quantities/quantity';
-import { dateSchema } from './common';
+import { dateSchema, idSchema } from './common';
 import { endpoint } from './endpoint';
 import { editionReferenceSchema } from './projects';
 
@@ -22,6 +22,8 @@ export const editionListItemSchema = editionReferenceSchema.extend({
   /** The edition that a layer sits over; null for a base edition. */
   layerOf: z.strictObject({ ruleSet: z.string(), edition: z.string() }).nullable(),
   startingPoint: z.boolean(),
+  /** Of a draft; null for a published edition. */
+  draftId: idSchema.nullable(),
 });
 
 export const listRuleSets = endpoint({
@@ -124,6 +126,22 @@ export const getRuleSetTemplate = endpoint({
   params: editionParams,
   query: z.strictObject({ layers: z.string().max(400).optional() }),
   sends: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
+});
+
+export const getRuleSetDocument = endpoint({
+  method: 'get',
+  path: '/api/rule-sets/:ruleSetId/:edition/document',
+  summary: 'An edition as it was written, without layers',
+  params: editionParams,
+  response: z.strictObject({ document: z.record(z.string(), z.unknown()) }),
+});
+
+export const exportRuleSet = endpoint({
+  method: 'get',
+  path: '/api/rule-sets/:ruleSetId/:edition/rule-set.json',
+  summary: 'An edition as a clauseway/rule-set@1 file',
+  params: editionParams,
+  sends: 'application/json',
 });
 
 export type RuleSetView = z.infer<typeof ruleSetViewSchema>;

@@ -36,6 +36,7 @@ export const sessionSchema = z.strictObject({
     manageProjects: z.boolean(),
     manageOrganisation: z.boolean(),
     confirmSections: z.boolean(),
+    writeRules: z.boolean(),
     seeCaughtMail: z.boolean(),
   }),
 });

@@ -25,6 +25,7 @@ export function aSession(overrides: Partial<Session> = {}): Session {
       manageProjects: false,
       manageOrganisation: false,
       confirmSections: false,
+    writeRules: false,
       seeCaughtMail: false,
     },
     ...overrides,

@@ -62,6 +62,20 @@ const signedIn: RouteObject[] = [
   { path: 'mappings/:mappingId', lazy: () => import('../features/mappings/mapping-route') },
   { path: 'quantities', lazy: () => import('../features/quantities/quantities-route') },
   { path: 'rule-sets', lazy: () => import('../features/rule-sets/rule-sets-route') },
+  { path: 'rule-sets/new-draft', lazy: () => import('../features/drafts/new-draft-route') },
+  {
+    path: 'rule-sets/:ruleSetId/drafts/:draftId',
+    lazy: () => import('../features/drafts/draft-layout-route'),
+    children: [
+      { index: true, lazy: () => import('../features/drafts/draft-route') },
+      { path: 'rules/:ruleId', lazy: () => import('../features/drafts/rule-route') },
+      { path: 'tables/:tableId', lazy: () => import('../features/drafts/table-route') },
+    ],
+  },
+  {
+    path: 'rule-sets/:ruleSetId/:edition/compare',
+    lazy: () => import('../features/compare/compare-route'),
+  },
   { path: 'rule-sets/:ruleSetId/:edition', lazy: () => import('../features/rule-sets/rule-set-route') },
 ];
 

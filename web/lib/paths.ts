@@ -34,6 +34,17 @@ export const paths = {
     `/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}${searchOf(
       layers.length > 0 ? { layers: layers.join(',') } : undefined,
     )}`,
+  newDraft: (from?: { ruleSet: string; edition: string }) => `/rule-sets/new-draft${searchOf(from)}`,
+  draft: (ruleSetId: string, draftId: string) =>
+    `/rule-sets/${encodeURIComponent(ruleSetId)}/drafts/${draftId}`,
+  draftRule: (ruleSetId: string, draftId: string, ruleId: string) =>
+    `/rule-sets/${encodeURIComponent(ruleSetId)}/drafts/${draftId}/rules/${encodeURIComponent(ruleId)}`,
+  draftTable: (ruleSetId: string, draftId: string, tableId: string) =>
+    `/rule-sets/${encodeURIComponent(ruleSetId)}/drafts/${draftId}/tables/${encodeURIComponent(tableId)}`,
+  compareEditions: (ruleSetId: string, edition: string, other?: string) =>
+    `/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}/compare${searchOf(
+      other === undefined ? undefined : { with: other },
+    )}`,
   quantities: '/quantities',
   quantity: (id: string) => `/quantities#${encodeURIComponent(id)}`,
   people: '/people',

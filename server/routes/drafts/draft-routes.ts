@@ -22,6 +22,7 @@ import { allow } from '../../policies/allow';
 import { writesRules } from '../../policies/draft-abilities';
 import { Problem } from '../../problem';
 import { type Route, route } from '../define-route';
+import { ruleSetFile } from '../rule-sets/rule-set-file';
 import { draftCommentRoutes } from './comment-routes';
 import { allowWriting, loadDraft } from './load-draft';
 
@@ -77,11 +78,7 @@ const discardRoute = route(discardDraft, async ({ deps, actor, params, version, 
 
 const exportRoute = route(exportDraft, async ({ deps, actor, params }) => {
   const { document, ruleSet, edition } = await loadDraft(deps, actor, params.draftId);
-  return {
-    bytes: Buffer.from(`${JSON.stringify(document, null, 2)}\n`),
-    mediaType: 'application/json',
-    fileName: `${ruleSet} ${edition} draft.json`,
-  };
+  return ruleSetFile(document, `${ruleSet} ${edition} draft`);
 });
 
 const withdrawRoute = route(withdrawEdition, async ({ deps, actor, params, body, requestId }) => {

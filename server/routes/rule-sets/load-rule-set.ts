@@ -25,6 +25,22 @@ interface Place {
   layers: string | undefined;
 }
 
+/** An edition as it was written, where the reader's organisation may see it. */
+export async function loadDocument(
+  deps: Deps,
+  actor: RequestActor,
+  { ruleSetId, edition: name }: Pick<Place, 'ruleSetId' | 'edition'>,
+): Promise<Record<string, unknown>> {
+  for (const { agency, editions } of await visibleRuleSets(deps.db, actor)) {
+    const edition = editions.find((each) => each.ruleSetKey === ruleSetId && each.edition === name);
+    if (edition === undefined) continue;
+    const place = { agencyId: agency.id, editionId: edition.id };
+    const document = edition.document ?? (await editionDocument(deps.db, place));
+    if (document !== null) return document;
+  }
+  throw new Problem('not-found');
+}
+
 /** An edition with the chosen layers applied, where the reader's organisation may see it. */
 export async function loadRuleSet(deps: Deps, actor: RequestActor, place: Place): Promise<LoadedRuleSet> {
   for (const { agency, editions } of await visibleRuleSets(deps.db, actor)) {

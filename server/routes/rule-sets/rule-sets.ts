@@ -1,4 +1,10 @@
-import { getRuleSet, getRuleSetTemplate, listRuleSets } from '#shared/contracts/rule-sets';
+import {
+  exportRuleSet,
+  getRuleSet,
+  getRuleSetDocument,
+  getRuleSetTemplate,
+  listRuleSets,
+} from '#shared/contracts/rule-sets';
 import { dateOfInstant } from '#shared/format/dates';
 import { keepResolvedEdition } from '../../commands/projects/resolve-section';
 import { editionReference } from '../../db/queries/editions';
@@ -8,7 +14,8 @@ import { layersOf } from '../../policies/edition-dates';
 import { presentEdition } from '../../presenters/present-edition';
 import { ruleSetContents } from '../../presenters/rule-set-view';
 import { route } from '../define-route';
-import { layerName, loadRuleSet } from './load-rule-set';
+import { layerName, loadDocument, loadRuleSet } from './load-rule-set';
+import { ruleSetFile } from './rule-set-file';
 
 export const listRuleSetsRoute = route(listRuleSets, async ({ deps, actor }) => {
   const agencies = await visibleRuleSets(deps.db, actor);
@@ -58,6 +65,14 @@ export const getRuleSetTemplateRoute = route(getRuleSetTemplate, async ({ deps, 
     fileName: `${edition.ruleSetKey} ${edition.edition} template.xlsx`,
   };
 });
+
+export const getRuleSetDocumentRoute = route(getRuleSetDocument, async ({ deps, actor, params }) => ({
+  document: await loadDocument(deps, actor, params),
+}));
+
+export const exportRuleSetRoute = route(exportRuleSet, async ({ deps, actor, params }) =>
+  ruleSetFile(await loadDocument(deps, actor, params), `${params.ruleSetId} ${params.edition}`),
+);
 
 function layersOver(edition: AgencyRuleSets['editions'][number], all: AgencyRuleSets['editions']) {
   const dated = all.flatMap((each) =>

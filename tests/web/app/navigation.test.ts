@@ -9,6 +9,7 @@ const noAbilities = {
   manageProjects: false,
   manageOrganisation: false,
   confirmSections: false,
+  writeRules: false,
   seeCaughtMail: false,
 };
 const contractor = {

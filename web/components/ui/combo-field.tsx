@@ -6,6 +6,7 @@ import { FieldFrame } from './field-frame';
 /** One of many choices, found by typing a part of it. */
 export function ComboField({
   label,
+  hideLabel = false,
   name,
   choices,
   value,
@@ -16,6 +17,7 @@ export function ComboField({
   focusRef,
 }: {
   label: string;
+  hideLabel?: boolean;
   name: string;
   choices: readonly string[];
   value: string;
@@ -27,7 +29,7 @@ export function ComboField({
 }) {
   return (
     <ComboBox
-      className="field"
+      className={hideLabel ? 'field-bare' : 'field'}
       defaultInputValue={value}
       defaultSelectedKey={choices.includes(value) ? value : null}
       onSelectionChange={(key) => {
@@ -37,7 +39,7 @@ export function ComboField({
       isInvalid={error !== undefined}
       menuTrigger="input"
     >
-      <FieldFrame label={label} help={help} error={error}>
+      <FieldFrame label={label} hideLabel={hideLabel} help={help} error={error}>
         <span className="combo">
           <Input ref={focusRef} className="input input-middle" name={name} />
           <Button className="combo-button">

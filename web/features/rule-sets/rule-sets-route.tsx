@@ -1,5 +1,5 @@
 import { queryClient } from '../../lib/client';
-import { ruleSetsQuery } from './api/get-rule-sets';
+import { ruleSetsQuery } from '../../lib/queries/rule-sets-query';
 
 export { RuleSetsPage as Component } from './components/rule-sets-page';
 

@@ -1,9 +1,12 @@
 import { Link, useNavigate } from 'react-router-dom';
-import type { RuleSetView } from '#shared/contracts/rule-sets';
+import { exportRuleSet, type RuleSetView } from '#shared/contracts/rule-sets';
 import { countOf } from '#shared/format/numbers';
 import { Checkbox } from '../../../components/ui/checkbox';
+import { hrefOf } from '../../../lib/api';
 import { paths } from '../../../lib/paths';
+import { useSession } from '../../../lib/queries/session-query';
 import { effectiveWords } from '../lib/edition-words';
+import { WithdrawEdition } from './withdraw-edition';
 
 /** What surrounds an edition: its layers, its template, its other editions, what proves it. */
 export function RuleSetAside({ view }: { view: RuleSetView }) {
@@ -18,6 +21,7 @@ export function RuleSetAside({ view }: { view: RuleSetView }) {
         </a>
       </p>
       <p className="small mute">A workbook with a place for every reading that these rules ask for.</p>
+      <EditionActs view={view} />
       <h2>Quantities</h2>
       <p>
         <Link to={paths.quantities}>What each quantity means</Link>
@@ -46,6 +50,44 @@ export function RuleSetAside({ view }: { view: RuleSetView }) {
         {countOf(view.ruleViews.length, 'rule')}, {countOf(view.caseCount, 'case')} kept with the edition.
         Resolved <span className="font-mono">{view.hash.slice(0, 12)}</span>.
       </p>
+    </>
+  );
+}
+
+/** What can be done with an edition: read it against another, take it along, begin another from it, withdraw it. */
+function EditionActs({ view }: { view: RuleSetView }) {
+  const { abilities } = useSession();
+  const { ruleSet, edition, draftId, state } = view;
+  return (
+    <>
+      <h2>Acts</h2>
+      <ul>
+        {view.otherEditions.some((other) => other.ruleSet === ruleSet) ? (
+          <li>
+            <Link to={paths.compareEditions(ruleSet, edition)}>Compare with another edition</Link>
+          </li>
+        ) : null}
+        <li>
+          <a href={hrefOf(exportRuleSet, { params: { ruleSetId: ruleSet, edition } })} download>
+            Export as a file
+          </a>
+        </li>
+        {abilities.writeRules && draftId !== null ? (
+          <li>
+            <Link to={paths.draft(ruleSet, draftId)}>Work on the draft</Link>
+          </li>
+        ) : null}
+        {abilities.writeRules && draftId === null ? (
+          <li>
+            <Link to={paths.newDraft({ ruleSet, edition })}>Begin a draft from it</Link>
+          </li>
+        ) : null}
+        {abilities.writeRules && draftId === null && state !== 'withdrawn' ? (
+          <li>
+            <WithdrawEdition ruleSetId={ruleSet} edition={edition} />
+          </li>
+        ) : null}
+      </ul>
     </>
   );
 }

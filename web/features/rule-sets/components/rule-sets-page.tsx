@@ -9,13 +9,15 @@ import { RunningFoot } from '../../../components/ui/running-foot';
 import { SectionHead } from '../../../components/ui/section-head';
 import { Sideways } from '../../../components/ui/sideways';
 import { paths } from '../../../lib/paths';
+import { ruleSetsQuery } from '../../../lib/queries/rule-sets-query';
+import { useSession } from '../../../lib/queries/session-query';
 import { usePageTitle } from '../../../lib/use-page-title';
-import { ruleSetsQuery } from '../api/get-rule-sets';
 import { effectiveWords } from '../lib/edition-words';
 
 /** Rule sets with their editions; layers stand under the edition they sit over. */
 export function RuleSetsPage() {
   usePageTitle('Rule sets');
+  const { abilities } = useSession();
   const { ruleSets } = useSuspenseQuery(ruleSetsQuery()).data;
   const titles = new Map(ruleSets.map((set) => [set.id, set.title]));
   const startingPoint = ruleSets.some((set) => set.editions.some((edition) => edition.startingPoint));
@@ -24,6 +26,12 @@ export function RuleSetsPage() {
       <PageHead title="Rule sets" rest="and their editions">
         <p className="pt-2">
           <Link to={paths.quantities}>Quantities that rules can ask for</Link>
+          {abilities.writeRules ? (
+            <>
+              {' · '}
+              <Link to={paths.newDraft()}>Begin a draft</Link>
+            </>
+          ) : null}
         </p>
       </PageHead>
       {ruleSets.length === 0 ? (
@@ -73,7 +81,7 @@ function EditionTable({
           {newestFirst(editions).map((edition) => (
             <tr key={`${edition.ruleSet}@${edition.edition}`}>
               <th scope="row">
-                <Link to={paths.ruleSet(edition.ruleSet, edition.edition)}>
+                <Link to={addressOf(edition)}>
                   {edition.ruleSet === ruleSetId ? edition.edition : `${edition.title}, ${edition.edition}`}
                 </Link>
               </th>
@@ -91,6 +99,11 @@ function EditionTable({
       </table>
     </Sideways>
   );
+}
+
+/** A draft leads to where it is written; everybody else's way is to read it. */
+function addressOf({ ruleSet, edition, draftId }: EditionListItem): string {
+  return draftId === null ? paths.ruleSet(ruleSet, edition) : paths.draft(ruleSet, draftId);
 }
 
 /** A draft without a date stands before everything that has one. */

@@ -1,6 +1,6 @@
 import { queryOptions } from '@tanstack/react-query';
 import { listRuleSets } from '#shared/contracts/rule-sets';
-import { call } from '../../../lib/api';
+import { call } from '../api';
 
 export function ruleSetsQuery() {
   return queryOptions({

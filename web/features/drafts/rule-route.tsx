@@ -1,0 +1,1 @@
+export { RulePage as Component } from './components/rule-page';

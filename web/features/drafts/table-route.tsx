@@ -1,0 +1,1 @@
+export { TablePage as Component } from './components/table-page';
