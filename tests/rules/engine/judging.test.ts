@@ -10,6 +10,7 @@ import { isBorderline, precisionOf } from '#rules/engine/precision';
 import { lastAlike, sideOf } from '#rules/engine/side-of-limit';
 import type { AllowedInterval } from '#rules/engine/statistic';
 import type { Quantity } from '#rules/quantities/quantity';
+import { ruleSchema } from '#rules/rule-sets/schema';
 import { aFinding } from '#tests/builders/a-finding';
 import { aLimit } from '#tests/builders/a-limit';
 import { aRule } from '#tests/builders/a-rule-set';
@@ -161,7 +162,14 @@ describe('the precision of a result', () => {
     methodPrecision: { singleOperatorStandardDeviation: 0.2, source: 'a method', origin: 'memory' },
   } as Quantity;
   const of = (input: Partial<Parameters<typeof precisionOf>[0]>) =>
-    precisionOf({ rule: aRule(), quantity, statistic: 'mean', count: 4, unit: '%', ...input });
+    precisionOf({
+      rule: ruleSchema.parse(aRule()),
+      quantity,
+      statistic: 'mean',
+      count: 4,
+      unit: '%',
+      ...input,
+    });
 
   it('is 1.96·s/√n of a mean of n: 1.96·0.2/2', () => {
     expect(of({})).toEqual({ value: 0.196, origin: '1.96·s/√n, s from a method; from memory, verify' });
@@ -186,7 +194,8 @@ describe('the precision of a result', () => {
   });
 
   it("is the rule's own where it has one, and says whose", () => {
-    const own = (precision: object) => of({ rule: aRule({ precision } as Parameters<typeof aRule>[0]) });
+    const own = (precision: object) =>
+      of({ rule: ruleSchema.parse(aRule({ precision } as Parameters<typeof aRule>[0])) });
     expect(own({ value: '0.4', source: 'a round robin', origin: 'agency' })).toEqual({
       value: 0.4,
       origin: 'a round robin',
