@@ -21,6 +21,15 @@ describe('decimal arithmetic', () => {
     expect(decimalMean([0.1, 0.2, 0.3])).toBe(0.2);
   });
 
+  it('is exact up to many values and to very small ones', () => {
+    // A thousand times 0.1, and 0.3 at the end: (100 + 0.3)/1001.
+    expect(decimalMean([...Array(1000).fill(0.1), 0.3])).toBe(100.3 / 1001);
+    expect(decimalDifference(3e-25, 1e-25)).toBe(2e-25);
+    expect(decimalDifference(1e15 + 0.5, 1e15)).toBe(0.5);
+    // Too long for one whole number.
+    expect(decimalDifference(1234567.12345679, 1234567.12345678)).toBe(1e-8);
+  });
+
   it('has no negative zero, even where the mean is too small for a number', () => {
     expect(decimalMean([0, 5e-324, -1e-323])).toBe(0);
     expect(decimalDifference(-0, 0)).toBe(0);

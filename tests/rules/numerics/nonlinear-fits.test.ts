@@ -160,6 +160,7 @@ describe('the covariance of fitted parameters', () => {
     const factor = covarianceFactor(Float64Array.of(1, 0, 1, 1, 1, 3, 1, 4), 2, 1);
     const [[a, ab], [, b]] = covarianceOf(factor) as [[number, number], [number, number]];
     expect([a, ab, b].map((value) => Number(value.toFixed(10)))).toEqual([0.65, -0.2, 0.1]);
+    expect(deviationAlong([], [])).toBe(0);
     // At x = 2 the line is the mean: s²/4.
     expect(deviationAlong(factor, [1, 2])).toBeCloseTo(0.5, 10);
   });

@@ -79,20 +79,29 @@ describe('comparing two laboratories', () => {
   });
 
   it('takes them for the same only where the probability lies above the significance, not on it', () => {
-    const compared = compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], 0.5);
+    // Of the same variance at any significance, so that only the means are asked about; and the other way round.
+    const five = [1, 1, 2, 3, 3];
+    const means = compareSamples(five, [2, 3, 4], 0.5);
+    const variances = compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], 0.5);
+    const pairs = comparePairs(first, second, 0.5);
+    if (!means.ok || !variances.ok || !pairs.ok) throw new Error('They can be compared.');
+    expect(compareSamples(five, [2, 3, 4], means.comparison.probabilityT)).toMatchObject({
+      comparison: { sameVariance: true, sameMean: false },
+    });
+    expect(
+      compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], variances.comparison.probabilityF),
+    ).toMatchObject({ comparison: { sameVariance: false } });
+    expect(comparePairs(first, second, pairs.comparison.probabilityT)).toMatchObject({
+      comparison: { sameMean: false },
+    });
+  });
+
+  it('pools variances by degrees of freedom: 6 of them for five and three values (by hand)', () => {
+    // s² = 1 of five and 4 of three: sp² = (4·1 + 2·4)/6 = 2, t = (2 − 4)/√(2·(1/5 + 1/3)).
+    const compared = compareSamples([1, 1, 2, 3, 3], [2, 4, 6], 0.05);
     if (!compared.ok) throw new Error(compared.reason);
-    const { probabilityF, probabilityT } = compared.comparison;
-    expect(compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], probabilityF)).toMatchObject({
-      comparison: { sameVariance: false },
-    });
-    expect(compareSamples(first, [5.2, 5.47, 5.1, 5.52, 5.3], probabilityT)).toMatchObject({
-      comparison: { sameMean: false },
-    });
-    const paired = comparePairs(first, second, 0.5);
-    if (!paired.ok) throw new Error(paired.reason);
-    expect(comparePairs(first, second, paired.comparison.probabilityT)).toMatchObject({
-      comparison: { sameMean: false },
-    });
+    expect(compared.comparison).toMatchObject({ sameVariance: true, degreesOfT: 6 });
+    expect(compared.comparison.t).toBeCloseTo(-2 / Math.sqrt(2 * (1 / 5 + 1 / 3)), 9);
   });
 
   it('cannot where the values are too large to be added', () => {
@@ -185,6 +194,19 @@ describe('a difference limit', () => {
     expect(multiplier.ok && multiplier.value).toBeCloseTo(1.959964 * Math.SQRT2, 6);
     const limit = differenceLimit(0.004, 2);
     expect(limit.ok && limit.value).toBeCloseTo(0.0111, 4);
+  });
+
+  // Studentised range at 5 % with infinite degrees of freedom, as printed in textbook tables; from memory, verify.
+  it.each([
+    [3, 3.31],
+    [4, 3.63],
+    [5, 3.86],
+    [10, 4.47],
+  ])('is for %d results that of the studentised range, %d', (count, printed) => {
+    const multiplier = rangeMultiplier(count);
+    expect(multiplier.ok && Number(multiplier.value.toFixed(2))).toBe(printed);
+    // And the same again when asked a second time.
+    expect(rangeMultiplier(count)).toEqual(multiplier);
   });
 
   it('grows with the number of results', () => {
