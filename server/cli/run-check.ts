@@ -60,11 +60,8 @@ function withAttributes(reading: ReadingResult, attributes: Record<string, Attri
 
 function asJson({ record, unread, doubts, departures }: ReadingResult, check: CheckResult): string {
   const { analysis, summary, findings, seal } = check;
-  return JSON.stringify(
-    { record, reading: { unread, doubts, departures }, analysis, summary, findings, seal },
-    null,
-    2,
-  );
+  const reading = { unread, doubts, ...(departures.length > 0 ? { departures } : {}) };
+  return JSON.stringify({ record, reading, analysis, summary, findings, seal }, null, 2);
 }
 
 function hasOpenRequirement({ findings }: CheckResult): boolean {

@@ -166,6 +166,34 @@ describe('the check on the command line', () => {
     ]);
   }, 60_000);
 
+  it('reads what a learned mapping speaks of by it and the rest by its headings, and tells where they part', async () => {
+    const anchor = { sheet: null, header: ['K1'], unit: null, between: ['Specimen', 'Va'], times: 1 };
+    const learned = file('learned.json', {
+      format: 'clauseway/mapping@1',
+      laboratory: 'Any',
+      fingerprint: 'x',
+      version: 2,
+      rest: 'headings',
+      rules: [{ id: 'K1', anchor, axis: 'down', quantity: 'bulk-specific-gravity-mix' }],
+    });
+    const table = 'Trial,Specimen,K1,Va (%)\nA,1,2.412,4.0\nA,2,2.414,4.1\n';
+    const known = await run('--rules', rules, '--mapping', learned, '--json', file('known.csv', table));
+    const said = JSON.parse(known.out).record.readings.map(
+      ({ quantity, value }: { quantity: string; value: number }) => `${quantity} ${value}`,
+    );
+    expect(said.toSorted()).toEqual([
+      'air-voids 4',
+      'air-voids 4.1',
+      'bulk-specific-gravity-mix 2.412',
+      'bulk-specific-gravity-mix 2.414',
+    ]);
+    expect(JSON.parse(known.out).reading).toEqual({ unread: [], doubts: [] });
+    const other = file('other.csv', table.replace('K1', 'K9'));
+    const parted = JSON.parse((await run('--rules', rules, '--mapping', learned, '--json', other)).out);
+    expect(parted.reading.departures).toMatchObject([{ rule: 'K1', kind: 'gone', cell: 'C1' }]);
+    expect(parted.reading.doubts).toMatchObject([{ cell: 'C1', text: 'K9' }]);
+  }, 60_000);
+
   it.each<[string, () => Promise<string[]> | string[], RegExp]>([
     ['no workbook', () => ['--rules', rules], /No workbook is given\. Use: npm run check/],
     ['an option that is not known', () => ['--rule', rules, 'x.xlsx'], /Unknown option '--rule'/],
