@@ -2,7 +2,6 @@ import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { checkCautions } from '#shared/cautions';
-import type { ReadingView } from '#shared/contracts/readings';
 import { shortHash } from '#shared/format/short-hash';
 import { LinkButton } from '../../../components/ui/button';
 import { MarginPage } from '../../../components/ui/margin-page';
@@ -22,10 +21,8 @@ import { useChosenCells } from '../hooks/use-chosen-cells';
 import { answerAct, useProposedAnswer } from '../hooks/use-proposed-answer';
 import { useReadingActs } from '../hooks/use-reading-acts';
 import { useReadingKeys } from '../hooks/use-reading-keys';
-import { doubtsLeftWords } from '../lib/doubt-answers';
 import { firstPlace } from '../lib/first-place';
 import { focusSoon } from '../lib/focus-soon';
-import { learnedWords } from '../lib/learned-words';
 import { sheetGridId } from '../lib/sheet-measures';
 import { AskedAttributes } from './asked-attributes';
 import { CellPanel } from './cell-panel';
@@ -34,6 +31,7 @@ import { DoubtExcerpt } from './doubt-excerpt';
 import { DoubtList } from './doubt-list';
 import { FindingsBeside } from './findings-beside';
 import { MappingNotice } from './mapping-notice';
+import { Onward } from './onward';
 import { Proposal } from './proposal';
 import { NotUsed, Understood } from './reading-lists';
 import { ReadingSteps } from './reading-steps';
@@ -183,27 +181,6 @@ export function ReadingPage({ params }: { params: RevisionParams }) {
       {sheet}
       {foot}
     </MarginPage>
-  );
-}
-
-function Onward({
-  params,
-  reading,
-  laboratory,
-}: {
-  params: RevisionParams;
-  reading: ReadingView;
-  laboratory: string;
-}) {
-  return (
-    <div className="onward">
-      <LinkButton kind="primary" keyHint="Enter" to={paths.revision(params.submittalId, params.number)}>
-        See the findings
-      </LinkButton>
-      <span className="small mute">
-        {doubtsLeftWords(reading.doubts)} {learnedWords(reading, laboratory)}
-      </span>
-    </div>
   );
 }
 

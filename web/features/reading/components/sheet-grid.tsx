@@ -95,10 +95,10 @@ export function SheetGridView({
           tabIndex={0}
           onKeyDown={onKeyDown}
           {...pointer}
-          style={{ width: `${rowNumberRem + widths.reduce((sum, width) => sum + width, 0) / 14}rem` }}
+          style={{ minWidth: `${rowNumberRem + widths.reduce((sum, width) => sum + width, 0) / 14}rem` }}
         >
           <colgroup>
-            <col style={{ width: `${rowNumberRem}rem` }} />
+            <col style={{ minWidth: `${rowNumberRem}rem` }} />
             {widths.map((width, index) => (
               // biome-ignore lint/suspicious/noArrayIndexKey: a column is its place.
               <col key={index} style={{ width: `${width / 14}rem` }} />
