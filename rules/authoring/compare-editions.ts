@@ -4,7 +4,7 @@ import { type EditionView, viewOf } from '../rule-sets/edition-view';
 import type { ResolvedEdition } from '../rule-sets/resolve';
 import type { Rule } from '../rule-sets/schema';
 import { cellWords, ruleSentence } from '../rule-sets/sentences';
-import type { LimitTable, TableCell } from '../rule-sets/table';
+import type { LimitTable, RuleSource, TableCell } from '../rule-sets/table';
 import { tablesOf } from '../rule-sets/tables-of';
 import { capitalised, numberWords } from '../rule-sets/words';
 
@@ -68,8 +68,8 @@ type Sides = { left: Side; right: Side };
 function ruleDifference(old: Rule | null, now: Rule | null, { left, right }: Sides): RuleDifference[] {
   const rule = now ?? old;
   if (rule === null) return [];
-  const before = old === null ? new Map() : wordingsOf(old, left.view);
-  const after = now === null ? new Map() : wordingsOf(now, right.view);
+  const before = old === null ? new Map() : wordingsOf(old, left);
+  const after = now === null ? new Map() : wordingsOf(now, right);
   const wordings = differing(before, after);
   if (wordings.length === 0) return [];
   const kind = old === null ? 'added' : now === null ? 'removed' : 'changed';
@@ -77,8 +77,8 @@ function ruleDifference(old: Rule | null, now: Rule | null, { left, right }: Sid
 }
 
 /** Everything of a rule that decides a finding or is read by a person; who encoded it is neither. */
-function wordingsOf(rule: Rule, view: EditionView): Words {
-  const { encodedBy: _, verifiedBy: __, ...content } = rule;
+function wordingsOf(rule: Rule, { edition, view }: Side): Words {
+  const { measure, limit, when, source } = rule;
   return new Map([
     ['Clause', rule.clause],
     ['Title', rule.title],
@@ -86,9 +86,14 @@ function wordingsOf(rule: Rule, view: EditionView): Words {
     ['Sentence', ruleSentence(rule, view)],
     ['Precision', rule.precision === undefined ? null : `± ${numberWords(rule.precision.value)}`],
     ['Advice', rule.advice ?? null],
-    ['Source', sourceWords(rule.source ?? null)],
-    ...fieldsOf({ measure: content.measure, limit: content.limit, when: content.when ?? null }, ''),
+    ['Source', sourceText(source ?? null, edition)],
+    ...fieldsOf({ measure, limit, when: when ?? null }, ''),
   ]);
+}
+
+/** A source that names the edition itself moves with it and is no change of the rule. */
+function sourceText(source: RuleSource | null, { edition }: ResolvedEdition): string | null {
+  return sourceWords(source?.edition === edition ? { ...source, edition: null } : source);
 }
 
 type Words = Map<string, string | null>;
@@ -121,7 +126,7 @@ function tableDifferences(left: Side, right: Side): TableDifference[] {
   return pairsOf(left.edition.tables, right.edition.tables, ({ id }) => id).flatMap(([old, now]) => {
     const table = now ?? old;
     if (table === null) return [];
-    const rows = differing(rowsOf(old, left.view), rowsOf(now, right.view));
+    const rows = differing(rowsOf(old, left), rowsOf(now, right));
     if (rows.length === 0) return [];
     const users = [...left.edition.rules, ...right.edition.rules].filter((rule) =>
       tablesOf(rule).has(table.id),
@@ -138,11 +143,11 @@ function tableDifferences(left: Side, right: Side): TableDifference[] {
   });
 }
 
-function rowsOf(table: LimitTable | null, view: EditionView): Words {
+function rowsOf(table: LimitTable | null, { edition, view }: Side): Words {
   if (table === null) return new Map();
   return new Map([
     ['Title', table.title ?? table.id],
-    ['Source', sourceWords(table.source ?? null)],
+    ['Source', sourceText(table.source ?? null, edition)],
     ...table.rows.map((row): [string, string] => [
       capitalised(table.keys.map((key) => keyWords(key, row[key], view)).join(', ')),
       table.columns.map(({ name, unit }) => `${name} ${cellWords(row[name], unit)}`).join(', '),

@@ -84,6 +84,18 @@ export function contentHash(part: unknown): string | null {
   return isEntry(part) ? partHash({ ...part, encodedBy: null, verifiedBy: null }) : partHash(part);
 }
 
+/**
+ * Of what a rule says within its edition. A source that names the edition itself moves with it and is no change of
+ * the rule.
+ */
+export function ruleHash(rule: unknown, edition: unknown): string | null {
+  const source = isEntry(rule) ? rule.source : null;
+  const isOwn = isEntry(source) && source.edition === edition;
+  return isOwn && isEntry(rule)
+    ? contentHash({ ...rule, source: { ...source, edition: null } })
+    : contentHash(rule);
+}
+
 /** All changes or none: where one part is not as its author saw it, nothing is changed and every conflict is told. */
 export function changeParts(document: DraftDocument, changes: readonly PartChange[]): ChangedDocument {
   const conflicts: PartConflict[] = [];

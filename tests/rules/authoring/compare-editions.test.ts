@@ -49,6 +49,14 @@ describe('two editions', () => {
     expect(rule?.wordings.map((each) => each.what)).toContain(what);
   });
 
+  it('whose rules name their own edition as the source say the same', () => {
+    const of = (edition: string) => ({
+      edition,
+      rules: [aRule({ source: { title: 'Section 900', edition } })],
+    });
+    expect(compare(of('2026'), of('2027')).rules).toEqual([]);
+  });
+
   it('tell a field that is in no sentence under its own name', () => {
     const fitted = (model: 'sigmoid' | 'power') =>
       aRule({

@@ -14,7 +14,8 @@ export function RuleCases({ ruleId }: { ruleId: string }) {
     const { edition } = checked;
     return edition.cases
       .filter(({ expected }) => expected.some(({ rule }) => rule === ruleId))
-      .map((each) => ({ each, result: runCase(each, edition) }));
+      .map((each) => ({ each, result: runCase(each, edition) }))
+      .toSorted((a, b) => Number(caseHolds(a.result)) - Number(caseHolds(b.result)));
   }, [checked, ruleId]);
   const met = results.filter(({ result }) => caseHolds(result)).length;
   return (

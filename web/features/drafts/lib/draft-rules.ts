@@ -1,4 +1,4 @@
-import { contentHash, type DraftDocument, partsOf } from '#rules/authoring/document-parts';
+import { type DraftDocument, partsOf, ruleHash } from '#rules/authoring/document-parts';
 import { naturalOrder } from '#rules/engine/natural-order';
 
 /** A rule of a draft as a list shows it; its fields may be unfinished. */
@@ -25,7 +25,7 @@ export function draftRules(document: DraftDocument, basedOn: DraftDocument | nul
         ? 'same'
         : old === undefined
           ? 'added'
-          : contentHash(old) === contentHash(rule)
+          : ruleHash(old, basedOn.edition) === ruleHash(rule, document.edition)
             ? 'same'
             : 'changed';
     return listed(part, rule, state);
