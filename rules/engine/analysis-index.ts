@@ -137,15 +137,18 @@ function belongingTo(readings: Reading[], quantity: string, trial: string): Read
   if (subject === 'mix' || subject === 'specimen') {
     return readings.filter(({ at }) => (at.trial ?? designTrial) === trial);
   }
+  const stockpiles = [...new Set(readings.flatMap(({ at }) => at.stockpile ?? []))];
   // A job-mix gradation of the design does not displace the gradations of its stockpiles.
   return [
     ...ownOrCommon(
       readings.filter(({ at }) => at.stockpile === undefined),
       trial,
     ),
-    ...ownOrCommon(
-      readings.filter(({ at }) => at.stockpile !== undefined),
-      trial,
+    ...stockpiles.flatMap((stockpile) =>
+      ownOrCommon(
+        readings.filter(({ at }) => at.stockpile === stockpile),
+        trial,
+      ),
     ),
   ];
 }

@@ -7,6 +7,7 @@ import { missingForComputing } from './missing-inputs';
 import { notShown, type Obstacle, undecided } from './obstacle';
 import { inScope } from './scope';
 import { select } from './select';
+import { madeForTests } from './specimens-of-tests';
 import { withoutTestedSpecimens } from './tested-specimens';
 import { unusableRetained } from './unusable-retained';
 import { applyWhere } from './where';
@@ -113,6 +114,8 @@ function takeRecomputed(world: World, request: SampleRequest): SampleResult | nu
   if (!inside.ok) return inside;
   const selected = select({ world, candidates: inside.chosen, wanted: request.at, label, preferPlain: true });
   if (!selected.ok) return selected;
+  const ofTests = madeForTests(request.quantity, request.at, selected.chosen, label);
+  if (ofTests !== null) return ofTests;
   const whole = selected.chosen.filter(
     ({ at }) => at.specimen === undefined || request.at.specimen !== undefined,
   );
@@ -200,6 +203,8 @@ function takeReadings(world: World, request: SampleRequest): SampleResult {
   const untested = withoutTestedSpecimens(world, request.quantity, inside.chosen);
   const selected = select({ world, candidates: untested, wanted: request.at, label, preferPlain: isDerived });
   if (!selected.ok) return selected;
+  const ofTests = madeForTests(request.quantity, request.at, selected.chosen, label);
+  if (ofTests !== null) return ofTests;
   const faulty = selected.chosen.find((each) => each.fault !== null);
   if (faulty)
     return undecided(

@@ -1,7 +1,7 @@
 import type { Conditions, MixRecord, Reading } from '../record';
 import type { EditionView } from '../rule-sets/edition-view';
 import type { ResolvedRule } from '../rule-sets/resolve';
-import { andList } from '../rule-sets/words';
+import { andList, orList } from '../rule-sets/words';
 import { isSpecial } from './analysis-index';
 import { type Finding, findingKey } from './finding';
 import { type Obstacle, undecided } from './obstacle';
@@ -39,6 +39,25 @@ export function unsettledByTests(input: {
 
 function isDecided({ outcome }: Finding): boolean {
   return DECIDED.has(outcome);
+}
+
+/**
+ * Where a rule names no form of a test and all that there is of a volumetric quantity was measured on specimens that
+ * were made for one: what the design's own would be is not known.
+ */
+export function madeForTests(
+  quantity: string,
+  wanted: Conditions,
+  chosen: readonly { at: Conditions }[],
+  label: string,
+): Obstacle | null {
+  if (!VOLUMETRIC.has(quantity) || wanted.variant !== undefined || chosen.length === 0) return null;
+  if (chosen.some(({ at }) => at.variant === undefined)) return null;
+  const forms = [...new Set(chosen.map(({ at }) => at.variant ?? ''))];
+  return undecided(
+    `Readings of ${label} are only of specimens made for a test of their own (${orList(forms)}).`,
+    `State ${label} of specimens of the design.`,
+  );
 }
 
 const DECIDED = new Set<string>(['pass', 'fail', 'not applicable']);

@@ -137,6 +137,19 @@ describe('air voids that say for which test their specimens were made', () => {
     expect(findingOf({ rule, record: { readings } })).toMatchObject({ outcome, observed: { count: 2 } });
   });
 
+  it('are not the design’s where it has none of its own, reported or from gravities', () => {
+    const reported = [...voids({ W1: 4, W2: 4.2 }, { variant: 'wheel tracking' }), ...ruts('W1', 'W2')];
+    expect(findingOf({ rule, record: { readings: reported } }).outcome).toBe('undecided');
+    const weighed = gravities({ W1: 2.4 }).map((reading) => ({
+      ...reading,
+      at:
+        reading.quantity === 'maximum-specific-gravity'
+          ? reading.at
+          : { ...reading.at, variant: 'wheel tracking' },
+    }));
+    expect(findingOf({ rule, record: { readings: weighed } }).outcome).toBe('undecided');
+  });
+
   it('still tell which specimens of the test count', () => {
     const measure: RuleInput['measure'] = {
       kind: 'reading',

@@ -43,7 +43,8 @@ export function creepPart(draw: Draw, id: string): Part {
   });
   if (!draw.chance(6)) {
     const isStrict = measure.source === 'measured';
-    addTests(draw, part, { isCurve, isStrict, centre: scale.min, decimals: scale.decimals });
+    const hasStress = met.where.length > 0;
+    addTests(draw, part, { isCurve, isStrict, hasStress, centre: scale.min, decimals: scale.decimals });
   }
   return part;
 }
@@ -74,12 +75,14 @@ interface Tests {
   isCurve: boolean;
   /** Only measured values count, so that one time may be left out. */
   isStrict: boolean;
+  /** Strain without a stress belongs to no specimen that a condition could leave out. */
+  hasStress: boolean;
   /** A limit in steps, near which values lie. */
   centre: number;
   decimals: number;
 }
 
-function addTests(draw: Draw, part: Part, { isCurve, isStrict, centre, decimals }: Tests): void {
+function addTests(draw: Draw, part: Part, { isCurve, isStrict, hasStress, centre, decimals }: Tests): void {
   const isStrain = draw.chance(40);
   const curve = {
     start: draw.whole(5, 20) / 100,
@@ -96,7 +99,7 @@ function addTests(draw: Draw, part: Part, { isCurve, isStrict, centre, decimals 
   const stress = draw.weighed<At>([
     [80, { stress: STRESS }],
     [10, { stress: 400 }],
-    [10, {}],
+    [hasStress ? 0 : 10, {}],
   ]);
   const lacksTime = isOfTemperature && stress.stress === STRESS && draw.chance(6);
   const skipped = isStrict ? draw.whole(0, 12) : -1;

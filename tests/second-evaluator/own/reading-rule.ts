@@ -2,6 +2,7 @@ import type { Reading } from '#rules/record';
 import type { ReadingMeasure } from '#rules/rule-sets/measure';
 import type { Rule } from '#rules/rule-sets/schema';
 import { isWithinDigits, OF_BLEND, ofStockpiles } from './blend';
+import { CONDITIONS } from './conditions';
 import { type Exact, exact } from './exact';
 import { one } from './interval';
 import { type Judgement, judged, type Measures, measuresOf, precisionOf } from './judged';
@@ -11,7 +12,7 @@ import { haveUnits, type Value, valuesOf } from './quantity-value';
 import { select } from './selection';
 import { statisticOf } from './statistic-of';
 import { subjectOf } from './subject';
-import { designVoids } from './trial-voids';
+import { designVoids, hasVoidsOfTests } from './trial-voids';
 import { countingReadings } from './where';
 import { type Verdict, type World, without } from './world';
 
@@ -70,13 +71,20 @@ function judgeComputed(world: World, rule: ReadingRule, at: At): Judgement | nul
   const { quantity } = rule.measure;
   if (quantity === 'air-voids') {
     const voids = designVoids(world);
-    if (voids === null) return null;
+    if (voids === null) {
+      const isOfTests = select(world, quantity, at).is === 'missing' && hasVoidsOfTests(world);
+      return isOfTests ? without('undecided') : null;
+    }
     const specimens = voids.specimens.length > 0 ? voids.specimens : [voids.mean];
     return judgeValues(world, rule, specimens, voids);
   }
   if (!OF_BLEND.includes(quantity) || at.stockpile !== undefined) return null;
   const computed = ofStockpiles(world, quantity);
   if (computed === null) return null;
+  // What is computed states none of the conditions that a rule names.
+  if (CONDITIONS.some((name) => at[name] !== undefined)) {
+    return select(world, quantity, at).is === 'missing' ? without('undecided') : null;
+  }
   const judgement = judgeValues(world, rule, [computed], { count: 1, isInterpolated: false });
   const stated = world.record.readings.find(
     (reading) => reading.quantity === quantity && reading.at.stockpile === undefined,

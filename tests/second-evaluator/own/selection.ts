@@ -1,6 +1,7 @@
 import type { Conditions, Reading } from '#rules/record';
 import { agreement, CONDITIONS, isSameCondition } from './conditions';
 import { knownOf } from './known';
+import { OF_COMPACTED } from './shared-specimens';
 import { oneASpecimen } from './specimens';
 import type { World } from './world';
 
@@ -42,6 +43,9 @@ export function select(
   // Of what follows from other readings the plain value is the volumetric specimens' own.
   if (quantity === 'air-voids') fitting = plainOf(wanted, fitting);
   if (severalConditions(wanted, fitting, pooled)) return { is: 'doubtful' };
+  // All of specimens that were made for a test of their own: of the design's nothing is known.
+  const isOfTests = fitting.every(({ at }) => at.variant !== undefined);
+  if (isOfTests && wanted.variant === undefined && OF_COMPACTED.includes(quantity)) return { is: 'doubtful' };
   if (pooled.length > 0) return { is: 'readings', readings: fitting };
   const readings = oneASpecimen(fitting);
   return readings === null ? { is: 'doubtful' } : { is: 'readings', readings };

@@ -13,7 +13,7 @@ const TESTS = [
   'creep-compliance',
   'creep-strain',
 ];
-const OF_COMPACTED = ['bulk-specific-gravity-mix', 'air-voids', 'relative-density'];
+export const OF_COMPACTED = ['bulk-specific-gravity-mix', 'air-voids', 'relative-density'];
 
 /**
  * Whether an outcome hangs on volumetric readings of which only a label says that they are not a test's: judged

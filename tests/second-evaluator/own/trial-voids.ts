@@ -36,6 +36,16 @@ export function designVoids(world: World): Voids | null {
   return between(world, points, declared);
 }
 
+/** Whether gravities of the design give air voids only of specimens that were made for a test. */
+export function hasVoidsOfTests(world: World): boolean {
+  const isOfTest = ({ quantity, at }: Reading) =>
+    quantity === 'bulk-specific-gravity-mix' &&
+    (at.trial ?? 'design') === 'design' &&
+    at.laboratory !== 'agency' &&
+    at.variant !== undefined;
+  return meanOf(world, 'maximum-specific-gravity', 'design') !== null && world.record.readings.some(isOfTest);
+}
+
 interface Point {
   content: Exact;
   voids: Voids;
