@@ -73,7 +73,7 @@ function takenFromPasses(taking: Taking): number {
   return taken;
 }
 
-describe('a rule of which a needed fact is not known', { timeout: 60_000 }, () => {
+describe('a rule of which a needed fact is not known', { timeout: 180_000 }, () => {
   it('does not pass where the fact is missing', () => {
     expect(takenFromPasses(missing)).toBeGreaterThan(300);
   });
