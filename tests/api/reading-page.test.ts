@@ -286,6 +286,27 @@ describe('a sheet', () => {
     expect(expectStatus(missing, 422).body.fix).toContain('Trials');
   });
 
+  it('tells what a cell is taken for anew once its doubt is answered', async () => {
+    const draft = await aDraft(world, dele, { workbook: 'BW-125-S6 r0.xlsx' });
+    const { doubts, version } = await readingOf(draft);
+    const doubt = doubts.find(({ text }) => text === '4721,5');
+    if (!doubt) throw new Error('no decimal comma');
+    const { sheet, cell, text } = doubt;
+    const useOf = async (person: Browser) => {
+      const { body } = await person.get(`${pathOf(draft)}/sheet?sheet=${sheet}`).expect(200);
+      return body.uses.find((use: { cell: string }) => use.cell === cell)?.use;
+    };
+    expect(await useOf(dele)).toBe('doubt');
+    await dele
+      .put(`${pathOf(draft)}/answers`)
+      .set('If-Match', `"${version}"`)
+      .send({ answers: [{ sheet, cell, text, answer: doubt.alternatives[0]?.answer }] })
+      .expect(200);
+    expect(await useOf(dele)).toBe('read');
+    const stranger = await world.as('Bram Ostler');
+    expect((await stranger.get(`${pathOf(draft)}/sheet?sheet=${sheet}`)).status).toBe(404);
+  }, 60_000);
+
   it('is the agency’s to see once the revision is submitted', async () => {
     const submitted = await aSubmitted(world);
     const ines = await world.as('Ines Tordoff');
