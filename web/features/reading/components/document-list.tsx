@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { memo, useState } from 'react';
 import { FileTrigger } from 'react-aria-components';
 import { type DocumentRow, getDocumentFile, type ReadingView } from '#shared/contracts/readings';
 import { formatDate } from '#shared/format/dates';
@@ -16,7 +16,13 @@ import { documentFileFault, documentFileTypes } from '../lib/document-file';
 import { AddDocument } from './add-document';
 
 /** Certificates and reports: what is stated, and its file where it is enclosed. */
-export function DocumentList({ params, reading }: { params: RevisionParams; reading: ReadingView }) {
+export const DocumentList = memo(function DocumentList({
+  params,
+  reading,
+}: {
+  params: RevisionParams;
+  reading: ReadingView;
+}) {
   const [isAdding, setIsAdding] = useState(false);
   const { documents, abilities } = reading;
   const enclosed = documents.filter((row) => row.file !== null).length;
@@ -44,7 +50,7 @@ export function DocumentList({ params, reading }: { params: RevisionParams; read
       ) : null}
     </section>
   );
-}
+});
 
 function DocumentLine({
   params,

@@ -1,6 +1,7 @@
-import { type ReactNode, useId } from 'react';
+import { memo, type ReactNode, useId } from 'react';
 import { Radio, RadioGroup } from 'react-aria-components';
 import { RichText } from '../../../components/ui/rich-text';
+import { useStable } from '../../../lib/use-stable';
 import {
   choicesOf,
   doubtCountWords,
@@ -32,6 +33,8 @@ export function DoubtList({
   /** On a narrow page each doubt carries the rows around its cell. */
   excerptOf?: (doubt: ReadingDoubt) => ReactNode;
 }) {
+  const goTo = useStable(onCursor);
+  const propose = useStable(onPropose);
   return (
     <section aria-labelledby="in-doubt">
       <div className="side-head">
@@ -48,10 +51,10 @@ export function DoubtList({
               doubt={doubt}
               isCurrent={isAt(doubt, cursor)}
               cursorSheet={cursor.sheet}
-              onCursor={() => onCursor({ sheet: doubt.sheet, cell: doubt.cell })}
-              proposed={proposed && isAt(doubt, proposed.doubt) ? proposed : null}
-              onPropose={(answer) => onPropose(doubt, answer)}
-              proposalOf={proposalOf}
+              onCursor={goTo}
+              shown={proposed && isAt(doubt, proposed.doubt) ? proposed.answer : doubt.answer}
+              proposal={proposed && isAt(doubt, proposed.doubt) ? proposalOf(proposed) : null}
+              onPropose={propose}
               canAnswer={canAnswer}
               excerpt={excerptOf?.(doubt)}
             />
@@ -62,33 +65,37 @@ export function DoubtList({
   );
 }
 
-function DoubtItem({
+/** A cursor that moves draws the doubts that it leaves and reaches, however many there are. */
+const DoubtItem = memo(function DoubtItem({
   doubt,
   isCurrent,
   cursorSheet,
   onCursor,
-  proposed,
+  shown,
+  proposal,
   onPropose,
-  proposalOf,
   canAnswer,
   excerpt,
 }: {
   doubt: ReadingDoubt;
   isCurrent: boolean;
   cursorSheet: string;
-  onCursor: () => void;
-  proposed: ProposedAnswer | null;
-  onPropose: (answer: string | null) => void;
-  proposalOf: (proposed: ProposedAnswer) => ReactNode;
+  onCursor: (place: Place) => void;
+  /** The answer that is proposed, else the one that is kept. */
+  shown: string | null;
+  /** What the proposed answer would change. */
+  proposal: ReactNode;
+  onPropose: (doubt: ReadingDoubt, answer: string | null) => void;
   canAnswer: boolean;
   excerpt: ReactNode;
 }) {
   const questionId = useId();
+  const goHere = () => onCursor({ sheet: doubt.sheet, cell: doubt.cell });
   return (
     <li id={doubtId(doubt)} className={isCurrent ? 'doubt is-current' : 'doubt'}>
       <span className="tie tie-doubt">{doubt.letter}</span>
       <p id={questionId}>
-        <button type="button" className="cell-link" onClick={onCursor}>
+        <button type="button" className="cell-link" onClick={goHere}>
           {doubt.sheet === cursorSheet || doubt.sheet === '' ? doubt.cell : `${doubt.sheet} ${doubt.cell}`}
         </button>{' '}
         <RichText>{withoutCell(doubt)}</RichText>
@@ -97,9 +104,9 @@ function DoubtItem({
       <RadioGroup
         aria-labelledby={questionId}
         className="doubt-choices"
-        value={proposed ? proposed.answer : doubt.answer}
-        onChange={onPropose}
-        onFocus={onCursor}
+        value={shown}
+        onChange={(answer) => onPropose(doubt, answer)}
+        onFocus={goHere}
         isDisabled={!canAnswer}
         orientation="horizontal"
       >
@@ -109,15 +116,15 @@ function DoubtItem({
           </Radio>
         ))}
       </RadioGroup>
-      {proposed ? proposalOf(proposed) : null}
-      {doubt.answer !== null && canAnswer && !proposed ? (
-        <button type="button" className="cell-link small" onClick={() => onPropose(null)}>
+      {proposal}
+      {doubt.answer !== null && canAnswer && proposal === null ? (
+        <button type="button" className="cell-link small" onClick={() => onPropose(doubt, null)}>
           Take the answer back
         </button>
       ) : null}
     </li>
   );
-}
+});
 
 /** The cell stands before the reason already, as what leads to it. */
 function withoutCell({ cell, reason }: Pick<ReadingDoubt, 'cell' | 'reason'>): string {

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { Link } from 'react-router-dom';
 import { type Finding, findingKey, type Outcome } from '#rules/engine/finding';
 import type { CheckView } from '#shared/contracts/checks';
@@ -12,7 +13,13 @@ const shownOutcomes: readonly Outcome[] = ['fail', 'not shown', 'undecided'];
 const mostNamed = 8;
 
 /** What the check says of the reading as it stands, beside the sheet: it follows every answer. */
-export function FindingsBeside({ params, check }: { params: RevisionParams; check: CheckView }) {
+export const FindingsBeside = memo(function FindingsBeside({
+  params,
+  check,
+}: {
+  params: RevisionParams;
+  check: CheckView;
+}) {
   const { findings, summary } = check;
   const lines = shownOutcomes
     .map((outcome) => ({ outcome, findings: findings.filter((finding) => finding.outcome === outcome) }))
@@ -40,7 +47,7 @@ export function FindingsBeside({ params, check }: { params: RevisionParams; chec
       {lines.length === 0 ? <p className="small mute py-1">Nothing fails, nothing is open.</p> : null}
     </section>
   );
-}
+});
 
 function ClauseLinks({ params, findings }: { params: RevisionParams; findings: readonly Finding[] }) {
   const named = new Map<string, Finding>();

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { memo, useState } from 'react';
 import type { ReadingView } from '#shared/contracts/readings';
 import { countInFigures } from '#shared/format/numbers';
 import { Button } from '../../../components/ui/button';
@@ -10,7 +10,13 @@ import { CellLink } from './cell-link';
 const kindsAtFirst = 6;
 
 /** What was understood, in groups, each with its first cell. */
-export function Understood({ params, reading }: { params: RevisionParams; reading: ReadingView }) {
+export const Understood = memo(function Understood({
+  params,
+  reading,
+}: {
+  params: RevisionParams;
+  reading: ReadingView;
+}) {
   const { readings, attributes, documents } = reading.counts;
   const [showsAll, setShowsAll] = useState(false);
   const shown = showsAll ? reading.understood : reading.understood.slice(0, kindsAtFirst);
@@ -45,10 +51,16 @@ export function Understood({ params, reading }: { params: RevisionParams; readin
       ) : null}
     </section>
   );
-}
+});
 
 /** Cells that hold something and were not used, with the reason. */
-export function NotUsed({ params, reading }: { params: RevisionParams; reading: ReadingView }) {
+export const NotUsed = memo(function NotUsed({
+  params,
+  reading,
+}: {
+  params: RevisionParams;
+  reading: ReadingView;
+}) {
   const groups = groupUnread(reading.unread);
   return (
     <section aria-labelledby="not-used">
@@ -75,7 +87,7 @@ export function NotUsed({ params, reading }: { params: RevisionParams; reading: 
       )}
     </section>
   );
-}
+});
 
 function shortened(text: string): string {
   return text.length > 60 ? `${text.slice(0, 57)}…` : text;
