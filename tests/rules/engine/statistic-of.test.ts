@@ -7,13 +7,18 @@ import type { Condition } from '#rules/rule-sets/when';
 
 type Qualifier = SampleItem['qualifier'];
 
-function anItem(value: number | null, qualifier: Qualifier = null, at: SampleItem['at'] = {}): SampleItem {
+function anItem(
+  value: number | null,
+  qualifier: Qualifier = null,
+  at: SampleItem['at'] = {},
+  unit = '%',
+): SampleItem {
   return {
     value,
     qualifier,
     at,
     specimen: null,
-    evidence: { quantity: 'x', value, unit: '%', origin: 'measured', source: null },
+    evidence: { quantity: 'x', value, unit, origin: 'measured', source: null },
   } as SampleItem;
 }
 
@@ -107,9 +112,15 @@ describe('one value that is no plain number', () => {
     ],
     [
       'none in 20,000 passes',
-      anItem(null, 'none', { passes: 20000 }),
+      anItem(null, 'none', { passes: 20000 }, 'passes'),
       false,
       { value: 20000, text: 'none', isWord: true, allowed: { low: 20000, high: Infinity } },
+    ],
+    [
+      'no depth after 20,000 passes',
+      anItem(null, 'none', { passes: 20000 }, 'mm'),
+      false,
+      { value: 0, text: 'none', isWord: true, allowed: null },
     ],
     ['a plain number', anItem(5), true, { value: 5, text: null, allowed: null }],
   ] as const)('%s', (_, item, hasMin, expected) => {

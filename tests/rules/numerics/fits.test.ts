@@ -115,6 +115,16 @@ describe('roots at a target', () => {
     expect(rootsAtTarget([7, -4, 1], 3, 0, 10)).toEqual([2]);
   });
 
+  it('of a falling property are the ones where it falls, not where it stands', () => {
+    // −x² + 4·x rises to 2 and falls after; at 2 it stands.
+    expect(fallingRoot([0, 4, -1], [1, 2, 3])).toBe(3);
+    expect(fallingRoot([0, 4, -1], [1, 2])).toBeNull();
+    expect(fallingRoot([9, -1], [5])).toBe(5);
+    expect(fallingRoot([], [5])).toBeNull();
+    expect(rootsAtTarget([4], 3, 0, 10)).toEqual([]);
+    expect(rootsAtTarget([4], 4, 0, 10)).toEqual([]);
+  });
+
   it('keep the digits of a small root beside a large one', () => {
     // x² − (10⁸ + 10⁻⁸)·x + 1 = (x − 10⁸)·(x − 10⁻⁸).
     const [small, large] = rootsAtTarget([1, -(1e8 + 1e-8), 1], 0, 0, 1e9);
@@ -127,6 +137,8 @@ describe('roots at a target', () => {
     expect(rootsAtTarget([-0.3, 0.1], 0, 3, 6)).toEqual([3]);
     expect(rootsAtTarget([-0.3, 0.1], 0, 3.000001, 6)).toEqual([]);
     expect(rootsAtTarget([-6.000001, 1], 0, 3, 6)).toEqual([]);
+    // Noise grows with the numbers: a root at 1,000,000 less a ten-millionth is still on the range.
+    expect(rootsAtTarget([-(1e6 - 1e-7), 1], 0, 1e6, 2e6)).toEqual([1e6]);
   });
 
   it('has none where the curve misses the target or is constant', () => {

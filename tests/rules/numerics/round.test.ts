@@ -34,6 +34,14 @@ describe('the four methods', () => {
     expect(() => roundTo({ value: 1, to: 0, method: 'rounding' })).toThrow(RangeError);
   });
 
+  it('says what is wrong with the value or the unit', () => {
+    const rounding = (value: number, to: number) => () => roundTo({ value, to, method: 'rounding' });
+    expect(rounding(Number.NaN, 0.1)).toThrow(/finite number/);
+    expect(rounding(1, 0)).toThrow(/above zero/);
+    expect(rounding(1, -0.1)).toThrow(/above zero/);
+    expect(rounding(1, Number.POSITIVE_INFINITY)).toThrow(/above zero/);
+  });
+
   it('rounds a rounded number to itself', () => {
     fc.assert(
       fc.property(
@@ -58,6 +66,16 @@ describe('decimals', () => {
     ['2.5e3', 0],
     ['', 0],
     ['NP', 0],
+    ['x1.25', 0],
+    ['1.25x', 0],
+    [' 1.25 ', 2],
+    ['1.5e-3', 4],
+    ['1e12', 0],
+    [0.5, 1],
+    [-0.25, 2],
+    [1.5e-7, 8],
+    [1e21, 0],
+    [Number.NaN, 0],
     [14, 0],
     [0.075, 3],
   ])('of %s are %d', (written, decimals) => {
@@ -69,6 +87,11 @@ describe('decimals', () => {
     expect(formatDecimals(13.95, 1)).toBe('14.0');
     expect(formatDecimals(0.285, 2)).toBe('0.28');
     expect(formatDecimals(-0.04, 1)).toBe('0.0');
+    expect(formatDecimals(-10, 1)).toBe('-10.0');
+    expect(formatDecimals(-0.5, 1)).toBe('-0.5');
+    expect(formatDecimals(0.25, 0)).toBe('0');
+    expect(formatDecimals(2.5e-7, 7)).toBe('0.0000002');
+    expect(formatDecimals(123456789012345.5, 0)).toBe('123456789012346');
     expect(formatDecimals(1e21, 0)).toBe('1000000000000000000000');
   });
 });

@@ -59,6 +59,26 @@ describe('what cannot be had says why', () => {
 });
 
 describe('at the limit', () => {
+  it('one limit alone is enough, and both may be the same', () => {
+    // Of four values P = 50 + 100·Q/3: 1, 2, 3, 4 have x̄ 2.5 and s 1.290994; Q to 1 is 1.161895, to 3.5 0.774597.
+    const values = [1, 2, 3, 4];
+    const of = (lower: number | null, upper: number | null) =>
+      numberOf(percentWithinLimits({ values, lower, upper }));
+    expect(of(1, null)).toBeCloseTo(50 + (100 * 1.161895) / 3, 4);
+    expect(of(null, 3.5)).toBeCloseTo(50 + (100 * 0.774597) / 3, 4);
+    expect(of(1, 3.5)).toBeCloseTo((100 * (1.161895 + 0.774597)) / 3, 4);
+    expect(of(2, 2)).toBeCloseTo(0, 9);
+    expect(numberOf(percentWithinLimits({ values: [3, 3, 3], lower: 3, upper: 3 }))).toBe(100);
+    expect(numberOf(percentWithinLimits({ values: [3, 3, 3], lower: 3, upper: null }))).toBe(100);
+    expect(numberOf(percentWithinLimits({ values: [3, 3, 3], lower: 3.1, upper: null }))).toBe(0);
+    expect(numberOf(percentWithinLimits({ values: [3, 3, 3], lower: null, upper: 3 }))).toBe(100);
+    expect(numberOf(percentWithinLimits({ values: [3, 3, 3], lower: null, upper: 2.9 }))).toBe(0);
+  });
+
+  it('a trimmed mean that drops none is the mean', () => {
+    expect(trimmedMean([1, 2, 6], 0)).toEqual({ ok: true, value: 3 });
+  });
+
   it('equal values on the limit are within it', () => {
     expect(numberOf(percentWithinLimits({ values: [3, 3, 3], lower: 3, upper: 5 }))).toBe(100);
     expect(numberOf(percentWithinLimits({ values: [5, 5, 5], lower: 3, upper: 5 }))).toBe(100);
