@@ -98,9 +98,9 @@ function Ends({
   return (
     <span className="condition">
       <span className="mute">{label} at least</span>
-      <Bound label={`${label}, at least`} value={ends.min} onChange={(next) => put('min', next)} />
+      <Bound label={`${label}, lower end`} value={ends.min} onChange={(next) => put('min', next)} />
       <span className="mute">at most</span>
-      <Bound label={`${label}, at most`} value={ends.max} onChange={(next) => put('max', next)} />
+      <Bound label={`${label}, upper end`} value={ends.max} onChange={(next) => put('max', next)} />
     </span>
   );
 }
