@@ -34,8 +34,8 @@ export interface Candidate {
   heading: string;
   /** Stands in a heading or a text and not in a cell of its own. */
   written: string | null;
-  /** Why the cell cannot be taken although it is headed. */
-  conflict: string | null;
+  /** A misspelt word that its heading rests on alone. */
+  misspelt: string | null;
   /** What a person or a mapping says that it is; its headings then only say whose it is. */
   told?: ToldReading;
 }

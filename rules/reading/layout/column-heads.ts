@@ -50,6 +50,7 @@ export function columnUnder(column: number, heads: Cell[], { kinds, labels }: Su
     part: null,
     quantities: [],
     weak: false,
+    misspelt: null,
     at: {},
     role: null,
     unit: null,
@@ -119,6 +120,7 @@ function nameQuantity(result: TableColumn, meanings: LabelMeaning[], { labels }:
   if (chosen) {
     result.quantities = chosen.quantities;
     result.weak = chosen.weak;
+    result.misspelt = chosen.misspelt;
     if (chosen.unit !== null && result.unit === null) result.unit = chosen.unit;
   } else result.raw = meanings.some((meaning) => meaning.raw);
   result.attribute = last?.attribute ?? null;

@@ -27,7 +27,7 @@ export function bareCandidate(
     table: context.number,
     heading: '',
     written: null,
-    conflict: null,
+    misspelt: null,
   };
 }
 

@@ -1,4 +1,5 @@
 import type { Conditions } from '../../record';
+import { plainText } from '../plain-text';
 import type { Domain } from '../words/context-words';
 import type { KeyName, Role } from '../words/key-words';
 import {
@@ -12,6 +13,7 @@ import {
 import { markedTokensOf, tokensOf, withoutMark } from '../words/tokens';
 import { sieveInLabel, statedConditions } from './label-conditions';
 import { labelUnit } from './label-unit';
+import { isMaterial } from './materials';
 
 /** What the text of a heading, a row label or a title says. */
 export interface LabelMeaning {
@@ -39,6 +41,8 @@ export interface LabelMeaning {
   onAggregate: boolean;
   /** By mass of mix, said in words. */
   onMix: boolean;
+  /** A misspelt word that the quantity rests on alone. */
+  misspelt: string | null;
   /** Words of it that nothing here knows. */
   unknown: string[];
   words: number;
@@ -72,7 +76,7 @@ export class LabelReader {
     const known = this.known.get(text);
     if (known) return known;
     if (this.known.size >= keptTexts) this.known.clear();
-    const meaning = text.length > 160 ? emptyMeaning(text, 30) : understand(text, this.vocabulary);
+    const meaning = text.length > 160 ? emptyMeaning(text, 30) : understandSpelling(text, this.vocabulary);
     this.known.set(text, meaning);
     return meaning;
   }
@@ -97,6 +101,31 @@ function wordsOf(list: string): ReadonlySet<string> {
 /** "VMA (min. 14.0), %", "VFA (65-75)": the limit in brackets is no part of the name. */
 const bracketedLimit =
   /[([]\s*(?:(?:min|max|spec|limit|target|req|mind|höchst|mini|maxi|mín|máx)[a-zé.]*\s*[:=]?\s*\d[^)\]]*|[≥≤<>]=?\s*\d[^)\]]*|\d+(?:[.,]\d+)?\s*(?:-|–|to|bis|à|a)\s*\d+(?:[.,]\d+)?\s*%?)\s*[)\]]/i;
+
+/**
+ * A label that says nothing as it is spelt is read as its words are meant. Beside a unit, or in a name of several
+ * words, the misspelling is as good as the word; alone it leaves a doubt.
+ */
+function understandSpelling(text: string, vocabulary: Vocabulary): LabelMeaning {
+  const meaning = understand(text, vocabulary);
+  const { unknown } = meaning;
+  if (unknown.length === 0 || unknown.length > 3 || meaning.attribute !== null || text.length > 80)
+    return meaning;
+  const misspelt: string[] = [];
+  const spelt = plainText(text).replace(/\p{L}{5,}/gu, (word) => {
+    const [token] = tokensOf(word);
+    const meant = token === undefined || harmless.has(token) ? null : vocabulary.shared.nearest(word);
+    if (meant === null) return word;
+    misspelt.push(word);
+    return meant;
+  });
+  if (misspelt.length === 0) return meaning;
+  const meant = understand(spelt, vocabulary);
+  const saysMore = meant.quantities.length > 0 && !meant.weak && !isMaterial(meant.quantities);
+  if (meant.unknown.length > 0 || !(saysMore || meant.keys.length > 0 || meant.role !== null)) return meaning;
+  const isAlone = meant.words < 2 && meant.unit === null;
+  return { ...meant, text, misspelt: saysMore && isAlone ? misspelt.join(' ') : null };
+}
 
 function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   const domains = domainsIn(text);
@@ -153,6 +182,7 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
       addSenses(meaning, [whole], [...tokens, '%']);
     }
   }
+  addOtherOrder(meaning, tokens, vocabulary);
   addSymbol(meaning, tokens);
   const numbered = numberedSpecimen(meaning);
   if (numbered !== null) {
@@ -175,6 +205,19 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
 function withoutCycles(text: string): string {
   if (!/soundness|so4|sulf|sulph/i.test(text)) return text;
   return text.replace(/[,(]?\s*\(?\b\d{1,2}\s*cyc(?:les?|\.)?\)?/i, ' ');
+}
+
+/** "Strength, dry tensile" is the name with its words in another order; nothing of it may be left over. */
+function addOtherOrder(meaning: LabelMeaning, tokens: string[], vocabulary: Vocabulary): void {
+  if (tokens.length < 2 || tokens.length > 6) return;
+  if (meaning.quantities.length > 0 && !meaning.weak && meaning.unknown.length === 0) return;
+  const senses = [vocabulary.own, vocabulary.shared].flatMap((index) => index.ofWords(tokens));
+  const ids = namesOf(senses, 'quantity');
+  if (ids.length === 0) return;
+  meaning.quantities = [...new Set(ids)];
+  meaning.weak = false;
+  meaning.unknown = [];
+  meaning.role = null;
 }
 
 /** Symbols that stand alone before their unit: "h (mm)", "P [kN]", "T (°C)". Without the unit they name columns. */
@@ -351,6 +394,7 @@ function emptyMeaning(text: string, unknownWords: number): LabelMeaning {
     subset: null,
     onAggregate: false,
     onMix: false,
+    misspelt: null,
     unknown: Array.from({ length: unknownWords }, () => '?'),
     words: unknownWords,
     domains: [],

@@ -7,11 +7,12 @@ import { submittalFacts } from '../submittal-facts';
 import { understandAttribute } from '../understand-attribute';
 import { unreadReasons } from '../unread-reason';
 import { bareCandidate } from './heading-candidates';
-import type { LabelMeaning } from './label-meaning';
+import { isHeading, type LabelMeaning } from './label-meaning';
 import { keyConditions } from './name-conditions';
 import { readDocumentPair } from './read-document-row';
 import { roleReasons, saysOutcome } from './read-value';
 import { readWritten } from './read-written';
+import { splitResults } from './split-results';
 import type { TableRow } from './table';
 import { isConditionKey } from './table-column';
 import { mark, type TableContext } from './table-context';
@@ -67,6 +68,11 @@ function readPairRow(row: TableRow, above: Cell | null, context: TableContext): 
       reading.log.use(place, 'label', 'A unit.');
       continue;
     }
+    if (kind === 'text' && label && isStatedInWords(cell, label, context)) {
+      readPairValue(cell, label, unitNear(row, at, context), context);
+      label.used = true;
+      continue;
+    }
     if (kind === 'text') {
       label = readPairText(cell, label, { at, row }, context);
       continue;
@@ -74,6 +80,14 @@ function readPairRow(row: TableRow, above: Cell | null, context: TableContext): 
     readPairValue(cell, label, unitNear(row, at, context), context);
     if (label) label.used = true;
   }
+}
+
+/** "98/95", "4.1 ± 0.3", "about 4": a result that is more than a figure, beside the name of a quantity. */
+function isStatedInWords(cell: Cell, label: PendingLabel, { labels }: TableContext): boolean {
+  if (label.used || (label.meanings.at(-1)?.quantities.length ?? 0) === 0) return false;
+  return (
+    /^\s*(?:[<>≤≥~≈]|ca\.?|approx\.?|about)?\s*\d/i.test(cell.text) && !isHeading(labels.read(cell.text))
+  );
 }
 
 /** A text is the answer to an open question, else a label of its own, else the rest of the label before it. */
@@ -177,20 +191,22 @@ function readPairValue(
   }
   const at: Conditions = {};
   for (const each of label.meanings) Object.assign(at, each.at);
-  context.candidates.push({
+  const candidate = {
     ...bareCandidate(context, cell),
     quantities: named.quantities,
     at,
     unit: unit ?? named.unit,
     unknownUnit: named.unknownUnit,
     method: named.method,
+    misspelt: named.misspelt,
     isAverage: role === 'average',
     subset: label.meanings.findLast(({ subset }) => subset !== null)?.subset ?? context.tableSubset,
     onAggregate: label.meanings.some((each) => each.onAggregate),
     onMix: label.meanings.some((each) => each.onMix),
     domains: [...label.meanings.flatMap(({ domains }) => domains), ...context.tableDomains],
     heading: label.meanings.map(({ text }) => plainText(text)).join(' · '),
-  });
+  };
+  context.candidates.push(...splitResults(candidate));
 }
 
 /** A unit in a cell of its own, between label and value or behind the value. */

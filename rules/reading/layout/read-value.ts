@@ -4,10 +4,12 @@ import { plainText } from '../plain-text';
 import { placeOf } from '../reading-log';
 import { type UnreadReason, unreadReasons } from '../unread-reason';
 import type { Role } from '../words/key-words';
+import type { Candidate } from './candidate';
 import type { LabelMeaning } from './label-meaning';
 import { quantitiesOf } from './quantities-of';
 import { readAttributeCell } from './read-pairs';
 import { scopedConditions } from './scoped-conditions';
+import { splitResults } from './split-results';
 import type { TableColumn } from './table-column';
 import type { TableContext } from './table-context';
 import type { RowFacts } from './table-rows';
@@ -107,7 +109,7 @@ function pushCandidate(
       : {},
   );
   const nearest = label && label.quantities.length > 0 ? label : null;
-  context.candidates.push({
+  const candidate: Candidate = {
     index: context.index,
     cell,
     quantities: chosen,
@@ -149,8 +151,9 @@ function pushCandidate(
       ...labels.map(({ text }) => plainText(text)),
     ].join(' · '),
     written: null,
-    conflict: null,
-  });
+    misspelt: (label?.quantities.length ? label.misspelt : null) ?? column.misspelt,
+  };
+  context.candidates.push(...splitResults(candidate));
 }
 
 export interface ValueReading {

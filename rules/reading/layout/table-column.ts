@@ -15,6 +15,7 @@ export interface TableColumn {
   part: DocumentPart | null;
   quantities: string[];
   weak: boolean;
+  misspelt: string | null;
   at: Conditions;
   role: Role | null;
   unit: string | null;

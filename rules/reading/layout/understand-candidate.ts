@@ -89,6 +89,10 @@ export function suspicious(
     ]);
   }
   if (each.told) return understood;
+  if (each.misspelt !== null)
+    return doubtOf<NumberValue>(`stands under "${each.misspelt}", which may be meant for ${quantity.label}`, [
+      { answer: quantity.id, label: quantity.label, value: understood.value },
+    ]);
   const needsBasis = quantity.id === 'rap-content' || quantity.id === 'ras-content';
   if (needsBasis && !each.onMix)
     return doubtOf('does not say of what mass it is a percentage', [

@@ -17,9 +17,11 @@ import {
   rawWords,
   roleWords,
 } from './key-words';
+import { NearWords } from './near-words';
 import { performanceWords } from './performance-words';
+import { sameWords } from './same-words';
 import { shortWords } from './short-words';
-import { tokensOf, withoutMark } from './tokens';
+import { foldedText, tokensOf, withoutMark } from './tokens';
 import { volumetricWords } from './volumetric-words';
 
 /** One thing that a phrase can mean; a phrase may mean several. */
@@ -49,6 +51,13 @@ export interface PhraseMatch {
 /** Phrases by their words, for the longest match at each place of a label. */
 export class PhraseIndex {
   private readonly root: PhraseNode = { next: new Map(), senses: [] };
+  private readonly byWords = new Map<string, Sense[]>();
+  private readonly near = new NearWords();
+
+  constructor() {
+    for (const word of [...sameWords.keys(), ...sameWords.values(), 'specific', 'gravity'])
+      this.near.add(word);
+  }
 
   add(phrase: string, sense: Sense): void {
     const tokens = tokensOf(phrase);
@@ -62,11 +71,27 @@ export class PhraseIndex {
       }
       node = next;
     }
-    if (!node.senses.some((known) => isSame(known, sense))) node.senses.push(sense);
+    addTo(node.senses, sense);
+    for (const word of phrase.match(/\p{L}+/gu) ?? []) this.near.add(foldedText(word));
+    if (tokens.length < 2) return;
+    const words = wordsKey(tokens);
+    const senses = this.byWords.get(words) ?? [];
+    addTo(senses, sense);
+    this.byWords.set(words, senses);
   }
 
   addAll(phrases: string, sense: Sense): void {
     for (const phrase of phrases.split('|')) this.add(phrase, sense);
+  }
+
+  /** What a phrase of just these words means, in whatever order. */
+  ofWords(tokens: readonly string[]): readonly Sense[] {
+    return this.byWords.get(wordsKey(tokens)) ?? [];
+  }
+
+  /** The word that a misspelt one stands for, where that is one. */
+  nearest(word: string): string | null {
+    return this.near.nearest(foldedText(word));
   }
 
   /** A token with a point behind it is a word cut short, and stands for the words that begin so where none is it. */
@@ -81,6 +106,14 @@ export class PhraseIndex {
     }
     return best;
   }
+}
+
+function wordsKey(tokens: readonly string[]): string {
+  return tokens.toSorted().join(' ');
+}
+
+function addTo(senses: Sense[], sense: Sense): void {
+  if (!senses.some((known) => isSame(known, sense))) senses.push(sense);
 }
 
 function follow(node: PhraseNode, token: string): PhraseNode[] {

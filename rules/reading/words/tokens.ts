@@ -63,13 +63,15 @@ const writings: [RegExp, string][] = [
 function foldedWords(text: string): string[] {
   let plain = plainText(text).replace(pointedLetters, (letters) => ` ${letters.replace(/[.\s]/g, '')} `);
   for (const [pattern, word] of writings) plain = plain.replace(pattern, word);
-  return (
-    plain
-      .toLowerCase()
-      .normalize('NFD')
-      .replace(/[\u0300-\u036f_|]/g, '')
-      .replace(/ß/g, 'ss')
-      .replace(/[μµ]/g, 'μ')
-      .match(/\d+(?:[.,]\d+)?|%|#|[\p{L}*][\p{L}\d*]*\.?/gu) ?? []
-  );
+  return foldedText(plain).match(/\d+(?:[.,]\d+)?|%|#|[\p{L}*][\p{L}\d*]*\.?/gu) ?? [];
+}
+
+/** Without case, accents and the other marks that keyboards lack. */
+export function foldedText(text: string): string {
+  return text
+    .toLowerCase()
+    .normalize('NFD')
+    .replace(/[\u0300-\u036f_|]/g, '')
+    .replace(/ß/g, 'ss')
+    .replace(/[μµ]/g, 'μ');
 }
