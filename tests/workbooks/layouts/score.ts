@@ -12,7 +12,7 @@ export interface Score {
 }
 
 /** What was read against what is true: a reading counts as found with quantity, value, unit and all conditions right. */
-export function score(result: ReadingResult, truth: Truth): Score {
+export function score(result: Pick<ReadingResult, 'record' | 'doubts'>, truth: Truth): Score {
   const expected = new Map<string, number>();
   for (const reading of withoutMeans(truth)) {
     const key = keyOf(reading.quantity, reading.unit, reading.at, reading.qualifier);
