@@ -2,16 +2,17 @@ import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { parseArgs } from 'node:util';
-import { fileSets } from './files/file-sets';
+import { listFileSets } from './files/file-sets';
 import { heldOutLayouts } from './layouts/held-out-layouts';
 import { knownLayouts } from './layouts/known-layouts';
 import type { Layout } from './layouts/layout';
+import { score } from './layouts/score';
 import { writeBook } from './layouts/write-book';
-import { type CheckedFile, checkFile, type FileScore, type TruthOfFile } from './score-file';
+import { type CheckedFile, checkFile, type FileScore, type TestFile } from './score-file';
 
 interface Group {
   name: string;
-  files: () => AsyncGenerator<{ name: string; file: string; truth: TruthOfFile }>;
+  files: () => AsyncGenerator<TestFile>;
 }
 
 const folder = await mkdtemp(join(tmpdir(), 'reading-report-'));
@@ -19,16 +20,17 @@ const folder = await mkdtemp(join(tmpdir(), 'reading-report-'));
 async function* written(layouts: Layout[]): ReturnType<Group['files']> {
   for (const { name, make } of layouts) {
     const book = make();
-    const file = join(folder, `${name.replace(/[^\w]+/g, '-')}.xlsx`);
-    await writeFile(file, await writeBook(book));
-    yield { name, file, truth: book.truth };
+    const { bytes, extension } = await writeBook(book);
+    const file = join(folder, `${name.replace(/[^\w]+/g, '-')}.${extension}`);
+    await writeFile(file, bytes);
+    yield { name, file, score: (result) => score(result, book.truth) };
   }
 }
 
 const groups: Group[] = [
   { name: 'laid out by code, known', files: () => written(knownLayouts) },
   { name: 'laid out by code, held out', files: () => written(heldOutLayouts) },
-  ...fileSets.map(({ name, files }) => ({ name, files })),
+  ...(await listFileSets()),
 ];
 
 const { values } = parseArgs({
@@ -42,7 +44,8 @@ const { values } = parseArgs({
 });
 
 const asked = groups.filter(({ name }) => values.only === undefined || name.includes(values.only));
-if (asked.length === 0) throw new Error(`--only takes a part of ${groups.map(({ name }) => name).join(', ')}.`);
+if (asked.length === 0)
+  throw new Error(`--only takes a part of ${groups.map(({ name }) => name).join(', ')}.`);
 
 const widths = [46, 9, 8, 7, 8, 14, 8];
 const line = (cells: (string | number)[]) =>
@@ -53,10 +56,10 @@ try {
     console.log(`\n${group.name}`);
     console.log(line(['', 'readings', 'recall', 'wrong', 'doubts', 'unrecognised', 'time']));
     const scores: FileScore[] = [];
-    for await (const { name, file, truth } of group.files()) {
-      const checked = await checkFile(file, truth);
+    for await (const tested of group.files()) {
+      const checked = await checkFile(tested);
       scores.push(checked.score);
-      if (!values.totals) tell(name, checked);
+      if (!values.totals) tell(tested.name, checked);
     }
     console.log(line(['all', ...figures(sumOf(scores))]));
   }
@@ -72,7 +75,8 @@ function tell(name: string, { score, missing, extra }: CheckedFile): void {
 }
 
 function figures({ expected, found, wrong, doubts, numeric, notRecognised, milliseconds }: FileScore) {
-  const share = (part: number, whole: number) => (whole === 0 ? '–' : `${((100 * part) / whole).toFixed(1)} %`);
+  const share = (part: number, whole: number) =>
+    whole === 0 ? '–' : `${((100 * part) / whole).toFixed(1)} %`;
   return [
     expected,
     share(found, expected),

@@ -1,13 +1,16 @@
-import { runCheck } from '#server/cli/run-check';
-import { loadGrid } from '#server/cli/load-check-inputs';
-import { unreadReasons } from '#rules/reading/unread-reason';
-import { readingResultSchema } from '#rules/reading/reading-result';
 import { z } from 'zod';
+import { type ReadingResult, readingResultSchema } from '#rules/reading/reading-result';
+import { unreadReasons } from '#rules/reading/unread-reason';
 import { mixRecordSchema } from '#rules/record';
-import type { Truth } from './layouts/book';
-import { score } from './layouts/score';
+import { loadGrid } from '#server/cli/load-check-inputs';
+import { runCheck } from '#server/cli/run-check';
+import type { Score } from './layouts/score';
 
-export type TruthOfFile = Truth;
+export interface TestFile {
+  name: string;
+  file: string;
+  score: (result: Pick<ReadingResult, 'record' | 'doubts'>) => Score;
+}
 
 export interface FileScore {
   expected: number;
@@ -37,7 +40,7 @@ const outputSchema = z.object({
 });
 
 /** Reads a file the way the command line does, with all that it prints, and holds it against what is true. */
-export async function checkFile(file: string, truth: TruthOfFile): Promise<CheckedFile> {
+export async function checkFile({ file, score }: TestFile): Promise<CheckedFile> {
   let printed = '';
   let complaint = '';
   const start = performance.now();
@@ -52,7 +55,7 @@ export async function checkFile(file: string, truth: TruthOfFile): Promise<Check
   const milliseconds = performance.now() - start;
   if (code === 2) throw new Error(`${file}: ${complaint}`);
   const { record, reading } = outputSchema.parse(JSON.parse(printed));
-  const { missing, extra, ...told } = score({ record, doubts: reading.doubts }, truth);
+  const { missing, extra, ...told } = score({ record, doubts: reading.doubts });
   const numeric = await numericCells(file);
   const notRecognised = reading.unread.filter(
     ({ sheet, cell, reason }) => reason === unreadReasons.notRecognised && numeric.has(`${sheet}!${cell}`),

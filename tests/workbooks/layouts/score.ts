@@ -32,29 +32,45 @@ export function score(result: Pick<ReadingResult, 'record' | 'doubts'>, truth: T
         `${key} = ${reading.value} (${reading.source?.sheet}!${reading.source?.cell}) not ${value ?? 'there'}`,
       );
   }
+  const facts = scoreFacts(result, truth);
+  return {
+    expected: expected.size + facts.expected,
+    found: found + facts.found,
+    wrong: extra.length + facts.extra.length,
+    doubts: result.doubts.length,
+    missing: [...[...missing].map(([key, value]) => `${key} = ${value}`), ...facts.missing],
+    extra: [...extra, ...facts.extra],
+  };
+}
+
+/** Attributes and documents, of those that are true. */
+export function scoreFacts(
+  { record }: Pick<ReadingResult, 'record'>,
+  truth: Pick<Truth, 'documents'> & { attributes: Record<string, string | number | boolean> },
+): Pick<Score, 'expected' | 'found' | 'missing' | 'extra'> {
+  const missing: string[] = [];
+  const extra: string[] = [];
   let attributes = 0;
   for (const [name, value] of Object.entries(truth.attributes)) {
-    const read = result.record.attributes[name]?.value;
+    const read = record.attributes[name]?.value;
     if (read === value) attributes += 1;
-    else if (read === undefined) missing.set(`attribute ${name}`, 0);
+    else if (read === undefined) missing.push(`attribute ${name}`);
     else extra.push(`attribute ${name} = ${read} not ${value}`);
   }
   let documents = 0;
   for (const document of truth.documents) {
-    const read = result.record.documents.find(({ type }) => type === document.type);
+    const read = record.documents.find(({ type }) => type === document.type);
     if (read && read.date === document.date && read.validTo === document.validTo) documents += 1;
     else if (read)
       extra.push(
         `document ${document.type} ${read.date}–${read.validTo} not ${document.date}–${document.validTo}`,
       );
-    else missing.set(`document ${document.type}`, 0);
+    else missing.push(`document ${document.type}`);
   }
   return {
-    expected: expected.size + Object.keys(truth.attributes).length + truth.documents.length,
-    found: found + attributes + documents,
-    wrong: extra.length,
-    doubts: result.doubts.length,
-    missing: [...missing].map(([key, value]) => `${key} = ${value}`),
+    expected: Object.keys(truth.attributes).length + truth.documents.length,
+    found: attributes + documents,
+    missing,
     extra,
   };
 }

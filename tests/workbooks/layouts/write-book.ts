@@ -3,13 +3,15 @@ import type { Cell } from '#rules/reading/cell-grid';
 import type { Book } from './book';
 
 /** A laid-out workbook as a file: the cells as they were put, with merges, hidden parts and remarks. */
-export async function writeBook(book: Book): Promise<Buffer> {
+export async function writeBook(book: Book): Promise<{ bytes: Buffer; extension: 'xlsx' | 'csv' }> {
+  const [only] = book.contents();
+  if (only?.name === '') return { bytes: Buffer.from(textOf(only)), extension: 'csv' };
   const workbook = new exceljs.Workbook();
   for (const laid of book.contents()) {
     const sheet = workbook.addWorksheet(laid.name, { state: laid.hidden ? 'hidden' : 'visible' });
     for (const cell of laid.cells.values()) {
       const written = sheet.getCell(cell.address);
-      written.value = valueOf(cell);
+      written.value = cellValue(cell);
       if (cell.format !== null) written.numFmt = cell.format;
       if (cell.comment !== null) written.note = cell.comment;
     }
@@ -17,10 +19,18 @@ export async function writeBook(book: Book): Promise<Buffer> {
     for (const row of laid.hiddenRows) sheet.getRow(row).hidden = true;
     for (const column of laid.hiddenColumns) sheet.getColumn(column).hidden = true;
   }
-  return Buffer.from(await workbook.xlsx.writeBuffer());
+  return { bytes: Buffer.from(await workbook.xlsx.writeBuffer()), extension: 'xlsx' };
 }
 
-function valueOf(cell: Cell): exceljs.CellValue {
+/** Text files have one sheet without a name; a semicolon leaves the comma to the decimals. */
+function textOf(sheet: ReturnType<Book['contents']>[number]): string {
+  const { cells, rowCount, columnCount } = sheet.toGrid();
+  const rows = Array.from({ length: rowCount }, () => Array.from({ length: columnCount }, () => ''));
+  for (const { row, column, text } of cells) (rows[row - 1] as string[])[column - 1] = text;
+  return rows.map((row) => row.join(';')).join('\n');
+}
+
+function cellValue(cell: Cell): exceljs.CellValue {
   if (cell.kind === 'formula-without-result') return { formula: cell.formula ?? '0' };
   const value = plainValue(cell);
   return cell.formula === null ? value : { formula: cell.formula, result: value };
