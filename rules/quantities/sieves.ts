@@ -97,6 +97,10 @@ const standardOpenings = new Set([...usSieves.map(([, opening]) => Number(openin
 
 /** Openings of superseded editions that workbooks still carry, and conversions taken for openings. */
 const formerOpenings = new Map([
+  // EN sizes are also written rounded (EN 13043, Table 1; from memory, verify).
+  [31, 31.5],
+  [22, 22.4],
+  [11, 11.2],
   [76.2, 75],
   [63.5, 63],
   [50.8, 50],

@@ -37,7 +37,8 @@ export function parseNumberText(text: string, decimal: '.' | ','): ParseOutcome 
     );
   if (!match) return { state: 'text' };
   const body = (match[2] as string).trim().replace(/[.,]$/, '');
-  let rest = (match[3] as string).trim();
+  // A mark for a note at the foot says nothing against the figure.
+  let rest = (match[3] as string).trim().replace(/^\s*(?:\*{1,3}|[†‡])$/, '');
   let qualifier = qualifierOf(match[1]);
   if (rest === '+' && !qualifier) {
     qualifier = '>';

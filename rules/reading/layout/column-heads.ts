@@ -1,4 +1,5 @@
 import type { Cell } from '../cell-grid';
+import type { ConditionName } from '../mapping';
 import { plainText } from '../plain-text';
 import type { SheetIndex } from '../sheet-index';
 import { saysCondition } from './head-figures';
@@ -38,7 +39,8 @@ function groupHead(
   return stands(column) && stands(head.column) ? head : null;
 }
 
-export function columnUnder(column: number, heads: Cell[], { kinds, labels }: Surroundings): TableColumn {
+export function columnUnder(column: number, all: Cell[], { kinds, labels }: Surroundings): TableColumn {
+  const heads = withoutNumberWords(all);
   const isWords = (cell: Cell) => kinds.of(cell) === 'text' || saysCondition(cell, { kinds, labels });
   const texts = heads.filter(isWords);
   const meanings = texts.map(({ text }) => labels.read(text));
@@ -86,13 +88,23 @@ export function columnUnder(column: number, heads: Cell[], { kinds, labels }: Su
     if (kinds.of(cell) === 'unit')
       result.unit = unitText(cell, labels.read(`x (${cell.text.replace(/[()[\]]/g, '')})`)) ?? result.unit;
   for (const [at, meaning] of meanings.entries()) {
-    const isName = at < meanings.length - 1 && meaning.unknown.length > 0 && meaning.quantities.length === 0;
+    const isName =
+      at < meanings.length - 1 &&
+      ((meaning.unknown.length > 0 && meaning.quantities.length === 0) || isMaterial(meaning.quantities));
     if (isName && meaning.role === null && Object.keys(meaning.at).length === 0)
       result.groupName = texts[at] ?? null;
   }
   nameQuantity(result, meanings, { kinds, labels });
   nameColumn(result, heads, meanings, { kinds, labels });
   return result;
+}
+
+/** "Specimen" over "No." is one name in two rows. */
+function withoutNumberWords(heads: Cell[]): Cell[] {
+  const telling = heads.filter(
+    ({ text }) => !/^\s*\(?\s*(?:nr|no|n[°º]|#|id|num|number|nummer)\.?\s*\)?\s*$/i.test(text),
+  );
+  return telling.length > 0 ? telling : heads;
 }
 
 function unitText(cell: Cell, meaning: LabelMeaning): string | null {
@@ -126,6 +138,22 @@ function nameQuantity(result: TableColumn, meanings: LabelMeaning[], { labels }:
   result.attribute = last?.attribute ?? null;
 }
 
+/** "Height (mm) at gyrations" over 8, 100 and 160: what the figures are is said beside the quantity. */
+function keyInWords(meanings: LabelMeaning[], at: TableColumn['at']): ConditionName | null {
+  for (const { text } of meanings.toReversed()) {
+    const found = figuresInWords.find(([words, key]) => words.test(text) && at[key] === undefined);
+    if (found) return found[1];
+  }
+  return null;
+}
+
+const figuresInWords: [RegExp, ConditionName][] = [
+  [/gyration|girat|giros|umdrehung|drehung/i, 'gyrations'],
+  [/siebweite|sieb(?:e|größe|öffnung)?\b|\bsieves?\b|tamis|tamiz|malla/i, 'sieve'],
+  [/frequen|frecuen|fréquen/i, 'frequency'],
+  [/\bpasses\b|überrollung|passages|pasadas/i, 'passes'],
+];
+
 function nameColumn(
   result: TableColumn,
   heads: Cell[],
@@ -142,8 +170,8 @@ function nameColumn(
   if (kinds.of(lowest) !== 'text') {
     result.name = plainText(lowest.text);
     result.nameCell = lowest;
-    result.nameKey = upperKey ?? null;
-    if (!upperKey && meanings.some(({ quantities }) => quantities.includes('binder-content'))) {
+    result.nameKey = upperKey ?? keyInWords(meanings, result.at);
+    if (!result.nameKey && meanings.some(({ quantities }) => quantities.includes('binder-content'))) {
       result.binder = {
         text: lowest.kind === 'number' ? lowest.text : plainText(lowest.text).replace(/\s*%$/, ''),
         cell: lowest,

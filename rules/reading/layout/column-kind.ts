@@ -30,7 +30,9 @@ export function decideKind(
   if (
     isCount &&
     isFirst &&
-    /^(?:no\.? of |number of )?(?:gyr|giros|girat|dreh|umdreh|n$)/i.test(last?.text ?? '')
+    /^(?:no\.? of |number of |nombre de |nb\.? (?:de )?|n[úu]mero de |n[°º] (?:de )?|anzahl (?:der )?)?(?:gyr|giros|girat|dreh|umdreh|n$)/i.test(
+      last?.text ?? '',
+    )
   ) {
     result.kind = 'key';
     result.key = 'gyrations';
@@ -53,6 +55,12 @@ export function decideKind(
     say.length * 2 < Math.max(1, texts.length)
   )
     return;
+  if (isSpecimenCutShort(last?.text ?? '', sample, { isFirst, kinds })) {
+    result.role = null;
+    result.kind = 'key';
+    result.key = 'specimen';
+    return;
+  }
   if (result.role !== null && result.role !== 'average' && result.quantities.length === 0) {
     result.kind = 'aside';
     return;
@@ -87,6 +95,23 @@ export function decideKind(
     result.kind = isFirst || result.heads.length === 0 ? 'label' : 'aside';
   else if (isFirst && result.heads.length > 0 && result.quantities.length === 0 && sample.length > 0)
     result.kind = 'label';
+}
+
+/** "Spec." heads limits, and specimens where short names stand under it; "Spec. No." heads nothing else. */
+function isSpecimenCutShort(
+  head: string,
+  sample: Cell[],
+  { isFirst, kinds }: { isFirst: boolean; kinds: Contents['around']['kinds'] },
+): boolean {
+  const match = /^\s*spec\.?\s*(no\.?|nr\.?|#|id)?\s*$/i.exec(head);
+  if (!match || sample.length === 0) return false;
+  const short =
+    isFirst || match[1]
+      ? /^\s*[\p{L}\d][\p{L}\d\-./]{0,5}\s*$/u
+      : /^\s*(?:\p{L}{1,2}-?\d{0,3}|\d{1,2}-?\p{L})\s*$/u;
+  const names = sample.filter(({ text }) => short.test(text));
+  const words = sample.filter((cell) => kinds.of(cell) === 'text' && !short.test(cell.text));
+  return names.length > 0 && names.length + words.length >= sample.length && words.length <= names.length;
 }
 
 interface Contents {

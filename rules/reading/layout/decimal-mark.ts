@@ -8,8 +8,9 @@ export function decimalMark(sheet: SheetGrid): '.' | ',' {
   for (const { kind, text } of sheet.cells) {
     if (kind !== 'text' || text.length > 16) continue;
     const plain = plainText(text);
-    if (!/^[<>]?\s*-?\d/.test(plain)) continue;
-    const body = /^[<>]?\s*-?(\d+(?:[.,' ]\d+)*)/.exec(plain)?.[1] ?? '';
+    const body = /^[<>]?\s*[-+]?(\d+(?:[.,' ]\d+)*)(?!\s*[-/:.,]?\d)/.exec(plain)?.[1] ?? '';
+    // A date or a clause has its mark more than once.
+    if (body === '' || /^\d+([.,])\d{1,2}\1\d+/.test(body)) continue;
     if (
       /,\d+$/.test(body) &&
       (!/,\d{3}$/.test(body) || /^0,|\d{4,},/.test(body)) &&
@@ -24,5 +25,5 @@ export function decimalMark(sheet: SheetGrid): '.' | ',' {
     )
       points += 1;
   }
-  return commas > 0 && points === 0 ? ',' : '.';
+  return commas > 0 && points * 20 < commas ? ',' : '.';
 }

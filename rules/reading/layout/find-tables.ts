@@ -46,7 +46,12 @@ function tablesOf(region: Region, around: Surroundings, merges: Map<string, numb
   for (const [at, row] of region.entries()) {
     const next = region[at + 1];
     if (isTitle(row, next, { around, merges, firstColumn })) {
-      if (table && table.rows.length > 0 && !opensTable(region, at + 1, table, around)) table.rows.push(row);
+      if (
+        table &&
+        table.rows.length + table.headings.length > 0 &&
+        !opensTable(region, at + 1, table, around)
+      )
+        table.rows.push(row);
       else {
         if (table) table = null;
         titles.push(...row.cells);

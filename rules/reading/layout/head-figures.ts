@@ -4,7 +4,9 @@ import type { Surroundings, TableRow } from './table';
 
 /** "-20 °C" and "10 Hz" are figures that head what stands under them. */
 export function saysCondition(cell: Cell, { labels }: Surroundings): boolean {
-  return cell.kind === 'text' && Object.keys(labels.read(cell.text).at).length > 0;
+  if (cell.kind !== 'text') return false;
+  const { at, binder } = labels.read(cell.text);
+  return Object.keys(at).length > 0 || binder !== null;
 }
 
 /** Figures that head columns: sieves in a run, and texts like "-20 °C" or "19 mm"; one alone is a value. */

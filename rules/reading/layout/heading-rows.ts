@@ -111,7 +111,11 @@ export function belongsToHeading(
     // Names of stockpiles or specimens over columns of values.
     return next?.cells.some((cell) => kinds.of(cell) === 'value' || kinds.of(cell) === 'unit') ?? false;
   }
-  return isNumberedHeading(row, values, table, around) || isKeyedHeading(row, next, table, around);
+  return (
+    isNumberedHeading(row, values, table, around) ||
+    isKeyedHeading(row, next, table, around) ||
+    isFigureHeading(row, next, table, around)
+  );
 }
 
 /** "Sand equivalent | N/A | %": a property whose result is a word. */
@@ -192,6 +196,39 @@ function isNumberedHeading(
     (spansMore && heads.every((head) => head.quantities.length === 0))
   );
 }
+
+/** "Height at gyrations" over 8, 100 and 160, beside words and units: each figure shares its upper head with others. */
+function isFigureHeading(
+  row: TableRow,
+  next: TableRow | undefined,
+  table: Table,
+  { kinds, labels }: Surroundings,
+): boolean {
+  const above = table.headings.at(-1);
+  const [first] = row.cells;
+  if (!above || !first || !next || table.rows.length > 0 || table.headings.length > 2) return false;
+  const corner = first.column === table.firstColumn ? kinds.of(first) : 'none';
+  if (corner === 'value' || (corner === 'text' && labels.read(first.text).quantities.length > 0))
+    return false;
+  const groups = new Map<Cell, Cell[]>();
+  for (const cell of row.cells) {
+    if (kinds.of(cell) !== 'value') continue;
+    const head = above.cells.findLast(({ column }) => column <= cell.column);
+    if (!head || kinds.of(head) !== 'text') return false;
+    groups.set(head, [...(groups.get(head) ?? []), cell]);
+  }
+  const isShared = [...groups].every(([head, cells]) => {
+    const increases = cells.every(
+      ({ value }, at) => at === 0 || Number(value) > Number(cells[at - 1]?.value),
+    );
+    const falls = cells.every(({ value }, at) => at === 0 || Number(value) < Number(cells[at - 1]?.value));
+    return cells.length > 1 && (increases || falls) && saysFigures.test(head.text);
+  });
+  return groups.size > 0 && isShared && next.cells.length >= row.cells.length - 1;
+}
+
+const saysFigures =
+  /gyration|girat|giros|drehung|sieb|sieve|tamis|tamiz|malla|frequen|frecuen|fréquen|pass|überrollung|pasadas|hz|temp|time|zeit|temps|tiempo/i;
 
 /** 1, 2, 3 and again 1, 2, 3. */
 function countsUp(values: Cell[]): boolean {

@@ -18,7 +18,7 @@ export function statedConditions(text: string): StatedConditions {
   const found: StatedConditions = { at: {}, binder: null, rest: plainText(text) };
   // Without a digit or one of these words there is nothing to take, and most labels have neither.
   if (
-    !/\d|\b(?:trial|mix|blend|n|sodium|magnesium|dry|left|right|wet|cond|uncond|mag|soak|[a-z]*sulf)/i.test(
+    !/\d|@|\b(?:at|bei|trial|mix|blend|n|sodium|magnesium|dry|left|right|wet|cond|uncond|mag|soak|[a-z]*sulf)/i.test(
       found.rest,
     ) &&
     !namedIds.test(found.rest)
@@ -36,9 +36,16 @@ const number = String.raw`-?\d+(?:[.,]\d+)?`;
 const id = String.raw`([A-Za-z]{0,3}-?\d+[A-Za-z]?|[A-Z]|[IVX]{1,4})(?![\p{L}\d.,]*\d|[\p{L}\d]|\s*(?:%|mm\b|in\b|°|gyr|blows|passes))`;
 const mark = String.raw`\s*(?:mix|blend|point|no\.?|nr\.?|#|n°|nº|:|-)?\s*(?:no\.?|nr\.?|#|:|-)?\s*`;
 const namedIds =
-  /\b(?:versuch|variante|essai|ensayo|mezcla|mischung|formule|rezept|m[eé]lange|core|specimen|sample|replicate|rep|puck|pill|plug|sublot|lot|probe|prüfkörper|probekörper|bohrkern|éprouvette|eprouvette|carotte|échantillon|probeta|testigo|muestra|run|briquette)\b/i;
+  /\b(?:versuch|variante|essai|ensayo|mezcla|mischung|formule|rezept|m[eé]lange|core|specimen|sample|replicate|rep|puck|pill|plug|sublot|lot|probe|prüfkörper|probekörper|bohrkern|éprouvette|eprouvette|carotte|échantillon|probeta|testigo|muestra|run|briquette|spec|[ée]p|pk|ep|essai)\b/i;
 
 const patterns: [RegExp, Take][] = [
+  [
+    /^\s*(?:@|at|bei|à|al?|en el)\s*(?:the\s+)?(?:opt(?:im(?:um|al|o|ale?))?\.?|design|selected|job[ -]mix)\s*(?:ac|a\.c\.|pb|asph(?:alt)?\.?|binder|bitumen|liant|ligante|bet[uú]n|asfalto)?\s*(?:content|cont\.?|%)?\s*$/i,
+    (_match, found) => {
+      found.at.trial = 'design';
+      return true;
+    },
+  ],
   [
     /\b(left|right)(?:[ -](?:wheel|track|side))?\b/i,
     (match, found) => {
@@ -166,7 +173,7 @@ const patterns: [RegExp, Take][] = [
   ],
   [
     new RegExp(
-      String.raw`(?<![\p{L}\d])(?:specimen|sample|core|replicate|rep|puck|pill|plug|sub[ -]?lot|lot|pr[üu]fk[öo]rper|probek[öo]rper|probe|bohrkern|[ée]prouvette|carotte|[ée]chantillon|probeta|testigo|muestra|run|briquette|spec\.?|determination|test)${mark}${id}`,
+      String.raw`(?<![\p{L}\d])(?:specimen|sample|core|replicate|rep|puck|pill|plug|sub[ -]?lot|lot|pr[üu]fk[öo]rper|probek[öo]rper|probe|bohrkern|[ée]prouvette|carotte|[ée]chantillon|probeta|testigo|muestra|run|briquette|spec\.?|[ée]pr?\.?|pk\.?|determination|test)${mark}${id}`,
       'iu',
     ),
     (match, found) => named(match, found, 'specimen'),
@@ -202,7 +209,7 @@ function setNumber(
 export function sieveInLabel(text: string): { sieve: number; rest: string } | null {
   const plain = plainText(text);
   const match =
-    /(?:\bP|(?:^|\s)-|\bminus |<)\s*(?:No\.?\s*|#)?(200|100|50|30|16|8|4)\b|\bP[ _]?(0?[.,]0?\d+)\b|((?:No\.?|#|Nr\.?)\s*\d+)|(\d+(?:[.,]\d+)?\s*mm)|((?:\d+[ -])?\d+\/\d+\s*(?:in\.?|")|\d+(?:\.\d+)?\s*(?:in\.|"))/i.exec(
+    /(?:\bP|(?:^|\s)-|\bminus |<)\s*(?:No\.?\s*|#\s*)?(200|100|50|30|16|8|4)\b|\bP[ _]?(0?[.,]0?\d+)\b|((?:No\.?|#|Nr\.?)\s*\d+)|(\d+(?:[.,]\d+)?\s*mm)|((?:\d+[ -])?\d+\/\d+\s*(?:in\.?|")|\d+(?:\.\d+)?\s*(?:in\.|"))/i.exec(
       plain,
     );
   if (!match) return null;

@@ -91,7 +91,7 @@ const changing = wordsOf(
 const weakWords = wordsOf(
   `binder asphalt bitumen bitume liant ligante betun asfalto bindemittel voids bulk apparent density strain strength flow load height thickness absorption rut lime abrasion percentage share part formule dosage dosierung anteil slope compliance
   flash coating retained passing gradation proportion durabilidad soundness strength viscosity flujo compactacion compactacion porosite densidad hohlraum vides vacios huecos las se fm fi pi sa la ac pen ri rice impression los angeles stability penetration stripping shingles deleterious refus
-  ruckstand durchgang passant retenido pasa permeability saturation saturacion diameter dia espesor altura hauteur hohe dicke durchmesser height gyrations girations drehungen umdrehungen component dust ef e* cantabro dct rap ras gtr`,
+  ruckstand durchgang passant retenido pasa permeability saturation saturacion diameter dia espesor altura hauteur hohe dicke durchmesser height gyrations girations drehungen umdrehungen component dust ef e* cantabro dct rap ras gtr depth`,
 );
 
 function wordsOf(list: string): ReadonlySet<string> {
@@ -129,11 +129,11 @@ function understandSpelling(text: string, vocabulary: Vocabulary): LabelMeaning 
 
 function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   const domains = domainsIn(text);
-  const stated = statedConditions(withoutCycles(text.replace(bracketedLimit, ' ')));
+  const stated = statedConditions(withoutCycles(text.replace(bracketedLimit, ' ').replace(atSieves, ' ')));
   const isRatio = /\/\s*P\s?be?\b|dust|ratio|proportion\b.*\/|polvo/i.test(text);
   const namesSieve =
     !isRatio &&
-    /pass|pasa|p[ _-]?0|p[ _-]?\d{2,3}\b|retain|reten|refus|durchgang|rückstand|minus|tamis|finer|^\s*-\s*(?:no|#)?\s*200/i.test(
+    /pass|pasa|\bp\s?#\s?\d|p[ _-]?0|p[ _-]?\d{2,3}\b|retain|reten|refus|durchgang|rückstand|minus|tamis|finer|^\s*-\s*(?:no|#)?\s*200/i.test(
       text,
     );
   const sieve = namesSieve ? sieveInLabel(stated.rest) : null;
@@ -200,6 +200,10 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   }
   return meaning;
 }
+
+/** "Siebdurchgang in M.-% bei Siebweite in mm": what stands under it is in percent. */
+const atSieves =
+  /\b(?:bei|at|à|a|por)\s+(?:der\s+|the\s+|el\s+)?(?:Sieb\p{L}*|sieves?(?: size)?|tamis|tamiz)(?:\s*(?:in|en|,)?\s*\(?mm\)?)?\s*$/iu;
 
 /** "Soundness (5 cycles), %": how often the test was run is no unit of its result. */
 function withoutCycles(text: string): string {

@@ -46,7 +46,22 @@ function takeMethod(found: LabelUnit): void {
   found.rest = found.rest.replace(match[0], ' ').replace(/[([]\s*[)\]]/g, ' ');
 }
 
+/** "Dynamic modulus, MPa (mean of 3 specimens)": a remark in brackets stands behind the unit. */
 function takeTail(found: LabelUnit): void {
+  const remark = /\s*\([^()]*\)\s*$/.exec(found.rest);
+  if (remark && remark.index > 0) {
+    const before: LabelUnit = { ...found, rest: found.rest.slice(0, remark.index) };
+    takeTailOf(before);
+    if (before.unit !== null) {
+      found.unit = before.unit;
+      found.rest = `${before.rest} ${remark[0]}`;
+      return;
+    }
+  }
+  takeTailOf(found);
+}
+
+function takeTailOf(found: LabelUnit): void {
   const comma = /[,;]\s*([^,;]+)$/.exec(found.rest.trim());
   const behindComma = comma?.[1] === undefined ? null : unitOf(comma[1]);
   if (comma && behindComma !== null) {
@@ -71,7 +86,7 @@ const safeTail =
   /^(?:mm|cm|µm|μm|um|kg|g|kN|N|lbf|kPa|MPa|GPa|psi|ksi|°\s?[CF]|deg\.? [CF]|1\/GPa|1\/psi|1\/MPa|1\/kPa|kPa-1|GPa-1|GPa\^-1|pcf|kg\/m[³3]|g\/cm[³3]|Mg\/m[³3]|t\/m[³3]|lb\/ft[³3]|µε|με|microstrain|Hz|J\/m[²2]|kJ\/m[²2]|N\/mm[²2]|Pa[·.]s|cP|mg\/g|m[²2]\/kg|0[.,]1 mm|1\/10 mm|dmm|cycles)$/;
 
 export function unitOf(text: string): string | null {
-  const plain = text.trim();
+  const plain = text.trim().replace(/(?<=\bin)\.$/, '');
   // `min` beside a name is a limit, and `h`, `t`, `m` repeat the symbol of the name itself.
   if (/^(?:|[-–]|min|h|t|m|j|p|k|d|number|ratio|none)$/i.test(plain)) return null;
   const known =

@@ -7,6 +7,8 @@ export const materialShares: ReadonlySet<string> = new Set([
   'mineral-filler-content',
   'crumb-rubber-content',
   'fibre-content',
+  'baghouse-fines-content',
+  'glass-content',
 ]);
 
 export function isMaterial(quantities: readonly string[]): boolean {

@@ -53,6 +53,13 @@ export function nameColumns(context: TableContext): void {
       keepScoped(row, { key, meaning, cell: values[0] as Cell }, context);
       continue;
     }
+    // Weighings and heights are no names.
+    if (
+      named.has(key) &&
+      values.some(({ kind, value }) => kind === 'number' && !/^\d{1,4}$/.test(value)) &&
+      !values.every(({ value }) => /^\d\.\d$/.test(value))
+    )
+      continue;
     for (const cell of values) {
       const column = columns.get(cell.column) as TableColumn;
       const understood = keyConditions(key, cell, {
@@ -67,6 +74,8 @@ export function nameColumns(context: TableContext): void {
   }
   nameByBinder(context);
 }
+
+const named: ReadonlySet<ConditionName> = new Set(['trial', 'specimen', 'blend', 'stockpile']);
 
 /** Keys that are figures: words among them are lines of another kind. */
 const figures: ReadonlySet<ConditionName> = new Set([

@@ -15,6 +15,8 @@ export function withoutOtherMasses(assigned: Assigned[], log: ReadingLog): Assig
   return assigned.filter((each) => {
     if (!isMass(each) || each.told) return true;
     const beside = tables.get(each.table) ?? new Set();
+    const isSpecimen = beside.has('bulk-specific-gravity-mix') || beside.has('bulk-density-mix');
+    if (isSpecimen && each.at.stockpile === undefined) return true;
     const isRice =
       beside.has('maximum-specific-gravity') &&
       !beside.has('bulk-specific-gravity-mix') &&
@@ -25,10 +27,11 @@ export function withoutOtherMasses(assigned: Assigned[], log: ReadingLog): Assig
         (id) => beside.has(id) && !beside.has('bulk-specific-gravity-mix'),
       );
     const [nearest] = each.domains.filter((domain) =>
-      ['mix', 'moisture', 'marshall', 'maximum-gravity', 'aggregate-gravity'].includes(domain),
+      ['mix', 'moisture', 'marshall', 'maximum-gravity', 'aggregate-gravity', 'gradation'].includes(domain),
     );
-    if (!isRice && !isAggregate && nearest !== 'maximum-gravity' && nearest !== 'aggregate-gravity')
-      return true;
+    const isOther = nearest === 'aggregate-gravity' || nearest === 'gradation';
+    const isGmm = nearest === 'maximum-gravity' && !beside.has('mass-saturated-surface-dry');
+    if (!isRice && !isAggregate && !isOther && !isGmm) return true;
     log.passOver(placeOf(each.index.sheet, each.cell), unreadReasons.rawData);
     return false;
   });

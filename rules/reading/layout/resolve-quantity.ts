@@ -7,7 +7,9 @@ export type FindQuantity = (id: string) => Quantity | undefined;
 
 /** Which of the quantities that the headings may mean is meant; several where nothing on the sheet decides. */
 export function resolveQuantities(candidate: Candidate, find: FindQuantity): Quantity[] {
-  const all = ofReclaimed(candidate).flatMap((id) => find(id) ?? []);
+  // A depth is a rut's only where the test is named.
+  if (/(?:^|· )depth\b[^·]*$/i.test(candidate.heading) && !candidate.domains.includes('hamburg')) return [];
+  const all = ofField(ofReclaimed(candidate), candidate).flatMap((id) => find(id) ?? []);
   if (all.length <= 1) return all;
   const bySubset = ofSubset(all, candidate);
   if (bySubset.length <= 1) return bySubset;
@@ -30,6 +32,28 @@ function ofReclaimed({ quantities, domains, at, heading }: Candidate): string[] 
     return id === 'maximum-specific-gravity' && !isShingle ? 'rap-maximum-specific-gravity' : id;
   });
 }
+
+const inPlace: Partial<Record<string, string>> = {
+  'specimen-thickness': 'lift-thickness',
+  'relative-density': 'field-density',
+  'air-voids': 'in-place-air-voids',
+};
+
+/** Cores are cut from the pavement: their density, voids and thickness are the layer's. */
+function ofField(quantities: string[], { domains, at }: Candidate): string[] {
+  const nearest = domains.find((domain) => domain === 'field' || testsOfSpecimens.has(domain));
+  if (nearest !== 'field' || at.gyrations !== undefined) return quantities;
+  return [...new Set(quantities.map((id) => inPlace[id] ?? id))];
+}
+
+const testsOfSpecimens: ReadonlySet<Domain> = new Set([
+  'moisture',
+  'marshall',
+  'cracking',
+  'hamburg',
+  'creep',
+  'modulus',
+]);
 
 function ofSubset(all: Quantity[], { subset, at }: Candidate): Quantity[] {
   const named = subset ?? (at.variant === 'dry' || at.variant === 'conditioned' ? at.variant : null);

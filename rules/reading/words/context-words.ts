@@ -54,6 +54,7 @@ export const domainsOfQuantity: Record<string, Domain[]> = {
   'rap-binder-content': ['recycled'],
   'rap-moisture': ['recycled'],
   'mix-moisture': ['mix', 'field'],
+  'low-temperature-tensile-strength': ['creep'],
   'maximum-density-mix': ['maximum-gravity'],
   'bulk-density-mix': ['mix', 'marshall'],
 };

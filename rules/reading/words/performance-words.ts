@@ -35,7 +35,7 @@ export const performanceWords: Record<string, string> = {
     Spaltzugfestigkeitsverhaltnis | Wasserempfindlichkeit ITSR | rapport de resistance | tenue a l'eau | sensibilite a l'eau ITSR`,
   'failure-load': `failure load | maximum load | peak load | max load | load | load at failure | breaking load | ultimate load | Bruchlast | Bruchkraft | Hochstlast | Hochstkraft | Maximalkraft | charge maximale | charge de rupture | force maximale | carga maxima | carga de rotura | carga de falla`,
   'degree-of-saturation': `saturation | degree of saturation | % saturation | saturation level | Sattigungsgrad | degre de saturation | taux de saturation | grado de saturacion | saturacion`,
-  'wheel-track-rut-depth': `rut depth | wheel track rut depth | Hamburg rut depth | HWT rut depth | HWTT rut depth | HWTD rut depth | maximum rut depth | rutting depth | rut | average rut depth | max rut depth | impression | final rut depth | Spurrinnentiefe | Spurrillentiefe | profondeur d'orniere |
+  'wheel-track-rut-depth': `depth | rut depth | wheel track rut depth | Hamburg rut depth | HWT rut depth | HWTT rut depth | HWTD rut depth | maximum rut depth | rutting depth | rut | average rut depth | max rut depth | impression | final rut depth | Spurrinnentiefe | Spurrillentiefe | profondeur d'orniere |
     orniere | profondeur d'ornierage | profundidad de ahuellamiento | ahuellamiento | profundidad de rodera | profundidad de huella | deformacion en pista`,
   'loaded-wheel-rut-depth': `APA rut depth | loaded wheel rut | APA rut | loaded wheel tester rut depth | asphalt pavement analyzer rut depth`,
   'stripping-inflection-point': `SIP | stripping inflection point | stripping inflection | inflection point | stripping point | punto de inflexion | punto de inflexion por desprendimiento | point d'inflexion | Stripping-Wendepunkt`,
@@ -71,7 +71,7 @@ export const performanceWords: Record<string, string> = {
   'rutting-strain-index': `RSI | rutting strain index`,
   'rutting-tolerance-index': `RT index | RTindex | IDEAL-RT | rutting tolerance index`,
   'high-temperature-tensile-strength': `HT-IDT | HT-IDT strength | high temperature IDT | high-temperature indirect tensile strength`,
-  'low-temperature-tensile-strength': `low temperature tensile strength | low-temperature tensile strength | IDT strength at low temperature`,
+  'low-temperature-tensile-strength': `tensile strength | indirect tensile strength | IDT strength | strength | ITS | low temperature tensile strength | low-temperature tensile strength | IDT strength at low temperature`,
   'poissons-ratio': `Poisson ratio | Poisson's ratio | Querdehnzahl | coefficient de Poisson | relacion de Poisson | coeficiente de Poisson`,
   permeability: `permeability | field permeability | laboratory permeability | permeabilidad | permeabilite`,
   'conditioning-time': `conditioning time | short-term aging time | oven aging time | aging time`,

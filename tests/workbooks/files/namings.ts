@@ -2,6 +2,17 @@ import type { Conditions, Reading } from '#rules/record';
 import type { StatedReading } from './stated-truth';
 
 const names = ['trial', 'specimen', 'blend'] as const;
+/** Which test specimens were made for is said beside their voids and masses, so that they are not the design's. */
+const madeFor = new Set([
+  'dry',
+  'conditioned',
+  'wheel tracking',
+  'loaded wheel',
+  'disk-shaped',
+  'cracking',
+  'modulus',
+  'creep',
+]);
 type Name = (typeof names)[number];
 
 /** How a reader calls the trials, specimens and blends of a workbook: one other name for each is no fault. */
@@ -19,7 +30,8 @@ export class Namings {
     const all = new Set([...Object.keys(wanted), ...Object.keys(taken)]) as Set<keyof Conditions>;
     return [...all].every((name) => {
       const [want, take] = [wanted[name], taken[name]];
-      if (want === undefined) return this.isSame(name, may[name], take);
+      if (want === undefined)
+        return this.isSame(name, may[name], take) || (name === 'variant' && madeFor.has(String(take)));
       return this.isSame(name, want, take);
     });
   }
