@@ -16,6 +16,7 @@ import { readTable } from './layout/read-table';
 import { settleCandidates } from './layout/settle-candidates';
 import { settleTold } from './layout/settle-told';
 import type { SheetContext } from './layout/sheet-context';
+import { trialsOfSheets } from './layout/sheet-trials';
 import { farConditions } from './layout/table-context';
 import { tellCorrections } from './layout/tell-corrections';
 import { tellMapping } from './layout/tell-mapping';
@@ -64,6 +65,7 @@ export function readAnyLayout({
   }
   const reading: ReadingContext = { grid, log: told.quieten(log) };
   const candidates: SheetContext['candidates'] = [];
+  const trials = trialsOfSheets(grid.sheets);
   let nextTable = 0;
   for (const index of indexes) {
     const name = labels.read(index.sheet.name.replace(/[_-]+/g, ' '));
@@ -79,6 +81,7 @@ export function readAnyLayout({
         ...sheetTemperature(index.sheet.name),
         ...farConditions(name),
         ...farConditions(dashed),
+        ...(trials.has(index.sheet.name) ? { trial: trials.get(index.sheet.name) } : {}),
       }),
       subset: name.subset,
       domains: [...name.domains, ...dashed.domains],

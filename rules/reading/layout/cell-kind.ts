@@ -27,7 +27,8 @@ function kindOfText(text: string): CellKind {
     /^(?:np|non-?plastic|k\.?\s?a\.?|n\.?\s?b\.?|s\.?\s?o\.?|n\/m|s\/d)$/i.test(plain)
   )
     return 'none';
-  if (plain.length > 40 || counted.test(plain)) return 'text';
+  if (plain.length > 40 || counted.test(plain) || /^%\s+(?:of|in|en|de|im|dans|du)\b/i.test(plain))
+    return 'text';
   if (
     !/^[A-Z]$/.test(plain) &&
     !/\d/.test(plain) &&

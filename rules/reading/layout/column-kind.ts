@@ -136,10 +136,20 @@ function isNameOnly(keys: KeyName[], sample: Cell[]): boolean {
   const named = keys
     .filter(isConditionKey)
     .every((key) => key === 'trial' || key === 'blend' || key === 'specimen' || key === 'stockpile');
+  if (keys.includes('specimen') && countsAgain(sample)) return false;
   const fractional = sample.filter(
     ({ kind, value }) => kind === 'number' && !Number.isInteger(Number(value)),
   );
   return named && (fractional.length * 3 > sample.length || sample.every(({ kind }) => kind === 'number'));
+}
+
+/** 1, 2, 3 and again 1, 2, 3: specimens are numbered so, and no result is. */
+function countsAgain(sample: Cell[]): boolean {
+  const figures = sample.filter(({ kind }) => kind === 'number').map(({ value }) => Number(value));
+  if (figures.length < 2 || figures[0] !== 1) return false;
+  return figures.every(
+    (figure, at) => at === 0 || figure === 1 || figure === (figures[at - 1] as number) + 1,
+  );
 }
 
 function setKey(result: TableColumn, keys: ConditionName[], sample: Cell[]): void {

@@ -1,6 +1,7 @@
 import type { Cell, SheetGrid } from '../cell-grid';
 import { cutColumns, cutRows, type Region } from './cut-regions';
 import { belongsToHeading, isHeadingRow } from './heading-rows';
+import { inheritNames } from './inherit-names';
 import { joinContinued } from './join-tables';
 import type { Surroundings, Table, TableRow } from './table';
 
@@ -20,7 +21,7 @@ export function findTables(sheet: SheetGrid, around: Surroundings): Table[] {
   const left = titles.map((cell) => ({ row: cell.row, cells: [cell] }));
   const last: Table[] =
     left.length === 0 ? [] : [{ titles: [], headings: [], rows: left, firstColumn: 1, lastColumn: 1 }];
-  return [...joinContinued(tables, around), ...last];
+  return [...inheritNames(joinContinued(tables, around), around), ...last];
 }
 
 function mergeStarts(sheet: SheetGrid): Map<string, number> {

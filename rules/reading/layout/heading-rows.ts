@@ -206,7 +206,7 @@ function isFigureHeading(
 ): boolean {
   const above = table.headings.at(-1);
   const [first] = row.cells;
-  if (!above || !first || !next || table.rows.length > 0 || table.headings.length > 2) return false;
+  if (!above || !first || table.rows.length > 0 || table.headings.length > 2) return false;
   const corner = first.column === table.firstColumn ? kinds.of(first) : 'none';
   if (corner === 'value' || (corner === 'text' && labels.read(first.text).quantities.length > 0))
     return false;
@@ -224,7 +224,7 @@ function isFigureHeading(
     const falls = cells.every(({ value }, at) => at === 0 || Number(value) < Number(cells[at - 1]?.value));
     return cells.length > 1 && (increases || falls) && saysFigures.test(head.text);
   });
-  return groups.size > 0 && isShared && next.cells.length >= row.cells.length - 1;
+  return groups.size > 0 && isShared && (next === undefined || next.cells.length >= row.cells.length - 1);
 }
 
 const saysFigures =

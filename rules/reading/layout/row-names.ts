@@ -1,6 +1,7 @@
 import { quantityById } from '../../quantities/registry';
 import type { Cell } from '../cell-grid';
 import type { ConditionName } from '../mapping';
+import { isPercent } from '../understand-number';
 import type { Surroundings } from './table';
 import { isConditionKey, type TableColumn } from './table-column';
 
@@ -56,15 +57,14 @@ export function nameShares(columns: Map<number, TableColumn>, below: Map<number,
   const all = [...columns.values()];
   if (!all.some(({ key }) => key === 'stockpile') || all.some(({ key }) => key === 'sieve')) return;
   for (const column of all) {
+    const cells = (below.get(column.column) ?? []).filter(({ kind }) => kind === 'number');
+    const isPercentage = cells.length > 1 && cells.every(({ format }) => isPercent(format));
     const isBare =
       column.kind === 'value' &&
       column.quantities.length === 0 &&
-      column.unit === '%' &&
-      column.name === null;
+      ((column.unit === '%' && column.name === null) || isPercentage);
     if (!isBare || column.heads.length === 0) continue;
-    const values = (below.get(column.column) ?? [])
-      .filter(({ kind }) => kind === 'number')
-      .map(({ value }) => Number(value));
+    const values = cells.map(({ value }) => Number(value) * (isPercentage ? 100 : 1));
     const sum = values.reduce((total, value) => total + value, 0);
     const last = values.at(-1) ?? 0;
     const isTotal = Math.abs(last - 100) < 0.05 && Math.abs(sum - 200) < 0.6;

@@ -2,6 +2,7 @@ import type { Cell } from '../cell-grid';
 import type { SheetIndex } from '../sheet-index';
 import { columnUnder, headingCells } from './column-heads';
 import { decideKind } from './column-kind';
+import { keepCorrected, takeTargets } from './rival-columns';
 import { keepTellingKeys, nameRows, nameShares } from './row-names';
 import type { Surroundings, Table } from './table';
 import type { TableColumn } from './table-column';
@@ -31,6 +32,8 @@ export function tableColumns(
     });
     columns.set(column, described);
   }
+  takeTargets(columns);
+  keepCorrected(columns);
   keepTellingKeys(columns, below);
   nameRows(columns, below, around);
   nameShares(columns, below);
