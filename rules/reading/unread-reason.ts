@@ -9,6 +9,7 @@ export const unreadReasons = {
   saidToBeNone: 'Said not to be a reading.',
   keyInDoubt: 'What it belongs to is in doubt; answer that cell first.',
   limit: 'A limit, target or tolerance, not a reading.',
+  otherBasis: 'The same result on another basis.',
   total: 'A total; it is recomputed.',
   difference: 'A difference between two results; it is recomputed.',
   identifier: 'A number that names or counts something.',

@@ -98,7 +98,7 @@ export function acceptedConditions(candidate: Candidate, quantity: Quantity): Co
   if (near.blend !== undefined && near.trial === undefined) delete at.trial;
   if (near.stockpile !== undefined) {
     delete at.trial;
-    delete at.blend;
+    if (near.blend === undefined) delete at.blend;
   }
   if (
     subsets.has(quantity.id) &&

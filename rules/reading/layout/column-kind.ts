@@ -2,6 +2,7 @@ import { sieveFromName } from '../../quantities/sieves';
 import type { Cell } from '../cell-grid';
 import type { ConditionName } from '../mapping';
 import type { DocumentPart, KeyName } from '../words/key-words';
+import { isMaterial } from './materials';
 import type { Surroundings } from './table';
 import { isConditionKey, type TableColumn } from './table-column';
 
@@ -83,7 +84,7 @@ export function decideKind(
     say.length > 0 &&
     say.length * 2 >= texts.length &&
     texts.length * 2 >= sample.length &&
-    !isNaming(keys)
+    (!isNaming(keys) || saysProperties(texts, labels))
   )
     result.kind = 'label';
   else if (keys.some(isConditionKey) && !(isBehindValues && isNameOnly(keys, sample)))
@@ -129,6 +130,14 @@ function isNaming(keys: KeyName[]): boolean {
   return (
     keys.some((key) => key === 'stockpile' || key === 'sieve' || key === 'time') && !keys.includes('quantity')
   );
+}
+
+/** Properties in every row under "Material": the heading speaks of the names beside it. */
+function saysProperties(texts: Cell[], labels: Contents['around']['labels']): boolean {
+  return texts.every(({ text }) => {
+    const { quantities, weak, unknown } = labels.read(text);
+    return quantities.length > 0 && !weak && unknown.length === 0 && !isMaterial(quantities);
+  });
 }
 
 /** "Mélange" or "Mix" over figures behind the first results heads results of the mix, and numbers no trials. */

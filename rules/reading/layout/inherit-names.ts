@@ -3,6 +3,8 @@ import { isMaterial } from './materials';
 import type { Surroundings, Table, TableRow } from './table';
 
 interface Names {
+  /** The row as it stands, and those of it that are names. */
+  all: Cell[];
   cells: Cell[];
   lastRow: number;
 }
@@ -17,12 +19,13 @@ export function inheritNames(tables: Table[], around: Surroundings): Table[] {
     const first = table.headings[0]?.row ?? table.rows[0]?.row ?? 0;
     const lastRow = Math.max(...[...table.headings, ...table.rows].map(({ row }) => row), 0);
     if (names && table.titles.length === 0 && takes(table, names, { first, around })) {
-      table.headings.unshift({ row: names.cells[0]?.row ?? 0, cells: names.cells });
+      const cells = table.headings.length > 0 ? names.all.slice(1) : names.all;
+      table.headings.unshift({ row: cells[0]?.row ?? 0, cells });
       names = { ...names, lastRow };
       continue;
     }
     const own = namesIn(table, around);
-    names = own.length > 1 ? { cells: own, lastRow } : null;
+    names = own && own.cells.length > 1 ? { ...own, lastRow } : null;
   }
   return tables;
 }
@@ -63,13 +66,14 @@ function hasValues(rows: TableRow[], columns: number[], { kinds }: Surroundings)
 }
 
 /** Words over columns that name neither a quantity nor a limit. */
-function namesIn({ headings }: Table, { kinds, labels }: Surroundings): Cell[] {
+function namesIn({ headings }: Table, { kinds, labels }: Surroundings): Pick<Names, 'all' | 'cells'> | null {
   const row = headings.findLast(({ cells }) => cells.length > 2);
-  if (!row) return [];
-  return row.cells.slice(1).filter((cell) => {
+  if (!row) return null;
+  const cells = row.cells.slice(1).filter((cell) => {
     if (kinds.of(cell) !== 'text') return false;
     const { quantities, role, raw, keys, attribute } = labels.read(cell.text);
     const isName = quantities.length === 0 || isMaterial(quantities);
     return isName && role === null && !raw && attribute === null && keys.length === 0;
   });
+  return { all: row.cells, cells };
 }

@@ -148,7 +148,7 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
     domains,
     subset: subsetIn(text),
     onAggregate:
-      /\b(?:mass|weight|wt\.?) of (?:dry )?agg|% (?:of )?agg(?:regate)?s?\b|s\/a\b|sobre (?:[áa]ridos|agregados?)|ext[ée]rieure?|des granulats|bezogen auf (?:das )?gestein|by dry aggregate/i.test(
+      /\b(?:mass|weight|wt\.?) of (?:dry )?agg|% (?:of )?agg(?:regate)?s?\b|s\/a\b|s\/\s?[áa]r|s\/agr|sobre (?:los )?(?:[áa]ridos|agregados?)|ext[ée]rieure?|des granulats|bezogen auf (?:das )?gestein|by dry aggregate/i.test(
         text,
       ),
     onMix:
@@ -188,6 +188,10 @@ function understand(text: string, vocabulary: Vocabulary): LabelMeaning {
   if (numbered !== null) {
     meaning.at = { ...meaning.at, specimen: numbered };
     meaning.unknown = [];
+  }
+  if (meaning.role === 'limit' && isTargetOfBlend(text)) {
+    meaning.role = null;
+    meaning.at = { trial: 'design', ...meaning.at };
   }
   if (meaning.percent && meaning.unit === null) meaning.unit = '%';
   if (
@@ -263,6 +267,15 @@ function addSymbol(meaning: LabelMeaning, tokens: string[]): void {
   meaning.role = null;
   if (found.means.kind === 'quantity') meaning.quantities = [found.means.name];
   else addSense(meaning, found.means, { isWhole: true });
+}
+
+/** "Gemisch (Soll)", "Target blend": what the proposed mix is made to, and no limit. */
+function isTargetOfBlend(text: string): boolean {
+  return (
+    /\b(?:soll|target|ziel|objetivo|vis[ée]e?)\b/i.test(text) &&
+    /gemisch|blend|combined|\bmix\b|mischung|mezcla|m[ée]lange|gradation|sieblinie/i.test(text) &&
+    !/grenz|\bmin|\bmax|tol|limit|range|band|bereich/i.test(text)
+  );
 }
 
 /** "Height 2" and "Strain 3" number the specimen behind the name; "Nini (8)" states a number of gyrations. */

@@ -19,6 +19,8 @@ import { trialsByBinder } from './trials-by-binder';
 /** Reads one table: the keys of its rows and columns, then each value under what they say. */
 export function readTable(table: Table, sheet: SheetContext): void {
   const context = tableContext(table, sheet);
+  // The first title of a sheet speaks, last of all, for what stands further down.
+  if (sheet.domains.length === 0) sheet.domains.push(...context.titles.flatMap(({ domains }) => domains));
   tellColumns(context);
   for (const cell of table.titles) {
     mark(context, cell, 'A title.');

@@ -31,6 +31,7 @@ export function freeFromSpecimen(assigned: Assigned[]): void {
     known.add(each.conditions.specimen);
     specimens.set(each.table, known);
   }
+  freeRepeated(assigned);
   for (const each of assigned) {
     const [quantity] = each.choices;
     if (!quantity || each.conditions.specimen === undefined || each.specimenOfRow) continue;
@@ -41,6 +42,43 @@ export function freeFromSpecimen(assigned: Assigned[]): void {
     if (!isMerged && !(isShared && isAlone)) continue;
     const { specimen: _, ...rest } = each.conditions;
     each.conditions = rest;
+  }
+}
+
+const ofTheMix = new Set(['maximum-specific-gravity', 'maximum-density-mix', 'binder-content']);
+
+/**
+ * In rows of specimens a property of the mix stands once a trial, beside the first, or is repeated in every row: it is
+ * the trial's and none of its specimens'.
+ */
+function freeRepeated(assigned: Assigned[]): void {
+  const specimens = new Map<string, Set<string>>();
+  const groups = new Map<string, Assigned[]>();
+  for (const each of assigned) {
+    const [quantity] = each.choices;
+    const { specimen, gyrations: _, ...rest } = each.conditions;
+    if (!quantity || specimen === undefined || !each.specimenOfRow || each.choices.length > 1) continue;
+    const trial = `${each.table}|${rest.trial ?? ''}|${rest.blend ?? ''}`;
+    if (!ofTheMix.has(quantity.id)) {
+      if (
+        quantity.subject === 'specimen' ||
+        quantity.id.startsWith('bulk-') ||
+        quantity.id.startsWith('mass-')
+      )
+        specimens.set(trial, (specimens.get(trial) ?? new Set()).add(specimen));
+      continue;
+    }
+    const key = `${trial}|${quantity.id}`;
+    groups.set(key, [...(groups.get(key) ?? []), each]);
+  }
+  for (const [key, group] of groups) {
+    const tested = specimens.get(key.slice(0, key.lastIndexOf('|')))?.size ?? 0;
+    const isSame = new Set(group.map(({ cell }) => cell.value)).size === 1;
+    if (tested < 2 || !isSame || (group.length > 1 && group.length < tested)) continue;
+    for (const each of group) {
+      const { specimen: _, ...rest } = each.conditions;
+      each.conditions = rest;
+    }
   }
 }
 

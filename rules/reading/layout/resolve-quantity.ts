@@ -7,8 +7,14 @@ export type FindQuantity = (id: string) => Quantity | undefined;
 
 /** Which of the quantities that the headings may mean is meant; several where nothing on the sheet decides. */
 export function resolveQuantities(candidate: Candidate, find: FindQuantity): Quantity[] {
-  // A depth is a rut's only where the test is named.
+  // A depth is a rut's and a deformation a flow only where the test is named.
   if (/(?:^|· )depth\b[^·]*$/i.test(candidate.heading) && !candidate.domains.includes('hamburg')) return [];
+  if (
+    /(?:^|· )d[ée]formaci?[oó]n\b[^·]*$/i.test(candidate.heading) &&
+    candidate.quantities.includes('marshall-flow') &&
+    !candidate.domains.includes('marshall')
+  )
+    return [];
   const all = ofField(ofReclaimed(candidate), candidate).flatMap((id) => find(id) ?? []);
   if (all.length <= 1) return all;
   const bySubset = ofSubset(all, candidate);

@@ -4,6 +4,7 @@ import type { Assigned, SettleOptions } from './assigned';
 import type { Candidate, ToldReading } from './candidate';
 import { decideGradations } from './decide-gradations';
 import { emit } from './emit-candidate';
+import { withoutOtherBasis } from './other-basis';
 import { withoutOtherMasses } from './other-masses';
 import { freeFromSpecimen, numberReplicates, withoutAverages } from './replicates';
 import { type FindQuantity, resolveQuantities } from './resolve-quantity';
@@ -21,7 +22,10 @@ export function settleCandidates(candidates: Candidate[], options: SettleOptions
     return { ...candidate, choices, conditions: first ? acceptedConditions(candidate, first) : {} };
   });
   decideGradations(assigned, options.find);
-  const kept = withoutAverages(withoutOtherMasses(assigned, options.log), options.log);
+  const kept = withoutAverages(
+    withoutOtherBasis(withoutOtherMasses(assigned, options.log), options.log),
+    options.log,
+  );
   numberReplicates(kept);
   freeFromSpecimen(kept);
   const suspected = suspicions(kept, options);

@@ -44,7 +44,7 @@ export type Role = 'average' | 'spread' | 'limit' | 'total' | 'difference' | 're
 
 export const roleWords: Record<Role, string> = {
   average: `average | avg | mean | average value | mean value | Mittel | Mittelwert | MW | moyenne | moy | promedio | media | prom | x-bar | xbar | Durchschnitt | ave | average of specimens | valor medio | valeur moyenne`,
-  spread: `std dev | standard deviation | stdev | st dev | std | s.d. | sd | cov | c.v. | cv | coefficient of variation | variance | range | spread | minimum value | maximum value | count | sample size | Standardabweichung | Stabw | Spannweite |
+  spread: `PWL | percent within limits | quality index | quality level | pay factor | std dev | standard deviation | stdev | st dev | std | s.d. | sd | cov | c.v. | cv | coefficient of variation | variance | range | spread | minimum value | maximum value | count | sample size | Standardabweichung | Stabw | Spannweite |
     Variationskoeffizient | ecart type | ecart-type | etendue | coefficient de variation | desviacion estandar | desviacion tipica | desv est | desv | rango | coeficiente de variacion | std deviation`,
   limit: `min | max | minimum | maximum | spec | specs | specification | specification limits | spec limits | spec limit | limit | limits | lower limit | upper limit | lower | upper | requirement | requirements | required | criteria | criterion | control points | control point |
     tolerance | allowable | acceptance | lower control | upper control | spec min | spec max | min spec | max spec | LSL | USL | restricted zone | target | target value | target range | contract requirement | agency limit | lo | hi | low | high | band | spec range |
