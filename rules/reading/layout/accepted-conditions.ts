@@ -87,6 +87,15 @@ const ofSpecimensAlone = new Set([
   'bulk-density-mix',
   'specimen-absorption',
 ]);
+/** Tests of the binder that are made before and after it is aged. */
+const agedTests = new Set([
+  'rutting-parameter',
+  'fatigue-parameter',
+  'creep-stiffness',
+  'creep-rate',
+  'non-recoverable-compliance',
+  'percent-recovery',
+]);
 const strengths = new Set(['tensile-strength-dry', 'tensile-strength-conditioned']);
 
 /** The conditions that a reading of this quantity is told apart by, out of all that the layout states around it. */
@@ -146,6 +155,8 @@ function keep(at: Conditions, isKept: (name: keyof Conditions) => boolean): Cond
 function accepts(quantity: Quantity, name: keyof Conditions): boolean {
   const { id, conditions, subject } = quantity;
   switch (name) {
+    case 'aging':
+      return subject !== 'binder' || agedTests.has(id);
     case 'sieve':
       return gradation.has(id);
     case 'stockpile':

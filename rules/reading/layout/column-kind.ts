@@ -134,10 +134,13 @@ function isNaming(keys: KeyName[]): boolean {
 
 /** Properties in every row under "Material": the heading speaks of the names beside it. */
 function saysProperties(texts: Cell[], labels: Contents['around']['labels']): boolean {
-  return texts.every(({ text }) => {
-    const { quantities, weak, unknown } = labels.read(text);
-    return quantities.length > 0 && !weak && unknown.length === 0 && !isMaterial(quantities);
-  });
+  const meanings = texts.map(({ text }) => labels.read(text));
+  const properties = meanings.filter(
+    ({ quantities, weak, unknown }) =>
+      quantities.length > 0 && !weak && unknown.length === 0 && !isMaterial(quantities),
+  );
+  const isEach = meanings.every(({ quantities }) => quantities.length > 0 && !isMaterial(quantities));
+  return isEach && properties.length * 2 > meanings.length;
 }
 
 /** "Mélange" or "Mix" over figures behind the first results heads results of the mix, and numbers no trials. */

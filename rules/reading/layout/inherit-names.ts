@@ -24,6 +24,10 @@ export function inheritNames(tables: Table[], around: Surroundings): Table[] {
       names = { ...names, lastRow };
       continue;
     }
+    if (names && table.headings.length === 0 && table.titles.length === 0 && first - names.lastRow <= 3) {
+      names = { ...names, lastRow };
+      continue;
+    }
     const own = namesIn(table, around);
     names = own && own.cells.length > 1 ? { ...own, lastRow } : null;
   }
@@ -71,9 +75,10 @@ function namesIn({ headings }: Table, { kinds, labels }: Surroundings): Pick<Nam
   if (!row) return null;
   const cells = row.cells.slice(1).filter((cell) => {
     if (kinds.of(cell) !== 'text') return false;
-    const { quantities, role, raw, keys, attribute } = labels.read(cell.text);
+    const { quantities, role, raw, keys, attribute, at } = labels.read(cell.text);
     const isName = quantities.length === 0 || isMaterial(quantities);
-    return isName && role === null && !raw && attribute === null && keys.length === 0;
+    const isKey = keys.length > 0 && Object.keys(at).length === 0;
+    return isName && role === null && !raw && attribute === null && !isKey;
   });
   return { all: row.cells, cells };
 }

@@ -382,8 +382,12 @@ function recycledOf(ids: string[]): string[] {
   return [];
 }
 
+const binders = wordsOf('ac ca asphalt bitumen binder liant ligante asfalto bindemittel');
+
 function isWeak({ from, to }: PhraseMatch, tokens: string[]): boolean {
   const words = tokens.slice(from, to).filter((token) => token !== '%');
+  // "% AC" is a content and not the binder itself.
+  if (words.length < to - from && binders.has(words[0] as string)) return false;
   return words.length === 1 && weakWords.has(words[0] as string);
 }
 

@@ -22,7 +22,12 @@ export function quantitiesOf(
     ({ key, at }) => key === 'sieve' || at.sieve !== undefined,
   );
   const over = [group.meaning, ...context.titles.toReversed()].find(
-    (meaning) => meaning && meaning.quantities.length > 0 && !isMaterial(meaning.quantities),
+    (meaning) =>
+      meaning &&
+      meaning.quantities.length > 0 &&
+      !isMaterial(meaning.quantities) &&
+      // A common word over a row that has a name of its own does not say what the row is.
+      !(meaning.weak && labels.some(({ words }) => words > 0)),
   );
   if (hasSieve) {
     const told = over?.quantities.filter((id) => gradation.includes(id)) ?? [];

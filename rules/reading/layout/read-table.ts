@@ -88,7 +88,10 @@ function groupOf(meaning: LabelMeaning, before: Group): Group {
   const saysNothing =
     Object.keys(meaning.at).length === 0 && meaning.quantities.length === 0 && meaning.subset === null;
   if (saysNothing && meaning.unknown.length > 2) return before;
-  return { at: farConditions(meaning), meaning, subset: meaning.subset };
+  const aged = /^\W*(?:on\s+)?(original|unaged|RTFO|PAV)T?\b/i.exec(meaning.text)?.[1];
+  const aging =
+    aged === undefined ? {} : { aging: /^[a-z]{5,}$/i.test(aged) ? aged.toLowerCase() : aged.toUpperCase() };
+  return { at: { ...farConditions(meaning), ...aging }, meaning, subset: meaning.subset };
 }
 
 function markHeading(context: TableContext, cell: Cell): void {

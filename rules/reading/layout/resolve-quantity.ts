@@ -15,6 +15,10 @@ export function resolveQuantities(candidate: Candidate, find: FindQuantity): Qua
     !candidate.domains.includes('marshall')
   )
     return [];
+  // So is a bare specific gravity the binder's only among the binder's tests.
+  if (isBareGravity(candidate)) {
+    return candidate.domains[0] === 'binder' ? candidate.quantities.flatMap((id) => find(id) ?? []) : [];
+  }
   const all = ofField(ofReclaimed(candidate), candidate).flatMap((id) => find(id) ?? []);
   if (all.length <= 1) return all;
   const bySubset = ofSubset(all, candidate);
@@ -39,17 +43,28 @@ function ofReclaimed({ quantities, domains, at, heading }: Candidate): string[] 
   });
 }
 
-const inPlace: Partial<Record<string, string>> = {
-  'specimen-thickness': 'lift-thickness',
-  'relative-density': 'field-density',
-  'air-voids': 'in-place-air-voids',
+function isBareGravity({ quantities, heading }: Candidate): boolean {
+  return (
+    quantities.length === 1 &&
+    quantities[0] === 'binder-specific-gravity' &&
+    !/binder|bitum|asphalt|\bgb\b|\bac\b|liant|ligante|bet[uú]n|asfalto|bindemittel|\bc\.?a\.?\b/i.test(
+      heading,
+    )
+  );
+}
+
+const inPlace: Partial<Record<string, string[]>> = {
+  // A core may be cut to less than the layer: which of the two is meant is for a person to say.
+  'specimen-thickness': ['specimen-thickness', 'lift-thickness'],
+  'relative-density': ['field-density'],
+  'air-voids': ['in-place-air-voids'],
 };
 
 /** Cores are cut from the pavement: their density, voids and thickness are the layer's. */
 function ofField(quantities: string[], { domains, at }: Candidate): string[] {
   const nearest = domains.find((domain) => domain === 'field' || testsOfSpecimens.has(domain));
   if (nearest !== 'field' || at.gyrations !== undefined) return quantities;
-  return [...new Set(quantities.map((id) => inPlace[id] ?? id))];
+  return [...new Set(quantities.flatMap((id) => inPlace[id] ?? [id]))];
 }
 
 const testsOfSpecimens: ReadonlySet<Domain> = new Set([

@@ -11,6 +11,7 @@ export function rowLabels(row: TableRow, context: TableContext, outer: LabelledR
     found.push({ column: cell.column, meaning: labels.read(cell.text) });
     context.reading.log.use(placeOf(index.sheet, cell), 'label', 'A label.');
   }
+  if (found.length === 0) found.push(...mergedLabels(row, context));
   const [first] = found;
   const labelColumns = [...columns.values()]
     .filter(({ kind }) => kind === 'label')
@@ -40,4 +41,13 @@ export interface LabelledRow {
   labelsAt: (column: number) => LabelMeaning[];
   outer: { label: LabelMeaning; column: number } | null;
   documents: boolean;
+}
+
+/** A label that is merged over several rows speaks for each of them. */
+function mergedLabels(row: TableRow, { columns, kinds, labels, index }: TableContext) {
+  return [...columns.values()].flatMap(({ kind, column }) => {
+    const cell = kind === 'label' ? index.cellAt(row.row, column) : null;
+    const isMerged = cell !== null && cell.row < row.row && kinds.of(cell) === 'text';
+    return isMerged ? [{ column, meaning: labels.read(cell.text) }] : [];
+  });
 }

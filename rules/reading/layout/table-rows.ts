@@ -60,7 +60,10 @@ export class RowKeys {
     const cell = index.cellAt(row.row, column.column);
     if (!cell || kinds.of(cell) === 'none') {
       const before = this.last.get(column.column);
-      if (before && fillsDown.has(key)) facts.at = { ...before, ...facts.at };
+      if (before && fillsDown.has(key)) {
+        facts.at = { ...before, ...facts.at };
+        if (before.variant === 'dry' || before.variant === 'conditioned') facts.subset = before.variant;
+      }
       return;
     }
     const place = placeOf(index.sheet, cell);
