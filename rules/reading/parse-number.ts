@@ -37,8 +37,7 @@ export function parseNumberText(text: string, decimal: '.' | ','): ParseOutcome 
     );
   if (!match) return { state: 'text' };
   const body = (match[2] as string).trim().replace(/[.,]$/, '');
-  // A mark for a note at the foot says nothing against the figure.
-  let rest = (match[3] as string).trim().replace(/^\s*(?:\*{1,3}|[†‡])$/, '');
+  let rest = (match[3] as string).trim();
   let qualifier = qualifierOf(match[1]);
   if (rest === '+' && !qualifier) {
     qualifier = '>';

@@ -259,7 +259,9 @@ const symbols: { symbol: RegExp; unit: RegExp; means: Sense }[] = [
 function addSymbol(meaning: LabelMeaning, tokens: string[]): void {
   const [only, ...more] = tokens;
   const { unit } = meaning;
-  if (only === undefined || more.length > 0 || unit === null || meaning.quantities.length > 0) return;
+  if (only === undefined || more.length > 0 || unit === null) return;
+  // "Deformación" is a flow in mm and a strain in µε.
+  if (meaning.quantities.some((id) => id !== 'marshall-flow')) return;
   const found = symbols.find((each) => each.symbol.test(only) && each.unit.test(unit));
   if (!found) return;
   meaning.unknown = [];
