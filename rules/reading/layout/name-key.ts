@@ -32,7 +32,10 @@ export function nameKeyOf({
   });
   if (named && !(cornerKeys.includes('quantity') && rowSays.length > 0 && named === 'specimen')) return named;
   const ofTitles = titles
-    .flatMap(({ keys, quantities }) => (quantities.length === 0 ? keys : []))
+    .flatMap(({ keys, quantities, at }) =>
+      // "Test temperature -10 °C" says it itself, and asks the heads for nothing.
+      quantities.length === 0 ? keys.filter((key) => !(key in at)) : [],
+    )
     .find(isConditionKey);
   if (ofTitles && ofTitles !== 'sieve') return ofTitles;
   const upper = values.some(

@@ -77,11 +77,21 @@ export function nameShares(columns: Map<number, TableColumn>, below: Map<number,
  * more rows apart is the key; the other tells more of the same rows.
  */
 export function keepTellingKeys(columns: Map<number, TableColumn>, below: Map<number, Cell[]>): void {
+  const all = [...columns.values()];
+  const hasBinder = all.some(
+    ({ kind, quantities }) => kind === 'value' && quantities.includes('binder-content'),
+  );
   const kept = new Map<ConditionName, TableColumn>();
   const distinct = ({ column }: TableColumn) =>
     new Set((below.get(column) ?? []).map(({ text }) => text)).size;
   for (const column of columns.values()) {
     if (column.kind !== 'key' || column.key === null || column.key === 'sieve') continue;
+    // One mix in every row tells no trials apart; its binder contents do.
+    const rows = below.get(column.column)?.length ?? 0;
+    if (column.key === 'trial' && hasBinder && rows > 3 && distinct(column) === 1) {
+      column.kind = 'aside';
+      continue;
+    }
     const before = kept.get(column.key);
     if (before && distinct(column) <= distinct(before)) column.kind = 'aside';
     else {
