@@ -25,7 +25,7 @@ export function aSession(overrides: Partial<Session> = {}): Session {
       manageProjects: false,
       manageOrganisation: false,
       confirmSections: false,
-    writeRules: false,
+      writeRules: false,
       seeCaughtMail: false,
     },
     ...overrides,

@@ -39,7 +39,10 @@ test('a rule is written with its table, reviewed by a second author and publishe
 
   const work = counted(author);
   await work.click(author.getByRole('button', { name: 'Add a table' }));
-  await work.fill(author.getByRole('textbox', { name: 'Title' }), 'Table 412-20 (sand equivalent by traffic)');
+  await work.fill(
+    author.getByRole('textbox', { name: 'Title' }),
+    'Table 412-20 (sand equivalent by traffic)',
+  );
   await work.fill(author.getByRole('textbox', { name: 'Looked up by' }), 'designTraffic');
   await work.click(author.getByRole('button', { name: 'Paste from a spreadsheet' }));
   await work.fill(author.getByRole('textbox', { name: /Rows from a spreadsheet/ }), printed);
@@ -55,7 +58,9 @@ test('a rule is written with its table, reviewed by a second author and publishe
   await work.click(author.getByRole('option', { name: /sand equivalent/ }).first());
   await work.choose('at least: where it is', 'from a table');
   await work.choose('at least: table', /Table 412-20/);
-  await expect(author.getByText(/Sand equivalent .*is at least the value in Table 412-20/).first()).toBeVisible();
+  await expect(
+    author.getByText(/Sand equivalent .*is at least the value in Table 412-20/).first(),
+  ).toBeVisible();
   await expect(author.getByRole('button', { name: 'at least: column' })).toHaveText(/min/);
   expect(work.count()).toBeLessThan(40);
   await expect(author.getByText(/^saved/).first()).toBeVisible();
@@ -73,7 +78,9 @@ test('a rule is written with its table, reviewed by a second author and publishe
 
   await author.goto(draftUrl);
   await author.getByRole('link', { name: 'Compare with 2026' }).click();
-  await expect(author.getByRole('heading', { name: /412\.02\(n\) Sand equivalent by traffic/ })).toBeVisible();
+  await expect(
+    author.getByRole('heading', { name: /412\.02\(n\) Sand equivalent by traffic/ }),
+  ).toBeVisible();
   await expectAccessible(author);
   await author.goto(draftUrl);
   await author.getByRole('button', { name: 'Send for review' }).click();
@@ -83,8 +90,12 @@ test('a rule is written with its table, reviewed by a second author and publishe
   await second.goto(draftUrl);
   await second.getByRole('checkbox', { name: /Sand equivalent by traffic says/ }).press('Space');
   await expect(second.getByText('1 of 56 rules verified')).toBeVisible();
-  await expect(second.getByRole('textbox', { name: 'Why with its warnings' })).toBeVisible({ timeout: 120_000 });
-  await second.getByRole('textbox', { name: 'Why with its warnings' }).fill('Held against the printed table.');
+  await expect(second.getByRole('textbox', { name: 'Why with its warnings' })).toBeVisible({
+    timeout: 120_000,
+  });
+  await second
+    .getByRole('textbox', { name: 'Why with its warnings' })
+    .fill('Held against the printed table.');
   await expectAccessible(second);
   await second.getByRole('button', { name: 'Publish' }).click();
   await second.waitForURL(new RegExp(`/rule-sets/cvra-412/${edition}$`), { timeout: 60_000 });
