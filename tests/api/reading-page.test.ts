@@ -292,17 +292,17 @@ describe('a sheet', () => {
     const doubt = doubts.find(({ text }) => text === '4721,5');
     if (!doubt) throw new Error('no decimal comma');
     const { sheet, cell, text } = doubt;
-    const useOf = async (person: Browser) => {
+    const usedAs = async (person: Browser) => {
       const { body } = await person.get(`${pathOf(draft)}/sheet?sheet=${sheet}`).expect(200);
       return body.uses.find((use: { cell: string }) => use.cell === cell)?.use;
     };
-    expect(await useOf(dele)).toBe('doubt');
+    expect(await usedAs(dele)).toBe('doubt');
     await dele
       .put(`${pathOf(draft)}/answers`)
       .set('If-Match', `"${version}"`)
       .send({ answers: [{ sheet, cell, text, answer: doubt.alternatives[0]?.answer }] })
       .expect(200);
-    expect(await useOf(dele)).toBe('read');
+    expect(await usedAs(dele)).toBe('read');
     const stranger = await world.as('Bram Ostler');
     expect((await stranger.get(`${pathOf(draft)}/sheet?sheet=${sheet}`)).status).toBe(404);
   }, 60_000);
