@@ -8,12 +8,19 @@ import Stryker from '@stryker-mutator/core';
  * directory with its name, some files with `--mutate GLOB`, unchanged results kept with `--incremental`.
  */
 const PARTS = {
-  numerics: ['tests/rules/numerics/**/*.test.ts', 'tests/reference/**/*.test.ts'],
-  calculations: ['tests/rules/{numerics,calculations}/**/*.test.ts', 'tests/reference/**/*.test.ts'],
+  numerics: [
+    'tests/rules/numerics/**/*.test.ts',
+    'tests/reference/{rounding,statistics,two-samples}.test.ts',
+  ],
+  calculations: [
+    'tests/rules/calculations/**/*.test.ts',
+    'tests/reference/{creep-compliance,design-point-and-strength,in-place-density,volumetrics}.test.ts',
+    'tests/reference/gradation.test.ts',
+  ],
   engine: [
     'tests/rules/{engine,consistency}/**/*.test.ts',
     'tests/cases/**/*.test.ts',
-    'tests/reference/**/*.test.ts',
+    'tests/reference/{gradation,room-to-move,shipped-rules}.test.ts',
     'tests/second-evaluator/settled-disagreements.test.ts',
   ],
 };
@@ -57,7 +64,7 @@ function optionsFor(part: Part): PartialStrykerOptions {
     incrementalFile: `.data/mutation/${part}-incremental.json`,
     // The compiler of this project has no interface that Stryker could read its settings with.
     tsconfigFile: 'none',
-    tempDirName: '.data/mutation/sandbox',
+    tempDirName: `.data/mutation/${part}`,
     ignorePatterns: ['/*', '!/package.json', '!/rules', '!/shared', '!/tests', '/tests/{api,e2e,server,web}'],
     reporters: ['progress-append-only', 'clear-text', 'json'],
     jsonReporter: { fileName: `.data/mutation/${part}.json` },

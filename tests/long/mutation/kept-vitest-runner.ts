@@ -60,7 +60,7 @@ class KeptVitestRunner implements TestRunner {
   }
 
   async mutantRun(options: MutantRunOptions): Promise<MutantRunResult> {
-    const hitLimit = options.hitLimit && options.hitLimit / 10;
+    const hitLimit = options.hitLimit && options.hitLimit / 20;
     const c0 = process.cpuUsage();
     const t0 = Date.now();
     const result = await this.#vitest.mutantRun({ ...options, hitLimit, mutantActivation: 'static' });
