@@ -29,7 +29,7 @@ const LEAST_SCORE = 90;
 
 const { values, positionals } = parseArgs({
   options: {
-    mutate: { type: 'string' },
+    mutate: { type: 'string', multiple: true },
     concurrency: { type: 'string', default: '2' },
     incremental: { type: 'boolean', default: false },
   },
@@ -52,7 +52,7 @@ console.log(`\n${summaries.join('\n')}`);
 function optionsFor(part: Part): PartialStrykerOptions {
   const loader = ['--import', 'tsx'];
   return {
-    mutate: values.mutate?.split(',') ?? [`rules/${part}/**/*.ts`],
+    mutate: values.mutate ?? [`rules/${part}/**/*.ts`],
     testRunner: 'kept-vitest',
     plugins: [fileURLToPath(new URL('./mutation/kept-vitest-runner.ts', import.meta.url))],
     testRunnerNodeArgs: loader,

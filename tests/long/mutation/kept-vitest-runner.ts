@@ -60,14 +60,8 @@ class KeptVitestRunner implements TestRunner {
   }
 
   async mutantRun(options: MutantRunOptions): Promise<MutantRunResult> {
-    const hitLimit = options.hitLimit && options.hitLimit / 20;
-    const c0 = process.cpuUsage();
-    const t0 = Date.now();
+    const hitLimit = options.hitLimit && Math.max(LEAST_HIT_LIMIT, options.hitLimit / HIT_LIMIT_SHARE);
     const result = await this.#vitest.mutantRun({ ...options, hitLimit, mutantActivation: 'static' });
-    const c = process.cpuUsage(c0);
-    this.#log.info(
-      `RUN cpu ${Math.round((c.user + c.system) / 1000)} wall ${Date.now() - t0} files ${new Set(options.testFilter?.map((i) => i.split('#')[0])).size} ran ${this.#vitest.ctx.state.getFiles().length} ${result.status} ${options.activeMutant.fileName.split('/').at(-1)}:${options.activeMutant.location.start.line} ${options.activeMutant.mutatorName} ${'reason' in result ? result.reason : ''}${'errorMessage' in result ? result.errorMessage : ''}`,
-    );
     if (result.status !== MutantRunStatus.Survived) return result;
     // A file that cannot be loaded under the mutant has no tests that could fail.
     const broken = this.#vitest.ctx.state.getFiles().find((file) => file.result?.state === 'fail');
@@ -85,6 +79,10 @@ class KeptVitestRunner implements TestRunner {
     await endKeptThread();
   }
 }
+
+/** Stryker lets a mutant be reached a hundred times as often as the code was before it ends it: here it is five times. */
+const HIT_LIMIT_SHARE = 20;
+const LEAST_HIT_LIMIT = 1000;
 
 function createRunner(injector: Injector<PluginContext>, log: Logger): KeptVitestRunner {
   const plugin = vitestPlugins[0];

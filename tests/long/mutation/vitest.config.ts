@@ -6,7 +6,10 @@ export default defineConfig({
   root: new URL('../../..', import.meta.url).pathname,
   test: {
     include: (process.env.MUTATION_TESTS ?? 'tests/rules/**/*.test.ts').split(','),
-    setupFiles: ['tests/long/mutation/fresh-counts.ts', 'tests/setup/fail-on-console.ts'],
+    setupFiles: ['tests/long/mutation/before-each-file.ts', 'tests/setup/fail-on-console.ts'],
+    // A slow machine must not pass for a caught mutant; what never ends is Stryker's to stop.
+    testTimeout: 600_000,
+    hookTimeout: 600_000,
     sequence: { sequencer: LikeliestFirst },
   },
 });
