@@ -42,7 +42,7 @@ if (unknown.length > 0)
 
 const summaries: string[] = [];
 for (const part of known.filter((each) => positionals.length === 0 || positionals.includes(each))) {
-  process.env.MUTATION_TESTS = PARTS[part].join(',');
+  process.env.MUTATION_TESTS = JSON.stringify(PARTS[part]);
   const begun = Date.now();
   const results = await new Stryker(optionsFor(part)).runMutationTest();
   summaries.push(summary(part, results, Math.round((Date.now() - begun) / 1000)));

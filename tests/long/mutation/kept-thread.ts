@@ -1,10 +1,10 @@
 import type { PoolOptions, PoolWorker, WorkerRequest } from 'vitest/node';
 import { ThreadsPoolWorker } from 'vitest/node';
 
-/** Every run leaves a listener in the thread, so it is renewed before they add up. */
-const RUNS_OF_A_THREAD = 100;
+/** Every task leaves a listener in the thread, so it is renewed before they add up. */
+const TASKS_OF_A_THREAD = 100;
 
-let shared: { thread: ThreadsPoolWorker; runs: number } | undefined;
+let shared: { thread: ThreadsPoolWorker; tasks: number } | undefined;
 
 /**
  * A worker thread that outlives its task. Vitest forgets all modules of ours before each test file and so evaluates
@@ -14,38 +14,40 @@ export class KeptThread implements PoolWorker {
   readonly name = KEPT_THREAD;
   readonly #options: PoolOptions;
   readonly #listeners: { event: string; callback: (argument: unknown) => void }[] = [];
+  #thread: ThreadsPoolWorker | undefined;
 
   constructor(options: PoolOptions) {
     this.#options = options;
   }
 
+  /** The pool starts one worker at a time, the next one once the task of the last is over, if not yet its stop. */
+  async start(): Promise<void> {
+    if (shared && shared.tasks >= TASKS_OF_A_THREAD) await endKeptThread();
+    shared ??= await newThread(this.#options);
+    shared.tasks += 1;
+    this.#thread = shared.thread;
+  }
+
+  async stop(): Promise<void> {
+    for (const { event, callback } of this.#listeners) this.off(event, callback);
+  }
+
   on(event: string, callback: (argument: unknown) => void): void {
     this.#listeners.push({ event, callback });
-    running().thread.on(event, callback);
+    this.#thread?.on(event, callback);
   }
 
   off(event: string, callback: (argument: unknown) => void): void {
-    shared?.thread.off(event, callback);
+    if (this.#thread === shared?.thread) this.#thread?.off(event, callback);
   }
 
   send(message: WorkerRequest): void {
-    if (message.type !== 'stop') running().thread.send(message);
+    if (message.type !== 'stop') this.#thread?.send(message);
     else this.#answer({ __vitest_worker_response__: true, type: 'stopped' });
   }
 
   deserialize(data: unknown): unknown {
     return data;
-  }
-
-  async start(): Promise<void> {
-    if (shared) return;
-    shared = { thread: new ThreadsPoolWorker(this.#options), runs: 0 };
-    await shared.thread.start();
-  }
-
-  async stop(): Promise<void> {
-    for (const { event, callback } of this.#listeners) shared?.thread.off(event, callback);
-    if (shared && ++shared.runs >= RUNS_OF_A_THREAD) await endKeptThread();
   }
 
   /** A thread that is told to stop hears nothing afterwards, so the pool gets its answer from here. */
@@ -64,7 +66,12 @@ export async function endKeptThread(): Promise<void> {
   await ended?.thread.stop();
 }
 
-function running(): { thread: ThreadsPoolWorker } {
-  if (!shared) throw new Error('The kept thread is not started.');
-  return shared;
+async function newThread(options: PoolOptions): Promise<{ thread: ThreadsPoolWorker; tasks: number }> {
+  const started = { thread: new ThreadsPoolWorker(options), tasks: 0 };
+  await started.thread.start();
+  // One that a mutant brought down must not be waited for by the next.
+  started.thread.on('exit', () => {
+    if (shared === started) shared = undefined;
+  });
+  return started;
 }

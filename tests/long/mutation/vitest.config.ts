@@ -5,7 +5,7 @@ import { LikeliestFirst } from './likeliest-first';
 export default defineConfig({
   root: new URL('../../..', import.meta.url).pathname,
   test: {
-    include: (process.env.MUTATION_TESTS ?? 'tests/rules/**/*.test.ts').split(','),
+    include: JSON.parse(process.env.MUTATION_TESTS ?? '["tests/rules/**/*.test.ts"]'),
     setupFiles: ['tests/long/mutation/before-each-file.ts', 'tests/setup/fail-on-console.ts'],
     // A slow machine must not pass for a caught mutant; what never ends is Stryker's to stop.
     testTimeout: 600_000,
