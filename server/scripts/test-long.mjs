@@ -5,6 +5,7 @@ import { LauncherError, reportAndExit, runCommand } from './lib/run-command.mjs'
 /** Tests that take longer than a change can wait for: all of them, or the named one with its own options. */
 const PARTS = {
   agreement: ['tsx', 'tests/long/agreement.ts'],
+  mutation: ['tsx', 'tests/long/mutation.ts'],
 };
 
 try {
