@@ -1,6 +1,7 @@
 import { deviationAlong } from '../numerics/covariance-factor';
 import { known, unusable } from '../numerics/numeric-result';
 import { twoSidedT } from '../numerics/student-t';
+import { exp, ln } from '../numerics/transcendental';
 import type { CreepFit } from './creep-fit';
 import { storedModel } from './creep-model';
 
@@ -15,7 +16,7 @@ export function lnBandAt(
   const quantile = twoSidedT(confidence, fit.degreesOfFreedom);
   if (!quantile.ok) return quantile;
   const gradient = new Float64Array(fit.lnParameters.length);
-  const lnD = storedModel(fit).lnCompliance(fit.lnParameters, Math.log(time), gradient);
+  const lnD = storedModel(fit).lnCompliance(fit.lnParameters, ln(time), gradient);
   return { ok: true, lnD, halfWidth: quantile.value * deviationAlong(fit.covarianceFactor, gradient) };
 }
 
@@ -47,7 +48,7 @@ export function creepBandAt(
 ): { ok: true; band: CreepBand } | { ok: false; reason: string } {
   const band = lnBandAt(fit, time, confidence);
   if (!band.ok) return band;
-  const estimate = known(Math.exp(band.lnD));
+  const estimate = known(exp(band.lnD));
   if (!estimate.ok) return estimate;
   return {
     ok: true,
@@ -60,6 +61,6 @@ export function creepBandAt(
 }
 
 function expOrNull(ln: number): number | null {
-  const bounded = Math.abs(ln) < 30 * Math.LN10 ? known(Math.exp(ln)) : null;
+  const bounded = Math.abs(ln) < 30 * Math.LN10 ? known(exp(ln)) : null;
   return bounded?.ok ? bounded.value : null;
 }

@@ -1,4 +1,5 @@
 import { cannot, known, type NumericResult, unusable } from '../numerics/numeric-result';
+import { expm1, ln, log10, power } from '../numerics/transcendental';
 
 /**
  * Creep compliance from strain and stress, 1/GPa. D(t) = ε(t)/σ0.
@@ -36,7 +37,7 @@ export function sigmoidCompliance({ D0, Dinf, tau, n }: SigmoidParameters, t: nu
   const fault = unusable({ D0, 'D∞': Dinf, τ: tau, n }, 'positive') ?? timeFault(t);
   if (fault) return cannot(fault);
   if (Dinf < D0) return cannot('D∞ is below D0');
-  const grown = (t / tau) ** n;
+  const grown = power(t / tau, n);
   // For long times (t/τ)^n may leave the range of numbers, where D has long reached D∞.
   return known(Number.isFinite(grown) ? Dinf + (D0 - Dinf) / (1 + grown) : Dinf);
 }
@@ -61,7 +62,7 @@ export interface PowerParameters {
 export function powerCompliance({ D0, D1, m }: PowerParameters, t: number): NumericResult {
   const fault = unusable({ D0 }) ?? unusable({ D1, m }, 'positive') ?? timeFault(t);
   if (fault) return cannot(fault);
-  return D0 < 0 ? cannot('D0 is below zero') : known(D0 + D1 * t ** m);
+  return D0 < 0 ? cannot('D0 is below zero') : known(D0 + D1 * power(t, m));
 }
 
 /** D0 and each Di in 1/GPa, each τi in s, η in GPa·s or null for a solid. */
@@ -89,7 +90,7 @@ export function pronyCompliance({ D0, terms, viscosity }: PronyParameters, t: nu
     const ofTerm = unusable({ Di: D }) ?? unusable({ τi: tau }, 'positive');
     if (ofTerm) return cannot(ofTerm);
     if (D < 0) return cannot('Di is below zero');
-    sum -= D * Math.expm1(-t / tau);
+    sum -= D * expm1(-t / tau);
   }
   if (viscosity === null) return known(sum);
   const flow = unusable({ η: viscosity }, 'positive');
@@ -110,7 +111,7 @@ export function logLogSlope(
   const fault = unusable({ t1: first.t, D1: first.D, t2: second.t, D2: second.D }, 'positive');
   if (fault) return cannot(fault);
   if (first.t === second.t) return cannot('a slope needs two different loading times');
-  return known(Math.log(second.D / first.D) / Math.log(second.t / first.t));
+  return known(ln(second.D / first.D) / ln(second.t / first.t));
 }
 
 /**
@@ -125,7 +126,7 @@ export function decadesBeyond(time: number, { from, to }: { from: number; to: nu
   const fault = unusable({ time, from, to }, 'positive');
   if (fault) return cannot(fault);
   if (time >= from && time <= to) return known(0);
-  return known(time > to ? Math.log10(time / to) : Math.log10(from / time));
+  return known(time > to ? log10(time / to) : log10(from / time));
 }
 
 /**

@@ -3,6 +3,7 @@ import { fitFromStarts } from '../numerics/fit-from-starts';
 import type { FitProblem, LeastSquaresFit } from '../numerics/levenberg-marquardt';
 import { known, unusable } from '../numerics/numeric-result';
 import { twoSidedT } from '../numerics/student-t';
+import { exp, ln, squared } from '../numerics/transcendental';
 import { decadesBeyond } from './creep-compliance';
 import { type CreepModel, type CreepModelName, creepModel, type PointSpan } from './creep-model';
 import { creepStarts, type LnPoint } from './creep-starts';
@@ -74,7 +75,7 @@ export function fitCreep(model: CreepModelName, points: readonly { t: number; D:
     const fault = unusable({ 'a loading time': t, 'a compliance': D }, 'positive');
     if (fault) return { ok: false, reason: fault };
   }
-  const lnPoints = points.map(({ t, D }) => ({ lnTime: Math.log(t), lnD: Math.log(D) }));
+  const lnPoints = points.map(({ t, D }) => ({ lnTime: ln(t), lnD: ln(D) }));
   // The same sums whatever the order of the points: rounding must not depend on it.
   const order = lnPoints.map((_, i) => i).toSorted((a, b) => byTime(lnPoints[a]!, lnPoints[b]!));
   const ordered = order.map((i) => lnPoints[i]!);
@@ -155,7 +156,7 @@ export function describeFit(input: {
   const solvedFor = best.parameters.length;
   const degreesOfFreedom = points.length - solvedFor;
   const deviation = Math.sqrt(best.sumOfSquares / degreesOfFreedom);
-  const variance = Math.max(deviation, LEAST_DEVIATION) ** 2;
+  const variance = squared(Math.max(deviation, LEAST_DEVIATION));
   const factor = covarianceFactor(best.jacobian, solvedFor, variance).slice(0, model.parameterCount);
   const rSquared = explained(points, best.sumOfSquares);
   const times = points.map(({ t }) => t);
@@ -202,7 +203,7 @@ function publishedParameters(
 ): FittedParameter[] {
   const quantile = twoSidedT(DESCRIBED_CONFIDENCE, degreesOfFreedom);
   const t = quantile.ok ? quantile.value : Number.POSITIVE_INFINITY;
-  const reached = reachedBy(model, { best, factor, t, lnLast: Math.log(lastTime) });
+  const reached = reachedBy(model, { best, factor, t, lnLast: ln(lastTime) });
   return model.published(best.parameters).map(({ symbol, unit, value, gradient }) => {
     const half = t * deviationAlong(factor, gradient);
     const isBounded = half <= WIDEST_HALF;
@@ -211,8 +212,8 @@ function publishedParameters(
       symbol,
       unit,
       value: settled(value),
-      low: isBounded ? settled(Math.max(value * Math.exp(-half), symbol === 'D∞' ? reached : 0)) : null,
-      high: isBounded ? settled(value * Math.exp(half)) : null,
+      low: isBounded ? settled(Math.max(value * exp(-half), symbol === 'D∞' ? reached : 0)) : null,
+      high: isBounded ? settled(value * exp(half)) : null,
       held: half <= Math.LN2 && !rests,
     };
   });
@@ -230,15 +231,15 @@ function reachedBy(
 ): number {
   const gradient = new Float64Array(model.parameterCount);
   const lnD = model.lnCompliance(best.parameters, lnLast, gradient);
-  return Math.exp(lnD - t * deviationAlong(factor, gradient));
+  return exp(lnD - t * deviationAlong(factor, gradient));
 }
 
 /** Points that hardly differ leave nothing to explain: then only a fit through all of them counts as one. */
 function explained(points: readonly { D: number }[], left: number): number {
   // In order of size: the sums must not depend on the order in which points are given.
-  const logs = points.map(({ D }) => Math.log(D)).toSorted((a, b) => a - b);
+  const logs = points.map(({ D }) => ln(D)).toSorted((a, b) => a - b);
   const average = logs.reduce((sum, lnD) => sum + lnD, 0) / logs.length;
-  const total = logs.reduce((sum, lnD) => sum + (lnD - average) ** 2, 0);
+  const total = logs.reduce((sum, lnD) => sum + squared(lnD - average), 0);
   const noise = points.length * 1e-12;
   if (total <= noise) return left <= noise ? 1 : 0;
   return settled(1 - left / total);

@@ -1,5 +1,6 @@
 import { mean, trimmedMean } from '../numerics/mean';
 import { cannot, known, type NumericResult, unusable } from '../numerics/numeric-result';
+import { squared } from '../numerics/transcendental';
 
 /** One face of a specimen: its deformation in mm, and thickness b mm, diameter D mm and load P kN of its specimen. */
 export interface FaceDeformation {
@@ -80,7 +81,7 @@ export function correctionLimits({ b, D }: { b: number; D: number }): { least: n
 export function poissonRatio({ ratio, b, D }: { ratio: number; b: number; D: number }): NumericResult {
   const fault = unusable({ 'X/Y': ratio, b, D }, 'positive');
   if (fault) return cannot(fault);
-  const value = -0.1 + 1.48 * ratio ** 2 - 0.778 * (b / D) ** 2 * ratio ** 2;
+  const value = -0.1 + 1.48 * squared(ratio) - 0.778 * squared(b / D) * squared(ratio);
   return known(Math.min(0.5, Math.max(0.05, value)));
 }
 

@@ -3,6 +3,7 @@ import { fitFromStarts } from '../numerics/fit-from-starts';
 import type { FitProblem, LeastSquaresFit } from '../numerics/levenberg-marquardt';
 import { cannot, known } from '../numerics/numeric-result';
 import { twoSidedT } from '../numerics/student-t';
+import { exp, ln, squared } from '../numerics/transcendental';
 import { type CreepFit, describeFit, spanOf } from './creep-fit';
 import { type CreepModel, creepModel } from './creep-model';
 import { creepStarts } from './creep-starts';
@@ -52,8 +53,8 @@ export function masterCurve(
   const firstShifts = roughShifts(ordered, reference);
   const points = ordered.flatMap((each, place) => each.points.map(({ t, D }) => ({ t, D, place })));
   const shifted = points.map(({ t, D, place }) => ({
-    lnTime: Math.log(t) - firstShifts[place]!,
-    lnD: Math.log(D),
+    lnTime: ln(t) - firstShifts[place]!,
+    lnD: ln(D),
   }));
   const span = spanOf(shifted.toSorted((a, b) => a.lnTime - b.lnTime || a.lnD - b.lnD));
   const model = creepModel('sigmoid', span);
@@ -71,7 +72,7 @@ export function masterCurve(
     const at = others.indexOf(place);
     return at < 0 ? 0 : best.parameters[model.parameterCount + at]!;
   });
-  const reduced = points.map(({ t, D, place }) => ({ t: t * Math.exp(-lnShifts[place]!), D }));
+  const reduced = points.map(({ t, D, place }) => ({ t: t * exp(-lnShifts[place]!), D }));
   const fit = describeFit({
     model,
     best,
@@ -103,8 +104,8 @@ function problemOf(
   const own = model.parameterCount;
   const count = own + others.length;
   const logs = points.map(({ t, D, place }) => ({
-    lnTime: Math.log(t),
-    lnD: Math.log(D),
+    lnTime: ln(t),
+    lnD: ln(D),
     shift: others.indexOf(place),
   }));
   return {
@@ -153,7 +154,7 @@ interface Line {
 }
 
 function lineThrough({ points }: TemperatureSeries): Line {
-  const logs = points.map(({ t, D }) => ({ lnTime: Math.log(t), lnD: Math.log(D) }));
+  const logs = points.map(({ t, D }) => ({ lnTime: ln(t), lnD: ln(D) }));
   const middle = {
     lnTime: logs.reduce((sum, { lnTime }) => sum + lnTime, 0) / logs.length,
     lnD: logs.reduce((sum, { lnD }) => sum + lnD, 0) / logs.length,
@@ -161,7 +162,7 @@ function lineThrough({ points }: TemperatureSeries): Line {
   let [across, along] = [0, 0];
   for (const { lnTime, lnD } of logs) {
     across += (lnTime - middle.lnTime) * (lnD - middle.lnD);
-    along += (lnTime - middle.lnTime) ** 2;
+    along += squared(lnTime - middle.lnTime);
   }
   return { middle, slope: Math.max(across / along, 0.02) };
 }

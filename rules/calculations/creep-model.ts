@@ -1,3 +1,4 @@
+import { exp, expm1, ln } from '../numerics/transcendental';
 export type CreepModelName = 'sigmoid' | 'power' | 'prony';
 
 /** A curve as it is fitted: in natural logarithms of its parameters, all positive, and of its value. */
@@ -69,12 +70,12 @@ function sigmoid({ lnFrom, lnTo, lnLeast, lnMost }: PointSpan): CreepModel {
   return {
     name: 'sigmoid',
     parameterCount: 4,
-    lower: [lnLeast - 4 * DECADE, lnLeast - 9 * DECADE, lnFrom - 6 * DECADE, Math.log(0.02)],
-    upper: [lnMost, lnMost + 6 * DECADE, lnTo + 12 * DECADE, Math.log(5)],
+    lower: [lnLeast - 4 * DECADE, lnLeast - 9 * DECADE, lnFrom - 6 * DECADE, ln(0.02)],
+    upper: [lnMost, lnMost + 6 * DECADE, lnTo + 12 * DECADE, ln(5)],
     lnCompliance(p, lnTime, gradient = null, offset = 0) {
-      const D0 = Math.exp(p[0]!);
-      const growth = Math.exp(p[1]!);
-      const n = Math.exp(p[3]!);
+      const D0 = exp(p[0]!);
+      const growth = exp(p[1]!);
+      const n = exp(p[3]!);
       const share = shareOf(n * (lnTime - p[2]!));
       const D = D0 + growth * share;
       if (gradient !== null) {
@@ -84,22 +85,22 @@ function sigmoid({ lnFrom, lnTo, lnLeast, lnMost }: PointSpan): CreepModel {
         gradient[offset + 2] = -moving * n;
         gradient[offset + 3] = moving * n * (lnTime - p[2]!);
       }
-      return Math.log(D);
+      return ln(D);
     },
     slope(p, lnTime) {
-      const n = Math.exp(p[3]!);
+      const n = exp(p[3]!);
       const share = shareOf(n * (lnTime - p[2]!));
-      const growth = Math.exp(p[1]!);
-      return (n * growth * share * (1 - share)) / (Math.exp(p[0]!) + growth * share);
+      const growth = exp(p[1]!);
+      return (n * growth * share * (1 - share)) / (exp(p[0]!) + growth * share);
     },
     published(p) {
-      const D0 = Math.exp(p[0]!);
-      const Dinf = D0 + Math.exp(p[1]!);
+      const D0 = exp(p[0]!);
+      const Dinf = D0 + exp(p[1]!);
       return [
         { symbol: 'D0', unit: '1/GPa', value: D0, gradient: [1, 0, 0, 0] },
         { symbol: 'D∞', unit: '1/GPa', value: Dinf, gradient: [D0 / Dinf, 1 - D0 / Dinf, 0, 0] },
-        { symbol: 'τ', unit: 's', value: Math.exp(p[2]!), gradient: [0, 0, 1, 0] },
-        { symbol: 'n', unit: '1', value: Math.exp(p[3]!), gradient: [0, 0, 0, 1] },
+        { symbol: 'τ', unit: 's', value: exp(p[2]!), gradient: [0, 0, 1, 0] },
+        { symbol: 'n', unit: '1', value: exp(p[3]!), gradient: [0, 0, 0, 1] },
       ];
     },
     retardationTimes: [],
@@ -109,7 +110,8 @@ function sigmoid({ lnFrom, lnTo, lnLeast, lnMost }: PointSpan): CreepModel {
 
 /** x/(1 + x) of x = (t/τ)^n, given ln x, without leaving the range of numbers. */
 function shareOf(lnX: number): number {
-  return lnX > 0 ? 1 / (1 + Math.exp(-lnX)) : Math.exp(lnX) / (1 + Math.exp(lnX));
+  const small = exp(-Math.abs(lnX));
+  return lnX > 0 ? 1 / (1 + small) : small / (1 + small);
 }
 
 /**
@@ -120,33 +122,33 @@ function powerLaw({ lnFrom, lnTo, lnLeast, lnMost }: PointSpan, lnCentre = (lnFr
   return {
     name: 'power',
     parameterCount: 3,
-    lower: [lnLeast - 6 * DECADE, lnLeast - 9 * DECADE, Math.log(0.005)],
-    upper: [lnMost, lnMost + 2 * DECADE, Math.log(3)],
+    lower: [lnLeast - 6 * DECADE, lnLeast - 9 * DECADE, ln(0.005)],
+    upper: [lnMost, lnMost + 2 * DECADE, ln(3)],
     lnCompliance(p, lnTime, gradient = null, offset = 0) {
-      const D0 = Math.exp(p[0]!);
-      const m = Math.exp(p[2]!);
-      const growth = Math.exp(p[1]! + m * (lnTime - lnCentre));
+      const D0 = exp(p[0]!);
+      const m = exp(p[2]!);
+      const growth = exp(p[1]! + m * (lnTime - lnCentre));
       const D = D0 + growth;
       if (gradient !== null) {
         gradient[offset] = D0 / D;
         gradient[offset + 1] = growth / D;
         gradient[offset + 2] = (growth / D) * m * (lnTime - lnCentre);
       }
-      return Math.log(D);
+      return ln(D);
     },
     slope(p, lnTime) {
-      const m = Math.exp(p[2]!);
-      const growth = Math.exp(p[1]! + m * (lnTime - lnCentre));
-      return (m * growth) / (Math.exp(p[0]!) + growth);
+      const m = exp(p[2]!);
+      const growth = exp(p[1]! + m * (lnTime - lnCentre));
+      return (m * growth) / (exp(p[0]!) + growth);
     },
     published(p) {
-      const m = Math.exp(p[2]!);
+      const m = exp(p[2]!);
       return [
-        { symbol: 'D0', unit: '1/GPa', value: Math.exp(p[0]!), gradient: [1, 0, 0] },
+        { symbol: 'D0', unit: '1/GPa', value: exp(p[0]!), gradient: [1, 0, 0] },
         {
           symbol: 'D1',
           unit: '1/GPa',
-          value: Math.exp(p[1]! - m * lnCentre),
+          value: exp(p[1]! - m * lnCentre),
           gradient: [0, 1, -m * lnCentre],
         },
         { symbol: 'm', unit: '1', value: m, gradient: [0, 0, 1] },
@@ -167,7 +169,7 @@ function prony(span: PointSpan): CreepModel {
   const last = span.lnTo + DECADE;
   return pronyWith(
     span,
-    Array.from({ length: count }, (_, i) => Math.exp(span.lnFrom + ((last - span.lnFrom) * i) / (count - 1))),
+    Array.from({ length: count }, (_, i) => exp(span.lnFrom + ((last - span.lnFrom) * i) / (count - 1))),
   );
 }
 
@@ -179,25 +181,25 @@ function pronyWith({ lnLeast, lnMost }: PointSpan, retardationTimes: number[]): 
     lower: [lnLeast - 6 * DECADE, ...retardationTimes.map(() => lnLeast - 6 * DECADE)],
     upper: [lnMost, ...retardationTimes.map(() => lnMost + 3 * DECADE)],
     lnCompliance(p, lnTime, gradient = null, offset = 0) {
-      const t = Math.exp(lnTime);
-      let D = Math.exp(p[0]!);
-      for (let i = 0; i < terms; i += 1) D -= Math.exp(p[i + 1]!) * Math.expm1(-t / retardationTimes[i]!);
+      const t = exp(lnTime);
+      let D = exp(p[0]!);
+      for (let i = 0; i < terms; i += 1) D -= exp(p[i + 1]!) * expm1(-t / retardationTimes[i]!);
       if (gradient !== null) {
-        gradient[offset] = Math.exp(p[0]!) / D;
+        gradient[offset] = exp(p[0]!) / D;
         for (let i = 0; i < terms; i += 1) {
-          gradient[offset + i + 1] = (-Math.exp(p[i + 1]!) * Math.expm1(-t / retardationTimes[i]!)) / D;
+          gradient[offset + i + 1] = (-exp(p[i + 1]!) * expm1(-t / retardationTimes[i]!)) / D;
         }
       }
-      return Math.log(D);
+      return ln(D);
     },
     slope(p, lnTime) {
-      const t = Math.exp(lnTime);
-      let D = Math.exp(p[0]!);
+      const t = exp(lnTime);
+      let D = exp(p[0]!);
       let rate = 0;
       for (let i = 0; i < terms; i += 1) {
         const x = t / retardationTimes[i]!;
-        D -= Math.exp(p[i + 1]!) * Math.expm1(-x);
-        rate += Math.exp(p[i + 1]!) * x * Math.exp(-x);
+        D -= exp(p[i + 1]!) * expm1(-x);
+        rate += exp(p[i + 1]!) * x * exp(-x);
       }
       return rate / D;
     },
@@ -205,7 +207,7 @@ function pronyWith({ lnLeast, lnMost }: PointSpan, retardationTimes: number[]): 
       return Array.from({ length: terms + 1 }, (_, i) => ({
         symbol: i === 0 ? 'D0' : `D${i}`,
         unit: '1/GPa',
-        value: Math.exp(p[i]!),
+        value: exp(p[i]!),
         gradient: Array.from({ length: terms + 1 }, (_, k) => (k === i ? 1 : 0)),
       }));
     },

@@ -1,4 +1,5 @@
 import { cannot, known, type NumericResult, unusable } from '../numerics/numeric-result';
+import { exp, log10, power, squared } from '../numerics/transcendental';
 import type { PronyParameters } from './creep-compliance';
 
 /** E∞ and each Ej in GPa, each ρj in s: a generalised Maxwell model. */
@@ -37,7 +38,7 @@ export function voigtToMaxwell({
   const total = ordered.reduce((sum, { D }) => sum + D, D0);
   const converted = ordered.map(({ tau }, i) => {
     const rate = zeroBetween(D0, ordered, 1 / tau, ordered[i + 1] ? 1 / ordered[i + 1]!.tau : null);
-    const slope = ordered.reduce((sum, each) => sum - (each.D * each.tau) / (1 - rate * each.tau) ** 2, 0);
+    const slope = ordered.reduce((sum, each) => sum - (each.D * each.tau) / squared(1 - rate * each.tau), 0);
     return { E: 1 / (-rate * slope), rho: 1 / rate };
   });
   return { ok: true, maxwell: { Einf: 1 / total, terms: converted } };
@@ -54,7 +55,7 @@ export function relaxationModulus({ Einf, terms }: MaxwellParameters, t: number)
   const fault = unusable({ t });
   if (fault) return cannot(fault);
   if (t < 0) return cannot('t is below zero');
-  return known(terms.reduce((sum, { E, rho }) => sum + E * Math.exp(-t / rho), Einf));
+  return known(terms.reduce((sum, { E, rho }) => sum + E * exp(-t / rho), Einf));
 }
 
 /**
@@ -110,8 +111,8 @@ export function whyNotConvertible(
 const INTERVALS_A_DECADE = 40;
 
 function grid(from: number, to: number): number[] {
-  const count = Math.ceil(INTERVALS_A_DECADE * Math.log10(to / from));
-  return Array.from({ length: count + 1 }, (_, i) => from * (to / from) ** (i / count));
+  const count = Math.ceil(INTERVALS_A_DECADE * log10(to / from));
+  return Array.from({ length: count + 1 }, (_, i) => from * power(to / from, i / count));
 }
 
 /** ∫D as a function, by Simpson's rule between the times of a fine grid and the same rule for what is left. */

@@ -1,3 +1,4 @@
+import { power } from '../numerics/transcendental';
 import { type BandSource, type CreepBand, creepBandAt } from './creep-band';
 
 export interface CreepSample extends CreepBand {
@@ -17,7 +18,7 @@ export function creepSamples(
   fit: BandSource,
   { from, to, count, confidence }: { from: number; to: number; count: number; confidence: number },
 ): CreepSample[] {
-  return Array.from({ length: count }, (_, i) => from * (to / from) ** (i / (count - 1))).flatMap((time) => {
+  return Array.from({ length: count }, (_, i) => from * power(to / from, i / (count - 1))).flatMap((time) => {
     const band = creepBandAt(fit, time, confidence);
     return band.ok ? [{ time: Number(time.toPrecision(12)), ...band.band }] : [];
   });

@@ -1,3 +1,4 @@
+import { exp, ln, squared } from '../numerics/transcendental';
 import type { CreepModel, PointSpan } from './creep-model';
 
 /** A point as it is fitted: natural logarithms of loading time and compliance, and how many points it stands for. */
@@ -14,13 +15,13 @@ export interface LnPoint {
 export function creepStarts(model: CreepModel, points: readonly LnPoint[], span: PointSpan): number[][] {
   if (model.name === 'prony') return pronyStarts(model, span);
   const shapes = model.name === 'sigmoid' ? sigmoidShapes(span) : powerShapes();
-  const values = points.map(({ lnD }) => Math.exp(lnD));
+  const values = points.map(({ lnD }) => exp(lnD));
   const candidates = shapes.map(({ parameters, share }) => {
     const linear = linearFit(
       points.map(({ lnTime }) => share(lnTime, model.lnCentre)),
       values,
     );
-    return { start: [Math.log(linear.D0), Math.log(linear.growth), ...parameters], sum: linear.sum };
+    return { start: [ln(linear.D0), ln(linear.growth), ...parameters], sum: linear.sum };
   });
   const starts: number[][] = [];
   for (const { start } of candidates.toSorted((a, b) => a.sum - b.sum)) {
@@ -46,8 +47,8 @@ function sigmoidShapes({ lnFrom, lnTo }: PointSpan): Shape[] {
     const lnTau = lnFrom - Math.LN10 + ((lnTo - lnFrom + 4 * Math.LN10) * step) / 8;
     for (const n of [0.25, 0.45, 0.75, 1.2]) {
       shapes.push({
-        parameters: [lnTau, Math.log(n)],
-        share: (lnTime) => 1 / (1 + Math.exp(-n * (lnTime - lnTau))),
+        parameters: [lnTau, ln(n)],
+        share: (lnTime) => 1 / (1 + exp(-n * (lnTime - lnTau))),
       });
     }
   }
@@ -56,8 +57,8 @@ function sigmoidShapes({ lnFrom, lnTo }: PointSpan): Shape[] {
 
 function powerShapes(): Shape[] {
   return [0.03, 0.08, 0.15, 0.25, 0.4, 0.6, 0.9, 1.4].map((m) => ({
-    parameters: [Math.log(m)],
-    share: (lnTime, lnCentre) => Math.exp(m * (lnTime - lnCentre)),
+    parameters: [ln(m)],
+    share: (lnTime, lnCentre) => exp(m * (lnTime - lnCentre)),
   }));
 }
 
@@ -83,7 +84,7 @@ function linearFit(shares: number[], values: number[]): { D0: number; growth: nu
   }
   if (!Number.isFinite(growth) || growth < least * 1e-4) growth = least * 1e-4;
   let sum = 0;
-  for (let i = 0; i < shares.length; i += 1) sum += (1 - (D0 + growth * shares[i]!) / values[i]!) ** 2;
+  for (let i = 0; i < shares.length; i += 1) sum += squared(1 - (D0 + growth * shares[i]!) / values[i]!);
   return { D0, growth, sum };
 }
 
@@ -94,9 +95,9 @@ function distance(one: number[], other: number[]): number {
 /** In the Prony series everything is linear but for the signs: any positive start leads to the one minimum. */
 function pronyStarts(model: CreepModel, { lnLeast, lnMost }: PointSpan): number[][] {
   const terms = model.retardationTimes.length;
-  const growth = Math.max(Math.exp(lnMost) - Math.exp(lnLeast), Math.exp(lnLeast) * 1e-3);
-  const even = model.retardationTimes.map(() => Math.log(growth / terms));
-  const rising = model.retardationTimes.map((_, i) => Math.log((growth * (i + 1)) / terms ** 2));
+  const growth = Math.max(exp(lnMost) - exp(lnLeast), exp(lnLeast) * 1e-3);
+  const even = model.retardationTimes.map(() => ln(growth / terms));
+  const rising = model.retardationTimes.map((_, i) => ln((growth * (i + 1)) / squared(terms)));
   return [
     [lnLeast, ...even],
     [lnLeast - 1, ...rising],

@@ -1,4 +1,5 @@
 import { cannot, known, type NumericResult } from '../numerics/numeric-result';
+import { power } from '../numerics/transcendental';
 import type { Share } from './combined-gravity';
 
 /** Percent passing at a sieve. */
@@ -83,5 +84,5 @@ const finenessSievesMm = [150, 75, 37.5, 19, 9.5, 4.75, 2.36, 1.18, 0.6, 0.3, 0.
  */
 export function maximumDensityLine(openingMm: number, maximumSizeMm: number): NumericResult {
   if (!(openingMm > 0) || !(maximumSizeMm > 0)) return cannot('a sieve opening must be above zero');
-  return known(openingMm >= maximumSizeMm ? 100 : 100 * (openingMm / maximumSizeMm) ** 0.45);
+  return known(openingMm >= maximumSizeMm ? 100 : 100 * power(openingMm / maximumSizeMm, 0.45));
 }

@@ -1,4 +1,5 @@
 import type { Evidence } from '../engine/finding';
+import { squared } from '../numerics/transcendental';
 import type { Quantity } from '../quantities/quantity';
 import { allQuantities } from '../quantities/registry';
 import { numberWords, unitSuffix } from '../rule-sets/words';
@@ -58,7 +59,7 @@ function groupsOf(input: ConsistencyInput, quantity: string): Group[] {
 
 function squaresAbout(values: readonly number[]): number {
   const average = values.reduce((sum, value) => sum + value, 0) / values.length;
-  return values.reduce((sum, value) => sum + (value - average) ** 2, 0);
+  return values.reduce((sum, value) => sum + squared(value - average), 0);
 }
 
 function observation(

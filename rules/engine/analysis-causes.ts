@@ -1,4 +1,5 @@
 import { decimalsOf, formatDecimals } from '../numerics/round';
+import { tenTo } from '../numerics/transcendental';
 import type { Reading } from '../record';
 import type { NamedCause } from './analysis';
 import { type Cause, type CauseInputs, causes } from './analysis-cause-table';
@@ -21,7 +22,7 @@ function slips(reported: Reading): Cause[] {
       text: 'has the decimal point out of place',
       compute: ({ own }) =>
         misplacements
-          .map((places) => own * 10 ** places)
+          .map((places) => own * tenTo(places))
           .find((value) => value !== 0 && showsAs(value, reported)) ?? Number.NaN,
     },
     {

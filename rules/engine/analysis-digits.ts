@@ -1,4 +1,5 @@
 import { decimalsOf } from '../numerics/round';
+import { tenTo } from '../numerics/transcendental';
 import type { Reading } from '../record';
 
 /** How a reading is displayed: the unit of its last digit, in the reading's own canonical unit. */
@@ -29,7 +30,7 @@ const units = new WeakMap<Reading, number>();
 function unitOf(reading: Reading): number {
   const value = reading.value ?? 0;
   const written = reading.source ? writtenNumber(reading.source.text, value) : null;
-  if (written === null) return 10 ** -decimalsOf(value);
+  if (written === null) return tenTo(-decimalsOf(value));
   return written.unit * scaleOf(value, written);
 }
 
@@ -53,7 +54,7 @@ function writtenNumber(text: string, value: number): Written | null {
 
 function lastDigit(form: string): number {
   const [mantissa = '', exponent = '0'] = form.toLowerCase().split('e');
-  return 10 ** (Number(exponent) - decimalsOf(mantissa));
+  return tenTo(Number(exponent) - decimalsOf(mantissa));
 }
 
 /** A cell in psi displays digits of psi: its last digit is worth more or less in the canonical unit. */

@@ -1,4 +1,5 @@
 import type { CreepFit, FittedParameter } from '../calculations/creep-fit';
+import { ln } from '../numerics/transcendental';
 import type { Conditions } from '../record';
 import type { CreepComplianceMeasure } from '../rule-sets/measure';
 import { MODEL_FORMULAS } from './creep-fits';
@@ -90,7 +91,7 @@ function parameterEvidence({ symbol, unit, value }: FittedParameter): Evidence {
 
 /** From the tested time farthest from the one asked for to the nearest. */
 function byNearness(points: readonly CreepPoint[], time: number): CreepPoint[] {
-  const away = ({ at }: CreepPoint) => Math.abs(Math.log((at.time ?? time) / time));
+  const away = ({ at }: CreepPoint) => Math.abs(ln((at.time ?? time) / time));
   return points.toSorted((a, b) => away(b) - away(a));
 }
 

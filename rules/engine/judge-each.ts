@@ -35,6 +35,7 @@ export function judgeEach(
 
 /** Fails first, then what cannot be told, then the smallest margin. */
 function rank({ outcome, margin }: Judgement): number {
-  const distance = Math.atan(margin ?? 0) / Math.PI;
-  return (outcome === 'fail' ? 0 : outcome === 'undecided' ? 2 : 4) + distance;
+  const worth = margin ?? 0;
+  // Within ±1 whatever the margin, so that a large one never changes places with another outcome.
+  return (outcome === 'fail' ? 0 : outcome === 'undecided' ? 3 : 6) + worth / (1 + Math.abs(worth));
 }

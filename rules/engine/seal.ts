@@ -84,7 +84,7 @@ function judged(finding: Finding) {
     outcome,
     borderline,
     observed: observed && {
-      value: evidence.some(isFitted) ? settledFit(observed.value) : observed.value,
+      value: observed.value,
       rounded: observed.rounded,
       unit: observed.unit,
       statistic: observed.statistic,
@@ -106,21 +106,6 @@ function judged(finding: Finding) {
 }
 
 /** Inputs of inputs follow from the record and the engine, which have hashes of their own. */
-function valuesOf(evidence: Evidence) {
-  const { quantity, value, text, unit, origin } = evidence;
-  return { quantity, value: isFitted(evidence) ? settledFit(value) : value, text, unit, origin };
+function valuesOf({ quantity, value, text, unit, origin }: Evidence) {
+  return { quantity, value, text, unit, origin };
 }
-
-function isFitted({ origin }: Evidence): boolean {
-  return origin === 'fitted' || origin === 'extrapolated';
-}
-
-/**
- * A fit carries the last bit in which one JavaScript engine's exponential differs from another's to the tenth digit of
- * its curve, and farther where the points hold a parameter only loosely.
- */
-function settledFit(value: number | null): number | null {
-  return value === null ? null : Number(value.toPrecision(SEALED_DIGITS_OF_A_FIT));
-}
-
-const SEALED_DIGITS_OF_A_FIT = 5;

@@ -1,4 +1,5 @@
 import { decimalsOf, roundTo } from '../numerics/round';
+import { log10 } from '../numerics/transcendental';
 import type { Reading } from '../record';
 import { numberWords, unitSuffix } from '../rule-sets/words';
 import { displayedUnit } from './analysis-digits';
@@ -86,7 +87,7 @@ export function stepOf(world: World, quantity: string, readings: readonly Readin
   const usual = Number(`1e-${world.view.quantity(quantity)?.decimals ?? 2}`);
   const own = readings.filter((reading) => reading.quantity === quantity).map(displayedUnit);
   const written = own.length === 0 ? usual : Number(Math.min(...own).toPrecision(6));
-  const isDigit = Math.abs(Math.log10(written) - Math.round(Math.log10(written))) < 1e-9;
+  const isDigit = Math.abs(log10(written) - Math.round(log10(written))) < 1e-9;
   return isDigit ? Math.max(usual, written) : usual;
 }
 

@@ -3,6 +3,7 @@ import tDistribution from '@stdlib/stats-base-dists-t-cdf';
 import { mean } from './mean';
 import { cannot, known } from './numeric-result';
 import { sampleStandardDeviation } from './spread';
+import { squared } from './transcendental';
 
 export interface SampleComparison {
   /** The larger variance over the smaller. */
@@ -116,7 +117,7 @@ function summarise(values: readonly number[]): Summary | { ok: false; reason: st
   if (!deviation.ok) return deviation;
   const centre = mean(values);
   if (!centre.ok) return centre;
-  return { ok: true, count: values.length, mean: centre.value, variance: deviation.value ** 2 };
+  return { ok: true, count: values.length, mean: centre.value, variance: squared(deviation.value) };
 }
 
 function pooled(one: Summary, other: Summary): { t: number; degreesOfT: number } {
@@ -128,7 +129,7 @@ function pooled(one: Summary, other: Summary): { t: number; degreesOfT: number }
 function unequal(one: Summary, other: Summary): { t: number; degreesOfT: number } {
   const a = one.variance / one.count;
   const b = other.variance / other.count;
-  const degreesOfT = (a + b) ** 2 / (a ** 2 / (one.count - 1) + b ** 2 / (other.count - 1));
+  const degreesOfT = squared(a + b) / (squared(a) / (one.count - 1) + squared(b) / (other.count - 1));
   return { t: (one.mean - other.mean) / Math.sqrt(a + b), degreesOfT };
 }
 

@@ -1,5 +1,6 @@
 import Decimal from 'decimal.js';
 import { decimalsOf } from './round';
+import { tenTo } from './transcendental';
 
 /**
  * a − b on the shortest decimal forms of both: 14.1 − 14.0 is 0.1, not 0.09999999999999964.
@@ -39,7 +40,7 @@ function commonScale(values: readonly number[]): number | null {
     decimals = Math.max(decimals, decimalsOf(value));
     largest = Math.max(largest, Math.abs(value));
   }
-  const scale = 10 ** decimals;
+  const scale = tenTo(decimals);
   const isExact = decimals <= 9 && largest * scale * values.length < EXACT_WHOLE && values.length < 1000;
   return isExact ? scale : null;
 }

@@ -1,5 +1,6 @@
 import tDistribution from '@stdlib/stats-base-dists-t-cdf';
 import { cannot, known, type NumericResult } from './numeric-result';
+import { exp, power } from './transcendental';
 
 /**
  * How far apart n results may lie: their acceptable range, in the unit of the standard deviation.
@@ -53,8 +54,8 @@ function probabilityOfRange(q: number, count: number): number {
   for (let i = 0; i <= steps; i += 1) {
     const z = -8 + i * width;
     const weight = i === 0 || i === steps ? 1 : i % 2 === 1 ? 4 : 2;
-    const density = Math.exp((-z * z) / 2) / Math.sqrt(2 * Math.PI);
-    sum += weight * density * (normal(z) - normal(z - q)) ** (count - 1);
+    const density = exp((-z * z) / 2) / Math.sqrt(2 * Math.PI);
+    sum += weight * density * power(normal(z) - normal(z - q), count - 1);
   }
   return (count * sum * width) / 3;
 }

@@ -1,5 +1,6 @@
 import { Matrix, QrDecomposition } from 'ml-matrix';
 import { cannot } from './numeric-result';
+import { squared } from './transcendental';
 
 export interface PolynomialFit {
   ok: true;
@@ -54,13 +55,13 @@ function powers(u: number, degree: number): number[] {
 
 function unscale([a = 0, b = 0, c = 0]: number[], centre: number, scale: number): number[] {
   const slope = b / scale;
-  const curve = c / scale ** 2;
-  return [a - slope * centre + curve * centre ** 2, slope - 2 * curve * centre, curve];
+  const curve = c / squared(scale);
+  return [a - slope * centre + curve * squared(centre), slope - 2 * curve * centre, curve];
 }
 
 function explained(y: readonly number[], residuals: readonly number[]): number {
   const average = y.reduce((sum, value) => sum + value, 0) / y.length;
-  const total = y.reduce((sum, value) => sum + (value - average) ** 2, 0);
-  const left = residuals.reduce((sum, value) => sum + value ** 2, 0);
+  const total = y.reduce((sum, value) => sum + squared(value - average), 0);
+  const left = residuals.reduce((sum, value) => sum + squared(value), 0);
   return total === 0 ? 1 : 1 - left / total;
 }

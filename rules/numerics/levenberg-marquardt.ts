@@ -1,4 +1,5 @@
 import { CholeskyDecomposition, Matrix } from 'ml-matrix';
+import { squared } from './transcendental';
 
 export interface FitProblem {
   parameterCount: number;
@@ -156,12 +157,12 @@ class State {
   }
 
   isExact(): boolean {
-    return this.sum <= this.problem.residualCount * EXACT_RESIDUAL ** 2;
+    return this.sum <= this.problem.residualCount * squared(EXACT_RESIDUAL);
   }
 
   /** Where a valley without an end is still being walked, though what is left is less than any reading's digits. */
   isNegligible(): boolean {
-    return this.sum <= this.problem.residualCount * NEGLIGIBLE_RESIDUAL ** 2;
+    return this.sum <= this.problem.residualCount * squared(NEGLIGIBLE_RESIDUAL);
   }
 
   /** Gradient and normal matrix here; the parameters that may move. */

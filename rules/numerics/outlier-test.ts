@@ -2,6 +2,7 @@ import tQuantile from '@stdlib/stats-base-dists-t-quantile';
 import { decimalDifference } from './decimal-sum';
 import { cannot, known, type NumericResult } from './numeric-result';
 import { unroundedSpread } from './spread';
+import { squared } from './transcendental';
 
 export interface OutlierTest {
   /** (largest − mean)/s and (mean − smallest)/s. */
@@ -51,5 +52,5 @@ export function criticalOutlier(count: number, significance: number): NumericRes
   if (!Number.isInteger(count) || count < 3) return cannot('an outlier test needs at least three values');
   if (!(significance > 0 && significance < 1)) return cannot('a significance lies between 0 and 1');
   const t = tQuantile(1 - significance / count, count - 2);
-  return known(((count - 1) / Math.sqrt(count)) * Math.sqrt(t ** 2 / (count - 2 + t ** 2)));
+  return known(((count - 1) / Math.sqrt(count)) * Math.sqrt(squared(t) / (count - 2 + squared(t))));
 }

@@ -1,6 +1,7 @@
 import { decimalDifference } from './decimal-sum';
 import { mean } from './mean';
 import { cannot, known, type NumericResult } from './numeric-result';
+import { squared } from './transcendental';
 
 /**
  * Sample standard deviation. s = √(Σ(x − x̄)²/(n − 1)).
@@ -28,7 +29,7 @@ export function unroundedSpread(values: readonly number[]): { meanFromFirst: num
   const first = values[0] ?? Number.NaN;
   const distances = values.map((value) => decimalDifference(value, first));
   const meanFromFirst = distances.reduce((sum, distance) => sum + distance, 0) / values.length;
-  const squares = distances.reduce((sum, distance) => sum + (distance - meanFromFirst) ** 2, 0);
+  const squares = distances.reduce((sum, distance) => sum + squared(distance - meanFromFirst), 0);
   return { meanFromFirst, deviation: Math.sqrt(squares / (values.length - 1)) };
 }
 

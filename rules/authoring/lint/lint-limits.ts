@@ -1,4 +1,5 @@
 import { decimalsOf } from '../../numerics/round';
+import { tenTo } from '../../numerics/transcendental';
 import { isTableReference, literalOf } from '../../rule-sets/bounds-of';
 import { type EditionView, viewOf } from '../../rule-sets/edition-view';
 import type { Bound, Limit } from '../../rule-sets/limit';
@@ -92,7 +93,7 @@ function roundedFiner(rule: ResolvedRule, view: EditionView): LintRemark[] {
   const written = [limit.min, limit.max, limit.target].flatMap((bound) => writtenIn(bound, view));
   if (written.length === 0) return [];
   const decimals = Math.max(...written.map(decimalsOf));
-  if (step >= 10 ** -decimals * (1 - 1e-9)) return [];
+  if (step >= tenTo(-decimals) * (1 - 1e-9)) return [];
   return [
     {
       level: 'warning',
