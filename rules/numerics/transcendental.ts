@@ -1,7 +1,6 @@
 import libraryExp from '@stdlib/math-base-special-exp';
 import libraryExpm1 from '@stdlib/math-base-special-expm1';
 import libraryLn from '@stdlib/math-base-special-ln';
-import libraryLog10 from '@stdlib/math-base-special-log10';
 import libraryPower from '@stdlib/math-base-special-pow';
 
 /*
@@ -26,9 +25,11 @@ export function ln(x: number): number {
   return libraryLn(x);
 }
 
-/** Logarithm to the base ten. */
+/** Logarithm to the base ten; whole for a power of ten, where the quotient may miss it by its last bit. */
 export function log10(x: number): number {
-  return libraryLog10(x);
+  const quotient = libraryLn(x) / Math.LN10;
+  const whole = Math.round(quotient);
+  return tenTo(whole) === x ? whole : quotient;
 }
 
 /** A base to any power. */
