@@ -1,5 +1,10 @@
 import type { Quantity } from '../quantities/quantity';
-import { type AttributeDefinition, attributeLabel, withStandardAttributes } from '../rule-sets/attribute';
+import {
+  type AttributeDefinition,
+  attributeLabel,
+  type Scalar,
+  withStandardAttributes,
+} from '../rule-sets/attribute';
 import type { ReadingEdition } from './edition-contents';
 import type { MeasuredQuantity } from './measured-quantities';
 import { submittalFacts } from './submittal-facts';
@@ -14,7 +19,19 @@ export function attributeEntries(edition: ReadingEdition): TemplateEntry[] {
     at: {},
     list: attribute.type === 'boolean' ? ['yes', 'no'] : (attribute.values ?? []).map(shownValue),
   });
-  return [...submittalFacts, ...withStandardAttributes(edition.attributes)].map(entry);
+  return attributesOf(edition).map(entry);
+}
+
+function attributesOf(edition: ReadingEdition): AttributeDefinition[] {
+  return [...submittalFacts, ...withStandardAttributes(edition.attributes)];
+}
+
+/** An attribute's value as the template's list has it. */
+export function shownAttribute(edition: ReadingEdition, name: string, value: Scalar): string | number {
+  if (typeof value === 'boolean') return value ? 'yes' : 'no';
+  const listed = attributesOf(edition).find((attribute) => attribute.name === name)?.values ?? [];
+  const own = listed.find((each) => (typeof each === 'object' ? each.value : each) === value);
+  return own === undefined || typeof value === 'number' ? value : shownValue(own);
 }
 
 function shownValue(value: NonNullable<AttributeDefinition['values']>[number]): string {

@@ -72,6 +72,12 @@ export interface TemplateLayout {
 }
 
 export const headerRow = 4;
+
+/** Where a table's data begins: under its header, and under the row of its methods where it has one. */
+export function firstDataRow({ hasMethods }: Pick<TemplateTable, 'hasMethods'>): number {
+  return headerRow + (hasMethods ? 2 : 1);
+}
+
 export const listsSheet = 'Lists';
 
 /** Which sheets, rows, columns and units an edition needs: everything that it measures has a named place. */

@@ -1,7 +1,9 @@
 import ExcelJS from 'exceljs';
 import { columnLetters } from '#rules/reading/cell-address';
+import { templateCells } from '#rules/reading/template-cells';
 import type { TemplateColumn } from '#rules/reading/template-columns';
 import {
+  firstDataRow,
   headerRow,
   listsSheet,
   type TemplateGradation,
@@ -12,6 +14,7 @@ import {
   templateVersion,
 } from '#rules/reading/template-layout';
 import { stampLine, stampProperty, stampText } from '#rules/reading/template-stamp';
+import type { MixRecord } from '#rules/record';
 import type { ResolvedEdition } from '#rules/rule-sets/resolve';
 import { writeWithProperties } from './stamp-workbook';
 
@@ -20,6 +23,8 @@ export interface TemplateOptions {
   editionHash: string;
   /** Attributes that the project states, filled in beforehand: `{ name: value }`. */
   projectFacts?: Record<string, string | number | boolean>;
+  /** An invented mix to fill it in with; the workbook says so. */
+  example?: MixRecord;
 }
 
 /** The workbook that a laboratory fills in for an edition: no macros, a named place for all that is measured. */
@@ -48,8 +53,21 @@ export function buildTemplate(edition: ResolvedEdition, options: TemplateOptions
     else writeTable(sheet, part, layout);
   }
   writeLists(workbook, layout);
+  if (options.example) writeExample(workbook, edition, options.example);
   return workbook;
 }
+
+function writeExample(workbook: ExcelJS.Workbook, edition: ResolvedEdition, example: MixRecord): void {
+  for (const { sheet, row, column, value } of templateCells(edition, example).cells) {
+    const cell = workbook.getWorksheet(sheet)?.getCell(row, column);
+    if (cell) cell.value = typeof value === 'object' ? new Date(`${value.date}T00:00:00Z`) : value;
+  }
+  const instruction = workbook.getWorksheet('Submittal')?.getCell('A2');
+  if (instruction) instruction.value = `${exampleMark} ${instruction.text}`;
+}
+
+/** Stands before the first sheet's instruction. */
+const exampleMark = 'An invented example: no mix, laboratory or result in this workbook is real.';
 
 export function finishTemplate(workbook: ExcelJS.Workbook, editionHash: string): Promise<Buffer> {
   return writeWithProperties(workbook, {
@@ -80,7 +98,7 @@ function writeLabels(
 
 function writeTable(sheet: ExcelJS.Worksheet, part: TemplateTable, layout: TemplateLayout): void {
   writeHeader(sheet, part.columns.map(headerText));
-  const firstRow = headerRow + (part.hasMethods ? 2 : 1);
+  const firstRow = firstDataRow(part);
   if (part.hasMethods) {
     sheet.getCell(headerRow + 1, 1).value = 'Method';
     sheet.getRow(headerRow + 1).font = { italic: true };
