@@ -29,6 +29,7 @@ import { returnRoutes } from './returns/return-routes';
 import {
   exportRuleSetRoute,
   getRuleSetDocumentRoute,
+  getRuleSetExampleRoute,
   getRuleSetRoute,
   getRuleSetTemplateRoute,
   listRuleSetsRoute,
@@ -56,7 +57,7 @@ export function allRoutes(settings: Settings): Route[] {
     ...[listLaboratoriesRoute, addLaboratoryRoute],
     ...[listProjectsRoute, getProjectRoute, addProjectRoute, changeProjectRoute],
     ...[confirmSectionRoute, changeSectionRoute, getSectionTemplateRoute],
-    ...[listRuleSetsRoute, getRuleSetTemplateRoute, getRuleSetRoute],
+    ...[listRuleSetsRoute, getRuleSetTemplateRoute, getRuleSetExampleRoute, getRuleSetRoute],
     ...[getRuleSetDocumentRoute, exportRuleSetRoute],
     ...draftRoutes,
     ...[getHomeRoute, getQueueRoute, getQueueItemRoute, searchRoute],

@@ -105,6 +105,8 @@ export const ruleSetViewSchema = editionListItemSchema.extend({
   caseCount: z.number().int(),
   hash: z.string(),
   templateHref: z.string(),
+  /** The template filled in with an invented mix; null where no example fits the edition. */
+  exampleHref: z.string().nullable(),
 });
 
 const editionParams = z.strictObject({ ruleSetId: z.string().max(80), edition: z.string().max(40) });
@@ -123,6 +125,15 @@ export const getRuleSetTemplate = endpoint({
   method: 'get',
   path: '/api/rule-sets/:ruleSetId/:edition/template.xlsx',
   summary: 'The template for an edition',
+  params: editionParams,
+  query: z.strictObject({ layers: z.string().max(400).optional() }),
+  sends: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
+});
+
+export const getRuleSetExample = endpoint({
+  method: 'get',
+  path: '/api/rule-sets/:ruleSetId/:edition/example.xlsx',
+  summary: 'The template for an edition, filled in with an invented mix',
   params: editionParams,
   query: z.strictObject({ layers: z.string().max(400).optional() }),
   sends: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',

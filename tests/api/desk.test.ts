@@ -218,6 +218,25 @@ describe('rule sets', () => {
     expect(file.get('Content-Type')).toContain('spreadsheetml');
   });
 
+  it('give a filled example where one fits, which is read and checked like any upload', async () => {
+    const { exampleHref, templateHref } = await view(dele, 'cvra-412/2026');
+    expect(exampleHref).toBe(templateHref.replace('template', 'example'));
+    const file = await dele
+      .get(exampleHref ?? '')
+      .responseType('blob')
+      .expect(200);
+    const draft = await aDraft(world, dele, { workbook: { name: 'example.xlsx', bytes: file.body } });
+    const { body: reading } = await dele.get(`${pathOf(draft)}/reading`).expect(200);
+    expect(reading.doubts).toEqual([]);
+    expect(draft.hasCheck).toBe(true);
+  });
+
+  it('give no example where none fits', async () => {
+    const { exampleHref } = await view(ines, 'cvra-412/2024');
+    expect(exampleHref).toBeNull();
+    await ines.get('/api/rule-sets/cvra-412/2024/example.xlsx').expect(404);
+  });
+
   it('are absent alike for others: an unknown edition, a draft to a contractor', async () => {
     const missing = await dele.get('/api/rule-sets/cvra-412/1999').set('X-Request-Id', 'one-number-for-both');
     const draft = await dele.get('/api/rule-sets/cvra-412/2027').set('X-Request-Id', 'one-number-for-both');

@@ -1,7 +1,9 @@
+import type { MixRecord } from '#rules/record';
 import {
   exportRuleSet,
   getRuleSet,
   getRuleSetDocument,
+  getRuleSetExample,
   getRuleSetTemplate,
   listRuleSets,
 } from '#shared/contracts/rule-sets';
@@ -13,8 +15,10 @@ import type { Deps } from '../../deps';
 import { layersOf } from '../../policies/edition-dates';
 import { presentEdition } from '../../presenters/present-edition';
 import { ruleSetContents } from '../../presenters/rule-set-view';
+import { Problem } from '../../problem';
 import { route } from '../define-route';
-import { layerName, loadDocument, loadRuleSet } from './load-rule-set';
+import { exampleOf } from './example-of';
+import { type LoadedRuleSet, layerName, loadDocument, loadRuleSet } from './load-rule-set';
 import { ruleSetFile } from './rule-set-file';
 
 export const listRuleSetsRoute = route(listRuleSets, async ({ deps, actor }) => {
@@ -51,20 +55,37 @@ export const getRuleSetRoute = route(getRuleSet, async ({ deps, actor, params, q
     ...ruleSetContents(resolved, base),
     caseCount: resolved.cases.length,
     hash,
-    templateHref: templateHref(params, layers.map(layerName)),
+    templateHref: workbookHref('template', params, layers),
+    exampleHref: exampleOf(loaded) === null ? null : workbookHref('example', params, layers),
   };
 });
 
-export const getRuleSetTemplateRoute = route(getRuleSetTemplate, async ({ deps, actor, params, query }) => {
-  const { edition, resolved } = await loadRuleSet(deps, actor, { ...params, layers: query.layers });
+export const getRuleSetTemplateRoute = route(getRuleSetTemplate, async ({ deps, actor, params, query }) =>
+  sendWorkbook(deps, 'template', await loadRuleSet(deps, actor, { ...params, layers: query.layers })),
+);
+
+export const getRuleSetExampleRoute = route(getRuleSetExample, async ({ deps, actor, params, query }) => {
+  const loaded = await loadRuleSet(deps, actor, { ...params, layers: query.layers });
+  const example = exampleOf(loaded);
+  if (example === null) throw new Problem('not-found');
+  return sendWorkbook(deps, 'example', loaded, example);
+});
+
+async function sendWorkbook(
+  deps: Deps,
+  kind: 'template' | 'example',
+  { edition, resolved }: LoadedRuleSet,
+  example?: MixRecord,
+) {
   // A filled-in template names this edition by its hash, so it has to be found again.
   const editionHash = await keepResolvedEdition(deps.db, deps, resolved);
+  const { writeTemplate } = await import('../../workbook/write-template');
   return {
-    bytes: await (await import('../../workbook/write-template')).writeTemplate(resolved, { editionHash }),
+    bytes: await writeTemplate(resolved, { editionHash, ...(example ? { example } : {}) }),
     mediaType: 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet',
-    fileName: `${edition.ruleSetKey} ${edition.edition} template.xlsx`,
+    fileName: `${edition.ruleSetKey} ${edition.edition} ${kind}.xlsx`,
   };
-});
+}
 
 export const getRuleSetDocumentRoute = route(getRuleSetDocument, async ({ deps, actor, params }) => ({
   document: await loadDocument(deps, actor, params),
@@ -83,10 +104,12 @@ function layersOver(edition: AgencyRuleSets['editions'][number], all: AgencyRule
   return layersOf({ ...edition, effectiveFrom: edition.effectiveFrom ?? '' }, dated);
 }
 
-function templateHref(
+function workbookHref(
+  kind: 'template' | 'example',
   { ruleSetId, edition }: { ruleSetId: string; edition: string },
-  layers: string[],
+  layers: LoadedRuleSet['layers'],
 ): string {
-  const path = `/api/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}/template.xlsx`;
-  return layers.length === 0 ? path : `${path}?layers=${encodeURIComponent(layers.join(','))}`;
+  const path = `/api/rule-sets/${encodeURIComponent(ruleSetId)}/${encodeURIComponent(edition)}/${kind}.xlsx`;
+  if (layers.length === 0) return path;
+  return `${path}?layers=${encodeURIComponent(layers.map(layerName).join(','))}`;
 }

@@ -71,12 +71,13 @@ function aView(overrides: Partial<RuleSetView> = {}): RuleSetView {
     caseCount: 12,
     hash: 'a'.repeat(64),
     templateHref: '/api/rule-sets/cvra-412/2026/template.xlsx',
+    exampleHref: '/api/rule-sets/cvra-412/2026/example.xlsx',
     ...overrides,
   });
 }
 
-async function open() {
-  stubServer({ 'GET /api/rule-sets/cvra-412/2026': aView() });
+async function open(overrides: Partial<RuleSetView> = {}) {
+  stubServer({ 'GET /api/rule-sets/cvra-412/2026': aView(overrides) });
   const page = renderPage(<RuleSetPage />, {
     path: '/rule-sets/:ruleSetId/:edition',
     at: '/rule-sets/cvra-412/2026',
@@ -133,5 +134,16 @@ describe('an edition as it reads', () => {
     expect(template.getAttribute('href')).toBe('/api/rule-sets/cvra-412/2026/template.xlsx');
     expect(screen.getByRole('link', { name: '2024' }).getAttribute('href')).toBe('/rule-sets/cvra-412/2024');
     expect(screen.getByText('superseded')).toBeTruthy();
+  });
+
+  it('offers the filled example where the edition has one', async () => {
+    await open();
+    const example = screen.getByRole('link', { name: /filled in with an invented mix/ });
+    expect(example.getAttribute('href')).toBe('/api/rule-sets/cvra-412/2026/example.xlsx');
+  });
+
+  it('offers no example where none fits', async () => {
+    await open({ exampleHref: null });
+    expect(screen.queryByRole('link', { name: /invented mix/ })).toBeNull();
   });
 });

@@ -21,6 +21,13 @@ export function RuleSetAside({ view }: { view: RuleSetView }) {
         </a>
       </p>
       <p className="small mute">A workbook with a place for every reading that these rules ask for.</p>
+      {view.exampleHref === null ? null : (
+        <p>
+          <a href={view.exampleHref} download>
+            The same template, filled in with an invented mix
+          </a>
+        </p>
+      )}
       <EditionActs view={view} />
       <h2>Quantities</h2>
       <p>
