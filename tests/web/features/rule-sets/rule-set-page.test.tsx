@@ -2,6 +2,7 @@
 import { screen, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { type RuleSetView, ruleSetViewSchema } from '#shared/contracts/rule-sets';
+import { aSession } from '#tests/builders/a-session';
 import { RuleSetPage } from '../../../../web/features/rule-sets/components/rule-set-page';
 import { renderPage, stubServer } from '../../render-page';
 
@@ -11,6 +12,7 @@ const edition = {
   rules: 1,
   layerOf: null,
   startingPoint: true,
+  draftId: null,
 };
 
 function aView(overrides: Partial<RuleSetView> = {}): RuleSetView {
@@ -77,7 +79,10 @@ function aView(overrides: Partial<RuleSetView> = {}): RuleSetView {
 }
 
 async function open(overrides: Partial<RuleSetView> = {}) {
-  stubServer({ 'GET /api/rule-sets/cvra-412/2026': aView(overrides) });
+  stubServer({
+    'GET /api/session': aSession(),
+    'GET /api/rule-sets/cvra-412/2026': aView(overrides),
+  });
   const page = renderPage(<RuleSetPage />, {
     path: '/rule-sets/:ruleSetId/:edition',
     at: '/rule-sets/cvra-412/2026',
