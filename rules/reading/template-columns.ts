@@ -28,8 +28,8 @@ export function key(header: string, names: string, list: string[] = [], required
   return { ...emptyColumn, header, role: 'key', names, list, required };
 }
 
-export function detail(header: string, names: string): TemplateColumn {
-  return { ...emptyColumn, header, role: 'detail', names };
+export function detail(header: string, names: string, list: string[] = []): TemplateColumn {
+  return { ...emptyColumn, header, role: 'detail', names, list };
 }
 
 const emptyColumn: TemplateColumn = {

@@ -130,12 +130,14 @@ export function templateLayout(edition: ReadingEdition): TemplateLayout {
     testedOn,
   ];
   const documents = withStandardDocuments(edition.documents).map(({ type, label }) => label ?? type);
-  const quantities = quantityNames(edition);
+  const methods = methodNames(edition, find);
+  const sievesMm = [...new Set([...usualSieves, ...namedSieves(edition)])].toSorted((a, b) => b - a);
 
   return {
     lists: [
       { name: 'Document types', values: documents },
-      { name: 'Quantities', values: quantities },
+      { name: 'Quantities', values: quantityNames(edition) },
+      ...(methods.length === 0 ? [] : [{ name: 'Methods', values: methods }]),
     ],
     sheets: [
       {
@@ -168,7 +170,7 @@ export function templateLayout(edition: ReadingEdition): TemplateLayout {
         name: 'Gradation',
         instruction:
           'Percent passing. Write the stockpile names, as on Stockpiles, in row 5 over their columns; leave sieves without a result blank.',
-        sievesMm: [...new Set([...usualSieves, ...namedSieves(edition)])].toSorted((a, b) => b - a),
+        sievesMm,
         stockpiles: 8,
         columns: gradationColumns(hasAgency, find),
       },
@@ -240,7 +242,11 @@ export function templateLayout(edition: ReadingEdition): TemplateLayout {
       table(
         'Readings',
         'For results that no other sheet has a place for: one reading a row, with the conditions it was obtained under.',
-        readingsColumns(listReference('Quantities')),
+        readingsColumns({
+          quantities: [listReference('Quantities')],
+          methods: methods.length === 0 ? [] : [listReference('Methods')],
+          sieves: sievesMm.map(String),
+        }),
         60,
       ),
     ],
@@ -291,4 +297,9 @@ function quantityNames(edition: ReadingEdition): string[] {
     return quantity ? [sentenceCase(quantity.label)] : [];
   });
   return named.toSorted();
+}
+
+function methodNames(edition: ReadingEdition, find: (id: string) => Quantity | undefined): string[] {
+  const measured = measuredQuantities(edition).flatMap(({ quantity }) => find(quantity) ?? []);
+  return [...new Set([...edition.quantities, ...measured].flatMap(({ methods }) => methods))].toSorted();
 }

@@ -163,10 +163,14 @@ export function creepColumns(find: Find): TemplateColumn[] {
 }
 
 /** The sheet of free readings: quantity and unit stand in the row. */
-export function readingsColumns(quantities: string): TemplateColumn[] {
+export function readingsColumns(lists: {
+  quantities: string[];
+  methods: string[];
+  sieves: string[];
+}): TemplateColumn[] {
   const value: TemplateColumn = { ...key('Value', 'value'), role: 'value', names: null };
   return [
-    key('Quantity', 'quantity', [quantities], true),
+    key('Quantity', 'quantity', lists.quantities, true),
     value,
     key('Unit', 'unit'),
     key('Trial', 'trial'),
@@ -174,7 +178,7 @@ export function readingsColumns(quantities: string): TemplateColumn[] {
     conditionKey('variant'),
     key('Specimen', 'specimen'),
     conditionKey('stockpile'),
-    conditionKey('sieve'),
+    { ...conditionKey('sieve'), list: lists.sieves },
     conditionKey('gyrations'),
     conditionKey('temperature'),
     conditionKey('time'),
@@ -183,7 +187,7 @@ export function readingsColumns(quantities: string): TemplateColumn[] {
     conditionKey('frequency'),
     conditionKey('aging'),
     key('Laboratory', 'laboratory', ['contractor', 'agency']),
-    detail('Method', 'method'),
+    detail('Method', 'method', lists.methods),
     detail('Tested on', 'testedOn'),
   ];
 }

@@ -226,6 +226,28 @@ describe('the template of the airfield section', () => {
   });
 });
 
+describe('the drop-downs of the template', () => {
+  it('offer closed values of attributes, the methods of a quantity, sieves, and every method for a free reading', async () => {
+    const [, edition] = editions.find(([name]) => name === 'cvra-412, edition 2026') ?? [];
+    if (!edition) throw new Error('no edition');
+    const workbook = buildTemplate(edition, { editionHash });
+    const listUnder = (name: string, header: string, below: number): string => {
+      const sheet = workbook.getWorksheet(name);
+      const at = (sheet?.getRow(headerRow).values as string[]).findIndex((text) => text?.startsWith(header));
+      return String(sheet?.getCell(headerRow + below, at).dataValidation?.formulae[0]);
+    };
+    const course = workbook.getWorksheet('Submittal')?.getColumn(1).values.indexOf('Course');
+    const courses = workbook.getWorksheet('Submittal')?.getCell(course ?? 0, 2).dataValidation?.formulae[0];
+    expect(courses).toMatch(/^".*surface.*base.*"$/i);
+    expect(listUnder('Trials', 'Bulk specific gravity', 1)).toContain('AASHTO T 166');
+    expect(listUnder('Gradation', 'Sieve', 2)).toMatch(/^"50,37\.5,25,.*,0\.075"$/);
+    expect(listUnder('Readings', 'Sieve', 1)).toMatch(/^"50,37\.5,25,.*,0\.075"$/);
+    expect(listUnder('Readings', 'Method', 1)).toMatch(/^Lists!\$C\$2:\$C\$\d+$/);
+    const methods = workbook.getWorksheet('Lists')?.getColumn(3).values;
+    expect(methods).toEqual(expect.arrayContaining(['Methods', 'AASHTO T 166', 'AASHTO T 176']));
+  });
+});
+
 describe('the stamp', () => {
   it('is not seen in another layout', () => {
     expect(
