@@ -231,13 +231,19 @@ describe('the drop-downs of the template', () => {
     const [, edition] = editions.find(([name]) => name === 'cvra-412, edition 2026') ?? [];
     if (!edition) throw new Error('no edition');
     const workbook = buildTemplate(edition, { editionHash });
-    const listUnder = (name: string, header: string, below: number): string => {
+    const sheetOf = (name: string) => {
       const sheet = workbook.getWorksheet(name);
-      const at = (sheet?.getRow(headerRow).values as string[]).findIndex((text) => text?.startsWith(header));
-      return String(sheet?.getCell(headerRow + below, at).dataValidation?.formulae[0]);
+      if (!sheet) throw new Error(`no sheet ${name}`);
+      return sheet;
     };
-    const course = workbook.getWorksheet('Submittal')?.getColumn(1).values.indexOf('Course');
-    const courses = workbook.getWorksheet('Submittal')?.getCell(course ?? 0, 2).dataValidation?.formulae[0];
+    const listAt = (name: string, row: number, column: number) =>
+      String(sheetOf(name).getCell(row, column).dataValidation?.formulae[0]);
+    const listUnder = (name: string, header: string, below: number): string => {
+      const texts = sheetOf(name).getRow(headerRow).values as (string | undefined)[];
+      const at = texts.findIndex((text) => (text ?? '').startsWith(header));
+      return listAt(name, headerRow + below, at);
+    };
+    const courses = listAt('Submittal', sheetOf('Submittal').getColumn(1).values.indexOf('Course'), 2);
     expect(courses).toMatch(/^".*surface.*base.*"$/i);
     expect(listUnder('Trials', 'Bulk specific gravity', 1)).toContain('AASHTO T 166');
     expect(listUnder('Gradation', 'Sieve', 2)).toMatch(/^"50,37\.5,25,.*,0\.075"$/);
