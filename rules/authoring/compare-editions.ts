@@ -46,12 +46,15 @@ export interface EditionComparison {
 interface Side {
   edition: ResolvedEdition;
   view: EditionView;
+  /** Names of both editions. */
+  names: readonly string[];
 }
 
 /** What one edition says otherwise than another, rule by rule in the order of clauses. */
 export function compareEditions(before: ResolvedEdition, after: ResolvedEdition): EditionComparison {
-  const left: Side = { edition: before, view: viewOf(before) };
-  const right: Side = { edition: after, view: viewOf(after) };
+  const names = [before.edition, after.edition];
+  const left: Side = { edition: before, view: viewOf(before), names };
+  const right: Side = { edition: after, view: viewOf(after), names };
   const tables = tableDifferences(left, right);
   const pairs = pairsOf(before.rules, after.rules, ({ id }) => id);
   const rules = pairs.flatMap(([old, now]) => ruleDifference(old, now, { left, right }));
@@ -77,7 +80,7 @@ function ruleDifference(old: Rule | null, now: Rule | null, { left, right }: Sid
 }
 
 /** Everything of a rule that decides a finding or is read by a person; who encoded it is neither. */
-function wordingsOf(rule: Rule, { edition, view }: Side): Words {
+function wordingsOf(rule: Rule, { view, names }: Side): Words {
   const { measure, limit, when, source } = rule;
   return new Map([
     ['Clause', rule.clause],
@@ -86,14 +89,15 @@ function wordingsOf(rule: Rule, { edition, view }: Side): Words {
     ['Sentence', ruleSentence(rule, view)],
     ['Precision', rule.precision === undefined ? null : `± ${numberWords(rule.precision.value)}`],
     ['Advice', rule.advice ?? null],
-    ['Source', sourceText(source ?? null, edition)],
+    ['Source', sourceText(source ?? null, names)],
     ...fieldsOf({ measure, limit, when: when ?? null }, ''),
   ]);
 }
 
-/** A source that names the edition itself moves with it and is no change of the rule. */
-function sourceText(source: RuleSource | null, { edition }: ResolvedEdition): string | null {
-  return sourceWords(source?.edition === edition ? { ...source, edition: null } : source);
+/** A source that names one of the two editions moves with them and is no change of the rule. */
+function sourceText(source: RuleSource | null, names: readonly string[]): string | null {
+  const isOwn = typeof source?.edition === 'string' && names.includes(source.edition);
+  return sourceWords(isOwn ? { ...source, edition: null } : source);
 }
 
 type Words = Map<string, string | null>;
@@ -143,11 +147,11 @@ function tableDifferences(left: Side, right: Side): TableDifference[] {
   });
 }
 
-function rowsOf(table: LimitTable | null, { edition, view }: Side): Words {
+function rowsOf(table: LimitTable | null, { view, names }: Side): Words {
   if (table === null) return new Map();
   return new Map([
     ['Title', table.title ?? table.id],
-    ['Source', sourceText(table.source ?? null, edition)],
+    ['Source', sourceText(table.source ?? null, names)],
     ...table.rows.map((row): [string, string] => [
       capitalised(table.keys.map((key) => keyWords(key, row[key], view)).join(', ')),
       table.columns.map(({ name, unit }) => `${name} ${cellWords(row[name], unit)}`).join(', '),

@@ -85,12 +85,12 @@ export function contentHash(part: unknown): string | null {
 }
 
 /**
- * Of what a rule says within its edition. A source that names the edition itself moves with it and is no change of
- * the rule.
+ * Of what a rule says within its edition. A source that names one of the editions that are held against each other
+ * moves with them and is no change of the rule.
  */
-export function ruleHash(rule: unknown, edition: unknown): string | null {
+export function ruleHash(rule: unknown, editions: readonly unknown[]): string | null {
   const source = isEntry(rule) ? rule.source : null;
-  const isOwn = isEntry(source) && source.edition === edition;
+  const isOwn = isEntry(source) && editions.includes(source.edition);
   return isOwn && isEntry(rule)
     ? contentHash({ ...rule, source: { ...source, edition: null } })
     : contentHash(rule);

@@ -39,6 +39,7 @@ test('a rule is written with its table, reviewed by a second author and publishe
 
   const work = counted(author);
   await work.click(author.getByRole('button', { name: 'Add a table' }));
+  await author.waitForURL(/\/tables\//);
   await work.fill(
     author.getByRole('textbox', { name: 'Title' }),
     'Table 412-20 (sand equivalent by traffic)',
@@ -52,6 +53,7 @@ test('a rule is written with its table, reviewed by a second author and publishe
   await expectAccessible(author);
   await work.click(author.getByRole('link', { name: `Draft ${edition}` }));
   await work.click(author.getByRole('button', { name: 'Add a rule' }));
+  await author.waitForURL(/\/rules\//);
   await work.fill(author.getByRole('textbox', { name: 'Clause' }), '412.02(n)');
   await work.fill(author.getByRole('textbox', { name: 'Title', exact: true }), 'Sand equivalent by traffic');
   await work.fill(author.getByRole('combobox', { name: 'Quantity' }), 'sand equivalent');

@@ -55,6 +55,8 @@ describe('two editions', () => {
       rules: [aRule({ source: { title: 'Section 900', edition } })],
     });
     expect(compare(of('2026'), of('2027')).rules).toEqual([]);
+    const begun = { ...of('2026'), edition: '2027' };
+    expect(compare(of('2026'), begun).rules).toEqual([]);
   });
 
   it('tell a field that is in no sentence under its own name', () => {

@@ -18,6 +18,7 @@ const RULE_LISTS = ['rules/', 'add.rules/', 'replace.rules/'];
 export function draftRules(document: DraftDocument, basedOn: DraftDocument | null): DraftRule[] {
   const now = rulesIn(document);
   const before = rulesIn(basedOn ?? {});
+  const editions = [document.edition, basedOn?.edition];
   const kept = [...now].map(([part, rule]) => {
     const old = before.get(part);
     const state =
@@ -25,7 +26,7 @@ export function draftRules(document: DraftDocument, basedOn: DraftDocument | nul
         ? 'same'
         : old === undefined
           ? 'added'
-          : ruleHash(old, basedOn.edition) === ruleHash(rule, document.edition)
+          : ruleHash(old, editions) === ruleHash(rule, editions)
             ? 'same'
             : 'changed';
     return listed(part, rule, state);
