@@ -1,5 +1,5 @@
 import { useEffect, useRef, useState } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { useNavigation, useSearchParams } from 'react-router-dom';
 import type { Place } from '../lib/first-place';
 
 const settleMilliseconds = 300;
@@ -22,14 +22,16 @@ export function useCellCursor(first: Place): [Place, (place: Place) => void] {
     addressed.current = namedKey;
     setCursor(named);
   }, [namedKey]);
+  // Whoever is on the way to another page would be called back by an address that follows now.
+  const leaving = useNavigation().state !== 'idle';
   useEffect(() => {
-    if (keyOf(cursor) === addressed.current) return;
+    if (leaving || keyOf(cursor) === addressed.current) return;
     const timer = setTimeout(() => {
       addressed.current = keyOf(cursor);
       setSearch({ sheet: cursor.sheet, cell: cursor.cell }, { replace: true, preventScrollReset: true });
     }, settleMilliseconds);
     return () => clearTimeout(timer);
-  }, [cursor, setSearch]);
+  }, [cursor, setSearch, leaving]);
   return [cursor, setCursor];
 }
 
