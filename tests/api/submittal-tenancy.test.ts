@@ -91,6 +91,12 @@ const bodies: Record<string, object> = {
   '/api/submittals/:submittalId/revisions/:number/answers': {
     answers: [{ sheet: 'A', cell: 'A1', text: 'x', answer: null }],
   },
+  '/api/submittals/:submittalId/revisions/:number/reading/corrections': {
+    corrections: [{ sheet: 'A', range: 'A1', says: { kind: 'not a reading' } }],
+  },
+  '/api/submittals/:submittalId/revisions/:number/reading/typed': {
+    readings: [{ quantity: 'air-voids', value: 4, unit: '%' }],
+  },
   '/api/submittals/:submittalId/revisions/:number/attributes': { attributes: {} },
   '/api/submittals/:submittalId/revisions/:number/documents': { type: 'binder-certificate' },
   '/api/submittals/:submittalId/revisions/:number/notes': { finding: null, kind: 'internal', text: 'x' },
@@ -118,6 +124,7 @@ function ask(person: Browser, { method, path, versioned }: Endpoint, named: type
     .replace(':waiverId', named.waiverId)
     .replace(':documentId', named.documentId)
     .replace(':replacedId', named.replacedId)
+    .replace(':actId', nobodys)
     .replace(':check', '1');
   const query = path.endsWith('/sheet') ? '?sheet=Trials' : '';
   const sending = person[method](address + query).set('X-Request-Id', 'one-number-for-both');

@@ -4,6 +4,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { mappingSchema } from '#rules/reading/mapping';
 import { ownResolvedEdition } from '#server/commands/projects/own-edition';
 import * as cellGrids from '#server/db/queries/cell-grids';
+import * as cellUses from '#server/db/queries/cell-uses';
 import * as checks from '#server/db/queries/checks';
 import * as contractors from '#server/db/queries/contractors';
 import * as drafts from '#server/db/queries/drafts';
@@ -214,6 +215,16 @@ const queries: Record<string, Record<string, Query>> = {
         const grid = await cellGrids.gridOf(db(), contractor, named.row.workbook.id);
         const name = grid?.sheets[0]?.name ?? '';
         return cellGrids.loadSheet(db(), reader, { fileId: named.row.workbook.id, name, from: 1, to: 50 });
+      },
+    ],
+  },
+  'cell-uses': {
+    usesOfSheet: [
+      'both',
+      async (reader) => {
+        const record = await records.findMixRecord(db(), contractor, named.revisionId);
+        const sheet = record?.reading.uses?.[0]?.sheet ?? '';
+        return cellUses.usesOfSheet(db(), reader, { revisionId: named.revisionId, sheet });
       },
     ],
   },

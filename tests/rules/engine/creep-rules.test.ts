@@ -136,7 +136,7 @@ describe('a measured compliance', () => {
   it('is not shown under a stress that was not applied', () => {
     expect(creepFinding({ measure: { stress: 400 } })).toMatchObject({
       outcome: 'not shown',
-      reason: 'There is no reading of creep compliance at 400 kPa, only at 200 kPa.',
+      reason: 'There is no reading of creep compliance at −10 °C at 400 kPa, only at −10 °C at 200 kPa.',
     });
   });
 
