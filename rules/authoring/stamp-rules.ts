@@ -1,3 +1,4 @@
+import { tablesOf } from '../rule-sets/tables-of';
 import { contentHash, type DraftDocument, partHash, partsOf, withParts } from './document-parts';
 
 const RULE_LISTS = ['rules/', 'add.rules/', 'replace.rules/'];
@@ -30,7 +31,7 @@ export function stampRules({ before, after, by, on }: Stamping): {
     const own = rule as Entry;
     if (contentHash(old.get(part)) !== contentHash(own)) {
       stamped.set(part, { ...own, encodedBy: `${by}, ${on}`, verifiedBy: null });
-    } else if (isVerified(own) && namesTable(own, tables)) {
+    } else if (isVerified(own) && [...tablesOf(own)].some((id) => tables.has(id))) {
       stamped.set(part, { ...own, verifiedBy: null });
     }
   }
@@ -47,11 +48,4 @@ function changedTables(old: Map<string, unknown>, now: Map<string, unknown>): Se
 
 function isVerified(rule: Entry): boolean {
   return typeof rule.verifiedBy === 'string';
-}
-
-function namesTable(value: unknown, tables: ReadonlySet<string>): boolean {
-  if (typeof value !== 'object' || value === null) return false;
-  return Object.entries(value).some(([field, inner]) =>
-    field === 'table' && typeof inner === 'string' ? tables.has(inner) : namesTable(inner, tables),
-  );
 }

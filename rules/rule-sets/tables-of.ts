@@ -1,11 +1,9 @@
-import type { Rule } from './schema';
-
-/** Ids of the tables that a rule names anywhere: as its measure, in a limit, as its rounding step. */
+/** Ids of the tables that a rule, finished or not, names anywhere: as its measure, in a limit, as its rounding step. */
 export function tablesOf({
   measure,
   limit,
   rounding,
-}: Pick<Rule, 'measure' | 'limit' | 'rounding'>): Set<string> {
+}: Partial<Record<'measure' | 'limit' | 'rounding', unknown>>): Set<string> {
   const found = new Set<string>();
   const look = (value: unknown): void => {
     if (typeof value !== 'object' || value === null) return;

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import type { Project } from '#shared/contracts/projects';
 import type { Database } from '../../db/client';
 import { listEditions } from '../../db/queries/editions';
@@ -35,8 +35,9 @@ interface Stated {
 
 /** What a project stated before it had a section is judged by it too: in its words, or refused with every fault. */
 export async function judgeFactsAnew(tx: Database, actor: Actor, projectId: string): Promise<void> {
-  const [row] = await tx.select({ facts: projects.facts }).from(projects).where(eq(projects.id, projectId));
+  const own = and(eq(projects.id, projectId), eq(projects.agencyId, actor.organisationId));
+  const [row] = await tx.select({ facts: projects.facts }).from(projects).where(own);
   if (row === undefined) return;
   const facts = await factsOfProject(tx, actor, { facts: row.facts, projectId });
-  await tx.update(projects).set({ facts }).where(eq(projects.id, projectId));
+  await tx.update(projects).set({ facts }).where(own);
 }

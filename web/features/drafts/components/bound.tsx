@@ -1,6 +1,6 @@
 import { Checkbox } from '../../../components/ui/checkbox';
 import { type BoundKind, boundKindOf, freshBound } from '../lib/bounds';
-import { type RuleField, useRuleForm, withField } from '../lib/rule-fields';
+import { fieldsIn, type RuleField, useRuleForm, withField } from '../lib/rule-fields';
 import { Choice } from './choice';
 import { ConditionsField } from './conditions-field';
 import { QuantityChoice } from './quantity-choice';
@@ -25,7 +25,7 @@ export function Bound({
 }) {
   const { isDisabled } = useRuleForm();
   const kind = boundKindOf(value);
-  const fields = typeof value === 'object' && value !== null ? (value as RuleField) : {};
+  const fields = fieldsIn(value);
   return (
     <span className="bound">
       <Choice

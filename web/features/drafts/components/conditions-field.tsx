@@ -1,6 +1,13 @@
 import { Button } from '../../../components/ui/button';
 import { TextField } from '../../../components/ui/text-field';
-import { conditionNames, conditionValue, type RuleField, useRuleForm, withField } from '../lib/rule-fields';
+import {
+  conditionNames,
+  conditionValue,
+  fieldsIn,
+  type RuleField,
+  useRuleForm,
+  withField,
+} from '../lib/rule-fields';
 import { Choice } from './choice';
 
 /** The conditions that a reading must carry: its trial, temperature, time and the like. */
@@ -14,7 +21,7 @@ export function ConditionsField({
   onChange: (value: RuleField | undefined) => void;
 }) {
   const { isDisabled } = useRuleForm();
-  const at = typeof value === 'object' && value !== null ? (value as RuleField) : {};
+  const at = fieldsIn(value);
   const free = conditionNames.filter((name) => !(name in at));
   return (
     <span className="conditions">

@@ -3,7 +3,7 @@ import { partsOf } from '#rules/authoring/document-parts';
 import { Button } from '../../../components/ui/button';
 import { SectionHead } from '../../../components/ui/section-head';
 import { paths } from '../../../lib/paths';
-import { freeName } from '../lib/draft-rules';
+import { freeName, isLayerDraft } from '../lib/draft-rules';
 import { useDraftInHand } from './draft-layout';
 import { EntryTable } from './entry-table';
 
@@ -59,7 +59,7 @@ function Tables() {
   const { editing } = useDraftInHand();
   const { draft, document, change } = editing;
   const navigate = useNavigate();
-  const isLayer = draft.document.layerOf !== null && draft.document.layerOf !== undefined;
+  const isLayer = isLayerDraft(draft.document);
   const tables = [...partsOf(document)].filter(([part]) => /^(add\.|replace\.)?tables\//.test(part));
   const ids = tables.map(([, table]) => String((table as Entry).id));
   const add = () => {

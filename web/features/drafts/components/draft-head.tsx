@@ -2,18 +2,18 @@ import { partsOf } from '#rules/authoring/document-parts';
 import { RadioLine } from '../../../components/ui/radio-line';
 import { TextField } from '../../../components/ui/text-field';
 import type { DraftEditing } from '../hooks/use-working-copy';
-
-type Head = Record<string, unknown>;
+import { isLayerDraft } from '../lib/draft-rules';
+import { fieldsIn, type RuleField } from '../lib/rule-fields';
 
 /** The particulars of a draft: what it is called and when it is in force, and how the design point is found. */
 export function DraftHead({ editing }: { editing: DraftEditing }) {
   const { draft, document, change } = editing;
-  const head = partsOf(document).get('head') as Head;
+  const head = partsOf(document).get('head') as RuleField;
   const isDisabled = !draft.abilities.change;
-  const set = (fields: Head) => change([{ part: 'head', after: { ...head, ...fields } }]);
-  const effective = objectIn(head.effective);
-  const designPoint = objectIn(head.designPoint);
-  const isLayer = head.layerOf !== null && head.layerOf !== undefined;
+  const set = (fields: RuleField) => change([{ part: 'head', after: { ...head, ...fields } }]);
+  const effective = fieldsIn(head.effective);
+  const designPoint = fieldsIn(head.designPoint);
+  const isLayer = isLayerDraft(head);
   return (
     <div className="fieldset">
       <TextField
@@ -68,10 +68,6 @@ export function DraftHead({ editing }: { editing: DraftEditing }) {
       )}
     </div>
   );
-}
-
-function objectIn(value: unknown): Head {
-  return typeof value === 'object' && value !== null ? (value as Head) : {};
 }
 
 function textIn(value: unknown): string {

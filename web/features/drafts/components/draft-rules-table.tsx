@@ -7,7 +7,7 @@ import { SectionHead } from '../../../components/ui/section-head';
 import { Sideways } from '../../../components/ui/sideways';
 import { paths } from '../../../lib/paths';
 import { useVerifyRules } from '../api/review-draft';
-import { type DraftRule, freeName } from '../lib/draft-rules';
+import { type DraftRule, freeName, isLayerDraft } from '../lib/draft-rules';
 import { useDraftInHand } from './draft-layout';
 
 /** The rules of a draft in clause order; while it is in review, each with its verification. */
@@ -17,7 +17,7 @@ export function DraftRulesTable() {
   const navigate = useNavigate();
   const ids = rules.map(({ id }) => id);
   const own = rules.filter(({ state }) => state !== 'removed');
-  const isLayer = draft.document.layerOf !== null && draft.document.layerOf !== undefined;
+  const isLayer = isLayerDraft(draft.document);
   const add = () => {
     const id = freeName(ids, 'new-rule');
     const list = isLayer ? 'add.rules' : 'rules';

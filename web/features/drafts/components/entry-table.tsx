@@ -5,6 +5,7 @@ import { SectionHead } from '../../../components/ui/section-head';
 import { SelectField } from '../../../components/ui/select-field';
 import { Sideways } from '../../../components/ui/sideways';
 import { TextField } from '../../../components/ui/text-field';
+import { isLayerDraft } from '../lib/draft-rules';
 import { type EntryColumn, textOfField, valueOfText } from '../lib/entry-fields';
 import { useDraftInHand } from './draft-layout';
 
@@ -29,7 +30,7 @@ export function EntryTable({
 }) {
   const { editing } = useDraftInHand();
   const { draft, document, change } = editing;
-  const isLayer = draft.document.layerOf !== null && draft.document.layerOf !== undefined;
+  const isLayer = isLayerDraft(draft.document);
   const own = isLayer && list === 'attributes' ? 'add.attributes' : list;
   const entries = [...partsOf(document)].filter(([part]) => part.startsWith(`${own}/`));
   const mayChange = draft.abilities.change;

@@ -3,7 +3,7 @@ import { Checkbox } from '../../../components/ui/checkbox';
 import { Field } from '../../../components/ui/field';
 import { TextField } from '../../../components/ui/text-field';
 import { freshMeasure, measureKinds, statistics } from '../lib/measures';
-import { type RuleField, useRuleForm, withField } from '../lib/rule-fields';
+import { fieldsIn, type RuleField, useRuleForm, withField } from '../lib/rule-fields';
 import { Bound } from './bound';
 import { Choice } from './choice';
 import { ConditionsField } from './conditions-field';
@@ -90,7 +90,7 @@ function Ends({
   value: unknown;
   onChange: (value: unknown) => void;
 }) {
-  const ends = typeof value === 'object' && value !== null ? (value as RuleField) : {};
+  const ends = fieldsIn(value);
   const put = (field: string, next: unknown) => {
     const changed = withField(ends, field, next);
     onChange(Object.keys(changed).length === 0 ? undefined : changed);

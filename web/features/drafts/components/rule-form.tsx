@@ -4,7 +4,7 @@ import type { DocumentProblem } from '#rules/rule-sets/problem';
 import { Field, FieldErrorLine } from '../../../components/ui/field';
 import { RadioLine } from '../../../components/ui/radio-line';
 import { TextAreaField, TextField } from '../../../components/ui/text-field';
-import { type RuleField, RuleFormContext } from '../lib/rule-fields';
+import { fieldsIn, type RuleField, RuleFormContext } from '../lib/rule-fields';
 import { ConditionField } from './condition-field';
 import { LimitField } from './limit-field';
 import { MeasureFields } from './measure-fields';
@@ -139,8 +139,4 @@ function FieldRow({
       ))}
     </div>
   );
-}
-
-function fieldsIn(value: unknown): RuleField {
-  return typeof value === 'object' && value !== null ? (value as RuleField) : {};
 }

@@ -55,6 +55,11 @@ function listed(part: string, rule: Record<string, unknown>, state: DraftRule['s
   };
 }
 
+/** A supplement or special provision keeps what is new in its own lists. */
+export function isLayerDraft({ layerOf }: DraftDocument): boolean {
+  return layerOf !== null && layerOf !== undefined;
+}
+
 /** An id for a new entry that none of the names has: `rule-2`. */
 export function freeName(names: readonly string[], wanted: string): string {
   for (let count = 1; ; count += 1) {

@@ -18,6 +18,11 @@ export function useRuleForm(): RuleFormState {
   return state;
 }
 
+/** What may be an object of a rule, as one: without fields where it is none. */
+export function fieldsIn(value: unknown): RuleField {
+  return typeof value === 'object' && value !== null ? (value as RuleField) : {};
+}
+
 /** The object with one field put, or taken out where there is no value. */
 export function withField(value: RuleField, field: string, next: unknown): RuleField {
   const { [field]: _, ...rest } = value;
